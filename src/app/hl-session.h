@@ -1,0 +1,50 @@
+/* What a window works on: plant with history, solution, selection, file.  Widgets show it and never hold the only copy of anything.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include <gio/gio.h>
+#include "engine/engine.h"
+G_BEGIN_DECLS
+
+#define HL_TYPE_SESSION (hl_session_get_type ())
+G_DECLARE_FINAL_TYPE (HlSession, hl_session, HL, SESSION, GObject)
+/* Signals:
+ *   "changed"            the plant or its solution is another one (after every edit, undo, redo, open)
+ *   "selection-changed"
+ *   "file-changed"       path, title or dirty flag
+ *   "message" (const char *text)   something to say in the status strip: what yielded, what was done */
+
+HlSession        *hl_session_new          (void);
+HlPlant          *hl_session_plant        (HlSession *self);      /* (transfer none) never NULL */
+HlSolution       *hl_session_solution     (HlSession *self);      /* (transfer none) of exactly that plant; never NULL */
+HlSolution       *hl_session_last_good    (HlSession *self);      /* (transfer none) (nullable): last solved one, to be shown grey while the present one fails */
+
+/* One undoable step named @name (translated: "Move Pump P1").  Takes @plant; settles for @edited (nullable) when @settle; solves at once; emits "changed". */
+void              hl_session_apply        (HlSession *self, const char *name, HlPlant *plant, const HlAddress *edited, gboolean settle);
+/* The same for a gesture in progress: replaces the plant without a history step until hl_session_apply or hl_session_cancel_preview. */
+void              hl_session_preview      (HlSession *self, HlPlant *plant, gboolean solve);
+void              hl_session_cancel_preview (HlSession *self);
+/* Types a value into a quantity: parses, applies, settles.  FALSE with a message to show beside the entry. */
+gboolean          hl_session_set_text     (HlSession *self, const HlAddress *address, const char *text, GError **error);
+gboolean          hl_session_set_value    (HlSession *self, const HlAddress *address, const HlValue *value, GError **error);   /* NULL value: let go */
+gboolean          hl_session_mend         (HlSession *self, const HlMend *mend, GError **error);
+
+gboolean          hl_session_can_undo     (HlSession *self);
+gboolean          hl_session_can_redo     (HlSession *self);
+const char       *hl_session_undo_name    (HlSession *self);      /* name of the step, or NULL */
+const char       *hl_session_redo_name    (HlSession *self);
+void              hl_session_undo         (HlSession *self);
+void              hl_session_redo         (HlSession *self);
+
+/* Selection: ids of components and streams of the present plant. */
+const char *const *hl_session_selection   (HlSession *self, guint *n);    /* (transfer none) interned ids */
+gboolean          hl_session_is_selected  (HlSession *self, const char *id);
+void              hl_session_select       (HlSession *self, const char *id, gboolean extend);   /* NULL id: nothing */
+void              hl_session_select_many  (HlSession *self, const char *const *ids, guint n);
+
+gboolean          hl_session_open         (HlSession *self, const char *path, GError **error);
+gboolean          hl_session_save         (HlSession *self, const char *path, GError **error);  /* NULL path: its own */
+void              hl_session_reset        (HlSession *self, HlPlant *plant, const char *path);  /* (transfer full plant) fresh history */
+const char       *hl_session_path         (HlSession *self);      /* NULL: never saved */
+gboolean          hl_session_is_dirty     (HlSession *self);
+char             *hl_session_display_name (HlSession *self);      /* title or file name; g_free() */
+G_END_DECLS

@@ -1,0 +1,20 @@
+/* Pictures and tables to files: the same for window and batch.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include <gio/gio.h>
+#include "draw/theme.h"
+G_BEGIN_DECLS
+
+typedef enum { HL_PICTURE_DRAWING, HL_PICTURE_STATE_DIAGRAM } HlPicture;
+typedef enum { HL_FORMAT_SVG, HL_FORMAT_PDF, HL_FORMAT_PNG } HlFormat;
+gboolean hl_format_from_path (const char *path, HlFormat *format, GError **error);   /* by its ending; says which endings do */
+
+/* @width, @height in pixels at 96 dpi, 0 for the picture's usual size (drawing: its extents; diagram 960 x 600); @scale multiplies PNG pixels.
+ * Writes the same bytes for the same input. */
+GBytes  *hl_export_picture      (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, double width, double height, double scale, GError **error);
+/* To a file (temporary file, then renamed); path "-" is standard output. */
+gboolean hl_export_picture_file (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, const char *path, GError **error);
+/* The ledger: RFC 4180, units in the header, decimal points whatever the locale.  g_free(). */
+char    *hl_ledger_csv          (const HlSolution *solution, HlUnitSet units);
+gboolean hl_export_text_file    (const char *text, const char *path, GError **error);
+G_END_DECLS

@@ -1,0 +1,60 @@
+/* Dimensions, unit sets, and text in and out.  Inside everything is SI.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include "fluid/fluid.h"
+G_BEGIN_DECLS
+
+typedef enum {
+  HL_DIMENSION_RATIO,                    /* efficiency, fraction, quality: "0.83" or "83 %" */
+  HL_DIMENSION_PRESSURE,                 /* absolute */
+  HL_DIMENSION_PRESSURE_DIFFERENCE,
+  HL_DIMENSION_TEMPERATURE,
+  HL_DIMENSION_TEMPERATURE_DIFFERENCE,   /* "3 K"; a degree Fahrenheit scales by 5/9 without 32 */
+  HL_DIMENSION_MASS_FLOW,
+  HL_DIMENSION_ENTHALPY,                 /* specific */
+  HL_DIMENSION_ENTROPY,                  /* specific */
+  HL_DIMENSION_VOLUME,                   /* specific */
+  HL_DIMENSION_POWER,                    /* power and heat flow */
+  HL_DIMENSION_CONDUCTANCE,              /* UA */
+  HL_DIMENSION_LENGTH,
+  HL_DIMENSION_HEAT_RATE,                /* J/J, shown as kJ/kWh or Btu/kWh */
+  HL_DIMENSION_STEAM_RATE,               /* kg/J, shown as kg/kWh or lb/kWh */
+  HL_DIMENSION_COUNT,                    /* a plain number */
+  HL_N_DIMENSIONS
+} HlDimension;
+
+typedef enum { HL_UNITS_METRIC, HL_UNITS_SI, HL_UNITS_US, HL_N_UNIT_SETS } HlUnitSet;
+
+#define HL_UNITS_ERROR (hl_units_error_quark ())
+HL_PUBLIC GQuark hl_units_error_quark (void);
+typedef enum {
+  HL_UNITS_ERROR_NO_NUMBER,       /* no number where one must stand */
+  HL_UNITS_ERROR_UNKNOWN_UNIT,    /* not a unit we know */
+  HL_UNITS_ERROR_WRONG_DIMENSION, /* a unit, but of another dimension */
+  HL_UNITS_ERROR_NOT_FINITE,
+} HlUnitsError;
+
+/* Text with or without a unit ("80 bar", "7 barg", "480 °C", "900 F", "35 t/h", "0.92", "83 %", decimal comma
+ * accepted) to SI.  A bare number takes the unit of @set.  Gauge pressure uses @site_pressure [Pa].
+ * Messages say what was read, what is wrong and which units would do. */
+HL_PUBLIC gboolean hl_units_parse (const char *text, HlDimension dimension, HlUnitSet set, double site_pressure,
+                                   double *si, GError **error);
+
+HL_PUBLIC const char *hl_units_label      (HlDimension dimension, HlUnitSet set);             /* "bar", "°C", "" */
+HL_PUBLIC double      hl_units_to_display (double si, HlDimension dimension, HlUnitSet set);
+HL_PUBLIC double      hl_units_from_display (double shown, HlDimension dimension, HlUnitSet set);
+/* Number alone, and number with unit, rounded as the trade rounds; "–" for NaN.  Free with g_free(). */
+HL_PUBLIC char       *hl_units_format_number (double si, HlDimension dimension, HlUnitSet set);
+HL_PUBLIC char       *hl_units_format        (double si, HlDimension dimension, HlUnitSet set);
+/* The shortest text that parses back to the same value: for entries. */
+HL_PUBLIC char       *hl_units_format_exact  (double si, HlDimension dimension, HlUnitSet set);
+
+HL_PUBLIC const char *hl_dimension_name    (HlDimension dimension);      /* translated: "pressure" */
+HL_PUBLIC const char *hl_dimension_si_unit (HlDimension dimension);      /* "Pa", "K", "kg/s" ..., "" for ratio */
+HL_PUBLIC const char *hl_dimension_json_suffix (HlDimension dimension);  /* "_Pa", "_K", "_kg_s" ..., "" for ratio */
+HL_PUBLIC const char *hl_unit_set_id       (HlUnitSet set);              /* "metric", "si", "us" */
+HL_PUBLIC gboolean    hl_unit_set_from_id  (const char *id, HlUnitSet *set);
+
+/* Ambient pressure at an altitude [m] by the troposphere formula of ISO 2533. */
+HL_PUBLIC double hl_site_pressure (double altitude);
+G_END_DECLS
