@@ -17,6 +17,22 @@ typedef struct {
 } HlTheme;
 const HlTheme *hl_theme (HlThemeId id);
 void           hl_set_colour (cairo_t *cr, const HlColour *colour);
+
+/* How a line looks: medium and state together. */
+typedef enum {
+  HL_LOOK_UNKNOWN,       /* state not known */
+  HL_LOOK_STEAM,
+  HL_LOOK_WET,
+  HL_LOOK_WATER,
+  HL_LOOK_COOLING,       /* water that carries heat away: only the plant tells, not the state */
+  HL_LOOK_GAS,
+  HL_N_LOOKS
+} HlLook;
+HlLook          hl_stream_look (const HlStreamResult *result);            /* from the state alone: never COOLING; NULL: UNKNOWN */
+const char     *hl_look_name   (HlLook look);                             /* translated, for legends */
+const HlColour *hl_look_colour (const HlTheme *theme, HlLook look, gboolean is_stale);
+void            hl_set_look_pen (cairo_t *cr, const HlTheme *theme, HlLook look, gboolean is_stale);
+
 /* Colour and dash of a medium in a state; a second cue beside the colour: line weight, dash. */
 void           hl_set_stream_pen (cairo_t *cr, const HlTheme *theme, const HlStreamResult *result, gboolean is_stale);
 const HlColour *hl_stream_colour (const HlTheme *theme, const HlStreamResult *result, gboolean is_stale);
