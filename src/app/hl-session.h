@@ -11,7 +11,8 @@ G_DECLARE_FINAL_TYPE (HlSession, hl_session, HL, SESSION, GObject)
  *   "changed"            the plant or its solution is another one (after every edit, undo, redo, open)
  *   "selection-changed"
  *   "file-changed"       path, title or dirty flag
- *   "message" (const char *text)   something to say in the status strip: what yielded, what was done */
+ *   "message" (const char *text)   something to say in the status strip: what yielded, what was done
+ *   "go-to" (const char *address)  show this place and put the focus there: the nameplate answers for quantities, the canvas for ports */
 
 HlSession        *hl_session_new          (void);
 HlPlant          *hl_session_plant        (HlSession *self);      /* (transfer none) never NULL */
@@ -40,6 +41,8 @@ const char *const *hl_session_selection   (HlSession *self, guint *n);    /* (tr
 gboolean          hl_session_is_selected  (HlSession *self, const char *id);
 void              hl_session_select       (HlSession *self, const char *id, gboolean extend);   /* NULL id: nothing */
 void              hl_session_select_many  (HlSession *self, const char *const *ids, guint n);
+/* Selects the owner of @address (a component, a stream; nothing for the plant) and emits "go-to" with the address as text. */
+void              hl_session_go_to        (HlSession *self, const HlAddress *address);
 
 gboolean          hl_session_open         (HlSession *self, const char *path, GError **error);
 gboolean          hl_session_save         (HlSession *self, const char *path, GError **error);  /* NULL path: its own */

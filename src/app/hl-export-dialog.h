@@ -1,0 +1,15 @@
+/* The "Hand over" window: what to export, in which format and theme, with a live preview.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include <gtk/gtk.h>
+#include "app/hl-session.h"
+G_BEGIN_DECLS
+
+typedef enum { HL_HAND_OVER_DRAWING, HL_HAND_OVER_STATE_DIAGRAM, HL_HAND_OVER_LEDGER } HlHandOver;
+
+#define HL_TYPE_EXPORT_DIALOG (hl_export_dialog_get_type ())
+G_DECLARE_FINAL_TYPE (HlExportDialog, hl_export_dialog, HL, EXPORT_DIALOG, GtkWindow)
+void     hl_export_dialog_present (GtkWindow *parent, HlSession *session);
+/* Writes what is chosen to @path; FALSE with the message shown inline. */
+gboolean hl_export_dialog_write   (HlExportDialog *self, const char *path);
+G_END_DECLS
