@@ -1,7 +1,91 @@
-/* What is common to all fluids: names of statuses and phases.
+/* What is common to all fluids: the list of them, the calls that lead to each, names of statuses and phases.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "fluid/fluid.h"
+#include "fluid/fluid-private.h"
 
+#include <string.h>
+
+static const HlFluid *const fluids[] = { &hl_water_if97 };
+
+/**
+ * hl_fluid_lookup:
+ * @id: short name of a fluid, such as "water"
+ *
+ * Returns: (nullable): the fluid, or NULL where none has this id
+ */
+const HlFluid *
+hl_fluid_lookup (const char *id)
+{
+  for (gsize i = 0; id != NULL && i < G_N_ELEMENTS (fluids); i++)
+    if (strcmp (id, fluids[i]->id) == 0)
+      return fluids[i];
+  return NULL;
+}
+
+/**
+ * hl_fluid_water:
+ *
+ * Returns: water and steam by IAPWS-IF97, R7-97(2012)
+ */
+const HlFluid *
+hl_fluid_water (void)
+{
+  return &hl_water_if97;
+}
+
+/**
+ * hl_fluid_id:
+ * @fluid: a fluid
+ *
+ * Returns: the id by which hl_fluid_lookup() finds it
+ */
+const char *
+hl_fluid_id (const HlFluid *fluid)
+{
+  return fluid->id;
+}
+
+/**
+ * hl_fluid_name:
+ * @fluid: a fluid
+ *
+ * Returns: its English name
+ */
+const char *
+hl_fluid_name (const HlFluid *fluid)
+{
+  return fluid->name;
+}
+
+/**
+ * hl_fluid_formulation:
+ * @fluid: a fluid
+ *
+ * Returns: name of the formulation and its release
+ */
+const char *
+hl_fluid_formulation (const HlFluid *fluid)
+{
+  return fluid->formulation;
+}
+
+/**
+ * hl_fluid_limits:
+ * @fluid: a fluid
+ * @limits: (out): outer box of the published range and fixed points, SI; a
+ *   p_min of 0 means that every pressure above 0 is allowed
+ */
+void
+hl_fluid_limits (const HlFluid *fluid, HlFluidLimits *limits)
+{
+  *limits = fluid->limits;
+}
+
+/**
+ * hl_status_describe:
+ * @status: a status
+ *
+ * Returns: what it means, in a few English words
+ */
 const char *
 hl_status_describe (HlStatus status)
 {
@@ -14,6 +98,12 @@ hl_status_describe (HlStatus status)
   return "unknown status";
 }
 
+/**
+ * hl_phase_name:
+ * @phase: a phase
+ *
+ * Returns: its English name
+ */
 const char *
 hl_phase_name (HlPhase phase)
 {
@@ -25,4 +115,144 @@ hl_phase_name (HlPhase phase)
     case HL_PHASE_SUPERCRITICAL: return "supercritical";
     }
   return "unknown";
+}
+
+/**
+ * hl_fluid_state_pT:
+ * @fluid: a fluid
+ * @p: pressure [Pa]
+ * @T: temperature [K]
+ * @state: (out): the complete state; untouched on failure
+ *
+ * Returns: HL_OK; HL_OUTSIDE_RANGE where the pair lies outside the published
+ *   range or is no number; HL_NOT_CONVERGED
+ */
+HlStatus
+hl_fluid_state_pT (const HlFluid *fluid, double p, double T, HlState *state)
+{
+  return fluid->state_pT (fluid, p, T, state);
+}
+
+/**
+ * hl_fluid_state_ph:
+ * @fluid: a fluid
+ * @p: pressure [Pa]
+ * @h: specific enthalpy [J/kg]
+ * @state: (out): the complete state; untouched on failure
+ *
+ * Returns: HL_OK; HL_OUTSIDE_RANGE where the pair lies outside the published
+ *   range or is no number; HL_NOT_CONVERGED
+ */
+HlStatus
+hl_fluid_state_ph (const HlFluid *fluid, double p, double h, HlState *state)
+{
+  return fluid->state_ph (fluid, p, h, state);
+}
+
+/**
+ * hl_fluid_state_ps:
+ * @fluid: a fluid
+ * @p: pressure [Pa]
+ * @s: specific entropy [J/(kg K)]
+ * @state: (out): the complete state; untouched on failure
+ *
+ * Returns: HL_OK; HL_OUTSIDE_RANGE where the pair lies outside the published
+ *   range or is no number; HL_NOT_CONVERGED
+ */
+HlStatus
+hl_fluid_state_ps (const HlFluid *fluid, double p, double s, HlState *state)
+{
+  return fluid->state_ps (fluid, p, s, state);
+}
+
+/**
+ * hl_fluid_state_hs:
+ * @fluid: a fluid
+ * @h: specific enthalpy [J/kg]
+ * @s: specific entropy [J/(kg K)]
+ * @state: (out): the complete state; untouched on failure
+ *
+ * Returns: HL_OK; HL_OUTSIDE_RANGE where the pair lies outside the published
+ *   range or is no number; HL_NOT_CONVERGED
+ */
+HlStatus
+hl_fluid_state_hs (const HlFluid *fluid, double h, double s, HlState *state)
+{
+  return fluid->state_hs (fluid, h, s, state);
+}
+
+/**
+ * hl_fluid_state_px:
+ * @fluid: a fluid
+ * @p: pressure [Pa]
+ * @x: vapour mass fraction [-]
+ * @state: (out): the complete state; untouched on failure
+ *
+ * Returns: HL_OK; HL_OUTSIDE_RANGE where the pair lies outside the published
+ *   range or is no number; HL_NOT_CONVERGED
+ */
+HlStatus
+hl_fluid_state_px (const HlFluid *fluid, double p, double x, HlState *state)
+{
+  return fluid->state_px (fluid, p, x, state);
+}
+
+/**
+ * hl_fluid_state_Tx:
+ * @fluid: a fluid
+ * @T: temperature [K]
+ * @x: vapour mass fraction [-]
+ * @state: (out): the complete state; untouched on failure
+ *
+ * Returns: HL_OK; HL_OUTSIDE_RANGE where the pair lies outside the published
+ *   range or is no number; HL_NOT_CONVERGED
+ */
+HlStatus
+hl_fluid_state_Tx (const HlFluid *fluid, double T, double x, HlState *state)
+{
+  return fluid->state_Tx (fluid, T, x, state);
+}
+
+/**
+ * hl_fluid_saturation_p:
+ * @fluid: a fluid
+ * @p: pressure [Pa]
+ * @saturation: (out): both ends of the line and their slopes along it; untouched on failure
+ *
+ * Returns: HL_OK; HL_OUTSIDE_RANGE off the line's range; HL_NOT_CONVERGED
+ */
+HlStatus
+hl_fluid_saturation_p (const HlFluid *fluid, double p, HlSaturation *saturation)
+{
+  return fluid->saturation_p (fluid, p, saturation);
+}
+
+/**
+ * hl_fluid_saturation_T:
+ * @fluid: a fluid
+ * @T: temperature [K]
+ * @saturation: (out): both ends of the line and their slopes along it; untouched on failure
+ *
+ * Returns: HL_OK; HL_OUTSIDE_RANGE off the line's range; HL_NOT_CONVERGED
+ */
+HlStatus
+hl_fluid_saturation_T (const HlFluid *fluid, double T, HlSaturation *saturation)
+{
+  return fluid->saturation_T (fluid, T, saturation);
+}
+
+/**
+ * hl_fluid_explain_failure:
+ * @fluid: a fluid
+ * @status: what the call returned
+ * @pair: "pT", "ph", "ps", "hs", "px" or "Tx"
+ * @a: first argument of the call, SI
+ * @b: second argument of the call, SI
+ *
+ * Returns: (transfer full): a sentence that names the limit which was broken
+ */
+char *
+hl_fluid_explain_failure (const HlFluid *fluid, HlStatus status, const char *pair, double a, double b)
+{
+  return fluid->explain_failure (fluid, status, pair, a, b);
 }
