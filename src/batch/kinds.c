@@ -1,0 +1,162 @@
+/* heatloom-batch kinds: every component with its ports, options and quantities, as Markdown.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include <math.h>
+#include <stdio.h>
+#include <string.h>
+#include "batch/command.h"
+#include "plant/i18n.h"
+#include "plant/kind.h"
+
+/* "N" stands for the number of a repeated port or quantity: extraction1, extraction2 ... */
+static void
+print_key (const char *key)
+{
+  printf ("| `");
+  for (const char *c = key; *c != '\0'; c++)
+    putchar (*c == '#' ? 'N' : *c);
+  printf ("` ");
+}
+
+/* A bar would end the cell. */
+static void
+print_cell (const char *text)
+{
+  printf ("| ");
+  for (const char *c = text; *c != '\0'; c++)
+    if (*c == '|')
+      printf ("\\|");
+    else
+      putchar (*c == '\n' ? ' ' : *c);
+  printf (*text != '\0' ? " " : "");
+}
+
+static void
+print_ports (const HlKind *kind)
+{
+  if (kind->n_ports == 0)
+    return;
+  printf ("\n| %s | | %s | %s |\n|---|---|---|---|\n", _("Port"), _("Name"), _("Exists"));
+  for (guint i = 0; i < kind->n_ports; i++)
+    {
+      const HlPortKind *port = &kind->ports[i];
+      g_autofree char *exists = NULL;
+      if (port->repeat != NULL)
+        exists = g_strdup_printf (_("N = 1 to `%s`"), port->repeat);
+      else if (port->when_option != NULL)
+        exists = g_strdup_printf (_("with `%s` = %s"), port->when_option,
+                                  kind->options[hl_kind_find_option (kind, port->when_option)].choices[port->when_choice]);
+      g_autofree char *cell = g_strjoin (exists != NULL && port->is_optional ? ", " : "", exists != NULL ? exists : "",
+                                         port->is_optional ? _("may stay open") : "", NULL);
+      print_key (port->key);
+      print_cell (port->direction == HL_PORT_IN ? _("in") : _("out"));
+      print_cell (_(port->name));
+      print_cell (cell);
+      printf ("|\n");
+    }
+}
+
+static void
+print_options (const HlKind *kind)
+{
+  if (kind->n_options == 0)
+    return;
+  printf ("\n| %s | %s | %s | %s |\n|---|---|---|---|\n", _("Option"), _("Name"), _("Values"), _("Usual"));
+  for (guint i = 0; i < kind->n_options; i++)
+    {
+      const HlOptionKind *option = &kind->options[i];
+      g_autofree char *values = option->choices != NULL ? g_strjoinv (", ", (char **) option->choices)
+                                                        : g_strdup_printf (_("%d to %d"), option->least, option->most);
+      g_autofree char *usual = option->choices != NULL ? g_strdup (option->choices[option->usual])
+                                                       : g_strdup_printf ("%d", option->usual);
+      print_key (option->key);
+      print_cell (_(option->name));
+      print_cell (values);
+      print_cell (usual);
+      printf ("|\n");
+    }
+}
+
+static char *
+default_text (const HlQuantityKind *quantity)
+{
+  if (!isfinite (quantity->default_value))
+    return g_strdup ("");
+  g_autofree char *value = hl_units_format (quantity->default_value, quantity->dimension, HL_UNITS_METRIC);
+  if (quantity->default_source == NULL || *quantity->default_source == '\0')
+    return g_steal_pointer (&value);
+  return g_strdup_printf ("%s (%s)", value, _(quantity->default_source));
+}
+
+static char *
+role_text (const HlQuantityKind *quantity)
+{
+  const char *words[4];
+  guint n = 0;
+  if ((quantity->flags & HL_QUANTITY_ASSUMED) != 0)
+    words[n++] = _("assumed");
+  if ((quantity->flags & HL_QUANTITY_USUAL) != 0)
+    words[n++] = _("usually given");
+  if ((quantity->flags & HL_QUANTITY_RESULT) != 0)
+    words[n++] = _("result");
+  words[n] = NULL;
+  return g_strjoinv (", ", (char **) words);
+}
+
+static void
+print_quantities (const HlQuantityKind *quantities, guint n)
+{
+  if (n == 0)
+    return;
+  printf ("\n| %s | %s | %s | %s | %s |\n|---|---|---|---|---|\n", _("Quantity"), _("Name"), _("SI unit"), _("Role"), _("Default"));
+  for (guint i = 0; i < n; i++)
+    {
+      const HlQuantityKind *quantity = &quantities[i];
+      g_autofree char *role = role_text (quantity), *initial = default_text (quantity);
+      print_key (quantity->key);
+      print_cell (_(quantity->name));
+      print_cell (hl_dimension_si_unit (quantity->dimension));
+      print_cell (role);
+      print_cell (initial);
+      printf ("|\n");
+    }
+}
+
+static void
+print_kind (const HlKind *kind)
+{
+  printf ("\n## %s\n\n", _(kind->name));
+  if (kind->help != NULL && *kind->help != '\0')
+    printf ("%s ", _(kind->help));
+  printf (_("Kind `%s`, letter %s."), kind->id, kind->letter);
+  printf ("\n");
+  print_ports (kind);
+  print_options (kind);
+  print_quantities (kind->quantities, kind->n_quantities);
+}
+
+static HlExit
+run_kinds (const HlArguments *arguments G_GNUC_UNUSED)
+{
+  guint n;
+  printf ("# %s\n\n", _("Components"));
+  printf (_("What `heatloom-batch kinds` prints: every kind of component with its ports, options and quantities. Each port also\n"
+            "has the state of its stream: `T1.inlet.p`, and likewise T, h, s, x, m, v. N is a number from 1.\n"));
+  for (guint i = 0; i < hl_kind_count (); i++)
+    print_kind (hl_kind_nth (i));
+  printf ("\n## %s\n\n", _("The plant as a whole"));
+  printf ("%s\n", _("Addresses begin with `plant.`"));
+  const HlQuantityKind *quantities = hl_plant_quantities (&n);
+  print_quantities (quantities, n);
+  printf ("\n## %s\n\n", _("Streams"));
+  printf ("%s\n", _("Addresses are the stream's id and the key; a bare number is written `m:1` or `stream:1.m`."));
+  quantities = hl_stream_quantities (&n);
+  print_quantities (quantities, n);
+  return HL_EXIT_DONE;
+}
+
+const HlBatchCommand hl_command_kinds = {
+  .name = "kinds",
+  .summary = N_("print every kind of component with its ports and quantities, as Markdown"),
+  .least = 0, .most = 0,
+  .run = run_kinds,
+};

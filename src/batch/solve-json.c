@@ -1,0 +1,136 @@
+/* The JSON of a solution: the contract with scripts, SI with the unit in each key.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "batch/solve-output.h"
+
+#include <math.h>
+#include "batch/json-text.h"
+
+static void
+write_quantity (HlJsonText *json, const char *key, HlDimension dimension, double value)
+{
+  g_autofree char *name = g_strconcat (key, hl_dimension_json_suffix (dimension), NULL);
+  hl_json_text_number (json, name, value);
+}
+
+static void
+write_plant (HlJsonText *json, const HlSolution *solution)
+{
+  hl_json_text_begin (json, "plant", '{', FALSE);
+  for (guint i = 0; i < hl_solution_n_results (solution); i++)
+    {
+      double value;
+      const HlQuantityKind *kind = hl_solution_result (solution, i, &value);
+      write_quantity (json, kind->key, kind->dimension, value);
+    }
+  hl_json_text_end (json);
+}
+
+static void
+write_streams (HlJsonText *json, const HlSolution *solution)
+{
+  const HlPlant *plant = hl_solution_plant (solution);
+  hl_json_text_begin (json, "streams", '{', FALSE);
+  for (guint i = 0; i < hl_plant_n_streams (plant); i++)
+    {
+      HlStreamResult result;
+      hl_solution_stream (solution, i, &result);
+      const HlState *state = result.has_state ? &result.state : NULL;
+      hl_json_text_begin (json, hl_plant_stream (plant, i)->id, '{', TRUE);
+      hl_json_text_number (json, "m_kg_s", result.has_flow ? result.m : NAN);
+      hl_json_text_number (json, "p_Pa", state != NULL ? state->p : NAN);
+      hl_json_text_number (json, "T_K", state != NULL ? state->T : NAN);
+      hl_json_text_number (json, "h_J_kg", state != NULL ? state->h : NAN);
+      hl_json_text_number (json, "s_J_kgK", state != NULL ? state->s : NAN);
+      hl_json_text_number (json, "x", state != NULL ? state->x : NAN);
+      hl_json_text_end (json);
+    }
+  hl_json_text_end (json);
+}
+
+static void
+write_components (HlJsonText *json, const HlSolution *solution)
+{
+  const HlPlant *plant = hl_solution_plant (solution);
+  hl_json_text_begin (json, "components", '{', FALSE);
+  for (guint i = 0; i < hl_plant_n_components (plant); i++)
+    {
+      const HlComponent *component = hl_plant_component (plant, i);
+      hl_json_text_begin (json, component->id, '{', FALSE);
+      for (guint k = 0; k < hl_component_n_quantities (component); k++)
+        {
+          HlQuantity quantity = hl_component_quantity (component, k);
+          HlAddress address = hl_address_component (component->id, quantity.key);
+          double value;
+          /* A quantity that does not exist in this plant, an efficiency nobody asked for, is left out. */
+          if (hl_solution_value (solution, &address, &value) && isfinite (value))
+            write_quantity (json, quantity.key, quantity.kind->dimension, value);
+        }
+      hl_json_text_end (json);
+    }
+  hl_json_text_end (json);
+}
+
+static void
+write_address (HlJsonText *json, const char *name, const HlAddress *address)
+{
+  /* A finding about a whole component or the plant carries no key. */
+  if (address->key == NULL || *address->key == '\0')
+    {
+      hl_json_text_string (json, name, address->owner == HL_OWNER_PLANT ? "plant" : address->id);
+      return;
+    }
+  g_autofree char *text = hl_address_to_text (address);
+  hl_json_text_string (json, name, text);
+}
+
+static void
+write_findings (HlJsonText *json, const HlSolution *solution)
+{
+  hl_json_text_begin (json, "findings", '[', FALSE);
+  for (guint i = 0; i < hl_solution_n_findings (solution); i++)
+    {
+      const HlFinding *finding = hl_solution_finding (solution, i);
+      hl_json_text_begin (json, NULL, '{', FALSE);
+      hl_json_text_string (json, "grade", hl_grade_id (finding->grade));
+      hl_json_text_string (json, "code", finding->code);
+      hl_json_text_string (json, "text", finding->text);
+      write_address (json, "at", &finding->at);
+      hl_json_text_begin (json, "mends", '[', FALSE);
+      for (guint k = 0; k < finding->n_mends; k++)
+        hl_json_text_string (json, NULL, finding->mends[k].text);
+      hl_json_text_end (json);
+      hl_json_text_end (json);
+    }
+  hl_json_text_end (json);
+}
+
+static void
+write_yielded (HlJsonText *json, const GArray *yielded)
+{
+  hl_json_text_begin (json, "yielded", '[', FALSE);
+  for (guint i = 0; i < yielded->len; i++)
+    {
+      const HlYield *yield = &g_array_index (yielded, HlYield, i);
+      hl_json_text_begin (json, NULL, '{', TRUE);
+      write_address (json, "at", &yield->address);
+      hl_json_text_boolean (json, "came_back", yield->came_back);
+      hl_json_text_string (json, "text", yield->text);
+      hl_json_text_end (json);
+    }
+  hl_json_text_end (json);
+}
+
+char *
+hl_solution_json (const HlSolution *solution, const GArray *yielded)
+{
+  HlJsonText *json = hl_json_text_new ();
+  hl_json_text_begin (json, NULL, '{', FALSE);
+  hl_json_text_boolean (json, "solved", hl_solution_is_solved (solution));
+  write_plant (json, solution);
+  write_streams (json, solution);
+  write_components (json, solution);
+  write_findings (json, solution);
+  write_yielded (json, yielded);
+  hl_json_text_end (json);
+  return hl_json_text_finish (json);
+}

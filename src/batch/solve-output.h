@@ -1,0 +1,13 @@
+/* A solution as JSON and as text.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include <stdio.h>
+#include "engine/engine.h"
+G_BEGIN_DECLS
+
+/* @yielded: of HlYield, in order. */
+char *hl_solution_json      (const HlSolution *solution, const GArray *yielded);    /* g_free() */
+void  hl_print_solution     (FILE *out, const HlSolution *solution, const GArray *yielded);
+/* Findings of at least @grade, each with its place and mends. */
+void  hl_print_findings     (FILE *out, const HlSolution *solution, HlGrade at_least);
+G_END_DECLS

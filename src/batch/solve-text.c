@@ -1,0 +1,63 @@
+/* A solution as text for a terminal.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "batch/solve-output.h"
+
+#include "plant/i18n.h"
+
+static void
+print_pair (FILE *out, const char *name, const char *text)
+{
+  fprintf (out, "  %s%*s%s\n", name, (int) MAX (1, 36 - g_utf8_strlen (name, -1)), "", text);
+}
+
+static char *
+address_text (const HlAddress *address)
+{
+  if (address->key == NULL || *address->key == '\0')
+    return g_strdup (address->owner == HL_OWNER_PLANT ? "plant" : address->id);
+  return hl_address_to_text (address);
+}
+
+void
+hl_print_findings (FILE *out, const HlSolution *solution, HlGrade at_least)
+{
+  for (guint i = 0; i < hl_solution_n_findings (solution); i++)
+    {
+      const HlFinding *finding = hl_solution_finding (solution, i);
+      if (finding->grade < at_least)
+        continue;
+      g_autofree char *at = address_text (&finding->at);
+      fprintf (out, "%s: %s: %s\n", hl_grade_name (finding->grade), at, finding->text);
+      for (guint k = 0; k < finding->n_mends; k++)
+        fprintf (out, "    → %s\n", finding->mends[k].text);
+    }
+}
+
+void
+hl_print_solution (FILE *out, const HlSolution *solution, const GArray *yielded)
+{
+  const HlPlant *plant = hl_solution_plant (solution);
+  g_autofree char *summary = hl_solution_summary (solution);
+  if (*hl_plant_title (plant) != '\0')
+    fprintf (out, "%s\n", hl_plant_title (plant));
+  fprintf (out, "%s\n", summary);
+
+  if (hl_solution_n_results (solution) > 0)
+    fprintf (out, "\n");
+  for (guint i = 0; i < hl_solution_n_results (solution); i++)
+    {
+      double value;
+      const HlQuantityKind *kind = hl_solution_result (solution, i, &value);
+      g_autofree char *text = hl_units_format (value, kind->dimension, hl_plant_units (plant));
+      print_pair (out, _(kind->name), text);
+    }
+
+  if (yielded->len > 0)
+    fprintf (out, "\n");
+  for (guint i = 0; i < yielded->len; i++)
+    fprintf (out, "%s: %s\n", _("yielded"), g_array_index (yielded, HlYield, i).text);
+
+  if (hl_solution_n_findings (solution) > 0)
+    fprintf (out, "\n");
+  hl_print_findings (out, solution, HL_GRADE_HINT);
+}

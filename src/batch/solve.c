@@ -1,0 +1,196 @@
+/* heatloom-batch solve and check: one plant, solved once.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include <stdio.h>
+#include <string.h>
+#include "batch/command.h"
+#include "batch/solve-output.h"
+#include "draw/export.h"
+#include "plant/i18n.h"
+
+/* The options that take a file name, which may be "-". */
+static const char *const file_options[] = { "json", "csv", "drawing", "diagram", NULL };
+
+static HlPlant *
+load_plant (const char *path, GError **error)
+{
+  if (strcmp (path, "-") != 0)
+    return hl_plant_load (path, error);
+
+  g_autoptr(GString) text = g_string_new (NULL);
+  char block[65536];
+  gsize n;
+  while ((n = fread (block, 1, sizeof block, stdin)) > 0)
+    g_string_append_len (text, block, (gssize) n);
+  if (ferror (stdin))
+    {
+      g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_CONTENT, _("standard input could not be read to the end"));
+      return NULL;
+    }
+  return hl_plant_from_json (text->str, (gssize) text->len, _("standard input"), error);
+}
+
+/* One --set, as if typed in the window: the value is given, and an assumed one may yield to it. */
+static gboolean
+set_value (HlPlant **plant, const char *text, GArray *yielded, GError **error)
+{
+  const char *equals = strchr (text, '=');
+  if (!g_utf8_validate (text, -1, NULL) || equals == NULL || equals == text)
+    {
+      g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE,
+                   _("--set needs ADDRESS=VALUE, for instance 'T1.inlet.p=80 bar'; got “%s”"), text);
+      return FALSE;
+    }
+  g_autofree char *name = g_strstrip (g_strndup (text, (gsize) (equals - text)));
+  HlAddress address;
+  HlValue value;
+  if (!hl_address_parse (name, *plant, &address, error) || !hl_value_parse (*plant, &address, equals + 1, &value, error))
+    return FALSE;
+  g_autoptr(HlPlant) with_value = hl_plant_with_value (*plant, &address, &value, error);
+  if (with_value == NULL)
+    return FALSE;
+
+  g_autoptr(GArray) now_yielded = NULL;
+  HlPlant *settled = hl_settle (with_value, &address, &now_yielded);
+  if (now_yielded != NULL && now_yielded->len > 0)
+    g_array_append_vals (yielded, now_yielded->data, now_yielded->len);
+  hl_plant_unref (*plant);
+  *plant = settled;
+  return TRUE;
+}
+
+static gboolean
+set_values (HlPlant **plant, const HlArguments *arguments, GArray *yielded, GError **error)
+{
+  char *const *values;
+  for (guint n = 0; (values = hl_arguments_option (arguments, "set", n)) != NULL; n++)
+    if (!set_value (plant, values[0], yielded, error))
+      {
+        g_prefix_error (error, "--set '%s': ", values[0]);
+        return FALSE;
+      }
+  return TRUE;
+}
+
+/* Mistakes of the command line show before anything is read or written. */
+static gboolean
+check_usage (const HlArguments *arguments, GError **error)
+{
+  char *const *diagram = hl_arguments_option (arguments, "diagram", 0);
+  const char *drawing = hl_arguments_value (arguments, "drawing");
+  HlFormat format;
+  if (hl_arguments_count_standard_output (arguments, file_options) > 1)
+    g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("only one output can go to standard output (-)"));
+  else if (diagram != NULL && strcmp (diagram[0], "ts") != 0)
+    g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("--diagram: there is no diagram “%s”; there is ts"), diagram[0]);
+  else
+    return (diagram == NULL || strcmp (diagram[1], "-") == 0 || hl_format_from_path (diagram[1], &format, error))
+           && (drawing == NULL || strcmp (drawing, "-") == 0 || hl_format_from_path (drawing, &format, error));
+  return FALSE;
+}
+
+static gboolean
+write_picture (const HlSolution *solution, HlPicture picture, const char *path, GError **error)
+{
+  /* A picture without a file name has no ending that says its format. */
+  HlFormat format = HL_FORMAT_SVG;
+  if (strcmp (path, "-") != 0 && !hl_format_from_path (path, &format, error))
+    return FALSE;
+  return hl_export_picture_file (solution, picture, format, HL_THEME_PAPER, path, error);
+}
+
+static gboolean
+write_outputs (const HlSolution *solution, const GArray *yielded, const HlArguments *arguments, GError **error)
+{
+  const char *json_path = hl_arguments_value (arguments, "json"), *csv_path = hl_arguments_value (arguments, "csv");
+  const char *drawing = hl_arguments_value (arguments, "drawing");
+  char *const *diagram = hl_arguments_option (arguments, "diagram", 0);
+  if (json_path != NULL)
+    {
+      g_autofree char *json = hl_solution_json (solution, yielded);
+      if (!hl_export_text_file (json, json_path, error))
+        return FALSE;
+    }
+  if (csv_path != NULL)
+    {
+      g_autofree char *csv = hl_ledger_csv (solution, hl_plant_units (hl_solution_plant (solution)));
+      if (!hl_export_text_file (csv, csv_path, error))
+        return FALSE;
+    }
+  return (drawing == NULL || write_picture (solution, HL_PICTURE_DRAWING, drawing, error))
+         && (diagram == NULL || write_picture (solution, HL_PICTURE_STATE_DIAGRAM, diagram[1], error));
+}
+
+static HlExit
+run_solve (const HlArguments *arguments)
+{
+  g_autoptr(GError) error = NULL;
+  if (!check_usage (arguments, &error))
+    return hl_complain (HL_EXIT_USAGE, g_steal_pointer (&error));
+  g_autoptr(HlPlant) plant = load_plant (hl_arguments_word (arguments, 0), &error);
+  if (plant == NULL)
+    return hl_complain (HL_EXIT_FILE, g_steal_pointer (&error));
+  g_autoptr(GArray) yielded = g_array_new (FALSE, FALSE, sizeof (HlYield));
+  if (!set_values (&plant, arguments, yielded, &error))
+    return hl_complain (HL_EXIT_USAGE, g_steal_pointer (&error));
+
+  g_autoptr(HlSolution) solution = hl_solve (plant, NULL);
+  if (!write_outputs (solution, yielded, arguments, &error))
+    return hl_complain (HL_EXIT_FILE, g_steal_pointer (&error));
+  /* Where standard output carries a file, a person still hears of errors. */
+  if (hl_arguments_count_standard_output (arguments, file_options) == 0)
+    hl_print_solution (stdout, solution, yielded);
+  else
+    hl_print_findings (stderr, solution, HL_GRADE_ERROR);
+  return hl_solution_is_solved (solution) ? HL_EXIT_DONE : HL_EXIT_PLANT;
+}
+
+static HlExit
+run_check (const HlArguments *arguments)
+{
+  g_autoptr(GError) error = NULL;
+  g_autoptr(HlPlant) plant = load_plant (hl_arguments_word (arguments, 0), &error);
+  if (plant == NULL)
+    return hl_complain (HL_EXIT_FILE, g_steal_pointer (&error));
+  g_autoptr(HlSolution) solution = hl_solve (plant, NULL);
+  hl_print_findings (stdout, solution, HL_GRADE_HINT);
+  if (hl_solution_n_findings (solution) == 0)
+    printf ("%s\n", _("nothing found"));
+  gboolean is_strict = hl_arguments_option (arguments, "strict", 0) != NULL;
+  gboolean is_bad = !hl_solution_is_solved (solution) || hl_solution_has_grade (solution, is_strict ? HL_GRADE_WARNING : HL_GRADE_ERROR);
+  return is_bad ? HL_EXIT_PLANT : HL_EXIT_DONE;
+}
+
+static const HlBatchOption solve_options[] = {
+  { "set", N_("ADDRESS=VALUE"), TRUE, N_("give a value, as 'T1.inlet.p=80 bar'; may be repeated") },
+  { "json", N_("FILE"), FALSE, N_("write results, streams and findings as JSON, in SI") },
+  { "csv", N_("FILE"), FALSE, N_("write the ledger of all streams as CSV, in the plant's units") },
+  { "drawing", N_("FILE"), FALSE, N_("write the drawing; .svg, .pdf or .png") },
+  { "diagram", N_("ts FILE"), FALSE, N_("write the temperature-entropy diagram; .svg, .pdf or .png") },
+};
+
+const HlBatchCommand hl_command_solve = {
+  .name = "solve",
+  .usage = N_("PLANT [options]"),
+  .summary = N_("solve a plant, print its results, write them to files"),
+  .details = N_(
+    "PLANT is a *.heatloom file. --set works like typing into the window: the value becomes given, and where that is\n"
+    "one too many, an assumed value yields; the output says which. A value that begins with = ties the quantity to\n"
+    "another one: --set 'H1.steam.p==0.5*T1.inlet.p'. A picture written to - is SVG.\n"),
+  .least = 1, .most = 1,
+  .options = solve_options, .n_options = G_N_ELEMENTS (solve_options),
+  .run = run_solve,
+};
+
+static const HlBatchOption check_options[] = {
+  { "strict", NULL, FALSE, N_("a warning counts as an error") },
+};
+
+const HlBatchCommand hl_command_check = {
+  .name = "check",
+  .usage = N_("PLANT [--strict]"),
+  .summary = N_("print what is missing, contradictory or against good practice"),
+  .details = N_("The exit status is 1 where a finding is an error.\n"),
+  .least = 1, .most = 1,
+  .options = check_options, .n_options = G_N_ELEMENTS (check_options),
+  .run = run_check,
+};
