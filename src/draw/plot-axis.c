@@ -1,0 +1,144 @@
+/* One axis of a plot: a range in SI on a range of pixels, with round ticks in the units of a unit set.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "draw/plot-axis.h"
+#include "draw/text.h"
+#include <math.h>
+
+/* The least of 1, 2, 5 times a power of ten that is at least @wanted. */
+static double
+round_step (double wanted)
+{
+  double decade = pow (10.0, floor (log10 (wanted)));
+  double mantissa = wanted / decade;
+  return decade * (mantissa <= 1.0 + 1e-9 ? 1.0 : mantissa <= 2.0 + 1e-9 ? 2.0 : mantissa <= 5.0 + 1e-9 ? 5.0 : 10.0);
+}
+
+static int
+decimals_of (double step)
+{
+  int decimals = (int) ceil (-log10 (step) - 1e-9);
+  return CLAMP (decimals, 0, 9);
+}
+
+static void
+set_ticks (HlPlotAxis *axis, double shown_low, double shown_high)
+{
+  int decimals = decimals_of (axis->step);
+  axis->n_ticks = 0;
+  for (double k = ceil (shown_low / axis->step - 1e-6); k <= shown_high / axis->step + 1e-6 && axis->n_ticks < HL_PLOT_MAX_TICKS; k++)
+    {
+      double shown = k * axis->step;
+      axis->ticks[axis->n_ticks] = hl_units_from_display (shown, axis->dimension, axis->units);
+      /* Adding 0 turns -0 into 0. */
+      g_snprintf (axis->tick_texts[axis->n_ticks], sizeof axis->tick_texts[0], "%.*f", decimals, shown + 0.0);
+      axis->n_ticks++;
+    }
+}
+
+void
+hl_plot_axis_set (HlPlotAxis *axis, HlDimension dimension, HlUnitSet units, double low, double high,
+                  double pixel_low, double pixel_high, double spacing)
+{
+  double shown_low = hl_units_to_display (low, dimension, units), shown_high = hl_units_to_display (high, dimension, units);
+  double length = fabs (pixel_high - pixel_low), half;
+  if (!(shown_high > shown_low))
+    shown_high = shown_low + MAX (1e-9, fabs (shown_low) * 1e-6);
+  axis->dimension = dimension;
+  axis->units = units;
+  axis->pixel_low = pixel_low;
+  axis->pixel_high = pixel_high;
+  axis->step = round_step ((shown_high - shown_low) / CLAMP (length / spacing, 1.0, HL_PLOT_MAX_TICKS - 4));
+  half = axis->step / 2.0;
+  /* A range that misses a round end by less than a thousandth keeps to it. */
+  shown_low = half * floor (shown_low / half + 2e-3);
+  shown_high = half * ceil (shown_high / half - 2e-3);
+  axis->low = hl_units_from_display (shown_low, dimension, units);
+  axis->high = hl_units_from_display (shown_high, dimension, units);
+  set_ticks (axis, shown_low, shown_high);
+}
+
+double
+hl_plot_axis_to_pixel (const HlPlotAxis *axis, double value)
+{
+  return axis->pixel_low + (value - axis->low) / (axis->high - axis->low) * (axis->pixel_high - axis->pixel_low);
+}
+
+double
+hl_plot_axis_from_pixel (const HlPlotAxis *axis, double pixel)
+{
+  return axis->low + (pixel - axis->pixel_low) / (axis->pixel_high - axis->pixel_low) * (axis->high - axis->low);
+}
+
+char *
+hl_plot_axis_title (const HlPlotAxis *axis, const char *name)
+{
+  const char *unit = hl_units_label (axis->dimension, axis->units);
+  return unit[0] != '\0' ? g_strdup_printf ("%s %s", name, unit) : g_strdup (name);
+}
+
+double
+hl_plot_axis_room_left (double text_size)
+{
+  return 4.9 * text_size;
+}
+
+double
+hl_plot_axis_room_below (double text_size)
+{
+  return 3.5 * text_size;
+}
+
+/* Lines of one pixel look sharp when they lie on the middle of one. */
+static double
+sharp (double pixel)
+{
+  return floor (pixel) + 0.5;
+}
+
+void
+hl_plot_axes_draw_grid (cairo_t *cr, const HlTheme *theme, const HlPlotAxis *x, const HlPlotAxis *y)
+{
+  cairo_save (cr);
+  cairo_set_line_width (cr, 1.0);
+  cairo_set_dash (cr, NULL, 0, 0.0);
+  for (guint i = 0; i < x->n_ticks; i++)
+    {
+      double at = sharp (hl_plot_axis_to_pixel (x, x->ticks[i]));
+      cairo_move_to (cr, at, y->pixel_low);
+      cairo_line_to (cr, at, y->pixel_high);
+    }
+  for (guint i = 0; i < y->n_ticks; i++)
+    {
+      double at = sharp (hl_plot_axis_to_pixel (y, y->ticks[i]));
+      cairo_move_to (cr, x->pixel_low, at);
+      cairo_line_to (cr, x->pixel_high, at);
+    }
+  hl_set_colour (cr, &theme->grid);
+  cairo_stroke (cr);
+  cairo_restore (cr);
+}
+
+void
+hl_plot_axes_draw_frame (cairo_t *cr, const HlTheme *theme, const HlPlotAxis *x, const HlPlotAxis *y,
+                         const char *x_title, const char *y_title, double text_size)
+{
+  double left = sharp (x->pixel_low), bottom = sharp (y->pixel_low), title_size = text_size * 1.05;
+  cairo_save (cr);
+  cairo_set_line_width (cr, 1.0);
+  cairo_set_dash (cr, NULL, 0, 0.0);
+  cairo_set_line_join (cr, CAIRO_LINE_JOIN_MITER);
+  cairo_move_to (cr, left, y->pixel_high);
+  cairo_line_to (cr, left, bottom);
+  cairo_line_to (cr, x->pixel_high, bottom);
+  hl_set_colour (cr, &theme->quiet);
+  cairo_stroke (cr);
+  for (guint i = 0; i < x->n_ticks; i++)
+    hl_text_show (cr, theme, x->tick_texts[i], hl_plot_axis_to_pixel (x, x->ticks[i]), bottom + 1.45 * text_size, 0, text_size, FALSE);
+  for (guint i = 0; i < y->n_ticks; i++)
+    hl_text_show (cr, theme, y->tick_texts[i], left - 0.6 * text_size, hl_plot_axis_to_pixel (y, y->ticks[i]) + 0.36 * text_size, 1, text_size, FALSE);
+  hl_text_show (cr, theme, x_title, (x->pixel_low + x->pixel_high) / 2.0, bottom + 2.95 * text_size, 0, title_size, FALSE);
+  cairo_translate (cr, left - 3.75 * text_size, (y->pixel_low + y->pixel_high) / 2.0);
+  cairo_rotate (cr, -G_PI / 2.0);
+  hl_text_show (cr, theme, y_title, 0.0, 0.0, 0, title_size, FALSE);
+  cairo_restore (cr);
+}

@@ -1,0 +1,281 @@
+/* Isobars of the diagram: at which pressures, where they end, where their labels stand.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "draw/state-diagram-private.h"
+#include <math.h>
+#include <string.h>
+
+#define MERGE 1.12      /* pressures closer than this ratio share one isobar */
+
+typedef struct {
+  double p, m, h;       /* pressure, largest flow at it, enthalpy there */
+  double hottest;       /* highest temperature of the cycle on it; 0 none */
+} Isobar;
+
+static int
+compare_pressures (gconstpointer a, gconstpointer b)
+{
+  double p_a = ((const Isobar *) a)->p, p_b = ((const Isobar *) b)->p;
+  return (p_a > p_b) - (p_a < p_b);
+}
+
+static void
+take_state (GArray *all, const HlState *state, double m)
+{
+  Isobar isobar = { state->p, m > 0.0 ? m : 0.0, state->h, state->T };
+  /* An isobar of the liquid cannot be told from the saturation line. */
+  if (state->phase != HL_PHASE_LIQUID && isfinite (state->p) && state->p > 0.0)
+    g_array_append_val (all, isobar);
+}
+
+/* The cycle's pressures, close ones merged into the one that carries most (of equals the hottest, of equals the highest). */
+static GArray *
+cycle_isobars (const HlCycle *cycle)
+{
+  g_autoptr (GArray) all = g_array_new (FALSE, FALSE, sizeof (Isobar));
+  GArray *merged = g_array_new (FALSE, FALSE, sizeof (Isobar));
+  for (guint i = 0; i < cycle->points->len; i++)
+    take_state (all, &g_array_index (cycle->points, HlCyclePoint, i).state, g_array_index (cycle->points, HlCyclePoint, i).m);
+  for (guint i = 0; i < cycle->processes->len; i++)
+    {
+      const HlProcess *process = &g_array_index (cycle->processes, HlProcess, i);
+      take_state (all, &process->from, process->m);
+      take_state (all, &process->to, process->m);
+    }
+  g_array_sort (all, compare_pressures);
+  for (guint i = 0; i < all->len;)
+    {
+      Isobar best = g_array_index (all, Isobar, i);
+      double first = best.p, hottest = best.hottest;
+      for (i++; i < all->len && g_array_index (all, Isobar, i).p < first * MERGE; i++)
+        {
+          const Isobar *other = &g_array_index (all, Isobar, i);
+          hottest = MAX (hottest, other->hottest);
+          if (other->m > best.m * 1.001 || (other->m > best.m * 0.999 && other->h > best.h - 1.0))
+            best = *other;
+        }
+      best.hottest = hottest;
+      g_array_append_val (merged, best);
+    }
+  return merged;
+}
+
+/* Without a cycle: the powers of ten of the unit shown. */
+static GArray *
+usual_isobars (const HlStateDiagram *diagram, const HlCycle *cycle)
+{
+  GArray *isobars = g_array_new (FALSE, TRUE, sizeof (Isobar));
+  HlFluidLimits limits;
+  hl_fluid_limits (cycle->fluid, &limits);
+  for (int k = -6; k <= 6; k++)
+    {
+      Isobar isobar = { .p = hl_units_from_display (pow (10.0, k), HL_DIMENSION_PRESSURE, cycle->units) };
+      HlSaturation saturation;
+      if (isobar.p > 0.6 * limits.p_critical || hl_fluid_saturation_p (cycle->fluid, isobar.p, &saturation) != HL_OK || saturation.T < diagram->T_axis.low)
+        continue;
+      g_array_append_val (isobars, isobar);
+    }
+  return isobars;
+}
+
+/* Three significant figures, no exponent, no needless zeros: 65 bar, 2.5 bar, 0.07 bar, 2440 psia. */
+static char *
+pressure_text (double p, HlUnitSet units)
+{
+  double shown = hl_units_to_display (p, HL_DIMENSION_PRESSURE, units);
+  int decimals = (int) CLAMP (2.0 - floor (log10 (shown) + 1e-9), 0.0, 6.0);
+  char number[32];
+  g_snprintf (number, sizeof number, "%.*f", decimals, shown);
+  if (decimals > 0)
+    {
+      char *end = number + strlen (number);
+      while (end[-1] == '0')
+        *--end = '\0';
+      if (end[-1] == '.')
+        *--end = '\0';
+    }
+  return g_strdup_printf ("%s %s", number, hl_units_label (HL_DIMENSION_PRESSURE, units));
+}
+
+typedef struct {
+  double        p;
+  HlPlotSeries *series;
+  GArray       *pixels;      /* of HlPoint, cut at the frame */
+  double        keep;        /* length from the start that a label must leave [pixels] */
+  double        length;
+} Line;
+
+static HlPoint
+pixel (const HlStateDiagram *diagram, double s, double T)
+{
+  return (HlPoint) { hl_plot_axis_to_pixel (&diagram->s_axis, s), hl_plot_axis_to_pixel (&diagram->T_axis, T) };
+}
+
+static void
+line_clear (gpointer data)
+{
+  Line *line = data;
+  g_array_unref (line->pixels);
+}
+
+/* Path in pixels up to the right end of the frame. */
+static Line
+make_line (HlStateDiagram *diagram, const HlCycle *cycle, const Isobar *isobar)
+{
+  Line line = { isobar->p, hl_plot_series_new (HL_PLOT_QUIET, HL_PLOT_SOLID, 0.7), g_array_new (FALSE, FALSE, sizeof (HlPoint)), 0.0, 0.0 };
+  HlFluidLimits limits;
+  double T_high, T_low;
+  GArray *path;
+  hl_fluid_limits (cycle->fluid, &limits);
+  T_high = MIN (diagram->T_axis.high, limits.T_max);
+  T_low = MAX (diagram->T_axis.low, limits.T_triple);
+  path = hl_isobar_path (cycle->fluid, isobar->p, T_low, T_high, &diagram->s_axis, &diagram->T_axis);
+  for (guint i = 0; i < path->len; i++)
+    {
+      const HlPathPoint *point = &g_array_index (path, HlPathPoint, i);
+      HlPoint at = pixel (diagram, point->s, point->T), last = at;
+      double right = diagram->frame.x + diagram->frame.width;
+      if (line.pixels->len > 0)
+        last = g_array_index (line.pixels, HlPoint, line.pixels->len - 1);
+      hl_plot_series_add (line.series, point->s, point->T);
+      if (last.x >= right)
+        continue;
+      if (at.x > right)
+        at = (HlPoint) { right, last.y + (at.y - last.y) * (right - last.x) / (at.x - last.x) };
+      g_array_append_val (line.pixels, at);
+      line.length += hypot (at.x - last.x, at.y - last.y);
+      /* The dome's part and a little more stays, and what the cycle runs along. */
+      if (i <= 1)
+        line.keep = line.length + 2.2 * diagram->text_size;
+      if (isobar->hottest > 0.0 && point->T <= isobar->hottest + 1e-6)
+        line.keep = MAX (line.keep, line.length + 0.9 * diagram->text_size);
+    }
+  g_array_unref (path);
+  return line;
+}
+
+/* Place and direction @from_end pixels before the end. */
+static gboolean
+point_before_end (const Line *line, double from_end, HlPoint *at, HlPoint *direction)
+{
+  for (guint i = line->pixels->len - 1; i > 0; i--)
+    {
+      HlPoint a = g_array_index (line->pixels, HlPoint, i - 1), b = g_array_index (line->pixels, HlPoint, i);
+      double length = hypot (b.x - a.x, b.y - a.y);
+      if (length > 1e-9 && from_end <= length)
+        {
+          *direction = (HlPoint) { (b.x - a.x) / length, (b.y - a.y) / length };
+          *at = (HlPoint) { b.x - direction->x * from_end, b.y - direction->y * from_end };
+          return TRUE;
+        }
+      from_end -= length;
+    }
+  return FALSE;
+}
+
+/* The box that the line runs into, or one beside the line. */
+static HlBox
+box_for (HlPoint at, HlPoint direction, int side, double width, double height)
+{
+  double reach_x = (width / 2.0 + 3.0) / MAX (fabs (direction.x), 1e-6), reach_y = (height / 2.0 + 1.5) / MAX (fabs (direction.y), 1e-6);
+  double reach = MIN (reach_x, reach_y);
+  HlPoint centre = { at.x + direction.x * reach, at.y + direction.y * reach };
+  if (side != 0)
+    centre = (HlPoint) { at.x + side * (width / 2.0 + 5.0), at.y };
+  return (HlBox) { centre.x - width / 2.0, centre.y - height / 2.0, width, height };
+}
+
+static gboolean
+place_label (HlStateDiagram *diagram, HlPlotLabels *labels, const Line *line, const char *text, double *end)
+{
+  double width, height, best = G_MAXDOUBLE;
+  HlBox best_box = { 0.0, 0.0, 0.0, 0.0 };
+  HlPlotLabelPlace place;
+  hl_state_diagram_text_size (text, 0.93 * diagram->text_size, FALSE, &width, &height);
+  *end = line->length;
+  for (double from_end = 0.0; line->length - from_end >= line->keep; from_end += 5.0)
+    {
+      HlPoint at, direction;
+      if (0.06 * from_end >= best || !point_before_end (line, from_end, &at, &direction))
+        break;
+      for (int side = -1; side <= 1; side++)
+        {
+          HlBox box = box_for (at, direction, side, width, height);
+          double cost = 0.06 * from_end + (side == 0 ? 0.0 : side > 0 ? 5.0 : 6.0);
+          if (cost >= best || !hl_plot_labels_is_free (labels, &box))
+            continue;
+          cost += 0.5 * hl_plot_labels_cost (labels, &box);
+          if (cost >= best)
+            continue;
+          best = cost;
+          best_box = box;
+          *end = side == 0 ? line->length - from_end : line->length;
+        }
+    }
+  if (best == G_MAXDOUBLE)
+    return FALSE;
+  hl_plot_labels_take (labels, &best_box, &place);
+  {
+    HlDiagramText item = { HL_TEXT_PRESSURE, g_strdup (text), best_box };
+    g_array_append_val (diagram->texts, item);
+  }
+  return TRUE;
+}
+
+/* Shortens the series to @end pixels. */
+static void
+cut_series (const HlStateDiagram *diagram, HlPlotSeries *series, double end)
+{
+  double length = 0.0;
+  for (guint i = 1; i < hl_plot_series_n (series); i++)
+    {
+      HlPoint *a = &g_array_index (series->points, HlPoint, i - 1), *b = &g_array_index (series->points, HlPoint, i);
+      HlPoint pixel_a = pixel (diagram, a->x, a->y), pixel_b = pixel (diagram, b->x, b->y);
+      double step = hypot (pixel_b.x - pixel_a.x, pixel_b.y - pixel_a.y);
+      if (length + step > end && step > 1e-9)
+        {
+          double t = (end - length) / step;
+          *b = (HlPoint) { a->x + t * (b->x - a->x), a->y + t * (b->y - a->y) };
+          g_array_set_size (series->points, i + 1);
+          return;
+        }
+      length += step;
+    }
+}
+
+/* Adds the lines of the isobars, and their ink to @labels; element-type Line, for the next function. */
+GArray *
+hl_state_diagram_add_isobars (HlStateDiagram *diagram, const HlCycle *cycle, HlPlotLabels *labels)
+{
+  GArray *isobars = cycle_isobars (cycle), *lines = g_array_new (FALSE, FALSE, sizeof (Line));
+  g_array_set_clear_func (lines, line_clear);
+  if (isobars->len == 0)
+    {
+      g_array_unref (isobars);
+      isobars = usual_isobars (diagram, cycle);
+    }
+  for (guint i = 0; i < isobars->len; i++)
+    {
+      Line line = make_line (diagram, cycle, &g_array_index (isobars, Isobar, i));
+      g_array_append_val (lines, line);
+      hl_plot_layer_add (diagram->background, line.series);
+      for (guint k = 1; k < line.pixels->len; k++)
+        hl_plot_labels_add_line (labels, g_array_index (line.pixels, HlPoint, k - 1), g_array_index (line.pixels, HlPoint, k), 0.25);
+    }
+  g_array_unref (isobars);
+  return lines;
+}
+
+/* The lowest and the highest pressure are named first, then from high to low; what finds no room stays without a name. */
+void
+hl_state_diagram_label_isobars (HlStateDiagram *diagram, const HlCycle *cycle, const GArray *lines, HlPlotLabels *labels)
+{
+  for (guint i = 0; i < lines->len; i++)
+    {
+      guint n = i == 0 ? 0 : lines->len - i;
+      const Line *line = &g_array_index (lines, Line, n);
+      g_autofree char *text = pressure_text (line->p, cycle->units);
+      double end;
+      if (line->pixels->len >= 2 && place_label (diagram, labels, line, text, &end))
+        cut_series (diagram, line->series, end);
+    }
+}

@@ -1,0 +1,96 @@
+/* What the files of the state diagram share: the cycle as plain values, the dome, paths, and the finished picture.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include "draw/plot-labels.h"
+#include "draw/plot-layer.h"
+#include "draw/state-diagram.h"
+G_BEGIN_DECLS
+
+/* The cycle to be shown, free of plant and solver. */
+typedef struct {
+  const char    *id;            /* the number in the picture */
+  int            stream;        /* index that hit tests answer with */
+  double         m;             /* [kg/s]; NaN unknown */
+  HlState        state;
+} HlCyclePoint;
+typedef struct {
+  const HlFluid *fluid;
+  HlUnitSet      units;
+  GArray        *points;        /* of HlCyclePoint */
+  GArray        *processes;     /* of HlProcess; none of a service circuit */
+} HlCycle;
+HlCycle        *hl_cycle_new           (const HlFluid *fluid, HlUnitSet units);
+HlCycle        *hl_cycle_from_solution (const HlSolution *solution, HlUnitSet units);
+void            hl_cycle_free          (HlCycle *cycle);
+G_DEFINE_AUTOPTR_CLEANUP_FUNC (HlCycle, hl_cycle_free)
+
+/* Saturation line of a fluid from the triple point to the critical point; computed on first use and kept. */
+typedef struct {
+  guint   n;
+  double *T, *s_liquid, *s_vapour;    /* [n], rising T; the last one is the critical point */
+} HlDome;
+const HlDome *hl_dome_of (const HlFluid *fluid);
+/* Entropy of the saturation line at @T between two entries of the dome, for drawing; quality 0 to 1. */
+double        hl_dome_entropy (const HlDome *dome, double T, double quality);
+
+/* True path of a process in the diagram. */
+typedef struct {
+  double  s, T, p, h;
+  HlLook  look;                 /* water, wet or steam: sets the colour */
+} HlPathPoint;
+/* Samples adaptively until the picture deviates by less than a fraction of a pixel; element-type HlPathPoint; never NULL.
+ * Where a property call fails the path is the straight line between its ends. */
+GArray *hl_process_path (const HlProcess *process, const HlPlotAxis *s_axis, const HlPlotAxis *T_axis);
+/* The isobar from the saturated liquid (above the critical pressure: from @T_low) to @T_high. */
+GArray *hl_isobar_path  (const HlFluid *fluid, double p, double T_low, double T_high, const HlPlotAxis *s_axis, const HlPlotAxis *T_axis);
+
+typedef enum {
+  HL_MARK_STATE,                /* a numbered state, ringed */
+  HL_MARK_IDEAL,                /* isentropic end point, a small ring */
+} HlMarkKind;
+typedef struct {
+  HlMarkKind       kind;
+  HlPoint          at;          /* pixels */
+  double           radius;
+  HlPlotColour     colour;
+  guint            n_streams;
+  int             *streams;     /* those that coincide here */
+  char            *text;        /* "3, 4"; "2s" */
+  HlPlotLabelPlace label;
+} HlMark;
+
+typedef enum { HL_TEXT_PRESSURE, HL_TEXT_QUALITY } HlTextKind;
+typedef struct {
+  HlTextKind kind;
+  char      *text;
+  HlBox      box;
+} HlDiagramText;
+
+struct _HlStateDiagram {
+  double         width, height;
+  double         text_size, number_size;   /* pixels */
+  HlPlotAxis     s_axis, T_axis;
+  HlBox          frame;                    /* plot area in pixels */
+  const HlDome  *dome;
+  HlPlotSeries  *outline;                  /* the saturation line, left to right */
+  HlPlotLayer   *background;               /* quality lines, isobars */
+  HlPlotLayer   *paths;                    /* processes, and isentropic drops */
+  GArray        *marks;                    /* of HlMark */
+  GArray        *texts;                    /* of HlDiagramText */
+  GArray        *gaps;                     /* of HlBox: where the background leaves room for texts */
+};
+HlStateDiagram *hl_state_diagram_from_cycle (const HlCycle *cycle, double width, double height);
+/* Steps of the above, in this order. */
+void            hl_state_diagram_set_axes   (HlStateDiagram *diagram, const HlCycle *cycle);
+void            hl_state_diagram_add_dome   (HlStateDiagram *diagram);
+void            hl_state_diagram_add_paths  (HlStateDiagram *diagram, const HlCycle *cycle);
+void            hl_state_diagram_add_marks  (HlStateDiagram *diagram, const HlCycle *cycle);
+GArray         *hl_state_diagram_add_isobars   (HlStateDiagram *diagram, const HlCycle *cycle, HlPlotLabels *labels);
+void            hl_state_diagram_label_isobars (HlStateDiagram *diagram, const HlCycle *cycle, const GArray *lines, HlPlotLabels *labels);
+void            hl_state_diagram_add_texts  (HlStateDiagram *diagram, const HlCycle *cycle);
+/* Size of a text's box, good for every theme. */
+void            hl_state_diagram_text_size  (const char *text, double size, gboolean is_bold, double *width, double *height);
+/* Baseline of a text below the top of its box, as a share of the size. */
+#define HL_TEXT_BASELINE 0.80
+#define HL_TEXT_HEIGHT   1.04
+G_END_DECLS

@@ -1,0 +1,170 @@
+/* Places the texts of the diagram: states first, then pressures, isentropic end points, qualities.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "draw/state-diagram-private.h"
+#include "draw/text.h"
+#include <math.h>
+
+#define FAR_REACH 130.0      /* pixels that a state's number may stand away from its dot */
+
+void
+hl_state_diagram_text_size (const char *text, double size, gboolean is_bold, double *width, double *height)
+{
+  /* Window and paper have different families; the picture is laid out once for all. */
+  double light = hl_text_width (hl_theme (HL_THEME_LIGHT), text, size, is_bold), paper = hl_text_width (hl_theme (HL_THEME_PAPER), text, size, is_bold);
+  *width = MAX (light, paper);
+  *height = HL_TEXT_HEIGHT * size;
+}
+
+static void
+add_ink (const HlStateDiagram *diagram, HlPlotLabels *labels, const HlPlotSeries *series, double weight)
+{
+  for (guint i = 1; i < hl_plot_series_n (series); i++)
+    {
+      const HlPoint *a = hl_plot_series_point (series, i - 1), *b = hl_plot_series_point (series, i);
+      HlPoint from = { hl_plot_axis_to_pixel (&diagram->s_axis, a->x), hl_plot_axis_to_pixel (&diagram->T_axis, a->y) };
+      HlPoint to = { hl_plot_axis_to_pixel (&diagram->s_axis, b->x), hl_plot_axis_to_pixel (&diagram->T_axis, b->y) };
+      hl_plot_labels_add_line (labels, from, to, weight);
+    }
+}
+
+static HlBox
+box_of_mark (const HlMark *mark)
+{
+  double reach = mark->radius + 1.0;
+  return (HlBox) { mark->at.x - reach, mark->at.y - reach, 2.0 * reach, 2.0 * reach };
+}
+
+static HlPlotLabelWish
+wish_of (const HlStateDiagram *diagram, const HlMark *mark)
+{
+  HlPlotLabelWish wish = { .anchor = mark->at, .clearance = mark->radius + 2.2 };
+  gboolean is_state = mark->kind == HL_MARK_STATE;
+  hl_state_diagram_text_size (mark->text, is_state ? diagram->number_size : 0.95 * diagram->text_size, is_state, &wish.width, &wish.height);
+  wish.reach = is_state ? FAR_REACH : 22.0;
+  /* A number stands clear of the saturation line: outside of it, as far as the neighbours let it. */
+  if (mark->colour == HL_PLOT_WATER)
+    wish.towards = (HlPoint) { -0.6, -0.8 };
+  if (!is_state)
+    wish.towards = (HlPoint) { -0.8, 0.6 };
+  return wish;
+}
+
+/* How many other dots are near: crowded ones choose first. */
+static guint
+neighbours (const HlStateDiagram *diagram, guint n)
+{
+  const HlMark *mark = &g_array_index (diagram->marks, HlMark, n);
+  guint count = 0;
+  for (guint i = 0; i < diagram->marks->len; i++)
+    {
+      const HlMark *other = &g_array_index (diagram->marks, HlMark, i);
+      count += hypot (other->at.x - mark->at.x, other->at.y - mark->at.y) < 3.5 * diagram->number_size;
+    }
+  return count;
+}
+
+typedef struct { guint mark, neighbours; } Turn;
+
+static int
+compare_turns (gconstpointer a, gconstpointer b)
+{
+  const Turn *turn_a = a, *turn_b = b;
+  if (turn_a->neighbours != turn_b->neighbours)
+    return turn_a->neighbours > turn_b->neighbours ? -1 : 1;
+  return turn_a->mark < turn_b->mark ? -1 : turn_a->mark > turn_b->mark;
+}
+
+static void
+place_marks (HlStateDiagram *diagram, HlPlotLabels *labels, HlMarkKind kind)
+{
+  g_autoptr (GArray) turns = g_array_new (FALSE, FALSE, sizeof (Turn));
+  for (guint i = 0; i < diagram->marks->len; i++)
+    {
+      const HlMark *mark = &g_array_index (diagram->marks, HlMark, i);
+      Turn turn = { i, neighbours (diagram, i) };
+      if (mark->kind == kind && mark->text != NULL)
+        g_array_append_val (turns, turn);
+    }
+  g_array_sort (turns, compare_turns);
+  /* The second round lets early ones move now that the later ones are known. */
+  for (int round = 0; round < 2; round++)
+    for (guint i = 0; i < turns->len; i++)
+      {
+        guint n = g_array_index (turns, Turn, i).mark;
+        HlMark *mark = &g_array_index (diagram->marks, HlMark, n);
+        HlPlotLabelWish wish = wish_of (diagram, mark);
+        hl_plot_labels_remove (labels, &mark->label);
+        hl_plot_labels_place (labels, &wish, (int) n, &mark->label);
+      }
+}
+
+/* "x = 0.2", "0.4" ... centred on their lines, all at one temperature where that is possible. */
+static void
+place_qualities (HlStateDiagram *diagram, HlPlotLabels *labels)
+{
+  static const double qualities[] = { 0.2, 0.4, 0.6, 0.8 };
+  const HlDome *dome = diagram->dome;
+  double T_top = dome->T[dome->n - 1], T_low = MAX (dome->T[0], diagram->T_axis.low), best = G_MAXDOUBLE;
+  HlBox best_boxes[G_N_ELEMENTS (qualities)];
+  for (double level = 0.06; level < 0.7; level += 0.01)
+    {
+      double T = T_low + level * (T_top - T_low), cost = 3.0 * level;
+      HlBox boxes[G_N_ELEMENTS (qualities)];
+      guint n_free = 0;
+      for (guint i = 0; i < G_N_ELEMENTS (qualities); i++)
+        {
+          g_autofree char *text = g_strdup_printf (i == 0 ? "x = %.1f" : "%.1f", qualities[i]);
+          double x = hl_plot_axis_to_pixel (&diagram->s_axis, hl_dome_entropy (dome, T, qualities[i])), width, height;
+          hl_state_diagram_text_size (text, 0.9 * diagram->text_size, FALSE, &width, &height);
+          boxes[i] = (HlBox) { x - width / 2.0, hl_plot_axis_to_pixel (&diagram->T_axis, T) - height / 2.0, width, height };
+          n_free += hl_plot_labels_is_free (labels, &boxes[i]);
+          cost += hl_plot_labels_cost (labels, &boxes[i]);
+        }
+      if (n_free == G_N_ELEMENTS (qualities) && cost < best && boxes[3].x - boxes[0].x > 5.0 * boxes[0].width)
+        {
+          best = cost;
+          for (guint i = 0; i < n_free; i++)
+            best_boxes[i] = boxes[i];
+        }
+    }
+  for (guint i = 0; best < G_MAXDOUBLE && i < G_N_ELEMENTS (qualities); i++)
+    {
+      HlDiagramText text = { HL_TEXT_QUALITY, g_strdup_printf (i == 0 ? "x = %.1f" : "%.1f", qualities[i]), best_boxes[i] };
+      HlPlotLabelPlace place;
+      hl_plot_labels_take (labels, &best_boxes[i], &place);
+      g_array_append_val (diagram->texts, text);
+    }
+}
+
+static void
+add_gap (HlStateDiagram *diagram, const HlBox *box)
+{
+  HlBox gap = { box->x - 0.7, box->y - 0.7, box->width + 1.4, box->height + 1.4 };
+  g_array_append_val (diagram->gaps, gap);
+}
+
+void
+hl_state_diagram_add_texts (HlStateDiagram *diagram, const HlCycle *cycle)
+{
+  HlBox inside = { diagram->frame.x + 2.0, diagram->frame.y + 1.0, diagram->frame.width - 3.0, diagram->frame.height - 3.0 };
+  g_autoptr (HlPlotLabels) labels = hl_plot_labels_new (&inside);
+  g_autoptr (GArray) lines = NULL;
+  for (guint i = 0; i < hl_plot_layer_n (diagram->paths); i++)
+    add_ink (diagram, labels, hl_plot_layer_series (diagram->paths, i), 1.0);
+  add_ink (diagram, labels, diagram->outline, 0.7);
+  lines = hl_state_diagram_add_isobars (diagram, cycle, labels);
+  for (guint i = 0; i < diagram->marks->len; i++)
+    {
+      HlBox box = box_of_mark (&g_array_index (diagram->marks, HlMark, i));
+      hl_plot_labels_add_block (labels, &box, (int) i);
+    }
+  place_marks (diagram, labels, HL_MARK_STATE);
+  hl_state_diagram_label_isobars (diagram, cycle, lines, labels);
+  place_marks (diagram, labels, HL_MARK_IDEAL);
+  place_qualities (diagram, labels);
+  for (guint i = 0; i < diagram->marks->len; i++)
+    if (g_array_index (diagram->marks, HlMark, i).label.is_placed)
+      add_gap (diagram, &g_array_index (diagram->marks, HlMark, i).label.box);
+  for (guint i = 0; i < diagram->texts->len; i++)
+    add_gap (diagram, &g_array_index (diagram->texts, HlDiagramText, i).box);
+}
