@@ -17,7 +17,7 @@ G_BEGIN_DECLS
 #define HL_IF97_T_MAX      2273.15
 #define HL_IF97_P_MAX      100e6
 #define HL_IF97_P_MAX_5    50e6          /* highest pressure of region 5 [Pa] */
-#define HL_IF97_P_MIN_SAT  611.2126774   /* psat(273.15 K), Eq. 30 [Pa] */
+#define HL_IF97_P_MIN_SAT  611.2126774443  /* psat(273.15 K), Eq. 30 [Pa] */
 #define HL_IF97_P_SAT_13   16.52916425260448e6  /* psat(623.15 K), Eq. 30 [Pa] */
 
 /* h, s and the heat capacity with its slope along an isobar: what an

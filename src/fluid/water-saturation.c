@@ -14,14 +14,21 @@ subregion_of_saturated (double p, gboolean is_liquid)
   return p <= 20.5e6 ? 't' : p <= 21.04336732e6 ? 'r' : p <= 21.90096265e6 ? 'x' : 'z';
 }
 
+/* Within 2e-5 K of the critical point psat of Eq. 30 lies up to 3e-11 above
+ * what region 3's isotherm reaches; there the root search ends on the density
+ * where the isotherm is flat, at the critical point itself on that point. */
 static HlStatus
 saturated_region3 (double p, double T, gboolean is_liquid, HlState *state)
 {
-  double density = 1.0 / hl_if97_v_pT_3 (subregion_of_saturated (p, is_liquid), p, T);
-  density = is_liquid ? fmax (density, 1.001 * HL_IF97_D_CRITICAL) : fmin (density, 0.999 * HL_IF97_D_CRITICAL);
-  HlStatus status = hl_if97_region3_density_pT (p, T, density, &density);
-  if (status != HL_OK)
-    return status;
+  double density = HL_IF97_D_CRITICAL;
+  if (p < HL_IF97_P_CRITICAL)
+    {
+      density = 1.0 / hl_if97_v_pT_3 (subregion_of_saturated (p, is_liquid), p, T);
+      density = is_liquid ? fmax (density, 1.001 * HL_IF97_D_CRITICAL) : fmin (density, 0.999 * HL_IF97_D_CRITICAL);
+      HlStatus status = hl_if97_region3_density_pT (p, T, density, &density);
+      if (status != HL_OK)
+        return status;
+    }
   hl_if97_region3 (density, T, state);
   state->p = p;
   return HL_OK;
@@ -106,7 +113,8 @@ saturation_at (double p, double T, HlSaturation *saturation)
   return HL_OK;
 }
 
-/* The ends themselves are given whole, as saturated liquid and vapour. */
+/* The ends themselves are given whole, as saturated liquid and vapour; at the
+ * critical point they are one and there is nothing to mix. */
 static HlStatus
 state_at (double p, double T, double x, HlState *state)
 {
@@ -114,7 +122,7 @@ state_at (double p, double T, double x, HlState *state)
   HlStatus status = hl_water_saturated_ends (p, T, &liquid, &vapour);
   if (status != HL_OK)
     return status;
-  if (x > 0.0 && x < 1.0)
+  if (x > 0.0 && x < 1.0 && vapour.h > liquid.h)
     {
       HlSaturation saturation;
       double p_T;

@@ -82,11 +82,11 @@ const HlFluid hl_water_if97 = {
   .name = "Water and steam",
   .formulation = "IAPWS-IF97, R7-97(2012)",
   /* R7-97(2012): ranges of Figure 1 (0 < p), critical point of section 2,
-   * triple point of section 2 (611.657 Pa, 273.16 K); molar mass from R6-95(2018). */
+   * triple point of section 2 (611.657 Pa, 273.16 K); molar mass of section 2. */
   .limits = {
     .p_min = 0.0, .p_max = HL_IF97_P_MAX, .T_min = HL_IF97_T_MIN, .T_max = HL_IF97_T_MAX,
     .p_critical = HL_IF97_P_CRITICAL, .T_critical = HL_IF97_T_CRITICAL, .v_critical = 1.0 / HL_IF97_D_CRITICAL,
-    .p_triple = 611.657, .T_triple = 273.16, .molar_mass = 18.015268e-3,
+    .p_triple = 611.657, .T_triple = 273.16, .molar_mass = 18.015257e-3,
   },
   .data = NULL,
   .state_pT = hl_water_state_pT,
