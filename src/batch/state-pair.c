@@ -6,7 +6,7 @@
 #include "plant/i18n.h"
 
 /* The search walks from @low to @high in equal steps, so that no answer hides behind another one, and closes in on each
- * change of sign.  200 steps of ln p over the range of a fluid are about a tenth in p each. */
+ * change of sign and on each turn. */
 #define N_STEPS 200
 
 typedef HlStatus (*StateCall) (const HlFluid *fluid, double a, double b, HlState *state);
@@ -100,28 +100,106 @@ close_in (const Search *search, double low, double low_miss, double high, double
   return TRUE;
 }
 
+typedef struct { double place, miss; } Sample;
+
+static void
+append_between (const Search *search, const Sample *a, const Sample *b, GArray *states)
+{
+  HlState state;
+  if (close_in (search, a->place, a->miss, b->place, b->miss, &state))
+    g_array_append_val (states, state);
+}
+
+/* Three misses of one sign, the middle one nearest to naught: the curve turns there (water is densest near 4 °C), and
+ * may cross twice between two steps.  Golden section towards the turn, until it crosses or is found not to. */
+static void
+look_at_turn (const Search *search, const Sample *first, const Sample *last, GArray *states)
+{
+  const double golden = 0.38196601125010515;
+  double low = first->place, high = last->place, sign = first->miss > 0.0 ? 1.0 : -1.0;
+  Sample inner[2] = { { low + golden * (high - low), 0.0 }, { high - golden * (high - low), 0.0 } };
+  HlState state;
+  if (!miss_along (search, inner[0].place, &inner[0].miss, &state) || !miss_along (search, inner[1].place, &inner[1].miss, &state))
+    return;
+  for (int step = 0; step < 40; step++)
+    {
+      int nearer = sign * inner[0].miss <= sign * inner[1].miss ? 0 : 1;
+      if (sign * inner[nearer].miss <= 0.0)
+        {
+          append_between (search, first, &inner[nearer], states);
+          append_between (search, &inner[nearer], last, states);
+          return;
+        }
+      if (nearer == 0)
+        {
+          high = inner[1].place;
+          inner[1] = inner[0];
+          inner[0].place = low + golden * (high - low);
+        }
+      else
+        {
+          low = inner[0].place;
+          inner[0] = inner[1];
+          inner[1].place = high - golden * (high - low);
+        }
+      if (!miss_along (search, inner[nearer].place, &inner[nearer].miss, &state))
+        return;
+    }
+}
+
+static gboolean
+is_crossing (const Sample *a, const Sample *b)
+{
+  return a->miss != 0.0 && b->miss != 0.0 && (a->miss > 0.0) != (b->miss > 0.0);
+}
+
+static gboolean
+is_turning (const Sample *first, const Sample *middle, const Sample *last)
+{
+  return (first->miss > 0.0) == (middle->miss > 0.0) && (last->miss > 0.0) == (middle->miss > 0.0)
+         && fabs (middle->miss) <= fabs (first->miss) && fabs (middle->miss) <= fabs (last->miss);
+}
+
+/* Appends every state along one stretch of places that all have a state. */
+static void
+find_along_stretch (const Search *search, const Sample *samples, guint n, GArray *states)
+{
+  for (guint i = 0; i < n; i++)
+    {
+      HlState state;
+      if (samples[i].miss == 0.0 && state_along (search, samples[i].place, &state) == HL_OK)
+        g_array_append_val (states, state);
+      if (i + 1 < n && is_crossing (&samples[i], &samples[i + 1]))
+        append_between (search, &samples[i], &samples[i + 1], states);
+      if (i > 0 && i + 1 < n && is_turning (&samples[i - 1], &samples[i], &samples[i + 1]))
+        look_at_turn (search, &samples[i - 1], &samples[i + 1], states);
+    }
+  /* A turn in the first or last step has no sample beyond it. */
+  if (n >= 2 && !is_crossing (&samples[0], &samples[1]) && fabs (samples[0].miss) <= fabs (samples[1].miss))
+    look_at_turn (search, &samples[0], &samples[1], states);
+  if (n > 2 && !is_crossing (&samples[n - 2], &samples[n - 1]) && fabs (samples[n - 1].miss) <= fabs (samples[n - 2].miss))
+    look_at_turn (search, &samples[n - 2], &samples[n - 1], states);
+}
+
 /* Appends every state between the two places; a place that has no state ends one stretch and begins the next. */
 static void
 find_states (const Search *search, double low, double high, GArray *states)
 {
-  double last_place = NAN, last_miss = NAN;
+  Sample samples[N_STEPS + 1];
+  guint n = 0;
   for (int i = 0; i <= N_STEPS; i++)
     {
-      double place = i == N_STEPS ? high : low + (high - low) * i / N_STEPS, miss;
       HlState state;
-      if (!miss_along (search, place, &miss, &state))
-        last_miss = NAN;
+      samples[n].place = i == N_STEPS ? high : low + (high - low) * i / N_STEPS;
+      if (miss_along (search, samples[n].place, &samples[n].miss, &state))
+        n++;
       else
         {
-          if (miss == 0.0)
-            g_array_append_val (states, state);
-          else if (isfinite (last_miss) && last_miss != 0.0 && (miss > 0.0) != (last_miss > 0.0)
-                   && close_in (search, last_place, last_miss, place, miss, &state))
-            g_array_append_val (states, state);
-          last_place = place;
-          last_miss = miss;
+          find_along_stretch (search, samples, n, states);
+          n = 0;
         }
     }
+  find_along_stretch (search, samples, n, states);
 }
 
 /* T and one of h, s, rho: the wet region first, then both sides of it. */
