@@ -10,4 +10,6 @@ G_BEGIN_DECLS
 void hl_draw_symbol      (cairo_t *cr, const HlTheme *theme, const HlComponent *component);
 /* A kind with its usual options, scaled into a box of @size pixels around the origin: for shelf and nameplate. */
 void hl_draw_kind        (cairo_t *cr, const HlTheme *theme, const HlKind *kind, double size);
+/* Pixels from a port inwards to the symbol's outline: a line is drawn on that far beneath the symbol. */
+double hl_symbol_lead    (const HlComponent *component, guint port);
 G_END_DECLS

@@ -1,0 +1,196 @@
+/* Pictures to SVG, PDF and PNG, and texts to files; the same bytes for the same input.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "draw/export.h"
+#include <cairo-pdf.h>
+#include <cairo-svg.h>
+#include <math.h>
+#include <stdio.h>
+#include <string.h>
+#include "draw/sheet.h"
+#include "draw/state-diagram.h"
+#include "draw/text.h"
+#include "plant/i18n.h"
+
+#define DIAGRAM_WIDTH  960.0
+#define DIAGRAM_HEIGHT 600.0
+#define POINTS_A_PIXEL 0.75       /* 72 points and 96 pixels an inch */
+#define MOST_PIXELS    30000.0    /* what cairo's image surfaces hold */
+
+static const struct { const char *ending; HlFormat format; } endings[] = {
+  { ".svg", HL_FORMAT_SVG }, { ".pdf", HL_FORMAT_PDF }, { ".png", HL_FORMAT_PNG },
+};
+
+gboolean
+hl_format_from_path (const char *path, HlFormat *format, GError **error)
+{
+  g_autofree char *lower = NULL;
+  g_return_val_if_fail (path != NULL && format != NULL, FALSE);
+  lower = g_ascii_strdown (path, -1);
+  for (guint i = 0; i < G_N_ELEMENTS (endings); i++)
+    if (g_str_has_suffix (lower, endings[i].ending))
+      {
+        *format = endings[i].format;
+        return TRUE;
+      }
+  g_set_error (error, G_IO_ERROR, G_IO_ERROR_INVALID_FILENAME,
+               _("%s: pictures are written as SVG, PDF or PNG; let the file's name end in .svg, .pdf or .png"), path);
+  return FALSE;
+}
+
+static void
+draw_state_diagram (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, double width, double height)
+{
+  g_autoptr (HlStateDiagram) diagram = hl_state_diagram_new (solution, hl_plant_units (hl_solution_plant (solution)), width, height);
+  hl_state_diagram_draw (diagram, cr, theme, !hl_solution_is_solved (solution), -1);
+}
+
+static void
+draw_picture (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, HlPicture picture, double width, double height)
+{
+  hl_set_colour (cr, &theme->ground);
+  cairo_paint (cr);
+  if (picture == HL_PICTURE_DRAWING)
+    hl_draw_sheet (cr, theme, hl_solution_plant (solution), solution, width, height);
+  else
+    draw_state_diagram (cr, theme, solution, width, height);
+}
+
+static cairo_status_t
+append_bytes (void *bytes, const unsigned char *data, unsigned int length)
+{
+  g_byte_array_append (bytes, data, length);
+  return CAIRO_STATUS_SUCCESS;
+}
+
+static cairo_surface_t *
+open_surface (HlFormat format, const char *title, double width, double height, double scale, GByteArray *bytes)
+{
+  cairo_surface_t *surface;
+  switch (format)
+    {
+    case HL_FORMAT_SVG:
+      surface = cairo_svg_surface_create_for_stream (append_bytes, bytes, width, height);
+      cairo_svg_surface_set_document_unit (surface, CAIRO_SVG_UNIT_PX);
+      return surface;
+    case HL_FORMAT_PDF:
+      surface = cairo_pdf_surface_create_for_stream (append_bytes, bytes, width * POINTS_A_PIXEL, height * POINTS_A_PIXEL);
+      cairo_pdf_surface_set_metadata (surface, CAIRO_PDF_METADATA_TITLE, title != NULL ? title : "");
+      cairo_pdf_surface_set_metadata (surface, CAIRO_PDF_METADATA_CREATOR, "Heatloom " HL_VERSION);
+      /* A fixed date: the same plant gives the same file on any day. */
+      cairo_pdf_surface_set_metadata (surface, CAIRO_PDF_METADATA_CREATE_DATE, "2024-01-01T00:00:00Z");
+      return surface;
+    case HL_FORMAT_PNG:
+    default:
+      return cairo_image_surface_create (CAIRO_FORMAT_RGB24, (int) ceil (width * scale), (int) ceil (height * scale));
+    }
+}
+
+static gboolean
+check_size (double width, double height, double scale, HlFormat format, GError **error)
+{
+  double factor = format == HL_FORMAT_PNG ? scale : 1.0;
+  if (width > 0.0 && height > 0.0 && factor > 0.0 && width * factor <= MOST_PIXELS && height * factor <= MOST_PIXELS)
+    return TRUE;
+  g_set_error (error, G_IO_ERROR, G_IO_ERROR_INVALID_ARGUMENT,
+               _("a picture of %.0f x %.0f pixels cannot be made; width and height lie between 1 and %.0f"),
+               width * factor, height * factor, MOST_PIXELS);
+  return FALSE;
+}
+
+/* Closes the surface; FALSE with the reason where cairo could not draw. */
+static gboolean
+finish (cairo_t *cr, cairo_surface_t *surface, HlFormat format, GByteArray *bytes, GError **error)
+{
+  cairo_status_t status = cairo_status (cr);
+  if (status == CAIRO_STATUS_SUCCESS)
+    {
+      if (format == HL_FORMAT_PNG)
+        status = cairo_surface_write_to_png_stream (surface, append_bytes, bytes);
+      else
+        {
+          cairo_show_page (cr);
+          cairo_surface_finish (surface);
+          status = cairo_surface_status (surface);
+        }
+    }
+  if (status == CAIRO_STATUS_SUCCESS)
+    return TRUE;
+  g_set_error (error, G_IO_ERROR, G_IO_ERROR_FAILED, _("the picture could not be made: %s"), cairo_status_to_string (status));
+  return FALSE;
+}
+
+GBytes *
+hl_export_picture (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme_id, double width, double height, double scale, GError **error)
+{
+  HlTheme theme;
+  g_autoptr (GByteArray) bytes = g_byte_array_new ();
+  const HlPlant *plant;
+  cairo_surface_t *surface;
+  cairo_t *cr;
+  gboolean is_done;
+  double usual_width = DIAGRAM_WIDTH, usual_height = DIAGRAM_HEIGHT;
+  g_return_val_if_fail (solution != NULL, NULL);
+  plant = hl_solution_plant (solution);
+  theme = *hl_theme (theme_id);
+  theme.font = HL_EXPORT_FONT;    /* the machine's own fonts would change the bytes */
+  if (picture == HL_PICTURE_DRAWING && !(width > 0.0 && height > 0.0))
+    hl_sheet_usual_size (&theme, plant, solution, &usual_width, &usual_height);
+  width = width > 0.0 ? width : usual_width;
+  height = height > 0.0 ? height : usual_height;
+  scale = scale > 0.0 ? scale : 1.0;
+  if (!check_size (width, height, scale, format, error))
+    return NULL;
+  surface = open_surface (format, hl_plant_title (plant), width, height, scale, bytes);
+  cr = cairo_create (surface);
+  if (format == HL_FORMAT_PDF)
+    cairo_scale (cr, POINTS_A_PIXEL, POINTS_A_PIXEL);
+  else if (format == HL_FORMAT_PNG)
+    cairo_scale (cr, scale, scale);
+  draw_picture (cr, &theme, solution, picture, width, height);
+  is_done = finish (cr, surface, format, bytes, error);
+  cairo_destroy (cr);
+  cairo_surface_destroy (surface);
+  return is_done ? g_byte_array_free_to_bytes (g_steal_pointer (&bytes)) : NULL;
+}
+
+static gboolean
+write_standard_output (const void *data, gsize length, GError **error)
+{
+  if (fwrite (data, 1, length, stdout) == length && fflush (stdout) == 0)
+    return TRUE;
+  g_set_error (error, G_IO_ERROR, g_io_error_from_errno (errno), _("standard output could not be written: %s"), g_strerror (errno));
+  return FALSE;
+}
+
+static gboolean
+write_file (const char *path, const void *data, gsize length, GError **error)
+{
+  g_autoptr (GError) failure = NULL;
+  if (g_str_equal (path, "-"))
+    return write_standard_output (data, length, error);
+  if (g_file_set_contents_full (path, data, (gssize) length, G_FILE_SET_CONTENTS_CONSISTENT | G_FILE_SET_CONTENTS_DURABLE, 0666, &failure))
+    return TRUE;
+  g_set_error (error, failure->domain, failure->code,
+               _("%s cannot be written: %s; choose a folder that exists and that you may write to"), path, failure->message);
+  return FALSE;
+}
+
+gboolean
+hl_export_picture_file (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, const char *path, GError **error)
+{
+  double scale = format == HL_FORMAT_PNG ? 2.0 : 1.0;    /* sharp on screens and slides */
+  g_autoptr (GBytes) bytes = hl_export_picture (solution, picture, format, theme, 0.0, 0.0, scale, error);
+  gsize length;
+  const void *data;
+  if (bytes == NULL)
+    return FALSE;
+  data = g_bytes_get_data (bytes, &length);
+  return write_file (path, data, length, error);
+}
+
+gboolean
+hl_export_text_file (const char *text, const char *path, GError **error)
+{
+  g_return_val_if_fail (text != NULL && path != NULL, FALSE);
+  return write_file (path, text, strlen (text), error);
+}

@@ -1,0 +1,247 @@
+/* Finds room for titles and stream labels: every candidate gets a price, the cheapest wins.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "draw/layout-private.h"
+#include <math.h>
+
+/* Prices.  Covering a symbol or other words is what must not happen, covering a foreign line what should not. */
+#define PRICE_SYMBOL   2000.0    /* a grid point of a symbol */
+#define PRICE_WORDS    40.0      /* a pixel squared of other words */
+#define PRICE_LINE     90.0      /* a grid point of a foreign line */
+#define PRICE_OWN_LINE 14.0      /* a grid point of the own line that is not simply passed through */
+#define KEPT           25.0      /* what a label gains by staying where it was */
+#define SYMBOL_MARGIN  4.0
+#define LINE_MARGIN    4.0
+#define WORDS_MARGIN   3.0
+#define GAP            6.0       /* between a line and a label beside it, a symbol and its title */
+
+static HlFreeSpace *
+chart (const HlLayout *layout)
+{
+  HlFreeSpace *space = hl_free_space_new (layout->left, layout->top, layout->right, layout->bottom);
+  for (guint i = 0; i < layout->n_components; i++)
+    {
+      const HlComponent *c = hl_plant_component (layout->plant, i);
+      int w, h;
+      hl_component_half_size (c, &w, &h);
+      hl_free_space_add_box (space, c->x - w, c->y - h, c->x + w, c->y + h);
+    }
+  for (guint i = 0; i < layout->n_streams; i++)
+    hl_free_space_add_line (space, (HlGridPoint *) (gpointer) layout->ways[i]->data, layout->ways[i]->len);
+  for (guint i = 0; i < layout->shafts->len; i++)
+    {
+      const HlShaftLink *link = &g_array_index (layout->shafts, HlShaftLink, i);
+      hl_free_space_add_line (space, link->grid, link->n_points);
+    }
+  hl_free_space_close (space);
+  return space;
+}
+
+/* Titles. */
+typedef struct { int x, y; double price; } TitleSpot;   /* side of the symbol: -1, 0, 1 outside; -2, 2 flush with its edge or beside its axis */
+
+/* x = 1 right, -1 left of the box: y -1 top, 0 middle, 1 bottom.  x = 0 above or below by y: centred;
+ * x = 2, -2: above or below, beginning or ending at the axis, clear of a line that leaves there. */
+static const TitleSpot title_spots[] = {
+  { 1, 0, 0 }, { 1, -1, 2 }, { 1, 1, 3 }, { 0, -1, 4 }, { 0, 1, 4 }, { -1, 0, 6 }, { -1, -1, 7 }, { -1, 1, 8 },
+  { 2, -1, 5 }, { 2, 1, 6 }, { -2, -1, 8 }, { -2, 1, 9 },
+};
+
+static HlBox
+title_box (const HlComponent *component, const TitleSpot *spot, const HlBox *title, int *align)
+{
+  int w, h;
+  double x = component->x * HL_UNIT, y = component->y * HL_UNIT, half_width, half_height;
+  HlBox box = *title;
+  hl_component_half_size (component, &w, &h);
+  half_width = w * HL_UNIT;
+  half_height = h * HL_UNIT;
+  if (spot->x == 1 || spot->x == -1)
+    {
+      *align = -spot->x;
+      box.x = spot->x > 0 ? x + half_width + GAP : x - half_width - GAP - box.width;
+      box.y = spot->y == 0 ? y - box.height / 2.0 : spot->y < 0 ? y - half_height - 2.0 : y + half_height + 2.0 - box.height;
+      return box;
+    }
+  *align = spot->x == 0 ? 0 : spot->x > 0 ? -1 : 1;
+  box.x = spot->x == 0 ? x - box.width / 2.0 : spot->x > 0 ? x + GAP : x - GAP - box.width;
+  box.y = spot->y < 0 ? y - half_height - GAP + 1.0 - box.height : y + half_height + GAP - 1.0;
+  return box;
+}
+
+static void
+place_title (HlLayout *layout, HlFreeSpace *space, guint n)
+{
+  const HlComponent *component = hl_plant_component (layout->plant, n);
+  HlComponentPlace *place = &layout->components[n];
+  double best_price = HUGE_VAL;
+  HlBox best = place->title;
+  for (guint i = 0; i < G_N_ELEMENTS (title_spots); i++)
+    {
+      int align;
+      HlBox box = title_box (component, &title_spots[i], &place->title, &align);
+      double price = title_spots[i].price
+        + PRICE_SYMBOL * hl_free_space_boxes (space, &box, SYMBOL_MARGIN)
+        + PRICE_LINE * hl_free_space_lines (space, &box, LINE_MARGIN)
+        + PRICE_WORDS * hl_free_space_taken (space, &box, WORDS_MARGIN);
+      if (price < best_price)
+        {
+          best_price = price;
+          best = box;
+          place->title_align = align;
+        }
+    }
+  place->title = best;
+  hl_free_space_take (space, (int) n, &best);
+}
+
+/* Labels. */
+typedef struct {
+  HlFreeSpace       *space;
+  const HlGridPoint *way;
+  guint              n_way;
+  HlBox              size;
+  HlBox              best;
+  double             best_price;
+  gboolean           has_kept;
+  HlBox              kept;         /* its place before */
+} LabelSearch;
+
+/* @is_on: the label interrupts its line, which then runs through it once across. */
+static void
+try_label (LabelSearch *search, double x, double y, double price, gboolean is_on, gboolean is_across)
+{
+  HlBox box = { x, y, search->size.width, search->size.height };
+  int own, others;
+  if (price >= search->best_price)
+    return;
+  others = hl_free_space_boxes (search->space, &box, SYMBOL_MARGIN);
+  price += PRICE_SYMBOL * others;
+  own = hl_count_line_points (search->way, search->n_way, &box, LINE_MARGIN);
+  others = hl_free_space_lines (search->space, &box, LINE_MARGIN) - own;
+  if (is_on)    /* what the label must cover of its own line is no fault */
+    own -= (int) floor (((is_across ? box.width : box.height) + 2.0 * LINE_MARGIN) / HL_UNIT);
+  price += PRICE_LINE * others + PRICE_OWN_LINE * MAX (own, 0);
+  if (price >= search->best_price)
+    return;
+  price += PRICE_WORDS * hl_free_space_taken (search->space, &box, WORDS_MARGIN);
+  if (search->has_kept && fabs (x - search->kept.x) < 5.0 && fabs (y - search->kept.y) < 5.0)
+    price -= KEPT;
+  if (price < search->best_price)
+    {
+      search->best_price = price;
+      search->best = box;
+    }
+}
+
+/* Candidates along one segment: on it, and on both sides. */
+static void
+try_segment (LabelSearch *search, guint n)
+{
+  const HlGridPoint *a = &search->way[n], *b = &search->way[n + 1];
+  gboolean is_across = a->y == b->y;
+  double width = search->size.width, height = search->size.height;
+  double x = (a->x + b->x) / 2.0 * HL_UNIT, y = (a->y + b->y) / 2.0 * HL_UNIT;
+  double length = (is_across ? ABS (b->x - a->x) : ABS (b->y - a->y)) * HL_UNIT;
+  double along = is_across ? width : height;
+  double base = 40.0 - 0.12 * MIN (length, 300.0);
+  int most = (int) (MAX (length - along, 0.0) / 2.0 / HL_UNIT) + 3;
+  double room_on = (length - along) / 2.0 - 14.0;    /* a piece of line must show at both ends */
+  for (int k = -most; k <= most; k++)
+    {
+      double off = k * HL_UNIT, cx = is_across ? x + off : x, cy = is_across ? y : y + off;
+      double price = base + 0.09 * fabs (off);
+      if (fabs (off) <= room_on)
+        try_label (search, cx - width / 2.0, cy - height / 2.0, price, TRUE, is_across);
+      if (fabs (off) > length / 2.0 + along / 4.0)
+        continue;
+      price += 14.0;
+      if (is_across)
+        {
+          try_label (search, cx - width / 2.0, cy - GAP - height, price, FALSE, TRUE);
+          try_label (search, cx - width / 2.0, cy + GAP, price + 2.0, FALSE, TRUE);
+        }
+      else
+        {
+          try_label (search, cx + GAP + 1.0, cy - height / 2.0, price, FALSE, FALSE);
+          try_label (search, cx - GAP - 1.0 - width, cy - height / 2.0, price + 2.0, FALSE, FALSE);
+        }
+    }
+}
+
+static void
+place_label (HlLayout *layout, HlFreeSpace *space, guint n, const HlStreamPlace *before)
+{
+  const HlStream *stream = hl_plant_stream (layout->plant, n);
+  HlStreamPlace *place = &layout->streams[n];
+  int id = (int) (layout->n_components + n);
+  LabelSearch search = { .space = space, .size = place->label, .best = place->label, .best_price = HUGE_VAL };
+  search.way = (HlGridPoint *) (gpointer) layout->ways[n]->data;
+  search.n_way = layout->ways[n]->len;
+  if (before != NULL && before->label.width > 0.0)
+    {
+      search.has_kept = TRUE;
+      search.kept = before->label;
+    }
+  if (stream->has_label_place)
+    {
+      search.best.x = stream->label_x * HL_UNIT - place->label.width / 2.0;
+      search.best.y = stream->label_y * HL_UNIT - place->label.height / 2.0;
+    }
+  else
+    for (guint i = 0; i + 1 < search.n_way; i++)
+      try_segment (&search, i);
+  place->label = search.best;
+  hl_free_space_take (space, id, &place->label);
+}
+
+typedef struct { guint stream; int freedom; } Turn;
+
+static int
+compare_turns (gconstpointer a, gconstpointer b)
+{
+  const Turn *x = a, *y = b;
+  return x->freedom != y->freedom ? (x->freedom > y->freedom) - (x->freedom < y->freedom) : (x->stream > y->stream) - (x->stream < y->stream);
+}
+
+/* Labels with the least choice come first; hand-set ones before all. */
+static GArray *
+order_labels (const HlLayout *layout)
+{
+  GArray *turns = g_array_new (FALSE, FALSE, sizeof (Turn));
+  for (guint i = 0; i < layout->n_streams; i++)
+    {
+      Turn turn = { i, 0 };
+      if (layout->streams[i].label.width <= 0.0)
+        continue;
+      for (guint k = 0; k + 1 < layout->ways[i]->len; k++)
+        {
+          const HlGridPoint *a = &g_array_index (layout->ways[i], HlGridPoint, k);
+          turn.freedom = MAX (turn.freedom, MAX (ABS (a[1].x - a->x), ABS (a[1].y - a->y)));
+        }
+      if (hl_plant_stream (layout->plant, i)->has_label_place)
+        turn.freedom = -1;
+      g_array_append_val (turns, turn);
+    }
+  g_array_sort (turns, compare_turns);
+  return turns;
+}
+
+void
+hl_layout_place_words (HlLayout *layout, const HlLayout *previous)
+{
+  g_autoptr (HlFreeSpace) space = chart (layout);
+  g_autoptr (GArray) turns = order_labels (layout);
+  for (guint i = 0; i < layout->n_components; i++)
+    place_title (layout, space, i);
+  for (int round = 0; round < 2; round++)
+    for (guint i = 0; i < turns->len; i++)
+      {
+        guint n = g_array_index (turns, Turn, i).stream;
+        int before = -1;
+        if (previous != NULL)
+          before = hl_plant_stream_index (previous->plant, hl_plant_stream (layout->plant, n)->id);
+        if (round > 0)
+          hl_free_space_give_back (space, (int) (layout->n_components + n), &layout->streams[n].label);
+        place_label (layout, space, n, before >= 0 ? &previous->streams[before] : NULL);
+      }
+}

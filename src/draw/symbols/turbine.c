@@ -1,0 +1,29 @@
+/* Turbine section: a trapezium that widens with the flow, extractions at its long side.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "draw/symbols/symbol-private.h"
+
+#define NARROW 1.0
+#define WIDE 3.0
+
+static void
+draw (const HlPen *pen)
+{
+  double w = pen->half_width / U;
+  const double outline[][2] = { { -w, -NARROW }, { w, -WIDE }, { w, WIDE }, { -w, NARROW } };
+  hl_pen_path (pen, outline, G_N_ELEMENTS (outline));
+  cairo_close_path (pen->cr);
+  hl_pen_body (pen);
+}
+
+/* Extractions leave below the box; the slanted side lies above their ports. */
+static double
+lead (const HlComponent *component, double x, double y, HlSide side, double half_width)
+{
+  double edge = (NARROW + (WIDE - NARROW) * (x + half_width) / (2.0 * half_width)) * U;
+  (void) component;
+  if (side == HL_SIDE_DOWN)
+    return y - edge;
+  return side == HL_SIDE_UP ? -y - edge : 0.0;
+}
+
+const HlSymbol hl_symbol_turbine = { "turbine", draw, lead };
