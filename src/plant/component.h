@@ -46,7 +46,8 @@ HL_PUBLIC HlComponent *hl_component_copy  (const HlComponent *component);       
 HL_PUBLIC HlComponent *hl_component_ref   (HlComponent *component);
 HL_PUBLIC void         hl_component_unref (HlComponent *component);
 HL_PUBLIC void         hl_component_set_name   (HlComponent *component, const char *name);
-HL_PUBLIC void         hl_component_set_option (HlComponent *component, const char *key, int value);  /* clamps; drops values of vanished keys */
+HL_PUBLIC void         hl_component_set_option (HlComponent *component, const char *key, int value);  /* clamps; drops values of vanished keys; keys
+                                                                     that appear get their assumed default, unless the component has no value at all */
 HL_PUBLIC void         hl_component_set_value  (HlComponent *component, const char *key, const HlValue *value);  /* NULL: let it be found */
 HL_PUBLIC int          hl_component_option     (const HlComponent *component, const char *key);       /* 0 when it has none */
 

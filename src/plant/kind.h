@@ -17,6 +17,10 @@ typedef struct {
   const char *const *choice_names;     /* N_() words for the screen */
 } HlOptionKind;
 
+/* What the x of a port counts from; y always counts from the centre. */
+typedef enum { HL_ANCHOR_CENTRE, HL_ANCHOR_LEFT_EDGE, HL_ANCHOR_RIGHT_EDGE } HlAnchor;
+typedef struct { int x, y; HlSide side; } HlPortPlace;
+
 typedef struct {
   const char      *key;                /* "steam"; "extraction#" when repeated */
   const char      *name;               /* N_("steam outlet") */
@@ -28,12 +32,16 @@ typedef struct {
   const char      *repeat;             /* key of the count option, or NULL */
   const char      *when_option;        /* the port exists only when this choice option ... */
   int              when_choice;        /* ... has this value; when_option NULL: always */
+  HlAnchor         anchor;             /* edges move with the width, see widen_option */
+  int              step_x;             /* of a repeated port: each number lies this much further right */
+  const HlPortPlace *places;           /* of a repeated port: place of each number from 1, instead of x, y, side; or NULL */
 } HlPortKind;
 
 typedef enum {
   HL_QUANTITY_ASSUMED = 1 << 0,        /* a new component carries the default as assumed */
   HL_QUANTITY_USUAL   = 1 << 1,        /* the engineer usually gives it: ranks mends, comes back when a value is let go */
   HL_QUANTITY_RESULT  = 1 << 2,        /* shown as a result; may still be given */
+  HL_QUANTITY_PERCENT = 1 << 3,        /* a ratio that people read in percent: see hl_quantity_format() */
 } HlQuantityFlags;
 
 typedef struct {
@@ -53,7 +61,11 @@ typedef struct {
   int              repeat_extra;       /* repeated count + this many times (groups = extractions + 1) */
   const char      *when_option;        /* exists only when this choice option ... */
   int              when_choice;        /* ... has this value */
+  const double    *numbered_defaults;  /* of a repeated quantity: defaults of numbers 1 to most [SI], instead of default_value; or NULL */
 } HlQuantityKind;
+
+/* Lower limit of a quantity that may be zero but not negative: the limit itself is excluded. */
+#define HL_FROM_ZERO (-G_MINDOUBLE)
 
 typedef enum {
   HL_SHAFT_NONE,
@@ -82,6 +94,14 @@ HL_PUBLIC guint         hl_kind_count  (void);
 HL_PUBLIC const HlKind *hl_kind_nth    (guint n);               /* in shelf order */
 HL_PUBLIC const HlKind *hl_kind_lookup (const char *id);        /* NULL when unknown */
 HL_PUBLIC int           hl_kind_find_option (const HlKind *kind, const char *key);   /* index or -1 */
+
+/* Default of a quantity [SI]; @number counts repeated quantities from 1; NaN: none. */
+HL_PUBLIC double        hl_quantity_default (const HlQuantityKind *quantity, int number);
+/* A value with its unit, as people read this quantity: like hl_units_format(), but ratios marked HL_QUANTITY_PERCENT
+ * (efficiencies of the plant, pressure losses, moisture) as "38.21 %", the other ratios as "0.830".  g_free(). */
+HL_PUBLIC char         *hl_quantity_format  (const HlQuantityKind *quantity, double si, HlUnitSet set);
+/* The same with every digit, for entries: parses back to the same value in any unit set. */
+HL_PUBLIC char         *hl_quantity_format_exact (const HlQuantityKind *quantity, double si, HlUnitSet set);
 
 /* Quantities of the plant as a whole ("net_power" ...), and of a stream ("m", "p", "T", "h", "s", "x", "v"). */
 HL_PUBLIC const HlQuantityKind *hl_plant_quantities  (guint *n);

@@ -52,15 +52,19 @@ HL_PUBLIC guint              hl_plant_n_assumed     (const HlPlant *plant);
 /* The same state is known at a port and at its stream: the value there whichever of the three addresses carries it. */
 HL_PUBLIC const HlValue     *hl_plant_state_value   (const HlPlant *plant, const HlStream *stream, const char *key, HlAddress *where);
 
+/* The value that fixes a quantity, at this address or at another name of the same state (port or stream); hl_plant_value()
+ * looks at exactly this address.  @where: (out) (optional): the address that carries it. */
+HL_PUBLIC const HlValue     *hl_plant_value_wherever (const HlPlant *plant, const HlAddress *address, HlAddress *where);
+
 /* Editing: each returns a new plant (transfer full) that shares what it did not change. */
 HL_PUBLIC HlPlant *hl_plant_with_title     (const HlPlant *plant, const char *title);
 HL_PUBLIC HlPlant *hl_plant_with_units     (const HlPlant *plant, HlUnitSet units);
 HL_PUBLIC HlPlant *hl_plant_with_site      (const HlPlant *plant, const HlSite *site);
 HL_PUBLIC HlPlant *hl_plant_with_component (const HlPlant *plant, HlComponent *component);  /* (transfer full) adds, or replaces the one of that id; streams on vanished ports go */
-HL_PUBLIC HlPlant *hl_plant_with_stream    (const HlPlant *plant, HlStream *stream);        /* (transfer full) adds or replaces */
+HL_PUBLIC HlPlant *hl_plant_with_stream    (const HlPlant *plant, HlStream *stream);        /* (transfer full) adds or replaces; another line at one of its ports goes */
 HL_PUBLIC HlPlant *hl_plant_with_shaft     (const HlPlant *plant, HlShaft *shaft);          /* (transfer full); a component is on one shaft at most: joining takes it off its former one */
-HL_PUBLIC HlPlant *hl_plant_without        (const HlPlant *plant, const char *const *ids);  /* NULL-terminated ids of components, streams, shafts; attached streams, ties to them go too */
-/* NULL value: let it be found.  Checks the hard limits and that a tie's source exists and is not the quantity itself. */
+HL_PUBLIC HlPlant *hl_plant_without        (const HlPlant *plant, const char *const *ids);  /* NULL-terminated ids of components, streams, shafts; attached streams, ties to them, shafts left with less than two go too */
+/* NULL value: let it be found.  A state has one value: another name of the same state (port or stream) loses its own.  Checks the hard limits and that a tie's source exists and is not the quantity itself. */
 HL_PUBLIC HlPlant *hl_plant_with_value     (const HlPlant *plant, const HlAddress *address, const HlValue *value, GError **error);
 
 HL_PUBLIC char    *hl_plant_free_id        (const HlPlant *plant, const char *letter);      /* "T2"; "" gives the next stream number "7"; g_free() */

@@ -32,6 +32,7 @@ typedef enum {
   HL_UNITS_ERROR_UNKNOWN_UNIT,    /* not a unit we know */
   HL_UNITS_ERROR_WRONG_DIMENSION, /* a unit, but of another dimension */
   HL_UNITS_ERROR_NOT_FINITE,
+  HL_UNITS_ERROR_IMPOSSIBLE,      /* below absolute zero or below vacuum */
 } HlUnitsError;
 
 /* Text with or without a unit ("80 bar", "7 barg", "480 °C", "900 F", "35 t/h", "0.92", "83 %", decimal comma
@@ -40,14 +41,22 @@ typedef enum {
 HL_PUBLIC gboolean hl_units_parse (const char *text, HlDimension dimension, HlUnitSet set, double site_pressure,
                                    double *si, GError **error);
 
-HL_PUBLIC const char *hl_units_label      (HlDimension dimension, HlUnitSet set);             /* "bar", "°C", "" */
+/* The unit that a bare number has, and that of the next three: "bar", "°C", "". */
+HL_PUBLIC const char *hl_units_label      (HlDimension dimension, HlUnitSet set);
 HL_PUBLIC double      hl_units_to_display (double si, HlDimension dimension, HlUnitSet set);
 HL_PUBLIC double      hl_units_from_display (double shown, HlDimension dimension, HlUnitSet set);
-/* Number alone, and number with unit, rounded as the trade rounds; "–" for NaN.  Free with g_free(). */
+/* Number alone (its unit is hl_units_label()), and number with unit, rounded as the trade rounds; "–" for NaN.
+ * With the unit, a small power is shown in the smaller unit: "40.00 kW", "250 W".  A ratio is "0.830": what is read
+ * in percent goes through hl_quantity_format().  Free with g_free(). */
 HL_PUBLIC char       *hl_units_format_number (double si, HlDimension dimension, HlUnitSet set);
 HL_PUBLIC char       *hl_units_format        (double si, HlDimension dimension, HlUnitSet set);
-/* The shortest text that parses back to the same value: for entries. */
+/* The shortest text with its unit that parses back to the same value, for entries: "80 bar", "40 kW", "0.83". */
 HL_PUBLIC char       *hl_units_format_exact  (double si, HlDimension dimension, HlUnitSet set);
+HL_PUBLIC char       *hl_units_format_percent (double ratio);              /* "2.5 %", every digit */
+/* The unit that hl_units_format() and hl_units_format_exact() choose for this value: "kW" for a small power. */
+HL_PUBLIC const char *hl_units_label_of      (double si, HlDimension dimension, HlUnitSet set);
+/* Shortest decimal text of a number that reads back to the same number, as in files: "0.1", "1e-05". */
+HL_PUBLIC char       *hl_number_to_text      (double number);
 
 HL_PUBLIC const char *hl_dimension_name    (HlDimension dimension);      /* translated: "pressure" */
 HL_PUBLIC const char *hl_dimension_si_unit (HlDimension dimension);      /* "Pa", "K", "kg/s" ..., "" for ratio */

@@ -1,0 +1,45 @@
+/* The list of kinds in shelf order, and look-ups in it.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "plant/kinds/kinds.h"
+
+static const HlKind *const kinds[] = {
+  &hl_kind_boiler, &hl_kind_heat_input,
+  &hl_kind_turbine, &hl_kind_generator,
+  &hl_kind_condenser,
+  &hl_kind_pump, &hl_kind_open_heater, &hl_kind_closed_heater, &hl_kind_make_up,
+  &hl_kind_pipe, &hl_kind_valve, &hl_kind_splitter, &hl_kind_mixer, &hl_kind_boundary,
+  &hl_kind_steam_user,
+};
+
+guint
+hl_kind_count (void)
+{
+  return G_N_ELEMENTS (kinds);
+}
+
+const HlKind *
+hl_kind_nth (guint n)
+{
+  g_return_val_if_fail (n < G_N_ELEMENTS (kinds), NULL);
+  return kinds[n];
+}
+
+const HlKind *
+hl_kind_lookup (const char *id)
+{
+  g_return_val_if_fail (id != NULL, NULL);
+  for (guint i = 0; i < G_N_ELEMENTS (kinds); i++)
+    if (g_str_equal (kinds[i]->id, id))
+      return kinds[i];
+  return NULL;
+}
+
+int
+hl_kind_find_option (const HlKind *kind, const char *key)
+{
+  g_return_val_if_fail (kind != NULL && key != NULL, -1);
+  for (guint i = 0; i < kind->n_options; i++)
+    if (g_str_equal (kind->options[i].key, key))
+      return (int) i;
+  return -1;
+}

@@ -1,0 +1,32 @@
+/* The tables of all kinds, and shorthand for their rows.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include <math.h>
+#include "plant/kind.h"
+#include "plant/i18n.h"
+
+extern const HlKind hl_kind_heat_input, hl_kind_boiler, hl_kind_turbine, hl_kind_generator, hl_kind_condenser,
+                    hl_kind_pump, hl_kind_open_heater, hl_kind_closed_heater, hl_kind_make_up,
+                    hl_kind_pipe, hl_kind_valve, hl_kind_splitter, hl_kind_mixer, hl_kind_boundary, hl_kind_steam_user;
+
+/* Words used by more than one table. */
+#define COMMON_PRACTICE N_("common practice, no source")
+
+/* Every row says its default, its credible range and its hard limits; these are the recurring ones. */
+#define NO_DEFAULT         .default_value = NAN, .default_source = NULL
+#define DEFAULT(value, source) .default_value = (value), .default_source = (source)
+#define NO_RANGE           .credible_low = NAN, .credible_high = NAN
+#define RANGE(low, high)   .credible_low = (low), .credible_high = (high)
+#define LIMITS(over, most) .above = (over), .at_most = (most)
+#define LIMITS_EFFICIENCY  LIMITS (0.0, 1.0)
+#define LIMITS_FRACTION    LIMITS (HL_FROM_ZERO, 1.0)
+#define LIMITS_LOSS        LIMITS (HL_FROM_ZERO, 0.999)      /* a loss of all pressure leaves no state */
+#define LIMITS_PRESSURE    LIMITS (0.0, 1e9)
+#define LIMITS_TEMPERATURE LIMITS (0.0, 3000.0)
+#define LIMITS_POWER       LIMITS (HL_FROM_ZERO, 1e12)
+#define LIMITS_FLOW        LIMITS (HL_FROM_ZERO, 1e6)
+#define LIMITS_DIFFERENCE  LIMITS (HL_FROM_ZERO, 1000.0)
+#define LIMITS_CONDUCTANCE LIMITS (HL_FROM_ZERO, 1e12)
+
+/* One row per argument. */
+#define ROWS(array) array, G_N_ELEMENTS (array)

@@ -1,0 +1,50 @@
+/* The inside of a plant: shared lists and their index.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include "plant/component-private.h"
+#include "plant/plant.h"
+G_BEGIN_DECLS
+
+typedef struct { const char *id, *port; } HlPortKey;
+
+/* Look-ups by id.  They hold positions, not pointers, so that an edit which keeps ids and connections shares them. */
+typedef struct {
+  gatomicrefcount ref_count;
+  GHashTable *components, *streams, *shafts;   /* id -> position + 1 */
+  GHashTable *ports;                           /* HlPortKey -> position of the stream + 1 */
+  GHashTable *shaft_of;                        /* component id -> position of the shaft + 1 */
+  HlPortKey  *port_keys;
+} HlPlantIndex;
+
+struct _HlPlant {
+  gatomicrefcount ref_count;
+  char          *title;                        /* GRefString */
+  const char    *formulation;                  /* interned */
+  HlUnitSet      units;
+  HlSite         site;
+  GPtrArray     *components, *streams, *shafts;   /* never changed once the plant is shared */
+  HlPlantIndex  *index;
+  HlValues       values;
+  JsonObject    *extra, *site_extra, *plant_extra;   /* unknown keys of the file; or NULL */
+};
+
+/* A plant under construction: fill in, then hl_plant_index(). */
+HlPlant *hl_plant_alloc      (void);
+HlPlant *hl_plant_share      (const HlPlant *plant);      /* same content, everything shared, to be changed */
+void     hl_plant_index      (HlPlant *plant);            /* builds the index from the lists */
+/* Replace a shared list by a copy of one's own, its items still shared. */
+void     hl_plant_own_components (HlPlant *plant);
+void     hl_plant_own_streams    (HlPlant *plant);
+void     hl_plant_own_shafts     (HlPlant *plant);
+
+/* Stream and state quantity behind an address; NULL where it is not a state of a connected port or stream. */
+const HlStream *hl_plant_stream_of_address (const HlPlant *plant, const HlAddress *address, const char **key);
+/* The @n-th of the three addresses of a stream's state: 0 the stream, 1 its outlet port, 2 its inlet port. */
+HlAddress       hl_stream_alias            (const HlStream *stream, const char *key, guint n);
+gboolean        hl_addresses_same          (const HlPlant *plant, const HlAddress *a, const HlAddress *b);
+
+/* plant-check.c */
+gboolean hl_quantity_check        (const HlQuantityKind *kind, const char *where, double value, HlUnitSet set, GError **error);
+gboolean hl_dimensions_may_tie    (HlDimension a, HlDimension b);
+gboolean hl_plant_check_tie       (const HlPlant *plant, const HlAddress *address, const HlValue *value, GError **error);
+G_END_DECLS
