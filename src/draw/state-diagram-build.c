@@ -61,9 +61,28 @@ hl_state_diagram_set_axes (HlStateDiagram *diagram, const HlCycle *cycle)
   s.high += 0.045 * (s.high - s.low);
   diagram->frame = (HlBox) { left, above, MAX (diagram->width - left - right, 20.0), MAX (diagram->height - above - below, 20.0) };
   hl_plot_axis_set (&diagram->s_axis, HL_DIMENSION_ENTROPY, cycle->units, s.low, s.high,
-                    diagram->frame.x, diagram->frame.x + diagram->frame.width, 5.0 * size);
+                    diagram->frame.x, diagram->frame.x + diagram->frame.width, 6.0 * size);
   hl_plot_axis_set (&diagram->T_axis, HL_DIMENSION_TEMPERATURE, cycle->units, T.low, T.high,
-                    diagram->frame.y + diagram->frame.height, diagram->frame.y, 3.3 * size);
+                    diagram->frame.y + diagram->frame.height, diagram->frame.y, 3.8 * size);
+}
+
+/* The dome's table is finer than a dotted line needs: points a few pixels apart will do. */
+static void
+add_quality_line (HlStateDiagram *diagram, double quality)
+{
+  const HlDome *dome = diagram->dome;
+  HlPlotSeries *series = hl_plot_series_new (HL_PLOT_QUIET, HL_PLOT_DOTTED, 0.75);
+  double last = -G_MAXDOUBLE;
+  for (guint i = 0; i < dome->n; i++)
+    {
+      double along = fabs (hl_plot_axis_to_pixel (&diagram->T_axis, dome->T[i]) - diagram->T_axis.pixel_low);
+      double s = dome->s_liquid[i] + quality * (dome->s_vapour[i] - dome->s_liquid[i]);
+      if (fabs (along - last) < 5.0 && i % 8 != 0 && i + 1 < dome->n)
+        continue;
+      hl_plot_series_add (series, s, dome->T[i]);
+      last = along;
+    }
+  hl_plot_layer_add (diagram->background, series);
 }
 
 void
@@ -76,12 +95,7 @@ hl_state_diagram_add_dome (HlStateDiagram *diagram)
   for (guint i = dome->n; i-- > 0;)
     hl_plot_series_add (diagram->outline, dome->s_vapour[i], dome->T[i]);
   for (int tenth = 1; tenth <= 9; tenth++)
-    {
-      HlPlotSeries *series = hl_plot_series_new (HL_PLOT_QUIET, HL_PLOT_DOTTED, 0.9);
-      for (guint i = 0; i < dome->n; i++)
-        hl_plot_series_add (series, dome->s_liquid[i] + tenth / 10.0 * (dome->s_vapour[i] - dome->s_liquid[i]), dome->T[i]);
-      hl_plot_layer_add (diagram->background, series);
-    }
+    add_quality_line (diagram, tenth / 10.0);
 }
 
 static HlPlotColour

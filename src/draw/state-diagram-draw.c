@@ -79,11 +79,9 @@ draw_dot (const HlMark *mark, cairo_t *cr, const HlTheme *theme, gboolean is_sta
   cairo_new_path (cr);
   if (is_selected)
     {
-      cairo_arc (cr, mark->at.x, mark->at.y, mark->radius + 5.0, 0.0, 2.0 * G_PI);
-      hl_set_colour (cr, &theme->selection);
-      cairo_fill_preserve (cr);
+      cairo_arc (cr, mark->at.x, mark->at.y, mark->radius + 3.0, 0.0, 2.0 * G_PI);
       hl_set_colour (cr, &theme->accent);
-      cairo_set_line_width (cr, 1.5);
+      cairo_set_line_width (cr, 1.8);
       cairo_stroke (cr);
     }
   cairo_arc (cr, mark->at.x, mark->at.y, mark->radius, 0.0, 2.0 * G_PI);

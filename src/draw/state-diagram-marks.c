@@ -117,7 +117,7 @@ add_states (HlStateDiagram *diagram, const HlCycle *cycle)
 {
   guint n = cycle->points->len;
   g_autofree gboolean *is_taken = g_new0 (gboolean, n + 1);
-  double within = 0.5 * diagram->number_size;
+  double within = 0.6 * diagram->number_size;
   for (guint round = 0; round < n; round++)
     {
       g_autoptr (GArray) members = g_array_new (FALSE, FALSE, sizeof (guint));
@@ -177,7 +177,7 @@ add_ideals (HlStateDiagram *diagram, const HlCycle *cycle)
       if (!process->has_isentropic)
         continue;
       mark.at = place_of (diagram, &process->isentropic);
-      if (!is_free_for_ideal (diagram, mark.at, 0.6 * diagram->number_size))
+      if (!is_free_for_ideal (diagram, mark.at, 0.65 * diagram->number_size))
         continue;
       if (id != NULL)
         mark.text = g_strconcat (id, id[0] != '\0' && g_ascii_isdigit (id[strlen (id) - 1]) ? "s" : " s", NULL);

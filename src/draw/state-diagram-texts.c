@@ -37,7 +37,8 @@ box_of_mark (const HlMark *mark)
 static HlPlotLabelWish
 wish_of (const HlStateDiagram *diagram, const HlMark *mark)
 {
-  HlPlotLabelWish wish = { .anchor = mark->at, .clearance = mark->radius + 2.2 };
+  HlPlotLabelWish wish = { .anchor = mark->at, /* Room for the ring of the selection. */
+                           .clearance = mark->radius + (mark->kind == HL_MARK_STATE ? 4.0 : 2.0) };
   gboolean is_state = mark->kind == HL_MARK_STATE;
   hl_state_diagram_text_size (mark->text, is_state ? diagram->number_size : 0.95 * diagram->text_size, is_state, &wish.width, &wish.height);
   wish.reach = is_state ? FAR_REACH : 22.0;
