@@ -10,6 +10,7 @@
  * 3386.389 Pa, conventional millimetre 133.3224 Pa.  The rest follows from these. */
 #define LB      0.45359237
 #define FT      0.3048
+#define GALLON  (231.0 * FT / 12.0 * FT / 12.0 * FT / 12.0)
 #define LBF     (LB * 9.80665)
 #define PSI     (LBF / (FT / 12.0 * FT / 12.0))
 #define BTU     (2326.0 * LB)
@@ -98,6 +99,10 @@ static const HlUnit units[] = {
 
   PLAIN ("kg/kWh", STEAM_RATE, 1.0 / KWH), PLAIN ("lb/kWh", STEAM_RATE, LB / KWH), PLAIN ("t/MWh", STEAM_RATE, 1.0 / KWH),
   PLAIN ("kg/J", STEAM_RATE, 1.0), PLAIN ("kg/MWh", STEAM_RATE, 1e-3 / KWH), PLAIN ("kg/MJ", STEAM_RATE, 1e-6),
+
+  PLAIN ("m3/h", VOLUME_FLOW, 1.0 / HOUR), PLAIN ("m3/s", VOLUME_FLOW, 1.0), PLAIN ("ft3/min", VOLUME_FLOW, FT * FT * FT / 60.0),
+  PLAIN ("ft3/s", VOLUME_FLOW, FT * FT * FT), PLAIN ("gpm", VOLUME_FLOW, GALLON / 60.0), PLAIN ("l/s", VOLUME_FLOW, 1e-3),
+  PLAIN ("l/min", VOLUME_FLOW, 1e-3 / 60.0), PLAIN ("m3/hr", VOLUME_FLOW, 1.0 / HOUR), PLAIN ("m3/min", VOLUME_FLOW, 1.0 / 60.0),
 };
 
 /* Letters that carry the meaning: spaces, brackets, dots and degree signs go. */

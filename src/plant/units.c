@@ -29,6 +29,7 @@ static const Dimension dimensions[HL_N_DIMENSIONS] = {
   [HL_DIMENSION_LENGTH] = { N_("length"), "m", "_m", { "m", "m", "ft" }, { 1, 3 } },
   [HL_DIMENSION_HEAT_RATE] = { N_("heat rate"), "J/J", "_J_J", { "kJ/kWh", "kJ/kWh", "Btu/kWh" }, { 0, 1 } },
   [HL_DIMENSION_STEAM_RATE] = { N_("steam rate"), "kg/J", "_kg_J", { "kg/kWh", "kg/kWh", "lb/kWh" }, { 2, 3 } },
+  [HL_DIMENSION_VOLUME_FLOW] = { N_("volume flow"), "m3/s", "_m3_s", { "m³/h", "m³/s", "ft³/min" }, { 0, 4 } },
   [HL_DIMENSION_COUNT] = { N_("number"), "", "", { "", "", "" }, { 0, 6 } },
 };
 
