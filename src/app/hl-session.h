@@ -9,6 +9,8 @@ G_BEGIN_DECLS
 G_DECLARE_FINAL_TYPE (HlSession, hl_session, HL, SESSION, GObject)
 /* Signals:
  *   "changed"            the plant or its solution is another one (after every edit, undo, redo, open)
+ *   "previewed"          a gesture moved something: the plant is another one, its solution still the former one (components and
+ *                        streams keep their indices); only pictures of places need to follow
  *   "selection-changed"
  *   "file-changed"       path, title or dirty flag
  *   "message" (const char *text)   something to say in the status strip: what yielded, what was done
@@ -16,12 +18,13 @@ G_DECLARE_FINAL_TYPE (HlSession, hl_session, HL, SESSION, GObject)
 
 HlSession        *hl_session_new          (void);
 HlPlant          *hl_session_plant        (HlSession *self);      /* (transfer none) never NULL */
-HlSolution       *hl_session_solution     (HlSession *self);      /* (transfer none) of exactly that plant; never NULL */
+HlSolution       *hl_session_solution     (HlSession *self);      /* (transfer none) of exactly that plant, but see "previewed"; never NULL */
 HlSolution       *hl_session_last_good    (HlSession *self);      /* (transfer none) (nullable): last solved one, to be shown grey while the present one fails */
 
 /* One undoable step named @name (translated: "Move Pump P1").  Takes @plant; settles for @edited (nullable) when @settle; solves at once; emits "changed". */
 void              hl_session_apply        (HlSession *self, const char *name, HlPlant *plant, const HlAddress *edited, gboolean settle);
-/* The same for a gesture in progress: replaces the plant without a history step until hl_session_apply or hl_session_cancel_preview. */
+/* The same for a gesture in progress: replaces the plant without a history step until hl_session_apply or hl_session_cancel_preview.
+ * Takes @plant.  Emits "changed" where it solves, else "previewed". */
 void              hl_session_preview      (HlSession *self, HlPlant *plant, gboolean solve);
 void              hl_session_cancel_preview (HlSession *self);
 /* Types a value into a quantity: parses, applies, settles.  FALSE with a message to show beside the entry. */

@@ -1,0 +1,8 @@
+/* Lines for whoever drives the program from outside: on standard output when HEATLOOM_TRACE=1.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include <glib.h>
+G_BEGIN_DECLS
+gboolean hl_trace_is_on (void);
+void     hl_trace       (const char *format, ...) G_GNUC_PRINTF (1, 2);
+G_END_DECLS

@@ -1,0 +1,39 @@
+/* What the files of the window share.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include "app/hl-canvas.h"
+#include "app/hl-window.h"
+G_BEGIN_DECLS
+
+struct _HlWindow {
+  GtkApplicationWindow parent_instance;
+  HlSession *session;
+  HlCanvas  *canvas;
+  gboolean   may_close;        /* the question about unsaved work has been answered */
+  gboolean   is_wide;          /* there is room for the glance card */
+  guint      fold_source;      /* idle that shows or hides it */
+
+  /* from the template */
+  GtkMenuButton *open_button, *menu_button;
+  GtkButton     *undo_button, *redo_button, *export_button;
+  GtkLabel      *title_label, *subtitle_label;
+  GtkWidget     *dirty_dot;
+  GtkPaned      *outer, *work;
+  GtkWidget     *shelf_bin, *canvas_bin, *strip_bin, *nameplate_bin;
+  GtkWidget     *empty_hint;
+  GtkLabel      *zoom_label;
+  GtkBox        *diagram_area;
+  GtkStack      *stack;
+  GtkWidget     *glance_bin;
+};
+
+void hl_window_add_actions    (HlWindow *self);     /* hl-window-actions.c */
+void hl_window_update_actions (HlWindow *self);     /* what is enabled, from the state */
+void hl_window_add_file_actions (HlWindow *self);   /* hl-window-file.c */
+void hl_window_fill_menus     (HlWindow *self);     /* hl-window-menus.c */
+void hl_window_place_diagram  (HlWindow *self, gboolean is_beside);
+gboolean hl_window_diagram_is_beside (HlWindow *self);
+void hl_window_show_error     (HlWindow *self, const char *title, const GError *error);
+/* Runs @then at once, or after the question about unsaved work has been answered with anything but "cancel". */
+void hl_window_when_safe      (HlWindow *self, void (*then) (HlWindow *self, gpointer data), gpointer data, GDestroyNotify free_data);
+G_END_DECLS

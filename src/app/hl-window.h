@@ -1,0 +1,15 @@
+/* The main window: header bar, shelf, canvas, nameplate, status strip, diagram area.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include <gtk/gtk.h>
+#include "app/hl-session.h"
+G_BEGIN_DECLS
+#define HL_TYPE_WINDOW (hl_window_get_type ())
+G_DECLARE_FINAL_TYPE (HlWindow, hl_window, HL, WINDOW, GtkApplicationWindow)
+HlWindow  *hl_window_new       (GtkApplication *application);    /* with an empty plant */
+HlSession *hl_window_session   (HlWindow *self);                 /* (transfer none) */
+/* At once, without a question; an error is shown in the window. */
+gboolean   hl_window_open_path (HlWindow *self, const char *path);
+/* A demo plant: opened as a new plant without a file, so that saving asks for a place. */
+gboolean   hl_window_open_demo (HlWindow *self, const char *path);
+G_END_DECLS
