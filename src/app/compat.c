@@ -24,6 +24,7 @@ response_cb (GtkNativeDialog *dialog, int response, Answer *answer)
       path = file != NULL ? g_file_get_path (file) : NULL;
     }
   answer->done (path, answer->data);
+  g_free (answer);
   g_object_unref (dialog);
 }
 
@@ -56,6 +57,6 @@ hl_compat_ask_file (GtkWindow *parent, const HlFileQuestion *question, HlFileCho
     }
   if (question->is_save && question->name != NULL)
     gtk_file_chooser_set_current_name (chooser, question->name);
-  g_signal_connect_data (dialog, "response", G_CALLBACK (response_cb), answer, (GClosureNotify) g_free, 0);
+  g_signal_connect (dialog, "response", G_CALLBACK (response_cb), answer);
   gtk_native_dialog_show (GTK_NATIVE_DIALOG (dialog));
 }

@@ -1,7 +1,7 @@
 /* The program: command line, look, shortcuts, windows.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-application.h"
-#include "app/hl-look.h"
+#include "app/hl-appearance.h"
 #include "app/hl-settings.h"
 #include "app/hl-trace.h"
 #include "app/hl-window.h"
@@ -111,9 +111,9 @@ hl_application_startup (GApplication *application)
   g_autofree char *look = NULL;
 
   G_APPLICATION_CLASS (hl_application_parent_class)->startup (application);
-  hl_look_start ();
+  hl_appearance_start ();
   look = hl_settings_get_string ("look", "system");
-  hl_look_set (hl_look_from_id (look));
+  hl_appearance_set (hl_appearance_from_id (look));
   gtk_window_set_default_icon_name ("local.heatloom.Heatloom");
   g_action_map_add_action_entries (G_ACTION_MAP (application), entries, G_N_ELEMENTS (entries), application);
   add_shortcuts (GTK_APPLICATION (application));

@@ -24,7 +24,7 @@ struct _HlSession {
   GPtrArray  *selection;     /* interned ids */
 };
 
-enum { CHANGED, PREVIEWED, SELECTION_CHANGED, FILE_CHANGED, MESSAGE, N_SIGNALS };
+enum { CHANGED, PREVIEWED, SELECTION_CHANGED, FILE_CHANGED, MESSAGE, GO_TO, N_SIGNALS };
 static guint signals[N_SIGNALS];
 
 G_DEFINE_FINAL_TYPE (HlSession, hl_session, G_TYPE_OBJECT)
@@ -163,6 +163,7 @@ hl_session_class_init (HlSessionClass *class)
   signals[PREVIEWED] = g_signal_new ("previewed", type, G_SIGNAL_RUN_LAST, 0, NULL, NULL, NULL, G_TYPE_NONE, 0);
   signals[SELECTION_CHANGED] = g_signal_new ("selection-changed", type, G_SIGNAL_RUN_LAST, 0, NULL, NULL, NULL, G_TYPE_NONE, 0);
   signals[FILE_CHANGED] = g_signal_new ("file-changed", type, G_SIGNAL_RUN_LAST, 0, NULL, NULL, NULL, G_TYPE_NONE, 0);
+  signals[GO_TO] = g_signal_new ("go-to", type, G_SIGNAL_RUN_LAST, 0, NULL, NULL, NULL, G_TYPE_NONE, 1, G_TYPE_STRING);
   signals[MESSAGE] = g_signal_new ("message", type, G_SIGNAL_RUN_LAST, 0, NULL, NULL, NULL, G_TYPE_NONE, 1, G_TYPE_STRING);
 }
 
@@ -269,10 +270,7 @@ hl_session_mend (HlSession *self, const HlMend *mend, GError **error)
   if (plant == committed (self))
     {
       hl_plant_unref (plant);
-      if (mend->address.owner != HL_OWNER_PLANT)
-        hl_session_select (self, mend->address.id, FALSE);
-      else
-        hl_session_select (self, NULL, FALSE);
+      hl_session_go_to (self, &mend->address);
       return TRUE;
     }
   /* No settling: it would give back at once what a mend lets go. */
@@ -381,6 +379,14 @@ hl_session_select_many (HlSession *self, const char *const *ids, guint n)
     if (has_id (hl_session_plant (self), ids[i]) && !hl_session_is_selected (self, ids[i]))
       g_ptr_array_add (self->selection, (gpointer) g_intern_string (ids[i]));
   g_signal_emit (self, signals[SELECTION_CHANGED], 0);
+}
+
+void
+hl_session_go_to (HlSession *self, const HlAddress *address)
+{
+  g_autofree char *text = hl_address_to_text (address);
+  hl_session_select (self, address->owner == HL_OWNER_PLANT ? NULL : address->id, FALSE);
+  g_signal_emit (self, signals[GO_TO], 0, text);
 }
 
 /* File */

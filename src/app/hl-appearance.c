@@ -1,10 +1,10 @@
 /* Light or dark: loads the style sheet with the colours of draw/theme.c put in front.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "app/hl-look.h"
+#include "app/hl-appearance.h"
 #include "app/compat.h"
 
 static struct {
-  HlLook          look;
+  HlAppearance          look;
   gboolean        system_is_dark;
   GtkCssProvider *provider;
   GDBusProxy     *portal;
@@ -12,23 +12,23 @@ static struct {
 
 static const char *const look_ids[] = { "system", "light", "dark" };
 
-HlLook
-hl_look_from_id (const char *id)
+HlAppearance
+hl_appearance_from_id (const char *id)
 {
   for (guint n = 0; n < G_N_ELEMENTS (look_ids); n++)
     if (g_strcmp0 (id, look_ids[n]) == 0)
-      return (HlLook) n;
-  return HL_LOOK_SYSTEM;
+      return (HlAppearance) n;
+  return HL_APPEARANCE_SYSTEM;
 }
 
 const char *
-hl_look_id (HlLook look)
+hl_appearance_id (HlAppearance look)
 {
   return look_ids[look];
 }
 
-HlLook
-hl_look_get (void)
+HlAppearance
+hl_appearance_get (void)
 {
   return current.look;
 }
@@ -36,11 +36,11 @@ hl_look_get (void)
 static gboolean
 is_dark (void)
 {
-  return current.look == HL_LOOK_DARK || (current.look == HL_LOOK_SYSTEM && current.system_is_dark);
+  return current.look == HL_APPEARANCE_DARK || (current.look == HL_APPEARANCE_SYSTEM && current.system_is_dark);
 }
 
 const HlTheme *
-hl_look_theme (void)
+hl_appearance_theme (void)
 {
   return hl_theme (is_dark () ? HL_THEME_DARK : HL_THEME_LIGHT);
 }
@@ -75,17 +75,18 @@ colours_as_css (const HlTheme *theme)
 static void
 load (void)
 {
-  g_autofree char *colours = colours_as_css (hl_look_theme ());
+  g_autofree char *colours = colours_as_css (hl_appearance_theme ());
   g_autofree char *css = NULL;
   g_autoptr (GBytes) sheet = g_resources_lookup_data ("/local/heatloom/Heatloom/style.css", 0, NULL);
+  g_autoptr (GBytes) panes = g_resources_lookup_data ("/local/heatloom/Heatloom/style-panes.css", 0, NULL);
   g_object_set (gtk_settings_get_default (), "gtk-application-prefer-dark-theme", is_dark (), NULL);
-  g_return_if_fail (sheet != NULL);
-  css = g_strconcat (colours, (const char *) g_bytes_get_data (sheet, NULL), NULL);
+  g_return_if_fail (sheet != NULL && panes != NULL);
+  css = g_strconcat (colours, (const char *) g_bytes_get_data (sheet, NULL), (const char *) g_bytes_get_data (panes, NULL), NULL);
   hl_compat_load_css (current.provider, css);
 }
 
 void
-hl_look_set (HlLook look)
+hl_appearance_set (HlAppearance look)
 {
   current.look = look;
   if (current.provider != NULL)
@@ -146,7 +147,7 @@ portal_ready_cb (GObject *source, GAsyncResult *result, gpointer data)
 }
 
 void
-hl_look_start (void)
+hl_appearance_start (void)
 {
   if (current.provider != NULL)
     return;

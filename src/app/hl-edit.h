@@ -1,0 +1,31 @@
+/* What the canvas can do to a plant, as functions from plant to plant: add, move, turn, connect ...
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include "plant/plant.h"
+G_BEGIN_DECLS
+
+/* Each returns a new plant (transfer full); NULL with @error where it cannot be done. */
+HlPlant *hl_edit_add         (const HlPlant *plant, const HlKind *kind, int x, int y, const char **id);   /* @id: (out) interned */
+HlPlant *hl_edit_move        (const HlPlant *plant, const char *const *ids, guint n, int dx, int dy);
+HlPlant *hl_edit_turn        (const HlPlant *plant, const char *const *ids, guint n);    /* a quarter clockwise, several about their middle */
+HlPlant *hl_edit_mirror      (const HlPlant *plant, const char *const *ids, guint n);    /* left-right as seen */
+HlPlant *hl_edit_delete      (const HlPlant *plant, const char *const *ids, guint n);
+/* Copies of the components with the lines and shafts among them. @copies gets the interned ids of the new components. */
+HlPlant *hl_edit_duplicate   (const HlPlant *plant, const char *const *ids, guint n, int dx, int dy, GPtrArray *copies);
+/* A line between two ports, whichever of them is the outlet. */
+HlPlant *hl_edit_connect     (const HlPlant *plant, const char *a_id, const char *a_port, const char *b_id, const char *b_port,
+                              const char **stream, GError **error);
+HlPlant *hl_edit_join_shaft  (const HlPlant *plant, const char *a_id, const char *b_id, GError **error);
+HlPlant *hl_edit_leave_shaft (const HlPlant *plant, const char *id, GError **error);
+HlPlant *hl_edit_insert      (const HlPlant *plant, const char *stream, const HlKind *kind, int x, int y, const char **id, GError **error);
+HlPlant *hl_edit_place_label (const HlPlant *plant, const char *stream, gboolean has_place, int x, int y);
+
+/* Whether a line may run between two ports, and if not why. */
+gboolean hl_edit_can_connect (const HlPlant *plant, const char *a_id, const char *a_port, const char *b_id, const char *b_port, GError **error);
+gboolean hl_edit_can_join    (const HlPlant *plant, const char *a_id, const char *b_id, GError **error);
+gboolean hl_edit_can_insert  (const HlKind *kind);
+/* The free place nearest to (x, y) for a component of @kind. */
+void     hl_edit_free_place  (const HlPlant *plant, const HlKind *kind, int *x, int *y);
+/* "P1", "P1 and T1", "3 items": for names of steps. g_free(). */
+char    *hl_edit_words       (const HlPlant *plant, const char *const *ids, guint n);
+G_END_DECLS

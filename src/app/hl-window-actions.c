@@ -1,0 +1,496 @@
+/* What can be done in the window, as actions: gestures, menus, shortcuts and tests all come through here.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "app/hl-window-private.h"
+#include "app/hl-about.h"
+#include "app/hl-edit.h"
+#include "app/hl-export-dialog.h"
+#include "app/hl-appearance.h"
+#include "app/hl-settings.h"
+#include "plant/i18n.h"
+
+#define COPY_OFFSET 4      /* grid units that a duplicate lies beside its original */
+
+static HlPlant *
+plant_of (HlWindow *self)
+{
+  return hl_session_plant (self->session);
+}
+
+static void
+say (HlWindow *self, const char *text)
+{
+  g_signal_emit_by_name (self->session, "message", text);
+}
+
+static void
+say_error (HlWindow *self, const GError *error)
+{
+  say (self, error->message);
+  gtk_widget_error_bell (GTK_WIDGET (self));
+}
+
+/* A step named "<verb> <selection>": @format has one %s. */
+static void
+apply_to_selection (HlWindow *self, const char *format, HlPlant *plant, gboolean settle)
+{
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  g_autofree char *words = hl_edit_words (plant_of (self), ids, n);
+  g_autofree char *name = NULL;
+#pragma GCC diagnostic push
+#pragma GCC diagnostic ignored "-Wformat-nonliteral"
+  name = g_strdup_printf (format, words);
+#pragma GCC diagnostic pop
+  hl_session_apply (self->session, name, plant, NULL, settle);
+}
+
+/* History */
+
+static void
+undo_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  hl_session_cancel_preview (self->session);
+  hl_session_undo (self->session);
+}
+
+static void
+redo_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  hl_session_cancel_preview (self->session);
+  hl_session_redo (self->session);
+}
+
+/* Components */
+
+static void
+add_at (HlWindow *self, const HlKind *kind, int x, int y)
+{
+  const char *id;
+  HlPlant *plant = hl_edit_add (plant_of (self), kind, x, y, &id);
+  g_autofree char *name = g_strdup_printf (_("Add %s %s"), _(kind->shelf_name), id);
+  hl_session_apply (self->session, name, plant, NULL, TRUE);
+  hl_session_select (self->session, id, FALSE);
+}
+
+static const HlKind *
+known_kind (HlWindow *self, const char *id)
+{
+  const HlKind *kind = hl_kind_lookup (id);
+  if (kind == NULL)
+    {
+      g_autofree char *text = g_strdup_printf (_("There is no component kind “%s”"), id);
+      say (self, text);
+    }
+  return kind;
+}
+
+static void
+add_component_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  const HlKind *kind = known_kind (self, g_variant_get_string (parameter, NULL));
+  int x, y;
+  if (kind == NULL)
+    return;
+  hl_canvas_middle (self->canvas, &x, &y);
+  hl_edit_free_place (plant_of (self), kind, &x, &y);
+  add_at (self, kind, x, y);
+  hl_canvas_reveal (self->canvas, hl_session_selection (self->session, NULL)[0]);
+}
+
+static void
+add_component_at_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  const char *id;
+  int x, y;
+  const HlKind *kind;
+  g_variant_get (parameter, "(&sii)", &id, &x, &y);
+  if ((kind = known_kind (self, id)) != NULL)
+    add_at (self, kind, x, y);
+}
+
+static void
+insert_component_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  const char *kind_id, *stream, *id;
+  int x, y;
+  const HlKind *kind;
+  g_autoptr (GError) error = NULL;
+  HlPlant *plant;
+
+  g_variant_get (parameter, "(&s&sii)", &kind_id, &stream, &x, &y);
+  if ((kind = known_kind (self, kind_id)) == NULL)
+    return;
+  plant = hl_edit_insert (plant_of (self), stream, kind, x, y, &id, &error);
+  if (plant == NULL)
+    say_error (self, error);
+  else
+    {
+      g_autofree char *name = g_strdup_printf (_("Insert %s %s in stream %s"), _(kind->shelf_name), id, stream);
+      hl_session_apply (self->session, name, plant, NULL, TRUE);
+      hl_session_select (self->session, id, FALSE);
+    }
+}
+
+static guint
+n_selected_components (HlWindow *self)
+{
+  guint n, count = 0;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  for (guint i = 0; i < n; i++)
+    count += hl_plant_find_component (plant_of (self), ids[i]) != NULL;
+  return count;
+}
+
+static void
+move_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  int dx, dy;
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  g_variant_get (parameter, "(ii)", &dx, &dy);
+  hl_session_cancel_preview (self->session);
+  if (n_selected_components (self) > 0 && (dx != 0 || dy != 0))
+    apply_to_selection (self, _("Move %s"), hl_edit_move (plant_of (self), ids, n, dx, dy), FALSE);
+}
+
+static void
+turn_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  apply_to_selection (self, _("Turn %s"), hl_edit_turn (plant_of (self), ids, n), FALSE);
+}
+
+static void
+mirror_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  apply_to_selection (self, _("Mirror %s"), hl_edit_mirror (plant_of (self), ids, n), FALSE);
+}
+
+static void
+delete_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  apply_to_selection (self, _("Delete %s"), hl_edit_delete (plant_of (self), ids, n), TRUE);
+}
+
+static void
+duplicate_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  g_autoptr (GPtrArray) copies = g_ptr_array_new ();
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  HlPlant *plant = hl_edit_duplicate (plant_of (self), ids, n, COPY_OFFSET, COPY_OFFSET, copies);
+  apply_to_selection (self, _("Duplicate %s"), plant, TRUE);
+  hl_session_select_many (self->session, (const char *const *) copies->pdata, copies->len);
+}
+
+/* Lines and shafts */
+
+static void
+connect_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  const char *a_id, *a_port, *b_id, *b_port;
+  g_autoptr (GError) error = NULL;
+  HlPlant *plant;
+  const char *stream;
+
+  g_variant_get (parameter, "(&s&s&s&s)", &a_id, &a_port, &b_id, &b_port);
+  plant = hl_edit_connect (plant_of (self), a_id, a_port, b_id, b_port, &stream, &error);
+  if (plant == NULL)
+    say_error (self, error);
+  else
+    {
+      g_autofree char *name = g_strdup_printf (_("Connect %s to %s"), a_id, b_id);
+      hl_session_apply (self->session, name, plant, NULL, TRUE);
+    }
+}
+
+static void
+apply_shaft (HlWindow *self, HlPlant *plant, const GError *error, char *name)
+{
+  if (plant == NULL)
+    say_error (self, error);
+  else
+    hl_session_apply (self->session, name, plant, NULL, TRUE);
+  g_free (name);
+}
+
+static void
+join_shaft_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  const char *a_id, *b_id;
+  g_autoptr (GError) error = NULL;
+  HlPlant *plant;
+  g_variant_get (parameter, "(&s&s)", &a_id, &b_id);
+  plant = hl_edit_join_shaft (plant_of (self), a_id, b_id, &error);
+  apply_shaft (self, plant, error, g_strdup_printf (_("Put %s and %s on one shaft"), a_id, b_id));
+}
+
+static void
+leave_shaft_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  g_autoptr (GError) error = NULL;
+  HlPlant *plant;
+  if (n != 1)
+    return;
+  plant = hl_edit_leave_shaft (plant_of (self), ids[0], &error);
+  apply_shaft (self, plant, error, g_strdup_printf (_("Take %s off its shaft"), ids[0]));
+}
+
+static void
+connect_menu_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  if (n == 1)
+    hl_canvas_ask_connection (self->canvas, ids[0]);
+}
+
+static void
+move_label_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  const char *stream;
+  int x, y;
+  g_autofree char *name = NULL;
+  g_variant_get (parameter, "(&sii)", &stream, &x, &y);
+  hl_session_cancel_preview (self->session);
+  name = g_strdup_printf (_("Move the label of stream %s"), stream);
+  hl_session_apply (self->session, name, hl_edit_place_label (plant_of (self), stream, TRUE, x, y), NULL, FALSE);
+}
+
+static void
+reset_label_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  if (n == 1)
+    apply_to_selection (self, _("Let the label of %s find its place"), hl_edit_place_label (plant_of (self), ids[0], FALSE, 0, 0), FALSE);
+}
+
+/* Selection */
+
+static void
+select_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  hl_session_select (HL_WINDOW (data)->session, g_variant_get_string (parameter, NULL), FALSE);
+}
+
+static void
+select_all_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  guint n = hl_plant_n_components (plant_of (self));
+  g_autofree const char **ids = g_new0 (const char *, n + 1);
+  for (guint i = 0; i < n; i++)
+    ids[i] = hl_plant_component (plant_of (self), i)->id;
+  hl_session_select_many (self->session, ids, n);
+}
+
+static void
+deselect_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  if (!hl_canvas_cancel (self->canvas))
+    hl_session_select (self->session, NULL, FALSE);
+}
+
+/* Values */
+
+static void
+set_value_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  const char *where, *text;
+  HlAddress address;
+  g_autoptr (GError) error = NULL;
+  g_variant_get (parameter, "(&s&s)", &where, &text);
+  if (!hl_address_parse (where, plant_of (self), &address, &error)
+      || !hl_session_set_text (self->session, &address, text, &error))
+    say_error (self, error);
+}
+
+static void
+units_cb (GSimpleAction *action, GVariant *value, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  HlUnitSet units;
+  if (!hl_unit_set_from_id (g_variant_get_string (value, NULL), &units) || units == hl_plant_units (plant_of (self)))
+    return;
+  hl_session_apply (self->session, _("Change units"), hl_plant_with_units (plant_of (self), units), NULL, FALSE);
+}
+
+/* View */
+
+static void
+zoom_in_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  hl_canvas_zoom_by (HL_WINDOW (data)->canvas, 1.25);
+}
+
+static void
+zoom_out_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  hl_canvas_zoom_by (HL_WINDOW (data)->canvas, 0.8);
+}
+
+static void
+zoom_normal_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlCanvas *canvas = HL_WINDOW (data)->canvas;
+  hl_canvas_zoom_by (canvas, 1.0 / hl_canvas_get_zoom (canvas));
+}
+
+static void
+zoom_fit_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  hl_canvas_fit (HL_WINDOW (data)->canvas);
+}
+
+static void
+beside_cb (GSimpleAction *action, GVariant *value, gpointer data)
+{
+  g_simple_action_set_state (action, value);
+  hl_window_place_diagram (HL_WINDOW (data), g_variant_get_boolean (value));
+}
+
+static void
+look_cb (GSimpleAction *action, GVariant *value, gpointer data)
+{
+  g_simple_action_set_state (action, value);
+  hl_appearance_set (hl_appearance_from_id (g_variant_get_string (value, NULL)));
+  hl_settings_set_string ("look", g_variant_get_string (value, NULL));
+}
+
+/* Light and dark in turn, whatever the desktop says. */
+static void
+look_next_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  gboolean is_light = hl_appearance_theme () == hl_theme (HL_THEME_LIGHT);
+  g_action_group_change_action_state (G_ACTION_GROUP (data), "look", g_variant_new_string (is_light ? "dark" : "light"));
+}
+
+static void
+tab_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  gtk_stack_set_visible_child_name (HL_WINDOW (data)->stack, g_variant_get_string (parameter, NULL));
+}
+
+/* Windows */
+
+static void
+export_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  hl_export_dialog_present (GTK_WINDOW (data), HL_WINDOW (data)->session);
+}
+
+static void
+about_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  hl_about_present (GTK_WINDOW (data));
+}
+
+static void
+close_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  gtk_window_close (GTK_WINDOW (data));
+}
+
+static const GActionEntry entries[] = {
+  { "undo", undo_cb },
+  { "redo", redo_cb },
+  { "add-component", add_component_cb, "s" },
+  { "add-component-at", add_component_at_cb, "(sii)" },
+  { "insert-component", insert_component_cb, "(ssii)" },
+  { "move", move_cb, "(ii)" },
+  { "turn", turn_cb },
+  { "mirror", mirror_cb },
+  { "delete", delete_cb },
+  { "duplicate", duplicate_cb },
+  { "connect", connect_cb, "(ssss)" },
+  { "connect-menu", connect_menu_cb },
+  { "join-shaft", join_shaft_cb, "(ss)" },
+  { "leave-shaft", leave_shaft_cb },
+  { "move-label", move_label_cb, "(sii)" },
+  { "reset-label", reset_label_cb },
+  { "select", select_cb, "s" },
+  { "select-all", select_all_cb },
+  { "deselect", deselect_cb },
+  { "set-value", set_value_cb, "(ss)" },
+  { "units", NULL, "s", "'metric'", units_cb },
+  { "zoom-in", zoom_in_cb },
+  { "zoom-out", zoom_out_cb },
+  { "zoom-normal", zoom_normal_cb },
+  { "zoom-fit", zoom_fit_cb },
+  { "diagram-beside", NULL, NULL, "false", beside_cb },
+  { "look", NULL, "s", "'system'", look_cb },
+  { "look-next", look_next_cb },
+  { "tab", tab_cb, "s" },
+  { "export", export_cb },
+  { "about", about_cb },
+  { "close-asking", close_cb },
+};
+
+void
+hl_window_add_actions (HlWindow *self)
+{
+  g_action_map_add_action_entries (G_ACTION_MAP (self), entries, G_N_ELEMENTS (entries), self);
+  g_simple_action_set_state (G_SIMPLE_ACTION (g_action_map_lookup_action (G_ACTION_MAP (self), "look")),
+                             g_variant_new_string (hl_appearance_id (hl_appearance_get ())));
+  g_simple_action_set_state (G_SIMPLE_ACTION (g_action_map_lookup_action (G_ACTION_MAP (self), "diagram-beside")),
+                             g_variant_new_boolean (hl_settings_get_bool ("diagram-beside", FALSE)));
+}
+
+static void
+enable (HlWindow *self, const char *name, gboolean is_enabled)
+{
+  g_simple_action_set_enabled (G_SIMPLE_ACTION (g_action_map_lookup_action (G_ACTION_MAP (self), name)), is_enabled);
+}
+
+void
+hl_window_update_actions (HlWindow *self)
+{
+  HlPlant *plant = plant_of (self);
+  guint n, n_components = n_selected_components (self);
+  const char *const *ids = hl_session_selection (self->session, &n);
+  const HlComponent *single = n == 1 ? hl_plant_find_component (plant, ids[0]) : NULL;
+  const HlStream *stream = n == 1 ? hl_plant_find_stream (plant, ids[0]) : NULL;
+  gboolean has_components = hl_plant_n_components (plant) > 0;
+
+  enable (self, "undo", hl_session_can_undo (self->session));
+  enable (self, "redo", hl_session_can_redo (self->session));
+  enable (self, "move", n_components > 0);
+  enable (self, "turn", n_components > 0);
+  enable (self, "mirror", n_components > 0);
+  enable (self, "duplicate", n_components > 0);
+  enable (self, "delete", n > 0);
+  enable (self, "connect-menu", single != NULL);
+  enable (self, "leave-shaft", single != NULL && hl_plant_shaft_of (plant, single->id) != NULL);
+  enable (self, "reset-label", stream != NULL && stream->has_label_place);
+  enable (self, "select-all", has_components);
+  enable (self, "zoom-fit", has_components);
+  enable (self, "export", has_components);
+  g_simple_action_set_state (G_SIMPLE_ACTION (g_action_map_lookup_action (G_ACTION_MAP (self), "units")),
+                             g_variant_new_string (hl_unit_set_id (hl_plant_units (plant))));
+}

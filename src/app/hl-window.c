@@ -1,0 +1,314 @@
+/* The main window: places the panes, follows the session with title and size.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "app/hl-window-private.h"
+#include "app/hl-diagram-view.h"
+#include "app/hl-findings.h"
+#include "app/hl-glance.h"
+#include "app/hl-ledger-view.h"
+#include "app/hl-nameplate.h"
+#include "app/hl-settings.h"
+#include "app/hl-shelf.h"
+#include "app/hl-status-strip.h"
+#include "app/hl-trace.h"
+#include "plant/i18n.h"
+
+#define GLANCE_FROM_WIDTH 1100     /* the glance card needs this much in the work area, beside the diagram */
+
+G_DEFINE_FINAL_TYPE (HlWindow, hl_window, GTK_TYPE_APPLICATION_WINDOW)
+
+/* Following the session */
+
+static void
+update_title (HlWindow *self)
+{
+  g_autofree char *name = hl_session_display_name (self->session);
+  g_autofree char *file = NULL, *window_title = NULL;
+  const char *path = hl_session_path (self->session);
+
+  if (path != NULL)
+    file = g_path_get_basename (path);
+  gtk_label_set_text (self->title_label, name);
+  gtk_label_set_text (self->subtitle_label, file != NULL ? file : _("not saved yet"));
+  gtk_widget_set_tooltip_text (GTK_WIDGET (self->subtitle_label), path);
+  gtk_widget_set_visible (self->dirty_dot, hl_session_is_dirty (self->session));
+  window_title = g_strdup_printf ("Heatloom – %s", name);
+  gtk_window_set_title (GTK_WINDOW (self), window_title);
+}
+
+static void
+update_history_tooltips (HlWindow *self)
+{
+  const char *undo = hl_session_undo_name (self->session), *redo = hl_session_redo_name (self->session);
+  g_autofree char *undo_text = undo != NULL ? g_strdup_printf (_("Undo: %s"), undo) : g_strdup (_("Nothing to undo"));
+  g_autofree char *redo_text = redo != NULL ? g_strdup_printf (_("Redo: %s"), redo) : g_strdup (_("Nothing to redo"));
+  gtk_widget_set_tooltip_text (GTK_WIDGET (self->undo_button), undo_text);
+  gtk_widget_set_tooltip_text (GTK_WIDGET (self->redo_button), redo_text);
+}
+
+static void
+file_changed_cb (HlWindow *self)
+{
+  update_title (self);
+  update_history_tooltips (self);
+}
+
+static void
+changed_cb (HlWindow *self)
+{
+  gboolean is_empty = hl_plant_n_components (hl_session_plant (self->session)) == 0;
+  gtk_widget_set_visible (self->empty_hint, is_empty);
+  hl_window_update_actions (self);
+}
+
+static void
+zoom_changed_cb (HlWindow *self)
+{
+  g_autofree char *text = g_strdup_printf ("%.0f %%", 100.0 * hl_canvas_get_zoom (self->canvas));
+  gtk_label_set_text (self->zoom_label, text);
+}
+
+/* Panes */
+
+static void
+add_tab (HlWindow *self, GtkWidget *page, const char *name, const char *title)
+{
+  gtk_stack_add_titled (self->stack, page, name, title);
+}
+
+static void
+fill_panes (HlWindow *self)
+{
+  self->canvas = HL_CANVAS (hl_canvas_new (self->session));
+  gtk_overlay_set_child (GTK_OVERLAY (self->canvas_bin), GTK_WIDGET (self->canvas));
+  gtk_box_append (GTK_BOX (self->shelf_bin), hl_shelf_new ());
+  gtk_box_append (GTK_BOX (self->strip_bin), hl_status_strip_new (self->session));
+  gtk_box_append (GTK_BOX (self->nameplate_bin), hl_nameplate_new (self->session));
+  gtk_box_append (GTK_BOX (self->glance_bin), hl_glance_new (self->session));
+  add_tab (self, hl_diagram_view_new (self->session), "state", _("State"));
+  add_tab (self, hl_ledger_view_new (self->session), "ledger", _("Ledger"));
+  add_tab (self, hl_findings_new (self->session), "findings", _("Findings"));
+  for (GtkWidget *bin[] = { self->strip_bin, self->nameplate_bin, self->glance_bin, NULL }, **b = bin; *b != NULL; b++)
+    {
+      gtk_widget_set_hexpand (gtk_widget_get_first_child (*b), TRUE);
+      gtk_widget_set_vexpand (gtk_widget_get_first_child (*b), *b != self->strip_bin);
+    }
+}
+
+/* Sizes */
+
+gboolean
+hl_window_diagram_is_beside (HlWindow *self)
+{
+  return gtk_orientable_get_orientation (GTK_ORIENTABLE (self->work)) == GTK_ORIENTATION_HORIZONTAL;
+}
+
+static void
+update_glance (HlWindow *self)
+{
+  gtk_widget_set_visible (self->glance_bin, hl_window_diagram_is_beside (self) || self->is_wide);
+}
+
+static gboolean
+fold_cb (gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  self->fold_source = 0;
+  self->is_wide = gtk_widget_get_width (GTK_WIDGET (self->work)) >= GLANCE_FROM_WIDTH;
+  update_glance (self);
+  return G_SOURCE_REMOVE;
+}
+
+static void
+hl_window_size_allocate (GtkWidget *widget, int width, int height, int baseline)
+{
+  HlWindow *self = HL_WINDOW (widget);
+  GTK_WIDGET_CLASS (hl_window_parent_class)->size_allocate (widget, width, height, baseline);
+  if (self->fold_source == 0 && (gtk_widget_get_width (GTK_WIDGET (self->work)) >= GLANCE_FROM_WIDTH) != self->is_wide)
+    self->fold_source = g_idle_add (fold_cb, self);    /* visibility must not change while sizes are given out */
+}
+
+static int
+remembered (const char *key, int fallback)
+{
+  return MAX (100, hl_settings_get_int (key, fallback));
+}
+
+/* A paned counts from its start; what is remembered is the size of its end, which does not follow the window. */
+static void
+set_end_size (GtkPaned *paned, int whole, int end)
+{
+  gtk_paned_set_position (paned, MAX (200, whole - end));
+}
+
+static int
+end_size (GtkPaned *paned)
+{
+  gboolean is_horizontal = gtk_orientable_get_orientation (GTK_ORIENTABLE (paned)) == GTK_ORIENTATION_HORIZONTAL;
+  GtkWidget *end = gtk_paned_get_end_child (paned);
+  return is_horizontal ? gtk_widget_get_width (end) : gtk_widget_get_height (end);
+}
+
+static void
+remember_diagram_size (HlWindow *self)
+{
+  int size = end_size (self->work);
+  if (size > 50)
+    hl_settings_set_int (hl_window_diagram_is_beside (self) ? "diagram-beside-size" : "diagram-below-size", size);
+}
+
+void
+hl_window_place_diagram (HlWindow *self, gboolean is_beside)
+{
+  GtkOrientation across = is_beside ? GTK_ORIENTATION_VERTICAL : GTK_ORIENTATION_HORIZONTAL;
+  int width = gtk_widget_get_width (GTK_WIDGET (self->work)), height = gtk_widget_get_height (GTK_WIDGET (self->work));
+
+  if (is_beside == hl_window_diagram_is_beside (self))
+    return;
+  if (width > 0)
+    remember_diagram_size (self);
+  gtk_orientable_set_orientation (GTK_ORIENTABLE (self->work), is_beside ? GTK_ORIENTATION_HORIZONTAL : GTK_ORIENTATION_VERTICAL);
+  gtk_orientable_set_orientation (GTK_ORIENTABLE (self->diagram_area), across);
+  gtk_widget_set_vexpand (self->glance_bin, FALSE);
+  if (width > 0)
+    set_end_size (self->work, is_beside ? width : height,
+                  is_beside ? remembered ("diagram-beside-size", 620) : remembered ("diagram-below-size", 290));
+  hl_settings_set_bool ("diagram-beside", is_beside);
+  update_glance (self);
+}
+
+/* Before the first allocation the sizes of the panes follow from the remembered size of the window. */
+static void
+restore_geometry (HlWindow *self)
+{
+  int width = remembered ("window-width", 1280), height = remembered ("window-height", 800);
+  gboolean is_beside = hl_settings_get_bool ("diagram-beside", FALSE);
+  int work_width, shelf = 140;
+
+  gtk_window_set_default_size (GTK_WINDOW (self), width, height);
+  if (hl_settings_get_bool ("window-maximized", FALSE))
+    gtk_window_maximize (GTK_WINDOW (self));
+  work_width = width - shelf - remembered ("nameplate-size", 310);
+  hl_window_place_diagram (self, is_beside);
+  gtk_paned_set_position (self->outer, work_width);
+  set_end_size (self->work, is_beside ? work_width : height - 48,
+                is_beside ? remembered ("diagram-beside-size", 620) : remembered ("diagram-below-size", 290));
+}
+
+static void
+remember_geometry (HlWindow *self)
+{
+  int width, height;
+  gtk_window_get_default_size (GTK_WINDOW (self), &width, &height);
+  hl_settings_set_bool ("window-maximized", gtk_window_is_maximized (GTK_WINDOW (self)));
+  if (!gtk_window_is_maximized (GTK_WINDOW (self)) && width > 0)
+    {
+      hl_settings_set_int ("window-width", width);
+      hl_settings_set_int ("window-height", height);
+    }
+  if (end_size (self->outer) > 50)
+    hl_settings_set_int ("nameplate-size", end_size (self->outer));
+  remember_diagram_size (self);
+}
+
+/* Life */
+
+static void
+really_close (HlWindow *self, gpointer data)
+{
+  self->may_close = TRUE;
+  gtk_window_close (GTK_WINDOW (self));
+}
+
+static gboolean
+hl_window_close_request (GtkWindow *window)
+{
+  HlWindow *self = HL_WINDOW (window);
+  if (!self->may_close && hl_session_is_dirty (self->session))
+    {
+      hl_window_when_safe (self, really_close, NULL, NULL);
+      return TRUE;
+    }
+  remember_geometry (self);
+  return GTK_WINDOW_CLASS (hl_window_parent_class)->close_request (window);
+}
+
+static void
+frame_cb (GdkFrameClock *clock, gpointer data)
+{
+  hl_trace ("frame");
+}
+
+static void
+hl_window_realize (GtkWidget *widget)
+{
+  GTK_WIDGET_CLASS (hl_window_parent_class)->realize (widget);
+  if (hl_trace_is_on ())
+    g_signal_connect_object (gtk_widget_get_frame_clock (widget), "after-paint", G_CALLBACK (frame_cb), widget, 0);
+}
+
+static void
+hl_window_init (HlWindow *self)
+{
+  gtk_widget_init_template (GTK_WIDGET (self));
+  self->session = hl_session_new ();
+  fill_panes (self);
+  hl_window_add_actions (self);
+  hl_window_add_file_actions (self);
+  hl_window_fill_menus (self);
+  g_signal_connect_object (self->session, "changed", G_CALLBACK (changed_cb), self, G_CONNECT_SWAPPED);
+  g_signal_connect_object (self->session, "selection-changed", G_CALLBACK (hl_window_update_actions), self, G_CONNECT_SWAPPED);
+  g_signal_connect_object (self->session, "file-changed", G_CALLBACK (file_changed_cb), self, G_CONNECT_SWAPPED);
+  g_signal_connect_object (self->canvas, "notify::zoom", G_CALLBACK (zoom_changed_cb), self, G_CONNECT_SWAPPED);
+  restore_geometry (self);
+  changed_cb (self);
+  file_changed_cb (self);
+}
+
+static void
+hl_window_dispose (GObject *object)
+{
+  HlWindow *self = HL_WINDOW (object);
+  g_clear_handle_id (&self->fold_source, g_source_remove);
+  G_OBJECT_CLASS (hl_window_parent_class)->dispose (object);
+}
+
+static void
+hl_window_finalize (GObject *object)
+{
+  g_clear_object (&HL_WINDOW (object)->session);
+  G_OBJECT_CLASS (hl_window_parent_class)->finalize (object);
+}
+
+static void
+hl_window_class_init (HlWindowClass *class)
+{
+  GtkWidgetClass *widget = GTK_WIDGET_CLASS (class);
+  G_OBJECT_CLASS (class)->dispose = hl_window_dispose;
+  G_OBJECT_CLASS (class)->finalize = hl_window_finalize;
+  GTK_WINDOW_CLASS (class)->close_request = hl_window_close_request;
+  widget->size_allocate = hl_window_size_allocate;
+  widget->realize = hl_window_realize;
+  gtk_widget_class_set_template_from_resource (widget, "/local/heatloom/Heatloom/hl-window.ui");
+  static const struct { const char *name; gssize offset; } children[] = {
+#define CHILD(field) { #field, G_STRUCT_OFFSET (HlWindow, field) }
+    CHILD (open_button), CHILD (menu_button), CHILD (undo_button), CHILD (redo_button), CHILD (export_button),
+    CHILD (title_label), CHILD (subtitle_label), CHILD (dirty_dot), CHILD (outer), CHILD (work), CHILD (shelf_bin),
+    CHILD (canvas_bin), CHILD (strip_bin), CHILD (nameplate_bin), CHILD (empty_hint), CHILD (zoom_label),
+    CHILD (diagram_area), CHILD (stack), CHILD (glance_bin),
+#undef CHILD
+  };
+  for (guint n = 0; n < G_N_ELEMENTS (children); n++)
+    gtk_widget_class_bind_template_child_full (widget, children[n].name, FALSE, children[n].offset);
+}
+
+HlWindow *
+hl_window_new (GtkApplication *application)
+{
+  return g_object_new (HL_TYPE_WINDOW, "application", application, NULL);
+}
+
+HlSession *
+hl_window_session (HlWindow *self)
+{
+  return self->session;
+}
