@@ -1,0 +1,384 @@
+/* The live state diagram: read-out under the pointer, a click selects the stream of a state.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "app/hl-diagram-view.h"
+#include "app/hl-appearance.h"
+#include "app/hl-pane.h"
+#include "draw/state-diagram.h"
+#include "plant/i18n.h"
+
+#include <math.h>
+
+#define HIT_RADIUS 12.0
+
+struct _HlDiagramView {
+  GtkWidget       parent_instance;
+  HlSession      *session;
+  GtkWidget      *readout, *empty;
+  HlStateDiagram *diagram;          /* of shown, at the size below; NULL: to be made */
+  HlSolution     *shown;
+  int             width, height;
+  GskRenderNode  *node;             /* the diagram drawn; NULL: to be drawn */
+  const HlTheme  *theme;            /* with which node was drawn */
+  int             selected;         /* stream ringed in node */
+  gboolean        has_pointer;
+  double          x, y;             /* of the pointer */
+};
+
+G_DEFINE_FINAL_TYPE (HlDiagramView, hl_diagram_view, GTK_TYPE_WIDGET)
+
+/* --- what is shown --- */
+
+static gboolean
+is_stale (HlDiagramView *self)
+{
+  return !hl_solution_is_solved (hl_session_solution (self->session)) && hl_session_last_good (self->session) != NULL;
+}
+
+/* The present solution; where it failed the last good one, drawn grey. */
+static HlSolution *
+solution_to_show (HlDiagramView *self)
+{
+  return is_stale (self) ? hl_session_last_good (self->session) : hl_session_solution (self->session);
+}
+
+static HlPlant *
+shown_plant (HlDiagramView *self)
+{
+  return hl_solution_plant (self->shown);
+}
+
+static gboolean
+has_states (const HlSolution *solution)
+{
+  HlStreamResult result;
+
+  for (guint n = 0; n < hl_plant_n_streams (hl_solution_plant (solution)); n++)
+    {
+      hl_solution_stream (solution, n, &result);
+      if (result.has_state)
+        return TRUE;
+    }
+  return FALSE;
+}
+
+static int
+selected_stream (HlDiagramView *self)
+{
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  return n == 1 ? hl_plant_stream_index (shown_plant (self), ids[0]) : -1;
+}
+
+static void
+forget_drawing (HlDiagramView *self)
+{
+  g_clear_pointer (&self->node, gsk_render_node_unref);
+}
+
+static void
+forget_diagram (HlDiagramView *self)
+{
+  g_clear_pointer (&self->diagram, hl_state_diagram_free);
+  forget_drawing (self);
+}
+
+static void
+describe (HlDiagramView *self)
+{
+  HlUnitSet units = hl_plant_units (shown_plant (self));
+  GString *text = g_string_new (NULL);
+  HlStreamResult result;
+
+  for (guint n = 0; n < hl_plant_n_streams (shown_plant (self)); n++)
+    {
+      hl_solution_stream (self->shown, n, &result);
+      if (!result.has_state)
+        continue;
+      g_autofree char *T = hl_units_format (result.state.T, HL_DIMENSION_TEMPERATURE, units);
+      g_autofree char *s = hl_units_format (result.state.s, HL_DIMENSION_ENTROPY, units);
+      g_string_append_printf (text, "%s%s: %s, %s", text->len > 0 ? "; " : "", hl_plant_stream (shown_plant (self), n)->id, T, s);
+    }
+  hl_pane_set_accessible (GTK_WIDGET (self), _("Temperature-entropy diagram"), text->str);
+  g_string_free (text, TRUE);
+}
+
+static void
+show_empty (HlDiagramView *self)
+{
+  gtk_widget_set_visible (self->empty, !has_states (self->shown));
+}
+
+/* --- the read-out --- */
+
+/* Beside a state: its stream in full.  Elsewhere: entropy and temperature under the pointer. */
+static char *
+readout_text (HlDiagramView *self)
+{
+  HlUnitSet units = hl_plant_units (shown_plant (self));
+  double s, T;
+  int stream = hl_state_diagram_stream_at (self->diagram, self->x, self->y, HIT_RADIUS);
+
+  if (stream >= 0)
+    {
+      HlStreamResult result;
+      hl_solution_stream (self->shown, (guint) stream, &result);
+      gboolean is_wet = result.state.phase == HL_PHASE_TWO_PHASE;
+      g_autofree char *p = hl_units_format (result.state.p, HL_DIMENSION_PRESSURE, units);
+      g_autofree char *t = hl_units_format (result.state.T, HL_DIMENSION_TEMPERATURE, units);
+      g_autofree char *h = hl_units_format (result.state.h, HL_DIMENSION_ENTHALPY, units);
+      g_autofree char *x = is_wet ? hl_units_format_number (result.state.x, HL_DIMENSION_RATIO, units) : NULL;
+      g_autofree char *wet = is_wet ? g_strdup_printf (" · x %s", x) : g_strdup ("");
+      return g_strdup_printf ("%s   %s · %s%s · %s", hl_plant_stream (shown_plant (self), (guint) stream)->id, p, t, wet, h);
+    }
+  if (!hl_state_diagram_to_state (self->diagram, self->x, self->y, &s, &T))
+    return NULL;
+  g_autofree char *t = hl_units_format (T, HL_DIMENSION_TEMPERATURE, units);
+  g_autofree char *entropy = hl_units_format (s, HL_DIMENSION_ENTROPY, units);
+  return g_strdup_printf ("%s · %s", t, entropy);
+}
+
+static void
+update_readout (HlDiagramView *self)
+{
+  g_autofree char *text = self->has_pointer && self->diagram != NULL ? readout_text (self) : NULL;
+
+  gtk_label_set_text (GTK_LABEL (self->readout), text != NULL ? text : "");
+  gtk_widget_set_visible (self->readout, text != NULL);
+  gtk_widget_set_cursor_from_name (GTK_WIDGET (self), self->diagram != NULL && text != NULL
+                                   && hl_state_diagram_stream_at (self->diagram, self->x, self->y, HIT_RADIUS) >= 0 ? "pointer" : NULL);
+  gtk_widget_queue_draw (GTK_WIDGET (self));
+}
+
+/* --- drawing --- */
+
+static void
+make_diagram (HlDiagramView *self)
+{
+  int width = gtk_widget_get_width (GTK_WIDGET (self)), height = gtk_widget_get_height (GTK_WIDGET (self));
+
+  if (self->diagram != NULL && width == self->width && height == self->height)
+    return;
+  forget_diagram (self);
+  self->width = width;
+  self->height = height;
+  self->diagram = hl_state_diagram_new (self->shown, hl_plant_units (shown_plant (self)), width, height);
+}
+
+/* The same node as long as nothing changes: only the crosshair is then drawn anew. */
+static void
+draw_diagram (HlDiagramView *self)
+{
+  const HlTheme *theme = hl_appearance_theme ();
+  int selected = selected_stream (self);
+
+  if (self->node != NULL && self->theme == theme && self->selected == selected)
+    return;
+  forget_drawing (self);
+  self->theme = theme;
+  self->selected = selected;
+  self->node = gsk_cairo_node_new (&GRAPHENE_RECT_INIT (0, 0, self->width, self->height));
+  cairo_t *cr = gsk_cairo_node_get_draw_context (self->node);
+  hl_state_diagram_draw (self->diagram, cr, theme, is_stale (self), selected);
+  cairo_destroy (cr);
+}
+
+static void
+draw_crosshair (HlDiagramView *self, GtkSnapshot *snapshot)
+{
+  const HlColour *quiet = &hl_appearance_theme ()->quiet;
+  GdkRGBA colour = { (float) quiet->r, (float) quiet->g, (float) quiet->b, 0.45f };
+  double s, T;
+
+  if (!self->has_pointer || !hl_state_diagram_to_state (self->diagram, self->x, self->y, &s, &T))
+    return;
+  gtk_snapshot_append_color (snapshot, &colour, &GRAPHENE_RECT_INIT (floor (self->x), 0, 1, self->height));
+  gtk_snapshot_append_color (snapshot, &colour, &GRAPHENE_RECT_INIT (0, floor (self->y), self->width, 1));
+}
+
+static void
+hl_diagram_view_snapshot (GtkWidget *widget, GtkSnapshot *snapshot)
+{
+  HlDiagramView *self = HL_DIAGRAM_VIEW (widget);
+
+  if (gtk_widget_get_width (widget) < 40 || gtk_widget_get_height (widget) < 40)
+    return;
+  if (!gtk_widget_get_visible (self->empty))
+    {
+      make_diagram (self);
+      draw_diagram (self);
+      gtk_snapshot_append_node (snapshot, self->node);
+      draw_crosshair (self, snapshot);
+    }
+  for (GtkWidget *child = gtk_widget_get_first_child (widget); child != NULL; child = gtk_widget_get_next_sibling (child))
+    gtk_widget_snapshot_child (widget, child, snapshot);
+}
+
+/* --- changes --- */
+
+static void
+changed_cb (HlDiagramView *self)
+{
+  HlSolution *solution = solution_to_show (self);
+
+  if (solution != self->shown)
+    {
+      hl_solution_ref (solution);
+      g_clear_pointer (&self->shown, hl_solution_unref);
+      self->shown = solution;
+      forget_diagram (self);
+      show_empty (self);
+      describe (self);
+    }
+  else
+    forget_drawing (self);            /* it may have become stale */
+  if (self->has_pointer && gtk_widget_get_mapped (GTK_WIDGET (self)) && !gtk_widget_get_visible (self->empty))
+    {
+      make_diagram (self);
+      update_readout (self);
+    }
+  gtk_widget_queue_draw (GTK_WIDGET (self));
+}
+
+static void
+motion_cb (GtkEventControllerMotion *controller, double x, double y, HlDiagramView *self)
+{
+  self->has_pointer = TRUE;
+  self->x = x;
+  self->y = y;
+  update_readout (self);
+}
+
+static void
+leave_cb (GtkEventControllerMotion *controller, HlDiagramView *self)
+{
+  self->has_pointer = FALSE;
+  update_readout (self);
+}
+
+static void
+pressed_cb (GtkGestureClick *gesture, int n_press, double x, double y, HlDiagramView *self)
+{
+  gtk_widget_grab_focus (GTK_WIDGET (self));
+  if (self->diagram == NULL)
+    return;
+  int stream = hl_state_diagram_stream_at (self->diagram, x, y, HIT_RADIUS);
+  hl_session_select (self->session, stream >= 0 ? hl_plant_stream (shown_plant (self), (guint) stream)->id : NULL, FALSE);
+}
+
+/* Left and right step through the states in the order of the streams. */
+static gboolean
+step_cb (GtkWidget *widget, GVariant *args, gpointer data)
+{
+  HlDiagramView *self = HL_DIAGRAM_VIEW (widget);
+  const HlPlant *plant = shown_plant (self);
+  int n = (int) hl_plant_n_streams (plant), step = g_variant_get_int32 (args), at = selected_stream (self);
+
+  for (int tried = 0; tried < n; tried++)
+    {
+      HlStreamResult result;
+      at = at < 0 && step < 0 ? n - 1 : (at + step + n) % n;
+      hl_solution_stream (self->shown, (guint) at, &result);
+      if (!result.has_state)
+        continue;
+      hl_session_select (self->session, hl_plant_stream (plant, (guint) at)->id, FALSE);
+      break;
+    }
+  return TRUE;
+}
+
+/* --- life --- */
+
+static void
+hl_diagram_view_measure (GtkWidget *widget, GtkOrientation orientation, int for_size, int *minimum, int *natural, int *min_base, int *nat_base)
+{
+  *minimum = orientation == GTK_ORIENTATION_HORIZONTAL ? 260 : 170;
+  *natural = orientation == GTK_ORIENTATION_HORIZONTAL ? 560 : 280;
+}
+
+static void
+place (GtkWidget *child, int x, int y)
+{
+  GtkRequisition size;
+
+  if (!gtk_widget_should_layout (child))
+    return;
+  gtk_widget_get_preferred_size (child, NULL, &size);
+  gtk_widget_size_allocate (child, &(GtkAllocation) { x, y, size.width, size.height }, -1);
+}
+
+static void
+hl_diagram_view_allocate (GtkWidget *widget, int width, int height, int baseline)
+{
+  HlDiagramView *self = HL_DIAGRAM_VIEW (widget);
+  GtkRequisition size;
+
+  gtk_widget_get_preferred_size (self->readout, NULL, &size);
+  place (self->readout, MAX (0, width - size.width - 8), 6);
+  gtk_widget_get_preferred_size (self->empty, NULL, &size);
+  place (self->empty, MAX (0, (width - size.width) / 2), MAX (0, (height - size.height) / 2));
+}
+
+static void
+hl_diagram_view_dispose (GObject *object)
+{
+  HlDiagramView *self = HL_DIAGRAM_VIEW (object);
+  GtkWidget *child;
+
+  if (self->session != NULL)
+    g_signal_handlers_disconnect_by_data (self->session, self);
+  while ((child = gtk_widget_get_first_child (GTK_WIDGET (self))) != NULL)
+    gtk_widget_unparent (child);
+  forget_diagram (self);
+  g_clear_pointer (&self->shown, hl_solution_unref);
+  g_clear_object (&self->session);
+  G_OBJECT_CLASS (hl_diagram_view_parent_class)->dispose (object);
+}
+
+static void
+hl_diagram_view_class_init (HlDiagramViewClass *klass)
+{
+  GtkWidgetClass *widget_class = GTK_WIDGET_CLASS (klass);
+  G_OBJECT_CLASS (klass)->dispose = hl_diagram_view_dispose;
+  widget_class->snapshot = hl_diagram_view_snapshot;
+  widget_class->measure = hl_diagram_view_measure;
+  widget_class->size_allocate = hl_diagram_view_allocate;
+  gtk_widget_class_add_binding (widget_class, GDK_KEY_Right, 0, step_cb, "i", 1);
+  gtk_widget_class_add_binding (widget_class, GDK_KEY_Left, 0, step_cb, "i", -1);
+  gtk_widget_class_set_css_name (widget_class, "diagramview");
+  gtk_widget_class_set_accessible_role (widget_class, GTK_ACCESSIBLE_ROLE_IMG);
+}
+
+static void
+hl_diagram_view_init (HlDiagramView *self)
+{
+  GtkEventController *motion = gtk_event_controller_motion_new ();
+  GtkGesture *click = gtk_gesture_click_new ();
+
+  gtk_widget_set_focusable (GTK_WIDGET (self), TRUE);
+  gtk_widget_set_overflow (GTK_WIDGET (self), GTK_OVERFLOW_HIDDEN);
+  self->selected = -1;
+  self->readout = hl_pane_label ("", "readout");
+  gtk_widget_set_can_target (self->readout, FALSE);
+  gtk_widget_set_visible (self->readout, FALSE);
+  gtk_widget_set_parent (self->readout, GTK_WIDGET (self));
+  self->empty = hl_pane_label (_("States appear here as soon as the plant solves."), "quiet");
+  gtk_widget_set_parent (self->empty, GTK_WIDGET (self));
+  g_signal_connect (motion, "enter", G_CALLBACK (motion_cb), self);
+  g_signal_connect (motion, "motion", G_CALLBACK (motion_cb), self);
+  g_signal_connect (motion, "leave", G_CALLBACK (leave_cb), self);
+  gtk_widget_add_controller (GTK_WIDGET (self), motion);
+  g_signal_connect (click, "pressed", G_CALLBACK (pressed_cb), self);
+  gtk_widget_add_controller (GTK_WIDGET (self), GTK_EVENT_CONTROLLER (click));
+}
+
+GtkWidget *
+hl_diagram_view_new (HlSession *session)
+{
+  HlDiagramView *self = g_object_new (HL_TYPE_DIAGRAM_VIEW, NULL);
+
+  self->session = g_object_ref (session);
+  g_signal_connect_swapped (session, "changed", G_CALLBACK (changed_cb), self);
+  g_signal_connect_swapped (session, "selection-changed", G_CALLBACK (gtk_widget_queue_draw), self);
+  changed_cb (self);
+  return GTK_WIDGET (self);
+}

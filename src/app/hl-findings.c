@@ -1,0 +1,234 @@
+/* The list of findings with their mends as buttons.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "app/hl-findings.h"
+#include "app/hl-pane.h"
+#include "plant/i18n.h"
+
+struct _HlFindings {
+  GtkWidget  parent_instance;
+  HlSession *session;
+  GtkWidget *scroller, *list, *empty, *error;
+  char      *shown;            /* what stands in the list, to leave it alone while nothing changes */
+};
+
+G_DEFINE_FINAL_TYPE (HlFindings, hl_findings, GTK_TYPE_WIDGET)
+
+/* A mend is looked up again when its button is pressed: the solution may be another one by then. */
+typedef struct { HlFindings *self; guint finding, mend; } Press;
+
+static void
+free_press (gpointer data, GClosure *closure)
+{
+  g_free (data);
+}
+
+static void
+show_error (HlFindings *self, const char *text)
+{
+  gtk_label_set_text (GTK_LABEL (self->error), text != NULL ? text : "");
+  gtk_widget_set_visible (self->error, text != NULL);
+}
+
+/* The popover that shows the list closes when the mend leads elsewhere. */
+static void
+close_popover (HlFindings *self)
+{
+  GtkWidget *popover = gtk_widget_get_ancestor (GTK_WIDGET (self), GTK_TYPE_POPOVER);
+  if (popover != NULL)
+    gtk_popover_popdown (GTK_POPOVER (popover));
+}
+
+static void
+mend_clicked_cb (GtkButton *button, gpointer data)
+{
+  Press *press = data;
+  HlFindings *self = press->self;
+  g_autoptr (HlSolution) solution = hl_solution_ref (hl_session_solution (self->session));
+  g_autoptr (GError) error = NULL;
+
+  if (press->finding >= hl_solution_n_findings (solution))
+    return;
+  const HlFinding *finding = hl_solution_finding (solution, press->finding);
+  if (press->mend >= finding->n_mends)
+    return;
+  const HlMend *mend = &finding->mends[press->mend];
+  gboolean is_jump = mend->kind == HL_MEND_EDIT || mend->kind == HL_MEND_CONNECT;
+  g_object_ref (self);
+  if (is_jump)
+    close_popover (self);
+  show_error (self, hl_session_mend (self->session, mend, &error) ? NULL : error->message);
+  g_object_unref (self);
+}
+
+static void
+row_activated_cb (GtkListBox *list, GtkListBoxRow *row, HlFindings *self)
+{
+  const HlSolution *solution = hl_session_solution (self->session);
+  guint n = (guint) gtk_list_box_row_get_index (row);
+
+  if (n >= hl_solution_n_findings (solution))
+    return;
+  HlAddress at = hl_solution_finding (solution, n)->at;
+  close_popover (self);
+  if (at.key != NULL && *at.key != '\0')
+    hl_session_go_to (self->session, &at);
+  else
+    hl_session_select (self->session, at.owner == HL_OWNER_PLANT ? NULL : at.id, FALSE);
+}
+
+static GtkWidget *
+mend_buttons (HlFindings *self, const HlFinding *finding, guint n)
+{
+  GtkWidget *flow = gtk_flow_box_new ();
+
+  gtk_flow_box_set_selection_mode (GTK_FLOW_BOX (flow), GTK_SELECTION_NONE);
+  gtk_flow_box_set_column_spacing (GTK_FLOW_BOX (flow), 6);
+  gtk_flow_box_set_row_spacing (GTK_FLOW_BOX (flow), 4);
+  gtk_flow_box_set_max_children_per_line (GTK_FLOW_BOX (flow), 4);
+  gtk_widget_add_css_class (flow, "mends");
+  for (guint m = 0; m < finding->n_mends; m++)
+    {
+      Press *press = g_new (Press, 1);
+      GtkWidget *label = gtk_label_new (finding->mends[m].text), *button = gtk_button_new ();
+      *press = (Press) { self, n, m };
+      gtk_label_set_ellipsize (GTK_LABEL (label), PANGO_ELLIPSIZE_END);
+      gtk_button_set_child (GTK_BUTTON (button), label);
+      gtk_widget_set_tooltip_text (button, finding->mends[m].text);
+      gtk_widget_set_halign (button, GTK_ALIGN_START);
+      gtk_widget_add_css_class (button, "mend");
+      hl_pane_set_accessible (button, finding->mends[m].text, NULL);
+      g_signal_connect_data (button, "clicked", G_CALLBACK (mend_clicked_cb), press, free_press, 0);
+      gtk_flow_box_insert (GTK_FLOW_BOX (flow), button, -1);
+      gtk_widget_set_focusable (gtk_widget_get_parent (button), FALSE);
+    }
+  return flow;
+}
+
+static GtkWidget *
+finding_row (HlFindings *self, const HlFinding *finding, guint n)
+{
+  GtkWidget *line = gtk_box_new (GTK_ORIENTATION_HORIZONTAL, 10), *words = gtk_box_new (GTK_ORIENTATION_VERTICAL, 4);
+  GtkWidget *mark = hl_grade_mark_new (hl_grade_mark_of (finding->grade)), *grade = hl_pane_label (hl_grade_name (finding->grade), "grade");
+  GtkWidget *text = hl_pane_label (finding->text, NULL), *row = gtk_list_box_row_new ();
+
+  gtk_widget_add_css_class (grade, hl_grade_id (finding->grade));
+  gtk_label_set_width_chars (GTK_LABEL (grade), 8);
+  gtk_widget_set_valign (mark, GTK_ALIGN_START);
+  gtk_widget_set_valign (grade, GTK_ALIGN_START);
+  gtk_label_set_wrap (GTK_LABEL (text), TRUE);
+  gtk_label_set_wrap_mode (GTK_LABEL (text), PANGO_WRAP_WORD_CHAR);
+  gtk_widget_set_hexpand (words, TRUE);
+  gtk_box_append (GTK_BOX (words), text);
+  if (finding->n_mends > 0)
+    gtk_box_append (GTK_BOX (words), mend_buttons (self, finding, n));
+  gtk_box_append (GTK_BOX (line), mark);
+  gtk_box_append (GTK_BOX (line), grade);
+  gtk_box_append (GTK_BOX (line), words);
+  gtk_list_box_row_set_child (GTK_LIST_BOX_ROW (row), line);
+  hl_pane_set_accessible (row, hl_grade_name (finding->grade), finding->text);
+  return row;
+}
+
+/* Everything that the list shows as one text. */
+static char *
+fingerprint (const HlSolution *solution)
+{
+  GString *text = g_string_new (NULL);
+
+  for (guint n = 0; n < hl_solution_n_findings (solution); n++)
+    {
+      const HlFinding *finding = hl_solution_finding (solution, n);
+      g_string_append_printf (text, "%d %s\n", (int) finding->grade, finding->text);
+      for (guint m = 0; m < finding->n_mends; m++)
+        g_string_append_printf (text, "  %s\n", finding->mends[m].text);
+    }
+  return g_string_free (text, FALSE);
+}
+
+static void
+update (HlFindings *self)
+{
+  const HlSolution *solution = hl_session_solution (self->session);
+  guint n_findings = hl_solution_n_findings (solution);
+  char *now = fingerprint (solution);
+  GtkListBoxRow *row;
+
+  if (g_strcmp0 (now, self->shown) == 0)
+    {
+      g_free (now);
+      return;
+    }
+  g_free (self->shown);
+  self->shown = now;
+  show_error (self, NULL);
+  while ((row = gtk_list_box_get_row_at_index (GTK_LIST_BOX (self->list), 0)) != NULL)
+    gtk_list_box_remove (GTK_LIST_BOX (self->list), GTK_WIDGET (row));
+  for (guint n = 0; n < n_findings; n++)
+    gtk_list_box_append (GTK_LIST_BOX (self->list), finding_row (self, hl_solution_finding (solution, n), n));
+  gtk_widget_set_visible (self->scroller, n_findings > 0);
+  gtk_widget_set_visible (self->empty, n_findings == 0);
+}
+
+static void
+hl_findings_dispose (GObject *object)
+{
+  HlFindings *self = HL_FINDINGS (object);
+  GtkWidget *child;
+
+  if (self->session != NULL)
+    g_signal_handlers_disconnect_by_data (self->session, self);
+  while ((child = gtk_widget_get_first_child (GTK_WIDGET (self))) != NULL)
+    gtk_widget_unparent (child);
+  g_clear_object (&self->session);
+  g_clear_pointer (&self->shown, g_free);
+  G_OBJECT_CLASS (hl_findings_parent_class)->dispose (object);
+}
+
+static void
+hl_findings_class_init (HlFindingsClass *klass)
+{
+  GtkWidgetClass *widget_class = GTK_WIDGET_CLASS (klass);
+  G_OBJECT_CLASS (klass)->dispose = hl_findings_dispose;
+  gtk_widget_class_set_layout_manager_type (widget_class, GTK_TYPE_BOX_LAYOUT);
+  gtk_widget_class_set_css_name (widget_class, "findings");
+}
+
+static void
+hl_findings_init (HlFindings *self)
+{
+  gtk_orientable_set_orientation (GTK_ORIENTABLE (gtk_widget_get_layout_manager (GTK_WIDGET (self))), GTK_ORIENTATION_VERTICAL);
+  self->error = hl_pane_label ("", "note");
+  gtk_widget_add_css_class (self->error, "error");
+  gtk_label_set_wrap (GTK_LABEL (self->error), TRUE);
+  gtk_widget_set_visible (self->error, FALSE);
+  gtk_widget_set_parent (self->error, GTK_WIDGET (self));
+
+  self->list = gtk_list_box_new ();
+  gtk_list_box_set_selection_mode (GTK_LIST_BOX (self->list), GTK_SELECTION_NONE);
+  gtk_list_box_set_activate_on_single_click (GTK_LIST_BOX (self->list), TRUE);
+  g_signal_connect (self->list, "row-activated", G_CALLBACK (row_activated_cb), self);
+  hl_pane_set_accessible (self->list, _("Findings"), _("Return goes to the place that a finding is about"));
+  self->scroller = gtk_scrolled_window_new ();
+  gtk_scrolled_window_set_policy (GTK_SCROLLED_WINDOW (self->scroller), GTK_POLICY_NEVER, GTK_POLICY_AUTOMATIC);
+  gtk_scrolled_window_set_child (GTK_SCROLLED_WINDOW (self->scroller), self->list);
+  gtk_scrolled_window_set_propagate_natural_height (GTK_SCROLLED_WINDOW (self->scroller), TRUE);
+  gtk_widget_set_vexpand (self->scroller, TRUE);
+  gtk_widget_set_parent (self->scroller, GTK_WIDGET (self));
+
+  self->empty = gtk_box_new (GTK_ORIENTATION_HORIZONTAL, 8);
+  gtk_widget_add_css_class (self->empty, "empty");
+  gtk_box_append (GTK_BOX (self->empty), hl_grade_mark_new (HL_SHAPE_GOOD));
+  gtk_box_append (GTK_BOX (self->empty), hl_pane_label (_("Nothing to remark."), "quiet"));
+  gtk_widget_set_parent (self->empty, GTK_WIDGET (self));
+}
+
+GtkWidget *
+hl_findings_new (HlSession *session)
+{
+  HlFindings *self = g_object_new (HL_TYPE_FINDINGS, NULL);
+
+  self->session = g_object_ref (session);
+  g_signal_connect_swapped (session, "changed", G_CALLBACK (update), self);
+  update (self);
+  return GTK_WIDGET (self);
+}

@@ -1,0 +1,42 @@
+/* Parts of a quantity's row that only its own files need.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include "app/hl-quantity-row.h"
+#include "app/hl-pane.h"
+G_BEGIN_DECLS
+
+struct _HlQuantityRow {
+  GtkWidget      parent_instance;
+  HlSession     *session;
+  HlAddress      address;
+  char          *name;
+  const HlQuantityKind *kind;
+  int            number;         /* of a repeated quantity, from 1; else 0 */
+
+  GtkWidget     *line;           /* name, entry, unit, origin */
+  GtkWidget     *name_button, *name_label, *entry, *unit, *origin_button, *pill;
+  GtkWidget     *note;           /* error or hint under the line */
+  GtkWidget     *explanation;    /* box */
+  GtkWidget     *explain_lines, *explain_help;
+  GSimpleActionGroup *actions;
+  GSimpleAction *origin_action;
+
+  char          *shown;          /* the text last put into the entry: anything else has been typed */
+  gboolean       is_focused;
+  gboolean       is_retired;     /* about to be removed: commits nothing any more */
+};
+
+/* Where the value lives: the address itself, or the stream's or other port's address that names the same state. */
+HlAddress      hl_quantity_row_carrier (HlQuantityRow *self);
+const HlValue *hl_quantity_row_value   (HlQuantityRow *self);                /* NULL: found */
+gboolean       hl_quantity_row_number  (HlQuantityRow *self, double *si);    /* as given or solved; FALSE unknown */
+void           hl_quantity_row_set_note (HlQuantityRow *self, const char *text, gboolean is_error);   /* NULL: none */
+void           hl_quantity_row_start_typing (HlQuantityRow *self, const char *text);
+/* hl-quantity-row-origin.c */
+void           hl_quantity_row_add_origin    (HlQuantityRow *self);
+void           hl_quantity_row_update_origin (HlQuantityRow *self);
+/* hl-quantity-row-explain.c */
+void           hl_quantity_row_add_explanation    (HlQuantityRow *self);
+void           hl_quantity_row_update_explanation (HlQuantityRow *self);
+char          *hl_quantity_row_help               (HlQuantityRow *self, const char *line_break);
+G_END_DECLS
