@@ -109,6 +109,28 @@ row_state (const HlFluid *fluid, const HlCsvReader *reader, const TableHead *hea
   return hl_state_from_pair (fluid, head->keys[0], values[0], head->keys[1], values[1], state, message);
 }
 
+/* The row as it stands; where it has too few or too many columns, as many as the header, so that what is appended
+ * stands in its place. */
+static void
+append_row (GString *text, const HlCsvReader *reader, guint n_columns)
+{
+  guint n_fields = hl_csv_reader_n_fields (reader);
+  if (n_fields == n_columns)
+    {
+      gsize length;
+      const char *raw = hl_csv_reader_raw (reader, &length);
+      g_string_append_len (text, raw, (gssize) length);
+      return;
+    }
+  for (guint i = 0; i < n_columns; i++)
+    {
+      if (i > 0)
+        g_string_append_c (text, ',');
+      if (i < n_fields)
+        hl_csv_append_field (text, hl_csv_reader_field (reader, i));
+    }
+}
+
 static gboolean
 flush_text (GString *text, FILE *out, GError **error)
 {
@@ -134,9 +156,7 @@ hl_state_table (const HlFluid *fluid, FILE *in, FILE *out, gulong *n_rows, gulon
   if (outcome != HL_CSV_RECORD || !read_head (reader, &head, error))
     return FALSE;
 
-  gsize length;
-  const char *raw = hl_csv_reader_raw (reader, &length);
-  g_string_append_len (text, raw, (gssize) length);
+  append_row (text, reader, head.n_columns);
   for (guint i = 0; i < G_N_ELEMENTS (out_names); i++)
     g_string_append_printf (text, ",%s", out_names[i]);
   g_string_append_c (text, '\n');
@@ -145,8 +165,7 @@ hl_state_table (const HlFluid *fluid, FILE *in, FILE *out, gulong *n_rows, gulon
     {
       HlState state;
       g_autofree char *message = NULL;
-      raw = hl_csv_reader_raw (reader, &length);
-      g_string_append_len (text, raw, (gssize) length);
+      append_row (text, reader, head.n_columns);
       ++*n_rows;
       if (row_state (fluid, reader, &head, &state, &message))
         append_state (text, &state);
