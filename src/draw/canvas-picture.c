@@ -144,6 +144,19 @@ draw_label_words (cairo_t *cr, const HlTheme *theme, const HlStreamPlace *place,
     }
 }
 
+/* A hairline with a dot on the stream's line. */
+static void
+draw_leader (cairo_t *cr, const HlTheme *theme, const HlStreamPlace *place, const HlColour *colour)
+{
+  hl_set_colour (cr, &theme->quiet);
+  cairo_set_line_width (cr, 0.8);
+  hl_draw_polyline (cr, place->leader, 2);
+  cairo_stroke (cr);
+  hl_set_colour (cr, colour);
+  cairo_arc (cr, place->leader[0].x, place->leader[0].y, 2.6, 0.0, 2.0 * G_PI);
+  cairo_fill (cr);
+}
+
 void
 hl_draw_stream_label (cairo_t *cr, const HlTheme *theme, const HlStreamPlace *place, const HlStream *stream, const HlStreamResult *result, gboolean is_stale, gboolean is_selected)
 {
@@ -155,6 +168,8 @@ hl_draw_stream_label (cairo_t *cr, const HlTheme *theme, const HlStreamPlace *pl
   cairo_save (cr);
   cairo_set_dash (cr, NULL, 0, 0.0);
   cairo_new_path (cr);
+  if (place->has_leader)
+    draw_leader (cr, theme, place, colour);
   capsule (cr, box);
   hl_set_colour (cr, &theme->card);
   cairo_fill_preserve (cr);

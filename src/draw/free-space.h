@@ -7,8 +7,8 @@ G_BEGIN_DECLS
 /* Sizes of labels and titles, shared by whoever measures and whoever draws. */
 #define HL_LABEL_HEIGHT      28.0
 #define HL_LABEL_RING        9.0      /* radius of the numbered ring */
-#define HL_LABEL_TEXT_LEFT   36.0     /* where the words begin */
-#define HL_LABEL_TEXT_RIGHT  13.0     /* room after them */
+#define HL_LABEL_TEXT_LEFT   35.0     /* where the words begin */
+#define HL_LABEL_TEXT_RIGHT  11.0     /* room after them */
 #define HL_LABEL_FLOW_SIZE   10.5
 #define HL_LABEL_STATE_SIZE  9.5
 #define HL_TITLE_SIZE        11.0

@@ -9,6 +9,7 @@
 #define PRICE_LINE     90.0      /* a grid point of a foreign line */
 #define PRICE_OWN_LINE 14.0      /* a grid point of the own line that is not simply passed through */
 #define KEPT           25.0      /* what a label gains by staying where it was */
+#define TROUBLE        62.0      /* dearer: nowhere at its line without covering something; about the cheapest place with a leader */
 #define SYMBOL_MARGIN  4.0
 #define LINE_MARGIN    4.0
 #define WORDS_MARGIN   3.0
@@ -37,13 +38,15 @@ chart (const HlLayout *layout)
 }
 
 /* Titles. */
-typedef struct { int x, y; double price; } TitleSpot;   /* side of the symbol: -1, 0, 1 outside; -2, 2 flush with its edge or beside its axis */
+typedef struct { int x, y; double price, off; } TitleSpot;   /* @off: pixels further out */
 
 /* x = 1 right, -1 left of the box: y -1 top, 0 middle, 1 bottom.  x = 0 above or below by y: centred;
  * x = 2, -2: above or below, beginning or ending at the axis, clear of a line that leaves there. */
 static const TitleSpot title_spots[] = {
   { 1, 0, 0 }, { 1, -1, 2 }, { 1, 1, 3 }, { 0, -1, 4 }, { 0, 1, 4 }, { -1, 0, 6 }, { -1, -1, 7 }, { -1, 1, 8 },
   { 2, -1, 5 }, { 2, 1, 6 }, { -2, -1, 8 }, { -2, 1, 9 },
+  { 0, -1, 16, 14 }, { 0, 1, 16, 14 }, { 2, -1, 17, 14 }, { 2, 1, 18, 14 }, { -2, -1, 19, 14 }, { -2, 1, 20, 14 },
+  { 0, -1, 26, 28 }, { 0, 1, 26, 28 }, { 2, -1, 27, 28 }, { 2, 1, 28, 28 }, { 1, 0, 22, 14 }, { -1, 0, 24, 14 },
 };
 
 static HlBox
@@ -58,13 +61,13 @@ title_box (const HlComponent *component, const TitleSpot *spot, const HlBox *tit
   if (spot->x == 1 || spot->x == -1)
     {
       *align = -spot->x;
-      box.x = spot->x > 0 ? x + half_width + GAP : x - half_width - GAP - box.width;
+      box.x = spot->x > 0 ? x + half_width + GAP + spot->off : x - half_width - GAP - spot->off - box.width;
       box.y = spot->y == 0 ? y - box.height / 2.0 : spot->y < 0 ? y - half_height - 2.0 : y + half_height + 2.0 - box.height;
       return box;
     }
   *align = spot->x == 0 ? 0 : spot->x > 0 ? -1 : 1;
   box.x = spot->x == 0 ? x - box.width / 2.0 : spot->x > 0 ? x + GAP : x - GAP - box.width;
-  box.y = spot->y < 0 ? y - half_height - GAP + 1.0 - box.height : y + half_height + GAP - 1.0;
+  box.y = spot->y < 0 ? y - half_height - GAP + 1.0 - spot->off - box.height : y + half_height + GAP - 1.0 + spot->off;
   return box;
 }
 
@@ -102,34 +105,41 @@ typedef struct {
   HlBox              size;
   HlBox              best;
   double             best_price;
+  gboolean           has_leader;
+  HlPoint            leader[2];
   gboolean           has_kept;
   HlBox              kept;         /* its place before */
 } LabelSearch;
 
-/* @is_on: the label interrupts its line, which then runs through it once across. */
+typedef enum { ON_ACROSS, ON_DOWN, BESIDE } LabelFit;    /* ON: the label interrupts its line, which runs through it once */
+
 static void
-try_label (LabelSearch *search, double x, double y, double price, gboolean is_on, gboolean is_across)
+try_label (LabelSearch *search, double x, double y, double price, LabelFit fit, const HlPoint *leader)
 {
   HlBox box = { x, y, search->size.width, search->size.height };
   int own, others;
+  if (search->has_kept && fabs (x - search->kept.x) < 5.0 && fabs (y - search->kept.y) < 5.0)
+    price -= KEPT;
   if (price >= search->best_price)
     return;
-  others = hl_free_space_boxes (search->space, &box, SYMBOL_MARGIN);
-  price += PRICE_SYMBOL * others;
+  price += PRICE_SYMBOL * hl_free_space_boxes (search->space, &box, SYMBOL_MARGIN);
   own = hl_count_line_points (search->way, search->n_way, &box, LINE_MARGIN);
   others = hl_free_space_lines (search->space, &box, LINE_MARGIN) - own;
-  if (is_on)    /* what the label must cover of its own line is no fault */
-    own -= (int) floor (((is_across ? box.width : box.height) + 2.0 * LINE_MARGIN) / HL_UNIT);
-  price += PRICE_LINE * others + PRICE_OWN_LINE * MAX (own, 0);
+  if (fit != BESIDE)    /* what the label must cover of its own line is no fault */
+    own -= (int) floor (((fit == ON_ACROSS ? box.width : box.height) + 2.0 * LINE_MARGIN) / HL_UNIT) + 1;
+  price += PRICE_LINE * MAX (others, 0) + PRICE_OWN_LINE * MAX (own, 0);
   if (price >= search->best_price)
     return;
   price += PRICE_WORDS * hl_free_space_taken (search->space, &box, WORDS_MARGIN);
-  if (search->has_kept && fabs (x - search->kept.x) < 5.0 && fabs (y - search->kept.y) < 5.0)
-    price -= KEPT;
-  if (price < search->best_price)
+  if (price >= search->best_price)
+    return;
+  search->best_price = price;
+  search->best = box;
+  search->has_leader = leader != NULL;
+  if (leader != NULL)
     {
-      search->best_price = price;
-      search->best = box;
+      search->leader[0] = leader[0];
+      search->leader[1] = leader[1];
     }
 }
 
@@ -151,29 +161,134 @@ try_segment (LabelSearch *search, guint n)
       double off = k * HL_UNIT, cx = is_across ? x + off : x, cy = is_across ? y : y + off;
       double price = base + 0.09 * fabs (off);
       if (fabs (off) <= room_on)
-        try_label (search, cx - width / 2.0, cy - height / 2.0, price, TRUE, is_across);
+        try_label (search, cx - width / 2.0, cy - height / 2.0, price, is_across ? ON_ACROSS : ON_DOWN, NULL);
       if (fabs (off) > length / 2.0 + along / 4.0)
         continue;
       price += 14.0;
       if (is_across)
         {
-          try_label (search, cx - width / 2.0, cy - GAP - height, price, FALSE, TRUE);
-          try_label (search, cx - width / 2.0, cy + GAP, price + 2.0, FALSE, TRUE);
+          try_label (search, cx - width / 2.0, cy - GAP - height, price, BESIDE, NULL);
+          try_label (search, cx - width / 2.0, cy + GAP, price + 2.0, BESIDE, NULL);
         }
       else
         {
-          try_label (search, cx + GAP + 1.0, cy - height / 2.0, price, FALSE, FALSE);
-          try_label (search, cx - GAP - 1.0 - width, cy - height / 2.0, price + 2.0, FALSE, FALSE);
+          try_label (search, cx + GAP + 1.0, cy - height / 2.0, price, BESIDE, NULL);
+          try_label (search, cx - GAP - 1.0 - width, cy - height / 2.0, price + 2.0, BESIDE, NULL);
         }
     }
 }
 
+/* What a leader runs over on its way. */
+static double
+price_of_leader (const LabelSearch *search, const HlPoint *leader)
+{
+  HlBox box = { MIN (leader[0].x, leader[1].x), MIN (leader[0].y, leader[1].y),
+                fabs (leader[0].x - leader[1].x), fabs (leader[0].y - leader[1].y) };
+  int lines = hl_free_space_lines (search->space, &box, 1.0) - hl_count_line_points (search->way, search->n_way, &box, 1.0);
+  return PRICE_SYMBOL * hl_free_space_boxes (search->space, &box, 2.0) + 30.0 * MAX (lines, 0)
+    + PRICE_WORDS * hl_free_space_taken (search->space, &box, 2.0);
+}
+
+/* A label at the end of a leader that leaves (@x, @y) towards (@dx, @dy); @shift moves it sideways. */
 static void
+try_led (LabelSearch *search, double x, double y, int dx, int dy, double distance, double shift, double base)
+{
+  double width = search->size.width, height = search->size.height;
+  HlPoint leader[2] = { { x, y }, { x + dx * distance, y + dy * distance } };
+  double price = base + 0.5 * distance + 0.04 * fabs (shift);
+  double left = dx == 0 ? x - width / 2.0 + shift : dx > 0 ? leader[1].x : leader[1].x - width;
+  double top = dy == 0 ? y - height / 2.0 : dy > 0 ? leader[1].y : leader[1].y - height;
+  if (price >= search->best_price)
+    return;
+  price += price_of_leader (search, leader);
+  try_label (search, left, top, price, BESIDE, leader);
+}
+
+/* Where there is no room at the line: further out. */
+static void
+try_segment_led (LabelSearch *search, guint n)
+{
+  const HlGridPoint *a = &search->way[n], *b = &search->way[n + 1];
+  gboolean is_across = a->y == b->y;
+  int length = is_across ? ABS (b->x - a->x) : ABS (b->y - a->y);
+  int dx = (b->x > a->x) - (b->x < a->x), dy = (b->y > a->y) - (b->y < a->y);
+  for (int k = 1; k < length; k += length > 16 ? 2 : 1)
+    {
+      double x = (a->x + dx * k) * HL_UNIT, y = (a->y + dy * k) * HL_UNIT;
+      double base = 55.0 + 0.9 * fabs (k - length / 2.0);
+      for (double distance = 14.0; distance <= 120.0; distance += 8.0)
+        for (int side = -1; side <= 1; side += 2)
+          {
+            if (!is_across)
+              {
+                try_led (search, x, y, side, 0, distance, 0.0, base);
+                continue;
+              }
+            for (int shift = -2; shift <= 2; shift++)
+              try_led (search, x, y, 0, side, distance, shift * search->size.width * 0.21, base);
+          }
+    }
+}
+
+/* From the nearest point of the line to a label that a hand has put away from it. */
+static void
+lead_back (LabelSearch *search)
+{
+  const HlBox *box = &search->best;
+  double x = box->x + box->width / 2.0, y = box->y + box->height / 2.0, nearest = HUGE_VAL;
+  for (guint i = 0; i + 1 < search->n_way; i++)
+    {
+      const HlGridPoint *a = &search->way[i], *b = &search->way[i + 1];
+      HlPoint on = { CLAMP (x, MIN (a->x, b->x) * HL_UNIT, MAX (a->x, b->x) * HL_UNIT),
+                     CLAMP (y, MIN (a->y, b->y) * HL_UNIT, MAX (a->y, b->y) * HL_UNIT) };
+      HlPoint edge = { CLAMP (on.x, box->x, box->x + box->width), CLAMP (on.y, box->y, box->y + box->height) };
+      double distance = hypot (on.x - edge.x, on.y - edge.y);
+      if (distance >= nearest)
+        continue;
+      nearest = distance;
+      search->has_leader = distance > GAP + 4.0;
+      search->leader[0] = on;
+      search->leader[1] = edge;
+    }
+}
+
+static void
+search_label (LabelSearch *search)
+{
+  for (guint i = 0; i + 1 < search->n_way; i++)
+    try_segment (search, i);
+  if (search->best_price > TROUBLE)
+    for (guint i = 0; i + 1 < search->n_way; i++)
+      try_segment_led (search, i);
+}
+
+/* A leader takes a thin strip, so that later labels keep off it. */
+static HlBox
+leader_strip (const HlStreamPlace *place)
+{
+  const HlPoint *a = &place->leader[0], *b = &place->leader[1];
+  return (HlBox) { MIN (a->x, b->x) - 1.0, MIN (a->y, b->y) - 1.0, fabs (a->x - b->x) + 2.0, fabs (a->y - b->y) + 2.0 };
+}
+
+static void
+take_label (const HlLayout *layout, HlFreeSpace *space, guint n, void (*act) (HlFreeSpace *space, int id, const HlBox *box))
+{
+  const HlStreamPlace *place = &layout->streams[n];
+  int id = (int) (layout->n_components + n);
+  act (space, id, &place->label);
+  if (place->has_leader)
+    {
+      HlBox strip = leader_strip (place);
+      act (space, id, &strip);
+    }
+}
+
+/* Returns what the place costs. */
+static double
 place_label (HlLayout *layout, HlFreeSpace *space, guint n, const HlStreamPlace *before)
 {
   const HlStream *stream = hl_plant_stream (layout->plant, n);
   HlStreamPlace *place = &layout->streams[n];
-  int id = (int) (layout->n_components + n);
   LabelSearch search = { .space = space, .size = place->label, .best = place->label, .best_price = HUGE_VAL };
   search.way = (HlGridPoint *) (gpointer) layout->ways[n]->data;
   search.n_way = layout->ways[n]->len;
@@ -186,12 +301,16 @@ place_label (HlLayout *layout, HlFreeSpace *space, guint n, const HlStreamPlace 
     {
       search.best.x = stream->label_x * HL_UNIT - place->label.width / 2.0;
       search.best.y = stream->label_y * HL_UNIT - place->label.height / 2.0;
+      lead_back (&search);
     }
   else
-    for (guint i = 0; i + 1 < search.n_way; i++)
-      try_segment (&search, i);
+    search_label (&search);
   place->label = search.best;
-  hl_free_space_take (space, id, &place->label);
+  place->has_leader = search.has_leader;
+  place->leader[0] = search.leader[0];
+  place->leader[1] = search.leader[1];
+  take_label (layout, space, n, hl_free_space_take);
+  return stream->has_label_place ? 0.0 : search.best_price;
 }
 
 typedef struct { guint stream; int freedom; } Turn;
@@ -231,17 +350,21 @@ hl_layout_place_words (HlLayout *layout, const HlLayout *previous)
 {
   g_autoptr (HlFreeSpace) space = chart (layout);
   g_autoptr (GArray) turns = order_labels (layout);
+  g_autofree double *prices = g_new0 (double, layout->n_streams + 1);
   for (guint i = 0; i < layout->n_components; i++)
     place_title (layout, space, i);
-  for (int round = 0; round < 2; round++)
+  /* After the first round each is placed again with all the others there; those that stand well need no more. */
+  for (int round = 0; round < 4; round++)
     for (guint i = 0; i < turns->len; i++)
       {
         guint n = g_array_index (turns, Turn, i).stream;
         int before = -1;
+        if (round > 1 && prices[n] < TROUBLE)
+          continue;
         if (previous != NULL)
           before = hl_plant_stream_index (previous->plant, hl_plant_stream (layout->plant, n)->id);
         if (round > 0)
-          hl_free_space_give_back (space, (int) (layout->n_components + n), &layout->streams[n].label);
-        place_label (layout, space, n, before >= 0 ? &previous->streams[before] : NULL);
+          take_label (layout, space, n, hl_free_space_give_back);
+        prices[n] = place_label (layout, space, n, before >= 0 ? &previous->streams[before] : NULL);
       }
 }

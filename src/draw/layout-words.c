@@ -11,7 +11,7 @@
 /* The figures that a drawing shows beside a symbol; with their sign where a unit does not tell. */
 static const struct {
   const char *kind;
-  struct { const char *key, *sign; } figures[2];
+  struct { const char *key, *sign; gboolean is_unitless; } figures[2];    /* unitless: the figure after it says the unit for both */
 } figures_of_kind[] = {
   { "heat_input",    { { "heat", NULL } } },
   { "boiler",        { { "heat", NULL }, { "efficiency", "η" } } },
@@ -21,7 +21,7 @@ static const struct {
   { "pump",          { { "power", NULL } } },
   { "pipe",          { { "pressure_loss", "Δp" } } },
   { "open_heater",   { { "heat", NULL } } },
-  { "closed_heater", { { "terminal_difference", "TTD" }, { "drain_approach", "DCA" } } },
+  { "closed_heater", { { "terminal_difference", "TTD", TRUE }, { "drain_approach", "DCA" } } },
   { "steam_user",    { { "heat", NULL } } },
 };
 
@@ -56,7 +56,9 @@ figure_line (const HlPlant *plant, const HlSolution *solution, const HlComponent
           double value;
           if (kind == NULL || !find_figure (plant, solution, component, key, &value))
             continue;
-          text = hl_units_format (value, kind->dimension, hl_plant_units (plant));
+          text = figures_of_kind[i].figures[k].is_unitless
+            ? hl_units_format_number (value, kind->dimension, hl_plant_units (plant))
+            : hl_units_format (value, kind->dimension, hl_plant_units (plant));
           g_string_append_printf (line, "%s%s%s%s", line->len > 0 ? " · " : "", sign != NULL ? sign : "", sign != NULL ? " " : "", text);
         }
   return g_string_free (line, line->len == 0);
@@ -96,11 +98,28 @@ set_title (HlComponentPlace *place, const HlComponent *component, const HlPlant 
   place->title.height = HL_TITLE_LINE * (place->title_lines[1] != NULL ? 2 : 1);
 }
 
+/* "65 bar", not "65.00 bar": a label has no room for zeros that end a decimal. */
+static char *
+short_pressure (double p, HlUnitSet units)
+{
+  g_autofree char *number = hl_units_format_number (p, HL_DIMENSION_PRESSURE, units);
+  if (strchr (number, '.') != NULL)
+    {
+      char *end = number + strlen (number);
+      while (end[-1] == '0')
+        end--;
+      if (end[-1] == '.')
+        end--;
+      *end = '\0';
+    }
+  return g_strdup_printf ("%s %s", number, hl_units_label (HL_DIMENSION_PRESSURE, units));
+}
+
 /* "65 bar · 485.0 °C"; inside the dome the quality says more than the temperature. */
 static char *
 state_line (const HlState *state, HlUnitSet units)
 {
-  g_autofree char *pressure = hl_units_format (state->p, HL_DIMENSION_PRESSURE, units);
+  g_autofree char *pressure = short_pressure (state->p, units);
   if (state->phase == HL_PHASE_TWO_PHASE && state->x > 1e-6 && state->x < 1.0 - 1e-6)
     {
       g_autofree char *quality = hl_units_format_number (state->x, HL_DIMENSION_RATIO, units);

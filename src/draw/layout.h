@@ -14,7 +14,9 @@ typedef struct {
   guint    n_arcs;
   HlPoint *arcs;             /* where this line, horizontal there, jumps over a vertical one */
   HlLook   look;             /* medium and state; unknown without solution */
-  HlBox    label;            /* empty width: no label.  A hand-set place is the label's centre */
+  HlBox    label;            /* empty width: no label.  A hand-set place is the label's centre [grid units] */
+  gboolean has_leader;       /* the label had to move away from its line: a hairline leads back */
+  HlPoint  leader[2];        /* from the line to the label's edge */
   char    *label_lines[2];   /* "16.67 kg/s", "65 bar · 485.0 °C"; NULL without solution, or where not known */
 } HlStreamPlace;
 

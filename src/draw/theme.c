@@ -62,7 +62,7 @@ static const struct {
 } pens[HL_N_LOOKS] = {
   [HL_LOOK_UNKNOWN] = { G_STRUCT_OFFSET (HlTheme, quiet),   1.6, { 0, 0 },      N_("state not known") },
   [HL_LOOK_STEAM]   = { G_STRUCT_OFFSET (HlTheme, steam),   2.8, { 0, 0 },      N_("steam") },
-  [HL_LOOK_WET]     = { G_STRUCT_OFFSET (HlTheme, wet),     2.8, { 11.0, 2.0 }, N_("wet steam") },
+  [HL_LOOK_WET]     = { G_STRUCT_OFFSET (HlTheme, wet),     2.8, { 14.0, 2.5 }, N_("wet steam") },
   [HL_LOOK_WATER]   = { G_STRUCT_OFFSET (HlTheme, water),   2.0, { 0, 0 },      N_("water, condensate") },
   [HL_LOOK_COOLING] = { G_STRUCT_OFFSET (HlTheme, cooling), 1.4, { 0, 0 },      N_("cooling water") },
   [HL_LOOK_GAS]     = { G_STRUCT_OFFSET (HlTheme, gas),     2.0, { 7.0, 4.0 },  N_("gas") },

@@ -6,13 +6,18 @@ static void
 draw_flame (const HlPen *pen)
 {
   cairo_t *cr = pen->cr;
-  const double x = 0.25 * U, top = 0.15 * U, bottom = 1.85 * U, width = 0.62 * U;
-  cairo_move_to (cr, x + 0.12 * U, top);
-  cairo_curve_to (cr, x + 0.05 * U, top + 0.55 * U, x - width, top + 0.7 * U, x - width, bottom - 0.55 * U);
-  cairo_curve_to (cr, x - width, bottom - 0.15 * U, x - 0.3 * U, bottom, x, bottom);
-  cairo_curve_to (cr, x + 0.35 * U, bottom, x + width, bottom - 0.2 * U, x + width, bottom - 0.6 * U);
-  cairo_curve_to (cr, x + width, top + 0.75 * U, x + 0.3 * U, top + 0.65 * U, x + 0.12 * U, top);
+  cairo_save (cr);
+  hl_pen_go_upright (pen, 0.25, 1.05);
+  cairo_scale (cr, U, U);
+  cairo_move_to (cr, 0.1, -1.0);
+  cairo_curve_to (cr, 0.25, -0.45, 0.72, -0.1, 0.72, 0.38);
+  cairo_curve_to (cr, 0.72, 0.74, 0.4, 0.95, 0.0, 0.95);
+  cairo_curve_to (cr, -0.4, 0.95, -0.7, 0.7, -0.7, 0.32);
+  cairo_curve_to (cr, -0.7, 0.0, -0.5, -0.2, -0.42, -0.5);
+  cairo_curve_to (cr, -0.27, -0.36, -0.18, -0.24, -0.13, -0.08);
+  cairo_curve_to (cr, 0.05, -0.3, 0.16, -0.62, 0.1, -1.0);
   cairo_close_path (cr);
+  cairo_restore (cr);
   hl_pen_stroke (pen, &pen->theme->steam, 0.8);
 }
 

@@ -5,14 +5,17 @@
 static void
 draw_heat (const HlPen *pen)
 {
+  cairo_save (pen->cr);
+  hl_pen_go_upright (pen, 0.2, 1.0);
   for (int i = -1; i <= 1; i++)
     {
-      double x = (0.2 + i * 0.62) * U;
-      cairo_move_to (pen->cr, x, 1.85 * U);
-      cairo_curve_to (pen->cr, x - 0.45 * U, 1.4 * U, x + 0.45 * U, 1.05 * U, x, 0.6 * U);
+      double x = i * 0.62;
+      cairo_move_to (pen->cr, x * U, 0.85 * U);
+      cairo_curve_to (pen->cr, (x - 0.45) * U, 0.4 * U, (x + 0.45) * U, 0.05 * U, x * U, -0.4 * U);
       hl_pen_stroke (pen, &pen->theme->steam, 0.8);
-      hl_pen_arrow_head (pen, x / U - 0.03, 0.15, -0.25, -0.97, 0.6, &pen->theme->steam);
+      hl_pen_arrow_head (pen, x - 0.03, -0.85, -0.25, -0.97, 0.6, &pen->theme->steam);
     }
+  cairo_restore (pen->cr);
 }
 
 static void
