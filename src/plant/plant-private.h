@@ -47,4 +47,19 @@ gboolean        hl_addresses_same          (const HlPlant *plant, const HlAddres
 gboolean hl_quantity_check        (const HlQuantityKind *kind, const char *where, double value, HlUnitSet set, GError **error);
 gboolean hl_dimensions_may_tie    (HlDimension a, HlDimension b);
 gboolean hl_plant_check_tie       (const HlPlant *plant, const HlAddress *address, const HlValue *value, GError **error);
+
+/* tie.c */
+/* What stands behind "="; @bare_is_si: as in a file.  GIVEN or TIED; checked against limits and for its source. */
+gboolean hl_tie_read    (const HlPlant *plant, const HlAddress *address, const char *text, gboolean bare_is_si, HlValue *value, GError **error);
+char    *hl_tie_to_text (const HlValue *value);           /* as in a file: "2*C1.steam.p+10000" */
+
+/* json-text.c: JSON text to nodes, strictly and within bounds */
+typedef struct {
+  const char *name;                     /* of the file, for messages */
+  GHashTable *lines;                    /* key of the top object -> GArray of guint: line of each item */
+} HlJsonPlaces;
+JsonNode *hl_json_parse     (const char *text, gsize length, const char *name, HlJsonPlaces *places, GError **error);
+guint     hl_json_line      (const HlJsonPlaces *places, const char *list, guint item);   /* 0: not known */
+void      hl_json_append_string (GString *out, const char *text);
+void      hl_json_append_node   (GString *out, JsonNode *node);
 G_END_DECLS
