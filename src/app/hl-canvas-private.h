@@ -34,6 +34,7 @@ struct _HlCanvas {
   HlSession  *session;
   double      zoom, ox, oy;          /* view = o + zoom * canvas */
   gboolean    is_fitted;             /* the whole plant stays in view when the size changes */
+  int         fit_width, fit_height; /* the size that it was last fitted to */
   HlLayout   *layout;
   HlSolution *shown;                 /* the solution whose figures stand in the labels */
   gboolean    is_stale;

@@ -177,32 +177,29 @@ sync_items (HlCanvas *self)
 }
 
 static void
-trace_place (HlCanvas *self, GtkWidget *root, const char *word, const HlComponent *component, const char *port)
+trace_place (HlCanvas *self, const char *word, const HlComponent *component, const char *port)
 {
-  graphene_point_t place;
+  g_autofree char *name = port != NULL ? g_strconcat (component->id, ".", port, NULL) : g_strdup (component->id);
   double vx, vy;
-  if (hl_canvas_locate (self, component->id, port, &vx, &vy)
-      && gtk_widget_compute_point (GTK_WIDGET (self), root, &GRAPHENE_POINT_INIT (vx, vy), &place))
-    hl_trace ("%s %s%s%s %.0f %.0f", word, component->id, port != NULL ? "." : "", port != NULL ? port : "", place.x, place.y);
+  if (hl_canvas_locate (self, component->id, port, &vx, &vy))
+    hl_trace_place (word, name, GTK_WIDGET (self), vx, vy);
 }
 
 static gboolean
 trace_cb (gpointer data)
 {
   HlCanvas *self = data;
-  GtkWidget *root = GTK_WIDGET (gtk_widget_get_root (GTK_WIDGET (self)));
   HlPlant *plant = hl_canvas_plant (self);
-  graphene_point_t corner;
 
   self->trace_source = 0;
-  if (root != NULL && gtk_widget_compute_point (GTK_WIDGET (self), root, &GRAPHENE_POINT_INIT (0, 0), &corner))
-    hl_trace ("canvas %.0f %.0f %d %d", corner.x, corner.y, gtk_widget_get_width (GTK_WIDGET (self)), gtk_widget_get_height (GTK_WIDGET (self)));
-  for (guint n = 0; root != NULL && n < hl_plant_n_components (plant); n++)
+  hl_trace_place ("canvas", "left-top", GTK_WIDGET (self), 0, 0);
+  hl_trace_place ("canvas", "right-bottom", GTK_WIDGET (self), gtk_widget_get_width (GTK_WIDGET (self)), gtk_widget_get_height (GTK_WIDGET (self)));
+  for (guint n = 0; n < hl_plant_n_components (plant); n++)
     {
       const HlComponent *component = hl_plant_component (plant, n);
-      trace_place (self, root, "place", component, NULL);
+      trace_place (self, "place", component, NULL);
       for (guint k = 0; k < hl_component_n_ports (component); k++)
-        trace_place (self, root, "port", component, hl_component_port (component, k).key);
+        trace_place (self, "port", component, hl_component_port (component, k).key);
     }
   hl_trace ("settled");
   return G_SOURCE_REMOVE;
@@ -325,6 +322,8 @@ fit_into (HlCanvas *self, double width, double height)
 {
   HlBox box;
   double before = self->zoom;
+  self->fit_width = (int) width;
+  self->fit_height = (int) height;
   if (self->layout == NULL || hl_plant_n_components (hl_canvas_plant (self)) == 0)
     {
       self->zoom = 1.0;
@@ -412,7 +411,8 @@ static void
 hl_canvas_size_allocate (GtkWidget *widget, int width, int height, int baseline)
 {
   HlCanvas *self = HL_CANVAS (widget);
-  if (self->is_fitted)
+  /* A fitted view follows the size, not the plant: what is being edited must not jump. */
+  if (self->is_fitted && (width != self->fit_width || height != self->fit_height))
     fit_into (self, width, height);
   for (GtkWidget *child = gtk_widget_get_first_child (widget); child != NULL; child = gtk_widget_get_next_sibling (child))
     {

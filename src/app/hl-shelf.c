@@ -76,7 +76,7 @@ hl_shelf_item_measure (GtkWidget *widget, GtkOrientation orientation, int for_si
                        int *minimum_baseline, int *natural_baseline)
 {
   HlShelfItem *self = HL_SHELF_ITEM (widget);
-  gtk_widget_measure (self->label, orientation, -1, minimum, natural, NULL, NULL);
+  gtk_widget_measure (self->label, orientation, for_size, minimum, natural, NULL, NULL);
   if (orientation == GTK_ORIENTATION_HORIZONTAL)
     {
       *minimum = MAX (*minimum, SYMBOL_SIZE);
@@ -87,6 +87,13 @@ hl_shelf_item_measure (GtkWidget *widget, GtkOrientation orientation, int for_si
       *minimum += SYMBOL_SIZE + 1;
       *natural += SYMBOL_SIZE + 1;
     }
+}
+
+/* A long word takes a second line. */
+static GtkSizeRequestMode
+hl_shelf_item_get_request_mode (GtkWidget *widget)
+{
+  return GTK_SIZE_REQUEST_HEIGHT_FOR_WIDTH;
 }
 
 static void
@@ -142,6 +149,7 @@ hl_shelf_item_class_init (HlShelfItemClass *class)
   GtkWidgetClass *widget = GTK_WIDGET_CLASS (class);
   G_OBJECT_CLASS (class)->dispose = hl_shelf_item_dispose;
   widget->measure = hl_shelf_item_measure;
+  widget->get_request_mode = hl_shelf_item_get_request_mode;
   widget->size_allocate = hl_shelf_item_size_allocate;
   widget->snapshot = hl_shelf_item_snapshot;
   widget->css_changed = hl_shelf_item_css_changed;
@@ -216,11 +224,8 @@ trace_places (HlShelf *self, GtkWidget *widget)
 {
   for (GtkWidget *child = gtk_widget_get_first_child (widget); child != NULL; child = gtk_widget_get_next_sibling (child))
     {
-      graphene_point_t place;
-      if (HL_IS_SHELF_ITEM (child)
-          && gtk_widget_compute_point (child, GTK_WIDGET (gtk_widget_get_root (child)),
-                                       &GRAPHENE_POINT_INIT (gtk_widget_get_width (child) / 2.0f, SYMBOL_SIZE / 2.0f), &place))
-        hl_trace ("shelf %s %.0f %.0f", HL_SHELF_ITEM (child)->kind->id, place.x, place.y);
+      if (HL_IS_SHELF_ITEM (child))
+        hl_trace_place ("shelf", HL_SHELF_ITEM (child)->kind->id, child, gtk_widget_get_width (child) / 2.0, SYMBOL_SIZE / 2.0);
       else
         trace_places (self, child);
     }

@@ -28,3 +28,16 @@ hl_trace (const char *format, ...)
   putchar ('\n');
   fflush (stdout);    /* the reader waits for the line */
 }
+
+void
+hl_trace_place (const char *word, const char *name, GtkWidget *widget, double x, double y)
+{
+  GtkNative *native = gtk_widget_get_native (widget);
+  graphene_point_t place;
+  double dx, dy;
+  if (!hl_trace_is_on () || native == NULL
+      || !gtk_widget_compute_point (widget, GTK_WIDGET (native), &GRAPHENE_POINT_INIT ((float) x, (float) y), &place))
+    return;
+  gtk_native_get_surface_transform (native, &dx, &dy);
+  hl_trace ("%s %s %.0f %.0f", word, name, place.x + dx, place.y + dy);
+}

@@ -260,6 +260,7 @@ hl_window_init (HlWindow *self)
   g_signal_connect_object (self->session, "file-changed", G_CALLBACK (file_changed_cb), self, G_CONNECT_SWAPPED);
   g_signal_connect_object (self->canvas, "notify::zoom", G_CALLBACK (zoom_changed_cb), self, G_CONNECT_SWAPPED);
   restore_geometry (self);
+  update_glance (self);
   changed_cb (self);
   file_changed_cb (self);
 }
