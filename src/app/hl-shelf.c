@@ -185,9 +185,11 @@ G_DEFINE_FINAL_TYPE (HlShelf, hl_shelf, GTK_TYPE_WIDGET)
 static GtkWidget *
 group_heading (const char *text)
 {
-  GtkWidget *label = gtk_label_new (text);
+  g_autofree char *upper = g_utf8_strup (text, -1);
+  GtkWidget *label = gtk_label_new (upper);
   gtk_label_set_xalign (GTK_LABEL (label), 0.0f);
   gtk_widget_add_css_class (label, "shelf-heading");
+  gtk_accessible_update_property (GTK_ACCESSIBLE (label), GTK_ACCESSIBLE_PROPERTY_LABEL, text, -1);
   return label;
 }
 

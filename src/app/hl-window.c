@@ -12,7 +12,7 @@
 #include "app/hl-trace.h"
 #include "plant/i18n.h"
 
-#define GLANCE_FROM_WIDTH 1100     /* the glance card needs this much in the work area, beside the diagram */
+#define GLANCE_FROM_WIDTH 790     /* the glance card needs this much in the work area, beside the diagram */
 
 G_DEFINE_FINAL_TYPE (HlWindow, hl_window, GTK_TYPE_APPLICATION_WINDOW)
 
@@ -182,12 +182,12 @@ restore_geometry (HlWindow *self)
 {
   int width = remembered ("window-width", 1280), height = remembered ("window-height", 800);
   gboolean is_beside = hl_settings_get_bool ("diagram-beside", FALSE);
-  int work_width, shelf = 140;
+  int work_width, shelf = 145;
 
   gtk_window_set_default_size (GTK_WINDOW (self), width, height);
   if (hl_settings_get_bool ("window-maximized", FALSE))
     gtk_window_maximize (GTK_WINDOW (self));
-  work_width = width - shelf - remembered ("nameplate-size", 310);
+  work_width = width - shelf - remembered ("nameplate-size", 336);
   hl_window_place_diagram (self, is_beside);
   gtk_paned_set_position (self->outer, work_width);
   set_end_size (self->work, is_beside ? work_width : height - 48,
