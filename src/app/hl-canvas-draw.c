@@ -156,8 +156,10 @@ renew_stream (HlCanvas *self, guint n)
   Subject subject = { .theme = hl_appearance_theme (), .place = place, .stream = stream, .result = &result, .is_stale = self->is_stale,
                       .is_selected = hl_session_is_selected (self->session, stream->id) };
   GByteArray *line_key = g_byte_array_new (), *label_key = g_byte_array_new ();
-  HlBox line_box = box_of_points (place->points, place->n_points, 10), label_box = grown (&place->label, 6);
+  HlBox line_box, label_box;
 
+  hl_stream_line_bounds (place, &line_box);
+  hl_stream_label_bounds (place, &label_box);
   /* A stream just drawn, in a preview, is not in the solution yet. */
   if (n < hl_plant_n_streams (hl_solution_plant (self->shown)))
     hl_solution_stream (self->shown, n, &result);
@@ -174,6 +176,8 @@ renew_stream (HlCanvas *self, guint n)
   add_result (label_key, &result);
   add_bytes (label_key, &place->look, sizeof place->look);
   add_bytes (label_key, &place->label, sizeof place->label);
+  add_bytes (label_key, &place->has_leader, sizeof place->has_leader);
+  add_bytes (label_key, place->leader, sizeof place->leader);
   add_text (label_key, stream->id);
   add_text (label_key, place->label_lines[0]);
   add_text (label_key, place->label_lines[1]);

@@ -187,6 +187,52 @@ hl_draw_stream_label (cairo_t *cr, const HlTheme *theme, const HlStreamPlace *pl
   cairo_restore (cr);
 }
 
+/* Grows @box so that (@x, @y) lies inside; a negative width: nothing in it yet. */
+static void
+include (HlBox *box, double x, double y)
+{
+  double right = MAX (box->x + box->width, x), bottom = MAX (box->y + box->height, y);
+  if (box->width < 0.0)
+    {
+      *box = (HlBox) { x, y, 0.0, 0.0 };
+      return;
+    }
+  box->x = MIN (box->x, x);
+  box->y = MIN (box->y, y);
+  box->width = right - box->x;
+  box->height = bottom - box->y;
+}
+
+static void
+grow (HlBox *box, double margin)
+{
+  *box = (HlBox) { box->x - margin, box->y - margin, box->width + 2.0 * margin, box->height + 2.0 * margin };
+}
+
+void
+hl_stream_line_bounds (const HlStreamPlace *place, HlBox *box)
+{
+  *box = (HlBox) { 0.0, 0.0, -1.0, 0.0 };
+  for (guint i = 0; i < place->n_points; i++)
+    include (box, place->points[i].x, place->points[i].y);
+  if (box->width < 0.0)
+    box->width = 0.0;
+  else
+    grow (box, MAX (MAX (place->lead_from, place->lead_to) + HALO / 2.0, ARC_RADIUS + 3.0));
+}
+
+void
+hl_stream_label_bounds (const HlStreamPlace *place, HlBox *box)
+{
+  *box = place->label;
+  if (!(box->width > 0.0))
+    return;
+  if (place->has_leader)
+    for (guint i = 0; i < 2; i++)
+      include (box, place->leader[i].x, place->leader[i].y);
+  grow (box, 4.0);
+}
+
 void
 hl_draw_shaft_line (cairo_t *cr, const HlTheme *theme, const HlPoint *points, guint n_points)
 {

@@ -12,6 +12,9 @@ void hl_draw_stream_label    (cairo_t *cr, const HlTheme *theme, const HlStreamP
 void hl_draw_shaft_line      (cairo_t *cr, const HlTheme *theme, const HlPoint *points, guint n_points);
 void hl_draw_component_title (cairo_t *cr, const HlTheme *theme, const HlComponentPlace *place);
 void hl_draw_polyline        (cairo_t *cr, const HlPoint *points, guint n_points);   /* path only */
+/* Bounds of what the two above draw: leads beneath the symbols, arcs and glow, leader of the label. */
+void hl_stream_line_bounds   (const HlStreamPlace *place, HlBox *box);
+void hl_stream_label_bounds  (const HlStreamPlace *place, HlBox *box);    /* empty width: nothing */
 /* The drawing as a sheet with title line, legend and caution, fitted into width x height points. */
 void hl_draw_sheet           (cairo_t *cr, const HlTheme *theme, const HlPlant *plant, const HlSolution *solution, double width, double height);
 G_END_DECLS

@@ -146,6 +146,22 @@ set_label (HlStreamPlace *place, const HlStreamResult *result, HlUnitSet units, 
   place->label.width = width > 0.0 ? ceil ((HL_LABEL_TEXT_LEFT + width + HL_LABEL_TEXT_RIGHT) / 4.0) * 4.0 : HL_LABEL_HEIGHT;
 }
 
+/* The solution may belong to a plant of a moment ago: streams are matched by id. */
+static gboolean
+find_result (const HlLayout *layout, const HlSolution *solution, guint stream, HlStreamResult *result)
+{
+  const HlPlant *solved = solution != NULL ? hl_solution_plant (solution) : NULL;
+  int n = solved == layout->plant ? (int) stream : -1;
+  if (solved == NULL)
+    return FALSE;
+  if (n < 0)
+    n = hl_plant_stream_index (solved, hl_plant_stream (layout->plant, stream)->id);
+  if (n < 0)
+    return FALSE;
+  hl_solution_stream (solution, (guint) n, result);
+  return TRUE;
+}
+
 void
 hl_layout_set_words (HlLayout *layout, const HlSolution *solution, const HlTheme *theme)
 {
@@ -154,7 +170,7 @@ hl_layout_set_words (HlLayout *layout, const HlSolution *solution, const HlTheme
   for (guint i = 0; i < layout->n_streams && solution != NULL; i++)
     {
       HlStreamResult result = { 0 };
-      hl_solution_stream (solution, i, &result);
+      find_result (layout, solution, i, &result);
       set_label (&layout->streams[i], &result, hl_plant_units (layout->plant), theme);
     }
 }
@@ -210,8 +226,7 @@ hl_layout_set_looks (HlLayout *layout, const HlSolution *solution)
   for (guint i = 0; i < layout->n_streams; i++)
     {
       HlStreamResult result = { 0 };
-      if (solution != NULL)
-        hl_solution_stream (solution, i, &result);
+      find_result (layout, solution, i, &result);
       layout->streams[i].look = hl_stream_look (&result);
       if (is_cooling_stream[i] && (layout->streams[i].look == HL_LOOK_WATER || layout->streams[i].look == HL_LOOK_UNKNOWN))
         layout->streams[i].look = HL_LOOK_COOLING;
