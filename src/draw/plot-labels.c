@@ -280,7 +280,6 @@ ambiguity (HlPlotLabels *labels, const HlPlotLabelWish *wish, const HlBox *box, 
 gboolean
 hl_plot_labels_place (HlPlotLabels *labels, const HlPlotLabelWish *wish, int owner, HlPlotLabelPlace *place)
 {
-  const int n_directions = 16;
   gboolean has_wish = hypot (wish->towards.x, wish->towards.y) > 0.5;
   double preferred_x = has_wish ? wish->towards.x : 0.8, preferred_y = has_wish ? wish->towards.y : -0.6, best = G_MAXDOUBLE;
   Leader best_leader = { { 0.0, 0.0 }, { 0.0, 0.0 } };
@@ -290,6 +289,7 @@ hl_plot_labels_place (HlPlotLabels *labels, const HlPlotLabelWish *wish, int own
   for (double distance = wish->clearance; distance <= wish->reach; distance += MAX (2.0, 0.22 * distance))
     {
       double far = 0.5 * (distance - wish->clearance);
+      int n_directions = distance < 24.0 ? 16 : 48;
       if (far >= best)
         break;
       for (int k = 0; k < n_directions; k++)

@@ -64,39 +64,71 @@ neighbours (const HlStateDiagram *diagram, guint n)
   return count;
 }
 
-typedef struct { guint mark, neighbours; } Turn;
+typedef struct { guint mark, neighbours, failures; } Turn;
 
 static int
 compare_turns (gconstpointer a, gconstpointer b)
 {
   const Turn *turn_a = a, *turn_b = b;
+  if (turn_a->failures != turn_b->failures)
+    return turn_a->failures > turn_b->failures ? -1 : 1;
   if (turn_a->neighbours != turn_b->neighbours)
     return turn_a->neighbours > turn_b->neighbours ? -1 : 1;
   return turn_a->mark < turn_b->mark ? -1 : turn_a->mark > turn_b->mark;
+}
+
+static gboolean
+place_one (HlStateDiagram *diagram, HlPlotLabels *labels, guint n)
+{
+  HlMark *mark = &g_array_index (diagram->marks, HlMark, n);
+  HlPlotLabelWish wish = wish_of (diagram, mark);
+  hl_plot_labels_remove (labels, &mark->label);
+  return hl_plot_labels_place (labels, &wish, (int) n, &mark->label);
+}
+
+/* Places all in turn; those that found no room get a failure more.  TRUE where all did. */
+static gboolean
+place_all (HlStateDiagram *diagram, HlPlotLabels *labels, GArray *turns)
+{
+  gboolean is_complete = TRUE;
+  for (guint i = 0; i < turns->len; i++)
+    {
+      Turn *turn = &g_array_index (turns, Turn, i);
+      if (place_one (diagram, labels, turn->mark))
+        continue;
+      turn->failures++;
+      is_complete = FALSE;
+    }
+  return is_complete;
 }
 
 static void
 place_marks (HlStateDiagram *diagram, HlPlotLabels *labels, HlMarkKind kind)
 {
   g_autoptr (GArray) turns = g_array_new (FALSE, FALSE, sizeof (Turn));
+  int n_rounds = kind == HL_MARK_STATE ? 5 : 1;
   for (guint i = 0; i < diagram->marks->len; i++)
     {
       const HlMark *mark = &g_array_index (diagram->marks, HlMark, i);
-      Turn turn = { i, neighbours (diagram, i) };
+      Turn turn = { i, neighbours (diagram, i), 0 };
       if (mark->kind == kind && mark->text != NULL)
         g_array_append_val (turns, turn);
     }
   g_array_sort (turns, compare_turns);
-  /* The second round lets early ones move now that the later ones are known. */
-  for (int round = 0; round < 2; round++)
-    for (guint i = 0; i < turns->len; i++)
-      {
-        guint n = g_array_index (turns, Turn, i).mark;
-        HlMark *mark = &g_array_index (diagram->marks, HlMark, n);
-        HlPlotLabelWish wish = wish_of (diagram, mark);
-        hl_plot_labels_remove (labels, &mark->label);
-        hl_plot_labels_place (labels, &wish, (int) n, &mark->label);
-      }
+  /* Where some find no room, all start anew with those first. */
+  for (int round = 0; !place_all (diagram, labels, turns) && round + 1 < n_rounds && turns->len < 100; round++)
+    {
+      for (guint i = 0; i < turns->len; i++)
+        {
+          HlMark *mark = &g_array_index (diagram->marks, HlMark, g_array_index (turns, Turn, i).mark);
+          hl_plot_labels_remove (labels, &mark->label);
+          mark->label.is_placed = FALSE;
+        }
+      g_array_sort (turns, compare_turns);
+    }
+  /* Once more, so that early ones may move now that the later ones are known. */
+  for (guint i = 0; i < turns->len; i++)
+    place_one (diagram, labels, g_array_index (turns, Turn, i).mark);
 }
 
 /* "x = 0.2", "0.4" ... centred on their lines, all at one temperature where that is possible. */

@@ -1,4 +1,4 @@
-/* The temperature-entropy diagram of a solution: what goes in, and where things lie for the pointer.
+/* The temperature-entropy diagram: what it is made from, and where things lie for the pointer.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "draw/state-diagram-private.h"
 #include <math.h>
@@ -22,65 +22,6 @@ hl_cycle_free (HlCycle *cycle)
   g_array_unref (cycle->points);
   g_array_unref (cycle->processes);
   g_free (cycle);
-}
-
-static gboolean
-is_drawable (const HlState *state)
-{
-  return isfinite (state->p) && isfinite (state->T) && isfinite (state->h) && isfinite (state->s) && state->p > 0.0;
-}
-
-/* Marks the streams that only a service circuit knows, such as cooling water. */
-static void
-add_processes (HlCycle *cycle, const HlSolution *solution, gboolean *is_service, guint n_streams)
-{
-  g_autofree gboolean *is_cycle = g_new0 (gboolean, n_streams + 1);
-  for (guint i = 0; i < hl_solution_n_processes (solution); i++)
-    {
-      HlProcess process = *hl_solution_process (solution, i);
-      const int ends[2] = { process.from_stream, process.to_stream };
-      for (int k = 0; k < 2; k++)
-        if (ends[k] >= 0 && (guint) ends[k] < n_streams)
-          (process.is_service ? is_service : is_cycle)[ends[k]] = TRUE;
-      if (process.is_service || process.fluid != cycle->fluid || !is_drawable (&process.from) || !is_drawable (&process.to))
-        continue;
-      process.has_isentropic = process.has_isentropic && is_drawable (&process.isentropic);
-      g_array_append_val (cycle->processes, process);
-    }
-  for (guint i = 0; i < n_streams; i++)
-    is_service[i] = is_service[i] && !is_cycle[i];
-}
-
-HlCycle *
-hl_cycle_from_solution (const HlSolution *solution, HlUnitSet units)
-{
-  const HlPlant *plant = hl_solution_plant (solution);
-  guint n_streams = hl_plant_n_streams (plant);
-  g_autofree gboolean *is_service = g_new0 (gboolean, n_streams + 1);
-  HlCycle *cycle = hl_cycle_new (NULL, units);
-  add_processes (cycle, solution, is_service, n_streams);
-  for (guint i = 0; i < n_streams; i++)
-    {
-      HlStreamResult result;
-      HlCyclePoint point = { .id = hl_plant_stream (plant, i)->id, .stream = (int) i, .m = NAN };
-      hl_solution_stream (solution, i, &result);
-      if (is_service[i] || !result.has_state || result.fluid != cycle->fluid || !is_drawable (&result.state))
-        continue;
-      point.state = result.state;
-      if (result.has_flow)
-        point.m = result.m;
-      g_array_append_val (cycle->points, point);
-    }
-  return cycle;
-}
-
-HlStateDiagram *
-hl_state_diagram_new (const HlSolution *solution, HlUnitSet units, double width, double height)
-{
-  g_autoptr (HlCycle) cycle = NULL;
-  g_return_val_if_fail (solution != NULL, NULL);
-  cycle = hl_cycle_from_solution (solution, units);
-  return hl_state_diagram_from_cycle (cycle, width, height);
 }
 
 void
