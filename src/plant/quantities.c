@@ -45,6 +45,7 @@ static const HlQuantityKind plant_quantities[] = {
                 N_("Own consumption of what is not drawn: fans, fuel handling, lighting, cooling pumps.")),
   { .key = "other_consumption_fraction", .sign = "P/P", .name = N_("Other consumption of gross"), .group = N_("Power"),
     .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_ASSUMED | HL_QUANTITY_PERCENT,
+    /* xgettext:no-c-format */
     DEFAULT (0.0, N_("simplification, no source: nothing else; with feed pumps fossil plants need 5-15 % of gross")),
     RANGE (0.0, 0.15), LIMITS_FRACTION, .yield_rank = 70, .help = N_("Other consumption over gross power.") },
   RESULT_POWER ("heat_input", "Q_in", N_("Heat input"), N_("Heat"), N_("Heat given to the working fluid.")),
