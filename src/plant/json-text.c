@@ -360,8 +360,8 @@ hl_json_parse (const char *text, gsize length, const char *name, HlJsonPlaces *p
   const char *bad = NULL;
   if (!g_utf8_validate_len (text, length, &bad))
     {
-      g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_SYNTAX, _("%s:%u: byte %" G_GSIZE_FORMAT " is not UTF-8 text; this is no plant file, or it is damaged"),
-                   name, line_of (text, bad), (gsize) (bad - text));
+      g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_SYNTAX, _("%s:%u: byte %lu is not UTF-8 text; this is no plant file, or it is damaged"),
+                   name, line_of (text, bad), (gulong) (bad - text));
       return NULL;
     }
   if (length >= 3 && memcmp (text, "\xef\xbb\xbf", 3) == 0)   /* a byte order mark does no harm */
