@@ -8,15 +8,15 @@
 static char *
 limits_in_words (const HlQuantityKind *kind, HlUnitSet set)
 {
-  g_autofree char *low = NULL, *high = hl_quantity_format (kind, kind->at_most, set);
+  g_autofree char *low = NULL, *high = hl_quantity_format_exact (kind, kind->at_most, set);
   if (kind->above > 0.0 || kind->above < HL_FROM_ZERO)
     {
-      low = hl_quantity_format (kind, kind->above, set);
-      return g_strdup_printf (_("must lie above %s and at most at %s"), low, high);
+      low = hl_quantity_format_exact (kind, kind->above, set);
+      return g_strdup_printf (_("must lie above %s and be at most %s"), low, high);
     }
   if (kind->dimension == HL_DIMENSION_TEMPERATURE)
-    return g_strdup_printf (_("must lie above absolute zero and at most at %s"), high);
-  return g_strdup_printf (kind->above < 0.0 ? _("must be 0 or more and at most %s") : _("must lie above 0 and at most at %s"), high);
+    return g_strdup_printf (_("must lie above absolute zero and be at most %s"), high);
+  return g_strdup_printf (kind->above < 0.0 ? _("must be 0 or more and at most %s") : _("must lie above 0 and be at most %s"), high);
 }
 
 gboolean
@@ -32,7 +32,7 @@ hl_quantity_check (const HlQuantityKind *kind, const char *where, double value, 
     }
   shown = hl_quantity_format_exact (kind, value, set);
   limits = limits_in_words (kind, set);
-  /* Translators: address, value, name of the quantity, limits: "T1.efficiency is 1.4: isentropic efficiency must lie above 0 and at most at 1". */
+  /* Translators: address, value, name of the quantity, limits: "T1.efficiency is 1.4: isentropic efficiency must lie above 0 and be at most 1". */
   g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_OUT_OF_RANGE, _("%s is %s: the quantity “%s” %s"), where, shown, _(kind->name), limits);
   return FALSE;
 }

@@ -108,7 +108,7 @@ read_unit (Parser *parser, double number, Sum *sum)
     return refuse (parser, "%s", _(unit->why));
   if (unit->dimension == HL_DIMENSION_RATIO)
     {
-      sum->plain = number * unit->factor;
+      sum->plain = hl_multiply_exactly (number, unit->factor);
       return TRUE;
     }
   if (unit->dimension != hl_unit_dimension (parser->dimension))
@@ -116,7 +116,7 @@ read_unit (Parser *parser, double number, Sum *sum)
   if (hl_dimension_is_difference (parser->dimension) && unit->nature != HL_UNIT_PLAIN)
     return hl_unit_to_si (unit, number, parser->dimension, 0.0, &si, parser->error);
   sum->has_constant = TRUE;
-  sum->constant = number * unit->factor;
+  sum->constant = hl_multiply_exactly (number, unit->factor);
   zero = unit->nature == HL_UNIT_GAUGE ? hl_plant_site_pressure (parser->plant) : unit->offset;
   sum->datum = hl_dimension_is_difference (parser->dimension) ? 0.0 : zero;
   sum->gauge = unit->nature == HL_UNIT_GAUGE ? unit : NULL;

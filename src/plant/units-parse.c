@@ -48,11 +48,10 @@ comma_is_ambiguous (const char *whole, const char *comma)
 }
 
 static gboolean
-refuse_thousands (const char *text, const char *comma, GError **error)
+refuse_thousands (const char *text, GError **error)
 {
   g_autofree char *plain = g_strdup (text);
   char *at = strchr (plain, ',');
-  (void) comma;
   memmove (at, at + 1, strlen (at));
   plain[skip_digits (plain + (plain[0] == '-' || plain[0] == '+')) - plain] = '\0';
   g_set_error (error, HL_UNITS_ERROR, HL_UNITS_ERROR_NO_NUMBER,
@@ -75,7 +74,7 @@ hl_units_read_number (const char *text, double *number, const char **end, GError
     {
       behind = skip_digits (at + 1);
       if (*at == ',' && comma_is_ambiguous (whole, at))
-        return refuse_thousands (text, at, error);
+        return refuse_thousands (text, error);
     }
   if (behind - whole < 1 || (behind - whole == 1 && !g_ascii_isdigit (*whole)))
     {
@@ -124,7 +123,7 @@ refuse_unit (const char *text, const char *unit_text, const HlUnit *unit, const 
 gboolean
 hl_unit_to_si (const HlUnit *unit, double number, HlDimension dimension, double site_pressure, double *si, GError **error)
 {
-  double value = number * unit->factor;
+  double value = hl_multiply_exactly (number, unit->factor);
   if (hl_dimension_is_difference (dimension))
     {
       if (unit->nature != HL_UNIT_PLAIN)

@@ -25,6 +25,9 @@ const HlUnit *hl_unit_find   (const char *text, gsize length, HlDimension dimens
 /* Pressure and temperature for their differences, otherwise @dimension. */
 HlDimension   hl_unit_dimension (HlDimension dimension);
 gboolean      hl_dimension_is_difference (HlDimension dimension);
+/* number * factor and number / factor, where a factor such as 0.01 stands for a division by a whole number. */
+double        hl_multiply_exactly (double number, double factor);
+double        hl_divide_exactly   (double number, double factor);
 /* Units that would do, in words: "bar, bara, barg, mbar ...". */
 char         *hl_unit_suggestions (HlDimension dimension);
 

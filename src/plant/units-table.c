@@ -2,6 +2,8 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "plant/units-private.h"
 #include "plant/i18n.h"
+#include <float.h>
+#include <math.h>
 #include <string.h>
 
 /* NIST Special Publication 811 (2008), appendix B: exact are lb 0.45359237 kg, ft 0.3048 m, atm 101325 Pa, bar 1e5 Pa,
@@ -127,13 +129,23 @@ bare_spelling (const char *text, gsize length, char bare[32])
   return n > 0;
 }
 
-static gboolean
-row_spells (const HlUnit *unit, const char *bare, gboolean mind_case)
+/* The spellings of the table, made once. */
+static gpointer
+build_spellings (G_GNUC_UNUSED gpointer data)
 {
-  char own[32];
-  if (!bare_spelling (unit->text, strlen (unit->text), own))
-    return FALSE;
-  return mind_case ? strcmp (own, bare) == 0 : g_ascii_strcasecmp (own, bare) == 0;
+  char (*spellings)[32] = g_malloc0 (G_N_ELEMENTS (units) * sizeof *spellings);
+  for (guint i = 0; i < G_N_ELEMENTS (units); i++)
+    if (!bare_spelling (units[i].text, strlen (units[i].text), spellings[i]))
+      g_assert_not_reached ();
+  return spellings;
+}
+
+static gboolean
+row_spells (guint row, const char *bare, gboolean mind_case)
+{
+  static GOnce once = G_ONCE_INIT;
+  char (*spellings)[32] = g_once (&once, build_spellings, NULL);
+  return mind_case ? strcmp (spellings[row], bare) == 0 : g_ascii_strcasecmp (spellings[row], bare) == 0;
 }
 
 /* First row that fits; @other: one that fits too but means something else. */
@@ -145,7 +157,7 @@ search (const char *bare, gboolean mind_case, gboolean any_dimension, HlDimensio
   for (guint i = 0; i < G_N_ELEMENTS (units); i++)
     {
       const HlUnit *unit = &units[i];
-      if ((!any_dimension && unit->dimension != dimension) || !row_spells (unit, bare, mind_case))
+      if ((!any_dimension && unit->dimension != dimension) || !row_spells (i, bare, mind_case))
         continue;
       if (found == NULL)
         found = unit;
@@ -169,6 +181,28 @@ hl_unit_find (const char *text, gsize length, HlDimension dimension, const HlUni
     for (int fold = 0; fold <= 1 && found == NULL; fold++)
       found = search (bare, fold == 0, any == 1, dimension, ambiguous);
   return found;
+}
+
+/* The whole number that a factor below 1 is the inverse of, so that 83 % is 83/100 and not 83 times a rounded 0.01; or 0. */
+static double
+whole_inverse (double factor)
+{
+  double inverse = factor < 1.0 && factor > 1e-9 ? rint (1.0 / factor) : 0.0;
+  return inverse > 0.0 && fabs (inverse * factor - 1.0) < 4.0 * DBL_EPSILON ? inverse : 0.0;
+}
+
+double
+hl_multiply_exactly (double number, double factor)
+{
+  double inverse = whole_inverse (factor);
+  return inverse > 0.0 ? number / inverse : number * factor;
+}
+
+double
+hl_divide_exactly (double number, double factor)
+{
+  double inverse = whole_inverse (factor);
+  return inverse > 0.0 ? number * inverse : number / factor;
 }
 
 gboolean
@@ -198,7 +232,7 @@ hl_unit_suggestions (HlDimension dimension)
   guint n = 0;
   if (dimension == HL_DIMENSION_COUNT)
     g_string_append (text, _("a plain number"));
-  for (guint i = 0; i < G_N_ELEMENTS (units) && n < 7; i++)
+  for (guint i = 0; i < G_N_ELEMENTS (units) && n < 8; i++)
     {
       const HlUnit *unit = &units[i];
       if (unit->dimension != hl_unit_dimension (dimension) || unit->nature == HL_UNIT_REFUSED

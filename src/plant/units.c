@@ -42,48 +42,78 @@ hl_units_label (HlDimension dimension, HlUnitSet set)
   return dimensions[dimension].labels[set];
 }
 
-/* Factor and offset of a label for this dimension. */
-static void
-conversion (const char *label, HlDimension dimension, double *factor, double *offset)
+typedef struct { double factor, offset; } Conversion;
+
+/* The labels looked up once: formatting a ledger must not search the table of units for every number. */
+static gpointer
+build_conversions (G_GNUC_UNUSED gpointer data)
 {
-  const HlUnit *unit, *ambiguous;
-  g_autofree char *tidy = NULL;
-  *factor = 1.0;
-  *offset = 0.0;
-  if (*label == '\0')
-    return;
-  tidy = hl_units_tidy (label);
-  unit = hl_unit_find (tidy, strlen (tidy), dimension, &ambiguous);
-  g_assert (unit != NULL && ambiguous == NULL);
-  *factor = unit->factor;
-  *offset = hl_dimension_is_difference (dimension) ? 0.0 : unit->offset;
+  Conversion *all = g_new0 (Conversion, HL_N_DIMENSIONS * HL_N_UNIT_SETS);
+  for (int d = 0; d < HL_N_DIMENSIONS; d++)
+    for (int set = 0; set < HL_N_UNIT_SETS; set++)
+      {
+        Conversion *conversion = &all[d * HL_N_UNIT_SETS + set];
+        g_autofree char *tidy = hl_units_tidy (dimensions[d].labels[set]);
+        const HlUnit *unit, *ambiguous;
+        *conversion = (Conversion) { 1.0, 0.0 };
+        if (*tidy == '\0')
+          continue;
+        unit = hl_unit_find (tidy, strlen (tidy), (HlDimension) d, &ambiguous);
+        g_assert (unit != NULL && ambiguous == NULL);
+        *conversion = (Conversion) { unit->factor, hl_dimension_is_difference ((HlDimension) d) ? 0.0 : unit->offset };
+      }
+  return all;
+}
+
+static Conversion
+conversion_of_set (HlDimension dimension, HlUnitSet set)
+{
+  static GOnce once = G_ONCE_INIT;
+  const Conversion *all = g_once (&once, build_conversions, NULL);
+  return all[(int) dimension * HL_N_UNIT_SETS + (int) set];
+}
+
+/* The smaller unit in which a small power is shown with its unit; NULL: the one of the set. */
+static const char *
+small_power_label (double si, HlDimension dimension, Conversion *conversion)
+{
+  double size = fabs (si);
+  if (dimension != HL_DIMENSION_POWER || !(size > 0.0 && size < 1e6))
+    return NULL;
+  *conversion = (Conversion) { size < 1e3 ? 1.0 : 1e3, 0.0 };
+  return size < 1e3 ? "W" : "kW";
+}
+
+/* Label and conversion of a value that is shown with its unit. */
+static const char *
+choose_label (double si, HlDimension dimension, HlUnitSet set, Conversion *conversion)
+{
+  const char *small = small_power_label (si, dimension, conversion);
+  if (small != NULL)
+    return small;
+  *conversion = conversion_of_set (dimension, set);
+  return hl_units_label (dimension, set);
 }
 
 double
 hl_units_to_display (double si, HlDimension dimension, HlUnitSet set)
 {
-  double factor, offset;
-  conversion (hl_units_label (dimension, set), dimension, &factor, &offset);
-  return (si - offset) / factor;
+  Conversion conversion = conversion_of_set (dimension, set);
+  return hl_divide_exactly (si - conversion.offset, conversion.factor);
 }
 
 double
 hl_units_from_display (double shown, HlDimension dimension, HlUnitSet set)
 {
-  double factor, offset;
-  conversion (hl_units_label (dimension, set), dimension, &factor, &offset);
-  return shown * factor + offset;
+  Conversion conversion = conversion_of_set (dimension, set);
+  return hl_multiply_exactly (shown, conversion.factor) + conversion.offset;
 }
 
 const char *
 hl_units_label_of (double si, HlDimension dimension, HlUnitSet set)
 {
-  double size = fabs (si);
-  if (dimension == HL_DIMENSION_POWER && size > 0.0 && size < 1e3)
-    return "W";
-  if (dimension == HL_DIMENSION_POWER && size > 0.0 && size < 1e6)
-    return "kW";
-  return hl_units_label (dimension, set);
+  Conversion conversion;
+  return choose_label (si, dimension, set, &conversion);
 }
 
 static char *
@@ -121,56 +151,58 @@ hl_units_format_number (double si, HlDimension dimension, HlUnitSet set)
 char *
 hl_units_format (double si, HlDimension dimension, HlUnitSet set)
 {
-  const char *label = hl_units_label_of (si, dimension, set);
+  Conversion conversion;
+  const char *label = choose_label (si, dimension, set, &conversion);
   g_autofree char *number = NULL;
-  double factor, offset;
   if (!isfinite (si))
     return g_strdup ("–");
-  conversion (label, dimension, &factor, &offset);
-  number = round_number ((si - offset) / factor, &dimensions[dimension].rounding);
+  number = round_number (hl_divide_exactly (si - conversion.offset, conversion.factor), &dimensions[dimension].rounding);
   return *label != '\0' ? g_strdup_printf ("%s %s", number, label) : g_steal_pointer (&number);
 }
 
-/* Shortest digits of a number near @shown that come back as exactly @si. */
+/* Shortest text of a number near @shown that comes back as exactly @si; NULL where none does. */
 static char *
-exact_digits (double si, double shown, double factor, double offset)
+exact_digits (double si, double shown, const Conversion *conversion)
 {
   char text[32];
   for (int digits = 1; digits <= 17; digits++)
     {
-      double back;
+      double number, back;
       g_snprintf (text, sizeof text, "%.*g", digits, shown);
-      back = g_ascii_strtod (text, NULL) * factor + offset;
+      number = g_ascii_strtod (text, NULL);
+      back = hl_multiply_exactly (number, conversion->factor) + conversion->offset;
       if (!(back < si) && !(back > si))
-        return g_strdup (text);
+        return hl_number_to_text (number);
     }
   return NULL;
+}
+
+/* A division and a multiplication do not always undo each other; then a neighbour of the quotient may. */
+static char *
+exact_text (double si, const Conversion *conversion)
+{
+  double shown = hl_divide_exactly (si - conversion->offset, conversion->factor), up = shown, down = shown;
+  char *text = exact_digits (si, shown, conversion);
+  for (int i = 0; i < 4 && text == NULL; i++)
+    {
+      up = nextafter (up, INFINITY);
+      down = nextafter (down, -INFINITY);
+      text = exact_digits (si, up, conversion);
+      if (text == NULL)
+        text = exact_digits (si, down, conversion);
+    }
+  return text;
 }
 
 char *
 hl_units_format_exact (double si, HlDimension dimension, HlUnitSet set)
 {
-  const char *label = hl_units_label_of (si, dimension, set);
+  Conversion conversion;
+  const char *label = choose_label (si, dimension, set, &conversion);
   g_autofree char *digits = NULL;
-  double factor, offset, shown;
   if (!isfinite (si))
     return g_strdup ("–");
-  conversion (label, dimension, &factor, &offset);
-  shown = (si - offset) / factor;
-  digits = exact_digits (si, shown, factor, offset);
-  for (int i = 0; i < 4 && digits == NULL; i++)
-    {
-      /* A division and a multiplication do not always undo each other; a neighbour may. */
-      double up = shown, down = shown;
-      for (int j = 0; j <= i; j++)
-        {
-          up = nextafter (up, INFINITY);
-          down = nextafter (down, -INFINITY);
-        }
-      digits = exact_digits (si, up, factor, offset);
-      if (digits == NULL)
-        digits = exact_digits (si, down, factor, offset);
-    }
+  digits = exact_text (si, &conversion);
   if (digits == NULL)
     {
       label = hl_dimension_si_unit (dimension);
@@ -182,10 +214,12 @@ hl_units_format_exact (double si, HlDimension dimension, HlUnitSet set)
 char *
 hl_units_format_percent (double ratio)
 {
-  g_autofree char *digits = exact_digits (ratio, 100.0 * ratio, 0.01, 0.0);
-  if (digits != NULL)
-    return g_strdup_printf ("%s %%", digits);
-  return hl_number_to_text (ratio);
+  const Conversion percent = { 0.01, 0.0 };
+  g_autofree char *digits = NULL;
+  if (!isfinite (ratio))
+    return g_strdup ("–");
+  digits = exact_text (ratio, &percent);
+  return digits != NULL ? g_strdup_printf ("%s %%", digits) : hl_number_to_text (ratio);
 }
 
 char *
