@@ -76,7 +76,7 @@ hl_confirm (GtkWindow *parent, const char *title, const char *body, const char *
 
   *question = (Question) { done, data, -1 };
   g_object_weak_ref (G_OBJECT (window), window_gone_cb, question);
-  gtk_window_set_title (GTK_WINDOW (window), title);
+  gtk_window_set_title (GTK_WINDOW (window), "Heatloom");
   gtk_window_set_transient_for (GTK_WINDOW (window), parent);
   gtk_window_set_modal (GTK_WINDOW (window), TRUE);
   gtk_window_set_resizable (GTK_WINDOW (window), FALSE);

@@ -6,8 +6,8 @@
 #include "draw/export.h"
 #include "plant/i18n.h"
 
-#define PREVIEW_WIDTH 520
-#define PREVIEW_HEIGHT 360
+#define WIDTH 900
+#define HEIGHT 540
 
 struct _HlExportDialog {
   GtkWindow  parent_instance;
@@ -232,7 +232,6 @@ build_preview (HlExportDialog *self)
   self->stack = gtk_stack_new ();
   gtk_stack_add_child (GTK_STACK (self->stack), self->picture);
   gtk_stack_add_child (GTK_STACK (self->stack), scroller);
-  gtk_widget_set_size_request (self->stack, PREVIEW_WIDTH, PREVIEW_HEIGHT);
   gtk_widget_set_hexpand (self->stack, TRUE);
   gtk_widget_set_vexpand (self->stack, TRUE);
   gtk_widget_add_css_class (self->stack, "preview");
@@ -289,6 +288,7 @@ hl_export_dialog_init (HlExportDialog *self)
   GtkWidget *left = gtk_box_new (GTK_ORIENTATION_VERTICAL, 10);
 
   gtk_window_set_title (GTK_WINDOW (self), _("Hand over"));
+  gtk_window_set_default_size (GTK_WINDOW (self), WIDTH, HEIGHT);
   gtk_widget_add_css_class (GTK_WIDGET (self), "heatloom");
   gtk_widget_add_css_class (GTK_WIDGET (self), "export");
   gtk_widget_add_css_class (box, "dialog-box");
@@ -299,7 +299,6 @@ hl_export_dialog_init (HlExportDialog *self)
   gtk_box_append (GTK_BOX (left), self->remark);
   gtk_box_append (GTK_BOX (middle), left);
   gtk_box_append (GTK_BOX (middle), build_preview (self));
-  gtk_box_append (GTK_BOX (box), hl_pane_label (_("Hand over"), "title"));
   gtk_box_append (GTK_BOX (box), middle);
   gtk_box_append (GTK_BOX (box), build_buttons (self));
   gtk_window_set_child (GTK_WINDOW (self), box);

@@ -130,11 +130,12 @@ hl_glance_init (HlGlance *self)
   gtk_label_set_wrap (GTK_LABEL (self->remark), TRUE);
   gtk_widget_set_parent (self->remark, GTK_WIDGET (self));
   self->grid = gtk_grid_new ();
-  gtk_grid_set_column_spacing (GTK_GRID (self->grid), 10);
+  gtk_grid_set_column_spacing (GTK_GRID (self->grid), 0);
   self->scroller = gtk_scrolled_window_new ();
   gtk_scrolled_window_set_policy (GTK_SCROLLED_WINDOW (self->scroller), GTK_POLICY_NEVER, GTK_POLICY_AUTOMATIC);
   gtk_scrolled_window_set_child (GTK_SCROLLED_WINDOW (self->scroller), self->grid);
   gtk_scrolled_window_set_propagate_natural_height (GTK_SCROLLED_WINDOW (self->scroller), TRUE);
+  gtk_scrolled_window_set_propagate_natural_width (GTK_SCROLLED_WINDOW (self->scroller), TRUE);
   gtk_widget_set_vexpand (self->scroller, TRUE);
   gtk_widget_set_parent (self->scroller, GTK_WIDGET (self));
   gtk_widget_set_size_request (GTK_WIDGET (self), CARD_WIDTH, -1);

@@ -85,6 +85,20 @@ add_column (HlLedgerView *self, guint column)
   gtk_column_view_append_column (GTK_COLUMN_VIEW (self->table), view_column);
 }
 
+/* The number of the stream, its figures, then the words: figures are what a ledger is read for. */
+static void
+add_columns (HlLedgerView *self)
+{
+  for (int round = 0; round < 3; round++)
+    for (guint n = 0; n < hl_ledger_n_columns (); n++)
+      {
+        const HlLedgerColumn *column = hl_ledger_column (n);
+        int place = strcmp (column->key, "id") == 0 ? 0 : column->is_text ? 2 : 1;
+        if (place == round)
+          add_column (self, n);
+      }
+}
+
 static void
 show_headings (HlLedgerView *self)
 {
@@ -103,11 +117,13 @@ static void
 align_headings (HlLedgerView *self)
 {
   GtkWidget *title = gtk_widget_get_first_child (gtk_widget_get_first_child (self->table));
+  GListModel *columns = gtk_column_view_get_columns (GTK_COLUMN_VIEW (self->table));
 
-  for (guint n = 0; title != NULL && n < hl_ledger_n_columns (); n++, title = gtk_widget_get_next_sibling (title))
+  for (guint n = 0; title != NULL && n < g_list_model_get_n_items (columns); n++, title = gtk_widget_get_next_sibling (title))
     {
+      g_autoptr (GtkColumnViewColumn) column = g_list_model_get_item (columns, n);
       GtkWidget *box = gtk_widget_get_first_child (title);
-      if (box != NULL && !hl_ledger_column (n)->is_text)
+      if (box != NULL && !hl_ledger_column (column_of (column))->is_text)
         gtk_widget_set_halign (box, GTK_ALIGN_END);
     }
 }
@@ -321,8 +337,7 @@ hl_ledger_view_init (HlLedgerView *self)
   gtk_column_view_set_show_row_separators (GTK_COLUMN_VIEW (self->table), TRUE);
   hl_pane_set_accessible (self->table, _("Ledger of all streams"), _("Ctrl+C copies the selected rows"));
   g_signal_connect_swapped (self->selection, "selection-changed", G_CALLBACK (rows_selected_cb), self);
-  for (guint n = 0; n < hl_ledger_n_columns (); n++)
-    add_column (self, n);
+  add_columns (self);
   align_headings (self);
   self->scroller = gtk_scrolled_window_new ();
   gtk_scrolled_window_set_child (GTK_SCROLLED_WINDOW (self->scroller), self->table);

@@ -62,7 +62,7 @@ put_options (HlNameplateBody *body, HlSession *session, const HlComponent *compo
         row = hl_option_row_new (session, component->id, option);
       else
         hl_option_row_update (row);
-      hl_nameplate_body_put (body, _("Make-up of the component"), key, row);
+      hl_nameplate_body_put (body, _("Arrangement"), key, row);
     }
 }
 

@@ -140,32 +140,11 @@ show_name (HlNameplateHead *self, const char *of, const char *name, const char *
 
 /* --- update --- */
 
-/* "Turbine section, 2 extractions, by group" */
-static char *
-component_line (const HlComponent *component)
-{
-  GString *line = g_string_new (_(component->kind->name));
-
-  for (guint n = 0; n < component->kind->n_options; n++)
-    {
-      const HlOptionKind *option = &component->kind->options[n];
-      if (option->choice_names != NULL)
-        g_string_append_printf (line, ", %s", _(option->choice_names[component->options[n]]));
-      else if (component->options[n] > 0)
-        {
-          g_autofree char *lower = g_utf8_strdown (_(option->name), -1);
-          g_string_append_printf (line, ", %s %d", lower, component->options[n]);
-        }
-    }
-  return g_string_free (line, FALSE);
-}
-
 static void
 show_component (HlNameplateHead *self, const HlComponent *component)
 {
-  g_autofree char *line = component_line (component);
   gtk_label_set_text (GTK_LABEL (self->id), component->id);
-  gtk_label_set_text (GTK_LABEL (self->line), line);
+  gtk_label_set_text (GTK_LABEL (self->line), _(component->kind->name));
   gtk_widget_set_tooltip_text (self->line, component->kind->help != NULL ? _(component->kind->help) : NULL);
   gtk_label_set_text (GTK_LABEL (self->detail), "");
   hl_pane_set_accessible (self->name, _("Name"), component->id);

@@ -256,7 +256,7 @@ hl_site_row_new (HlSession *session, HlSiteNumber which)
   gtk_widget_add_controller (row->control, keys);
   gtk_box_append (GTK_BOX (line), row->control);
   row->unit = hl_pane_label ("", "unit");
-  gtk_label_set_width_chars (GTK_LABEL (row->unit), 5);
+  gtk_label_set_width_chars (GTK_LABEL (row->unit), 3);
   gtk_box_append (GTK_BOX (line), row->unit);
   row->note = hl_pane_label ("", "note");
   gtk_widget_add_css_class (row->note, "error");

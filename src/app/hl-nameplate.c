@@ -4,7 +4,7 @@
 #include "app/hl-pane.h"
 #include "plant/i18n.h"
 
-#define PANE_WIDTH 300
+#define PANE_WIDTH 306
 
 struct _HlNameplate {
   GtkWidget        parent_instance;

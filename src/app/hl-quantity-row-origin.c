@@ -76,6 +76,13 @@ add_item (GMenu *menu, const char *text, HlOrigin origin)
   g_object_unref (item);
 }
 
+static void
+menu_closed_cb (HlQuantityRow *self)
+{
+  if (!self->is_retired && !self->is_focused)
+    gtk_widget_grab_focus (self->entry);
+}
+
 /* The menu says what each choice would make of the value. */
 static void
 create_menu_cb (GtkMenuButton *button, gpointer data)
@@ -105,6 +112,7 @@ create_menu_cb (GtkMenuButton *button, gpointer data)
   g_menu_append_section (menu, NULL, G_MENU_MODEL (more));
 
   GtkWidget *popover = gtk_popover_menu_new_from_model (G_MENU_MODEL (menu));
+  g_signal_connect_object (popover, "closed", G_CALLBACK (menu_closed_cb), self, G_CONNECT_SWAPPED);
   gtk_menu_button_set_popover (button, popover);
 }
 
@@ -122,7 +130,6 @@ hl_quantity_row_add_origin (HlQuantityRow *self)
 
   self->pill = gtk_label_new ("");
   gtk_widget_add_css_class (self->pill, "pill");
-  gtk_label_set_width_chars (GTK_LABEL (self->pill), 8);
   self->origin_button = gtk_menu_button_new ();
   gtk_menu_button_set_child (GTK_MENU_BUTTON (self->origin_button), self->pill);
   gtk_menu_button_set_has_frame (GTK_MENU_BUTTON (self->origin_button), FALSE);
@@ -148,15 +155,18 @@ hl_quantity_row_update_origin (HlQuantityRow *self)
   HlOrigin origin = origin_now (self);
   double si;
   gboolean is_known = hl_quantity_row_number (self, &si);
-  g_autofree char *tooltip = hl_quantity_row_help (self, "\n");
+  g_autofree char *help = hl_quantity_row_help (self, "\n");
+  g_autofree char *tooltip = g_strdup_printf ("%s\n%s", self->name, help);
   g_autofree char *label = g_strdup_printf (_("Origin of %s: %s"), self->name, hl_origin_name (origin));
   g_autofree char *shown = is_known ? hl_quantity_format (self->kind, si, hl_pane_units (self->session)) : g_strdup (_("not known"));
   g_autofree char *description = g_strdup_printf ("%s, %s", shown, hl_origin_name (origin));
 
   set_origin_class (GTK_WIDGET (self), origin);
-  /* What is neither given nor solved yet is not "found": say so. */
-  gtk_label_set_text (GTK_LABEL (self->pill), origin == HL_ORIGIN_FOUND && !is_known ? C_("value", "open") : hl_origin_name (origin));
-  if (origin == HL_ORIGIN_FOUND && !is_known)
+  /* What is neither given nor solved is not "found": there is none (quality of superheated steam), or it is still open. */
+  gboolean is_found = origin != HL_ORIGIN_FOUND || is_known;
+  const char *other = hl_solution_is_solved (hl_session_solution (self->session)) ? C_("value", "none") : C_("value", "open");
+  gtk_label_set_text (GTK_LABEL (self->pill), is_found ? hl_origin_name (origin) : other);
+  if (!is_found)
     gtk_widget_add_css_class (GTK_WIDGET (self), "open");
   else
     gtk_widget_remove_css_class (GTK_WIDGET (self), "open");

@@ -67,7 +67,7 @@ hl_quantity_row_number (HlQuantityRow *self, double *si)
 static char *
 number_and_unit (char *text, char **unit)
 {
-  char *space = strrchr (text, ' ');
+  char *space = strchr (text, ' ');
 
   *unit = g_strdup (space != NULL ? space + 1 : "");
   if (space != NULL)
@@ -118,12 +118,15 @@ is_typing (HlQuantityRow *self)
   return g_strcmp0 (gtk_editable_get_text (GTK_EDITABLE (self->entry)), self->shown) != 0;
 }
 
-/* The entry grows while long text is in it, and takes the room from the name. */
+/* The entry is as wide as its text, with room to type in while it has the focus; the name gives way. */
 static void
 fit_entry (HlQuantityRow *self)
 {
   long length = g_utf8_strlen (gtk_editable_get_text (GTK_EDITABLE (self->entry)), -1);
-  int chars = self->is_focused || is_typing (self) ? (int) CLAMP (length + 1, 7, 17) : 7;
+  gboolean is_edited = self->is_focused || is_typing (self);
+  int chars = (int) CLAMP (is_edited ? MAX (length + 1, 7) : length, 2, 17);
+
+  gtk_widget_set_visible (self->origin_button, !is_edited || length <= 10);      /* room for a tie */
 
   if (gtk_editable_get_width_chars (GTK_EDITABLE (self->entry)) == chars)
     return;
@@ -138,6 +141,7 @@ show_value (HlQuantityRow *self)
   g_autofree char *text = value_text (self, &unit);
 
   gtk_label_set_text (GTK_LABEL (self->unit), unit);
+  gtk_widget_set_visible (self->unit, *unit != '\0');
   if (g_strcmp0 (text, self->shown) == 0 && !is_typing (self))
     return;
   g_free (self->shown);
@@ -284,25 +288,26 @@ key_pressed_cb (GtkEventControllerKey *controller, guint key, guint code, GdkMod
     case GDK_KEY_Down:
     case GDK_KEY_KP_Down:
       if (state & GDK_ALT_MASK)
-        {
-          gtk_menu_button_popup (GTK_MENU_BUTTON (self->origin_button));
-          return GDK_EVENT_STOP;
-        }
+        return GDK_EVENT_PROPAGATE;
       g_signal_emit_by_name (gtk_widget_get_root (self->entry), "move-focus", GTK_DIR_TAB_FORWARD);
       return GDK_EVENT_STOP;
     case GDK_KEY_Up:
     case GDK_KEY_KP_Up:
       g_signal_emit_by_name (gtk_widget_get_root (self->entry), "move-focus", GTK_DIR_TAB_BACKWARD);
       return GDK_EVENT_STOP;
-    case GDK_KEY_Return:
-    case GDK_KEY_KP_Enter:
-      if (!(state & GDK_ALT_MASK))
-        return GDK_EVENT_PROPAGATE;
-      hl_quantity_row_show_explanation (self, !gtk_widget_get_visible (self->explanation));
-      return GDK_EVENT_STOP;
     default:
       return GDK_EVENT_PROPAGATE;
     }
+}
+
+static gboolean
+open_origin_cb (GtkWidget *widget, GVariant *args, gpointer data)
+{
+  HlQuantityRow *self = HL_QUANTITY_ROW (widget);
+
+  gtk_widget_set_visible (self->origin_button, TRUE);
+  gtk_menu_button_popup (GTK_MENU_BUTTON (self->origin_button));
+  return TRUE;
 }
 
 void
@@ -319,6 +324,9 @@ static void
 build_name (HlQuantityRow *self)
 {
   self->name_label = hl_pane_label (self->name, NULL);
+  gtk_label_set_wrap (GTK_LABEL (self->name_label), TRUE);
+  gtk_label_set_wrap_mode (GTK_LABEL (self->name_label), PANGO_WRAP_WORD_CHAR);
+  gtk_label_set_lines (GTK_LABEL (self->name_label), 2);
   gtk_label_set_ellipsize (GTK_LABEL (self->name_label), PANGO_ELLIPSIZE_END);
   self->name_button = gtk_button_new ();
   gtk_button_set_child (GTK_BUTTON (self->name_button), self->name_label);
@@ -337,8 +345,8 @@ build_entry (HlQuantityRow *self)
 
   self->entry = gtk_entry_new ();
   gtk_editable_set_alignment (GTK_EDITABLE (self->entry), 1.0f);
-  gtk_editable_set_width_chars (GTK_EDITABLE (self->entry), 7);
-  gtk_editable_set_max_width_chars (GTK_EDITABLE (self->entry), 7);
+  gtk_editable_set_width_chars (GTK_EDITABLE (self->entry), 2);
+  gtk_editable_set_max_width_chars (GTK_EDITABLE (self->entry), 2);
   gtk_entry_set_placeholder_text (GTK_ENTRY (self->entry), "–");
   gtk_widget_set_valign (self->entry, GTK_ALIGN_CENTER);
   g_signal_connect (self->entry, "activate", G_CALLBACK (entry_activate_cb), self);
@@ -352,19 +360,30 @@ build_entry (HlQuantityRow *self)
   gtk_box_append (GTK_BOX (self->line), self->entry);
 
   self->unit = hl_pane_label ("", "unit");
-  gtk_label_set_width_chars (GTK_LABEL (self->unit), 5);
   gtk_box_append (GTK_BOX (self->line), self->unit);
+}
+
+/* Unit, gaps and the entry's frame lead to the entry too. */
+static void
+line_pressed_cb (GtkGestureClick *gesture, int n_press, double x, double y, HlQuantityRow *self)
+{
+  if (!self->is_focused)
+    gtk_widget_grab_focus (self->entry);
 }
 
 static void
 build (HlQuantityRow *self)
 {
-  self->line = gtk_box_new (GTK_ORIENTATION_HORIZONTAL, 4);
+  GtkGesture *click = gtk_gesture_click_new ();
+
+  self->line = gtk_box_new (GTK_ORIENTATION_HORIZONTAL, 0);
   gtk_widget_add_css_class (self->line, "line");
   gtk_widget_set_parent (self->line, GTK_WIDGET (self));
   build_name (self);
   build_entry (self);
   hl_quantity_row_add_origin (self);
+  g_signal_connect (click, "pressed", G_CALLBACK (line_pressed_cb), self);
+  gtk_widget_add_controller (self->line, GTK_EVENT_CONTROLLER (click));
 
   self->note = hl_pane_label ("", "note");
   gtk_label_set_wrap (GTK_LABEL (self->note), TRUE);
@@ -425,6 +444,10 @@ hl_quantity_row_class_init (HlQuantityRowClass *klass)
   G_OBJECT_CLASS (klass)->finalize = hl_quantity_row_finalize;
   widget_class->focus = hl_quantity_row_focus;
   widget_class->grab_focus = hl_quantity_row_grab_focus;
+  gtk_widget_class_add_binding (widget_class, GDK_KEY_Down, GDK_ALT_MASK, open_origin_cb, NULL);
+  gtk_widget_class_add_binding (widget_class, GDK_KEY_KP_Down, GDK_ALT_MASK, open_origin_cb, NULL);
+  gtk_widget_class_add_binding_action (widget_class, GDK_KEY_Return, GDK_ALT_MASK, "row.explain", NULL);
+  gtk_widget_class_add_binding_action (widget_class, GDK_KEY_KP_Enter, GDK_ALT_MASK, "row.explain", NULL);
   gtk_widget_class_set_css_name (widget_class, "quantity");
   gtk_widget_class_set_layout_manager_type (widget_class, GTK_TYPE_BOX_LAYOUT);
   gtk_widget_class_set_accessible_role (widget_class, GTK_ACCESSIBLE_ROLE_GROUP);

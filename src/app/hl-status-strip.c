@@ -41,11 +41,7 @@ show_summary (HlStatusStrip *self)
 static HlGradeShape
 mark_now (const HlSolution *solution)
 {
-  if (!hl_solution_is_solved (solution))
-    return HL_SHAPE_ERROR;
-  if (hl_solution_has_grade (solution, HL_GRADE_CAUTION))
-    return hl_grade_mark_of (hl_solution_finding (solution, 0)->grade);
-  return HL_SHAPE_GOOD;
+  return hl_solution_is_solved (solution) ? HL_SHAPE_GOOD : HL_SHAPE_ERROR;
 }
 
 static void
