@@ -1,0 +1,18 @@
+/* The list of kinds that the engine knows.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "engine/components/components.h"
+
+static const HlComponentModel *const models[] = {
+  &hl_heat_input_model, &hl_boiler_model, &hl_turbine_model, &hl_generator_model, &hl_condenser_model, &hl_pump_model, &hl_pipe_model,
+  &hl_valve_model, &hl_open_heater_model, &hl_closed_heater_model, &hl_splitter_model, &hl_mixer_model, &hl_steam_user_model,
+  &hl_make_up_model, &hl_boundary_model,
+};
+
+const HlComponentModel *
+hl_component_model (const HlKind *kind)
+{
+  for (guint k = 0; k < G_N_ELEMENTS (models); k++)
+    if (g_str_equal (models[k]->kind, kind->id))
+      return models[k];
+  return NULL;
+}

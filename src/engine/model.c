@@ -1,0 +1,557 @@
+/* A plant turned into unknowns and equations, and the way back from an address to its unknown.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "engine/model.h"
+#include "engine/components/components.h"
+#include "plant/i18n.h"
+#include <math.h>
+#include <string.h>
+
+#define N_COMPONENTS(model) ((int) hl_plant_n_components ((model)->plant))
+
+void
+hl_model_free (HlModel *model)
+{
+  if (model == NULL)
+    return;
+  hl_system_free (model->system);
+  g_array_unref (model->nodes);
+  g_array_unref (model->ports);
+  g_array_unref (model->own);
+  g_array_unref (model->open_ports);
+  for (int k = 0; k < HL_N_SUMS; k++)
+    g_array_unref (model->sums[k]);
+  g_free (model->first_port);
+  g_free (model->first_own);
+  g_free (model->is_on_shaft);
+  hl_plant_unref (model->plant);
+  g_free (model);
+}
+
+/* --- nodes ------------------------------------------------------------------ */
+
+static HlAddress
+state_address (const HlModel *model, const HlNode *node, const char *letter)
+{
+  if (node->stream >= 0)
+    return hl_address_stream (hl_plant_stream (model->plant, (guint) node->stream)->id, g_intern_static_string (letter));
+  char key[128];
+  g_snprintf (key, sizeof key, "%s.%s", node->port, letter);
+  return hl_address_component (hl_plant_component (model->plant, (guint) node->component)->id, g_intern_string (key));
+}
+
+static void
+add_node (HlModel *model, HlNode node)
+{
+  node.T = node.s = node.x = node.v = node.subcooling = -1;
+  node.m = hl_system_add_var (model->system, HL_VAR_FLOW, state_address (model, &node, "m"), NAN);
+  node.p = hl_system_add_var (model->system, HL_VAR_PRESSURE, state_address (model, &node, "p"), NAN);
+  node.h = hl_system_add_var (model->system, HL_VAR_ENTHALPY, state_address (model, &node, "h"), NAN);
+  g_array_append_val (model->nodes, node);
+}
+
+/* Streams' nodes, then for each component the list of its connected ports. */
+static void
+add_streams (HlModel *model)
+{
+  guint n_streams = hl_plant_n_streams (model->plant);
+  int n = N_COMPONENTS (model);
+  g_autofree int *ends = g_new (int, 2 * n_streams + 1);
+  g_autofree int *count = g_new0 (int, n + 1);
+  g_autoptr (GHashTable) index = g_hash_table_new (g_direct_hash, g_direct_equal);
+  for (int c = 0; c < n; c++)
+    g_hash_table_insert (index, (gpointer) hl_plant_component (model->plant, (guint) c)->id, GINT_TO_POINTER (c + 1));
+  for (guint i = 0; i < n_streams; i++)
+    {
+      const HlStream *stream = hl_plant_stream (model->plant, i);
+      HlNode node = { .stream = (int) i, .port = stream->from_port, .to_port = stream->to_port };
+      node.component = ends[2 * i] = GPOINTER_TO_INT (g_hash_table_lookup (index, stream->from_id)) - 1;
+      node.to_component = ends[2 * i + 1] = GPOINTER_TO_INT (g_hash_table_lookup (index, stream->to_id)) - 1;
+      node.fluid = hl_fluid_lookup (stream->medium);
+      if (node.fluid == NULL)
+        node.fluid = hl_fluid_water ();
+      add_node (model, node);
+      for (int end = 0; end < 2; end++)
+        if (ends[2 * i + end] >= 0)
+          count[ends[2 * i + end]]++;
+    }
+  model->first_port = g_new0 (int, n + 1);
+  for (int c = 0; c < n; c++)
+    model->first_port[c + 1] = model->first_port[c] + count[c];
+  g_array_set_size (model->ports, (guint) model->first_port[n]);
+  memset (count, 0, sizeof (int) * (gsize) n);
+  for (guint i = 0; i < n_streams; i++)
+    for (int end = 0; end < 2; end++)
+      {
+        const HlNode *node = hl_model_node (model, (int) i);
+        int c = ends[2 * i + end];
+        if (c < 0)
+          continue;
+        g_array_index (model->ports, HlPortNode, model->first_port[c] + count[c]++) =
+          (HlPortNode) { end == 0 ? node->port : node->to_port, (int) i, end == 0 };
+      }
+}
+
+int
+hl_model_port_node (const HlModel *model, int component, const char *port)
+{
+  for (int k = model->first_port[component]; k < model->first_port[component + 1]; k++)
+    if (g_array_index (model->ports, HlPortNode, k).key == port)
+      return g_array_index (model->ports, HlPortNode, k).node;
+  for (guint k = hl_plant_n_streams (model->plant); k < model->nodes->len; k++)
+    {
+      const HlNode *node = hl_model_node (model, (int) k);
+      if (node->component == component && node->port == port)
+        return (int) k;
+    }
+  return -1;
+}
+
+int
+hl_model_own_var (const HlModel *model, int component, const char *key)
+{
+  int place = component < 0 ? N_COMPONENTS (model) : component;
+  for (int k = model->first_own[place]; k < model->first_own[place + 1]; k++)
+    if (g_array_index (model->own, HlOwn, k).key == key)
+      return g_array_index (model->own, HlOwn, k).var;
+  return -1;
+}
+
+gboolean
+hl_model_find_state (const HlModel *model, const HlAddress *address, int *node, char *letter)
+{
+  const char *dot;
+  if (address->owner == HL_OWNER_PLANT || address->key == NULL)
+    return FALSE;
+  if (address->owner == HL_OWNER_STREAM)
+    {
+      *node = hl_plant_stream_index (model->plant, address->id);
+      *letter = address->key[0];
+      return *node >= 0 && address->key[0] != '\0' && address->key[1] == '\0';
+    }
+  if ((dot = strchr (address->key, '.')) == NULL || dot[1] == '\0' || dot[2] != '\0')
+    return FALSE;
+  int component = hl_plant_component_index (model->plant, address->id);
+  if (component < 0)
+    return FALSE;
+  gsize length = (gsize) (dot - address->key);
+  *letter = dot[1];
+  for (int k = model->first_port[component]; k < model->first_port[component + 1]; k++)
+    {
+      const HlPortNode *port = &g_array_index (model->ports, HlPortNode, k);
+      if (strncmp (port->key, address->key, length) == 0 && port->key[length] == '\0')
+        {
+          *node = port->node;
+          return TRUE;
+        }
+    }
+  for (guint k = hl_plant_n_streams (model->plant); k < model->nodes->len; k++)
+    {
+      const HlNode *open = hl_model_node (model, (int) k);
+      if (open->component == component && strncmp (open->port, address->key, length) == 0 && open->port[length] == '\0')
+        {
+          *node = (int) k;
+          return TRUE;
+        }
+    }
+  return FALSE;
+}
+
+static int
+node_var (const HlNode *node, char letter)
+{
+  switch (letter)
+    {
+    case 'm': return node->m;
+    case 'p': return node->p;
+    case 'h': return node->h;
+    case 'T': return node->T;
+    case 's': return node->s;
+    case 'x': return node->x;
+    case 'v': return node->v;
+    default: return -1;
+    }
+}
+
+int
+hl_model_find_var (const HlModel *model, const HlAddress *address)
+{
+  int node;
+  char letter;
+  if (address->owner == HL_OWNER_PLANT)
+    return hl_model_own_var (model, -1, address->key);
+  if (hl_model_find_state (model, address, &node, &letter))
+    return node_var (hl_model_node (model, node), letter);
+  if (address->owner != HL_OWNER_COMPONENT)
+    return -1;
+  int component = hl_plant_component_index (model->plant, address->id);
+  return component < 0 ? -1 : hl_model_own_var (model, component, address->key);
+}
+
+/* --- what components call ------------------------------------------------------ */
+
+const char *
+hl_key (const char *base, int number)
+{
+  char key[64];
+  g_snprintf (key, sizeof key, "%s%d", base, number);
+  return g_intern_string (key);
+}
+
+int
+hl_emit_optional (HlEmit *emit, const char *key)
+{
+  const HlModel *model = emit->model;
+  key = g_intern_string (key);
+  for (int k = model->first_port[emit->index]; k < model->first_port[emit->index + 1]; k++)
+    if (g_array_index (model->ports, HlPortNode, k).key == key)
+      return g_array_index (model->ports, HlPortNode, k).node;
+  return -1;
+}
+
+int
+hl_emit_port (HlEmit *emit, const char *key)
+{
+  int node = hl_emit_optional (emit, key);
+  if (node >= 0)
+    return node;
+  HlNode open = { .stream = -1, .component = emit->index, .to_component = -1, .port = g_intern_string (key), .fluid = hl_fluid_water () };
+  HlAddress address = hl_address_component (emit->component->id, open.port);
+  g_array_append_val (emit->model->open_ports, address);
+  add_node (emit->model, open);
+  return (int) emit->model->nodes->len - 1;
+}
+
+int
+hl_emit_hidden (HlEmit *emit, const char *key, HlVarKind kind)
+{
+  HlAddress address = emit->component != NULL ? hl_address_component (emit->component->id, g_intern_string (key))
+                                              : hl_address_plant (g_intern_string (key));
+  return hl_system_add_var (emit->system, kind, address, NAN);
+}
+
+int
+hl_emit_own (HlEmit *emit, const char *key, HlVarKind kind)
+{
+  HlOwn own = { g_intern_string (key), -1 };
+  own.var = hl_emit_hidden (emit, own.key, kind);
+  g_array_append_val (emit->model->own, own);
+  return own.var;
+}
+
+int
+hl_emit_constant (HlEmit *emit, HlVarKind kind, double value)
+{
+  int var = hl_emit_hidden (emit, "", kind);
+  hl_system_add_spec (emit->system, var, hl_system_var (emit->system, var)->address, HL_ORIGIN_GIVEN, hl_var_from_si (kind, value));
+  return var;
+}
+
+static const HlValue *
+value_of (HlEmit *emit, const char *key)
+{
+  key = g_intern_string (key);
+  const HlValues *values = &emit->component->values;
+  for (guint k = 0; k < values->n; k++)
+    if (values->entries[k].key == key)
+      return &values->entries[k].value;
+  return NULL;
+}
+
+gboolean
+hl_emit_has_value (HlEmit *emit, const char *key)
+{
+  return value_of (emit, key) != NULL;
+}
+
+gboolean
+hl_emit_is_fixed_at (HlEmit *emit, const char *key, double value)
+{
+  const HlValue *v = value_of (emit, key);
+  return v != NULL && v->origin != HL_ORIGIN_TIED && fabs (v->value - value) < 1e-300;
+}
+
+static int
+state_var (HlModel *model, int n, char letter, gboolean drives)
+{
+  HlNode *node = hl_model_node (model, n);
+  HlSystem *system = model->system;
+  switch (letter)
+    {
+    case 'T':
+      node->T_drives |= drives;
+      if (node->T < 0)
+        node->T = hl_system_add_var (system, HL_VAR_TEMPERATURE, state_address (model, node, "T"), NAN);
+      return node->T;
+    case 's':
+      if (node->s < 0)
+        {
+          node->s = hl_system_add_var (system, HL_VAR_ENTROPY, state_address (model, node, "s"), NAN);
+          if (drives)
+            hl_add_enthalpy_at_entropy (system, node->fluid, node->p, node->s, node->h)->component = node->component;
+          else
+            hl_add_entropy (system, node->fluid, node->p, node->h, node->s)->component = node->component;
+        }
+      return node->s;
+    case 'x':
+      if (node->x < 0)
+        {
+          node->x = hl_system_add_var (system, HL_VAR_RATIO, state_address (model, node, "x"), NAN);
+          if (drives)
+            hl_add_enthalpy_at_quality (system, node->fluid, node->p, node->x, node->h)->component = node->component;
+          else
+            hl_add_quality (system, node->fluid, node->p, node->h, node->x)->component = node->component;
+        }
+      return node->x;
+    case 'v':
+      if (node->v < 0)
+        {
+          node->v = hl_system_add_var (system, HL_VAR_VOLUME, state_address (model, node, "v"), NAN);
+          hl_add_volume (system, node->fluid, node->p, node->h, node->v)->component = node->component;
+        }
+      return node->v;
+    default:
+      return node_var (node, letter);
+    }
+}
+
+int
+hl_emit_T (HlEmit *emit, int node, gboolean drives)
+{
+  return state_var (emit->model, node, 'T', drives);
+}
+
+void
+hl_emit_sum (HlEmit *emit, HlSum sum, int var)
+{
+  g_array_append_val (emit->model->sums[sum], var);
+}
+
+void
+hl_emit_guess (HlEmit *emit, int node, double h)
+{
+  int var = hl_model_node (emit->model, node)->h;
+  hl_system_var (emit->system, var)->start = h;
+}
+
+HlEquation *
+hl_emit_done (HlEmit *emit, HlEquation *equation, const char *says, int output)
+{
+  equation->component = emit->index;
+  if (says != NULL)
+    equation->says = says;
+  if (output >= 0)
+    equation->output = output;
+  return equation;
+}
+
+void
+hl_emit_balance (HlEmit *emit, const int *in, int n_in, const int *out, int n_out)
+{
+  int vars[HL_EQUATION_MOST], n = 0;
+  double signs[HL_EQUATION_MOST];
+  if (n_in == 1 && n_out == 1)
+    {
+      hl_system_merge (emit->system, in[0], out[0]);
+      return;
+    }
+  for (int k = 0; k < n_in; k++, n++)
+    {
+      vars[n] = in[k];
+      signs[n] = 1.0;
+    }
+  for (int k = 0; k < n_out; k++, n++)
+    {
+      vars[n] = out[k];
+      signs[n] = -1.0;
+    }
+  HlEquation *e = hl_add_linear (emit->system, HL_VAR_FLOW, vars, signs, n, 0.0);
+  e->component = emit->index;
+  e->is_balance = TRUE;
+}
+
+/* --- values ------------------------------------------------------------------- */
+
+/* Variable of an address, made where it does not exist yet; -1 when the plant has no such thing now. */
+static int
+want_var (HlModel *model, const HlAddress *address, gboolean drives)
+{
+  int node;
+  char letter;
+  if (hl_model_find_state (model, address, &node, &letter))
+    return state_var (model, node, letter, drives);
+  return hl_model_find_var (model, address);
+}
+
+static void
+add_value (HlModel *model, HlAddress address, const HlValue *value)
+{
+  int var = want_var (model, &address, TRUE);
+  if (var < 0)
+    return;
+  HlSystem *system = model->system;
+  if (value->origin != HL_ORIGIN_TIED)
+    {
+      double x = hl_var_from_si (hl_system_var (system, var)->kind, value->value);
+      if (isfinite (x))
+        hl_system_add_spec (system, var, address, value->origin, x);
+      return;
+    }
+  int source = want_var (model, &value->tie_of, FALSE);
+  if (source < 0)
+    return;
+  hl_add_tie (system, var, source, value->tie_factor, value->tie_offset);
+  int equation = (int) system->equations->len - 1;
+  if (address.owner == HL_OWNER_COMPONENT)
+    hl_system_equation (system, equation)->component = hl_plant_component_index (model->plant, address.id);
+  hl_system_add_spec (system, var, address, HL_ORIGIN_TIED, NAN)->equation = equation;
+}
+
+static void
+add_values (HlModel *model)
+{
+  for (int c = 0; c < N_COMPONENTS (model); c++)
+    {
+      const HlComponent *component = hl_plant_component (model->plant, (guint) c);
+      for (guint k = 0; k < component->values.n; k++)
+        {
+          const HlValueEntry *entry = &component->values.entries[k];
+          add_value (model, (HlAddress) { HL_OWNER_COMPONENT, component->id, entry->key }, &entry->value);
+        }
+    }
+  for (guint i = 0; i < hl_plant_n_streams (model->plant); i++)
+    {
+      const HlStream *stream = hl_plant_stream (model->plant, i);
+      for (guint k = 0; k < stream->values.n; k++)
+        add_value (model, (HlAddress) { HL_OWNER_STREAM, stream->id, stream->values.entries[k].key }, &stream->values.entries[k].value);
+    }
+  const HlValues *values = hl_plant_values (model->plant);
+  for (guint k = 0; k < values->n; k++)
+    add_value (model, (HlAddress) { HL_OWNER_PLANT, g_intern_static_string (""), values->entries[k].key }, &values->entries[k].value);
+}
+
+static gboolean
+has_spec (const HlSystem *system, int var)
+{
+  int root = hl_system_find (system, var);
+  for (guint k = 0; k < system->specs->len; k++)
+    if (hl_system_find (system, hl_system_spec (system, k)->var) == root)
+      return TRUE;
+  return FALSE;
+}
+
+/* Temperatures that somebody asked for.  One given for steam on its way to a condenser, where no pressure is given, is that of
+ * condensing: the steam may be wet, and then the temperature sets the pressure and not the enthalpy. */
+static void
+add_temperatures (HlModel *model)
+{
+  for (guint k = 0; k < model->nodes->len; k++)
+    {
+      const HlNode *node = hl_model_node (model, (int) k);
+      HlEquation *e;
+      if (node->T < 0)
+        continue;
+      if (node->subcooling >= 0)
+        {
+          e = hl_add_subcooled_temperature (model->system, node->fluid, node->p, node->subcooling, node->T);
+          e->output = 2;
+        }
+      else if (!node->T_drives)
+        e = hl_add_temperature (model->system, node->fluid, node->p, node->h, node->T);
+      else if (node->is_exhaust && !has_spec (model->system, node->p))
+        e = hl_add_saturation (model->system, node->fluid, node->p, node->T);
+      else
+        e = hl_add_enthalpy_at_temperature (model->system, node->fluid, node->p, node->T, node->h);
+      e->component = node->component;
+    }
+}
+
+/* --- building ------------------------------------------------------------------- */
+
+/* A shaft carries power on where a generator or a driven machine takes it. */
+static void
+look_at_shafts (HlModel *model)
+{
+  HlPlant *plant = model->plant;
+  model->is_on_shaft = g_new0 (gboolean, N_COMPONENTS (model) + 1);
+  for (guint i = 0; i < hl_plant_n_shafts (plant); i++)
+    {
+      const HlShaft *shaft = hl_plant_shaft (plant, i);
+      gboolean gives = FALSE, takes = FALSE;
+      for (guint k = 0; k < shaft->n_joins; k++)
+        {
+          const HlComponent *component = hl_plant_find_component (plant, shaft->joins[k]);
+          if (component != NULL)
+            {
+              gives |= component->kind->shaft == HL_SHAFT_DRIVES;
+              takes |= component->kind->shaft == HL_SHAFT_DRIVEN || component->kind->shaft == HL_SHAFT_GENERATOR;
+            }
+        }
+      for (guint k = 0; gives && takes && k < shaft->n_joins; k++)
+        {
+          int c = hl_plant_component_index (plant, shaft->joins[k]);
+          if (c >= 0)
+            model->is_on_shaft[c] = TRUE;
+        }
+    }
+}
+
+static void
+add_shafts (HlModel *model)
+{
+  HlPlant *plant = model->plant;
+  for (guint i = 0; i < hl_plant_n_shafts (plant); i++)
+    {
+      const HlShaft *shaft = hl_plant_shaft (plant, i);
+      int vars[HL_EQUATION_MOST], n = 0;
+      double signs[HL_EQUATION_MOST];
+      for (guint k = 0; k < shaft->n_joins && n < HL_EQUATION_MOST; k++)
+        {
+          int c = hl_plant_component_index (plant, shaft->joins[k]);
+          if (c < 0 || !model->is_on_shaft[c])
+            continue;
+          HlShaftRole role = hl_plant_component (plant, (guint) c)->kind->shaft;
+          const char *key = role == HL_SHAFT_GENERATOR ? "shaft_power" : "power";
+          int var = hl_model_own_var (model, c, g_intern_static_string (key));
+          if (var < 0)
+            continue;
+          vars[n] = var;
+          signs[n++] = role == HL_SHAFT_DRIVES ? 1.0 : -1.0;
+        }
+      if (n > 0)
+        hl_add_linear (model->system, HL_VAR_POWER, vars, signs, n, 0.0);
+    }
+}
+
+HlModel *
+hl_model_new (HlPlant *plant)
+{
+  HlModel *model = g_new0 (HlModel, 1);
+  model->plant = hl_plant_ref (plant);
+  model->system = hl_system_new ();
+  model->nodes = g_array_sized_new (FALSE, FALSE, sizeof (HlNode), 64);
+  model->ports = g_array_sized_new (FALSE, FALSE, sizeof (HlPortNode), 128);
+  model->own = g_array_sized_new (FALSE, FALSE, sizeof (HlOwn), 256);
+  model->open_ports = g_array_new (FALSE, FALSE, sizeof (HlAddress));
+  for (int k = 0; k < HL_N_SUMS; k++)
+    model->sums[k] = g_array_new (FALSE, FALSE, sizeof (int));
+  add_streams (model);
+  look_at_shafts (model);
+  int n = N_COMPONENTS (model);
+  model->first_own = g_new0 (int, n + 2);
+  for (int c = 0; c < n; c++)
+    {
+      HlEmit emit = { model, model->system, hl_plant_component (plant, (guint) c), c };
+      const HlComponentModel *component_model = hl_component_model (emit.component->kind);
+      model->first_own[c] = (int) model->own->len;
+      if (component_model != NULL)
+        component_model->emit (&emit);
+    }
+  model->first_own[n] = model->first_own[n + 1] = (int) model->own->len;
+  add_shafts (model);
+  hl_emit_plant (model);
+  model->first_own[n + 1] = (int) model->own->len;
+  add_values (model);
+  add_temperatures (model);
+  hl_system_close (model->system);
+  return model;
+}

@@ -1,0 +1,26 @@
+/* What happens to the medium inside components, collected for state diagrams.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include "engine/model.h"
+#include "engine/solution.h"
+G_BEGIN_DECLS
+
+/* State at a node as far as it is known. */
+typedef struct {
+  gboolean has_flow, has_pressure, has_state, is_service;
+  double   m, p;
+  HlState  st;
+} HlNodeResult;
+
+typedef struct {
+  const HlModel      *model;
+  const HlNodeResult *states;      /* by node */
+  const HlComponent  *component;
+  int                 index;
+  GArray             *out;         /* HlProcess */
+} HlProcessSink;
+
+int  hl_process_node     (const HlProcessSink *sink, const char *port);          /* -1 when not connected */
+/* Adds the way from one node to another, where both states are known; with the isentropic end for machines. */
+void hl_process_add      (HlProcessSink *sink, HlProcessKind kind, int from, int to);
+G_END_DECLS
