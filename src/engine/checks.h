@@ -28,6 +28,4 @@ HlFinding          *hl_check_add   (HlChecker *checker, HlGrade grade, const cha
 void                hl_check_offer (HlChecker *checker, HlFinding *finding, const char *key);
 /* Entropy may not vanish in a component that exchanges no heat with its surroundings. */
 void                hl_check_entropy (HlChecker *checker);
-/* Flows that run against their line's direction. */
-void                hl_check_pressure_falls (HlChecker *checker, const char *in, const char *out, const char *code, const char *format);
 G_END_DECLS

@@ -311,3 +311,14 @@ hl_numbers_solve (HlSystem *system, const HlStructure *structure, HlNumbers *num
   hl_block_work_free (work);
   compute_last (system, structure, numbers);
 }
+
+/* Nothing is solved: only what was put in is known. */
+void
+hl_numbers_skip (HlSystem *system, HlNumbers *numbers)
+{
+  memset (numbers, 0, sizeof *numbers);
+  numbers->block = numbers->worst = -1;
+  numbers->is_known = g_new0 (gboolean, system->vars->len + 1);
+  for (guint v = 0; v < system->vars->len; v++)
+    numbers->is_known[v] = system->fixed_by[v] >= 0;
+}

@@ -25,4 +25,5 @@ typedef struct {
 } HlNumbers;
 
 void hl_numbers_solve (HlSystem *system, const HlStructure *structure, HlNumbers *numbers);
+void hl_numbers_skip  (HlSystem *system, HlNumbers *numbers);   /* only what was put in is known */
 G_END_DECLS

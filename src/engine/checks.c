@@ -1,0 +1,136 @@
+/* What is wrong with a solution, or unwise about it: laws first, then practice.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "engine/checks.h"
+#include "engine/components/components.h"
+#include "plant/i18n.h"
+#include <math.h>
+
+const HlNodeResult *
+hl_check_port (const HlChecker *checker, const char *port)
+{
+  int node = hl_model_port_node (checker->model, checker->index, g_intern_string (port));
+  return node >= 0 ? &checker->states[node] : NULL;
+}
+
+gboolean
+hl_check_own (const HlChecker *checker, const char *key, double *value)
+{
+  int var = hl_model_own_var (checker->model, checker->index, g_intern_string (key));
+  if (var < 0 || !checker->is_known[checker->model->system->root[var]])
+    return FALSE;
+  *value = hl_system_value (checker->model->system, var);
+  return TRUE;
+}
+
+char *
+hl_check_text (const HlChecker *checker, HlDimension dimension, double value)
+{
+  return hl_units_format (value, dimension, hl_plant_units (checker->model->plant));
+}
+
+HlFinding *
+hl_check_add (HlChecker *checker, HlGrade grade, const char *code, const char *key, char *text)
+{
+  return hl_findings_add (checker->findings, grade, code, hl_address_component (checker->component->id, g_intern_string (key)), text);
+}
+
+void
+hl_check_offer (HlChecker *checker, HlFinding *finding, const char *key)
+{
+  HlAddress address = hl_address_component (checker->component->id, g_intern_string (key));
+  if (hl_component_quantity_kind (checker->component, address.key) == NULL)
+    return;
+  g_autofree char *name = hl_plant_describe (checker->model->plant, &address);
+  hl_finding_mend (finding, HL_MEND_EDIT, address, NAN, g_strdup_printf (_("Change %s"), name));
+}
+
+/* Entropy out minus entropy in over all connected ports; nothing here exchanges heat with the surroundings. */
+void
+hl_check_entropy (HlChecker *checker)
+{
+  const HlModel *model = checker->model;
+  double produced = 0.0, flow = 0.0;
+  for (int k = model->first_port[checker->index]; k < model->first_port[checker->index + 1]; k++)
+    {
+      const HlPortNode *port = &g_array_index (model->ports, HlPortNode, k);
+      const HlNodeResult *node = &checker->states[port->node];
+      if (!node->has_flow || !node->has_state || node->m < 0.0)
+        return;
+      produced += (port->is_out ? 1.0 : -1.0) * node->m * node->st.s;
+      flow = fmax (flow, node->m);
+    }
+  if (!(produced < -1e-3 * flow))
+    return;
+  for (guint k = 0; k < checker->findings->list->len; k++)
+    {
+      const HlFinding *finding = &g_array_index (checker->findings->list, HlFinding, k);
+      if (finding->grade == HL_GRADE_ERROR && finding->at.id == checker->component->id)
+        return;
+    }
+  hl_check_add (checker, HL_GRADE_ERROR, "entropy-destroyed", "",
+    g_strdup_printf (_("%s would destroy entropy, %.3f kW/K: against the second law. Check its efficiency, and the pressures and temperatures around it."),
+                     checker->component->id, -produced / 1e3));
+}
+
+/* --- flows ---------------------------------------------------------------------- */
+
+static void
+check_flows (HlChecker *checker)
+{
+  const HlModel *model = checker->model;
+  HlPlant *plant = model->plant;
+  double least = 1e-9 * model->system->flow_scale;
+  g_autofree gboolean *said = g_new0 (gboolean, model->system->vars->len + 1);
+  for (guint i = 0; i < hl_plant_n_streams (plant); i++)
+    {
+      const HlNodeResult *node = &checker->states[i];
+      int root = model->system->root[hl_model_node (model, (int) i)->m];
+      if (!node->has_flow || node->m >= -least || said[root])
+        continue;
+      said[root] = TRUE;
+      const HlStream *stream = hl_plant_stream (plant, i);
+      g_autofree char *m = hl_check_text (checker, HL_DIMENSION_MASS_FLOW, node->m);
+      hl_findings_add (checker->findings, HL_GRADE_ERROR, "negative-flow", hl_address_stream (stream->id, g_intern_static_string ("m")),
+        g_strdup_printf (_("Stream %s from %s to %s would flow backwards: %s. The values around it ask for the impossible."), stream->id, stream->from_id, stream->to_id, m));
+    }
+}
+
+/* A value outside the range of its kind's table is worth a hint. */
+static void
+check_credible (HlChecker *checker)
+{
+  const HlComponent *component = checker->component;
+  HlUnitSet units = hl_plant_units (checker->model->plant);
+  for (guint k = 0; k < component->values.n; k++)
+    {
+      const HlValueEntry *entry = &component->values.entries[k];
+      const HlQuantityKind *kind = hl_component_quantity_kind (component, entry->key);
+      double value = entry->value.value;
+      if (kind == NULL || entry->value.origin != HL_ORIGIN_GIVEN || !(value < kind->credible_low || value > kind->credible_high))
+        continue;
+      HlAddress address = hl_address_component (component->id, entry->key);
+      g_autofree char *name = hl_plant_describe (checker->model->plant, &address);
+      g_autofree char *text = hl_quantity_format (kind, value, units), *low = hl_quantity_format (kind, kind->credible_low, units);
+      g_autofree char *high = hl_quantity_format (kind, kind->credible_high, units);
+      HlFinding *finding = hl_check_add (checker, HL_GRADE_HINT, "unusual-value", entry->key,
+        g_strdup_printf (_("Unusual value: %s is %s; common are %s to %s."), name, text, low, high));
+      hl_check_offer (checker, finding, entry->key);
+    }
+}
+
+void
+hl_check_all (HlChecker *checker)
+{
+  for (guint c = 0; c < hl_plant_n_components (checker->model->plant); c++)
+    {
+      checker->index = (int) c;
+      checker->component = hl_plant_component (checker->model->plant, c);
+      const HlComponentModel *model = hl_component_model (checker->component->kind);
+      if (model != NULL && model->check != NULL)
+        model->check (checker);
+      check_credible (checker);
+    }
+  checker->component = NULL;
+  if (checker->is_complete)
+    check_flows (checker);
+}

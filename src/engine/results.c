@@ -1,0 +1,126 @@
+/* What follows from the solved unknowns: states of all streams, results of the plant, processes.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "engine/solution-private.h"
+#include "engine/circuits.h"
+#include "engine/components/components.h"
+#include <math.h>
+
+void
+hl_results_states (HlSolution *solution)
+{
+  const HlModel *model = solution->model;
+  const HlSystem *system = model->system;
+  const gboolean *is_known = solution->numbers.is_known;
+  solution->circuits = hl_circuits (model);
+  g_autofree gboolean *is_service = hl_circuits_service (model, solution->circuits);
+  solution->states = g_new0 (HlNodeResult, model->nodes->len + 1);
+  for (guint k = 0; k < model->nodes->len; k++)
+    {
+      const HlNode *node = hl_model_node (model, (int) k);
+      HlNodeResult *result = &solution->states[k];
+      result->is_service = is_service[k];
+      result->has_flow = is_known[system->root[node->m]];
+      result->m = hl_system_value (system, node->m);
+      result->has_pressure = is_known[system->root[node->p]];
+      result->p = hl_system_value (system, node->p);
+      if (!result->has_pressure || !is_known[system->root[node->h]])
+        continue;
+      /* A liquid that is saturated by its equation is so on paper too, whichever way the last digit rounds. */
+      double h = hl_system_value (system, node->h);
+      HlSaturation sat;
+      if (node->subcooling >= 0 && hl_fluid_saturation_p (node->fluid, result->p, &sat) == HL_OK
+          && fabs (h - sat.h_liquid) <= 1e-9 * fabs (sat.h_liquid))
+        result->has_state = hl_fluid_state_px (node->fluid, result->p, 0.0, &result->st) == HL_OK;
+      else
+        result->has_state = hl_fluid_state_ph (node->fluid, result->p, h, &result->st) == HL_OK;
+    }
+}
+
+static void
+add_result (HlSolution *solution, const HlQuantityKind *kind, double value)
+{
+  HlPlantResult result = { kind, value };
+  g_array_append_val (solution->results, result);
+}
+
+/* Highest and lowest temperature of the working fluid: what carries the turbines. */
+static gboolean
+carnot (const HlSolution *solution, double *value)
+{
+  const HlModel *model = solution->model;
+  double low = INFINITY, high = 0.0;
+  g_autofree gboolean *is_working = g_new0 (gboolean, model->nodes->len + 1);
+  for (guint c = 0; c < hl_plant_n_components (model->plant); c++)
+    if (hl_plant_component (model->plant, c)->kind->shaft == HL_SHAFT_DRIVES)
+      for (int k = model->first_port[c]; k < model->first_port[c + 1]; k++)
+        is_working[solution->circuits[g_array_index (model->ports, HlPortNode, k).node]] = TRUE;
+  for (guint k = 0; k < model->nodes->len; k++)
+    {
+      const HlNodeResult *node = &solution->states[k];
+      if (!node->has_state || !is_working[solution->circuits[k]])
+        continue;
+      /* What comes from outside the cycle, make-up above all, is not its lower end. */
+      const HlNode *n = hl_model_node (model, (int) k);
+      const char *kind = n->component >= 0 ? hl_plant_component (model->plant, (guint) n->component)->kind->id : "";
+      if (g_str_equal (kind, "make_up") || g_str_equal (kind, "boundary") || g_str_equal (kind, "steam_user"))
+        continue;
+      low = fmin (low, node->st.T);
+      high = fmax (high, node->st.T);
+    }
+  *value = 1.0 - low / high;
+  return high > low;
+}
+
+static gboolean
+worst_moisture (const HlSolution *solution, double *value)
+{
+  const HlModel *model = solution->model;
+  gboolean found = FALSE;
+  *value = 0.0;
+  for (guint c = 0; c < hl_plant_n_components (model->plant); c++)
+    {
+      int var = hl_model_own_var (model, (int) c, g_intern_static_string ("exhaust_moisture"));
+      if (var < 0 || !solution->numbers.is_known[model->system->root[var]])
+        continue;
+      *value = fmax (*value, hl_system_value (model->system, var));
+      found = TRUE;
+    }
+  return found;
+}
+
+void
+hl_results_plant (HlSolution *solution)
+{
+  const HlModel *model = solution->model;
+  guint n;
+  const HlQuantityKind *kinds = hl_plant_quantities (&n);
+  solution->results = g_array_new (FALSE, FALSE, sizeof (HlPlantResult));
+  for (guint k = 0; k < n; k++)
+    {
+      double value;
+      int var = hl_model_own_var (model, -1, g_intern_static_string (kinds[k].key));
+      if (var >= 0)
+        {
+          if (solution->numbers.is_known[model->system->root[var]])
+            add_result (solution, &kinds[k], hl_system_value (model->system, var));
+        }
+      else if (g_str_equal (kinds[k].key, "carnot_efficiency") ? carnot (solution, &value)
+               : g_str_equal (kinds[k].key, "exhaust_moisture") && worst_moisture (solution, &value))
+        add_result (solution, &kinds[k], value);
+    }
+}
+
+void
+hl_results_processes (HlSolution *solution)
+{
+  solution->processes = g_array_new (FALSE, FALSE, sizeof (HlProcess));
+  HlProcessSink sink = { solution->model, solution->states, NULL, 0, solution->processes };
+  for (guint c = 0; c < hl_plant_n_components (solution->plant); c++)
+    {
+      sink.component = hl_plant_component (solution->plant, c);
+      sink.index = (int) c;
+      const HlComponentModel *model = hl_component_model (sink.component->kind);
+      if (model != NULL && model->processes != NULL)
+        model->processes (&sink);
+    }
+}

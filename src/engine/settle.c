@@ -1,0 +1,238 @@
+/* Assumed values yield to what is typed, and come back when it is let go.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "engine/engine.h"
+#include "engine/circuits.h"
+#include "engine/diagnose.h"
+#include "plant/i18n.h"
+#include <math.h>
+
+typedef struct {
+  HlPlant         *plant;
+  const HlAddress *edited;
+  GArray          *yielded;        /* HlYield; or NULL */
+  HlModel         *model;
+  HlStructure     *structure;
+  int             *circuits;
+} Settle;
+
+static void
+analyse (Settle *settle)
+{
+  settle->model = hl_model_new (settle->plant);
+  settle->structure = hl_structure_new (settle->model->system);
+  settle->circuits = NULL;
+}
+
+static void
+forget (Settle *settle)
+{
+  g_clear_pointer (&settle->model, hl_model_free);
+  g_clear_pointer (&settle->structure, hl_structure_free);
+  g_clear_pointer (&settle->circuits, g_free);
+}
+
+static void
+say (Settle *settle, const HlAddress *address, gboolean came_back)
+{
+  HlYield yield = { .address = *address, .came_back = came_back };
+  g_autofree char *name = hl_plant_describe (settle->plant, address);
+  g_autofree char *text = g_strdup_printf (came_back ? _("%s is assumed again") : _("%s is now found"), name);
+  if (settle->yielded == NULL)
+    return;
+  g_strlcpy (yield.text, text, sizeof yield.text);
+  /* A text that is cut must still be valid UTF-8. */
+  const char *end;
+  if (!g_utf8_validate (yield.text, -1, &end))
+    yield.text[end - yield.text] = '\0';
+  g_array_append_val (settle->yielded, yield);
+}
+
+/* The component whose value was edited; a stream's is the one that it comes from. */
+static int
+edited_component (const Settle *settle)
+{
+  if (settle->edited == NULL)
+    return -1;
+  if (settle->edited->owner == HL_OWNER_COMPONENT)
+    return hl_plant_component_index (settle->plant, settle->edited->id);
+  if (settle->edited->owner == HL_OWNER_STREAM)
+    {
+      int stream = hl_plant_stream_index (settle->plant, settle->edited->id);
+      return stream >= 0 ? hl_model_node (settle->model, stream)->component : -1;
+    }
+  return -1;
+}
+
+static int
+component_of (const Settle *settle, const HlAddress *address)
+{
+  if (address->owner == HL_OWNER_COMPONENT)
+    return hl_plant_component_index (settle->plant, address->id);
+  if (address->owner == HL_OWNER_STREAM)
+    {
+      int stream = hl_plant_stream_index (settle->plant, address->id);
+      return stream >= 0 ? hl_model_node (settle->model, stream)->component : -1;
+    }
+  return -1;
+}
+
+/* Lower yields first: same component, then same circuit, then the rest; inside each by the rank of the kind's table. */
+static double
+order_of (Settle *settle, const HlAddress *address, int edited)
+{
+  const HlQuantityKind *kind = hl_plant_quantity_kind (settle->plant, address);
+  double order = kind != NULL ? kind->yield_rank : 50.0;
+  int component = component_of (settle, address);
+  if (edited < 0)
+    return order;
+  if (component == edited)
+    return order - 2000.0;
+  if (settle->circuits == NULL)
+    settle->circuits = hl_circuits (settle->model);
+  if (component >= 0 && hl_circuits_shared (settle->model, settle->circuits, component, edited))
+    return order - 1000.0;
+  return order;
+}
+
+static gboolean
+is_edited (const Settle *settle, const HlSpec *spec)
+{
+  if (settle->edited == NULL)
+    return FALSE;
+  if (hl_address_equal (&spec->address, settle->edited))
+    return TRUE;
+  int var = hl_model_find_var (settle->model, settle->edited);
+  return var == spec->var && spec->origin != HL_ORIGIN_ASSUMED;
+}
+
+static gboolean
+replace (Settle *settle, const HlAddress *address, const HlValue *value)
+{
+  g_autoptr (GError) error = NULL;
+  HlPlant *next = hl_plant_with_value (settle->plant, address, value, &error);
+  if (next == NULL)
+    return FALSE;
+  hl_plant_unref (settle->plant);
+  settle->plant = next;
+  return TRUE;
+}
+
+/* Lets one assumed value of the over-determined part go.  FALSE when none can. */
+static gboolean
+yield_one (Settle *settle)
+{
+  const HlModel *model = settle->model;
+  g_autoptr (GArray) specs = hl_diagnose_surplus (model, settle->structure->over, settle->structure->n_over);
+  int edited = edited_component (settle), best = -1;
+  double best_order = INFINITY;
+  for (guint k = 0; k < specs->len; k++)
+    {
+      int index = g_array_index (specs, int, k);
+      const HlSpec *spec = hl_system_spec (model->system, index);
+      if (spec->origin != HL_ORIGIN_ASSUMED || is_edited (settle, spec))
+        continue;
+      double order = order_of (settle, &spec->address, edited);
+      if (order < best_order)
+        {
+          best_order = order;
+          best = index;
+        }
+    }
+  if (best < 0)
+    return FALSE;
+  HlAddress address = hl_system_spec (model->system, best)->address;
+  say (settle, &address, FALSE);
+  return replace (settle, &address, NULL);
+}
+
+/* Would a value at this address settle something open? */
+static gboolean
+is_open (const Settle *settle, const HlAddress *address)
+{
+  const HlModel *model = settle->model;
+  int node, var;
+  char letter;
+  if (hl_model_find_state (model, address, &node, &letter))
+    {
+      const HlNode *n = hl_model_node (model, node);
+      var = letter == 'm' ? n->m : letter == 'p' ? n->p : n->h;
+    }
+  else
+    var = hl_model_find_var (model, address);
+  return var >= 0 && settle->structure->is_open[model->system->root[var]];
+}
+
+/* Brings back one assumed value where the edited one left a gap: another of its component, else itself. */
+static gboolean
+bring_back_one (Settle *settle)
+{
+  int index = edited_component (settle);
+  const HlAddress *edited = settle->edited;
+  HlAddress best = { 0 };
+  double value = NAN, best_order = INFINITY;
+  if (edited->owner == HL_OWNER_PLANT)
+    {
+      guint n;
+      const HlQuantityKind *kinds = hl_plant_quantities (&n);
+      for (guint k = 0; k < n; k++)
+        {
+          HlAddress address = hl_address_plant (g_intern_static_string (kinds[k].key));
+          if (!(kinds[k].flags & HL_QUANTITY_ASSUMED) || hl_plant_value (settle->plant, &address) != NULL || !is_open (settle, &address))
+            continue;
+          best = address;
+          value = kinds[k].default_value;
+          break;
+        }
+    }
+  else if (index >= 0)
+    {
+      const HlComponent *component = hl_plant_component (settle->plant, (guint) index);
+      for (guint k = 0; k < hl_component_n_quantities (component); k++)
+        {
+          HlQuantity quantity = hl_component_quantity (component, k);
+          HlAddress address = hl_address_component (component->id, quantity.key);
+          double start = hl_quantity_default (quantity.kind, quantity.number);
+          if (!(quantity.kind->flags & HL_QUANTITY_ASSUMED) || !isfinite (start) || hl_plant_value (settle->plant, &address) != NULL
+              || !is_open (settle, &address))
+            continue;
+          double order = quantity.kind->yield_rank + (hl_address_equal (&address, edited) ? 10000.0 : 0.0);
+          if (order < best_order)
+            {
+              best_order = order;
+              best = address;
+              value = start;
+            }
+        }
+    }
+  if (best.key == NULL || !isfinite (value))
+    return FALSE;
+  HlValue back = { .origin = HL_ORIGIN_ASSUMED, .value = value };
+  if (!replace (settle, &best, &back))
+    return FALSE;
+  say (settle, &best, TRUE);
+  return TRUE;
+}
+
+HlPlant *
+hl_settle (HlPlant *plant, const HlAddress *edited, GArray **yielded)
+{
+  g_return_val_if_fail (plant != NULL, NULL);
+  Settle settle = { .plant = hl_plant_ref (plant), .edited = edited };
+  if (yielded != NULL)
+    settle.yielded = *yielded = g_array_new (FALSE, FALSE, sizeof (HlYield));
+  /* Each round takes or brings back one value; no plant needs more rounds than it has values. */
+  for (int round = 0; round < 1000; round++)
+    {
+      analyse (&settle);
+      gboolean changed = FALSE;
+      if (settle.structure->n_over > 0)
+        changed = yield_one (&settle);
+      else if (settle.structure->n_missing > 0 && edited != NULL && settle.model->open_ports->len == 0
+               && hl_plant_value (settle.plant, edited) == NULL)
+        changed = bring_back_one (&settle);
+      forget (&settle);
+      if (!changed)
+        break;
+    }
+  return settle.plant;
+}

@@ -1,0 +1,33 @@
+/* The inside of a solution.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include "engine/finding-private.h"
+#include "engine/model.h"
+#include "engine/numbers.h"
+#include "engine/processes.h"
+#include "engine/solution.h"
+G_BEGIN_DECLS
+
+typedef struct { const HlQuantityKind *kind; double value; } HlPlantResult;
+
+struct _HlSolution {
+  gatomicrefcount ref_count;
+  HlPlant       *plant;
+  HlModel       *model;
+  HlStructure   *structure;
+  HlNumbers      numbers;
+  HlNodeResult  *states;            /* [n nodes] */
+  int           *circuits;          /* [n nodes] */
+  GArray        *processes;         /* HlProcess */
+  GArray        *results;           /* HlPlantResult */
+  HlFindings     findings;
+  gboolean       is_complete;       /* every unknown has its value */
+  double         seconds;
+  HlSolveEffort  effort;
+};
+
+/* results.c: what follows from the solved unknowns. */
+void hl_results_states    (HlSolution *solution);
+void hl_results_plant     (HlSolution *solution);
+void hl_results_processes (HlSolution *solution);
+G_END_DECLS

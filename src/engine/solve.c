@@ -1,0 +1,110 @@
+/* The way in: plant to equations, structure, numbers, results, findings.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "engine/engine.h"
+#include "engine/checks.h"
+#include "engine/diagnose.h"
+#include "engine/solution-private.h"
+
+/* Takes over the values of an earlier solution where an unknown has the same address. */
+static void
+start_from (HlSystem *system, const HlSolution *start)
+{
+  if (start == NULL || start->model == NULL || start->numbers.is_known == NULL)
+    return;
+  const HlSystem *old = start->model->system;
+  g_autoptr (GHashTable) by_address = NULL;
+  for (guint i = 0; i < system->vars->len; i++)
+    {
+      const HlVar *var = hl_system_var (system, i);
+      if (system->root[i] != (int) i || system->fixed_by[i] >= 0 || var->address.key[0] == '\0')
+        continue;
+      int at = -1;
+      if (i < old->vars->len && hl_address_equal (&hl_system_var (old, i)->address, &var->address))
+        at = (int) i;
+      else
+        {
+          if (by_address == NULL)
+            {
+              by_address = g_hash_table_new_full (g_str_hash, g_str_equal, g_free, NULL);
+              for (guint k = 0; k < old->vars->len; k++)
+                {
+                  const HlAddress *a = &hl_system_var (old, k)->address;
+                  g_hash_table_insert (by_address, g_strdup_printf ("%d %s %s", a->owner, a->id, a->key), GINT_TO_POINTER (k + 1));
+                }
+            }
+          g_autofree char *key = g_strdup_printf ("%d %s %s", var->address.owner, var->address.id, var->address.key);
+          at = GPOINTER_TO_INT (g_hash_table_lookup (by_address, key)) - 1;
+        }
+      if (at >= 0 && start->numbers.is_known[old->root[at]] && hl_system_var (old, at)->kind == var->kind)
+        system->x[i] = old->x[old->root[at]];
+    }
+}
+
+static double
+seconds_since (gint64 start)
+{
+  return (double) (g_get_monotonic_time () - start) * 1e-6;
+}
+
+static void
+check (HlSolution *solution)
+{
+  HlChecker checker = { .model = solution->model, .states = solution->states, .is_known = solution->numbers.is_known,
+                        .is_complete = solution->is_complete, .findings = &solution->findings };
+  hl_check_all (&checker);
+}
+
+static void
+fill_effort (HlSolution *solution)
+{
+  const HlStructure *s = solution->structure;
+  solution->effort.n_unknowns = (guint) (s->n_solved + s->n_open + s->n_last);
+  solution->effort.n_blocks = (guint) s->n_blocks;
+  solution->effort.largest_block = (guint) s->largest;
+  solution->effort.n_iterations = (guint) solution->numbers.n_iterations;
+}
+
+HlSolution *
+hl_solve (HlPlant *plant, const HlSolution *start)
+{
+  g_return_val_if_fail (plant != NULL, NULL);
+  HlSolution *solution = g_new0 (HlSolution, 1);
+  gint64 begin = g_get_monotonic_time (), phase = begin;
+  g_atomic_ref_count_init (&solution->ref_count);
+  solution->plant = hl_plant_ref (plant);
+  hl_findings_init (&solution->findings);
+  solution->model = hl_model_new (plant);
+  solution->effort.seconds_build = seconds_since (phase);
+
+  phase = g_get_monotonic_time ();
+  solution->structure = hl_structure_new (solution->model->system);
+  gboolean may_try = hl_diagnose_structure (solution->model, solution->structure, &solution->findings);
+  solution->effort.seconds_structure = seconds_since (phase);
+
+  phase = g_get_monotonic_time ();
+  start_from (solution->model->system, start);
+  if (may_try)
+    hl_numbers_solve (solution->model->system, solution->structure, &solution->numbers);
+  else
+    hl_numbers_skip (solution->model->system, &solution->numbers);
+  solution->is_complete = may_try && solution->numbers.failed == HL_FAILED_NOT && solution->structure->n_missing == 0;
+  solution->effort.seconds_numbers = seconds_since (phase);
+
+  phase = g_get_monotonic_time ();
+  hl_results_states (solution);
+  hl_results_plant (solution);
+  hl_results_processes (solution);
+  guint before = solution->findings.list->len;
+  check (solution);
+  /* A law that is broken already where values were put in says more than a solver that found no way. */
+  gboolean explained = FALSE;
+  for (guint k = before; k < solution->findings.list->len; k++)
+    explained |= g_array_index (solution->findings.list, HlFinding, k).grade == HL_GRADE_ERROR;
+  if (!explained)
+    hl_diagnose_numbers (solution->model, solution->structure, &solution->numbers, &solution->findings);
+  hl_findings_sort (&solution->findings);
+  fill_effort (solution);
+  solution->effort.seconds_results = seconds_since (phase);
+  solution->seconds = seconds_since (begin);
+  return solution;
+}
