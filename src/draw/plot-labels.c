@@ -5,6 +5,7 @@
 #include <string.h>
 
 #define CELL       3.0      /* pixels of a cell of the ink map */
+#define BUCKET     40.0     /* pixels of a bucket of blocks */
 #define GAP_X      3.5      /* least distance between two texts beside each other */
 #define GAP_Y      1.5      /* the same, one above the other */
 #define LEADER_AT  9.0      /* a text farther than this from its dot's rim gets a leader */
@@ -13,6 +14,7 @@ typedef struct {
   HlBox    box;
   int      owner;           /* index of the dot, or -1 */
   gboolean is_text;
+  gboolean is_gone;         /* a text that was taken out again */
 } Block;
 typedef struct { HlPoint from, to; } Leader;
 
@@ -22,6 +24,8 @@ struct _HlPlotLabels {
   double  *ink;             /* [(rows + 1) (columns + 1)] cost by cell, then summed from the corner */
   gboolean is_summed;
   GArray  *blocks;          /* of Block */
+  int      bucket_columns, bucket_rows;
+  GArray **buckets;         /* [bucket_rows bucket_columns] of guint: blocks that reach into it */
   GArray  *leaders;         /* of Leader */
 };
 
@@ -34,6 +38,9 @@ hl_plot_labels_new (const HlBox *frame)
   labels->rows = (int) ceil (MAX (frame->height, CELL) / CELL);
   labels->ink = g_new0 (double, (gsize) (labels->columns + 1) * (gsize) (labels->rows + 1));
   labels->blocks = g_array_new (FALSE, FALSE, sizeof (Block));
+  labels->bucket_columns = (int) ceil (MAX (frame->width, 1.0) / BUCKET);
+  labels->bucket_rows = (int) ceil (MAX (frame->height, 1.0) / BUCKET);
+  labels->buckets = g_new0 (GArray *, labels->bucket_columns * labels->bucket_rows);
   labels->leaders = g_array_new (FALSE, FALSE, sizeof (Leader));
   return labels;
 }
@@ -43,6 +50,9 @@ hl_plot_labels_free (HlPlotLabels *labels)
 {
   if (labels == NULL)
     return;
+  for (int i = 0; i < labels->bucket_columns * labels->bucket_rows; i++)
+    g_clear_pointer (&labels->buckets[i], g_array_unref);
+  g_free (labels->buckets);
   g_free (labels->ink);
   g_array_unref (labels->blocks);
   g_array_unref (labels->leaders);
@@ -140,44 +150,109 @@ hl_plot_labels_cost (HlPlotLabels *labels, const HlBox *box)
   return *cell (labels, bottom, right) - *cell (labels, top, right) - *cell (labels, bottom, left) + *cell (labels, top, left);
 }
 
+/* Buckets that a box reaches into; what lies outside of the frame counts to its edge. */
+typedef struct { int left, top, right, bottom; } Span;
+
+static Span
+span_of (const HlPlotLabels *labels, const HlBox *box)
+{
+  Span span;
+  span.left = CLAMP ((int) floor ((box->x - labels->frame.x) / BUCKET), 0, labels->bucket_columns - 1);
+  span.right = CLAMP ((int) floor ((box->x + box->width - labels->frame.x) / BUCKET), 0, labels->bucket_columns - 1);
+  span.top = CLAMP ((int) floor ((box->y - labels->frame.y) / BUCKET), 0, labels->bucket_rows - 1);
+  span.bottom = CLAMP ((int) floor ((box->y + box->height - labels->frame.y) / BUCKET), 0, labels->bucket_rows - 1);
+  return span;
+}
+
+static void
+add_block (HlPlotLabels *labels, const Block *block)
+{
+  Span span = span_of (labels, &block->box);
+  guint n = labels->blocks->len;
+  g_array_append_val (labels->blocks, *block);
+  for (int row = span.top; row <= span.bottom; row++)
+    for (int column = span.left; column <= span.right; column++)
+      {
+        GArray **bucket = &labels->buckets[row * labels->bucket_columns + column];
+        if (*bucket == NULL)
+          *bucket = g_array_new (FALSE, FALSE, sizeof (guint));
+        g_array_append_val (*bucket, n);
+      }
+}
+
+/* Calls @visit for the blocks near @box, some more than once, until it says TRUE. */
+typedef gboolean (*VisitBlock) (const Block *block, gpointer data);
+
+static gboolean
+any_block_near (const HlPlotLabels *labels, const HlBox *box, VisitBlock visit, gpointer data)
+{
+  Span span = span_of (labels, box);
+  for (int row = span.top; row <= span.bottom; row++)
+    for (int column = span.left; column <= span.right; column++)
+      {
+        const GArray *bucket = labels->buckets[row * labels->bucket_columns + column];
+        for (guint i = 0; bucket != NULL && i < bucket->len; i++)
+          {
+            const Block *block = &g_array_index (labels->blocks, Block, g_array_index (bucket, guint, i));
+            if (!block->is_gone && visit (block, data))
+              return TRUE;
+          }
+      }
+  return FALSE;
+}
+
 void
 hl_plot_labels_add_block (HlPlotLabels *labels, const HlBox *box, int owner)
 {
-  Block block = { *box, owner, FALSE };
-  g_array_append_val (labels->blocks, block);
+  Block block = { .box = *box, .owner = owner };
+  add_block (labels, &block);
+}
+
+typedef struct { const HlBox *box; HlBox wide; } Candidate;
+
+static gboolean
+is_in_the_way (const Block *block, gpointer data)
+{
+  const Candidate *candidate = data;
+  return hl_box_overlaps (block->is_text ? &candidate->wide : candidate->box, &block->box);
 }
 
 gboolean
 hl_plot_labels_is_free (HlPlotLabels *labels, const HlBox *box)
 {
   const HlBox *frame = &labels->frame;
-  HlBox wide = { box->x - GAP_X, box->y - GAP_Y, box->width + 2.0 * GAP_X, box->height + 2.0 * GAP_Y };
+  Candidate candidate = { box, { box->x - GAP_X, box->y - GAP_Y, box->width + 2.0 * GAP_X, box->height + 2.0 * GAP_Y } };
   if (!(box->x >= frame->x && box->y >= frame->y && box->x + box->width <= frame->x + frame->width && box->y + box->height <= frame->y + frame->height))
     return FALSE;
-  for (guint i = 0; i < labels->blocks->len; i++)
-    {
-      const Block *block = &g_array_index (labels->blocks, Block, i);
-      if (hl_box_overlaps (block->is_text ? &wide : box, &block->box))
-        return FALSE;
-    }
+  if (any_block_near (labels, &candidate.wide, is_in_the_way, &candidate))
+    return FALSE;
   for (guint i = 0; i < labels->leaders->len; i++)
     {
       const Leader *leader = &g_array_index (labels->leaders, Leader, i);
-      if (hl_segment_meets_box (leader->from, leader->to, &wide))
+      if (hl_segment_meets_box (leader->from, leader->to, &candidate.wide))
         return FALSE;
     }
   return TRUE;
 }
 
+typedef struct { const Leader *leader; int owner; } Crossing;
+
+static gboolean
+is_crossed (const Block *block, gpointer data)
+{
+  const Crossing *crossing = data;
+  return (crossing->owner < 0 || block->owner != crossing->owner)
+         && hl_segment_meets_box (crossing->leader->from, crossing->leader->to, &block->box);
+}
+
 static gboolean
 leader_is_free (HlPlotLabels *labels, const Leader *leader, int owner)
 {
-  for (guint i = 0; i < labels->blocks->len; i++)
-    {
-      const Block *block = &g_array_index (labels->blocks, Block, i);
-      if ((owner < 0 || block->owner != owner) && hl_segment_meets_box (leader->from, leader->to, &block->box))
-        return FALSE;
-    }
+  HlBox around = { MIN (leader->from.x, leader->to.x), MIN (leader->from.y, leader->to.y),
+                   fabs (leader->to.x - leader->from.x), fabs (leader->to.y - leader->from.y) };
+  Crossing crossing = { leader, owner };
+  if (any_block_near (labels, &around, is_crossed, &crossing))
+    return FALSE;
   for (guint i = 0; i < labels->leaders->len; i++)
     if (segments_cross (leader, &g_array_index (labels->leaders, Leader, i)))
       return FALSE;
@@ -187,8 +262,8 @@ leader_is_free (HlPlotLabels *labels, const Leader *leader, int owner)
 void
 hl_plot_labels_take (HlPlotLabels *labels, const HlBox *box, HlPlotLabelPlace *place)
 {
-  Block block = { *box, -1, TRUE };
-  g_array_append_val (labels->blocks, block);
+  Block block = { .box = *box, .owner = -1, .is_text = TRUE };
+  add_block (labels, &block);
   place->is_placed = TRUE;
   place->box = *box;
 }
@@ -200,10 +275,10 @@ hl_plot_labels_remove (HlPlotLabels *labels, const HlPlotLabelPlace *place)
     return;
   for (guint i = 0; i < labels->blocks->len; i++)
     {
-      const Block *block = &g_array_index (labels->blocks, Block, i);
-      if (block->is_text && memcmp (&block->box, &place->box, sizeof (HlBox)) == 0)
+      Block *block = &g_array_index (labels->blocks, Block, i);
+      if (block->is_text && !block->is_gone && memcmp (&block->box, &place->box, sizeof (HlBox)) == 0)
         {
-          g_array_remove_index_fast (labels->blocks, i);
+          block->is_gone = TRUE;
           break;
         }
     }
@@ -257,24 +332,31 @@ make_leader (const HlPlotLabelWish *wish, const HlBox *box, Leader *leader)
   return TRUE;
 }
 
+typedef struct { const HlBox *box; int owner; double own, cost; } Reading;
+
+static gboolean
+add_ambiguity (const Block *block, gpointer data)
+{
+  Reading *reading = data;
+  HlPoint centre = { block->box.x + block->box.width / 2.0, block->box.y + block->box.height / 2.0 }, nearest;
+  if (block->owner >= 0 && block->owner != reading->owner)
+    {
+      double closer = reading->own + 3.0 - distance_to_box (centre, reading->box, &nearest);
+      reading->cost = MAX (reading->cost, MIN (closer, 6.0));
+    }
+  return FALSE;
+}
+
 /* A text that stands nearer to another dot than to its own would be read as that dot's. */
 static double
 ambiguity (HlPlotLabels *labels, const HlPlotLabelWish *wish, const HlBox *box, int owner)
 {
   HlPoint nearest;
-  double own = distance_to_box (wish->anchor, box, &nearest), cost = 0.0;
-  for (guint i = 0; i < labels->blocks->len; i++)
-    {
-      const Block *block = &g_array_index (labels->blocks, Block, i);
-      HlPoint centre = { block->box.x + block->box.width / 2.0, block->box.y + block->box.height / 2.0 };
-      double other;
-      if (block->owner < 0 || block->owner == owner)
-        continue;
-      other = distance_to_box (centre, box, &nearest);
-      if (other < own + 3.0)
-        cost += MIN (own + 3.0 - other, 6.0);
-    }
-  return cost;
+  Reading reading = { box, owner, distance_to_box (wish->anchor, box, &nearest), 0.0 };
+  double around = MIN (reading.own + 3.0, BUCKET);
+  HlBox near = { box->x - around, box->y - around, box->width + 2.0 * around, box->height + 2.0 * around };
+  any_block_near (labels, &near, add_ambiguity, &reading);
+  return reading.cost;
 }
 
 gboolean
@@ -308,7 +390,10 @@ hl_plot_labels_place (HlPlotLabels *labels, const HlPlotLabelWish *wish, int own
           if (cost >= best || !hl_plot_labels_is_free (labels, &box))
             continue;
           wide = (HlBox) { box.x - 1.0, box.y - 1.0, box.width + 2.0, box.height + 2.0 };
-          cost += 0.35 * hl_plot_labels_cost (labels, &wide) + ambiguity (labels, wish, &box, owner);
+          cost += 0.35 * hl_plot_labels_cost (labels, &wide);
+          if (cost >= best)
+            continue;
+          cost += ambiguity (labels, wish, &box, owner);
           has_leader = make_leader (wish, &box, &leader);
           if (has_leader)
             cost += 3.0;

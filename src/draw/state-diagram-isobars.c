@@ -4,7 +4,8 @@
 #include <math.h>
 #include <string.h>
 
-#define MERGE 1.12      /* pressures closer than this ratio share one isobar */
+#define MERGE     1.12    /* pressures closer than this ratio share one isobar */
+#define MOST      16      /* isobars in one picture; of more the ratio grows until they fit */
 
 typedef struct {
   double p, m, h;       /* pressure, largest flow at it, enthalpy there */
@@ -27,7 +28,27 @@ take_state (GArray *all, const HlState *state, double m)
     g_array_append_val (all, isobar);
 }
 
-/* The cycle's pressures, close ones merged into the one that carries most (of equals the hottest, of equals the highest). */
+/* Close pressures merge into the one that carries most (of equals the hottest, of equals the highest). */
+static void
+merge_isobars (const GArray *all, double ratio, GArray *merged)
+{
+  g_array_set_size (merged, 0);
+  for (guint i = 0; i < all->len;)
+    {
+      Isobar best = g_array_index (all, Isobar, i);
+      double first = best.p, hottest = best.hottest;
+      for (i++; i < all->len && g_array_index (all, Isobar, i).p < first * ratio; i++)
+        {
+          const Isobar *other = &g_array_index (all, Isobar, i);
+          hottest = MAX (hottest, other->hottest);
+          if (other->m > best.m * 1.001 || (other->m > best.m * 0.999 && other->h > best.h - 1.0))
+            best = *other;
+        }
+      best.hottest = hottest;
+      g_array_append_val (merged, best);
+    }
+}
+
 static GArray *
 cycle_isobars (const HlCycle *cycle)
 {
@@ -42,19 +63,11 @@ cycle_isobars (const HlCycle *cycle)
       take_state (all, &process->to, process->m);
     }
   g_array_sort (all, compare_pressures);
-  for (guint i = 0; i < all->len;)
+  for (double ratio = MERGE; ratio < 100.0; ratio *= 1.15)
     {
-      Isobar best = g_array_index (all, Isobar, i);
-      double first = best.p, hottest = best.hottest;
-      for (i++; i < all->len && g_array_index (all, Isobar, i).p < first * MERGE; i++)
-        {
-          const Isobar *other = &g_array_index (all, Isobar, i);
-          hottest = MAX (hottest, other->hottest);
-          if (other->m > best.m * 1.001 || (other->m > best.m * 0.999 && other->h > best.h - 1.0))
-            best = *other;
-        }
-      best.hottest = hottest;
-      g_array_append_val (merged, best);
+      merge_isobars (all, ratio, merged);
+      if (merged->len <= MOST)
+        break;
     }
   return merged;
 }

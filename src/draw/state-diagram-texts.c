@@ -4,7 +4,9 @@
 #include "draw/text.h"
 #include <math.h>
 
-#define FAR_REACH 130.0      /* pixels that a state's number may stand away from its dot */
+#define FAR_REACH  130.0     /* pixels that a state's number may stand away from its dot */
+#define NEAR_REACH 50.0      /* the same in a crowd, where a long leader would find no way */
+#define CROWD      80        /* dots that make a crowd: one round must do */
 
 void
 hl_state_diagram_text_size (const char *text, double size, gboolean is_bold, double *width, double *height)
@@ -41,7 +43,7 @@ wish_of (const HlStateDiagram *diagram, const HlMark *mark)
                            .clearance = mark->radius + (mark->kind == HL_MARK_STATE ? 4.0 : 2.0) };
   gboolean is_state = mark->kind == HL_MARK_STATE;
   hl_state_diagram_text_size (mark->text, is_state ? diagram->number_size : 0.95 * diagram->text_size, is_state, &wish.width, &wish.height);
-  wish.reach = is_state ? FAR_REACH : 22.0;
+  wish.reach = !is_state ? 22.0 : diagram->marks->len > CROWD ? NEAR_REACH : FAR_REACH;
   /* A number stands clear of the saturation line: outside of it, as far as the neighbours let it. */
   if (mark->colour == HL_PLOT_WATER)
     wish.towards = (HlPoint) { -0.6, -0.8 };
@@ -116,7 +118,7 @@ place_marks (HlStateDiagram *diagram, HlPlotLabels *labels, HlMarkKind kind)
     }
   g_array_sort (turns, compare_turns);
   /* Where some find no room, all start anew with those first. */
-  for (int round = 0; !place_all (diagram, labels, turns) && round + 1 < n_rounds && turns->len < 100; round++)
+  for (int round = 0; !place_all (diagram, labels, turns) && round + 1 < n_rounds && turns->len <= CROWD; round++)
     {
       for (guint i = 0; i < turns->len; i++)
         {
@@ -127,7 +129,7 @@ place_marks (HlStateDiagram *diagram, HlPlotLabels *labels, HlMarkKind kind)
       g_array_sort (turns, compare_turns);
     }
   /* Once more, so that early ones may move now that the later ones are known. */
-  for (guint i = 0; i < turns->len; i++)
+  for (guint i = 0; i < turns->len && turns->len <= CROWD; i++)
     place_one (diagram, labels, g_array_index (turns, Turn, i).mark);
 }
 
