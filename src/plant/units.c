@@ -6,7 +6,8 @@
 #include <string.h>
 
 /* Rounding (common practice, no source): p 4 digits, T 0.1 K, h 0.1 kJ/kg, m 0.01 kg/s, x 0.001, power 0.1 %, heat rate 1.
- * At least @decimals decimals and at least @digits significant digits, so that small values stay readable. */
+ * At least @decimals decimals and at least @digits significant digits, so that small values stay readable; 0 digits: no
+ * matter how small. */
 typedef struct { int decimals, digits; } Rounding;
 typedef struct {
   const char *name, *si_unit, *json_suffix;
@@ -18,16 +19,16 @@ static const Dimension dimensions[HL_N_DIMENSIONS] = {
   [HL_DIMENSION_RATIO] = { N_("ratio"), "", "", { "", "", "" }, { 3, 2 } },
   [HL_DIMENSION_PRESSURE] = { N_("pressure"), "Pa", "_Pa", { "bar", "kPa", "psia" }, { 0, 4 } },
   [HL_DIMENSION_PRESSURE_DIFFERENCE] = { N_("pressure difference"), "Pa", "_Pa", { "bar", "kPa", "psi" }, { 0, 4 } },
-  [HL_DIMENSION_TEMPERATURE] = { N_("temperature"), "K", "_K", { "°C", "K", "°F" }, { 1, 1 } },
+  [HL_DIMENSION_TEMPERATURE] = { N_("temperature"), "K", "_K", { "°C", "K", "°F" }, { 1, 0 } },
   [HL_DIMENSION_TEMPERATURE_DIFFERENCE] = { N_("temperature difference"), "K", "_K", { "K", "K", "°F" }, { 1, 2 } },
   [HL_DIMENSION_MASS_FLOW] = { N_("mass flow"), "kg/s", "_kg_s", { "kg/s", "kg/s", "klb/h" }, { 2, 3 } },
-  [HL_DIMENSION_ENTHALPY] = { N_("specific enthalpy"), "J/kg", "_J_kg", { "kJ/kg", "kJ/kg", "Btu/lb" }, { 1, 1 } },
-  [HL_DIMENSION_ENTROPY] = { N_("specific entropy"), "J/(kg K)", "_J_kgK", { "kJ/(kg K)", "kJ/(kg K)", "Btu/(lb °F)" }, { 4, 1 } },
+  [HL_DIMENSION_ENTHALPY] = { N_("specific enthalpy"), "J/kg", "_J_kg", { "kJ/kg", "kJ/kg", "Btu/lb" }, { 1, 0 } },
+  [HL_DIMENSION_ENTROPY] = { N_("specific entropy"), "J/(kg K)", "_J_kgK", { "kJ/(kg K)", "kJ/(kg K)", "Btu/(lb °F)" }, { 4, 0 } },
   [HL_DIMENSION_VOLUME] = { N_("specific volume"), "m3/kg", "_m3_kg", { "m³/kg", "m³/kg", "ft³/lb" }, { 0, 5 } },
   [HL_DIMENSION_POWER] = { N_("power"), "W", "_W", { "MW", "kW", "MW" }, { 0, 4 } },
   [HL_DIMENSION_CONDUCTANCE] = { N_("conductance"), "W/K", "_W_K", { "kW/K", "kW/K", "Btu/(h °F)" }, { 0, 4 } },
   [HL_DIMENSION_LENGTH] = { N_("length"), "m", "_m", { "m", "m", "ft" }, { 1, 3 } },
-  [HL_DIMENSION_HEAT_RATE] = { N_("heat rate"), "J/J", "_J_J", { "kJ/kWh", "kJ/kWh", "Btu/kWh" }, { 0, 1 } },
+  [HL_DIMENSION_HEAT_RATE] = { N_("heat rate"), "J/J", "_J_J", { "kJ/kWh", "kJ/kWh", "Btu/kWh" }, { 0, 0 } },
   [HL_DIMENSION_STEAM_RATE] = { N_("steam rate"), "kg/J", "_kg_J", { "kg/kWh", "kg/kWh", "lb/kWh" }, { 2, 3 } },
   [HL_DIMENSION_VOLUME_FLOW] = { N_("volume flow"), "m3/s", "_m3_s", { "m³/h", "m³/s", "ft³/min" }, { 0, 4 } },
   [HL_DIMENSION_COUNT] = { N_("number"), "", "", { "", "", "" }, { 0, 6 } },
@@ -125,7 +126,7 @@ round_number (double shown, const Rounding *rounding)
     return g_strdup ("–");
   if (fabs (shown) >= 1e9)
     return g_strdup_printf ("%.6g", shown);
-  if (fabs (shown) >= 1e-9)
+  if (rounding->digits > 0 && fabs (shown) >= 1e-9)
     decimals = MAX (decimals, rounding->digits - 1 - (int) floor (log10 (fabs (shown))));
   decimals = MIN (decimals, 8);
   g_snprintf (text, sizeof text, "%.*f", decimals, shown);
