@@ -7,51 +7,117 @@
 #include <math.h>
 G_BEGIN_DECLS
 
-/* gamma = g/(RT) and its derivatives, each multiplied by its variables:
- * p is pi gamma_pi, pt is pi tau gamma_pi_tau, ttt is tau^3 gamma_tau_tau_tau. */
-typedef struct { double one, p, pp, t, tt, pt; } HlIf97Gibbs;
-typedef struct { double one, t, tt, ttt; } HlIf97GibbsT;
+/* What fixes the state beside the pressure: the temperature, or the value of
+ * enthalpy or entropy near to that temperature. */
+typedef enum { HL_IF97_AT_T, HL_IF97_AT_H, HL_IF97_AT_S } HlIf97Given;
 
-/* R7-97(2012), Tables 3, 12, 41: relations of the properties to gamma.  The
- * derivatives with respect to (p,h) follow from those with respect to (p,T). */
+/* gamma = g/(RT) and its derivatives, each multiplied by its variables: p is
+ * pi gamma_pi, ptt is pi tau^2 gamma_pi_tau_tau, and so on.  The third ones
+ * are asked for with AT_H and AT_S only. */
+typedef struct { double one, p, pp, t, tt, pt, ttt, ptt, ppt; } HlIf97Gibbs;
+
+/* What R7-97(2012), Tables 3, 12, 41 make of gamma, as functions of (p,T). */
+typedef struct { double T, h, s, v, cp, v_T, v_p; } HlIf97Basis;
+
+/* Moves the properties along the isobar by the little that is left to the
+ * value: to second order in T, h, s and v, to first order in the derivatives.
+ * From 1e-5 K, where one Newton step from a backward equation ends, what is
+ * left is below the rounding. */
 HL_IF97_INLINE void
-hl_if97_state_from_gibbs (double p, double T, const HlIf97Gibbs *gamma, HlState *state)
+hl_if97_shift (HlIf97Given given, double value, double p, const HlIf97Gibbs *gamma, HlIf97Basis *b)
 {
-  double RT = HL_IF97_R * T;
-  double per_p = 1.0 / p, per_T = 1.0 / T;
-  double v = RT * per_p * gamma->p;
-  double cp = -HL_IF97_R * gamma->tt;
-  double v_T = HL_IF97_R * per_p * (gamma->p - gamma->pt);
-  double v_p = RT * per_p * per_p * gamma->pp;
-  double per_cp = 1.0 / cp;
-  double T_p = (T * v_T - v) * per_cp;
-  double Tv_T2 = T * v_T * v_T;
+  double per_T = 1.0 / b->T, per_p = 1.0 / p;
+  double cp_T = HL_IF97_R * (2.0 * gamma->tt + gamma->ttt) * per_T;
+  double v_TT = HL_IF97_R * per_p * per_T * gamma->ptt;
+  double v_pT = HL_IF97_R * per_p * per_p * (gamma->pp - gamma->ppt);
+  double per_cp = 1.0 / b->cp;
+  double step, h_step, s_step;
+  if (given == HL_IF97_AT_H)
+    {
+      h_step = value - b->h;
+      step = h_step * per_cp;
+      step -= 0.5 * cp_T * per_cp * step * step;
+      s_step = h_step * per_T * (1.0 - 0.5 * step * per_T);
+    }
+  else
+    {
+      s_step = value - b->s;
+      step = s_step * b->T * per_cp;
+      step -= 0.5 * (cp_T * per_cp - per_T) * step * step;
+      h_step = s_step * (b->T + 0.5 * step);
+    }
+  b->T += step;
+  b->h = given == HL_IF97_AT_H ? value : b->h + h_step;
+  b->s = given == HL_IF97_AT_S ? value : b->s + s_step;
+  b->v += (b->v_T + 0.5 * v_TT * step) * step;
+  b->cp += cp_T * step;
+  b->v_T += v_TT * step;
+  b->v_p += v_pT * step;
+}
+
+/* The derivatives with respect to (p,h) follow from those with respect to (p,T). */
+HL_IF97_INLINE void
+hl_if97_state_from_gibbs (double p, double T, const HlIf97Gibbs *gamma, HlIf97Given given, double value, HlState *state)
+{
+  double RT = HL_IF97_R * T, per_p = 1.0 / p;
+  HlIf97Basis b = {
+    .T = T, .h = RT * gamma->t, .s = HL_IF97_R * (gamma->t - gamma->one), .v = RT * per_p * gamma->p,
+    .cp = -HL_IF97_R * gamma->tt, .v_T = HL_IF97_R * per_p * (gamma->p - gamma->pt), .v_p = RT * per_p * per_p * gamma->pp,
+  };
+  if (given != HL_IF97_AT_T)
+    hl_if97_shift (given, value, p, gamma, &b);
+  double per_T = 1.0 / b.T, per_cp = 1.0 / b.cp;
+  double T_p = (b.T * b.v_T - b.v) * per_cp;
+  double Tv_T2 = b.T * b.v_T * b.v_T;
   state->p = p;
-  state->T = T;
-  state->h = RT * gamma->t;
-  state->s = HL_IF97_R * (gamma->t - gamma->one);
-  state->v = v;
-  state->u = RT * (gamma->t - gamma->p);
-  state->cp = cp;
-  state->cv = cp + Tv_T2 / v_p;
-  state->w = v / sqrt (-v_p - Tv_T2 * per_cp);
+  state->T = b.T;
+  state->h = b.h;
+  state->s = b.s;
+  state->v = b.v;
+  state->u = b.h - p * b.v;
+  state->cp = b.cp;
+  state->cv = b.cp + Tv_T2 / b.v_p;
+  state->w = b.v / sqrt (-b.v_p - Tv_T2 * per_cp);
   state->x = NAN;
   state->T_p = T_p;
   state->T_h = per_cp;
-  state->s_p = -v * per_T;
+  state->s_p = -b.v * per_T;
   state->s_h = per_T;
-  state->v_p = v_p + v_T * T_p;
-  state->v_h = v_T * per_cp;
+  state->v_p = b.v_p + b.v_T * T_p;
+  state->v_h = b.v_T * per_cp;
 }
 
-HL_IF97_INLINE void
-hl_if97_caloric_from_gibbs (double T, const HlIf97GibbsT *gamma, HlIf97Caloric *caloric)
-{
-  caloric->h = HL_IF97_R * T * gamma->t;
-  caloric->s = HL_IF97_R * (gamma->t - gamma->one);
-  caloric->cp = -HL_IF97_R * gamma->tt;
-  /* cp = -R tau^2 gamma_tau_tau and d tau/dT = -tau/T. */
-  caloric->cp_T = HL_IF97_R * (2.0 * gamma->tt + gamma->ttt) / T;
-}
+/* The four faces of a region: forward, near to a given h or s, and h or s with
+ * cp alone for the first Newton step. */
+#define HL_IF97_DEFINE_REGION(region) \
+  void \
+  hl_if97_##region (double p, double T, HlState *state) \
+  { \
+    evaluate (p, T, HL_IF97_AT_T, 0.0, state); \
+  } \
+  void \
+  hl_if97_##region##_at_h (double p, double T, double h, HlState *state) \
+  { \
+    evaluate (p, T, HL_IF97_AT_H, h, state); \
+  } \
+  void \
+  hl_if97_##region##_at_s (double p, double T, double s, HlState *state) \
+  { \
+    evaluate (p, T, HL_IF97_AT_S, s, state); \
+  } \
+  double \
+  hl_if97_##region##_enthalpy (double p, double T, double *cp) \
+  { \
+    double one, t; \
+    evaluate_calorics (p, T, FALSE, &one, &t, cp); \
+    return HL_IF97_R * T * t; \
+  } \
+  double \
+  hl_if97_##region##_entropy (double p, double T, double *cp) \
+  { \
+    double one, t; \
+    evaluate_calorics (p, T, TRUE, &one, &t, cp); \
+    return HL_IF97_R * (t - one); \
+  }
 
 G_END_DECLS

@@ -20,23 +20,33 @@ G_BEGIN_DECLS
 #define HL_IF97_P_MIN_SAT  611.2126774443  /* psat(273.15 K), Eq. 30 [Pa] */
 #define HL_IF97_P_SAT_13   16.52916425260448e6  /* psat(623.15 K), Eq. 30 [Pa] */
 
-/* h, s and the heat capacity with its slope along an isobar: what an
- * iteration for T at given pressure needs. */
-typedef struct { double h, s, cp, cp_T; } HlIf97Caloric;
-
 /* Region 3: the Helmholtz function's derivatives as pressures and heats. */
 typedef struct { double p, h, s, cv, p_d, p_T; } HlIf97Helmholtz;
 
-/* Single-phase properties; all of the state but phase and x (which becomes NaN). */
+/* Single-phase properties; all of the state but the phase; x becomes NaN. */
 void hl_if97_region1            (double p, double T, HlState *state);
 void hl_if97_region2            (double p, double T, HlState *state);
 void hl_if97_region2_metastable (double p, double T, HlState *state);
 void hl_if97_region3            (double density, double T, HlState *state);
 void hl_if97_region5            (double p, double T, HlState *state);
 
-void hl_if97_region1_caloric (double p, double T, HlIf97Caloric *caloric);
-void hl_if97_region2_caloric (double p, double T, HlIf97Caloric *caloric);
-void hl_if97_region5_caloric (double p, double T, HlIf97Caloric *caloric);
+/* The same at the temperature where h [J/kg] or s [J/(kg K)] has the value; T
+ * is that temperature to within about 1e-4 K. */
+void hl_if97_region1_at_h (double p, double T, double h, HlState *state);
+void hl_if97_region1_at_s (double p, double T, double s, HlState *state);
+void hl_if97_region2_at_h (double p, double T, double h, HlState *state);
+void hl_if97_region2_at_s (double p, double T, double s, HlState *state);
+void hl_if97_region5_at_h (double p, double T, double h, HlState *state);
+void hl_if97_region5_at_s (double p, double T, double s, HlState *state);
+
+/* h or s alone with the heat capacity cp [J/(kg K)]. */
+double hl_if97_region1_enthalpy (double p, double T, double *cp);
+double hl_if97_region1_entropy  (double p, double T, double *cp);
+double hl_if97_region2_enthalpy (double p, double T, double *cp);
+double hl_if97_region2_entropy  (double p, double T, double *cp);
+double hl_if97_region5_enthalpy (double p, double T, double *cp);
+double hl_if97_region5_entropy  (double p, double T, double *cp);
+
 void hl_if97_region3_helmholtz (double density, double T, HlIf97Helmholtz *helmholtz);
 
 /* Region 3 with other pairs, by iteration on its equation. */

@@ -21,46 +21,40 @@ static const HlIf97Term terms[] = {
 #define P_STAR 16.53e6   /* [Pa] */
 #define T_STAR 1386.0    /* [K] */
 
-/**
- * hl_if97_region1:
- * @p: pressure [Pa]
- * @T: temperature [K]
- * @state: (out): properties by IAPWS R7-97(2012), Eq. 7; phase is not set
- *
- * No range check: the equation is smooth some way beyond its region.
- */
-void
-hl_if97_region1 (double p, double T, HlState *state)
+HL_IF97_INLINE void
+evaluate (double p, double T, HlIf97Given given, double value, HlState *state)
 {
-  double powers_x[33], powers_y[41 + 18], *x = powers_x, *y = powers_y + 41;
+  HlIf97Pair x[33], powers_y[41 + 18], *y = powers_y + 41;
   double pi = p * (1.0 / P_STAR), tau = T_STAR / T;
   HlIf97Sums sums;
-  hl_if97_powers (7.1 - pi, 0, 32, x);
-  hl_if97_powers (tau - 1.222, -41, 17, y);
-  hl_if97_sums (terms, G_N_ELEMENTS (terms), x, y, &sums);
+  hl_if97_pair_powers (7.1 - pi, 0, 32, x);
+  hl_if97_pair_powers (tau - 1.222, -41, 17, y);
+  hl_if97_sums (terms, G_N_ELEMENTS (terms), x, y, given != HL_IF97_AT_T, &sums);
 
-  double a = pi / x[1], b = tau * y[-1];
-  HlIf97Gibbs gamma = { sums.one, -a * sums.i, a * a * sums.ii, b * sums.j, b * b * sums.jj, -a * b * sums.ij };
-  hl_if97_state_from_gibbs (p, T, &gamma, state);
+  double a = -pi / (7.1 - pi), a2 = a * a, b = tau * y[-1][0], b2 = b * b;
+  HlIf97Gibbs gamma = {
+    .one = sums.one[0], .t = b * sums.one[1], .tt = b2 * sums.jj[0], .ttt = b2 * b * sums.jj[1],
+    .p = a * sums.i[0], .pt = a * b * sums.i[1], .ptt = a * b2 * sums.ijj[0],
+    .pp = a2 * sums.ii[0], .ppt = a2 * b * sums.ii[1],
+  };
+  hl_if97_state_from_gibbs (p, T, &gamma, given, value, state);
 }
 
-/**
- * hl_if97_region1_caloric:
- * @p: pressure [Pa]
- * @T: temperature [K]
- * @caloric: (out): h, s, cp and its slope, by IAPWS R7-97(2012), Eq. 7
- */
-void
-hl_if97_region1_caloric (double p, double T, HlIf97Caloric *caloric)
+HL_IF97_INLINE void
+evaluate_calorics (double p, double T, gboolean has_one, double *one, double *t, double *cp)
 {
-  double powers_x[33], powers_y[41 + 18], *x = powers_x, *y = powers_y + 41;
+  HlIf97Pair x[33], powers_y[41 + 18], *y = powers_y + 41;
   double tau = T_STAR / T;
-  HlIf97SumsY sums;
-  hl_if97_powers (7.1 - p * (1.0 / P_STAR), 0, 32, x);
-  hl_if97_powers (tau - 1.222, -41, 17, y);
-  hl_if97_sums_y (terms, G_N_ELEMENTS (terms), x, y, &sums);
-
-  double b = tau * y[-1];
-  HlIf97GibbsT gamma = { sums.one, b * sums.j, b * b * sums.jj, b * b * b * sums.jjj };
-  hl_if97_caloric_from_gibbs (T, &gamma, caloric);
+  HlIf97SumsJ sums;
+  hl_if97_pair_powers (7.1 - p * (1.0 / P_STAR), 0, 32, x);
+  hl_if97_pair_powers (tau - 1.222, -41, 17, y);
+  hl_if97_sums_j (terms, G_N_ELEMENTS (terms), x, y, has_one, &sums);
+  double b = tau * y[-1][0];
+  *one = sums.one;
+  *t = b * sums.j[0];
+  *cp = -HL_IF97_R * b * b * sums.j[1];
 }
+
+/* Liquid by IAPWS R7-97(2012), Eq. 7.  No range check: the equation is smooth
+ * some way beyond its region. */
+HL_IF97_DEFINE_REGION (region1)

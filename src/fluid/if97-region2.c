@@ -48,43 +48,63 @@ static const HlIf97Term metastable_terms[] = {
 #define P_STAR 1e6     /* [Pa] */
 #define T_STAR 540.0   /* [K] */
 
+/* Sums over the ideal-gas terms: 1 and J, J (J - 1) and J (J - 1) (J - 2). */
 HL_IF97_INLINE void
-evaluate (const HlIf97Term *ideal, const HlIf97Term *residual, int n_residual, int highest_x, int highest_y,
-          double p, double T, HlState *state)
+sum_ideal (const HlIf97Term *ideal, double tau, HlIf97Sums *sums)
 {
-  double x[25], y[59], powers_t[5 + 4], *t = powers_t + 5;
+  HlIf97Pair powers_t[5 + 4], *t = powers_t + 5;
+  hl_if97_pair_powers (tau, -5, 3, t);
+  hl_if97_sums (ideal, G_N_ELEMENTS (ideal_terms), NULL, t, FALSE, sums);
+}
+
+HL_IF97_INLINE void
+evaluate_with (const HlIf97Term *ideal, const HlIf97Term *residual, int n_residual, int highest_x, int highest_y,
+               double p, double T, HlIf97Given given, double value, HlState *state)
+{
+  HlIf97Pair x[25], y[59];
   double pi = p * (1.0 / P_STAR), tau = T_STAR / T;
-  HlIf97Sums sums;
-  HlIf97SumsY sums_ideal;
-  hl_if97_powers (pi, 0, highest_x, x);
-  hl_if97_powers (tau - 0.5, 0, highest_y, y);
-  hl_if97_powers (tau, -5, 3, t);
-  hl_if97_sums (residual, n_residual, x, y, &sums);
-  hl_if97_sums_y (ideal, G_N_ELEMENTS (ideal_terms), x, t, &sums_ideal);
+  HlIf97Sums sums, sums_ideal;
+  hl_if97_pair_powers (pi, 0, highest_x, x);
+  hl_if97_pair_powers (tau - 0.5, 0, highest_y, y);
+  hl_if97_sums (residual, n_residual, x, y, given != HL_IF97_AT_T, &sums);
+  sum_ideal (ideal, tau, &sums_ideal);
 
-  double b = tau / y[1];
+  double b = tau / (tau - 0.5), b2 = b * b;
   HlIf97Gibbs gamma = {
-    log (pi) + sums_ideal.one + sums.one,
-    1.0 + sums.i, -1.0 + sums.ii,
-    sums_ideal.j + b * sums.j, sums_ideal.jj + b * b * sums.jj,
-    b * sums.ij,
+    .one = log (pi) + sums_ideal.one[0] + sums.one[0], .t = sums_ideal.one[1] + b * sums.one[1],
+    .tt = sums_ideal.jj[0] + b2 * sums.jj[0], .ttt = sums_ideal.jj[1] + b2 * b * sums.jj[1],
+    .p = 1.0 + sums.i[0], .pt = b * sums.i[1], .ptt = b2 * sums.ijj[0],
+    .pp = -1.0 + sums.ii[0], .ppt = b * sums.ii[1],
   };
-  hl_if97_state_from_gibbs (p, T, &gamma, state);
+  hl_if97_state_from_gibbs (p, T, &gamma, given, value, state);
 }
 
-/**
- * hl_if97_region2:
- * @p: pressure [Pa]
- * @T: temperature [K]
- * @state: (out): properties by IAPWS R7-97(2012), Eq. 15; phase is not set
- *
- * No range check: the equation is smooth some way beyond its region.
- */
-void
-hl_if97_region2 (double p, double T, HlState *state)
+HL_IF97_INLINE void
+evaluate (double p, double T, HlIf97Given given, double value, HlState *state)
 {
-  evaluate (ideal_terms, terms, G_N_ELEMENTS (terms), 24, 58, p, T, state);
+  evaluate_with (ideal_terms, terms, G_N_ELEMENTS (terms), 24, 58, p, T, given, value, state);
 }
+
+HL_IF97_INLINE void
+evaluate_calorics (double p, double T, gboolean has_one, double *one, double *t, double *cp)
+{
+  HlIf97Pair x[25], y[59], powers_t[5 + 4], *pt = powers_t + 5;
+  double pi = p * (1.0 / P_STAR), tau = T_STAR / T;
+  HlIf97SumsJ sums, ideal;
+  hl_if97_pair_powers (pi, 0, 24, x);
+  hl_if97_pair_powers (tau - 0.5, 0, 58, y);
+  hl_if97_pair_powers (tau, -5, 3, pt);
+  hl_if97_sums_j (terms, G_N_ELEMENTS (terms), x, y, has_one, &sums);
+  hl_if97_sums_j (ideal_terms, G_N_ELEMENTS (ideal_terms), NULL, pt, has_one, &ideal);
+  double b = tau / (tau - 0.5);
+  *one = has_one ? log (pi) + ideal.one + sums.one : 0.0;
+  *t = ideal.j[0] + b * sums.j[0];
+  *cp = -HL_IF97_R * (ideal.j[1] + b * b * sums.j[1]);
+}
+
+/* Steam by IAPWS R7-97(2012), Eq. 15.  No range check: the equation is smooth
+ * some way beyond its region. */
+HL_IF97_DEFINE_REGION (region2)
 
 /**
  * hl_if97_region2_metastable:
@@ -96,31 +116,5 @@ hl_if97_region2 (double p, double T, HlState *state)
 void
 hl_if97_region2_metastable (double p, double T, HlState *state)
 {
-  evaluate (metastable_ideal_terms, metastable_terms, G_N_ELEMENTS (metastable_terms), 5, 16, p, T, state);
-}
-
-/**
- * hl_if97_region2_caloric:
- * @p: pressure [Pa]
- * @T: temperature [K]
- * @caloric: (out): h, s, cp and its slope, by IAPWS R7-97(2012), Eq. 15
- */
-void
-hl_if97_region2_caloric (double p, double T, HlIf97Caloric *caloric)
-{
-  double x[25], y[59], powers_t[5 + 4], *t = powers_t + 5;
-  double pi = p * (1.0 / P_STAR), tau = T_STAR / T;
-  HlIf97SumsY sums, ideal;
-  hl_if97_powers (pi, 0, 24, x);
-  hl_if97_powers (tau - 0.5, 0, 58, y);
-  hl_if97_powers (tau, -5, 3, t);
-  hl_if97_sums_y (terms, G_N_ELEMENTS (terms), x, y, &sums);
-  hl_if97_sums_y (ideal_terms, G_N_ELEMENTS (ideal_terms), x, t, &ideal);
-
-  double b = tau / y[1];
-  HlIf97GibbsT gamma = {
-    log (pi) + ideal.one + sums.one, ideal.j + b * sums.j,
-    ideal.jj + b * b * sums.jj, ideal.jjj + b * b * b * sums.jjj,
-  };
-  hl_if97_caloric_from_gibbs (T, &gamma, caloric);
+  evaluate_with (metastable_ideal_terms, metastable_terms, G_N_ELEMENTS (metastable_terms), 5, 16, p, T, HL_IF97_AT_T, 0.0, state);
 }

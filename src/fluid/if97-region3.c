@@ -34,23 +34,23 @@ static const HlIf97Term terms[] = {
 void
 hl_if97_region3_helmholtz (double density, double T, HlIf97Helmholtz *helmholtz)
 {
-  double x[12], y[27];
+  HlIf97Pair x[12], y[27];
   double delta = density * (1.0 / HL_IF97_D_CRITICAL), RT = HL_IF97_R * T;
   HlIf97Sums sums;
-  hl_if97_powers (delta, 0, 11, x);
-  hl_if97_powers (HL_IF97_T_CRITICAL / T, 0, 26, y);
-  hl_if97_sums (terms, G_N_ELEMENTS (terms), x, y, &sums);
+  hl_if97_pair_powers (delta, 0, 11, x);
+  hl_if97_pair_powers (HL_IF97_T_CRITICAL / T, 0, 26, y);
+  hl_if97_sums (terms, G_N_ELEMENTS (terms), x, y, FALSE, &sums);
 
   /* Table 31; each derivative stands multiplied by its variables. */
-  double phi = N_LOGARITHM * log (delta) + sums.one;
-  double phi_d = N_LOGARITHM + sums.i;
-  double phi_dd = -N_LOGARITHM + sums.ii;
+  double phi = N_LOGARITHM * log (delta) + sums.one[0];
+  double phi_d = N_LOGARITHM + sums.i[0];
+  double phi_dd = -N_LOGARITHM + sums.ii[0];
   helmholtz->p = density * RT * phi_d;
-  helmholtz->h = RT * (sums.j + phi_d);
-  helmholtz->s = HL_IF97_R * (sums.j - phi);
-  helmholtz->cv = -HL_IF97_R * sums.jj;
+  helmholtz->h = RT * (sums.one[1] + phi_d);
+  helmholtz->s = HL_IF97_R * (sums.one[1] - phi);
+  helmholtz->cv = -HL_IF97_R * sums.jj[0];
   helmholtz->p_d = RT * (2.0 * phi_d + phi_dd);
-  helmholtz->p_T = density * HL_IF97_R * (phi_d - sums.ij);
+  helmholtz->p_T = density * HL_IF97_R * (phi_d - sums.i[1]);
 }
 
 /**

@@ -17,51 +17,40 @@ static const HlIf97Term terms[] = {
 #define P_STAR 1e6      /* [Pa] */
 #define T_STAR 1000.0   /* [K] */
 
-/**
- * hl_if97_region5:
- * @p: pressure [Pa]
- * @T: temperature [K]
- * @state: (out): properties by IAPWS R7-97(2012), Eq. 32; phase is not set
- *
- * No range check: the equation is smooth some way beyond its region.
- */
-void
-hl_if97_region5 (double p, double T, HlState *state)
+HL_IF97_INLINE void
+evaluate (double p, double T, HlIf97Given given, double value, HlState *state)
 {
-  double x[4], powers_t[3 + 10], *t = powers_t + 3;
+  HlIf97Pair x[4], powers_t[3 + 10], *t = powers_t + 3;
   double pi = p * (1.0 / P_STAR);
-  HlIf97Sums sums;
-  HlIf97SumsY ideal;
-  hl_if97_powers (pi, 0, 3, x);
-  hl_if97_powers (T_STAR / T, -3, 9, t);
-  hl_if97_sums (terms, G_N_ELEMENTS (terms), x, t, &sums);
-  hl_if97_sums_y (ideal_terms, G_N_ELEMENTS (ideal_terms), x, t, &ideal);
+  HlIf97Sums sums, ideal;
+  hl_if97_pair_powers (pi, 0, 3, x);
+  hl_if97_pair_powers (T_STAR / T, -3, 9, t);
+  hl_if97_sums (terms, G_N_ELEMENTS (terms), x, t, given != HL_IF97_AT_T, &sums);
+  hl_if97_sums (ideal_terms, G_N_ELEMENTS (ideal_terms), NULL, t, FALSE, &ideal);
 
   HlIf97Gibbs gamma = {
-    log (pi) + ideal.one + sums.one, 1.0 + sums.i, -1.0 + sums.ii, ideal.j + sums.j, ideal.jj + sums.jj, sums.ij,
+    .one = log (pi) + ideal.one[0] + sums.one[0], .t = ideal.one[1] + sums.one[1],
+    .tt = ideal.jj[0] + sums.jj[0], .ttt = ideal.jj[1] + sums.jj[1],
+    .p = 1.0 + sums.i[0], .pt = sums.i[1], .ptt = sums.ijj[0], .pp = -1.0 + sums.ii[0], .ppt = sums.ii[1],
   };
-  hl_if97_state_from_gibbs (p, T, &gamma, state);
+  hl_if97_state_from_gibbs (p, T, &gamma, given, value, state);
 }
 
-/**
- * hl_if97_region5_caloric:
- * @p: pressure [Pa]
- * @T: temperature [K]
- * @caloric: (out): h, s, cp and its slope, by IAPWS R7-97(2012), Eq. 32
- */
-void
-hl_if97_region5_caloric (double p, double T, HlIf97Caloric *caloric)
+HL_IF97_INLINE void
+evaluate_calorics (double p, double T, gboolean has_one, double *one, double *t, double *cp)
 {
-  double x[4], powers_t[3 + 10], *t = powers_t + 3;
+  HlIf97Pair x[4], powers_t[3 + 10], *pt = powers_t + 3;
   double pi = p * (1.0 / P_STAR);
-  HlIf97SumsY sums, ideal;
-  hl_if97_powers (pi, 0, 3, x);
-  hl_if97_powers (T_STAR / T, -3, 9, t);
-  hl_if97_sums_y (terms, G_N_ELEMENTS (terms), x, t, &sums);
-  hl_if97_sums_y (ideal_terms, G_N_ELEMENTS (ideal_terms), x, t, &ideal);
-
-  HlIf97GibbsT gamma = {
-    log (pi) + ideal.one + sums.one, ideal.j + sums.j, ideal.jj + sums.jj, ideal.jjj + sums.jjj,
-  };
-  hl_if97_caloric_from_gibbs (T, &gamma, caloric);
+  HlIf97SumsJ sums, ideal;
+  hl_if97_pair_powers (pi, 0, 3, x);
+  hl_if97_pair_powers (T_STAR / T, -3, 9, pt);
+  hl_if97_sums_j (terms, G_N_ELEMENTS (terms), x, pt, has_one, &sums);
+  hl_if97_sums_j (ideal_terms, G_N_ELEMENTS (ideal_terms), NULL, pt, has_one, &ideal);
+  *one = has_one ? log (pi) + ideal.one + sums.one : 0.0;
+  *t = ideal.j[0] + sums.j[0];
+  *cp = -HL_IF97_R * (ideal.j[1] + sums.j[1]);
 }
+
+/* Hot steam by IAPWS R7-97(2012), Eq. 32.  No range check: the equation is
+ * smooth some way beyond its region. */
+HL_IF97_DEFINE_REGION (region5)

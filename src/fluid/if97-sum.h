@@ -7,12 +7,6 @@ G_BEGIN_DECLS
 /* One term of an equation's table; terms of equal I stand together. */
 typedef struct { signed char I, J; double n; } HlIf97Term;
 
-/* Sums over n x^I y^J of the factors named: i stands for I, ii for I (I - 1),
- * jjj for J (J - 1) (J - 2).  Divided by powers of x and y they are the
- * derivatives. */
-typedef struct { double one, i, ii, j, jj, ij; } HlIf97Sums;
-typedef struct { double one, j, jj, jjj; } HlIf97SumsY;
-
 #define HL_IF97_INLINE static inline __attribute__ ((always_inline))
 
 /* Everything below is always inlined with constant tables, so that the
@@ -54,65 +48,96 @@ hl_if97_sum (const HlIf97Term *terms, int n, const double *x, const double *y)
   return sum;
 }
 
+/* The two halves of a processor's register: two sums advance by one instruction. */
+typedef double HlIf97Pair __attribute__ ((vector_size (16)));
+
+/* As hl_if97_powers(), each power twice. */
 HL_IF97_INLINE void
-hl_if97_sums (const HlIf97Term *terms, int n, const double *x, const double *y, HlIf97Sums *sums)
+hl_if97_pair_powers (double x, int lowest, int highest, HlIf97Pair *power)
+{
+  power[0] = (HlIf97Pair) { 1.0, 1.0 };
+  if (highest >= 1)
+    power[1] = (HlIf97Pair) { x, x };
+#pragma GCC unroll 64
+  for (int k = 2; k <= highest; k++)
+    power[k] = power[k / 2] * power[k - k / 2];
+  if (lowest <= -1)
+    power[-1] = (HlIf97Pair) { 1.0 / x, 1.0 / x };
+#pragma GCC unroll 64
+  for (int k = 2; k <= -lowest; k++)
+    power[-k] = power[-(k / 2)] * power[-(k - k / 2)];
+}
+
+/* Sums over n x^I y^J, in pairs, with the factors
+ *
+ *   one       1            J          jj       J (J - 1)       J (J - 1) (J - 2)
+ *   i         I            I J        ijj      I J (J - 1)     I J (J - 1) (J - 2)
+ *   ii        I (I - 1)    I (I - 1) J
+ *
+ * Divided by powers of x and y they are derivatives. */
+typedef struct { HlIf97Pair one, i, ii, jj, ijj; } HlIf97Sums;
+
+/* With has_ijj FALSE the sums ijj stay 0. */
+HL_IF97_INLINE void
+hl_if97_sums (const HlIf97Term *terms, int n, const HlIf97Pair *x, const HlIf97Pair *y, gboolean has_ijj,
+              HlIf97Sums *sums)
 {
   HlIf97Sums total = { 0 };
-  double g = 0.0, gj = 0.0, gjj = 0.0;
+  HlIf97Pair low = { 0 }, high = { 0 };
 #pragma GCC unroll 64
   for (int k = 0; k < n; k++)
     {
-      double I = terms[k].I, J = terms[k].J, power = y[terms[k].J];
-      double t = terms[k].n * power, tj = (terms[k].n * J) * power, tjj = (terms[k].n * (J * (J - 1.0))) * power;
+      double c = terms[k].n, J = terms[k].J, I = terms[k].I;
+      HlIf97Pair power = y[terms[k].J];
+      HlIf97Pair t_low = (HlIf97Pair) { c, c * J } * power;
+      HlIf97Pair t_high = (HlIf97Pair) { c * (J * (J - 1.0)), c * (J * (J - 1.0) * (J - 2.0)) } * power;
+      gboolean has_high = terms[k].J != 0 && terms[k].J != 1;
       gboolean starts = HL_IF97_GROUP_STARTS (terms, k);
-      g = starts ? t : g + t;
-      gj = starts ? tj : (terms[k].J == 0 ? gj : gj + tj);
-      gjj = starts ? tjj : (terms[k].J == 0 || terms[k].J == 1 ? gjj : gjj + tjj);
-      if (HL_IF97_GROUP_ENDS (terms, n, k))
+      low = starts ? t_low : low + t_low;
+      high = starts ? t_high : has_high ? high + t_high : high;
+      if (!HL_IF97_GROUP_ENDS (terms, n, k))
+        continue;
+      if (terms[k].I != 0)
         {
-          double px = x[terms[k].I];
-          g *= px;
-          gj *= px;
-          total.one += g;
-          total.j += gj;
-          total.jj += gjj * px;
-          if (terms[k].I != 0)
-            {
-              total.i += I * g;
-              total.ij += I * gj;
-            }
-          if (terms[k].I != 0 && terms[k].I != 1)
-            total.ii += (I * (I - 1.0)) * g;
+          low *= x[terms[k].I];
+          high *= x[terms[k].I];
+          total.i += terms[k].I == 1 ? low : I * low;
+          if (has_ijj)
+            total.ijj += terms[k].I == 1 ? high : I * high;
         }
+      if (terms[k].I != 0 && terms[k].I != 1)
+        total.ii += (I * (I - 1.0)) * low;
+      total.one += low;
+      total.jj += high;
     }
   *sums = total;
 }
 
+/* The sums that h and cp, or s and cp, at given x ask for: of 1 (only with
+ * has_one), of J and of J (J - 1). */
+typedef struct { double one; HlIf97Pair j; } HlIf97SumsJ;
+
 HL_IF97_INLINE void
-hl_if97_sums_y (const HlIf97Term *terms, int n, const double *x, const double *y, HlIf97SumsY *sums)
+hl_if97_sums_j (const HlIf97Term *terms, int n, const HlIf97Pair *x, const HlIf97Pair *y, gboolean has_one,
+                HlIf97SumsJ *sums)
 {
-  HlIf97SumsY total = { 0 };
-  double g = 0.0, gj = 0.0, gjj = 0.0, gjjj = 0.0;
+  HlIf97SumsJ total = { 0 };
+  HlIf97Pair group = { 0 };
+  double one = 0.0;
 #pragma GCC unroll 64
   for (int k = 0; k < n; k++)
     {
-      double J = terms[k].J, power = y[terms[k].J], c = terms[k].n;
-      double t = c * power, tj = (c * J) * power, tjj = (c * (J * (J - 1.0))) * power,
-             tjjj = (c * (J * (J - 1.0) * (J - 2.0))) * power;
+      double c = terms[k].n, J = terms[k].J;
+      HlIf97Pair t = (HlIf97Pair) { c * J, c * (J * (J - 1.0)) } * y[terms[k].J];
       gboolean starts = HL_IF97_GROUP_STARTS (terms, k);
-      int j = terms[k].J;
-      g = starts ? t : g + t;
-      gj = starts ? tj : (j == 0 ? gj : gj + tj);
-      gjj = starts ? tjj : (j == 0 || j == 1 ? gjj : gjj + tjj);
-      gjjj = starts ? tjjj : (j == 0 || j == 1 || j == 2 ? gjjj : gjjj + tjjj);
-      if (HL_IF97_GROUP_ENDS (terms, n, k))
-        {
-          double px = x[terms[k].I];
-          total.one += g * px;
-          total.j += gj * px;
-          total.jj += gjj * px;
-          total.jjj += gjjj * px;
-        }
+      group = starts ? t : terms[k].J != 0 ? group + t : group;
+      if (has_one)
+        one = starts ? c * y[terms[k].J][0] : one + c * y[terms[k].J][0];
+      if (!HL_IF97_GROUP_ENDS (terms, n, k))
+        continue;
+      total.j += terms[k].I == 0 ? group : group * x[terms[k].I];
+      if (has_one)
+        total.one += terms[k].I == 0 ? one : one * x[terms[k].I][0];
     }
   *sums = total;
 }

@@ -1,44 +1,41 @@
 /* Water and steam from pressure and enthalpy or entropy: region, starting value, polish.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "fluid/if97-sum.h"
+#include "fluid/water-edges.h"
 #include "fluid/water-private.h"
 
 #include <math.h>
 
-/* The second argument of the pair; every function that takes it is inlined
- * with a constant, so that (p,h) and (p,s) are two programs from one text. */
-typedef enum { KEY_H, KEY_S } Key;
-
-typedef void (*Caloric) (double p, double T, HlIf97Caloric *caloric);
-typedef void (*Region) (double p, double T, HlState *state);
+/* Every function that takes a key is inlined with a constant, so that (p,h)
+ * and (p,s) are two programs from one text. */
+typedef double (*Caloric) (double p, double T, double *cp);
 
 #define MOST_STEPS 40
+
+/* A backward equation is this near to the root of its region's equation [K];
+ * Newton's step from there leaves 5e-5 K at most, which the region's
+ * evaluation at the value takes. */
+#define NEAR 0.03
 
 /* A temperature this near a limit counts as on it: the rounding of h and s
  * must not put a state outside that (p,T) has put on the limit. */
 #define T_SLACK 1e-9
 
 HL_IF97_INLINE double
-key_of (Key key, const HlState *state)
+key_of (HlKey key, const HlState *state)
 {
-  return key == KEY_H ? state->h : state->s;
+  return key == HL_KEY_H ? state->h : state->s;
 }
 
-/* T at given p where the key has the value, to third order: after a step from
- * within 30 mK about 1e-9 K are left, and finish() takes these. */
+/* T at given p where the key has the value, to what the last small step leaves. */
 HL_IF97_INLINE HlStatus
-solve_T (Caloric region, Key key, double p, double value, double T_low, double T_high, double *T)
+approach_T (Caloric region, HlKey key, double p, double value, double T_low, double T_high, double *T)
 {
   for (int i = 0; i < MOST_STEPS; i++)
     {
-      HlIf97Caloric c;
-      region (p, *T, &c);
-      double slope = key == KEY_H ? c.cp : c.cp / *T;
-      double slope_T = key == KEY_H ? c.cp_T : (c.cp_T - slope) / *T;
-      double d = (value - (key == KEY_H ? c.h : c.s)) / slope;
-      double bend = 0.5 * slope_T / slope * d;
-      double next = *T + (fabs (bend) < 0.3 ? d * (1.0 - bend + 2.0 * bend * bend) : d);
-      if (fabs (d) < 0.03)
+      double cp, k = region (p, *T, &cp);
+      double step = key == HL_KEY_H ? (value - k) / cp : (value - k) * *T / cp;
+      double next = *T + step;
+      if (fabs (step) < NEAR)
         {
           *T = next;
           return HL_OK;
@@ -51,29 +48,13 @@ solve_T (Caloric region, Key key, double p, double value, double T_low, double T
   return HL_NOT_CONVERGED;
 }
 
-/* Moves a state by the little that is left between its key and the value. */
-HL_IF97_INLINE void
-finish (Key key, double value, HlState *state)
-{
-  double step_h = key == KEY_H ? value - state->h : (value - state->s) * state->T;
-  state->T += state->T_h * step_h;
-  state->s += state->s_h * step_h;
-  state->v += state->v_h * step_h;
-  state->h += step_h;
-  if (key == KEY_H)
-    state->h = value;
-  else
-    state->s = value;
-  state->u = state->h - state->p * state->v;
-}
-
 /* Where two regions meet with a small jump, no state has the value: the
  * answer is the boundary's temperature, and between the two sides' properties
  * in the proportion in which the value lies between theirs. */
 static void
-blend (Key key, double value, const HlState *below, const HlState *above, HlState *state)
+blend (HlKey key, double value, const HlState *below, const HlState *above, HlState *state)
 {
-  double k_below = key == KEY_H ? below->h : below->s, k_above = key == KEY_H ? above->h : above->s;
+  double k_below = key == HL_KEY_H ? below->h : below->s, k_above = key == HL_KEY_H ? above->h : above->s;
   double f = k_above > k_below ? fmin (fmax ((value - k_below) / (k_above - k_below), 0.0), 1.0) : 0.0;
   double g = 1.0 - f;
   *state = *below;
@@ -92,57 +73,76 @@ blend (Key key, double value, const HlState *below, const HlState *above, HlStat
 }
 
 HL_IF97_INLINE HlStatus
-solve_region1 (Key key, double p, double value, HlState *state)
+solve_region1 (HlKey key, double p, double value, HlState *state)
 {
-  double T = key == KEY_H ? hl_if97_T_ph_1 (p, value) : hl_if97_T_ps_1 (p, value);
+  double T = key == HL_KEY_H ? hl_if97_T_ph_1 (p, value) : hl_if97_T_ps_1 (p, value);
   T = fmin (fmax (T, HL_IF97_T_MIN), HL_IF97_T_13);
-  HlStatus status = solve_T (hl_if97_region1_caloric, key, p, value, HL_IF97_T_MIN - 5.0, HL_IF97_T_13 + 5.0, &T);
+  HlStatus status = approach_T (key == HL_KEY_H ? hl_if97_region1_enthalpy : hl_if97_region1_entropy, key, p, value,
+                                HL_IF97_T_MIN - 5.0, HL_IF97_T_13 + 5.0, &T);
   if (status != HL_OK)
     return status;
   if (T < HL_IF97_T_MIN * (1.0 - T_SLACK))
     return HL_OUTSIDE_RANGE;
-  hl_if97_region1 (p, T, state);
-  finish (key, value, state);
+  (key == HL_KEY_H ? hl_if97_region1_at_h : hl_if97_region1_at_s) (p, T, value, state);
   state->phase = HL_PHASE_LIQUID;
   return HL_OK;
 }
 
 HL_IF97_INLINE double
-start_region2 (Key key, double p, double value)
+start_region2 (HlKey key, double p, double value)
 {
   /* The backward equations hold from psat(273.15 K) up; below, steam is an
    * ideal gas: h depends on T alone, s on ln p besides. */
   if (p < HL_IF97_P_MIN_SAT)
     {
-      if (key == KEY_S)
+      if (key == HL_KEY_S)
         value += HL_IF97_R * log (p / HL_IF97_P_MIN_SAT);
       p = HL_IF97_P_MIN_SAT;
     }
   if (p <= 4e6)
-    return key == KEY_H ? hl_if97_T_ph_2a (p, value) : hl_if97_T_ps_2a (p, value);
-  if (key == KEY_H ? p < 6.546699678e6 || value >= hl_if97_B2bc_h (p) : value >= 5850.0)
-    return key == KEY_H ? hl_if97_T_ph_2b (p, value) : hl_if97_T_ps_2b (p, value);
-  return key == KEY_H ? hl_if97_T_ph_2c (p, value) : hl_if97_T_ps_2c (p, value);
+    return key == HL_KEY_H ? hl_if97_T_ph_2a (p, value) : hl_if97_T_ps_2a (p, value);
+  if (key == HL_KEY_H ? p < 6.546699678e6 || value >= hl_if97_B2bc_h (p) : value >= 5850.0)
+    return key == HL_KEY_H ? hl_if97_T_ph_2b (p, value) : hl_if97_T_ps_2b (p, value);
+  return key == HL_KEY_H ? hl_if97_T_ph_2c (p, value) : hl_if97_T_ps_2c (p, value);
+}
+
+/* Region 5 as an ideal gas of constant heat capacity, from its state at
+ * 1500 K and 0.5 MPa (R7-97, Table 42): right to some 50 K. */
+#define T_5  1500.0
+#define H_5  5.2198e6
+#define S_5  9654.1
+#define P_5  0.5e6
+#define CP_5 2620.0
+
+/* The backward equations of region 2 must not be asked far above it.  Where
+ * the ideal gas is hotter than 1120 K, the state lies in region 5 at any pressure. */
+HL_IF97_INLINE gboolean
+is_clearly_region5 (HlKey key, double p, double value)
+{
+  if (key == HL_KEY_H)
+    return value > H_5 + (1120.0 - T_5) * CP_5;
+  return value + HL_IF97_R * log (p / P_5) > S_5 - 0.29213 * CP_5;   /* ln (1500/1120) */
 }
 
 /* Region 5, or the boundary with region 2 at 1073.15 K. */
 static HlStatus
-solve_region5 (Key key, double p, double value, HlState *state)
+solve_region5 (HlKey key, double p, double value, HlState *state)
 {
-  double T = 1500.0;
   if (p > HL_IF97_P_MAX_5)
     return HL_OUTSIDE_RANGE;
-  HlStatus status = key == KEY_H
-    ? solve_T (hl_if97_region5_caloric, KEY_H, p, value, HL_IF97_T_25 - 50.0, HL_IF97_T_MAX + 50.0, &T)
-    : solve_T (hl_if97_region5_caloric, KEY_S, p, value, HL_IF97_T_25 - 50.0, HL_IF97_T_MAX + 50.0, &T);
+  double T = key == HL_KEY_H ? T_5 + (value - H_5) / CP_5
+                             : T_5 * exp (fmin ((value - S_5 + HL_IF97_R * log (p / P_5)) / CP_5, 1.0));
+  T = fmin (fmax (T, HL_IF97_T_25), HL_IF97_T_MAX);
+  HlStatus status = key == HL_KEY_H
+    ? approach_T (hl_if97_region5_enthalpy, HL_KEY_H, p, value, HL_IF97_T_25 - 50.0, HL_IF97_T_MAX + 50.0, &T)
+    : approach_T (hl_if97_region5_entropy, HL_KEY_S, p, value, HL_IF97_T_25 - 50.0, HL_IF97_T_MAX + 50.0, &T);
   if (status != HL_OK)
     return status;
   if (T > HL_IF97_T_MAX * (1.0 + T_SLACK))
     return HL_OUTSIDE_RANGE;
   if (T > HL_IF97_T_25)
     {
-      hl_if97_region5 (p, T, state);
-      finish (key, value, state);
+      (key == HL_KEY_H ? hl_if97_region5_at_h : hl_if97_region5_at_s) (p, T, value, state);
       return HL_OK;
     }
   HlState below, above;
@@ -152,41 +152,42 @@ solve_region5 (Key key, double p, double value, HlState *state)
   return HL_OK;
 }
 
-/* Steam of region 2 or 5; T_low is where region 2 begins at this pressure. */
+/* Steam of region 2 or 5; T_low is the lowest temperature of steam at this
+ * pressure, or any below it where the value is known to be steam's. */
 HL_IF97_INLINE HlStatus
-solve_steam (Key key, double p, double value, double T_low, HlState *state)
+solve_steam (HlKey key, double p, double value, double T_low, HlState *state)
 {
-  double T = fmin (fmax (start_region2 (key, p, value), T_low), HL_IF97_T_25);
-  HlStatus status = solve_T (hl_if97_region2_caloric, key, p, value, T_low - 5.0, HL_IF97_T_25 + 5.0, &T);
-  HlPhase phase = p > HL_IF97_P_CRITICAL ? HL_PHASE_SUPERCRITICAL : HL_PHASE_VAPOUR;
-  if (status == HL_NOT_CONVERGED)
-    return status;
-  if (status == HL_OUTSIDE_RANGE && T <= T_low)
-    return HL_OUTSIDE_RANGE;
+  double T = HL_IF97_T_25;
+  HlStatus status = HL_OUTSIDE_RANGE;
+  if (!is_clearly_region5 (key, p, value))
+    {
+      T = fmin (fmax (start_region2 (key, p, value), T_low), HL_IF97_T_25);
+      status = approach_T (key == HL_KEY_H ? hl_if97_region2_enthalpy : hl_if97_region2_entropy, key, p, value,
+                           T_low - 5.0, HL_IF97_T_25 + 5.0, &T);
+    }
   if (status == HL_OK && T <= HL_IF97_T_25 * (1.0 + T_SLACK))
     {
       if (T < T_low * (1.0 - T_SLACK))
         return HL_OUTSIDE_RANGE;
-      hl_if97_region2 (p, T, state);
-      finish (key, value, state);
-      state->phase = phase;
-      return HL_OK;
+      (key == HL_KEY_H ? hl_if97_region2_at_h : hl_if97_region2_at_s) (p, T, value, state);
     }
-  status = solve_region5 (key, p, value, state);
-  if (status == HL_OK)
-    state->phase = phase;
-  return status;
+  else if (status == HL_NOT_CONVERGED || T <= T_low)
+    return status;
+  else if ((status = solve_region5 (key, p, value, state)) != HL_OK)
+    return status;
+  state->phase = p > HL_IF97_P_CRITICAL ? HL_PHASE_SUPERCRITICAL : HL_PHASE_VAPOUR;
+  return HL_OK;
 }
 
 /* Region 3 from its backward equations; an answer beyond the borders of the
  * region at this pressure means that the value lies in the jump there. */
 static HlStatus
-solve_region3 (Key key, double p, double value, double T_high, HlState *state)
+solve_region3 (HlKey key, double p, double value, double T_high, HlState *state)
 {
-  gboolean is_3a = key == KEY_H ? value <= hl_if97_B3ab_h (p) : value <= 4412.02148223476;
+  gboolean is_3a = key == HL_KEY_H ? value <= hl_if97_B3ab_h (p) : value <= 4412.02148223476;
   HlState trial;
   HlStatus status;
-  if (key == KEY_H)
+  if (key == HL_KEY_H)
     status = hl_if97_region3_ph (p, value, 1.0 / (is_3a ? hl_if97_v_ph_3a (p, value) : hl_if97_v_ph_3b (p, value)),
                                  is_3a ? hl_if97_T_ph_3a (p, value) : hl_if97_T_ph_3b (p, value), &trial);
   else
@@ -222,48 +223,62 @@ solve_region3 (Key key, double p, double value, double T_high, HlState *state)
 
 /* Between the ends of the line: the mixture whose key has the value. */
 HL_IF97_INLINE void
-solve_mixture (Key key, double value, const HlState *liquid, const HlState *vapour, HlState *state)
+solve_mixture (HlKey key, double value, const HlState *liquid, const HlState *vapour, HlState *state)
 {
   double k_liquid = key_of (key, liquid), k_vapour = key_of (key, vapour), p_T;
   HlSaturation saturation;
   hl_if97_psat_T (liquid->T, &p_T);
   hl_water_saturation_from_ends (liquid, vapour, 1.0 / p_T, &saturation);
   hl_water_mix (&saturation, (value - k_liquid) / (k_vapour - k_liquid), state);
-  if (key == KEY_H)
+  if (key == HL_KEY_H)
     state->h = value;
   else
     state->s = value;
 }
 
-/* Pressures where the saturation line lies between regions 1 and 2. */
-HL_IF97_INLINE HlStatus
-solve_low_pressure (Key key, double p, double value, HlState *state)
+/* Near the line or between its ends: the ends themselves decide. */
+static HlStatus
+solve_low_pressure_at_ends (HlKey key, double p, double value, HlState *state)
 {
   HlState liquid, vapour;
   double T = hl_if97_Tsat (p);
   hl_if97_region1 (p, T, &liquid);
   if (value <= key_of (key, &liquid))
-    return solve_region1 (key, p, value, state);
+    return key == HL_KEY_H ? solve_region1 (HL_KEY_H, p, value, state) : solve_region1 (HL_KEY_S, p, value, state);
   hl_if97_region2 (p, T, &vapour);
   if (value >= key_of (key, &vapour))
-    return solve_steam (key, p, value, T, state);
+    return key == HL_KEY_H ? solve_steam (HL_KEY_H, p, value, T, state) : solve_steam (HL_KEY_S, p, value, T, state);
   solve_mixture (key, value, &liquid, &vapour, state);
   return HL_OK;
 }
 
-/* Pressures where region 3 lies between regions 1 and 2. */
+/* Pressures where the saturation line lies between regions 1 and 2. */
 HL_IF97_INLINE HlStatus
-solve_high_pressure (Key key, double p, double value, HlState *state)
+solve_low_pressure (HlKey key, double p, double value, HlState *state)
 {
-  HlState edge;
-  hl_if97_region1 (p, HL_IF97_T_13, &edge);
-  if (value <= key_of (key, &edge))
+  double z = hl_edge_variable (HL_EDGE_LIQUID, p);
+  if (value < hl_edge_value (HL_EDGE_LIQUID, key, z) - hl_edges[HL_EDGE_LIQUID][key].margin)
     return solve_region1 (key, p, value, state);
-  double T_B23 = hl_if97_B23_T (p);
-  hl_if97_region2 (p, T_B23, &edge);
-  if (value >= key_of (key, &edge))
-    return solve_steam (key, p, value, T_B23, state);
-  if (p < HL_IF97_P_CRITICAL)
+  if (value > hl_edge_value (HL_EDGE_VAPOUR, key, z) + hl_edges[HL_EDGE_VAPOUR][key].margin)
+    return solve_steam (key, p, value, HL_IF97_T_MIN, state);
+  return solve_low_pressure_at_ends (key, p, value, state);
+}
+
+/* Is a value of region 3 at this subcritical pressure clearly outside the
+ * mixture?  SR3-03's line holds to 0.01 % (0.1 % near its ends). */
+HL_IF97_INLINE gboolean
+is_clear_of_mixture (HlKey key, double p, double value)
+{
+  if (key == HL_KEY_H)
+    return value > 1.671e6 && value < 2.563e6 && p > 1.005 * hl_if97_psat3_h (value);
+  return value > 3779.0 && value < 5210.0 && p > 1.005 * hl_if97_psat3_s (value);
+}
+
+/* Between the edges of regions 1 and 2: region 3 or its mixture. */
+static HlStatus
+solve_middle (HlKey key, double p, double value, double T_B23, HlState *state)
+{
+  if (p < HL_IF97_P_CRITICAL && !is_clear_of_mixture (key, p, value))
     {
       HlState liquid, vapour;
       HlStatus status = hl_water_saturated_ends (p, hl_if97_Tsat (p), &liquid, &vapour);
@@ -278,11 +293,30 @@ solve_high_pressure (Key key, double p, double value, HlState *state)
   return solve_region3 (key, p, value, T_B23, state);
 }
 
+/* Pressures where region 3 lies between regions 1 and 2; the edges are
+ * evaluated where their approximation does not decide. */
 HL_IF97_INLINE HlStatus
-solve (Key key, double p, double value, HlState *state)
+solve_high_pressure (HlKey key, double p, double value, HlState *state)
+{
+  double z = hl_edge_variable (HL_EDGE_13, p), cp;
+  double past_13 = value - hl_edge_value (HL_EDGE_13, key, z);
+  if (fabs (past_13) <= hl_edges[HL_EDGE_13][key].margin)
+    past_13 = value - (key == HL_KEY_H ? hl_if97_region1_enthalpy : hl_if97_region1_entropy) (p, HL_IF97_T_13, &cp);
+  if (past_13 <= 0.0)
+    return solve_region1 (key, p, value, state);
+  double past_B23 = value - hl_edge_value (HL_EDGE_B23, key, z), T_B23 = hl_if97_B23_T (p);
+  if (fabs (past_B23) <= hl_edges[HL_EDGE_B23][key].margin)
+    past_B23 = value - (key == HL_KEY_H ? hl_if97_region2_enthalpy : hl_if97_region2_entropy) (p, T_B23, &cp);
+  if (past_B23 >= 0.0)
+    return solve_steam (key, p, value, T_B23, state);
+  return solve_middle (key, p, value, T_B23, state);
+}
+
+HL_IF97_INLINE HlStatus
+solve (HlKey key, double p, double value, HlState *state)
 {
   /* A trial beyond these bounds makes the polynomials overflow. */
-  if (!(p > 0.0 && p <= HL_IF97_P_MAX) || !(key == KEY_H ? fabs (value) < 1e7 : fabs (value) < 1e5))
+  if (!(p > 0.0 && p <= HL_IF97_P_MAX) || !(key == HL_KEY_H ? fabs (value) < 1e7 : fabs (value) < 1e5))
     return HL_OUTSIDE_RANGE;
   if (p > HL_IF97_P_SAT_13)
     return solve_high_pressure (key, p, value, state);
@@ -306,7 +340,7 @@ solve (Key key, double p, double value, HlState *state)
 HlStatus
 hl_water_state_ph (const HlFluid *fluid G_GNUC_UNUSED, double p, double h, HlState *state)
 {
-  return solve (KEY_H, p, h, state);
+  return solve (HL_KEY_H, p, h, state);
 }
 
 /**
@@ -323,5 +357,5 @@ hl_water_state_ph (const HlFluid *fluid G_GNUC_UNUSED, double p, double h, HlSta
 HlStatus
 hl_water_state_ps (const HlFluid *fluid G_GNUC_UNUSED, double p, double s, HlState *state)
 {
-  return solve (KEY_S, p, s, state);
+  return solve (HL_KEY_S, p, s, state);
 }
