@@ -21,9 +21,10 @@ typedef struct { double T, h, s, v, cp, v_T, v_p; } HlIf97Basis;
 
 /* Moves the properties along the isobar by the little that is left to the
  * value: to second order in T, h, s and v, to first order in the derivatives.
- * From 1e-5 K, where one Newton step from a backward equation ends, what is
- * left is below the rounding. */
-HL_IF97_INLINE void
+ * Returns about the relative error that this leaves in the derivatives, the
+ * square of the relative change of cp and T; T, h, s and v are better by that
+ * change. */
+HL_IF97_INLINE double
 hl_if97_shift (HlIf97Given given, double value, double p, const HlIf97Gibbs *gamma, HlIf97Basis *b)
 {
   double per_T = 1.0 / b->T, per_p = 1.0 / p;
@@ -53,22 +54,30 @@ hl_if97_shift (HlIf97Given given, double value, double p, const HlIf97Gibbs *gam
   b->cp += cp_T * step;
   b->v_T += v_TT * step;
   b->v_p += v_pT * step;
+  double change = (fabs (cp_T) * per_cp + per_T) * step;
+  return change * change;
 }
 
 /* The derivatives with respect to (p,h) follow from those with respect to (p,T). */
-HL_IF97_INLINE void
-hl_if97_state_from_gibbs (double p, double T, const HlIf97Gibbs *gamma, HlIf97Given given, double value, HlState *state)
+HL_IF97_INLINE double
+hl_if97_state_from_gibbs (double p, double T, const HlIf97Gibbs *gamma, HlIf97Given given, double value, double most_left,
+                          HlState *state)
 {
   double RT = HL_IF97_R * T, per_p = 1.0 / p;
   HlIf97Basis b = {
     .T = T, .h = RT * gamma->t, .s = HL_IF97_R * (gamma->t - gamma->one), .v = RT * per_p * gamma->p,
     .cp = -HL_IF97_R * gamma->tt, .v_T = HL_IF97_R * per_p * (gamma->p - gamma->pt), .v_p = RT * per_p * per_p * gamma->pp,
   };
+  double left = 0.0;
   if (given != HL_IF97_AT_T)
-    hl_if97_shift (given, value, p, gamma, &b);
+    {
+      left = hl_if97_shift (given, value, p, gamma, &b);
+      if (!(left <= most_left))
+        return left;
+    }
   double per_T = 1.0 / b.T, per_cp = 1.0 / b.cp;
   double T_p = (b.T * b.v_T - b.v) * per_cp;
-  double Tv_T2 = b.T * b.v_T * b.v_T;
+  double cv_v_p = b.cp * b.v_p + b.T * b.v_T * b.v_T;
   state->p = p;
   state->T = b.T;
   state->h = b.h;
@@ -76,8 +85,8 @@ hl_if97_state_from_gibbs (double p, double T, const HlIf97Gibbs *gamma, HlIf97Gi
   state->v = b.v;
   state->u = b.h - p * b.v;
   state->cp = b.cp;
-  state->cv = b.cp + Tv_T2 / b.v_p;
-  state->w = b.v / sqrt (-b.v_p - Tv_T2 * per_cp);
+  state->cv = cv_v_p / b.v_p;
+  state->w = b.v * sqrt (b.cp / -cv_v_p);
   state->x = NAN;
   state->T_p = T_p;
   state->T_h = per_cp;
@@ -85,25 +94,26 @@ hl_if97_state_from_gibbs (double p, double T, const HlIf97Gibbs *gamma, HlIf97Gi
   state->s_h = per_T;
   state->v_p = b.v_p + b.v_T * T_p;
   state->v_h = b.v_T * per_cp;
+  return left;
 }
 
 /* The four faces of a region: forward, near to a given h or s, and h or s with
- * cp alone for the first Newton step. */
+ * cp alone. */
 #define HL_IF97_DEFINE_REGION(region) \
   void \
   hl_if97_##region (double p, double T, HlState *state) \
   { \
-    evaluate (p, T, HL_IF97_AT_T, 0.0, state); \
+    evaluate (p, T, HL_IF97_AT_T, 0.0, 0.0, state); \
   } \
-  void \
-  hl_if97_##region##_at_h (double p, double T, double h, HlState *state) \
+  double \
+  hl_if97_##region##_at_h (double p, double T, double h, double most_left, HlState *state) \
   { \
-    evaluate (p, T, HL_IF97_AT_H, h, state); \
+    return evaluate (p, T, HL_IF97_AT_H, h, most_left, state); \
   } \
-  void \
-  hl_if97_##region##_at_s (double p, double T, double s, HlState *state) \
+  double \
+  hl_if97_##region##_at_s (double p, double T, double s, double most_left, HlState *state) \
   { \
-    evaluate (p, T, HL_IF97_AT_S, s, state); \
+    return evaluate (p, T, HL_IF97_AT_S, s, most_left, state); \
   } \
   double \
   hl_if97_##region##_enthalpy (double p, double T, double *cp) \

@@ -31,13 +31,15 @@ void hl_if97_region3            (double density, double T, HlState *state);
 void hl_if97_region5            (double p, double T, HlState *state);
 
 /* The same at the temperature where h [J/kg] or s [J/(kg K)] has the value; T
- * is that temperature to within about 1e-4 K. */
-void hl_if97_region1_at_h (double p, double T, double h, HlState *state);
-void hl_if97_region1_at_s (double p, double T, double s, HlState *state);
-void hl_if97_region2_at_h (double p, double T, double h, HlState *state);
-void hl_if97_region2_at_s (double p, double T, double s, HlState *state);
-void hl_if97_region5_at_h (double p, double T, double h, HlState *state);
-void hl_if97_region5_at_s (double p, double T, double s, HlState *state);
+ * is near to it, within some 30 mK.  Returns about the relative error left in
+ * the derivatives; where that is more than most_left (below 1e-8), the state is untouched
+ * and the start was too far off. */
+double hl_if97_region1_at_h (double p, double T, double h, double most_left, HlState *state);
+double hl_if97_region1_at_s (double p, double T, double s, double most_left, HlState *state);
+double hl_if97_region2_at_h (double p, double T, double h, double most_left, HlState *state);
+double hl_if97_region2_at_s (double p, double T, double s, double most_left, HlState *state);
+double hl_if97_region5_at_h (double p, double T, double h, double most_left, HlState *state);
+double hl_if97_region5_at_s (double p, double T, double s, double most_left, HlState *state);
 
 /* h or s alone with the heat capacity cp [J/(kg K)]. */
 double hl_if97_region1_enthalpy (double p, double T, double *cp);

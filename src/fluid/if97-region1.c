@@ -21,23 +21,23 @@ static const HlIf97Term terms[] = {
 #define P_STAR 16.53e6   /* [Pa] */
 #define T_STAR 1386.0    /* [K] */
 
-HL_IF97_INLINE void
-evaluate (double p, double T, HlIf97Given given, double value, HlState *state)
+HL_IF97_INLINE double
+evaluate (double p, double T, HlIf97Given given, double value, double most_left, HlState *state)
 {
   HlIf97Pair x[33], powers_y[41 + 18], *y = powers_y + 41;
   double pi = p * (1.0 / P_STAR), tau = T_STAR / T;
   HlIf97Sums sums;
-  hl_if97_pair_powers (7.1 - pi, 0, 32, x);
-  hl_if97_pair_powers (tau - 1.222, -41, 17, y);
+  hl_if97_pair_powers (7.1 - pi, NAN, 0, 32, x);
+  hl_if97_pair_powers (tau - 1.222, T / (T_STAR - 1.222 * T), -41, 17, y);
   hl_if97_sums (terms, G_N_ELEMENTS (terms), x, y, given != HL_IF97_AT_T, &sums);
 
-  double a = -pi / (7.1 - pi), a2 = a * a, b = tau * y[-1][0], b2 = b * b;
+  double a = -pi / (7.1 - pi), a2 = a * a, b = T_STAR / (T_STAR - 1.222 * T), b2 = b * b;
   HlIf97Gibbs gamma = {
     .one = sums.one[0], .t = b * sums.one[1], .tt = b2 * sums.jj[0], .ttt = b2 * b * sums.jj[1],
     .p = a * sums.i[0], .pt = a * b * sums.i[1], .ptt = a * b2 * sums.ijj[0],
     .pp = a2 * sums.ii[0], .ppt = a2 * b * sums.ii[1],
   };
-  hl_if97_state_from_gibbs (p, T, &gamma, given, value, state);
+  return hl_if97_state_from_gibbs (p, T, &gamma, given, value, most_left, state);
 }
 
 HL_IF97_INLINE void
@@ -46,10 +46,10 @@ evaluate_calorics (double p, double T, gboolean has_one, double *one, double *t,
   HlIf97Pair x[33], powers_y[41 + 18], *y = powers_y + 41;
   double tau = T_STAR / T;
   HlIf97SumsJ sums;
-  hl_if97_pair_powers (7.1 - p * (1.0 / P_STAR), 0, 32, x);
-  hl_if97_pair_powers (tau - 1.222, -41, 17, y);
+  hl_if97_pair_powers (7.1 - p * (1.0 / P_STAR), NAN, 0, 32, x);
+  hl_if97_pair_powers (tau - 1.222, T / (T_STAR - 1.222 * T), -41, 17, y);
   hl_if97_sums_j (terms, G_N_ELEMENTS (terms), x, y, has_one, &sums);
-  double b = tau * y[-1][0];
+  double b = T_STAR / (T_STAR - 1.222 * T);
   *one = sums.one;
   *t = b * sums.j[0];
   *cp = -HL_IF97_R * b * b * sums.j[1];

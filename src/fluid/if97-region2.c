@@ -50,39 +50,39 @@ static const HlIf97Term metastable_terms[] = {
 
 /* Sums over the ideal-gas terms: 1 and J, J (J - 1) and J (J - 1) (J - 2). */
 HL_IF97_INLINE void
-sum_ideal (const HlIf97Term *ideal, double tau, HlIf97Sums *sums)
+sum_ideal (const HlIf97Term *ideal, double tau, double T, HlIf97Sums *sums)
 {
   HlIf97Pair powers_t[5 + 4], *t = powers_t + 5;
-  hl_if97_pair_powers (tau, -5, 3, t);
+  hl_if97_pair_powers (tau, T / T_STAR, -5, 3, t);
   hl_if97_sums (ideal, G_N_ELEMENTS (ideal_terms), NULL, t, FALSE, sums);
 }
 
-HL_IF97_INLINE void
+HL_IF97_INLINE double
 evaluate_with (const HlIf97Term *ideal, const HlIf97Term *residual, int n_residual, int highest_x, int highest_y,
-               double p, double T, HlIf97Given given, double value, HlState *state)
+               double p, double T, HlIf97Given given, double value, double most_left, HlState *state)
 {
   HlIf97Pair x[25], y[59];
-  double pi = p * (1.0 / P_STAR), tau = T_STAR / T;
+  double pi = p * (1.0 / P_STAR), tau = T_STAR / T, ln_pi = log (pi);
   HlIf97Sums sums, sums_ideal;
-  hl_if97_pair_powers (pi, 0, highest_x, x);
-  hl_if97_pair_powers (tau - 0.5, 0, highest_y, y);
+  hl_if97_pair_powers (pi, NAN, 0, highest_x, x);
+  hl_if97_pair_powers (tau - 0.5, NAN, 0, highest_y, y);
   hl_if97_sums (residual, n_residual, x, y, given != HL_IF97_AT_T, &sums);
-  sum_ideal (ideal, tau, &sums_ideal);
+  sum_ideal (ideal, tau, T, &sums_ideal);
 
-  double b = tau / (tau - 0.5), b2 = b * b;
+  double b = T_STAR / (T_STAR - 0.5 * T), b2 = b * b;
   HlIf97Gibbs gamma = {
-    .one = log (pi) + sums_ideal.one[0] + sums.one[0], .t = sums_ideal.one[1] + b * sums.one[1],
+    .one = ln_pi + sums_ideal.one[0] + sums.one[0], .t = sums_ideal.one[1] + b * sums.one[1],
     .tt = sums_ideal.jj[0] + b2 * sums.jj[0], .ttt = sums_ideal.jj[1] + b2 * b * sums.jj[1],
     .p = 1.0 + sums.i[0], .pt = b * sums.i[1], .ptt = b2 * sums.ijj[0],
     .pp = -1.0 + sums.ii[0], .ppt = b * sums.ii[1],
   };
-  hl_if97_state_from_gibbs (p, T, &gamma, given, value, state);
+  return hl_if97_state_from_gibbs (p, T, &gamma, given, value, most_left, state);
 }
 
-HL_IF97_INLINE void
-evaluate (double p, double T, HlIf97Given given, double value, HlState *state)
+HL_IF97_INLINE double
+evaluate (double p, double T, HlIf97Given given, double value, double most_left, HlState *state)
 {
-  evaluate_with (ideal_terms, terms, G_N_ELEMENTS (terms), 24, 58, p, T, given, value, state);
+  return evaluate_with (ideal_terms, terms, G_N_ELEMENTS (terms), 24, 58, p, T, given, value, most_left, state);
 }
 
 HL_IF97_INLINE void
@@ -91,12 +91,12 @@ evaluate_calorics (double p, double T, gboolean has_one, double *one, double *t,
   HlIf97Pair x[25], y[59], powers_t[5 + 4], *pt = powers_t + 5;
   double pi = p * (1.0 / P_STAR), tau = T_STAR / T;
   HlIf97SumsJ sums, ideal;
-  hl_if97_pair_powers (pi, 0, 24, x);
-  hl_if97_pair_powers (tau - 0.5, 0, 58, y);
-  hl_if97_pair_powers (tau, -5, 3, pt);
+  hl_if97_pair_powers (pi, NAN, 0, 24, x);
+  hl_if97_pair_powers (tau - 0.5, NAN, 0, 58, y);
+  hl_if97_pair_powers (tau, T / T_STAR, -5, 3, pt);
   hl_if97_sums_j (terms, G_N_ELEMENTS (terms), x, y, has_one, &sums);
   hl_if97_sums_j (ideal_terms, G_N_ELEMENTS (ideal_terms), NULL, pt, has_one, &ideal);
-  double b = tau / (tau - 0.5);
+  double b = T_STAR / (T_STAR - 0.5 * T);
   *one = has_one ? log (pi) + ideal.one + sums.one : 0.0;
   *t = ideal.j[0] + b * sums.j[0];
   *cp = -HL_IF97_R * (ideal.j[1] + b * b * sums.j[1]);
@@ -116,5 +116,5 @@ HL_IF97_DEFINE_REGION (region2)
 void
 hl_if97_region2_metastable (double p, double T, HlState *state)
 {
-  evaluate_with (metastable_ideal_terms, metastable_terms, G_N_ELEMENTS (metastable_terms), 5, 16, p, T, HL_IF97_AT_T, 0.0, state);
+  evaluate_with (metastable_ideal_terms, metastable_terms, G_N_ELEMENTS (metastable_terms), 5, 16, p, T, HL_IF97_AT_T, 0.0, 0.0, state);
 }

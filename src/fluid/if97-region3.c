@@ -37,8 +37,8 @@ hl_if97_region3_helmholtz (double density, double T, HlIf97Helmholtz *helmholtz)
   HlIf97Pair x[12], y[27];
   double delta = density * (1.0 / HL_IF97_D_CRITICAL), RT = HL_IF97_R * T;
   HlIf97Sums sums;
-  hl_if97_pair_powers (delta, 0, 11, x);
-  hl_if97_pair_powers (HL_IF97_T_CRITICAL / T, 0, 26, y);
+  hl_if97_pair_powers (delta, NAN, 0, 11, x);
+  hl_if97_pair_powers (HL_IF97_T_CRITICAL / T, NAN, 0, 26, y);
   hl_if97_sums (terms, G_N_ELEMENTS (terms), x, y, FALSE, &sums);
 
   /* Table 31; each derivative stands multiplied by its variables. */

@@ -17,23 +17,23 @@ static const HlIf97Term terms[] = {
 #define P_STAR 1e6      /* [Pa] */
 #define T_STAR 1000.0   /* [K] */
 
-HL_IF97_INLINE void
-evaluate (double p, double T, HlIf97Given given, double value, HlState *state)
+HL_IF97_INLINE double
+evaluate (double p, double T, HlIf97Given given, double value, double most_left, HlState *state)
 {
   HlIf97Pair x[4], powers_t[3 + 10], *t = powers_t + 3;
-  double pi = p * (1.0 / P_STAR);
+  double pi = p * (1.0 / P_STAR), ln_pi = log (pi);
   HlIf97Sums sums, ideal;
-  hl_if97_pair_powers (pi, 0, 3, x);
-  hl_if97_pair_powers (T_STAR / T, -3, 9, t);
+  hl_if97_pair_powers (pi, NAN, 0, 3, x);
+  hl_if97_pair_powers (T_STAR / T, T / T_STAR, -3, 9, t);
   hl_if97_sums (terms, G_N_ELEMENTS (terms), x, t, given != HL_IF97_AT_T, &sums);
   hl_if97_sums (ideal_terms, G_N_ELEMENTS (ideal_terms), NULL, t, FALSE, &ideal);
 
   HlIf97Gibbs gamma = {
-    .one = log (pi) + ideal.one[0] + sums.one[0], .t = ideal.one[1] + sums.one[1],
+    .one = ln_pi + ideal.one[0] + sums.one[0], .t = ideal.one[1] + sums.one[1],
     .tt = ideal.jj[0] + sums.jj[0], .ttt = ideal.jj[1] + sums.jj[1],
     .p = 1.0 + sums.i[0], .pt = sums.i[1], .ptt = sums.ijj[0], .pp = -1.0 + sums.ii[0], .ppt = sums.ii[1],
   };
-  hl_if97_state_from_gibbs (p, T, &gamma, given, value, state);
+  return hl_if97_state_from_gibbs (p, T, &gamma, given, value, most_left, state);
 }
 
 HL_IF97_INLINE void
@@ -42,8 +42,8 @@ evaluate_calorics (double p, double T, gboolean has_one, double *one, double *t,
   HlIf97Pair x[4], powers_t[3 + 10], *pt = powers_t + 3;
   double pi = p * (1.0 / P_STAR);
   HlIf97SumsJ sums, ideal;
-  hl_if97_pair_powers (pi, 0, 3, x);
-  hl_if97_pair_powers (T_STAR / T, -3, 9, pt);
+  hl_if97_pair_powers (pi, NAN, 0, 3, x);
+  hl_if97_pair_powers (T_STAR / T, T / T_STAR, -3, 9, pt);
   hl_if97_sums_j (terms, G_N_ELEMENTS (terms), x, pt, has_one, &sums);
   hl_if97_sums_j (ideal_terms, G_N_ELEMENTS (ideal_terms), NULL, pt, has_one, &ideal);
   *one = has_one ? log (pi) + ideal.one + sums.one : 0.0;

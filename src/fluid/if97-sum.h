@@ -51,18 +51,35 @@ hl_if97_sum (const HlIf97Term *terms, int n, const double *x, const double *y)
 /* The two halves of a processor's register: two sums advance by one instruction. */
 typedef double HlIf97Pair __attribute__ ((vector_size (16)));
 
-/* As hl_if97_powers(), each power twice. */
+/* The integers 0 to 40, each twice.  They stand in memory of another file, as
+ * the compiler would else build each pair anew from a single constant. */
+extern const HlIf97Pair hl_if97_integers[41];
+
+/* The same number twice, such that the compiler forgets that both are the
+ * same: else it multiplies single numbers and doubles each power again. */
+HL_IF97_INLINE HlIf97Pair
+hl_if97_pair (double x)
+{
+  HlIf97Pair pair = { x, x };
+#ifdef __x86_64__
+  __asm__ ("" : "+x" (pair));
+#endif
+  return pair;
+}
+
+/* As hl_if97_powers(), each power twice; the caller gives 1/x where there are
+ * negative powers, as it often has a shorter way to it than by x. */
 HL_IF97_INLINE void
-hl_if97_pair_powers (double x, int lowest, int highest, HlIf97Pair *power)
+hl_if97_pair_powers (double x, double inverse, int lowest, int highest, HlIf97Pair *power)
 {
   power[0] = (HlIf97Pair) { 1.0, 1.0 };
   if (highest >= 1)
-    power[1] = (HlIf97Pair) { x, x };
+    power[1] = hl_if97_pair (x);
 #pragma GCC unroll 64
   for (int k = 2; k <= highest; k++)
     power[k] = power[k / 2] * power[k - k / 2];
   if (lowest <= -1)
-    power[-1] = (HlIf97Pair) { 1.0 / x, 1.0 / x };
+    power[-1] = hl_if97_pair (inverse);
 #pragma GCC unroll 64
   for (int k = 2; k <= -lowest; k++)
     power[-k] = power[-(k / 2)] * power[-(k - k / 2)];
@@ -77,17 +94,19 @@ hl_if97_pair_powers (double x, int lowest, int highest, HlIf97Pair *power)
  * Divided by powers of x and y they are derivatives. */
 typedef struct { HlIf97Pair one, i, ii, jj, ijj; } HlIf97Sums;
 
-/* With has_ijj FALSE the sums ijj stay 0. */
+/* With has_ijj FALSE the sums ijj stay 0.  Two sets of totals by turns halve
+ * the chain of additions that wait for each other. */
 HL_IF97_INLINE void
 hl_if97_sums (const HlIf97Term *terms, int n, const HlIf97Pair *x, const HlIf97Pair *y, gboolean has_ijj,
               HlIf97Sums *sums)
 {
-  HlIf97Sums total = { 0 };
+  HlIf97Sums totals[2] = { 0 };
+  int which = 0;
   HlIf97Pair low = { 0 }, high = { 0 };
 #pragma GCC unroll 64
   for (int k = 0; k < n; k++)
     {
-      double c = terms[k].n, J = terms[k].J, I = terms[k].I;
+      double c = terms[k].n, J = terms[k].J;
       HlIf97Pair power = y[terms[k].J];
       HlIf97Pair t_low = (HlIf97Pair) { c, c * J } * power;
       HlIf97Pair t_high = (HlIf97Pair) { c * (J * (J - 1.0)), c * (J * (J - 1.0) * (J - 2.0)) } * power;
@@ -101,16 +120,22 @@ hl_if97_sums (const HlIf97Term *terms, int n, const HlIf97Pair *x, const HlIf97P
         {
           low *= x[terms[k].I];
           high *= x[terms[k].I];
-          total.i += terms[k].I == 1 ? low : I * low;
+          HlIf97Pair low_i = terms[k].I == 1 ? low : hl_if97_integers[terms[k].I] * low;
+          totals[which].i += low_i;
+          if (terms[k].I != 1)
+            totals[which].ii += terms[k].I == 2 ? low_i : hl_if97_integers[terms[k].I - 1] * low_i;
           if (has_ijj)
-            total.ijj += terms[k].I == 1 ? high : I * high;
+            totals[which].ijj += terms[k].I == 1 ? high : hl_if97_integers[terms[k].I] * high;
         }
-      if (terms[k].I != 0 && terms[k].I != 1)
-        total.ii += (I * (I - 1.0)) * low;
-      total.one += low;
-      total.jj += high;
+      totals[which].one += low;
+      totals[which].jj += high;
+      which = 1 - which;
     }
-  *sums = total;
+  sums->one = totals[0].one + totals[1].one;
+  sums->i = totals[0].i + totals[1].i;
+  sums->ii = totals[0].ii + totals[1].ii;
+  sums->jj = totals[0].jj + totals[1].jj;
+  sums->ijj = totals[0].ijj + totals[1].ijj;
 }
 
 /* The sums that h and cp, or s and cp, at given x ask for: of 1 (only with
@@ -121,9 +146,10 @@ HL_IF97_INLINE void
 hl_if97_sums_j (const HlIf97Term *terms, int n, const HlIf97Pair *x, const HlIf97Pair *y, gboolean has_one,
                 HlIf97SumsJ *sums)
 {
-  HlIf97SumsJ total = { 0 };
+  HlIf97SumsJ totals[2] = { 0 };
   HlIf97Pair group = { 0 };
   double one = 0.0;
+  int which = 0;
 #pragma GCC unroll 64
   for (int k = 0; k < n; k++)
     {
@@ -135,11 +161,13 @@ hl_if97_sums_j (const HlIf97Term *terms, int n, const HlIf97Pair *x, const HlIf9
         one = starts ? c * y[terms[k].J][0] : one + c * y[terms[k].J][0];
       if (!HL_IF97_GROUP_ENDS (terms, n, k))
         continue;
-      total.j += terms[k].I == 0 ? group : group * x[terms[k].I];
+      totals[which].j += terms[k].I == 0 ? group : group * x[terms[k].I];
       if (has_one)
-        total.one += terms[k].I == 0 ? one : one * x[terms[k].I][0];
+        totals[which].one += terms[k].I == 0 ? one : one * x[terms[k].I][0];
+      which = 1 - which;
     }
-  *sums = total;
+  sums->one = totals[0].one + totals[1].one;
+  sums->j = totals[0].j + totals[1].j;
 }
 
 G_END_DECLS

@@ -8,13 +8,20 @@
 /* Every function that takes a key is inlined with a constant, so that (p,h)
  * and (p,s) are two programs from one text. */
 typedef double (*Caloric) (double p, double T, double *cp);
+typedef double (*AtValue) (double p, double T, double value, double most_left, HlState *state);
 
 #define MOST_STEPS 40
 
-/* A backward equation is this near to the root of its region's equation [K];
- * Newton's step from there leaves 5e-5 K at most, which the region's
- * evaluation at the value takes. */
+/* Newton's steps smaller than this leave a start from which the last evaluation is exact [K]. */
 #define NEAR 0.03
+
+/* Relative error of cp and the other derivatives that is not worth a second
+ * evaluation; T, h, s and v are then good to some 1e-13. */
+#define LEAVE 1e-9
+
+/* Starts nearer to a region's limits than this ask for care, as the root may
+ * lie beyond; with LEAVE above no last step is as long [K]. */
+#define CARE 0.1
 
 /* A temperature this near a limit counts as on it: the rounding of h and s
  * must not put a state outside that (p,T) has put on the limit. */
@@ -26,7 +33,7 @@ key_of (HlKey key, const HlState *state)
   return key == HL_KEY_H ? state->h : state->s;
 }
 
-/* T at given p where the key has the value, to what the last small step leaves. */
+/* T at given p where the key has the value, from far off to what the last small step leaves. */
 HL_IF97_INLINE HlStatus
 approach_T (Caloric region, HlKey key, double p, double value, double T_low, double T_high, double *T)
 {
@@ -46,6 +53,19 @@ approach_T (Caloric region, HlKey key, double p, double value, double T_low, dou
       *T = fmin (fmax (next, T_low), T_high);
     }
   return HL_NOT_CONVERGED;
+}
+
+/* The state at given p where the key has the value, iterated from any start. */
+HL_IF97_INLINE HlStatus
+solve_with_care (AtValue at_value, Caloric region, HlKey key, double p, double value, double T_low, double T_high, double *T,
+                 HlState *trial)
+{
+  HlStatus status = approach_T (region, key, p, value, T_low, T_high, T);
+  if (status != HL_OK)
+    return status;
+  at_value (p, *T, value, INFINITY, trial);
+  *T = trial->T;
+  return HL_OK;
 }
 
 /* Where two regions meet with a small jump, no state has the value: the
@@ -72,18 +92,36 @@ blend (HlKey key, double value, const HlState *below, const HlState *above, HlSt
   state->v_h = g * below->v_h + f * above->v_h;
 }
 
+/* The backward equation T(p,s) of region 1 is near enough for one evaluation,
+ * T(p,h) mostly not: Newton's step with h and cp alone is the cheaper way. */
 HL_IF97_INLINE HlStatus
 solve_region1 (HlKey key, double p, double value, HlState *state)
 {
+  AtValue at_value = key == HL_KEY_H ? hl_if97_region1_at_h : hl_if97_region1_at_s;
+  Caloric region = key == HL_KEY_H ? hl_if97_region1_enthalpy : hl_if97_region1_entropy;
   double T = key == HL_KEY_H ? hl_if97_T_ph_1 (p, value) : hl_if97_T_ps_1 (p, value);
+  if (T > HL_IF97_T_MIN + CARE)
+    {
+      if (key == HL_KEY_H)
+        {
+          double cp, h = region (p, T, &cp);
+          T += (value - h) / cp;
+        }
+      if (at_value (p, T, value, LEAVE, state) <= LEAVE)
+        {
+          state->phase = HL_PHASE_LIQUID;
+          return HL_OK;
+        }
+    }
+
+  HlState trial;
   T = fmin (fmax (T, HL_IF97_T_MIN), HL_IF97_T_13);
-  HlStatus status = approach_T (key == HL_KEY_H ? hl_if97_region1_enthalpy : hl_if97_region1_entropy, key, p, value,
-                                HL_IF97_T_MIN - 5.0, HL_IF97_T_13 + 5.0, &T);
+  HlStatus status = solve_with_care (at_value, region, key, p, value, HL_IF97_T_MIN - 5.0, HL_IF97_T_13 + 5.0, &T, &trial);
   if (status != HL_OK)
     return status;
   if (T < HL_IF97_T_MIN * (1.0 - T_SLACK))
     return HL_OUTSIDE_RANGE;
-  (key == HL_KEY_H ? hl_if97_region1_at_h : hl_if97_region1_at_s) (p, T, value, state);
+  *state = trial;
   state->phase = HL_PHASE_LIQUID;
   return HL_OK;
 }
@@ -133,16 +171,19 @@ solve_region5 (HlKey key, double p, double value, HlState *state)
   double T = key == HL_KEY_H ? T_5 + (value - H_5) / CP_5
                              : T_5 * exp (fmin ((value - S_5 + HL_IF97_R * log (p / P_5)) / CP_5, 1.0));
   T = fmin (fmax (T, HL_IF97_T_25), HL_IF97_T_MAX);
+  HlState trial;
   HlStatus status = key == HL_KEY_H
-    ? approach_T (hl_if97_region5_enthalpy, HL_KEY_H, p, value, HL_IF97_T_25 - 50.0, HL_IF97_T_MAX + 50.0, &T)
-    : approach_T (hl_if97_region5_entropy, HL_KEY_S, p, value, HL_IF97_T_25 - 50.0, HL_IF97_T_MAX + 50.0, &T);
+    ? solve_with_care (hl_if97_region5_at_h, hl_if97_region5_enthalpy, HL_KEY_H, p, value, HL_IF97_T_25 - 50.0,
+                       HL_IF97_T_MAX + 50.0, &T, &trial)
+    : solve_with_care (hl_if97_region5_at_s, hl_if97_region5_entropy, HL_KEY_S, p, value, HL_IF97_T_25 - 50.0,
+                       HL_IF97_T_MAX + 50.0, &T, &trial);
   if (status != HL_OK)
     return status;
   if (T > HL_IF97_T_MAX * (1.0 + T_SLACK))
     return HL_OUTSIDE_RANGE;
   if (T > HL_IF97_T_25)
     {
-      (key == HL_KEY_H ? hl_if97_region5_at_h : hl_if97_region5_at_s) (p, T, value, state);
+      *state = trial;
       return HL_OK;
     }
   HlState below, above;
@@ -152,24 +193,26 @@ solve_region5 (HlKey key, double p, double value, HlState *state)
   return HL_OK;
 }
 
-/* Steam of region 2 or 5; T_low is the lowest temperature of steam at this
- * pressure, or any below it where the value is known to be steam's. */
-HL_IF97_INLINE HlStatus
-solve_steam (HlKey key, double p, double value, double T_low, HlState *state)
+/* Steam near the limits of region 2, or above in region 5. */
+static HlStatus
+solve_steam_with_care (HlKey key, double p, double value, double T_low, double T, HlState *state)
 {
-  double T = HL_IF97_T_25;
+  HlState trial;
   HlStatus status = HL_OUTSIDE_RANGE;
+  T = fmin (fmax (T, T_low), HL_IF97_T_25);
   if (!is_clearly_region5 (key, p, value))
-    {
-      T = fmin (fmax (start_region2 (key, p, value), T_low), HL_IF97_T_25);
-      status = approach_T (key == HL_KEY_H ? hl_if97_region2_enthalpy : hl_if97_region2_entropy, key, p, value,
-                           T_low - 5.0, HL_IF97_T_25 + 5.0, &T);
-    }
+    status = key == HL_KEY_H
+      ? solve_with_care (hl_if97_region2_at_h, hl_if97_region2_enthalpy, HL_KEY_H, p, value, T_low - 5.0,
+                         HL_IF97_T_25 + 5.0, &T, &trial)
+      : solve_with_care (hl_if97_region2_at_s, hl_if97_region2_entropy, HL_KEY_S, p, value, T_low - 5.0,
+                         HL_IF97_T_25 + 5.0, &T, &trial);
+  else
+    T = HL_IF97_T_25;
   if (status == HL_OK && T <= HL_IF97_T_25 * (1.0 + T_SLACK))
     {
       if (T < T_low * (1.0 - T_SLACK))
         return HL_OUTSIDE_RANGE;
-      (key == HL_KEY_H ? hl_if97_region2_at_h : hl_if97_region2_at_s) (p, T, value, state);
+      *state = trial;
     }
   else if (status == HL_NOT_CONVERGED || T <= T_low)
     return status;
@@ -177,6 +220,21 @@ solve_steam (HlKey key, double p, double value, double T_low, HlState *state)
     return status;
   state->phase = p > HL_IF97_P_CRITICAL ? HL_PHASE_SUPERCRITICAL : HL_PHASE_VAPOUR;
   return HL_OK;
+}
+
+/* Steam of region 2 or 5; T_low is the lowest temperature of steam at this
+ * pressure, or any below it where the value is known to be steam's. */
+HL_IF97_INLINE HlStatus
+solve_steam (HlKey key, double p, double value, double T_low, HlState *state)
+{
+  double T = start_region2 (key, p, value);
+  if (T > T_low + CARE && T < HL_IF97_T_25 - CARE
+      && (key == HL_KEY_H ? hl_if97_region2_at_h : hl_if97_region2_at_s) (p, T, value, LEAVE, state) <= LEAVE)
+    {
+      state->phase = p > HL_IF97_P_CRITICAL ? HL_PHASE_SUPERCRITICAL : HL_PHASE_VAPOUR;
+      return HL_OK;
+    }
+  return solve_steam_with_care (key, p, value, T_low, T, state);
 }
 
 /* Region 3 from its backward equations; an answer beyond the borders of the
