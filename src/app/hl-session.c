@@ -17,6 +17,7 @@ struct _HlSession {
   GPtrArray  *steps;         /* Step; never empty */
   guint       now;           /* index of the committed state */
   HlPlant    *preview;       /* of a gesture in progress, or NULL */
+  gboolean    has_solved_preview;
   HlSolution *solution;
   HlSolution *last_good;
   HlPlant    *saved;         /* the state that the file holds, or NULL */
@@ -181,6 +182,12 @@ hl_session_plant (HlSession *self)
   return self->preview != NULL ? self->preview : committed (self);
 }
 
+HlPlant *
+hl_session_base (HlSession *self)
+{
+  return committed (self);
+}
+
 HlSolution *
 hl_session_solution (HlSession *self)
 {
@@ -208,6 +215,7 @@ hl_session_apply (HlSession *self, const char *name, HlPlant *plant, const HlAdd
       plant = settled;
     }
   g_clear_pointer (&self->preview, hl_plant_unref);
+  self->has_solved_preview = FALSE;
   push_step (self, plant, name);
   hl_trace ("step %s", name);
   plant_has_changed (self);
@@ -220,6 +228,7 @@ hl_session_preview (HlSession *self, HlPlant *plant, gboolean with_solve)
 {
   g_clear_pointer (&self->preview, hl_plant_unref);
   self->preview = plant;
+  self->has_solved_preview |= with_solve;
   if (with_solve)
     plant_has_changed (self);
   else
@@ -232,7 +241,11 @@ hl_session_cancel_preview (HlSession *self)
   if (self->preview == NULL)
     return;
   g_clear_pointer (&self->preview, hl_plant_unref);
-  plant_has_changed (self);
+  if (self->has_solved_preview)
+    plant_has_changed (self);
+  else
+    g_signal_emit (self, signals[CHANGED], 0);    /* the solution still belongs to this plant */
+  self->has_solved_preview = FALSE;
 }
 
 gboolean

@@ -18,6 +18,7 @@ G_DECLARE_FINAL_TYPE (HlSession, hl_session, HL, SESSION, GObject)
 
 HlSession        *hl_session_new          (void);
 HlPlant          *hl_session_plant        (HlSession *self);      /* (transfer none) never NULL */
+HlPlant          *hl_session_base         (HlSession *self);      /* (transfer none) the plant without the preview of a gesture; never NULL */
 HlSolution       *hl_session_solution     (HlSession *self);      /* (transfer none) of exactly that plant, but see "previewed"; never NULL */
 HlSolution       *hl_session_last_good    (HlSession *self);      /* (transfer none) (nullable): last solved one, to be shown grey while the present one fails */
 

@@ -154,9 +154,10 @@ move_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
   guint n;
   const char *const *ids = hl_session_selection (self->session, &n);
   g_variant_get (parameter, "(ii)", &dx, &dy);
-  hl_session_cancel_preview (self->session);
   if (n_selected_components (self) > 0 && (dx != 0 || dy != 0))
-    apply_to_selection (self, _("Move %s"), hl_edit_move (plant_of (self), ids, n, dx, dy), FALSE);
+    apply_to_selection (self, _("Move %s"), hl_edit_move (hl_session_base (self->session), ids, n, dx, dy), FALSE);
+  else
+    hl_session_cancel_preview (self->session);
 }
 
 static void
@@ -274,9 +275,8 @@ move_label_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
   int x, y;
   g_autofree char *name = NULL;
   g_variant_get (parameter, "(&sii)", &stream, &x, &y);
-  hl_session_cancel_preview (self->session);
   name = g_strdup_printf (_("Move the label of stream %s"), stream);
-  hl_session_apply (self->session, name, hl_edit_place_label (plant_of (self), stream, TRUE, x, y), NULL, FALSE);
+  hl_session_apply (self->session, name, hl_edit_place_label (hl_session_base (self->session), stream, TRUE, x, y), NULL, FALSE);
 }
 
 static void
