@@ -1,0 +1,334 @@
+/* The nameplate: typing, origins, and rows that stay while the plant changes.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "app/hl-nameplate.h"
+#include "app/hl-quantity-row.h"
+#include "panes.h"
+
+typedef struct { HlSession *session; GtkWidget *window, *nameplate; } Fixture;
+
+static void
+set_up (Fixture *f, gconstpointer id)
+{
+  f->session = loop_session ();
+  g_assert_true (hl_solution_is_solved (hl_session_solution (f->session)));
+  f->nameplate = hl_nameplate_new (f->session);
+  f->window = window_with (f->nameplate);
+  hl_session_select (f->session, id, FALSE);
+}
+
+static void
+tear_down (Fixture *f, gconstpointer id)
+{
+  close_window (f->window, f->session);
+}
+
+static gboolean
+is_row_of (GtkWidget *widget, gconstpointer data)
+{
+  if (!HL_IS_QUANTITY_ROW (widget))
+    return FALSE;
+  g_autofree char *text = hl_address_to_text (hl_quantity_row_address (HL_QUANTITY_ROW (widget)));
+  return g_str_equal (text, data);
+}
+
+static GtkWidget *
+find_row (Fixture *f, const char *address)
+{
+  HlAddress parsed;
+
+  g_assert_true (hl_address_parse (address, NULL, &parsed, NULL));
+  g_autofree char *canonical = hl_address_to_text (&parsed);
+  return find_widget (f->nameplate, is_row_of, canonical);
+}
+
+static GtkWidget *
+entry_of (Fixture *f, const char *address)
+{
+  GtkWidget *row = find_row (f, address);
+  g_assert_nonnull (row);
+  return find_type (row, GTK_TYPE_ENTRY);
+}
+
+static void
+type_text (Fixture *f, const char *address, const char *text)
+{
+  GtkWidget *entry = entry_of (f, address);
+
+  gtk_widget_grab_focus (entry);
+  gtk_editable_set_text (GTK_EDITABLE (entry), text);
+  g_signal_emit_by_name (entry, "activate");
+  settle_down ();
+}
+
+static const HlValue *
+value_of (Fixture *f, const char *text)
+{
+  HlAddress address;
+  g_autoptr (GError) error = NULL;
+
+  hl_address_parse (text, hl_session_plant (f->session), &address, &error);
+  g_assert_no_error (error);
+  return hl_plant_value (hl_session_plant (f->session), &address);
+}
+
+static const char *
+text_of (Fixture *f, const char *address)
+{
+  return gtk_editable_get_text (GTK_EDITABLE (entry_of (f, address)));
+}
+
+static void
+test_text_with_unit_is_given (Fixture *f, gconstpointer data)
+{
+  type_text (f, "T1.inlet.p", "8 MPa");
+  const HlValue *value = value_of (f, "T1.inlet.p");
+  g_assert_nonnull (value);
+  g_assert_cmpint (value->origin, ==, HL_ORIGIN_GIVEN);
+  g_assert_cmpfloat_with_epsilon (value->value, 80e5, 1e-3);
+  g_assert_true (hl_solution_is_solved (hl_session_solution (f->session)));
+  g_assert_true (g_str_has_prefix (text_of (f, "T1.inlet.p"), "80"));       /* shown in bar, the unit of the sheet */
+  g_assert_true (hl_session_can_undo (f->session));
+}
+
+static void
+test_bad_text_stays_with_its_error (Fixture *f, gconstpointer data)
+{
+  g_autoptr (GError) error = NULL;
+  HlAddress other = hl_address_component ("T1", g_intern_static_string ("exhaust.p"));
+
+  type_text (f, "T1.inlet.p", "80 baar");
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 65e5, 1e-3);
+  g_assert_cmpstr (text_of (f, "T1.inlet.p"), ==, "80 baar");
+  g_assert_true (shows_text (find_row (f, "T1.inlet.p"), "baar"));           /* what is wrong */
+  g_assert_true (shows_text (find_row (f, "T1.inlet.p"), "bar"));            /* what would do */
+
+  /* Another edit leaves the text alone. */
+  g_assert_true (hl_session_set_text (f->session, &other, "0.1 bar", &error));
+  g_assert_cmpstr (text_of (f, "T1.inlet.p"), ==, "80 baar");
+  g_assert_true (shows_text (find_row (f, "T1.inlet.p"), "baar"));
+
+  type_text (f, "T1.inlet.p", "80 bar");
+  g_assert_false (shows_text (find_row (f, "T1.inlet.p"), "baar"));
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 80e5, 1e-3);
+}
+
+static void
+test_wrong_dimension_and_limit_are_refused (Fixture *f, gconstpointer data)
+{
+  type_text (f, "T1.isentropic_efficiency", "80 bar");
+  g_assert_cmpint (value_of (f, "T1.isentropic_efficiency")->origin, ==, HL_ORIGIN_ASSUMED);
+  type_text (f, "T1.isentropic_efficiency", "1.4");
+  g_assert_cmpint (value_of (f, "T1.isentropic_efficiency")->origin, ==, HL_ORIGIN_ASSUMED);
+  g_assert_cmpstr (text_of (f, "T1.isentropic_efficiency"), ==, "1.4");
+  g_assert_true (shows_text (find_row (f, "T1.isentropic_efficiency"), "1.4"));
+}
+
+static void
+test_tie_and_text_of_a_tie (Fixture *f, gconstpointer data)
+{
+  type_text (f, "T1.exhaust.p", "=0.001*T1.inlet.p");
+  const HlValue *value = value_of (f, "T1.exhaust.p");
+  g_assert_nonnull (value);
+  g_assert_cmpint (value->origin, ==, HL_ORIGIN_TIED);
+  g_assert_cmpfloat_with_epsilon (value->tie_factor, 0.001, 1e-12);
+  g_assert_true (hl_solution_is_solved (hl_session_solution (f->session)));
+  /* With the focus the expression can be edited; without it the number is shown. */
+  g_assert_true (g_str_has_prefix (text_of (f, "T1.exhaust.p"), "="));
+  gtk_widget_grab_focus (entry_of (f, "T1.inlet.p"));
+  settle_down ();
+  g_assert_true (g_str_has_prefix (text_of (f, "T1.exhaust.p"), "0.065"));   /* 0.001 of 65 bar */
+}
+
+static void
+test_bad_tie_is_refused (Fixture *f, gconstpointer data)
+{
+  type_text (f, "T1.exhaust.p", "=0.1*X9.inlet.p");
+  g_assert_cmpint (value_of (f, "T1.exhaust.p")->origin, ==, HL_ORIGIN_GIVEN);
+  g_assert_cmpstr (text_of (f, "T1.exhaust.p"), ==, "=0.1*X9.inlet.p");
+  g_assert_true (shows_text (find_row (f, "T1.exhaust.p"), "X9"));
+}
+
+static void
+test_emptied_entry_is_no_longer_given (Fixture *f, gconstpointer data)
+{
+  type_text (f, "T1.isentropic_efficiency", "0.8");
+  g_assert_cmpint (value_of (f, "T1.isentropic_efficiency")->origin, ==, HL_ORIGIN_GIVEN);
+  type_text (f, "T1.isentropic_efficiency", "");
+  const HlValue *value = value_of (f, "T1.isentropic_efficiency");
+  g_assert_true (value == NULL || value->origin == HL_ORIGIN_ASSUMED);
+}
+
+static void
+choose_origin (Fixture *f, const char *address, const char *origin)
+{
+  GtkWidget *row = find_row (f, address);
+  g_assert_true (gtk_widget_activate_action (row, "row.origin", "s", origin));
+  settle_down ();
+}
+
+static void
+test_origin_menu_changes_the_origin (Fixture *f, gconstpointer data)
+{
+  choose_origin (f, "T1.isentropic_efficiency", "given");
+  g_assert_cmpint (value_of (f, "T1.isentropic_efficiency")->origin, ==, HL_ORIGIN_GIVEN);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.isentropic_efficiency")->value, 0.83, 1e-12);
+  g_assert_true (shows_text (find_row (f, "T1.isentropic_efficiency"), hl_origin_name (HL_ORIGIN_GIVEN)));
+  choose_origin (f, "T1.isentropic_efficiency", "assumed");
+  g_assert_cmpint (value_of (f, "T1.isentropic_efficiency")->origin, ==, HL_ORIGIN_ASSUMED);
+  g_assert_true (shows_text (find_row (f, "T1.isentropic_efficiency"), hl_origin_name (HL_ORIGIN_ASSUMED)));
+}
+
+/* "Tied" asks for the expression: nothing changes until one has been typed. */
+static void
+test_origin_tied_starts_an_expression (Fixture *f, gconstpointer data)
+{
+  choose_origin (f, "T1.exhaust.p", "tied");
+  g_assert_cmpstr (text_of (f, "T1.exhaust.p"), ==, "=");
+  g_assert_cmpint (value_of (f, "T1.exhaust.p")->origin, ==, HL_ORIGIN_GIVEN);
+}
+
+static void
+test_found_value_shows_and_typing_gives_it (Fixture *f, gconstpointer data)
+{
+  HlAddress power = hl_address_component ("T1", g_intern_static_string ("power"));
+  double before;
+
+  g_assert_null (value_of (f, "T1.power"));
+  g_assert_true (hl_solution_value (hl_session_solution (f->session), &power, &before));
+  g_assert_cmpfloat (before, >, 12e6);                                       /* net power and losses */
+  g_assert_cmpfloat_with_epsilon (g_ascii_strtod (text_of (f, "T1.power"), NULL), before / 1e6, 0.01);
+  /* An untouched found value stays found when Return is pressed. */
+  g_signal_emit_by_name (entry_of (f, "T1.power"), "activate");
+  g_assert_null (value_of (f, "T1.power"));
+}
+
+static void
+test_return_confirms_an_assumed_value (Fixture *f, gconstpointer data)
+{
+  gtk_widget_grab_focus (entry_of (f, "T1.mechanical_efficiency"));
+  g_signal_emit_by_name (entry_of (f, "T1.mechanical_efficiency"), "activate");
+  g_assert_cmpint (value_of (f, "T1.mechanical_efficiency")->origin, ==, HL_ORIGIN_GIVEN);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.mechanical_efficiency")->value, 0.985, 1e-12);
+}
+
+static void
+test_rows_keep_widget_and_typing_through_changes (Fixture *f, gconstpointer data)
+{
+  GtkWidget *row = find_row (f, "T1.inlet.p"), *entry = entry_of (f, "T1.inlet.p");
+  HlAddress other = hl_address_component ("T1", g_intern_static_string ("exhaust.p"));
+  g_autoptr (GError) error = NULL;
+
+  gtk_widget_grab_focus (entry);
+  gtk_editable_set_text (GTK_EDITABLE (entry), "7");                         /* half of "70 bar" */
+  g_assert_true (hl_session_set_text (f->session, &other, "0.2 bar", &error));
+  hl_session_undo (f->session);
+  settle_down ();
+  g_assert_true (find_row (f, "T1.inlet.p") == row);
+  g_assert_cmpstr (text_of (f, "T1.inlet.p"), ==, "7");
+  g_assert_nonnull (gtk_widget_get_focus_child (row));
+}
+
+static void
+test_option_adds_rows_and_keeps_the_others (Fixture *f, gconstpointer data)
+{
+  GtkWidget *row = find_row (f, "T1.inlet.p"), *spin = find_type (f->nameplate, GTK_TYPE_SPIN_BUTTON);
+
+  g_assert_null (find_row (f, "T1.extraction1.p"));
+  gtk_spin_button_set_value (GTK_SPIN_BUTTON (spin), 1);
+  settle_down ();
+  g_assert_cmpint (hl_component_option (hl_plant_find_component (hl_session_plant (f->session), "T1"), "extractions"), ==, 1);
+  g_assert_nonnull (find_row (f, "T1.extraction1.p"));
+  g_assert_true (find_row (f, "T1.inlet.p") == row);
+  hl_session_undo (f->session);
+  settle_down ();
+  g_assert_null (find_row (f, "T1.extraction1.p"));
+  g_assert_cmpint (gtk_spin_button_get_value_as_int (GTK_SPIN_BUTTON (spin)), ==, 0);
+}
+
+static void
+test_draft_survives_another_selection (Fixture *f, gconstpointer data)
+{
+  type_text (f, "T1.inlet.p", "eighty");
+  hl_session_select (f->session, "P1", FALSE);
+  settle_down ();
+  g_assert_null (find_row (f, "T1.inlet.p"));
+  hl_session_select (f->session, "T1", FALSE);
+  settle_down ();
+  g_assert_cmpstr (text_of (f, "T1.inlet.p"), ==, "eighty");
+  g_assert_true (shows_text (find_row (f, "T1.inlet.p"), "eighty"));         /* with its error */
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 65e5, 1e-3);
+}
+
+/* The pressure of stream 1 is the one given at the turbine: there it is changed, not given twice. */
+static void
+test_stream_edits_the_value_where_it_lives (Fixture *f, gconstpointer data)
+{
+  type_text (f, "stream:1.p", "70 bar");
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 70e5, 1e-3);
+  g_assert_null (value_of (f, "stream:1.p"));
+}
+
+static void
+test_going_to_a_quantity_focuses_its_row (Fixture *f, gconstpointer data)
+{
+  HlAddress address = hl_address_component ("T1", g_intern_static_string ("exhaust.p"));
+  HlAddress state = hl_address_component ("P1", g_intern_static_string ("inlet.T"));
+
+  hl_session_go_to (f->session, &address);
+  settle_down ();
+  g_assert_true (hl_session_is_selected (f->session, "T1"));
+  g_assert_nonnull (gtk_widget_get_focus_child (find_row (f, "T1.exhaust.p")));
+  /* The nameplate of a pump has no inlet temperature: that of its stream has. */
+  hl_session_go_to (f->session, &state);
+  settle_down ();
+  g_assert_true (hl_session_is_selected (f->session, "3"));
+}
+
+static void
+test_nothing_selected_shows_the_plant (Fixture *f, gconstpointer data)
+{
+  g_assert_nonnull (find_row (f, "plant.net_power"));
+  type_text (f, "plant.net_power", "9 MW");
+  g_assert_cmpfloat_with_epsilon (value_of (f, "plant.net_power")->value, 9e6, 1e-3);
+}
+
+static void
+test_several_selected_are_listed (Fixture *f, gconstpointer data)
+{
+  const char *ids[] = { g_intern_static_string ("T1"), g_intern_static_string ("P1"), g_intern_static_string ("2") };
+
+  hl_session_select_many (f->session, ids, G_N_ELEMENTS (ids));
+  settle_down ();
+  g_assert_true (shows_text (f->nameplate, "T1"));
+  g_assert_true (shows_text (f->nameplate, "P1"));
+  g_signal_emit_by_name (find_button (f->nameplate, "P1"), "clicked");
+  g_assert_true (hl_session_is_selected (f->session, "P1"));
+  g_assert_false (hl_session_is_selected (f->session, "T1"));
+}
+
+int
+main (int argc, char **argv)
+{
+  if (!test_init (&argc, &argv))
+    return 0;
+#define ADD(name, id, func) g_test_add ("/app/nameplate/" name, Fixture, id, set_up, func, tear_down)
+  ADD ("text with a unit is given", "T1", test_text_with_unit_is_given);
+  ADD ("bad text stays with its error", "T1", test_bad_text_stays_with_its_error);
+  ADD ("wrong dimension and limit are refused", "T1", test_wrong_dimension_and_limit_are_refused);
+  ADD ("tie and text of a tie", "T1", test_tie_and_text_of_a_tie);
+  ADD ("bad tie is refused", "T1", test_bad_tie_is_refused);
+  ADD ("emptied entry is no longer given", "T1", test_emptied_entry_is_no_longer_given);
+  ADD ("origin menu changes the origin", "T1", test_origin_menu_changes_the_origin);
+  ADD ("origin tied starts an expression", "T1", test_origin_tied_starts_an_expression);
+  ADD ("found value shows", "T1", test_found_value_shows_and_typing_gives_it);
+  ADD ("return confirms an assumed value", "T1", test_return_confirms_an_assumed_value);
+  ADD ("rows keep widget and typing through changes", "T1", test_rows_keep_widget_and_typing_through_changes);
+  ADD ("option adds rows and keeps the others", "T1", test_option_adds_rows_and_keeps_the_others);
+  ADD ("draft survives another selection", "T1", test_draft_survives_another_selection);
+  ADD ("stream edits the value where it lives", "1", test_stream_edits_the_value_where_it_lives);
+  ADD ("going to a quantity focuses its row", "P1", test_going_to_a_quantity_focuses_its_row);
+  ADD ("nothing selected shows the plant", NULL, test_nothing_selected_shows_the_plant);
+  ADD ("several selected are listed", NULL, test_several_selected_are_listed);
+#undef ADD
+  return g_test_run ();
+}
