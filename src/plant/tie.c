@@ -330,7 +330,7 @@ conclude (Parser *parser, const Sum *sum, HlValue *value)
         value->tie_offset += bare_difference (parser, sum->plain);
     }
   else if (sum->has_constant)
-    value->value = sum->constant + sum->datum + (fabs (sum->plain) > 0.0 ? bare_difference (parser, sum->plain) : 0.0);
+    value->value = hl_add_exactly (sum->constant + (fabs (sum->plain) > 0.0 ? bare_difference (parser, sum->plain) : 0.0), sum->datum);
   else if (parser->bare_is_si)
     value->value = sum->plain;
   else

@@ -135,7 +135,7 @@ hl_unit_to_si (const HlUnit *unit, double number, HlDimension dimension, double 
         }
     }
   else
-    value += unit->offset + (unit->nature == HL_UNIT_GAUGE ? site_pressure : 0.0);
+    value = hl_add_exactly (value, unit->nature == HL_UNIT_GAUGE ? site_pressure : unit->offset);
   if (!isfinite (value))
     {
       g_set_error (error, HL_UNITS_ERROR, HL_UNITS_ERROR_NOT_FINITE, _("%g %s is too large"), number, unit->text);

@@ -25,9 +25,11 @@ const HlUnit *hl_unit_find   (const char *text, gsize length, HlDimension dimens
 /* Pressure and temperature for their differences, otherwise @dimension. */
 HlDimension   hl_unit_dimension (HlDimension dimension);
 gboolean      hl_dimension_is_difference (HlDimension dimension);
-/* number * factor and number / factor, where a factor such as 0.01 stands for a division by a whole number. */
+/* number * factor, number / factor and number + offset as with decimal digits: 0.07 bar is 7000 Pa, 83 % is 0.83,
+ * 485.1 °C is 758.25 K, where doubles alone would often end at a neighbour. */
 double        hl_multiply_exactly (double number, double factor);
 double        hl_divide_exactly   (double number, double factor);
+double        hl_add_exactly      (double number, double offset);
 /* Units that would do, in words: "bar, bara, barg, mbar ...". */
 char         *hl_unit_suggestions (HlDimension dimension);
 

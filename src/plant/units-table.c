@@ -4,6 +4,7 @@
 #include "plant/i18n.h"
 #include <float.h>
 #include <math.h>
+#include <stdlib.h>
 #include <string.h>
 
 /* NIST Special Publication 811 (2008), appendix B: exact are lb 0.45359237 kg, ft 0.3048 m, atm 101325 Pa, bar 1e5 Pa,
@@ -183,26 +184,61 @@ hl_unit_find (const char *text, gsize length, HlDimension dimension, const HlUni
   return found;
 }
 
-/* The whole number that a factor below 1 is the inverse of, so that 83 % is 83/100 and not 83 times a rounded 0.01; or 0. */
-static double
-whole_inverse (double factor)
+/* k of a factor that is the power of ten 10^k, within what a double can tell; 0: it is none, or 1. */
+static int
+power_of_ten (double factor)
 {
-  double inverse = factor < 1.0 && factor > 1e-9 ? rint (1.0 / factor) : 0.0;
-  return inverse > 0.0 && fabs (inverse * factor - 1.0) < 4.0 * DBL_EPSILON ? inverse : 0.0;
+  int k = (int) rint (log10 (factor));
+  double power = pow (10.0, abs (k));
+  if (k >= 1 && k <= 9)
+    return fabs (factor - power) > 0.0 ? 0 : k;
+  if (k <= -1 && k >= -9)
+    return fabs (factor - 1.0 / power) > 0.0 ? 0 : k;
+  return 0;
+}
+
+/* Moves the decimal point, so that 0.07 bar is 7000 Pa and 83 % is 0.83: the product of two rounded doubles is often
+ * a neighbour of these.  Numbers with more than 15 digits did not come from a person and are multiplied. */
+static gboolean
+shift_point (double number, int k, double *shifted)
+{
+  char text[40], *e;
+  g_ascii_formatd (text, sizeof text, "%.14e", number);
+  if (fabs (g_ascii_strtod (text, NULL) - number) > 0.0)
+    return FALSE;
+  e = strchr (text, 'e');
+  k += (int) g_ascii_strtoll (e + 1, NULL, 10);
+  g_snprintf (e, sizeof text - (gsize) (e - text), "e%d", k);
+  *shifted = g_ascii_strtod (text, NULL);
+  return TRUE;
 }
 
 double
 hl_multiply_exactly (double number, double factor)
 {
-  double inverse = whole_inverse (factor);
-  return inverse > 0.0 ? number / inverse : number * factor;
+  int k = power_of_ten (factor);
+  double shifted;
+  return k != 0 && isfinite (number) && shift_point (number, k, &shifted) ? shifted : number * factor;
 }
 
 double
 hl_divide_exactly (double number, double factor)
 {
-  double inverse = whole_inverse (factor);
-  return inverse > 0.0 ? number * inverse : number / factor;
+  int k = power_of_ten (factor);
+  double shifted;
+  return k != 0 && isfinite (number) && shift_point (number, -k, &shifted) ? shifted : number / factor;
+}
+
+double
+hl_add_exactly (double number, double offset)
+{
+  double sum = number + offset, neat;
+  char text[40];
+  if (!(fabs (offset) > 0.0) || !isfinite (sum))
+    return sum;
+  g_ascii_formatd (text, sizeof text, "%.15g", sum);
+  neat = g_ascii_strtod (text, NULL);
+  return fabs (neat - sum) <= 2.0 * DBL_EPSILON * fabs (sum) ? neat : sum;
 }
 
 gboolean

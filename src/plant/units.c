@@ -100,14 +100,14 @@ double
 hl_units_to_display (double si, HlDimension dimension, HlUnitSet set)
 {
   Conversion conversion = conversion_of_set (dimension, set);
-  return hl_divide_exactly (si - conversion.offset, conversion.factor);
+  return (si - conversion.offset) / conversion.factor;
 }
 
 double
 hl_units_from_display (double shown, HlDimension dimension, HlUnitSet set)
 {
   Conversion conversion = conversion_of_set (dimension, set);
-  return hl_multiply_exactly (shown, conversion.factor) + conversion.offset;
+  return hl_add_exactly (hl_multiply_exactly (shown, conversion.factor), conversion.offset);
 }
 
 const char *
@@ -157,7 +157,7 @@ hl_units_format (double si, HlDimension dimension, HlUnitSet set)
   g_autofree char *number = NULL;
   if (!isfinite (si))
     return g_strdup ("–");
-  number = round_number (hl_divide_exactly (si - conversion.offset, conversion.factor), &dimensions[dimension].rounding);
+  number = round_number ((si - conversion.offset) / conversion.factor, &dimensions[dimension].rounding);
   return *label != '\0' ? g_strdup_printf ("%s %s", number, label) : g_steal_pointer (&number);
 }
 
@@ -171,7 +171,7 @@ exact_digits (double si, double shown, const Conversion *conversion)
       double number, back;
       g_snprintf (text, sizeof text, "%.*g", digits, shown);
       number = g_ascii_strtod (text, NULL);
-      back = hl_multiply_exactly (number, conversion->factor) + conversion->offset;
+      back = hl_add_exactly (hl_multiply_exactly (number, conversion->factor), conversion->offset);
       if (!(back < si) && !(back > si))
         return hl_number_to_text (number);
     }
@@ -182,7 +182,7 @@ exact_digits (double si, double shown, const Conversion *conversion)
 static char *
 exact_text (double si, const Conversion *conversion)
 {
-  double shown = hl_divide_exactly (si - conversion->offset, conversion->factor), up = shown, down = shown;
+  double shown = hl_divide_exactly (hl_add_exactly (si, -conversion->offset), conversion->factor), up = shown, down = shown;
   char *text = exact_digits (si, shown, conversion);
   for (int i = 0; i < 4 && text == NULL; i++)
     {
