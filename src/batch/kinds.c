@@ -81,7 +81,7 @@ default_text (const HlQuantityKind *quantity)
 {
   if (!isfinite (quantity->default_value))
     return g_strdup ("");
-  g_autofree char *value = hl_units_format (quantity->default_value, quantity->dimension, HL_UNITS_METRIC);
+  g_autofree char *value = hl_quantity_format (quantity, quantity->default_value, HL_UNITS_METRIC);
   if (quantity->default_source == NULL || *quantity->default_source == '\0')
     return g_steal_pointer (&value);
   return g_strdup_printf ("%s (%s)", value, _(quantity->default_source));

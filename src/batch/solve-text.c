@@ -48,7 +48,7 @@ hl_print_solution (FILE *out, const HlSolution *solution, const GArray *yielded)
     {
       double value;
       const HlQuantityKind *kind = hl_solution_result (solution, i, &value);
-      g_autofree char *text = hl_units_format (value, kind->dimension, hl_plant_units (plant));
+      g_autofree char *text = hl_quantity_format (kind, value, hl_plant_units (plant));
       print_pair (out, _(kind->name), text);
     }
 

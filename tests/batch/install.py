@@ -63,8 +63,8 @@ def test_metainfo_is_valid():
     need("appstreamcli")
     metainfo = os.path.join(stage(), "share", "metainfo", f"{APPLICATION}.metainfo.xml")
     run("appstreamcli", "validate", "--no-net", metainfo)
-    texts = [item.attrib.get("{http://www.w3.org/XML/1998/namespace}lang") for item in ElementTree.parse(metainfo).iter("summary")]
-    assert sorted(texts, key=str) == [None, "de"] or set(texts) == {None, "de"}, texts
+    languages = [item.attrib.get("{http://www.w3.org/XML/1998/namespace}lang") for item in ElementTree.parse(metainfo).iter("summary")]
+    assert set(languages) == {None, "de"}, languages
 
 
 def test_mime_type_is_known():
@@ -96,7 +96,7 @@ def test_headers_stand_alone():
     flags = run("pkg-config", "--cflags", "json-glib-1.0").split()
     include = os.path.join(prefix, "include", "heatloom")
     for header in glob.glob(f"{include}/**/*.h", recursive=True):
-        run("cc", "-std=gnu11", "-Wall", "-Werror", "-fsyntax-only", "-x", "c", f"-I{include}", *flags, header)
+        run("cc", "-std=gnu11", "-Wall", "-Werror", "-fsyntax-only", f"-I{include}", *flags, "-include", header, "-x", "c", "/dev/null")
 
 
 def test_the_program_in_the_readme_runs():

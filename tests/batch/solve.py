@@ -135,6 +135,12 @@ def test_a_plant_comes_from_standard_input():
     assert json.loads(out) == solved()
 
 
+def test_the_plant_in_the_docs_solves():
+    with open(os.path.join(SOURCE, "docs", "file-format.md"), encoding="utf-8") as page:
+        text = re.search(r"```json\n(.*?)```", page.read(), re.DOTALL)[1]
+    assert json.loads(batch("solve", "-", "--json", "-", stdin=text)[0])["solved"]
+
+
 def test_every_output_goes_to_files():
     out, err = batch("solve", plant("loop.heatloom"), "--json", "ö.json", "--csv", "a.csv", "--drawing", "a.svg",
                      "--diagram", "ts", "ts.svg")
@@ -190,7 +196,7 @@ def test_a_failed_write_leaves_the_old_file():
 
 
 def test_a_missing_value_is_a_finding_with_a_mend():
-    text = edited(replace=[('"exhaust.p": 8000.0', '"inlet.m": 10.0'), ('{"given": {"net_power": 10000000.0}}', '{}')])
+    text = edited(replace=[('"exhaust.p": 8000.0', '"inlet.m": 10.0'), ('"given": {"net_power": 10000000.0}, ', '')])
     out, err = batch("solve", "-", "--json", "-", stdin=text, status=1)
     found = json.loads(out)
     assert found["solved"] is False

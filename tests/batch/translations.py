@@ -1,6 +1,7 @@
 # Every word on screen can be translated, and German is whole.
 # SPDX-License-Identifier: GPL-3.0-or-later
 import glob
+import json
 import os
 import re
 import shutil
@@ -55,10 +56,10 @@ def test_german_is_whole_and_fits_the_sources():
 
 
 def test_nothing_in_german_was_left_in_english():
-    # Words that are the same in both languages are short; a sentence is not.
+    # Words that are the same in both languages stand alone, and so do equations; a sentence is never the same.
     merged = subprocess.run(["msgcat", "--no-wrap", "po/de.po"], cwd=SOURCE, capture_output=True, text=True, check=True).stdout
     same = [source for source, german in re.findall(r'^msgid "(.*)"\nmsgstr "(.*)"$', merged, re.MULTILINE)
-            if source == german and source.count(" ") >= 4]
+            if source == german and len(re.findall(r"[A-Za-z]{3,}", source)) >= 4]
     assert same == [], same
 
 
@@ -74,10 +75,14 @@ def test_the_batch_program_speaks_german():
 
 
 def test_json_stays_the_same_in_german():
-    english, _ = batch("solve", plant("loop.heatloom"), "--json", "-")
-    german, _ = batch("solve", plant("loop.heatloom"), "--json", "-", env=GERMAN)
-    strip = re.compile(r'"text": ".*"|^ +".*[ .]"?,?$', re.MULTILINE)
-    assert strip.sub("", english) == strip.sub("", german)
+    english, german = (json.loads(batch("solve", plant("loop.heatloom"), "--json", "-", env=env)[0]) for env in ({}, GERMAN))
+    # The first finding is there, so that there are words to differ.
+    assert english["findings"] and english["findings"][0]["text"] != german["findings"][0]["text"]
+    for found in (english, german):
+        for finding in found["findings"]:
+            finding["mends"] = len(finding["mends"])
+            del finding["text"]
+    assert english == german
 
 
 main(globals())
