@@ -386,12 +386,13 @@ consider_all (Missing *missing)
       for (guint k = 0; k < hl_component_n_quantities (component); k++)
         {
           HlQuantity quantity = hl_component_quantity (component, k);
-          consider (missing, hl_address_component (component->id, quantity.key), quantity.kind, quantity.number, 1.0);
+          consider (missing, hl_address_component (component->id, quantity.key), quantity.kind, quantity.number,
+                    component->kind->letter[0] == 'Y' ? -60.0 : 1.0);
         }
     }
   const HlQuantityKind *kinds = hl_plant_quantities (&n);
   for (guint k = 0; k < n; k++)
-    consider (missing, hl_address_plant (g_intern_static_string (kinds[k].key)), &kinds[k], 0, 0.0);
+    consider (missing, hl_address_plant (g_intern_static_string (kinds[k].key)), &kinds[k], 0, -52.0);
   kinds = hl_stream_quantities (&n);
   for (guint i = 0; i < hl_plant_n_streams (plant); i++)
     for (guint k = 0; k < n; k++)

@@ -70,7 +70,7 @@ const char *const test_industrial_plant =
   "pump P1 isentropic_efficiency=0.75 motor_efficiency=0.95\n"
   "open_heater D1 inlets:3 outlet_subcooling=0 steam.p=2.5e5\n"
   "pump P2 isentropic_efficiency=0.74 motor_efficiency=0.95\n"
-  "steam_user U1 return_fraction=0.7 condensate.T=358.15\n"
+  "steam_user U1 heat=9e6 return_fraction=0.7 condensate.T=358.15\n"
   "make_up W1 outlet.T=288.15\n"
   "pipe L1 pressure_loss=0.04 heat_loss=50e3\npipe L2 heat_loss=0\n"
   "boundary Y1 direction:0 outlet.p=2.5e5 outlet.T=297.15\nboundary Y2 direction:1\n"
