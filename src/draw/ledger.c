@@ -46,7 +46,7 @@ text_to (const Row *row)
 static char *
 text_medium (const Row *row)
 {
-  const HlFluid *fluid = row->result.fluid != NULL ? row->result.fluid : hl_fluid_lookup (row->stream->medium);
+  const HlFluid *fluid = hl_fluid_lookup (row->stream->medium);
   return g_strdup (fluid != NULL ? _(hl_fluid_name (fluid)) : row->stream->medium);
 }
 
@@ -59,7 +59,8 @@ text_phase (const Row *row)
   const HlState *state = &row->result.state;
   if (!row->result.has_state)
     return g_strdup ("");
-  if (state->phase != HL_PHASE_TWO_PHASE)
+  /* A quality is known on the saturation line and between. */
+  if (!isfinite (state->x))
     return g_strdup (_(hl_phase_name (state->phase)));
   if (state->x < 1e-6)
     return g_strdup (_("saturated liquid"));

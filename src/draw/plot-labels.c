@@ -396,7 +396,7 @@ hl_plot_labels_place (HlPlotLabels *labels, const HlPlotLabelWish *wish, int own
           cost += ambiguity (labels, wish, &box, owner);
           has_leader = make_leader (wish, &box, &leader);
           if (has_leader)
-            cost += 3.0;
+            cost += 6.0;
           if (cost >= best || (has_leader && !leader_is_free (labels, &leader, owner)))
             continue;
           best = cost;

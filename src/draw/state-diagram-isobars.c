@@ -4,7 +4,7 @@
 #include <math.h>
 #include <string.h>
 
-#define MERGE     1.12    /* pressures closer than this ratio share one isobar */
+#define MERGE     1.16    /* pressures closer than this ratio share one isobar */
 #define MOST      16      /* isobars in one picture; of more the ratio grows until they fit */
 
 typedef struct {
@@ -41,7 +41,7 @@ merge_isobars (const GArray *all, double ratio, GArray *merged)
         {
           const Isobar *other = &g_array_index (all, Isobar, i);
           hottest = MAX (hottest, other->hottest);
-          if (other->m > best.m * 1.001 || (other->m > best.m * 0.999 && other->h > best.h - 1.0))
+          if (other->m > best.m * 1.001 || (other->m >= best.m * 0.999 && other->h > best.h - 1.0))
             best = *other;
         }
       best.hottest = hottest;
