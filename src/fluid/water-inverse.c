@@ -90,6 +90,10 @@ blend (HlKey key, double value, const HlState *below, const HlState *above, HlSt
   state->s_p = g * below->s_p + f * above->s_p;
   state->v_p = g * below->v_p + f * above->v_p;
   state->v_h = g * below->v_h + f * above->v_h;
+  if (key == HL_KEY_H)
+    state->h = value;
+  else
+    state->s = value;
 }
 
 /* The backward equation T(p,s) of region 1 is near enough for one evaluation,
@@ -141,7 +145,10 @@ start_region2 (HlKey key, double p, double value)
     return key == HL_KEY_H ? hl_if97_T_ph_2a (p, value) : hl_if97_T_ps_2a (p, value);
   if (key == HL_KEY_H ? p < 6.546699678e6 || value >= hl_if97_B2bc_h (p) : value >= 5850.0)
     return key == HL_KEY_H ? hl_if97_T_ph_2b (p, value) : hl_if97_T_ps_2b (p, value);
-  return key == HL_KEY_H ? hl_if97_T_ph_2c (p, value) : hl_if97_T_ps_2c (p, value);
+  /* The equations of 2c are off by up to 24 mK, where cp changes fast: Newton's step. */
+  double T = key == HL_KEY_H ? hl_if97_T_ph_2c (p, value) : hl_if97_T_ps_2c (p, value), cp;
+  double k = (key == HL_KEY_H ? hl_if97_region2_enthalpy : hl_if97_region2_entropy) (p, T, &cp);
+  return T + (key == HL_KEY_H ? (value - k) / cp : (value - k) * T / cp);
 }
 
 /* Region 5 as an ideal gas of constant heat capacity, from its state at
