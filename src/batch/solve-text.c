@@ -42,9 +42,11 @@ hl_print_solution (FILE *out, const HlSolution *solution, const GArray *yielded)
     fprintf (out, "%s\n", hl_plant_title (plant));
   fprintf (out, "%s\n", summary);
 
-  if (hl_solution_n_results (solution) > 0)
+  /* Figures of a plant that is not solved are where the search stood, and mislead. */
+  guint n_results = hl_solution_is_solved (solution) ? hl_solution_n_results (solution) : 0;
+  if (n_results > 0)
     fprintf (out, "\n");
-  for (guint i = 0; i < hl_solution_n_results (solution); i++)
+  for (guint i = 0; i < n_results; i++)
     {
       double value;
       const HlQuantityKind *kind = hl_solution_result (solution, i, &value);

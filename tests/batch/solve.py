@@ -216,7 +216,9 @@ def test_a_value_too_many_is_a_finding():
 def test_an_impossible_plant_is_a_finding():
     text = edited(replace=[('"exhaust.p": 8000.0', '"exhaust.p": 9000000.0')])
     out, _ = batch("check", "-", stdin=text, status=1)
-    assert "T1" in out, out
+    assert "error: T1" in out and "90.00 bar" in out, out
+    out, _ = batch("solve", "-", stdin=text, status=1)
+    assert "error: T1" in out and "Cycle efficiency" not in out, out      # no figure that is no solution
 
 
 def test_a_pressure_beyond_the_formulation_is_a_finding():
