@@ -31,14 +31,15 @@ G_DEFINE_FINAL_TYPE (HlDiagramView, hl_diagram_view, GTK_TYPE_WIDGET)
 static gboolean
 is_stale (HlDiagramView *self)
 {
-  return !hl_solution_is_solved (hl_session_solution (self->session)) && hl_session_last_good (self->session) != NULL;
+  return !hl_solution_is_solved (hl_session_solution (self->session));
 }
 
-/* The present solution; where it failed the last good one, drawn grey. */
+/* The present solution; where it failed the last good one, or what was found of it, drawn grey. */
 static HlSolution *
 solution_to_show (HlDiagramView *self)
 {
-  return is_stale (self) ? hl_session_last_good (self->session) : hl_session_solution (self->session);
+  HlSolution *good = hl_session_last_good (self->session);
+  return is_stale (self) && good != NULL ? good : hl_session_solution (self->session);
 }
 
 static HlPlant *

@@ -194,7 +194,6 @@ show_plant (HlNameplateHead *self)
   g_autofree char *second = g_strdup_printf (ngettext_hl ("%u stream", "%u streams", streams), streams);
   g_autofree char *line = g_strdup_printf ("%s, %s", first, second);
 
-  gtk_label_set_text (GTK_LABEL (self->id), _("The plant"));
   gtk_label_set_text (GTK_LABEL (self->line), line);
   gtk_widget_set_tooltip_text (self->line, NULL);
   gtk_label_set_text (GTK_LABEL (self->detail), "");
@@ -226,6 +225,13 @@ hl_nameplate_head_update (HlNameplateHead *self)
       gtk_label_set_text (GTK_LABEL (self->detail), "");
       gtk_widget_set_visible (self->name, FALSE);
     }
+  /* The title of a plant takes the whole line. */
+  gtk_widget_set_visible (self->id, n > 0);
+  if (n == 0)
+    gtk_widget_add_css_class (self->name, "whole");
+  else
+    gtk_widget_remove_css_class (self->name, "whole");
+  gtk_widget_set_tooltip_text (self->name, n == 0 ? hl_plant_title (plant) : NULL);
   gtk_widget_set_visible (self->picture, component != NULL || stream != NULL);
   gtk_widget_set_visible (self->detail, *gtk_label_get_text (GTK_LABEL (self->detail)) != '\0');
   gtk_widget_queue_draw (self->picture);

@@ -17,7 +17,8 @@ struct _HlStatusStrip {
 
 G_DEFINE_FINAL_TYPE (HlStatusStrip, hl_status_strip, GTK_TYPE_WIDGET)
 
-/* "Solved · 12.00 MW net · 31.2 % · 3 values assumed": the first part is set bold; what the button says is left out. */
+/* "Solved · 12.00 MW net · 31.2 % · 3 values assumed": the first part is set bold, of a sentence up to its first comma
+ * or colon; what the button says is left out. */
 static void
 show_summary (HlStatusStrip *self)
 {
@@ -25,16 +26,22 @@ show_summary (HlStatusStrip *self)
   g_auto (GStrv) parts = g_strsplit (summary, " · ", -1);
   GString *rest = g_string_new (NULL);
   const char *assumed = gtk_label_get_text (GTK_LABEL (self->assumed_label));
+  gsize bold = strcspn (parts[0], ":,");
 
-  for (guint n = 1; parts[0] != NULL && parts[n] != NULL; n++)
+  if (parts[0][bold] != '\0' && parts[0][bold + 1] == ' ')
+    {
+      g_string_append (rest, parts[0] + bold + 2);
+      parts[0][bold + 1] = '\0';
+    }
+  for (guint n = 1; parts[n] != NULL; n++)
     if (g_strcmp0 (parts[n], assumed) != 0)
       g_string_append_printf (rest, "%s%s", rest->len > 0 ? " · " : "", parts[n]);
-  gtk_label_set_text (GTK_LABEL (self->head), parts[0] != NULL ? parts[0] : "");
+  gtk_label_set_text (GTK_LABEL (self->head), parts[0]);
   gtk_label_set_text (GTK_LABEL (self->line), rest->str);
   gtk_widget_remove_css_class (self->line, "message");
   hl_pane_set_accessible (GTK_WIDGET (self), summary, NULL);
   gtk_widget_set_tooltip_text (self->line, rest->len > 0 ? rest->str : NULL);
-  gtk_widget_set_tooltip_text (self->head, parts[0]);
+  gtk_widget_set_tooltip_text (self->head, summary);
   g_string_free (rest, TRUE);
 }
 
@@ -55,7 +62,23 @@ show_assumed (HlStatusStrip *self)
   hl_pane_set_accessible (self->assumed, text, _("Opens the list of values that nobody has confirmed yet"));
 }
 
-/* The gravest finding in a word, and how many there are. */
+static char *
+count_of_grade (HlGrade grade, guint n)
+{
+  switch (grade)
+    {
+    case HL_GRADE_HINT:
+      return g_strdup_printf (ngettext_hl ("%u hint", "%u hints", n), n);
+    case HL_GRADE_CAUTION:
+      return g_strdup_printf (ngettext_hl ("%u caution", "%u cautions", n), n);
+    case HL_GRADE_WARNING:
+      return g_strdup_printf (ngettext_hl ("%u warning", "%u warnings", n), n);
+    default:
+      return g_strdup_printf (ngettext_hl ("%u error", "%u errors", n), n);
+    }
+}
+
+/* How many of the gravest grade, and how many others: "1 error, 2 more". */
 static void
 show_findings (HlStatusStrip *self)
 {
@@ -67,8 +90,11 @@ show_findings (HlStatusStrip *self)
   if (n == 0)
     return;
   const HlFinding *gravest = hl_solution_finding (solution, 0);
-  g_autofree char *more = g_strdup_printf (ngettext_hl ("%u finding", "%u findings", n), n);
-  text = n == 1 ? g_strdup (hl_grade_name (gravest->grade)) : g_strdup_printf ("%s, %s", hl_grade_name (gravest->grade), more);
+  guint alike = 0;
+  while (alike < n && hl_solution_finding (solution, alike)->grade == gravest->grade)
+    alike++;
+  g_autofree char *count = count_of_grade (gravest->grade, alike);
+  text = alike == n ? g_strdup (count) : g_strdup_printf (_("%s, %u more"), count, n - alike);
   gtk_label_set_text (GTK_LABEL (self->findings_label), text);
   gtk_widget_set_tooltip_text (self->findings, gravest->text);
   hl_grade_mark_set_shape (HL_GRADE_MARK (self->findings_mark), hl_grade_mark_of (gravest->grade));
