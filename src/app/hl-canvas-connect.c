@@ -104,7 +104,7 @@ hl_canvas_shaft_end_at (HlCanvas *self, double vx, double vy, const char **id)
       {
         const HlComponent *component = hl_plant_component (plant, n);
         double sx, sy;
-        if (hl_canvas_shaft_end (plant, component, end, &sx, &sy) && hypot (sx - x, sy - y) <= 7.0 / self->zoom)
+        if (hl_canvas_shaft_end (plant, component, end, &sx, &sy) && hypot (sx - x, sy - y) <= GRAB_RADIUS / self->zoom)
           {
             *id = component->id;
             return TRUE;
@@ -346,6 +346,7 @@ list_new (const char *heading, GtkWidget **popover)
   gtk_scrolled_window_set_child (GTK_SCROLLED_WINDOW (scrolled), list);
   gtk_box_append (GTK_BOX (box), label);
   gtk_box_append (GTK_BOX (box), scrolled);
+  gtk_list_box_set_selection_mode (GTK_LIST_BOX (list), GTK_SELECTION_NONE);
   g_signal_connect (list, "row-activated", G_CALLBACK (row_activated_cb), NULL);
   *popover = gtk_popover_new ();
   gtk_widget_add_css_class (*popover, "ports");

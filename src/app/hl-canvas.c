@@ -185,6 +185,17 @@ trace_place (HlCanvas *self, const char *word, const HlComponent *component, con
     hl_trace_place (word, name, GTK_WIDGET (self), vx, vy);
 }
 
+static void
+trace_shaft_end (HlCanvas *self, const HlComponent *component, int end)
+{
+  g_autofree char *name = g_strdup_printf ("%s.%d", component->id, end);
+  double x, y, vx, vy;
+  if (!hl_canvas_shaft_end (hl_canvas_plant (self), component, end, &x, &y))
+    return;
+  hl_canvas_to_view (self, x, y, &vx, &vy);
+  hl_trace_place ("shaft", name, GTK_WIDGET (self), vx, vy);
+}
+
 static gboolean
 trace_cb (gpointer data)
 {
@@ -200,6 +211,8 @@ trace_cb (gpointer data)
       trace_place (self, "place", component, NULL);
       for (guint k = 0; k < hl_component_n_ports (component); k++)
         trace_place (self, "port", component, hl_component_port (component, k).key);
+      for (int end = 0; end < 2; end++)
+        trace_shaft_end (self, component, end);
     }
   hl_trace ("settled");
   return G_SOURCE_REMOVE;
@@ -531,18 +544,19 @@ add_move_key (GtkWidgetClass *class, guint key, guint keypad_key, int dx, int dy
     }
 }
 
-/* One-key shortcuts belong here: as shortcuts of the program they would fire while a number is typed. */
+/* One-key shortcuts belong here: as shortcuts of the program they would fire while a number is typed.  Of several keys for
+ * one action menus show the last. */
 static void
 add_keys (GtkWidgetClass *class)
 {
   static const struct { guint key; GdkModifierType modifiers; const char *action; } keys[] = {
     { GDK_KEY_r, 0, "win.turn" }, { GDK_KEY_m, 0, "win.mirror" }, { GDK_KEY_c, 0, "win.connect-menu" },
-    { GDK_KEY_Delete, 0, "win.delete" }, { GDK_KEY_KP_Delete, 0, "win.delete" }, { GDK_KEY_BackSpace, 0, "win.delete" },
+    { GDK_KEY_BackSpace, 0, "win.delete" }, { GDK_KEY_KP_Delete, 0, "win.delete" }, { GDK_KEY_Delete, 0, "win.delete" },
     { GDK_KEY_a, GDK_CONTROL_MASK, "win.select-all" }, { GDK_KEY_d, GDK_CONTROL_MASK, "win.duplicate" },
     { GDK_KEY_Escape, 0, "win.deselect" },
     { GDK_KEY_plus, 0, "win.zoom-in" }, { GDK_KEY_plus, GDK_SHIFT_MASK, "win.zoom-in" }, { GDK_KEY_equal, 0, "win.zoom-in" },
     { GDK_KEY_KP_Add, 0, "win.zoom-in" }, { GDK_KEY_minus, 0, "win.zoom-out" }, { GDK_KEY_KP_Subtract, 0, "win.zoom-out" },
-    { GDK_KEY_0, 0, "win.zoom-fit" }, { GDK_KEY_KP_0, 0, "win.zoom-fit" }, { GDK_KEY_1, 0, "win.zoom-normal" },
+    { GDK_KEY_KP_0, 0, "win.zoom-fit" }, { GDK_KEY_0, 0, "win.zoom-fit" }, { GDK_KEY_1, 0, "win.zoom-normal" },
   };
   for (guint n = 0; n < G_N_ELEMENTS (keys); n++)
     gtk_widget_class_add_binding_action (class, keys[n].key, keys[n].modifiers, keys[n].action, NULL);

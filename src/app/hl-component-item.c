@@ -6,7 +6,7 @@
 #include "plant/i18n.h"
 
 #define MARGIN 12.0       /* round the symbol's box, for the selection frame [px] */
-#define FRAME   4.0       /* selection frame outside the symbol's box */
+#define FRAME   3.0       /* selection frame outside the symbol's box */
 
 struct _HlComponentItem {
   GtkWidget    parent_instance;

@@ -92,79 +92,130 @@ main_menu (void)
   return G_MENU_MODEL (menu);
 }
 
-/* Shortcuts, written as one definition that GtkBuilder reads. */
+/* Shortcuts */
 
-typedef struct { const char *title, *keys; } Shortcut;
+typedef struct { const char *title, *keys; } Shortcut;    /* keys: accelerators parted by spaces */
 static const Shortcut canvas_keys[] = {
   { N_("Connect the selected component"), "c" },
   { N_("Turn a quarter"), "r" },
   { N_("Mirror"), "m" },
   { N_("Delete"), "Delete" },
   { N_("Move by one grid step"), "Left Right Up Down" },
-  { N_("Move by five grid steps"), "&lt;Shift&gt;Left" },
-  { N_("Select everything"), "&lt;Control&gt;a" },
-  { N_("Duplicate"), "&lt;Control&gt;d" },
+  { N_("Move by five grid steps"), "<Shift>Left" },
+  { N_("Select everything"), "<Control>a" },
+  { N_("Duplicate"), "<Control>d" },
   { N_("Let go"), "Escape" },
   { N_("Next component"), "Tab" },
-  { N_("Menu of the selection"), "Menu &lt;Shift&gt;F10" },
-  { NULL }
+  { N_("Menu of the selection"), "<Shift>F10" },
 };
 static const Shortcut view_keys[] = {
   { N_("Larger, smaller"), "plus minus" },
   { N_("Natural size"), "1" },
-  { N_("Show the whole plant"), "0 &lt;Control&gt;0" },
+  { N_("Show the whole plant"), "0" },
   { N_("Diagram beside the canvas"), "F8" },
   { N_("Light and dark in turn"), "F6" },
-  { NULL }
 };
 static const Shortcut general_keys[] = {
-  { N_("Open"), "&lt;Control&gt;o" },
-  { N_("New plant"), "&lt;Control&gt;n" },
-  { N_("Save"), "&lt;Control&gt;s" },
-  { N_("Save as"), "&lt;Control&gt;&lt;Shift&gt;s" },
-  { N_("Hand over"), "&lt;Control&gt;e" },
-  { N_("Undo"), "&lt;Control&gt;z" },
-  { N_("Redo"), "&lt;Control&gt;&lt;Shift&gt;z" },
+  { N_("Open"), "<Control>o" },
+  { N_("New plant"), "<Control>n" },
+  { N_("Save"), "<Control>s" },
+  { N_("Save as"), "<Control><Shift>s" },
+  { N_("Hand over"), "<Control>e" },
+  { N_("Undo"), "<Control>z" },
+  { N_("Redo"), "<Control><Shift>z" },
   { N_("These shortcuts"), "F1" },
-  { N_("Close the window"), "&lt;Control&gt;w" },
-  { N_("Quit"), "&lt;Control&gt;q" },
-  { NULL }
+  { N_("Close the window"), "<Control>w" },
+  { N_("Quit"), "<Control>q" },
+};
+static const char *const mouse_words[][2] = {
+  { N_("Pan"), N_("middle button, or space and drag") },
+  { N_("Zoom"), N_("Ctrl and wheel") },
+  { N_("Add to the selection"), N_("Shift and click") },
 };
 
-static void
-write_group (GString *xml, const char *title, const Shortcut *keys)
+static GtkWidget *
+label_new (const char *text, const char *css_class)
 {
-  g_autofree char *group = g_markup_printf_escaped ("<child><object class='GtkShortcutsGroup'><property name='title'>%s</property>", title);
-  g_string_append (xml, group);
-  for (; keys->title != NULL; keys++)
+  GtkWidget *label = gtk_label_new (text);
+  gtk_label_set_xalign (GTK_LABEL (label), 0.0f);
+  gtk_widget_add_css_class (label, css_class);
+  return label;
+}
+
+/* "<Control>s" as "Ctrl+S" in a key's outline; several side by side. */
+static GtkWidget *
+keys_new (const char *keys)
+{
+  g_auto (GStrv) each = g_strsplit (keys, " ", -1);
+  GtkWidget *box = gtk_box_new (GTK_ORIENTATION_HORIZONTAL, 4);
+  gtk_widget_set_halign (box, GTK_ALIGN_START);
+  for (char **key = each; *key != NULL; key++)
     {
-      g_autofree char *head = g_markup_printf_escaped ("<child><object class='GtkShortcutsShortcut'><property name='title'>%s</property>", _(keys->title));
-      g_string_append_printf (xml, "%s<property name='accelerator'>%s</property></object></child>", head, keys->keys);
+      guint value;
+      GdkModifierType modifiers;
+      g_autofree char *text = NULL;
+      if (!gtk_accelerator_parse (*key, &value, &modifiers))
+        continue;
+      text = gtk_accelerator_get_label (value, modifiers);
+      gtk_box_append (GTK_BOX (box), label_new (text, "keycap"));
     }
-  g_string_append (xml, "</object></child>");
+  return box;
+}
+
+static int
+attach_group (GtkGrid *grid, int row, const char *title, const Shortcut *keys, guint n)
+{
+  gtk_grid_attach (grid, label_new (title, "shortcut-heading"), 0, row++, 2, 1);
+  for (guint i = 0; i < n; i++, row++)
+    {
+      gtk_grid_attach (grid, keys_new (keys[i].keys), 0, row, 1, 1);
+      gtk_grid_attach (grid, label_new (_(keys[i].title), "shortcut-title"), 1, row, 1, 1);
+    }
+  return row;
+}
+
+static GtkGrid *
+grid_new (void)
+{
+  GtkGrid *grid = GTK_GRID (gtk_grid_new ());
+  gtk_grid_set_column_spacing (grid, 14);
+  gtk_grid_set_row_spacing (grid, 5);
+  gtk_widget_set_valign (GTK_WIDGET (grid), GTK_ALIGN_START);
+  return grid;
 }
 
 static void
 shortcuts_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
 {
-  g_autoptr (GString) xml = g_string_new ("<interface><object class='GtkShortcutsWindow' id='shortcuts'><property name='modal'>1</property><child>"
-                                          "<object class='GtkShortcutsSection'><property name='section-name'>all</property><property name='max-height'>12</property>");
-  g_autoptr (GtkBuilder) builder = gtk_builder_new ();
-  g_autoptr (GError) error = NULL;
-  GtkWindow *window;
+  GtkWidget *window = gtk_window_new (), *box = gtk_box_new (GTK_ORIENTATION_HORIZONTAL, 36);
+  GtkEventController *controller = gtk_shortcut_controller_new ();
+  GtkGrid *left = grid_new (), *right = grid_new ();
+  int row;
 
-  write_group (xml, _("On the canvas"), canvas_keys);
-  write_group (xml, _("View"), view_keys);
-  write_group (xml, _("General"), general_keys);
-  g_string_append (xml, "</object></child></object></interface>");
-  if (!gtk_builder_add_from_string (builder, xml->str, -1, &error))
+  row = attach_group (left, 0, _("On the canvas"), canvas_keys, G_N_ELEMENTS (canvas_keys));
+  gtk_grid_attach (left, label_new (_("By mouse"), "shortcut-heading"), 0, row++, 2, 1);
+  for (guint n = 0; n < G_N_ELEMENTS (mouse_words); n++, row++)
     {
-      g_warning ("shortcuts: %s", error->message);
-      return;
+      gtk_grid_attach (left, label_new (_(mouse_words[n][1]), "shortcut-mouse"), 0, row, 1, 1);
+      gtk_grid_attach (left, label_new (_(mouse_words[n][0]), "shortcut-title"), 1, row, 1, 1);
     }
-  window = GTK_WINDOW (gtk_builder_get_object (builder, "shortcuts"));
-  gtk_window_set_transient_for (window, GTK_WINDOW (data));
-  gtk_window_present (window);
+  row = attach_group (right, 0, _("General"), general_keys, G_N_ELEMENTS (general_keys));
+  attach_group (right, row, _("View"), view_keys, G_N_ELEMENTS (view_keys));
+  gtk_box_append (GTK_BOX (box), GTK_WIDGET (left));
+  gtk_box_append (GTK_BOX (box), GTK_WIDGET (right));
+  gtk_widget_add_css_class (box, "shortcuts");
+
+  gtk_window_set_title (GTK_WINDOW (window), _("Keyboard shortcuts"));
+  gtk_window_set_child (GTK_WINDOW (window), box);
+  gtk_window_set_transient_for (GTK_WINDOW (window), GTK_WINDOW (data));
+  gtk_window_set_destroy_with_parent (GTK_WINDOW (window), TRUE);
+  gtk_window_set_modal (GTK_WINDOW (window), TRUE);
+  gtk_window_set_resizable (GTK_WINDOW (window), FALSE);
+  gtk_widget_add_css_class (window, "heatloom");
+  gtk_shortcut_controller_add_shortcut (GTK_SHORTCUT_CONTROLLER (controller),
+                                        gtk_shortcut_new (gtk_keyval_trigger_new (GDK_KEY_Escape, 0), gtk_named_action_new ("window.close")));
+  gtk_widget_add_controller (window, controller);
+  gtk_window_present (GTK_WINDOW (window));
 }
 
 void
