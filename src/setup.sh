@@ -6,15 +6,18 @@ build_packages='gcc libc6-dev meson ninja-build pkg-config gettext
   libglib2.0-dev libjson-glib-dev libsuitesparse-dev libcairo2-dev libpango1.0-dev libgtk-4-dev
   adwaita-icon-theme librsvg2-common fonts-dejavu-core'
 
-say () { printf '%s\n' "$*"; }
+say () { printf '%s\n' "$@"; }
 fail () { printf 'heatloom: %s\n' "$*" >&2; exit 1; }
 
 # The packages of the list that are not there.
 missing_packages () {
+  there=$(dpkg-query -W -f ' ${Package}=${db:Status-Status} ' "$@" 2>/dev/null)
   for package in "$@"
   do
-    state=$(dpkg-query -W -f '${db:Status-Status}\n' "$package" 2>/dev/null | grep -x installed || true)
-    [ -n "$state" ] || printf '%s ' "$package"
+    case $there in
+      *" $package=installed "*) ;;
+      *) printf '%s ' "$package" ;;
+    esac
   done
 }
 
@@ -63,9 +66,9 @@ build_in () {
   if [ ! -f "$dir/meson-private/coredata.dat" ]
   then
     meson setup "$dir" "$@" || fail "meson could not configure $dir; its message above says what is missing."
-  elif ! meson setup --reconfigure "$dir" "$@" >"$dir/reconfigure.log" 2>&1
+  elif ! grep -qF "\"source\": \"$PWD\"" "$dir/meson-info/meson-info.json" 2>/dev/null
   then
-    # A directory of another meson, or one whose sources have moved.
+    # Made from sources that lay elsewhere, or never finished.
     meson setup --wipe "$dir" "$@" || fail "meson could not configure $dir; remove it and run this again."
   fi
   meson compile -C "$dir" || fail "the build in $dir failed; the first error above is the one to look at."
