@@ -131,6 +131,7 @@ hl_check_all (HlChecker *checker)
       check_credible (checker);
     }
   checker->component = NULL;
-  if (checker->is_complete)
+  /* Where something graver is known, flows run backwards because of it. */
+  if (checker->is_complete && !hl_findings_have (checker->findings, HL_GRADE_ERROR))
     check_flows (checker);
 }

@@ -13,16 +13,62 @@ address_of (const HlModel *model, const HlEquation *e)
   return hl_address_component (hl_plant_component (model->plant, (guint) e->component)->id, g_intern_static_string (""));
 }
 
+static void
+offer_spec (const HlModel *model, const HlSpec *spec, HlFinding *finding)
+{
+  g_autofree char *name = hl_plant_describe (model->plant, &spec->address);
+  hl_finding_mend (finding, HL_MEND_EDIT, spec->address, NAN, g_strdup_printf (_("Change %s"), name));
+}
+
 /* Values that were put in and that the block's equations use, to go and change. */
 static void
 offer_inputs (const HlModel *model, const int *equations, int n, HlFinding *finding)
 {
   g_autoptr (GArray) specs = hl_diagnose_surplus (model, equations, n);
   for (guint k = 0; k < specs->len && finding->n_mends < 3; k++)
+    offer_spec (model, hl_system_spec (model->system, g_array_index (specs, int, k)), finding);
+}
+
+/* A typed pressure or temperature which lies outside the range by itself, whatever equation stumbled over it. */
+static const HlSpec *
+spec_outside (const HlModel *model, const HlFluid *fluid)
+{
+  HlFluidLimits limits;
+  hl_fluid_limits (fluid, &limits);
+  for (guint k = 0; k < model->system->specs->len; k++)
     {
-      const HlSpec *spec = hl_system_spec (model->system, g_array_index (specs, int, k));
-      g_autofree char *name = hl_plant_describe (model->plant, &spec->address);
-      hl_finding_mend (finding, HL_MEND_EDIT, spec->address, NAN, g_strdup_printf (_("Change %s"), name));
+      const HlSpec *spec = hl_system_spec (model->system, k);
+      HlVarKind kind = hl_system_var (model->system, spec->var)->kind;
+      double value = hl_var_to_si (kind, spec->value);
+      if (spec->origin == HL_ORIGIN_TIED || spec->address.key[0] == '\0')
+        continue;
+      if (kind == HL_VAR_PRESSURE && !(value >= limits.p_min && value <= limits.p_max))
+        return spec;
+      if (kind == HL_VAR_TEMPERATURE && !(value >= limits.T_min && value <= limits.T_max))
+        return spec;
+    }
+  return NULL;
+}
+
+/* Arguments of the property call that the equation makes, as far as they show: pressure, temperature, enthalpy. */
+static void
+arguments (const HlModel *model, const HlEquation *e, const HlFluidLimits *limits, double *p, double *T, double *h, int *var)
+{
+  const HlSystem *system = model->system;
+  const int *vars = hl_equation_vars (system, e);
+  for (int k = 0; k < e->n; k++)
+    {
+      HlVarKind kind = hl_system_var (system, vars[k])->kind;
+      double value = hl_system_value (system, vars[k]);
+      if (kind == HL_VAR_PRESSURE && (!isfinite (*p) || value > limits->p_max || value < limits->p_min))
+        {
+          *p = value;
+          *var = g_array_index (system->raw, int, e->first + k);
+        }
+      if (kind == HL_VAR_TEMPERATURE)
+        *T = value;
+      if (kind == HL_VAR_ENTHALPY && !isfinite (*h))
+        *h = value;
     }
 }
 
@@ -32,43 +78,30 @@ find_range (const HlModel *model, int equation, HlFindings *findings)
 {
   HlSystem *system = model->system;
   const HlEquation *e = hl_system_equation (system, equation);
-  const int *vars = hl_equation_vars (system, e);
   double r, dr[HL_EQUATION_MOST], p = NAN, T = NAN, h = NAN;
   int var = -1;
-  if (e->fluid == NULL)
-    return FALSE;
-  HlStatus status = hl_system_evaluate (system, equation, &r, dr);
+  HlStatus status = e->fluid != NULL ? hl_system_evaluate (system, equation, &r, dr) : HL_OK;
   if (status == HL_OK)
     return FALSE;
   HlFluidLimits limits;
-  hl_fluid_limits (e->fluid, &limits);
-  for (int k = 0; k < e->n; k++)
-    {
-      HlVarKind kind = hl_system_var (system, vars[k])->kind;
-      double value = hl_system_value (system, vars[k]);
-      if (kind == HL_VAR_PRESSURE && (!isfinite (p) || value > limits.p_max || value < limits.p_min))
-        {
-          p = value;
-          var = g_array_index (system->raw, int, e->first + k);
-        }
-      if (kind == HL_VAR_TEMPERATURE)
-        T = value;
-      if (kind == HL_VAR_ENTHALPY && !isfinite (h))
-        h = value;
-    }
-  if (!isfinite (p) || var < 0)
-    return FALSE;
-  /* A saturated state is what the equation asks for, and there is none so high. */
   HlSaturation sat;
-  if (hl_fluid_saturation_p (e->fluid, p, &sat) != HL_OK && p > limits.p_critical && p <= limits.p_max && isnan (T))
-    h = NAN;
-  g_autofree char *why = isfinite (T) ? hl_fluid_explain_failure (e->fluid, status, "pT", p, T)
-                       : isfinite (h) ? hl_fluid_explain_failure (e->fluid, status, "ph", p, h)
-                                      : hl_fluid_explain_failure (e->fluid, status, "px", p, 0.0);
-  g_autofree char *name = hl_name_var (model, var), *where = hl_name_components (model, &equation, 1);
-  HlFinding *finding = hl_findings_add (findings, HL_GRADE_ERROR, "outside-range", address_of (model, e),
-    g_strdup_printf (_("%s: a state lies outside the range of the property formulation. %s. Look at %s."), where, why, name));
-  offer_inputs (model, &equation, 1, finding);
+  hl_fluid_limits (e->fluid, &limits);
+  arguments (model, e, &limits, &p, &T, &h, &var);
+  if (!isfinite (p))
+    return FALSE;
+  gboolean wants_saturation = p > limits.p_critical && p <= limits.p_max && hl_fluid_saturation_p (e->fluid, p, &sat) != HL_OK && hl_equation_wants_saturation (e);
+  g_autofree char *why = wants_saturation ? hl_fluid_explain_failure (e->fluid, HL_OUTSIDE_RANGE, "px", p, 0.0)
+                       : isfinite (T) ? hl_fluid_explain_failure (e->fluid, status, "pT", p, T)
+                       : hl_fluid_explain_failure (e->fluid, status, "ph", p, h);
+  const HlSpec *spec = wants_saturation ? NULL : spec_outside (model, e->fluid);
+  g_autofree char *name = spec != NULL ? hl_plant_describe (model->plant, &spec->address) : hl_name_var (model, var);
+  g_autofree char *where = hl_name_components (model, &equation, 1);
+  HlFinding *finding = hl_findings_add (findings, HL_GRADE_ERROR, "outside-range", spec != NULL ? spec->address : address_of (model, e),
+    g_strdup_printf (_("%s: a state lies outside the range of the property formulation: %s. Look at %s."), where, why, name));
+  if (spec != NULL)
+    offer_spec (model, spec, finding);
+  else
+    offer_inputs (model, &equation, 1, finding);
   return TRUE;
 }
 

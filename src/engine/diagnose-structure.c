@@ -125,14 +125,23 @@ hl_diagnose_surplus (const HlModel *model, const int *equations, int n)
   return list;
 }
 
-/* Typed values first, as they are what has to be decided about; those that the kind usually has given, last. */
+/* What goes first: assumed values; then of the typed ones what is a result by nature, flows and powers before states; last what
+ * the kind usually has given, efficiencies and losses above all. */
 static int
 surplus_order (const HlModel *model, int index)
 {
   const HlSpec *spec = hl_system_spec (model->system, index);
   const HlQuantityKind *kind = hl_plant_quantity_kind (model->plant, &spec->address);
   int order = spec->origin == HL_ORIGIN_ASSUMED ? 0 : 1000;
-  return order + (kind != NULL ? kind->yield_rank : 50) + (kind != NULL && (kind->flags & HL_QUANTITY_USUAL) ? 200 : 0);
+  if (kind == NULL)
+    return order;
+  if (spec->origin == HL_ORIGIN_ASSUMED)
+    return order + kind->yield_rank;
+  if (spec->address.owner == HL_OWNER_PLANT)
+    return order + 90 + kind->yield_rank;
+  if (kind->dimension == HL_DIMENSION_MASS_FLOW)
+    order -= 30;
+  return order + kind->yield_rank + (kind->flags & HL_QUANTITY_USUAL ? 100 : 0) + (kind->flags & HL_QUANTITY_ASSUMED ? 150 : 0);
 }
 
 static void
@@ -406,6 +415,26 @@ compare_candidates (gconstpointer a, gconstpointer b)
   return first->score < second->score ? 1 : first->score > second->score ? -1 : 0;
 }
 
+/* Other values of the component that lacks one say more than those far away. */
+static void
+prefer_neighbours (GArray *candidates, int group)
+{
+  const Candidate *best = NULL;
+  for (guint k = 0; k < candidates->len && best == NULL; k++)
+    if (g_array_index (candidates, Candidate, k).group == group)
+      best = &g_array_index (candidates, Candidate, k);
+  if (best == NULL)
+    return;
+  HlAddress address = best->address;
+  for (guint k = 0; k < candidates->len; k++)
+    {
+      Candidate *c = &g_array_index (candidates, Candidate, k);
+      if (c->group == group && address.owner == HL_OWNER_COMPONENT && c->address.owner == address.owner && c->address.id == address.id)
+        c->score += 40.0;
+    }
+  g_array_sort (candidates, compare_candidates);
+}
+
 static void
 offer_value (const HlModel *model, HlFinding *finding, const Candidate *c)
 {
@@ -522,7 +551,10 @@ find_missing (const HlModel *model, const HlStructure *s, HlFindings *findings)
     }
   for (guint v = 0; v < system->vars->len; v++)
     if (balance[v] > 0)
-      report_missing (&missing, (int) v, balance[v], findings);
+      {
+        prefer_neighbours (missing.candidates, (int) v);
+        report_missing (&missing, (int) v, balance[v], findings);
+      }
   g_array_unref (missing.candidates);
   g_free (missing.group_of);
 }

@@ -629,3 +629,22 @@ hl_add_tie (HlSystem *system, int dst, int src, double factor, double offset)
 }
 
 gboolean hl_equation_is_tie (const HlEquation *e) { return e->residual == tie; }
+
+gboolean
+hl_equation_wants_saturation (const HlEquation *e)
+{
+  return e->residual == saturation || e->residual == liquid || e->residual == subcooled_temperature || e->residual == enthalpy_at_quality
+         || e->residual == enthalpy_at_moisture || e->residual == quality;
+}
+
+int
+hl_equation_property_calls (const HlEquation *e)
+{
+  if (e->fluid == NULL)
+    return 0;
+  if (e->residual == expansion || e->residual == compression || e->residual == cooling_heat || e->residual == liquid)
+    return 2;
+  if (e->residual == straight_line)
+    return 3;
+  return e->n > 8 ? 7 : 1;   /* the zones of a heater; one state */
+}

@@ -46,9 +46,12 @@ HlEquation *hl_add_tie          (HlSystem *system, int dst, int src, double fact
 /* Logarithmic mean of two temperature differences, with a monotone extension below zero, and its derivatives. */
 double hl_log_mean (double d1, double d2, double *to_d1, double *to_d2);
 
+/* Property calls that one evaluation makes. */
+int      hl_equation_property_calls (const HlEquation *equation);
 gboolean hl_equation_is_energy (const HlEquation *equation);
 gboolean hl_equation_is_linear (const HlEquation *equation);
 gboolean hl_equation_is_tie    (const HlEquation *equation);
+gboolean hl_equation_wants_saturation (const HlEquation *equation);   /* has no meaning above the critical pressure */
 
 static inline gboolean
 hl_equation_linear_in (const HlEquation *equation, int k)

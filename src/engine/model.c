@@ -214,7 +214,11 @@ hl_emit_port (HlEmit *emit, const char *key)
   int node = hl_emit_optional (emit, key);
   if (node >= 0)
     return node;
-  HlNode open = { .stream = -1, .component = emit->index, .to_component = -1, .port = g_intern_string (key), .fluid = hl_fluid_water () };
+  key = g_intern_string (key);
+  for (guint k = hl_plant_n_streams (emit->model->plant); k < emit->model->nodes->len; k++)
+    if (hl_model_node (emit->model, (int) k)->component == emit->index && hl_model_node (emit->model, (int) k)->port == key)
+      return (int) k;
+  HlNode open = { .stream = -1, .component = emit->index, .to_component = -1, .port = key, .fluid = hl_fluid_water () };
   HlAddress address = hl_address_component (emit->component->id, open.port);
   g_array_append_val (emit->model->open_ports, address);
   add_node (emit->model, open);

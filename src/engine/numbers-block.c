@@ -179,12 +179,13 @@ evaluate (HlBlockWork *w, const double *x, gboolean derivatives, double *f, HlNu
     memset (w->dense, 0, sizeof (double) * (gsize) n * (gsize) n);
   else if (derivatives)
     memset (w->ax, 0, sizeof (double) * (gsize) w->n_slots);
-  numbers->n_evaluations += (guint64) n;
   for (int i = 0; i < n; i++)
     {
       const HlEquation *e = hl_system_equation (system, w->equations[i]);
       const int *vars = hl_equation_vars (system, e);
       double scale = 1.0 / hl_system_scale (system, e->kind);
+      numbers->n_evaluations++;
+      numbers->n_property_calls += (guint64) hl_equation_property_calls (e);
       if (hl_system_evaluate (system, w->equations[i], &f[i], dr) != HL_OK)
         {
           numbers->worst = w->equations[i];

@@ -177,6 +177,13 @@ scalar_newton (Scalar *s, double low, double high, double unit, double cap, doub
   return FALSE;
 }
 
+static void
+count_calls (HlNumbers *numbers, const HlEquation *equation, guint64 n)
+{
+  numbers->n_evaluations += n;
+  numbers->n_property_calls += n * (guint64) hl_equation_property_calls (equation);
+}
+
 static HlFailed
 solve_scalar (HlSystem *system, int equation, int var, HlNumbers *numbers)
 {
@@ -196,7 +203,7 @@ solve_scalar (HlSystem *system, int equation, int var, HlNumbers *numbers)
         failed = fabs (r) <= 1e-12 ? HL_FAILED_SINGULAR : HL_FAILED_STEPS;
       else
         system->x[var] = x - r / d;
-      numbers->n_evaluations += s.n;
+      count_calls (numbers, s.equation, s.n);
       return failed;
     }
   double cap = kind == HL_VAR_PRESSURE ? 1.0 : kind == HL_VAR_ENTHALPY ? 8e5 : INFINITY, value = system->x[var];
@@ -211,19 +218,20 @@ solve_scalar (HlSystem *system, int equation, int var, HlNumbers *numbers)
         failed = HL_FAILED_RANGE;
     }
   system->x[var] = value;
-  numbers->n_evaluations += s.n;
+  count_calls (numbers, s.equation, s.n);
   return failed;
 }
 
 /* --- the whole ------------------------------------------------------------- */
 
 static double
-worst_residual (HlSystem *system, const HlStructure *structure, int n_equations, int *worst)
+worst_residual (HlSystem *system, const HlStructure *structure, int n_equations, int *worst, HlNumbers *numbers)
 {
   double largest = 0.0, r, dr[HL_EQUATION_MOST];
   for (int k = 0; k < n_equations; k++)
     {
       int equation = structure->equations[k];
+      count_calls (numbers, hl_system_equation (system, equation), 1);
       double scale = hl_system_scale (system, hl_system_equation (system, equation)->kind);
       double value = hl_system_evaluate (system, equation, &r, dr) == HL_OK ? fabs (r) / scale : INFINITY;
       if (value > largest || *worst < 0)
@@ -248,7 +256,8 @@ compute_last (HlSystem *system, const HlStructure *structure, HlNumbers *numbers
       gboolean known = TRUE;
       for (int i = 0; i < e->n; i++)
         known &= vars[i] == output || numbers->is_known[vars[i]];
-      numbers->n_evaluations += known;
+      if (known)
+        count_calls (numbers, e, 1);
       if (!known || hl_system_evaluate (system, structure->last[k], &r, dr) != HL_OK || !(fabs (dr[e->output]) > 0.0))
         continue;
       double value = system->x[output] - r / dr[e->output];
@@ -294,13 +303,12 @@ hl_numbers_solve (HlSystem *system, const HlStructure *structure, HlNumbers *num
   if (numbers->failed == HL_FAILED_NOT && structure->n_solved > 0)
     {
       int worst = -1;
-      numbers->residual = worst_residual (system, structure, structure->n_solved, &worst);
-      numbers->n_evaluations += (guint64) structure->n_solved;
+      numbers->residual = worst_residual (system, structure, structure->n_solved, &worst, numbers);
       if (numbers->residual > POLISH_ABOVE)
         {
           hl_block_polish (work, structure->equations, structure->vars, structure->n_solved, numbers);
           worst = -1;
-          numbers->residual = worst_residual (system, structure, structure->n_solved, &worst);
+          numbers->residual = worst_residual (system, structure, structure->n_solved, &worst, numbers);
         }
       if (!(numbers->residual <= 1e-8))
         {

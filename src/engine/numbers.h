@@ -18,7 +18,7 @@ typedef struct {
   int      worst;                     /* its equation with the largest residual */
   double   residual;                  /* scaled, of the whole or of the failed block */
   int      n_iterations;
-  guint64  n_evaluations;
+  guint64  n_evaluations, n_property_calls;
   double   condition;                 /* largest condition estimate of a block */
   int      n_null, null_vars[HL_NULL_MOST];   /* variables of the direction that nothing holds */
   gboolean *is_known;                 /* [n vars] of roots; g_free() */

@@ -69,7 +69,6 @@ typedef struct {
   int    *fixed_by;                /* [n vars] of a root: index of the spec that fixes it; -1: free */
   double *x;                       /* [n vars] of roots */
   double  flow_scale;              /* [kg/s] */
-  guint64 n_property_calls;
 } HlSystem;
 
 #define hl_system_var(system, n)      (&g_array_index ((system)->vars, HlVar, n))

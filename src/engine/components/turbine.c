@@ -110,13 +110,12 @@ check_outlet (HlChecker *checker, const char *above, const char *outlet, const H
       g_autofree char *p_out = hl_check_text (checker, HL_DIMENSION_PRESSURE, out->p);
       g_autofree char *key = g_strconcat (outlet, ".p", NULL);
       g_autofree char *above_key = g_strconcat (above, ".p", NULL);
-      gboolean is_exhaust = g_str_equal (outlet, "exhaust"), from_inlet = g_str_equal (above, "inlet");
-      const char *format = is_exhaust && from_inlet ? _("Exhaust pressure of %s, %s, is above its inlet pressure, %s: steam cannot expand to it. Lower the exhaust pressure.")
-        : is_exhaust ? _("Exhaust pressure of %s, %s, is above that of the extraction before it, %s. Lower the exhaust pressure.")
-        : from_inlet ? _("An extraction pressure of %s, %s, is above its inlet pressure, %s. Lower it.")
-        : _("An extraction pressure of %s, %s, is above that of the extraction before it, %s. Extractions are numbered along the flow: lower it.");
+      HlAddress at = hl_address_component (checker->component->id, g_intern_string (key));
+      HlAddress before = hl_address_component (checker->component->id, g_intern_string (above_key));
+      g_autofree char *name = hl_plant_describe (checker->model->plant, &at), *before_name = hl_plant_describe (checker->model->plant, &before);
       HlFinding *finding = hl_check_add (checker, HL_GRADE_ERROR, "pressure-rises", key,
-                                         g_strdup_printf (format, checker->component->id, p_out, p_in));
+        g_strdup_printf (_("Steam cannot expand in %s: %s (%s) is above %s (%s). Lower the first or raise the second."),
+                         checker->component->id, name, p_out, before_name, p_in));
       hl_check_offer (checker, finding, key);
       hl_check_offer (checker, finding, above_key);
     }
@@ -133,8 +132,19 @@ check (HlChecker *checker)
   for (int k = 1; k <= n_extractions + 1; k++)
     check_outlet (checker, k == 1 ? "inlet" : hl_key ("extraction", k - 1), outlet_key (n_extractions, k), &last);
   hl_check_entropy (checker);
+  const HlNodeResult *inlet = hl_check_port (checker, "inlet");
+  if (inlet != NULL && inlet->has_state && inlet->st.phase == HL_PHASE_LIQUID)
+    {
+      g_autofree char *T = hl_check_text (checker, HL_DIMENSION_TEMPERATURE, inlet->st.T);
+      HlFinding *finding = hl_check_add (checker, HL_GRADE_ERROR, "water-at-turbine", "inlet.T",
+        g_strdup_printf (_("Water, not steam, reaches %s: at its inlet pressure %s is below boiling. Raise the temperature or lower the pressure."),
+                         checker->component->id, T));
+      hl_check_offer (checker, finding, "inlet.T");
+      hl_check_offer (checker, finding, "inlet.p");
+      return;
+    }
   double y;
-  if (exhaust == NULL || !exhaust->has_state || !hl_check_own (checker, "exhaust_moisture", &y) || !(y > 0.10))
+  if (exhaust == NULL || !exhaust->has_state || !hl_check_own (checker, "exhaust_moisture", &y) || !(y > 0.10 && y <= 1.0))
     return;
   g_autofree char *p = hl_check_text (checker, HL_DIMENSION_PRESSURE, exhaust->p);
   HlFinding *finding = hl_check_add (checker, y > 0.12 ? HL_GRADE_WARNING : HL_GRADE_CAUTION, "exhaust-moisture", "exhaust_moisture",

@@ -1,0 +1,111 @@
+/* Times of a whole edit and of its phases, for the demo plants and one of the 300 MW class.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "plants.h"
+#include "engine/solution-private.h"
+
+#define ROUNDS 1000
+
+typedef struct { double build, structure, numbers, results, whole; } Times;
+
+static void
+add (Times *sum, const HlSolution *solution)
+{
+  HlSolveEffort effort;
+  hl_solution_effort (solution, &effort);
+  sum->build += effort.seconds_build * 1e6 / ROUNDS;
+  sum->structure += effort.seconds_structure * 1e6 / ROUNDS;
+  sum->numbers += effort.seconds_numbers * 1e6 / ROUNDS;
+  sum->results += effort.seconds_results * 1e6 / ROUNDS;
+  sum->whole += hl_solution_seconds (solution) * 1e6 / ROUNDS;
+}
+
+static Times
+time_solves (HlPlant *plant, const HlSolution *start)
+{
+  Times sum = { 0.0 };
+  for (int round = 0; round < ROUNDS; round++)
+    {
+      g_autoptr (HlSolution) solution = hl_solve (plant, start);
+      add (&sum, solution);
+    }
+  return sum;
+}
+
+/* One value typed: new plant, settled, solved from the last solution, the old one dropped. */
+static double
+time_edits (HlPlant *plant, const HlAddress *address, double value)
+{
+  HlPlant *present = hl_plant_ref (plant);
+  HlSolution *last = hl_solve (present, NULL);
+  gint64 begin = g_get_monotonic_time ();
+  for (int round = 0; round < ROUNDS; round++)
+    {
+      GArray *yielded;
+      HlValue next = { .origin = HL_ORIGIN_GIVEN, .value = value * (1.0 + 1e-3 * (round % 20)) };
+      g_autoptr (HlPlant) edited = hl_plant_with_value (present, address, &next, NULL);
+      HlPlant *settled = hl_settle (edited, address, &yielded);
+      HlSolution *solution = hl_solve (settled, last);
+      g_array_unref (yielded);
+      hl_solution_unref (last);
+      hl_plant_unref (present);
+      last = solution;
+      present = settled;
+    }
+  double microseconds = (double) (g_get_monotonic_time () - begin) / ROUNDS;
+  if (!hl_solution_is_solved (last))
+    {
+      test_print (last);
+      g_error ("the edited plant is not solved");
+    }
+  hl_solution_unref (last);
+  hl_plant_unref (present);
+  return microseconds;
+}
+
+static void
+bench (const char *name, HlPlant *plant)
+{
+  g_autoptr (HlSolution) cold = hl_solve (plant, NULL);
+  g_autoptr (HlSolution) warm = hl_solve (plant, cold);
+  HlSolveEffort effort;
+  HlAddress address = hl_address_component (g_intern_static_string ("T1"), g_intern_static_string ("inlet.p"));
+  double value = 0.0;
+  test_assert_solved (cold);
+  hl_solution_effort (cold, &effort);
+  Times c = time_solves (plant, NULL), w = time_solves (plant, cold);
+  if (hl_plant_value (plant, &address) == NULL)
+    address = hl_address_component (g_intern_static_string ("B1"), g_intern_static_string ("steam.p"));
+  const HlValue *typed = hl_plant_value (plant, &address);
+  value = typed != NULL ? typed->value : 60e5;
+  double edit = time_edits (plant, &address, value);
+  g_print ("%-22s %8u %7u %8u | %6.0f %6.0f %6.0f %6.0f %6.0f | %6.0f %6.0f %6.0f | %6.0f\n", name, effort.n_unknowns, effort.n_blocks, effort.largest_block,
+           c.build, c.structure, c.numbers, c.results, c.whole, w.numbers, w.results, w.whole, edit);
+  g_print ("%-22s equations evaluated: cold %" G_GUINT64_FORMAT ", warm %" G_GUINT64_FORMAT "; property calls: cold %" G_GUINT64_FORMAT ", warm %" G_GUINT64_FORMAT "\n",
+           "", cold->numbers.n_evaluations, warm->numbers.n_evaluations, cold->numbers.n_property_calls, warm->numbers.n_property_calls);
+}
+
+int
+main (int argc, char **argv)
+{
+  static const char *const demos[] = { "ferry-lane", "linden-row", "tallow-fen" };
+  if (argc != 2)
+    {
+      g_printerr ("usage: engine-bench FOLDER-OF-THE-DEMO-PLANTS\n");
+      return 2;
+    }
+  g_print ("microseconds, mean of %d\n%-22s %8s %7s %8s | %6s %6s %6s %6s %6s | %6s %6s %6s | %6s\n", ROUNDS, "plant", "unknowns", "blocks", "largest",
+           "build", "struct", "cold", "result", "whole", "warm", "result", "whole", "edit");
+  for (guint k = 0; k < G_N_ELEMENTS (demos); k++)
+    {
+      g_autofree char *name = g_strconcat (demos[k], ".heatloom", NULL), *path = g_build_filename (argv[1], name, NULL);
+      g_autoptr (GError) error = NULL;
+      g_autoptr (HlPlant) plant = hl_plant_load (path, &error);
+      if (plant == NULL)
+        g_error ("%s", error->message);
+      bench (demos[k], plant);
+    }
+  g_autoptr (HlPlant) reheat = test_plant (test_reheat_plant), large = test_plant (test_large_plant);
+  bench ("reheat, two heaters", reheat);
+  bench ("300 MW, seven heaters", large);
+  return 0;
+}
