@@ -546,23 +546,19 @@ hl_add_cooling_heat (HlSystem *system, const HlFluid *fluid, int heat, int flow,
                N_("{0} = {1} × (h({4}, {2} + {3}) − h({4}, {2}))"), 1);
 }
 
-/* Near equality the mean of both with the next term of the series; where one of them is not positive, the value at a small
- * positive floor minus the depth of the crossing, so that an iteration is driven back. */
+/* Near equality the mean of both with the next terms of the series; where one of them is not positive, the value V at a small
+ * positive floor shrunk by the depth E of the crossing, V^2/(V - E): it stays positive and falls on, so that heat over it, the
+ * conductance, grows in proportion to the depth and an iteration is driven back. */
 double
 hl_log_mean (double d1, double d2, double *to_d1, double *to_d2)
 {
   const double least = 1e-3;
-  double extra = 0.0, slope1 = 1.0, slope2 = 1.0;
-  double given1 = d1, given2 = d2;
-  if (!(d1 >= least))
-    d1 = least;
-  if (!(d2 >= least))
-    d2 = least;
-  extra = fmin (given1 - d1, 0.0) + fmin (given2 - d2, 0.0);
-  double mean = 0.5 * (d1 + d2), diff = d1 - d2, e = diff / mean, value;
+  double c1 = d1 >= least ? d1 : least, c2 = d2 >= least ? d2 : least;
+  double depth = fmin (d1 - c1, 0.0) + fmin (d2 - c2, 0.0);
+  double mean = 0.5 * (c1 + c2), diff = c1 - c2, e = diff / mean, value, slope1, slope2;
   if (fabs (e) < 1e-2)
     {
-      /* mean (1 - e^2/12 - e^4/180); below e = 0.01 the next term is under 1e-15. */
+      /* mean (1 - e^2/12 - e^4/180); below e = 0.01 the next term is under 1e-14. */
       value = mean * (1.0 - e * e / 12.0 - e * e * e * e / 180.0);
       double to_e = mean * (-e / 6.0 - e * e * e / 45.0), factor = value / mean;
       slope1 = 0.5 * factor + to_e * (1.0 / mean - 0.5 * e / mean);
@@ -570,14 +566,15 @@ hl_log_mean (double d1, double d2, double *to_d1, double *to_d2)
     }
   else
     {
-      double l = log (d1 / d2);
+      double l = log (c1 / c2);
       value = diff / l;
-      slope1 = 1.0 / l - diff / (l * l * d1);
-      slope2 = -1.0 / l + diff / (l * l * d2);
+      slope1 = 1.0 / l - diff / (l * l * c1);
+      slope2 = -1.0 / l + diff / (l * l * c2);
     }
-  *to_d1 = given1 < least ? 1.0 : slope1;
-  *to_d2 = given2 < least ? 1.0 : slope2;
-  return value + extra;
+  double left = value - depth, to_value = value * (value - 2.0 * depth) / (left * left), to_depth = value * value / (left * left);
+  *to_d1 = d1 >= least ? to_value * slope1 : to_depth;
+  *to_d2 = d2 >= least ? to_value * slope2 : to_depth;
+  return value * value / left;
 }
 
 static HlStatus
