@@ -18,6 +18,13 @@ typedef struct {
 } Block;
 typedef struct { HlPoint from, to; } Leader;
 
+static HlBox
+box_around (const Leader *leader)
+{
+  return (HlBox) { MIN (leader->from.x, leader->to.x), MIN (leader->from.y, leader->to.y),
+                   fabs (leader->to.x - leader->from.x) + 1e-9, fabs (leader->to.y - leader->from.y) + 1e-9 };
+}
+
 struct _HlPlotLabels {
   HlBox    frame;
   int      columns, rows;
@@ -229,7 +236,8 @@ hl_plot_labels_is_free (HlPlotLabels *labels, const HlBox *box)
   for (guint i = 0; i < labels->leaders->len; i++)
     {
       const Leader *leader = &g_array_index (labels->leaders, Leader, i);
-      if (hl_segment_meets_box (leader->from, leader->to, &candidate.wide))
+      HlBox around = box_around (leader);
+      if (hl_box_overlaps (&around, &candidate.wide) && hl_segment_meets_box (leader->from, leader->to, &candidate.wide))
         return FALSE;
     }
   return TRUE;
@@ -248,8 +256,7 @@ is_crossed (const Block *block, gpointer data)
 static gboolean
 leader_is_free (HlPlotLabels *labels, const Leader *leader, int owner)
 {
-  HlBox around = { MIN (leader->from.x, leader->to.x), MIN (leader->from.y, leader->to.y),
-                   fabs (leader->to.x - leader->from.x), fabs (leader->to.y - leader->from.y) };
+  HlBox around = box_around (leader);
   Crossing crossing = { leader, owner };
   if (any_block_near (labels, &around, is_crossed, &crossing))
     return FALSE;
@@ -295,7 +302,7 @@ distance_to_box (HlPoint point, const HlBox *box, HlPoint *nearest)
 {
   nearest->x = CLAMP (point.x, box->x, box->x + box->width);
   nearest->y = CLAMP (point.y, box->y, box->y + box->height);
-  return hypot (nearest->x - point.x, nearest->y - point.y);
+  return sqrt ((nearest->x - point.x) * (nearest->x - point.x) + (nearest->y - point.y) * (nearest->y - point.y));
 }
 
 /* Box in direction (@dx, @dy) whose nearest point lies @distance from the anchor. */
@@ -359,6 +366,23 @@ ambiguity (HlPlotLabels *labels, const HlPlotLabelWish *wish, const HlBox *box, 
   return reading.cost;
 }
 
+#define N_DIRECTIONS 48
+#define FEW          3      /* near by every third of them will do */
+
+static const HlPoint *
+directions (void)
+{
+  static HlPoint table[N_DIRECTIONS];
+  static gsize is_ready;
+  if (g_once_init_enter (&is_ready))
+    {
+      for (int k = 0; k < N_DIRECTIONS; k++)
+        table[k] = (HlPoint) { cos (2.0 * G_PI * k / N_DIRECTIONS), sin (2.0 * G_PI * k / N_DIRECTIONS) };
+      g_once_init_leave (&is_ready, 1);
+    }
+  return table;
+}
+
 gboolean
 hl_plot_labels_place (HlPlotLabels *labels, const HlPlotLabelWish *wish, int owner, HlPlotLabelPlace *place)
 {
@@ -371,19 +395,16 @@ hl_plot_labels_place (HlPlotLabels *labels, const HlPlotLabelWish *wish, int own
   for (double distance = wish->clearance; distance <= wish->reach; distance += MAX (2.0, 0.22 * distance))
     {
       double far = 0.5 * (distance - wish->clearance);
-      int n_directions = distance < 24.0 ? 16 : 48;
       if (far >= best)
         break;
-      for (int k = 0; k < n_directions; k++)
+      for (int k = 0; k < N_DIRECTIONS; k += distance < 24.0 ? FEW : 1)
         {
-          double angle = 2.0 * G_PI * k / n_directions, dx = cos (angle), dy = sin (angle);
+          double dx = directions ()[k].x, dy = directions ()[k].y;
           double turn = 1.0 - (dx * preferred_x + dy * preferred_y), cost;
           HlBox box = box_at (wish, dx, dy, distance), wide;
           HlPoint nearest;
           Leader leader;
           gboolean has_leader;
-          if (wish->is_strict && turn > 0.35)
-            continue;
           if (distance_to_box (wish->anchor, &box, &nearest) < wish->clearance - 0.3)
             continue;
           cost = far + 1.2 * turn;

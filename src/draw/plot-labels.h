@@ -11,7 +11,6 @@ typedef struct {
   double  clearance;        /* least distance between anchor and box */
   double  reach;            /* the farthest distance worth trying */
   HlPoint towards;          /* preferred direction from the anchor, unit vector in pixels; 0, 0: upper right first */
-  gboolean is_strict;       /* only the preferred direction */
 } HlPlotLabelWish;
 
 typedef struct {

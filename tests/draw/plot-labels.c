@@ -29,7 +29,7 @@ static void
 test_a_lone_text_stands_close_and_needs_no_leader (void)
 {
   g_autoptr (HlPlotLabels) labels = hl_plot_labels_new (&frame);
-  HlPlotLabelWish wish = { 20.0, 10.0, { 200.0, 150.0 }, 5.0, 100.0, { 0.0, 0.0 }, FALSE };
+  HlPlotLabelWish wish = { 20.0, 10.0, { 200.0, 150.0 }, 5.0, 100.0, { 0.0, 0.0 } };
   HlPlotLabelPlace place;
   g_assert_true (hl_plot_labels_place (labels, &wish, 0, &place));
   g_assert_true (place.is_placed);
@@ -44,7 +44,7 @@ static void
 test_a_text_avoids_a_line (void)
 {
   g_autoptr (HlPlotLabels) labels = hl_plot_labels_new (&frame);
-  HlPlotLabelWish wish = { 20.0, 10.0, { 200.0, 150.0 }, 5.0, 100.0, { 0.0, 0.0 }, FALSE };
+  HlPlotLabelWish wish = { 20.0, 10.0, { 200.0, 150.0 }, 5.0, 100.0, { 0.0, 0.0 } };
   HlPlotLabelPlace place;
   /* A fan of lines over the whole upper half: the text goes below. */
   for (double x = 100.0; x <= 300.0; x += 8.0)
@@ -81,7 +81,7 @@ test_crowded_texts_never_touch (void)
         }
       for (guint i = 0; i < G_N_ELEMENTS (at); i++)
         {
-          HlPlotLabelWish wish = { 18.0, 11.0, at[i], 6.0, 200.0, { 0.0, 0.0 }, FALSE };
+          HlPlotLabelWish wish = { 18.0, 11.0, at[i], 6.0, 200.0, { 0.0, 0.0 } };
           n_placed += hl_plot_labels_place (labels, &wish, (int) i, &places[i]);
         }
       for (guint i = 0; i < G_N_ELEMENTS (at); i++)
@@ -104,7 +104,7 @@ static void
 test_a_removed_text_leaves_its_place_free (void)
 {
   g_autoptr (HlPlotLabels) labels = hl_plot_labels_new (&frame);
-  HlPlotLabelWish wish = { 20.0, 10.0, { 200.0, 150.0 }, 5.0, 100.0, { 0.0, 0.0 }, FALSE };
+  HlPlotLabelWish wish = { 20.0, 10.0, { 200.0, 150.0 }, 5.0, 100.0, { 0.0, 0.0 } };
   HlPlotLabelPlace first, second, third;
   g_assert_true (hl_plot_labels_place (labels, &wish, 0, &first));
   g_assert_false (hl_plot_labels_is_free (labels, &first.box));
@@ -120,7 +120,7 @@ static void
 test_a_full_frame_refuses (void)
 {
   g_autoptr (HlPlotLabels) labels = hl_plot_labels_new (&frame);
-  HlPlotLabelWish wish = { 20.0, 10.0, { 200.0, 150.0 }, 5.0, 500.0, { 0.0, 0.0 }, FALSE };
+  HlPlotLabelWish wish = { 20.0, 10.0, { 200.0, 150.0 }, 5.0, 500.0, { 0.0, 0.0 } };
   HlPlotLabelPlace place;
   hl_plot_labels_add_block (labels, &frame, -1);
   g_assert_false (hl_plot_labels_place (labels, &wish, 0, &place));

@@ -55,7 +55,7 @@ test_texts_of_whole_plants (void)
 static void
 test_texts_of_random_states (void)
 {
-  for (guint32 seed = 1; seed <= 60; seed++)
+  for (guint32 seed = 1; seed <= 30; seed++)
     check_cycle (cycle_random (seed, 4 + seed % 27), 0);
 }
 
