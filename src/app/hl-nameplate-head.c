@@ -11,7 +11,7 @@
 struct _HlNameplateHead {
   GtkWidget  parent_instance;
   HlSession *session;
-  GtkWidget *picture, *words, *id, *name, *line, *detail;
+  GtkWidget *picture, *words, *id, *kind, *name, *line, *detail;
   const char *name_of;        /* id of the component whose name is shown, interned; NULL: the plant's title */
   char      *shown_name;
   gboolean   is_updating;
@@ -144,8 +144,9 @@ static void
 show_component (HlNameplateHead *self, const HlComponent *component)
 {
   gtk_label_set_text (GTK_LABEL (self->id), component->id);
-  gtk_label_set_text (GTK_LABEL (self->line), _(component->kind->name));
-  gtk_widget_set_tooltip_text (self->line, component->kind->help != NULL ? _(component->kind->help) : NULL);
+  gtk_label_set_text (GTK_LABEL (self->kind), _(component->kind->name));
+  gtk_label_set_text (GTK_LABEL (self->line), "");
+  gtk_widget_set_tooltip_text (self->kind, component->kind->help != NULL ? _(component->kind->help) : NULL);
   gtk_label_set_text (GTK_LABEL (self->detail), "");
   hl_pane_set_accessible (self->name, _("Name"), component->id);
   show_name (self, component->id, component->name != NULL ? component->name : "", _("give it a name"));
@@ -231,7 +232,9 @@ hl_nameplate_head_update (HlNameplateHead *self)
     gtk_widget_add_css_class (self->name, "whole");
   else
     gtk_widget_remove_css_class (self->name, "whole");
-  gtk_widget_set_tooltip_text (self->name, n == 0 ? hl_plant_title (plant) : NULL);
+  gtk_widget_set_tooltip_text (self->name, n == 0 ? hl_plant_title (plant) : component != NULL ? component->name : NULL);
+  gtk_widget_set_visible (self->kind, component != NULL);
+  gtk_widget_set_visible (self->line, component == NULL);
   gtk_widget_set_visible (self->picture, component != NULL || stream != NULL);
   gtk_widget_set_visible (self->detail, *gtk_label_get_text (GTK_LABEL (self->detail)) != '\0');
   gtk_widget_queue_draw (self->picture);
@@ -287,7 +290,7 @@ build_name (HlNameplateHead *self)
 static void
 hl_nameplate_head_init (HlNameplateHead *self)
 {
-  GtkWidget *first = gtk_box_new (GTK_ORIENTATION_HORIZONTAL, 6);
+  GtkWidget *first = gtk_box_new (GTK_ORIENTATION_HORIZONTAL, 8);
 
   self->picture = gtk_drawing_area_new ();
   gtk_widget_set_size_request (self->picture, PICTURE_SIZE, PICTURE_SIZE);
@@ -302,8 +305,13 @@ hl_nameplate_head_init (HlNameplateHead *self)
   self->id = hl_pane_label ("", "title");
   build_name (self);
   gtk_box_append (GTK_BOX (first), self->id);
-  gtk_box_append (GTK_BOX (first), self->name);
+  self->kind = hl_pane_label ("", "quiet");
+  gtk_widget_set_valign (self->kind, GTK_ALIGN_BASELINE);
+  gtk_widget_set_valign (self->id, GTK_ALIGN_BASELINE);
+  gtk_label_set_ellipsize (GTK_LABEL (self->kind), PANGO_ELLIPSIZE_END);
+  gtk_box_append (GTK_BOX (first), self->kind);
   gtk_box_append (GTK_BOX (self->words), first);
+  gtk_box_append (GTK_BOX (self->words), self->name);
   self->line = hl_pane_label ("", "quiet");
   self->detail = hl_pane_label ("", "quiet");
   gtk_label_set_ellipsize (GTK_LABEL (self->line), PANGO_ELLIPSIZE_END);

@@ -17,38 +17,53 @@ struct _HlStatusStrip {
 
 G_DEFINE_FINAL_TYPE (HlStatusStrip, hl_status_strip, GTK_TYPE_WIDGET)
 
-/* "Solved · 12.00 MW net · 31.2 % · 3 values assumed": the first part is set bold, of a sentence up to its first comma
- * or colon; what the button says is left out. */
+static gboolean
+is_empty (HlStatusStrip *self)
+{
+  return hl_plant_n_components (hl_session_plant (self->session)) == 0;
+}
+
+/* "Solved · 12.00 MW net · 31.2 % · 3 values assumed": the first part is set bold, and what the button says is left
+ * out.  Where nothing is solved the summary is the sentence of the gravest finding. */
+static char *
+split_summary (HlStatusStrip *self, const char *summary, char **head)
+{
+  const HlSolution *solution = hl_session_solution (self->session);
+  const char *assumed = gtk_label_get_text (GTK_LABEL (self->assumed_label));
+
+  if (is_empty (self) || !hl_solution_is_solved (solution))
+    {
+      *head = g_strdup (is_empty (self) ? _("Empty sheet") : _("Not solved"));
+      return g_strdup (strcmp (summary, *head) != 0 ? summary : "");
+    }
+  g_auto (GStrv) parts = g_strsplit (summary, " · ", -1);
+  GString *rest = g_string_new (NULL);
+  for (guint n = 1; parts[n] != NULL; n++)
+    if (strcmp (parts[n], assumed) != 0)
+      g_string_append_printf (rest, "%s%s", rest->len > 0 ? " · " : "", parts[n]);
+  *head = g_strdup (parts[0]);
+  return g_string_free (rest, FALSE);
+}
+
 static void
 show_summary (HlStatusStrip *self)
 {
-  g_autofree char *summary = hl_solution_summary (hl_session_solution (self->session));
-  g_auto (GStrv) parts = g_strsplit (summary, " · ", -1);
-  GString *rest = g_string_new (NULL);
-  const char *assumed = gtk_label_get_text (GTK_LABEL (self->assumed_label));
-  gsize bold = strcspn (parts[0], ":,");
+  g_autofree char *summary = hl_solution_summary (hl_session_solution (self->session)), *head = NULL;
+  g_autofree char *rest = split_summary (self, summary, &head);
 
-  if (parts[0][bold] != '\0' && parts[0][bold + 1] == ' ')
-    {
-      g_string_append (rest, parts[0] + bold + 2);
-      parts[0][bold + 1] = '\0';
-    }
-  for (guint n = 1; parts[n] != NULL; n++)
-    if (g_strcmp0 (parts[n], assumed) != 0)
-      g_string_append_printf (rest, "%s%s", rest->len > 0 ? " · " : "", parts[n]);
-  gtk_label_set_text (GTK_LABEL (self->head), parts[0]);
-  gtk_label_set_text (GTK_LABEL (self->line), rest->str);
+  gtk_label_set_text (GTK_LABEL (self->head), head);
+  gtk_label_set_text (GTK_LABEL (self->line), rest);
   gtk_widget_remove_css_class (self->line, "message");
   hl_pane_set_accessible (GTK_WIDGET (self), summary, NULL);
-  gtk_widget_set_tooltip_text (self->line, rest->len > 0 ? rest->str : NULL);
-  gtk_widget_set_tooltip_text (self->head, summary);
-  g_string_free (rest, TRUE);
+  gtk_widget_set_tooltip_text (self->line, *rest != '\0' ? rest : NULL);
 }
 
 static HlGradeShape
-mark_now (const HlSolution *solution)
+mark_now (HlStatusStrip *self)
 {
-  return hl_solution_is_solved (solution) ? HL_SHAPE_GOOD : HL_SHAPE_ERROR;
+  if (is_empty (self))
+    return HL_SHAPE_HINT;
+  return hl_solution_is_solved (hl_session_solution (self->session)) ? HL_SHAPE_GOOD : HL_SHAPE_ERROR;
 }
 
 static void
@@ -107,7 +122,7 @@ show_findings (HlStatusStrip *self)
 static void
 update (HlStatusStrip *self)
 {
-  hl_grade_mark_set_shape (HL_GRADE_MARK (self->mark), mark_now (hl_session_solution (self->session)));
+  hl_grade_mark_set_shape (HL_GRADE_MARK (self->mark), mark_now (self));
   show_assumed (self);
   show_findings (self);
   if (self->message_source == 0)
@@ -231,7 +246,6 @@ hl_status_strip_init (HlStatusStrip *self)
   self->mark = hl_grade_mark_new (HL_SHAPE_GOOD);
   gtk_widget_set_parent (self->mark, GTK_WIDGET (self));
   self->head = hl_pane_label ("", "head");
-  gtk_label_set_ellipsize (GTK_LABEL (self->head), PANGO_ELLIPSIZE_END);
   gtk_widget_set_parent (self->head, GTK_WIDGET (self));
   self->line = hl_pane_label ("", "line");
   gtk_label_set_ellipsize (GTK_LABEL (self->line), PANGO_ELLIPSIZE_END);
