@@ -8,6 +8,7 @@ struct _HlFindings {
   GtkWidget  parent_instance;
   HlSession *session;
   GtkWidget *scroller, *list, *empty, *error;
+  int        fit_width, fit_most;   /* height follows the list up to fit_most; 0: fills its place */
   char      *shown;            /* what stands in the list, to leave it alone while nothing changes */
 };
 
@@ -145,6 +146,19 @@ fingerprint (const HlSolution *solution)
   return g_string_free (text, FALSE);
 }
 
+/* A scrolled list does not know how high its text becomes at the width that it gets: it is measured. */
+static void
+fit_height (HlFindings *self)
+{
+  int height;
+
+  if (self->fit_most == 0)
+    return;
+  gtk_widget_measure (self->list, GTK_ORIENTATION_VERTICAL, self->fit_width, NULL, &height, NULL, NULL);
+  gtk_scrolled_window_set_max_content_height (GTK_SCROLLED_WINDOW (self->scroller), self->fit_most);
+  gtk_scrolled_window_set_min_content_height (GTK_SCROLLED_WINDOW (self->scroller), MIN (height, self->fit_most));
+}
+
 static void
 update (HlFindings *self)
 {
@@ -167,6 +181,14 @@ update (HlFindings *self)
     gtk_list_box_append (GTK_LIST_BOX (self->list), finding_row (self, hl_solution_finding (solution, n), n));
   gtk_widget_set_visible (self->scroller, n_findings > 0);
   gtk_widget_set_visible (self->empty, n_findings == 0);
+  fit_height (self);
+}
+
+static void
+hl_findings_root (GtkWidget *widget)
+{
+  GTK_WIDGET_CLASS (hl_findings_parent_class)->root (widget);
+  fit_height (HL_FINDINGS (widget));            /* the style sheet counts from here */
 }
 
 static void
@@ -190,6 +212,7 @@ hl_findings_class_init (HlFindingsClass *klass)
   GtkWidgetClass *widget_class = GTK_WIDGET_CLASS (klass);
   G_OBJECT_CLASS (klass)->dispose = hl_findings_dispose;
   gtk_widget_class_set_layout_manager_type (widget_class, GTK_TYPE_BOX_LAYOUT);
+  widget_class->root = hl_findings_root;
   gtk_widget_class_set_css_name (widget_class, "findings");
 }
 
@@ -220,6 +243,15 @@ hl_findings_init (HlFindings *self)
   gtk_box_append (GTK_BOX (self->empty), hl_grade_mark_new (HL_SHAPE_GOOD));
   gtk_box_append (GTK_BOX (self->empty), hl_pane_label (_("Nothing to remark."), "quiet"));
   gtk_widget_set_parent (self->empty, GTK_WIDGET (self));
+}
+
+void
+hl_findings_fit_height (HlFindings *self, int width, int most)
+{
+  self->fit_width = width;
+  self->fit_most = most;
+  gtk_widget_set_size_request (GTK_WIDGET (self), width, -1);
+  fit_height (self);
 }
 
 GtkWidget *

@@ -124,10 +124,10 @@ put_connections (HlNameplateBody *body, HlSession *session, const HlComponent *c
       GtkWidget *row = hl_nameplate_body_find (body, key);
 
       if (row == NULL)
-        row = hl_link_row_new (session);
+        row = hl_link_row_new (session, TRUE);
       if (stream != NULL)
         {
-          name = g_strdup_printf ("%s  %s", stream->id, port_name);
+          name = g_strdup_printf ("%s   %s", stream->id, port_name);
           text = hl_nameplate_stream_text (session, stream);
         }
       else
@@ -176,7 +176,7 @@ hl_nameplate_fill_stream (HlNameplateBody *body, HlSession *session, const HlStr
       if (component == NULL || !hl_component_find_port (component, ports[n], &port))
         continue;
       if (row == NULL)
-        row = hl_link_row_new (session);
+        row = hl_link_row_new (session, FALSE);
       port_name = hl_component_port_name (component, port);
       name = g_strdup_printf (n == 0 ? _("from %s") : _("to %s"), component->id);
       hl_link_row_set (row, name, port_name, component->id);
@@ -247,7 +247,7 @@ hl_nameplate_fill_many (HlNameplateBody *body, HlSession *session)
       if (component == NULL && stream == NULL)
         continue;
       if (row == NULL)
-        row = hl_link_row_new (session);
+        row = hl_link_row_new (session, FALSE);
       if (stream != NULL)
         text = hl_nameplate_stream_text (session, stream);
       else

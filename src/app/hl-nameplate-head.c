@@ -178,7 +178,10 @@ show_stream (HlNameplateHead *self, const HlStream *stream)
   const char *medium = fluid != NULL ? _(hl_fluid_name (fluid)) : stream->medium;
 
   hl_solution_stream (hl_session_solution (self->session), (guint) hl_plant_stream_index (plant, stream->id), &result);
-  line = result.has_state ? g_strdup_printf ("%s, %s", medium, _(hl_phase_name (result.state.phase))) : g_strdup (medium);
+  if (result.has_state)
+    line = g_strdup_printf ("%s, %s", medium, result.state.phase == HL_PHASE_TWO_PHASE ? _("wet steam") : _(hl_phase_name (result.state.phase)));
+  else
+    line = g_strdup (medium);
   gtk_label_set_text (GTK_LABEL (self->id), title);
   gtk_label_set_text (GTK_LABEL (self->line), way);
   gtk_widget_set_tooltip_text (self->line, way);

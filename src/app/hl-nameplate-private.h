@@ -23,8 +23,8 @@ GtkWidget *hl_site_row_new      (HlSession *session, HlSiteNumber which);
 void       hl_site_row_update   (GtkWidget *row);
 GtkWidget *hl_units_row_new     (HlSession *session);
 void       hl_units_row_update  (GtkWidget *row);
-/* A line that leads to a component or stream: a name, and a quiet text beside it. */
-GtkWidget *hl_link_row_new      (HlSession *session);
+/* A line that leads to a component or stream: a name, and a quiet text beside it, or under it when tall. */
+GtkWidget *hl_link_row_new      (HlSession *session, gboolean is_tall);
 void       hl_link_row_set      (GtkWidget *row, const char *name, const char *text, const char *id);
 /* Exhaust moisture between good and bad. */
 GtkWidget *hl_limit_row_new     (void);

@@ -340,7 +340,7 @@ link_clicked_cb (GtkButton *button, Row *row)
 }
 
 GtkWidget *
-hl_link_row_new (HlSession *session)
+hl_link_row_new (HlSession *session, gboolean is_tall)
 {
   Row *row;
   GtkWidget *line, *box = new_row (session, "", &row, &line), *button = gtk_button_new ();
@@ -357,8 +357,14 @@ hl_link_row_new (HlSession *session)
   row->control = button;
   row->unit = hl_pane_label ("", "detail");
   gtk_label_set_ellipsize (GTK_LABEL (row->unit), PANGO_ELLIPSIZE_END);
-  gtk_label_set_xalign (GTK_LABEL (row->unit), 1.0f);
+  gtk_label_set_xalign (GTK_LABEL (row->unit), is_tall ? 0.0f : 1.0f);
   gtk_box_append (GTK_BOX (line), row->unit);
+  if (is_tall)
+    {
+      gtk_orientable_set_orientation (GTK_ORIENTABLE (line), GTK_ORIENTATION_VERTICAL);
+      gtk_box_set_spacing (GTK_BOX (line), 0);
+      gtk_widget_add_css_class (line, "tall");
+    }
   return box;
 }
 

@@ -158,11 +158,10 @@ message_cb (HlSession *session, const char *text, HlStatusStrip *self)
 /* --- popovers, made when first opened --- */
 
 static void
-give_popover (GtkMenuButton *button, GtkWidget *content, int width)
+give_popover (GtkMenuButton *button, GtkWidget *content)
 {
   GtkWidget *popover = gtk_popover_new ();
 
-  gtk_widget_set_size_request (content, width, -1);
   gtk_widget_add_css_class (popover, "pane-popover");
   gtk_popover_set_child (GTK_POPOVER (popover), content);
   gtk_menu_button_set_popover (button, popover);
@@ -183,8 +182,8 @@ open_findings_cb (GtkMenuButton *button, gpointer data)
   if (gtk_menu_button_get_popover (button) != NULL)
     return;
   GtkWidget *findings = hl_findings_new (self->session);
-  limit_height (findings, 320);
-  give_popover (button, findings, 520);
+  hl_findings_fit_height (HL_FINDINGS (findings), 540, 340);
+  give_popover (button, findings);
 }
 
 static void
@@ -195,7 +194,8 @@ open_assumed_cb (GtkMenuButton *button, gpointer data)
     return;
   GtkWidget *assumed = hl_assumed_new (self->session);
   limit_height (assumed, 320);
-  give_popover (button, assumed, 460);
+  gtk_widget_set_size_request (assumed, 460, -1);
+  give_popover (button, assumed);
 }
 
 static GtkWidget *
