@@ -187,7 +187,8 @@ read_number (Reader *reader, JsonNode **node)
         return refuse_here (reader, _("a digit"));
     }
   text = g_strndup (start, (gsize) (reader->at - start));
-  if (is_whole && g_ascii_string_to_signed (text, 10, -(G_GINT64_CONSTANT (1) << 53), G_GINT64_CONSTANT (1) << 53, &whole, NULL))
+  /* -0 is a number of its own that only a double can hold. */
+  if (is_whole && !g_str_equal (text, "-0") && g_ascii_string_to_signed (text, 10, -(G_GINT64_CONSTANT (1) << 53), G_GINT64_CONSTANT (1) << 53, &whole, NULL))
     {
       *node = json_node_init_int (json_node_alloc (), whole);
       return TRUE;

@@ -28,7 +28,8 @@ refuse_as (Reader *reader, HlPlantError code, const char *key, const char *why)
   guint line = reader->list != NULL ? hl_json_line (&reader->places, reader->list, reader->item) : 0;
   if (line > 0)
     g_string_append_printf (where, ":%u", line);
-  g_string_append (where, ": ");
+  if (reader->list != NULL || key != NULL)
+    g_string_append (where, ": ");
   if (reader->list != NULL)
     g_string_append_printf (where, "%s[%u]", reader->list, reader->item);
   if (reader->list != NULL && reader->id != NULL)
