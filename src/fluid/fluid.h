@@ -22,7 +22,9 @@ typedef enum {
 } HlPhase;
 
 /* A complete state.  In the two-phase region cp, cv and w are NaN, and the
- * derivatives are those of the equilibrium mixture. */
+ * derivatives are those of the equilibrium mixture as the formulation gives it:
+ * where its saturation line is not exactly consistent (IF97: 1e-5 in s_h, up to
+ * 1e-3 in s_p) they follow its functions, not the thermodynamic identities. */
 typedef struct {
   double  p, T;             /* pressure [Pa], temperature [K] */
   double  h, s, v, u;       /* specific enthalpy [J/kg], entropy [J/(kg K)], volume [m3/kg], internal energy [J/kg] */
@@ -30,7 +32,7 @@ typedef struct {
   double  x;                /* vapour mass fraction [-]; NaN where there is one phase; 0 and 1 on the saturation line
                              * when the call asked for it by (p,x) or (T,x) */
   double  T_p, T_h;         /* dT/dp at constant h [K/Pa], dT/dh at constant p [K kg/J] */
-  double  s_p, s_h;         /* the same for entropy: s_h = 1/T, s_p = -v/T */
+  double  s_p, s_h;         /* the same for entropy; in one phase s_h = 1/T, s_p = -v/T */
   double  v_p, v_h;         /* the same for specific volume */
   HlPhase phase;
 } HlState;
@@ -46,7 +48,7 @@ typedef struct {
 } HlSaturation;
 
 typedef struct {
-  double p_min, p_max, T_min, T_max;      /* outer box of the published range [Pa], [K] */
+  double p_min, p_max, T_min, T_max;      /* outer box of the published range [Pa], [K]; p_min 0: every p above 0 */
   double p_critical, T_critical, v_critical;
   double p_triple, T_triple;
   double molar_mass;                      /* [kg/mol] */

@@ -126,6 +126,26 @@ assert_mixture (const HlState *got, const HlState *expected)
   g_assert_true (isnan (got->cp) && isnan (got->cv) && isnan (got->w));
 }
 
+/* Around the critical point, where cp has no bound, both in a wide and in a
+ * very narrow neighbourhood. */
+static void
+test_round_trips_close_near_the_critical_point (void)
+{
+  g_autoptr (GRand) rand = g_rand_new_with_seed (22064);
+  for (int i = 0; i < 20000; i++)
+    {
+      HlState there, back;
+      double width = i % 2 ? 1.0 : 0.01;
+      double p = HL_IF97_P_CRITICAL + g_rand_double_range (rand, -1e6, 1e6) * width;
+      double T = HL_IF97_T_CRITICAL + g_rand_double_range (rand, -4.0, 4.0) * width;
+      g_assert_cmpint (hl_fluid_state_pT (hl_fluid_water (), p, T, &there), ==, HL_OK);
+      g_assert_cmpint (state_ph (p, there.h, &back), ==, HL_OK);
+      assert_same_state (&back, &there);
+      g_assert_cmpint (state_ps (p, there.s, &back), ==, HL_OK);
+      assert_same_state (&back, &there);
+    }
+}
+
 static void
 test_mixture_round_trips_close (void)
 {
@@ -367,6 +387,22 @@ test_edges_keep_their_margins (void)
     }
 }
 
+/* SR3-03's saturation pressures are taken for right to 0.5 % when a state of
+ * region 3 is to be clear of the mixture. */
+static void
+test_region3_saturation_is_near (void)
+{
+  for (double T = 623.2; T < 647.09; T += 0.01)
+    {
+      HlSaturation sat;
+      g_assert_cmpint (hl_fluid_saturation_T (hl_fluid_water (), T, &sat), ==, HL_OK);
+      g_assert_cmpfloat_with_epsilon (hl_if97_psat3_h (sat.h_liquid) / sat.p, 1.0, 0.002);
+      g_assert_cmpfloat_with_epsilon (hl_if97_psat3_h (sat.h_vapour) / sat.p, 1.0, 0.002);
+      g_assert_cmpfloat_with_epsilon (hl_if97_psat3_s (sat.s_liquid) / sat.p, 1.0, 0.002);
+      g_assert_cmpfloat_with_epsilon (hl_if97_psat3_s (sat.s_vapour) / sat.p, 1.0, 0.002);
+    }
+}
+
 static void
 test_outside_the_range_fails (void)
 {
@@ -420,12 +456,14 @@ main (int argc, char *argv[])
   g_test_init (&argc, &argv, NULL);
   g_test_add_func ("/fluid/water-inverse/round-trips", test_round_trips_close);
   g_test_add_func ("/fluid/water-inverse/isobars", test_isobars_are_whole);
+  g_test_add_func ("/fluid/water-inverse/critical", test_round_trips_close_near_the_critical_point);
   g_test_add_func ("/fluid/water-inverse/mixture", test_mixture_round_trips_close);
   g_test_add_func ("/fluid/water-inverse/line", test_line_divides_the_phases);
   g_test_add_func ("/fluid/water-inverse/slopes", test_slopes_agree_with_differences);
   g_test_add_func ("/fluid/water-inverse/mixture-slopes", test_mixture_slopes_agree_with_differences);
   g_test_add_func ("/fluid/water-inverse/jumps", test_boundary_state_inside_jumps);
   g_test_add_func ("/fluid/water-inverse/edges", test_edges_keep_their_margins);
+  g_test_add_func ("/fluid/water-inverse/saturation", test_region3_saturation_is_near);
   g_test_add_func ("/fluid/water-inverse/outside", test_outside_the_range_fails);
   g_test_add_func ("/fluid/water-inverse/limits", test_limits_are_inside);
   return g_test_run ();
