@@ -8,7 +8,7 @@
 #define LEAST_ZOOM 0.2
 #define MOST_ZOOM 4.0
 #define FIT_ZOOM 1.35      /* a small plant is not blown up further than this */
-#define FIT_MARGIN 28.0
+#define FIT_MARGIN 6.0      /* beside the margin of the drawing's own extents */
 
 enum { PROP_ZOOM = 1, N_PROPERTIES };
 static GParamSpec *properties[N_PROPERTIES];

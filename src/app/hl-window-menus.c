@@ -206,6 +206,7 @@ shortcuts_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
   gtk_widget_add_css_class (box, "shortcuts");
 
   gtk_window_set_title (GTK_WINDOW (window), _("Keyboard shortcuts"));
+  gtk_window_set_titlebar (GTK_WINDOW (window), gtk_header_bar_new ());
   gtk_window_set_child (GTK_WINDOW (window), box);
   gtk_window_set_transient_for (GTK_WINDOW (window), GTK_WINDOW (data));
   gtk_window_set_destroy_with_parent (GTK_WINDOW (window), TRUE);

@@ -12,6 +12,9 @@ struct _HlWindow {
   gboolean   may_close;        /* the question about unsaved work has been answered */
   gboolean   is_wide;          /* there is room for the glance card */
   guint      fold_source;      /* idle that shows or hides it */
+  guint      divide_source;    /* timeout that divides canvas and diagram */
+  int        divide_after;
+  guint      trace_source;
 
   /* from the template */
   GtkMenuButton *open_button, *menu_button;

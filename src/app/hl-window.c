@@ -6,15 +6,51 @@
 #include "app/hl-glance.h"
 #include "app/hl-ledger-view.h"
 #include "app/hl-nameplate.h"
+#include "app/hl-quantity-row.h"
 #include "app/hl-settings.h"
 #include "app/hl-shelf.h"
 #include "app/hl-status-strip.h"
 #include "app/hl-trace.h"
 #include "plant/i18n.h"
 
+#define GLANCE_WIDTH 262
 #define GLANCE_FROM_WIDTH 790     /* the glance card needs this much in the work area, beside the diagram */
 
 G_DEFINE_FINAL_TYPE (HlWindow, hl_window, GTK_TYPE_APPLICATION_WINDOW)
+
+/* Where the rows of the nameplate are, for whoever drives the program from outside */
+
+static void
+trace_rows (GtkWidget *widget)
+{
+  for (GtkWidget *child = gtk_widget_get_first_child (widget); child != NULL; child = gtk_widget_get_next_sibling (child))
+    if (HL_IS_QUANTITY_ROW (child) && gtk_widget_get_mapped (child))
+      {
+        g_autofree char *address = hl_address_to_text (hl_quantity_row_address (HL_QUANTITY_ROW (child)));
+        hl_trace_place ("row", address, child, gtk_widget_get_width (child) * 0.62, 17);
+      }
+    else
+      trace_rows (child);
+}
+
+static gboolean
+trace_cb (gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  self->trace_source = 0;
+  trace_rows (self->nameplate_bin);
+  hl_trace ("rows");
+  return G_SOURCE_REMOVE;
+}
+
+static void
+trace_later (HlWindow *self)
+{
+  if (!hl_trace_is_on ())
+    return;
+  g_clear_handle_id (&self->trace_source, g_source_remove);
+  self->trace_source = g_timeout_add (120, trace_cb, self);
+}
 
 /* Following the session */
 
@@ -58,6 +94,14 @@ changed_cb (HlWindow *self)
   gboolean is_empty = hl_plant_n_components (hl_session_plant (self->session)) == 0;
   gtk_widget_set_visible (self->empty_hint, is_empty);
   hl_window_update_actions (self);
+  trace_later (self);
+}
+
+static void
+selection_changed_cb (HlWindow *self)
+{
+  hl_window_update_actions (self);
+  trace_later (self);
 }
 
 static void
@@ -92,6 +136,8 @@ fill_panes (HlWindow *self)
       gtk_widget_set_hexpand (gtk_widget_get_first_child (*b), TRUE);
       gtk_widget_set_vexpand (gtk_widget_get_first_child (*b), *b != self->strip_bin);
     }
+  gtk_widget_set_hexpand (self->glance_bin, FALSE);     /* its width is its own, the diagram takes the rest */
+  gtk_widget_set_vexpand (self->glance_bin, FALSE);
 }
 
 /* Sizes */
@@ -156,11 +202,38 @@ remember_diagram_size (HlWindow *self)
     hl_settings_set_int (hl_window_diagram_is_beside (self) ? "diagram-beside-size" : "diagram-below-size", size);
 }
 
+/* The diagram's share of @whole pixels: what is remembered, but never so much that the canvas gets narrow. */
+static int
+diagram_size (gboolean is_beside, int whole)
+{
+  return is_beside ? MIN (remembered ("diagram-beside-size", 540), whole * 45 / 100)
+                   : MIN (remembered ("diagram-below-size", 290), whole * 38 / 100);
+}
+
+/* A paned that has just been turned still reckons with its former length, so the division follows the next allocation. */
+static gboolean
+divide_cb (gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  gboolean is_beside = hl_window_diagram_is_beside (self);
+  int whole = is_beside ? gtk_widget_get_width (GTK_WIDGET (self->work)) : gtk_widget_get_height (GTK_WIDGET (self->work));
+  if (self->divide_after++ < 1)
+    {
+      gtk_widget_queue_allocate (GTK_WIDGET (self->work));
+      self->divide_source = g_timeout_add (20, divide_cb, self);
+      return G_SOURCE_REMOVE;
+    }
+  self->divide_after = 0;
+  self->divide_source = 0;
+  set_end_size (self->work, whole, diagram_size (is_beside, whole));
+  return G_SOURCE_REMOVE;
+}
+
 void
 hl_window_place_diagram (HlWindow *self, gboolean is_beside)
 {
   GtkOrientation across = is_beside ? GTK_ORIENTATION_VERTICAL : GTK_ORIENTATION_HORIZONTAL;
-  int width = gtk_widget_get_width (GTK_WIDGET (self->work)), height = gtk_widget_get_height (GTK_WIDGET (self->work));
+  int width = gtk_widget_get_width (GTK_WIDGET (self->work));
 
   if (is_beside == hl_window_diagram_is_beside (self))
     return;
@@ -168,10 +241,9 @@ hl_window_place_diagram (HlWindow *self, gboolean is_beside)
     remember_diagram_size (self);
   gtk_orientable_set_orientation (GTK_ORIENTABLE (self->work), is_beside ? GTK_ORIENTATION_HORIZONTAL : GTK_ORIENTATION_VERTICAL);
   gtk_orientable_set_orientation (GTK_ORIENTABLE (self->diagram_area), across);
-  gtk_widget_set_vexpand (self->glance_bin, FALSE);
-  if (width > 0)
-    set_end_size (self->work, is_beside ? width : height,
-                  is_beside ? remembered ("diagram-beside-size", 620) : remembered ("diagram-below-size", 290));
+  gtk_widget_set_size_request (self->glance_bin, is_beside ? -1 : GLANCE_WIDTH, -1);
+  if (width > 0 && self->divide_source == 0)
+    self->divide_source = g_idle_add (divide_cb, self);
   hl_settings_set_bool ("diagram-beside", is_beside);
   update_glance (self);
 }
@@ -188,10 +260,13 @@ restore_geometry (HlWindow *self)
   if (hl_settings_get_bool ("window-maximized", FALSE))
     gtk_window_maximize (GTK_WINDOW (self));
   work_width = width - shelf - remembered ("nameplate-size", 336);
+  gtk_widget_set_size_request (self->glance_bin, GLANCE_WIDTH, -1);
   hl_window_place_diagram (self, is_beside);
   gtk_paned_set_position (self->outer, work_width);
-  set_end_size (self->work, is_beside ? work_width : height - 48,
-                is_beside ? remembered ("diagram-beside-size", 620) : remembered ("diagram-below-size", 290));
+  if (is_beside)
+    set_end_size (self->work, work_width, diagram_size (TRUE, work_width));
+  else
+    set_end_size (self->work, height - 48, diagram_size (FALSE, height - 48));
 }
 
 static void
@@ -256,7 +331,7 @@ hl_window_init (HlWindow *self)
   hl_window_add_file_actions (self);
   hl_window_fill_menus (self);
   g_signal_connect_object (self->session, "changed", G_CALLBACK (changed_cb), self, G_CONNECT_SWAPPED);
-  g_signal_connect_object (self->session, "selection-changed", G_CALLBACK (hl_window_update_actions), self, G_CONNECT_SWAPPED);
+  g_signal_connect_object (self->session, "selection-changed", G_CALLBACK (selection_changed_cb), self, G_CONNECT_SWAPPED);
   g_signal_connect_object (self->session, "file-changed", G_CALLBACK (file_changed_cb), self, G_CONNECT_SWAPPED);
   g_signal_connect_object (self->canvas, "notify::zoom", G_CALLBACK (zoom_changed_cb), self, G_CONNECT_SWAPPED);
   restore_geometry (self);
@@ -270,6 +345,8 @@ hl_window_dispose (GObject *object)
 {
   HlWindow *self = HL_WINDOW (object);
   g_clear_handle_id (&self->fold_source, g_source_remove);
+  g_clear_handle_id (&self->divide_source, g_source_remove);
+  g_clear_handle_id (&self->trace_source, g_source_remove);
   G_OBJECT_CLASS (hl_window_parent_class)->dispose (object);
 }
 
