@@ -3,6 +3,7 @@
 #include "app/hl-canvas-private.h"
 #include "app/hl-edit.h"
 #include "app/hl-shelf.h"
+#include "app/hl-trace.h"
 #include "plant/i18n.h"
 
 #define THRESHOLD 8.0      /* a press becomes a drag after this [view px] */
@@ -443,6 +444,7 @@ drop_motion_cb (GtkDropTarget *target, double vx, double vy, HlCanvas *self)
     return gtk_drop_target_get_value (target) == NULL ? GDK_ACTION_COPY : 0;
   hl_canvas_to_grid (self, vx, vy, &self->drop_x, &self->drop_y);
   self->drop_stream = hl_edit_can_insert (self->drop_kind) ? stream_at (self, vx, vy) : -1;
+  hl_trace ("over %s %d %d", self->drop_kind->id, self->drop_x, self->drop_y);
   gtk_widget_queue_draw (GTK_WIDGET (self));
   return GDK_ACTION_COPY;
 }

@@ -36,6 +36,7 @@ struct _HlCanvas {
   gboolean    is_fitted;             /* the whole plant stays in view when the size changes */
   int         fit_width, fit_height; /* the size that it was last fitted to */
   HlLayout   *layout;
+  const HlTheme *theme;              /* that the layout was measured with */
   HlSolution *shown;                 /* the solution whose figures stand in the labels */
   gboolean    is_stale;
   GHashTable *items;                 /* id -> HlComponentItem */

@@ -235,6 +235,7 @@ lay_out_from (HlCanvas *self, HlLayout *previous)
   HlLayout *layout = hl_layout_next (previous, hl_canvas_plant (self), self->shown, hl_appearance_theme ());
   g_clear_pointer (&self->layout, hl_layout_unref);
   self->layout = layout;
+  self->theme = hl_appearance_theme ();
   sync_items (self);
   hl_canvas_renew_nodes (self);
   gtk_widget_queue_allocate (GTK_WIDGET (self));
@@ -455,7 +456,8 @@ hl_canvas_css_changed (GtkWidget *widget, GtkCssStyleChange *change)
 {
   HlCanvas *self = HL_CANVAS (widget);
   GTK_WIDGET_CLASS (hl_canvas_parent_class)->css_changed (widget, change);
-  if (self->layout != NULL)
+  /* Hovering and focus change styles, too; only another theme changes the drawing. */
+  if (self->layout != NULL && self->theme != hl_appearance_theme ())
     lay_out (self);
 }
 

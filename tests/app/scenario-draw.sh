@@ -52,6 +52,17 @@ drag () {
   done
   xdotool sleep 0.15 mouseup 1
 }
+# take KIND TO_X TO_Y: drags from the shelf; lets go once the canvas has answered.
+take () {
+  set -- $(place shelf "$1") "$2" "$3" "$1"
+  seen=$(grep -c "^over $5 " "$trace")
+  xdotool mousemove "$1" "$2" sleep 0.1 mousedown 1 sleep 0.1
+  for n in 1 2 3 4 5 6 7 8 9 10 11 12; do
+    xdotool mousemove $(($1 + ($3 - $1) * n / 12)) $(($2 + ($4 - $2) * n / 12)) sleep 0.015
+  done
+  wait_line "^over $5 " $((seen + 1))
+  xdotool sleep 0.3 mouseup 1
+}
 # step COUNT NAME: waits for the step and for the places after it.
 step () {
   wait_line '^step ' "$1" || fail "$2"
@@ -71,11 +82,11 @@ xdotool windowmove "$window" 0 0 windowsize "$window" 1280 720 sleep 0.6
 ok "the window opens on an empty sheet"
 
 # The shelf's places do not change with the height; the canvas begins right of it.
-drag $(place shelf heat_input) 300 220; step 1 "heat input from the shelf"
-drag $(place shelf turbine) 560 140;    step 2 "turbine from the shelf"
-drag $(place shelf generator) 700 140;  step 3 "generator from the shelf"
-drag $(place shelf condenser) 640 260;  step 4 "condenser from the shelf"
-drag $(place shelf pump) 440 330;       step 5 "pump from the shelf"
+take heat_input 300 220; step 1 "heat input from the shelf"
+take turbine 560 140;    step 2 "turbine from the shelf"
+take generator 700 140;  step 3 "generator from the shelf"
+take condenser 640 260;  step 4 "condenser from the shelf"
+take pump 440 330;       step 5 "pump from the shelf"
 
 drag $(place port Q1.steam) $(place port T1.inlet);       step 6 "steam line"
 drag $(place port T1.exhaust) $(place port C1.steam);     step 7 "exhaust line"
