@@ -3,8 +3,11 @@
 #include "engine/engine.h"
 #include "engine/circuits.h"
 #include "engine/diagnose.h"
+#include "engine/numbers.h"
 #include "plant/i18n.h"
 #include <math.h>
+
+#define MOST_TRIED 60
 
 typedef struct {
   HlPlant         *plant;
@@ -76,15 +79,43 @@ component_of (const Settle *settle, const HlAddress *address)
   return -1;
 }
 
-/* Lower yields first: same component, then same circuit, then the rest; inside each by the rank of the kind's table. */
+/* How many lines apart every component is from @from. */
+static int *
+distances (const HlModel *model, int from)
+{
+  int n = (int) hl_plant_n_components (model->plant), *distance = g_new (int, n + 1), n_queue = 0;
+  g_autofree int *queue = g_new (int, n + 1);
+  for (int c = 0; c < n; c++)
+    distance[c] = n;
+  distance[from] = 0;
+  queue[n_queue++] = from;
+  for (int at = 0; at < n_queue; at++)
+    for (int k = model->first_port[queue[at]]; k < model->first_port[queue[at] + 1]; k++)
+      {
+        const HlNode *node = hl_model_node (model, g_array_index (model->ports, HlPortNode, k).node);
+        int other = node->component == queue[at] ? node->to_component : node->component;
+        if (other < 0 || distance[other] < n)
+          continue;
+        distance[other] = distance[queue[at]] + 1;
+        queue[n_queue++] = other;
+      }
+  return distance;
+}
+
+typedef struct { HlAddress address; double order; } Candidate;
+
+/* Lower yields first: same component, then same circuit, then the rest; inside each by the rank of the kind's table, and among
+ * equals the nearest. */
 static double
-order_of (Settle *settle, const HlAddress *address, int edited)
+order_of (Settle *settle, const HlAddress *address, int edited, const int *distance)
 {
   const HlQuantityKind *kind = hl_plant_quantity_kind (settle->plant, address);
   double order = kind != NULL ? kind->yield_rank : 50.0;
   int component = component_of (settle, address);
   if (edited < 0)
     return order;
+  if (component >= 0)
+    order += (double) distance[component] / (hl_plant_n_components (settle->plant) + 1);
   if (component == edited)
     return order - 2000.0;
   if (settle->circuits == NULL)
@@ -117,30 +148,66 @@ replace (Settle *settle, const HlAddress *address, const HlValue *value)
   return TRUE;
 }
 
+static int
+compare_candidates (gconstpointer a, gconstpointer b)
+{
+  const Candidate *first = a, *second = b;
+  return first->order < second->order ? -1 : first->order > second->order ? 1 : 0;
+}
+
+/* Assumed values of the over-determined part, the first to yield first. */
+static GArray *
+find_candidates (Settle *settle)
+{
+  const HlModel *model = settle->model;
+  GArray *candidates = g_array_new (FALSE, FALSE, sizeof (Candidate));
+  g_autoptr (GArray) specs = hl_diagnose_surplus (model, settle->structure->over, settle->structure->n_over);
+  int edited = edited_component (settle);
+  g_autofree int *distance = edited >= 0 ? distances (model, edited) : NULL;
+  for (guint k = 0; k < specs->len; k++)
+    {
+      const HlSpec *spec = hl_system_spec (model->system, g_array_index (specs, int, k));
+      if (spec->origin != HL_ORIGIN_ASSUMED || is_edited (settle, spec))
+        continue;
+      Candidate candidate = { spec->address, order_of (settle, &spec->address, edited, distance) };
+      g_array_append_val (candidates, candidate);
+    }
+  g_array_sort (candidates, compare_candidates);
+  return candidates;
+}
+
+/* The structure says that a value may go; only numbers say whether what is left still settles everything: where all flows hang
+ * on one of them, a value far away may look as good as one near by.  Nothing to say while more is to be settled. */
+static gboolean
+holds_in_numbers (HlPlant *plant)
+{
+  g_autoptr (HlModel) model = hl_model_new (plant);
+  g_autoptr (HlStructure) structure = hl_structure_new (model->system);
+  if (structure->n_over > 0 || structure->n_missing > 0 || model->open_ports->len > 0)
+    return TRUE;
+  HlNumbers numbers;
+  hl_numbers_solve (model->system, structure, &numbers);
+  g_free (numbers.is_known);
+  return numbers.failed == HL_FAILED_NOT;
+}
+
 /* Lets one assumed value of the over-determined part go.  FALSE when none can. */
 static gboolean
 yield_one (Settle *settle)
 {
-  const HlModel *model = settle->model;
-  g_autoptr (GArray) specs = hl_diagnose_surplus (model, settle->structure->over, settle->structure->n_over);
-  int edited = edited_component (settle), best = -1;
-  double best_order = INFINITY;
-  for (guint k = 0; k < specs->len; k++)
-    {
-      int index = g_array_index (specs, int, k);
-      const HlSpec *spec = hl_system_spec (model->system, index);
-      if (spec->origin != HL_ORIGIN_ASSUMED || is_edited (settle, spec))
-        continue;
-      double order = order_of (settle, &spec->address, edited);
-      if (order < best_order)
-        {
-          best_order = order;
-          best = index;
-        }
-    }
-  if (best < 0)
+  g_autoptr (GArray) candidates = find_candidates (settle);
+  if (candidates->len == 0)
     return FALSE;
-  HlAddress address = hl_system_spec (model->system, best)->address;
+  guint best = 0;
+  for (guint k = 0; k < MIN (candidates->len, MOST_TRIED); k++)
+    {
+      g_autoptr (HlPlant) without = hl_plant_with_value (settle->plant, &g_array_index (candidates, Candidate, k).address, NULL, NULL);
+      if (without == NULL || !holds_in_numbers (without))
+        continue;
+      best = k;
+      break;
+    }
+  HlAddress address = g_array_index (candidates, Candidate, best).address;
   say (settle, &address, FALSE);
   return replace (settle, &address, NULL);
 }
