@@ -50,6 +50,39 @@ test_pictures_of_plants_are_clean (void)
     }
 }
 
+/* Those that come with the program, whatever their number. */
+static void
+test_pictures_of_example_plants_are_clean (void)
+{
+  g_autofree char *folder = g_test_build_filename (G_TEST_DIST, "..", "data", "examples", NULL);
+  g_autoptr (GDir) dir = g_dir_open (folder, 0, NULL);
+  const char *name;
+  guint n = 0;
+  g_assert_nonnull (dir);
+  while ((name = g_dir_read_name (dir)) != NULL)
+    {
+      g_autofree char *path = g_build_filename (folder, name, NULL);
+      g_autoptr (GError) error = NULL;
+      g_autoptr (HlPlant) plant = NULL;
+      g_autoptr (HlSolution) solution = NULL;
+      if (!g_str_has_suffix (name, ".heatloom"))
+        continue;
+      plant = hl_plant_load (path, &error);
+      g_assert_no_error (error);
+      solution = hl_solve (plant, NULL);
+      test_assert_solved (solution);
+      for (guint i = 0; i < G_N_ELEMENTS (diagram_sizes); i++)
+        {
+          g_autoptr (HlStateDiagram) diagram = hl_state_diagram_new (solution, hl_plant_units (plant), diagram_sizes[i].width, diagram_sizes[i].height);
+          check_diagram (diagram);
+          g_assert_cmpuint (n_without_number (diagram), ==, 0);
+          g_assert_cmpuint (diagram->marks->len, >, 2);
+        }
+      n++;
+    }
+  g_assert_cmpuint (n, >=, 3);
+}
+
 static void
 test_every_stream_of_the_cycle_is_found_at_its_state (void)
 {
@@ -167,6 +200,7 @@ main (int argc, char **argv)
 {
   g_test_init (&argc, &argv, NULL);
   g_test_add_func ("/draw/state-diagram-plants/pictures-are-clean", test_pictures_of_plants_are_clean);
+  g_test_add_func ("/draw/state-diagram-plants/pictures-of-examples-are-clean", test_pictures_of_example_plants_are_clean);
   g_test_add_func ("/draw/state-diagram-plants/every-stream-is-found", test_every_stream_of_the_cycle_is_found_at_its_state);
   g_test_add_func ("/draw/state-diagram-plants/cooling-water-stays-out", test_cooling_water_stays_out);
   g_test_add_func ("/draw/state-diagram-plants/processes-join-their-states", test_processes_join_the_states_of_their_streams);
