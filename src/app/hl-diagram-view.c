@@ -314,7 +314,7 @@ hl_diagram_view_allocate (GtkWidget *widget, int width, int height, int baseline
   GtkRequisition size;
 
   gtk_widget_get_preferred_size (self->readout, NULL, &size);
-  place (self->readout, MAX (0, width - size.width - 8), 6);
+  place (self->readout, MIN (56, MAX (0, width - size.width)), 8);        /* cold and hot at once: no state lies there */
   gtk_widget_get_preferred_size (self->empty, NULL, &size);
   place (self->empty, MAX (0, (width - size.width) / 2), MAX (0, (height - size.height) / 2));
 }
