@@ -10,6 +10,8 @@
 /* The options that take a file name, which may be "-". */
 static const char *const file_options[] = { "json", "csv", "drawing", "diagram", NULL };
 
+#define LONGEST_INPUT (17u << 20)
+
 static HlPlant *
 load_plant (const char *path, GError **error)
 {
@@ -19,7 +21,8 @@ load_plant (const char *path, GError **error)
   g_autoptr(GString) text = g_string_new (NULL);
   char block[65536];
   gsize n;
-  while ((n = fread (block, 1, sizeof block, stdin)) > 0)
+  /* Beyond what any plant needs, the reader refuses what it has got. */
+  while (text->len <= LONGEST_INPUT && (n = fread (block, 1, sizeof block, stdin)) > 0)
     g_string_append_len (text, block, (gssize) n);
   if (ferror (stdin))
     {

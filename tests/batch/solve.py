@@ -141,6 +141,10 @@ def test_the_plant_in_the_docs_solves():
     assert json.loads(batch("solve", "-", "--json", "-", stdin=text)[0])["solved"]
 
 
+def test_input_without_end_is_refused():
+    refused("solve", "-", stdin=" " * (20 << 20), status=3, says="larger than")
+
+
 def test_every_output_goes_to_files():
     out, err = batch("solve", plant("loop.heatloom"), "--json", "ö.json", "--csv", "a.csv", "--drawing", "a.svg",
                      "--diagram", "ts", "ts.svg")
