@@ -22,7 +22,7 @@ relative (const Balance *balance)
 static double
 own (const HlSolution *solution, int component, const char *key)
 {
-  int var = hl_model_own_var (solution->model, component, g_intern_string (key));
+  int var = hl_model_own_var (solution->model, component, key);
   return var >= 0 && solution->numbers.is_known[solution->model->system->root[var]] ? hl_system_value (solution->model->system, var) : 0.0;
 }
 
@@ -32,7 +32,7 @@ book_doors (const HlSolution *solution, int c, Balance *mass, Balance *energy)
 {
   const HlModel *model = solution->model;
   const char *kind = hl_plant_component (solution->plant, (guint) c)->kind->id;
-  gboolean is_cooled = hl_model_port_node (model, c, g_intern_static_string ("cooling_inlet")) >= 0;
+  gboolean is_cooled = hl_model_port_node (model, c, "cooling_inlet") >= 0;
   if (g_str_equal (kind, "heat_input") || g_str_equal (kind, "boiler"))
     book (energy, own (solution, c, "heat"));
   else if (g_str_equal (kind, "turbine"))
@@ -45,7 +45,7 @@ book_doors (const HlSolution *solution, int c, Balance *mass, Balance *energy)
     book (energy, -own (solution, c, "heat"));
   else if (g_str_equal (kind, "steam_user"))
     {
-      int out = hl_model_port_node (model, c, g_intern_static_string ("condensate"));
+      int out = hl_model_port_node (model, c, "condensate");
       book (mass, -own (solution, c, "lost_flow"));
       book (energy, -own (solution, c, "heat"));
       if (out >= 0)

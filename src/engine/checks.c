@@ -8,14 +8,14 @@
 const HlNodeResult *
 hl_check_port (const HlChecker *checker, const char *port)
 {
-  int node = hl_model_port_node (checker->model, checker->index, g_intern_string (port));
+  int node = hl_model_port_node (checker->model, checker->index, port);
   return node >= 0 ? &checker->states[node] : NULL;
 }
 
 gboolean
 hl_check_own (const HlChecker *checker, const char *key, double *value)
 {
-  int var = hl_model_own_var (checker->model, checker->index, g_intern_string (key));
+  int var = hl_model_own_var (checker->model, checker->index, key);
   if (var < 0 || !checker->is_known[checker->model->system->root[var]])
     return FALSE;
   *value = hl_system_value (checker->model->system, var);
@@ -104,9 +104,9 @@ check_credible (HlChecker *checker)
   for (guint k = 0; k < component->values.n; k++)
     {
       const HlValueEntry *entry = &component->values.entries[k];
-      const HlQuantityKind *kind = hl_component_quantity_kind (component, entry->key);
       double value = entry->value.value;
-      if (kind == NULL || entry->value.origin != HL_ORIGIN_GIVEN || !(value < kind->credible_low || value > kind->credible_high))
+      const HlQuantityKind *kind = entry->value.origin == HL_ORIGIN_GIVEN ? hl_component_quantity_kind (component, entry->key) : NULL;
+      if (kind == NULL || !(value < kind->credible_low || value > kind->credible_high))
         continue;
       HlAddress address = hl_address_component (component->id, entry->key);
       g_autofree char *name = hl_plant_describe (checker->model->plant, &address);

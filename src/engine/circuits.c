@@ -11,21 +11,31 @@ find (int *circuits, int node)
   return node;
 }
 
+/* Side of an exchanger that a port belongs to; "inlet#" in the table stands for "inlet1", "inlet2" ... */
+static int
+side_of (const HlKind *kind, const char *key)
+{
+  for (guint k = 0; k < kind->n_ports; k++)
+    {
+      const char *name = kind->ports[k].key;
+      gsize length = strcspn (name, "#");
+      if (strncmp (name, key, length) == 0 && (name[length] == '#' ? g_ascii_isdigit (key[length]) : key[length] == '\0'))
+        return kind->ports[k].side_circuit;
+    }
+  return 0;
+}
+
 /* Nodes at the connected ports of a component. */
 static int
-nodes_of (const HlModel *model, int component, int *nodes, const HlPortKind **kinds, int most)
+nodes_of (const HlModel *model, int component, int *nodes, int *sides, int most)
 {
-  const HlComponent *c = hl_plant_component (model->plant, (guint) component);
-  guint n_ports = hl_component_n_ports (c);
+  const HlKind *kind = hl_plant_component (model->plant, (guint) component)->kind;
   int n = 0;
-  for (guint k = 0; k < n_ports && n < most; k++)
+  for (int k = model->first_port[component]; k < model->first_port[component + 1] && n < most; k++)
     {
-      HlPort port = hl_component_port (c, k);
-      int node = hl_model_port_node (model, component, port.key);
-      if (node < 0)
-        continue;
-      kinds[n] = port.kind;
-      nodes[n++] = node;
+      const HlPortNode *port = &g_array_index (model->ports, HlPortNode, k);
+      sides[n] = side_of (kind, port->key);
+      nodes[n++] = port->node;
     }
   return n;
 }
@@ -34,15 +44,15 @@ int *
 hl_circuits (const HlModel *model)
 {
   int *circuits = g_new (int, model->nodes->len + 1), nodes[64];
-  const HlPortKind *kinds[64];
+  int sides[64];
   for (guint k = 0; k < model->nodes->len; k++)
     circuits[k] = (int) k;
   for (guint c = 0; c < hl_plant_n_components (model->plant); c++)
     {
-      int n = nodes_of (model, (int) c, nodes, kinds, 64);
+      int n = nodes_of (model, (int) c, nodes, sides, 64);
       for (int a = 0; a < n; a++)
         for (int b = a + 1; b < n; b++)
-          if (kinds[a]->side_circuit == kinds[b]->side_circuit)
+          if (sides[a] == sides[b])
             circuits[find (circuits, nodes[b])] = find (circuits, nodes[a]);
     }
   for (guint k = 0; k < model->nodes->len; k++)
@@ -54,8 +64,8 @@ gboolean
 hl_circuits_shared (const HlModel *model, const int *circuits, int a, int b)
 {
   int nodes_a[64], nodes_b[64];
-  const HlPortKind *kinds[64];
-  int n_a = nodes_of (model, a, nodes_a, kinds, 64), n_b = nodes_of (model, b, nodes_b, kinds, 64);
+  int sides[64];
+  int n_a = nodes_of (model, a, nodes_a, sides, 64), n_b = nodes_of (model, b, nodes_b, sides, 64);
   for (int i = 0; i < n_a; i++)
     for (int j = 0; j < n_b; j++)
       if (circuits[nodes_a[i]] == circuits[nodes_b[j]])
@@ -69,14 +79,13 @@ hl_circuits_service (const HlModel *model, const int *circuits)
   guint n = model->nodes->len;
   gboolean *is_service = g_new0 (gboolean, n + 1);
   g_autofree gboolean *is_cooling = g_new0 (gboolean, n + 1), *is_working = g_new0 (gboolean, n + 1);
-  const char *inlet = g_intern_static_string ("cooling_inlet"), *outlet = g_intern_static_string ("cooling_outlet");
   for (guint c = 0; c < hl_plant_n_components (model->plant); c++)
     {
       gboolean is_turbine = hl_plant_component (model->plant, c)->kind->shaft == HL_SHAFT_DRIVES;
       for (int k = model->first_port[c]; k < model->first_port[c + 1]; k++)
         {
           const HlPortNode *port = &g_array_index (model->ports, HlPortNode, k);
-          if (port->key == inlet || port->key == outlet)
+          if (g_str_equal (port->key, "cooling_inlet") || g_str_equal (port->key, "cooling_outlet"))
             is_cooling[circuits[port->node]] = TRUE;
           else if (is_turbine)
             is_working[circuits[port->node]] = TRUE;

@@ -78,7 +78,7 @@ find_leaks (const HlModel *model, HlFindings *findings)
     }
   for (guint c = 0; c < hl_plant_n_components (model->plant); c++)
     {
-      int lost = hl_model_own_var (model, (int) c, g_intern_static_string ("lost_flow"));
+      int lost = hl_model_own_var (model, (int) c, "lost_flow");
       if (lost < 0 || sum[system->root[lost]] == 0)
         continue;
       int g = group[system->root[lost]];

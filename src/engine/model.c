@@ -33,10 +33,10 @@ static HlAddress
 state_address (const HlModel *model, const HlNode *node, const char *letter)
 {
   if (node->stream >= 0)
-    return hl_address_stream (hl_plant_stream (model->plant, (guint) node->stream)->id, g_intern_static_string (letter));
+    return (HlAddress) { HL_OWNER_STREAM, hl_plant_stream (model->plant, (guint) node->stream)->id, letter };
   char key[128];
   g_snprintf (key, sizeof key, "%s.%s", node->port, letter);
-  return hl_address_component (hl_plant_component (model->plant, (guint) node->component)->id, g_intern_string (key));
+  return (HlAddress) { HL_OWNER_COMPONENT, hl_plant_component (model->plant, (guint) node->component)->id, g_intern_string (key) };
 }
 
 static void
@@ -91,16 +91,23 @@ add_streams (HlModel *model)
       }
 }
 
+/* Keys are short and few at each component: comparing them is quicker than looking their atoms up. */
+static gboolean
+same (const char *a, const char *b)
+{
+  return a == b || strcmp (a, b) == 0;
+}
+
 int
 hl_model_port_node (const HlModel *model, int component, const char *port)
 {
   for (int k = model->first_port[component]; k < model->first_port[component + 1]; k++)
-    if (g_array_index (model->ports, HlPortNode, k).key == port)
+    if (same (g_array_index (model->ports, HlPortNode, k).key, port))
       return g_array_index (model->ports, HlPortNode, k).node;
   for (guint k = hl_plant_n_streams (model->plant); k < model->nodes->len; k++)
     {
       const HlNode *node = hl_model_node (model, (int) k);
-      if (node->component == component && node->port == port)
+      if (node->component == component && same (node->port, port))
         return (int) k;
     }
   return -1;
@@ -111,7 +118,7 @@ hl_model_own_var (const HlModel *model, int component, const char *key)
 {
   int place = component < 0 ? N_COMPONENTS (model) : component;
   for (int k = model->first_own[place]; k < model->first_own[place + 1]; k++)
-    if (g_array_index (model->own, HlOwn, k).key == key)
+    if (same (g_array_index (model->own, HlOwn, k).key, key))
       return g_array_index (model->own, HlOwn, k).var;
   return -1;
 }
@@ -189,9 +196,18 @@ hl_model_find_var (const HlModel *model, const HlAddress *address)
 
 /* --- what components call ------------------------------------------------------ */
 
+#define NINE(base) { base, { base "1", base "2", base "3", base "4", base "5", base "6", base "7", base "8", base "9" } }
+
 const char *
 hl_key (const char *base, int number)
 {
+  static const struct { const char *base, *keys[9]; } usual[] = {
+    NINE ("extraction"), NINE ("inlet"), NINE ("outlet"), NINE ("group_efficiency"), NINE ("fraction"),
+    NINE ("cold_reheat"), NINE ("hot_reheat"), NINE ("reheat_pressure_loss"), NINE ("reheat_heat"),
+  };
+  for (guint k = 0; k < G_N_ELEMENTS (usual) && number >= 1 && number <= 9; k++)
+    if (g_str_equal (usual[k].base, base))
+      return usual[k].keys[number - 1];
   char key[64];
   g_snprintf (key, sizeof key, "%s%d", base, number);
   return g_intern_string (key);
@@ -201,9 +217,8 @@ int
 hl_emit_optional (HlEmit *emit, const char *key)
 {
   const HlModel *model = emit->model;
-  key = g_intern_string (key);
   for (int k = model->first_port[emit->index]; k < model->first_port[emit->index + 1]; k++)
-    if (g_array_index (model->ports, HlPortNode, k).key == key)
+    if (same (g_array_index (model->ports, HlPortNode, k).key, key))
       return g_array_index (model->ports, HlPortNode, k).node;
   return -1;
 }
@@ -214,9 +229,8 @@ hl_emit_port (HlEmit *emit, const char *key)
   int node = hl_emit_optional (emit, key);
   if (node >= 0)
     return node;
-  key = g_intern_string (key);
   for (guint k = hl_plant_n_streams (emit->model->plant); k < emit->model->nodes->len; k++)
-    if (hl_model_node (emit->model, (int) k)->component == emit->index && hl_model_node (emit->model, (int) k)->port == key)
+    if (hl_model_node (emit->model, (int) k)->component == emit->index && same (hl_model_node (emit->model, (int) k)->port, key))
       return (int) k;
   HlNode open = { .stream = -1, .component = emit->index, .to_component = -1, .port = key, .fluid = hl_fluid_water () };
   HlAddress address = hl_address_component (emit->component->id, open.port);
@@ -228,15 +242,14 @@ hl_emit_port (HlEmit *emit, const char *key)
 int
 hl_emit_hidden (HlEmit *emit, const char *key, HlVarKind kind)
 {
-  HlAddress address = emit->component != NULL ? hl_address_component (emit->component->id, g_intern_string (key))
-                                              : hl_address_plant (g_intern_string (key));
+  HlAddress address = { emit->component != NULL ? HL_OWNER_COMPONENT : HL_OWNER_PLANT, emit->component != NULL ? emit->component->id : "", key };
   return hl_system_add_var (emit->system, kind, address, NAN);
 }
 
 int
 hl_emit_own (HlEmit *emit, const char *key, HlVarKind kind)
 {
-  HlOwn own = { g_intern_string (key), -1 };
+  HlOwn own = { key, -1 };
   own.var = hl_emit_hidden (emit, own.key, kind);
   g_array_append_val (emit->model->own, own);
   return own.var;
@@ -253,10 +266,9 @@ hl_emit_constant (HlEmit *emit, HlVarKind kind, double value)
 static const HlValue *
 value_of (HlEmit *emit, const char *key)
 {
-  key = g_intern_string (key);
   const HlValues *values = &emit->component->values;
   for (guint k = 0; k < values->n; k++)
-    if (values->entries[k].key == key)
+    if (same (values->entries[k].key, key))
       return &values->entries[k].value;
   return NULL;
 }
@@ -386,10 +398,30 @@ want_var (HlModel *model, const HlAddress *address, gboolean drives)
   return hl_model_find_var (model, address);
 }
 
-static void
-add_value (HlModel *model, HlAddress address, const HlValue *value)
+/* The same where the component's or stream's place is known already. */
+static int
+want_own_var (HlModel *model, int component, int stream, const char *key)
 {
-  int var = want_var (model, &address, TRUE);
+  if (stream >= 0)
+    return state_var (model, stream, key[0], TRUE);
+  const char *dot = component >= 0 ? strchr (key, '.') : NULL;
+  if (dot == NULL)
+    return hl_model_own_var (model, component, key);
+  gsize length = (gsize) (dot - key);
+  for (int k = model->first_port[component]; k < model->first_port[component + 1]; k++)
+    {
+      const HlPortNode *port = &g_array_index (model->ports, HlPortNode, k);
+      if (strncmp (port->key, key, length) == 0 && port->key[length] == '\0')
+        return state_var (model, port->node, dot[1], TRUE);
+    }
+  HlAddress address = { HL_OWNER_COMPONENT, hl_plant_component (model->plant, (guint) component)->id, key };
+  return want_var (model, &address, TRUE);
+}
+
+static void
+add_value (HlModel *model, HlAddress address, int component, int stream, const HlValue *value)
+{
+  int var = want_own_var (model, component, stream, address.key);
   if (var < 0)
     return;
   HlSystem *system = model->system;
@@ -419,18 +451,18 @@ add_values (HlModel *model)
       for (guint k = 0; k < component->values.n; k++)
         {
           const HlValueEntry *entry = &component->values.entries[k];
-          add_value (model, (HlAddress) { HL_OWNER_COMPONENT, component->id, entry->key }, &entry->value);
+          add_value (model, (HlAddress) { HL_OWNER_COMPONENT, component->id, entry->key }, c, -1, &entry->value);
         }
     }
   for (guint i = 0; i < hl_plant_n_streams (model->plant); i++)
     {
       const HlStream *stream = hl_plant_stream (model->plant, i);
       for (guint k = 0; k < stream->values.n; k++)
-        add_value (model, (HlAddress) { HL_OWNER_STREAM, stream->id, stream->values.entries[k].key }, &stream->values.entries[k].value);
+        add_value (model, (HlAddress) { HL_OWNER_STREAM, stream->id, stream->values.entries[k].key }, -1, (int) i, &stream->values.entries[k].value);
     }
   const HlValues *values = hl_plant_values (model->plant);
   for (guint k = 0; k < values->n; k++)
-    add_value (model, (HlAddress) { HL_OWNER_PLANT, g_intern_static_string (""), values->entries[k].key }, &values->entries[k].value);
+    add_value (model, (HlAddress) { HL_OWNER_PLANT, g_intern_static_string (""), values->entries[k].key }, -1, -1, &values->entries[k].value);
 }
 
 static gboolean
@@ -515,7 +547,7 @@ add_shafts (HlModel *model)
             continue;
           HlShaftRole role = hl_plant_component (plant, (guint) c)->kind->shaft;
           const char *key = role == HL_SHAFT_GENERATOR ? "shaft_power" : "power";
-          int var = hl_model_own_var (model, c, g_intern_static_string (key));
+          int var = hl_model_own_var (model, c, key);
           if (var < 0)
             continue;
           vars[n] = var;

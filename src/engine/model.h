@@ -64,7 +64,7 @@ int hl_model_find_var  (const HlModel *model, const HlAddress *address);
 /* Node and state letter of an address that names a state; FALSE for others. */
 gboolean hl_model_find_state (const HlModel *model, const HlAddress *address, int *node, char *letter);
 
-/* For components: what they are made of.  All keys are interned. */
+/* For components: what they are made of.  Keys live as long as the program: literals, or from hl_key(). */
 typedef struct {
   HlModel           *model;
   HlSystem          *system;
@@ -79,7 +79,7 @@ int      hl_emit_hidden    (HlEmit *emit, const char *key, HlVarKind kind);   /*
 int      hl_emit_constant  (HlEmit *emit, HlVarKind kind, double value);
 gboolean hl_emit_has_value (HlEmit *emit, const char *key);
 gboolean hl_emit_is_fixed_at (HlEmit *emit, const char *key, double value);   /* given or assumed as exactly this */
-const char *hl_key         (const char *base, int number);                 /* interned "extraction2" */
+const char *hl_key         (const char *base, int number);                 /* "extraction2" */
 int      hl_emit_T         (HlEmit *emit, int node, gboolean drives);
 void     hl_emit_sum       (HlEmit *emit, HlSum sum, int var);
 void     hl_emit_guess     (HlEmit *emit, int node, double h);

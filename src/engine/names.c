@@ -43,6 +43,7 @@ HlAddress
 hl_name_address (const HlModel *model, int var)
 {
   HlAddress address = hl_system_var (model->system, var)->address, better;
+  address.key = g_intern_string (address.key);
   if (address.owner != HL_OWNER_STREAM)
     return address;
   int stream = hl_plant_stream_index (model->plant, address.id);

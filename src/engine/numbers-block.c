@@ -20,7 +20,7 @@ struct _HlBlockWork {
   int       n;                    /* of the present block */
   const int *equations, *vars;
   int      *column_of;            /* [n vars] column in the present block; -1 */
-  double   *x, *x_try, *f, *step, *unit;
+  double   *x, *x_try, *f, *f_try, *step, *unit;
   double   *dense;
   int      *pivot;
   /* KLU */
@@ -74,7 +74,7 @@ reserve (HlBlockWork *w, int n)
   if (n <= w->capacity)
     return;
   w->capacity = n;
-  w->x = g_realloc_n (w->x, 5 * (gsize) n, sizeof (double));
+  w->x = g_realloc_n (w->x, 6 * (gsize) n, sizeof (double));
   w->dense = g_realloc_n (w->dense, n <= DENSE_MOST ? (gsize) n * (gsize) n : DENSE_MOST * DENSE_MOST, sizeof (double));
   w->pivot = g_realloc_n (w->pivot, (gsize) n, sizeof (int));
 }
@@ -144,6 +144,7 @@ begin (HlBlockWork *w, const int *equations, const int *vars, int n)
   w->f = w->x + 2 * n;
   w->step = w->x + 3 * n;
   w->unit = w->x + 4 * n;
+  w->f_try = w->x + 5 * n;
   for (int i = 0; i < n; i++)
     {
       w->column_of[vars[i]] = i;
@@ -306,6 +307,7 @@ iterate (HlBlockWork *w, HlNumbers *numbers)
         return largest <= GOOD_ENOUGH ? HL_FAILED_NOT : HL_FAILED_SINGULAR;
       if (largest <= DONE)
         return HL_FAILED_NOT;
+      /* The first trial is mostly the one taken, so its derivatives come along. */
       double t = step_cap (w), moved = 0.0;
       gboolean accepted = FALSE;
       for (int half = 0; half < 25 && !accepted; half++, t *= 0.5)
@@ -316,14 +318,14 @@ iterate (HlBlockWork *w, HlNumbers *numbers)
               w->x_try[i] = w->x[i] + t * w->step[i] * w->unit[i];
               moved = fmax (moved, t * fabs (w->step[i]));
             }
-          double f_try[n];
-          accepted = evaluate (w, w->x_try, FALSE, f_try, numbers) && merit_of (f_try, n) < merit * (1.0 - 1e-4 * t);
+          accepted = evaluate (w, w->x_try, TRUE, w->f_try, numbers) && merit_of (w->f_try, n) < merit * (1.0 - 1e-4 * t);
         }
+      if (!accepted && largest > GOOD_ENOUGH)
+        return w->n_lifted > 0 ? HL_FAILED_SINGULAR : HL_FAILED_STEPS;
       if (!accepted)
-        return largest <= GOOD_ENOUGH ? HL_FAILED_NOT : w->n_lifted > 0 ? HL_FAILED_SINGULAR : HL_FAILED_STEPS;
+        return evaluate (w, w->x, TRUE, w->f, numbers) && newton_step (w) ? HL_FAILED_NOT : HL_FAILED_STEPS;
       memcpy (w->x, w->x_try, sizeof (double) * (gsize) n);
-      if (!evaluate (w, w->x, TRUE, w->f, numbers))
-        return HL_FAILED_STEPS;
+      memcpy (w->f, w->f_try, sizeof (double) * (gsize) n);
       largest = largest_of (w->f, n, &worst);
       merit = merit_of (w->f, n);
       if (moved <= 1e-13 && largest <= GOOD_ENOUGH)

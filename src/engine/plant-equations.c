@@ -66,8 +66,8 @@ fuel_heat_hhv (HlEmit *emit)
   double factors[HL_EQUATION_MOST / 2], minus = -1.0;
   for (int c = 0; c < n_components && n < HL_EQUATION_MOST / 2 - 2; c++)
     {
-      int heat = hl_model_own_var (model, c, g_intern_static_string ("fuel_heat"));
-      int ratio = hl_model_own_var (model, c, g_intern_static_string ("fuel_hhv_ratio"));
+      int heat = hl_model_own_var (model, c, "fuel_heat");
+      int ratio = hl_model_own_var (model, c, "fuel_hhv_ratio");
       if (heat < 0 || ratio < 0)
         continue;
       vars[2 * n] = heat;

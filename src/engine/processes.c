@@ -6,7 +6,7 @@
 int
 hl_process_node (const HlProcessSink *sink, const char *port)
 {
-  return hl_model_port_node (sink->model, sink->index, g_intern_string (port));
+  return hl_model_port_node (sink->model, sink->index, port);
 }
 
 void

@@ -79,7 +79,7 @@ worst_moisture (const HlSolution *solution, double *value)
   *value = 0.0;
   for (guint c = 0; c < hl_plant_n_components (model->plant); c++)
     {
-      int var = hl_model_own_var (model, (int) c, g_intern_static_string ("exhaust_moisture"));
+      int var = hl_model_own_var (model, (int) c, "exhaust_moisture");
       if (var < 0 || !solution->numbers.is_known[model->system->root[var]])
         continue;
       *value = fmax (*value, hl_system_value (model->system, var));
@@ -98,7 +98,7 @@ hl_results_plant (HlSolution *solution)
   for (guint k = 0; k < n; k++)
     {
       double value;
-      int var = hl_model_own_var (model, -1, g_intern_static_string (kinds[k].key));
+      int var = hl_model_own_var (model, -1, kinds[k].key);
       if (var >= 0)
         {
           if (solution->numbers.is_known[model->system->root[var]])
