@@ -2,7 +2,6 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "draw/free-space.h"
 #include "draw/router.h"
-#include <math.h>
 #include <stdlib.h>
 
 #define TILE 96.0    /* pixels */
@@ -99,12 +98,20 @@ hl_free_space_close (HlFreeSpace *space)
 
 typedef struct { int left, top, right, bottom; } GridBox;    /* grid points inside, ends included */
 
-static GridBox
+/* floor() as a call costs more than the rest of a question. */
+static inline int
+round_down (double x)
+{
+  int n = (int) x;
+  return n - (x < n);
+}
+
+static inline GridBox
 grid_inside (const HlBox *box, double margin)
 {
   GridBox inside = {
-    (int) ceil ((box->x - margin) / HL_UNIT), (int) ceil ((box->y - margin) / HL_UNIT),
-    (int) floor ((box->x + box->width + margin) / HL_UNIT), (int) floor ((box->y + box->height + margin) / HL_UNIT) };
+    -round_down ((margin - box->x) / HL_UNIT), -round_down ((margin - box->y) / HL_UNIT),
+    round_down ((box->x + box->width + margin) / HL_UNIT), round_down ((box->y + box->height + margin) / HL_UNIT) };
   return inside;
 }
 

@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "draw/layout-private.h"
 #include <math.h>
+#include <string.h>
 
 /* Prices.  Covering a symbol or other words is what must not happen, covering a foreign line what should not. */
 #define PRICE_SYMBOL   2000.0    /* a grid point of a symbol */
@@ -102,44 +103,46 @@ typedef struct {
   HlFreeSpace       *space;
   const HlGridPoint *way;
   guint              n_way;
-  HlBox              size;
-  HlBox              best;
-  double             best_price;
-  gboolean           has_leader;
-  HlPoint            leader[2];
-  gboolean           has_kept;
-  HlBox              kept;         /* its place before */
+  double             width, height;
+  HlLabelSpot        best;
+  const HlBox       *kept;         /* its place before, or NULL */
 } LabelSearch;
 
-typedef enum { ON_ACROSS, ON_DOWN, BESIDE } LabelFit;    /* ON: the label interrupts its line, which runs through it once */
+/* Base price and what the label covers, given up once above @limit. */
+static double
+price_of_spot (const LabelSearch *search, const HlBox *box, double base, HlLabelFit fit, double limit)
+{
+  double price = base + PRICE_SYMBOL * hl_free_space_boxes (search->space, box, SYMBOL_MARGIN);
+  int own, others;
+  if (price >= limit)
+    return price;
+  own = hl_count_line_points (search->way, search->n_way, box, LINE_MARGIN);
+  others = hl_free_space_lines (search->space, box, LINE_MARGIN) - own;
+  if (fit != HL_FIT_BESIDE)    /* what the label must cover of its own line is no fault */
+    own -= (int) (((fit == HL_FIT_ON_ACROSS ? box->width : box->height) + 2.0 * LINE_MARGIN) / HL_UNIT) + 1;
+  price += PRICE_LINE * MAX (others, 0) + PRICE_OWN_LINE * MAX (own, 0);
+  if (price >= limit)
+    return price;
+  return price + PRICE_WORDS * hl_free_space_taken (search->space, box, WORDS_MARGIN);
+}
 
 static void
-try_label (LabelSearch *search, double x, double y, double price, LabelFit fit, const HlPoint *leader)
+try_label (LabelSearch *search, double x, double y, double base, HlLabelFit fit, const HlPoint *leader)
 {
-  HlBox box = { x, y, search->size.width, search->size.height };
-  int own, others;
-  if (search->has_kept && fabs (x - search->kept.x) < 5.0 && fabs (y - search->kept.y) < 5.0)
-    price -= KEPT;
-  if (price >= search->best_price)
+  HlBox box = { x, y, search->width, search->height };
+  double price;
+  if (search->kept != NULL && fabs (x - search->kept->x) < 5.0 && fabs (y - search->kept->y) < 5.0)
+    base -= KEPT;
+  if (base >= search->best.price)
     return;
-  price += PRICE_SYMBOL * hl_free_space_boxes (search->space, &box, SYMBOL_MARGIN);
-  own = hl_count_line_points (search->way, search->n_way, &box, LINE_MARGIN);
-  others = hl_free_space_lines (search->space, &box, LINE_MARGIN) - own;
-  if (fit != BESIDE)    /* what the label must cover of its own line is no fault */
-    own -= (int) floor (((fit == ON_ACROSS ? box.width : box.height) + 2.0 * LINE_MARGIN) / HL_UNIT) + 1;
-  price += PRICE_LINE * MAX (others, 0) + PRICE_OWN_LINE * MAX (own, 0);
-  if (price >= search->best_price)
+  price = price_of_spot (search, &box, base, fit, search->best.price);
+  if (price >= search->best.price)
     return;
-  price += PRICE_WORDS * hl_free_space_taken (search->space, &box, WORDS_MARGIN);
-  if (price >= search->best_price)
-    return;
-  search->best_price = price;
-  search->best = box;
-  search->has_leader = leader != NULL;
+  search->best = (HlLabelSpot) { .box = box, .base = base, .price = price, .fit = fit, .has_leader = leader != NULL };
   if (leader != NULL)
     {
-      search->leader[0] = leader[0];
-      search->leader[1] = leader[1];
+      search->best.leader[0] = leader[0];
+      search->best.leader[1] = leader[1];
     }
 }
 
@@ -149,7 +152,7 @@ try_segment (LabelSearch *search, guint n)
 {
   const HlGridPoint *a = &search->way[n], *b = &search->way[n + 1];
   gboolean is_across = a->y == b->y;
-  double width = search->size.width, height = search->size.height;
+  double width = search->width, height = search->height;
   double x = (a->x + b->x) / 2.0 * HL_UNIT, y = (a->y + b->y) / 2.0 * HL_UNIT;
   double length = (is_across ? ABS (b->x - a->x) : ABS (b->y - a->y)) * HL_UNIT;
   double along = is_across ? width : height;
@@ -161,19 +164,19 @@ try_segment (LabelSearch *search, guint n)
       double off = k * HL_UNIT, cx = is_across ? x + off : x, cy = is_across ? y : y + off;
       double price = base + 0.09 * fabs (off);
       if (fabs (off) <= room_on)
-        try_label (search, cx - width / 2.0, cy - height / 2.0, price, is_across ? ON_ACROSS : ON_DOWN, NULL);
+        try_label (search, cx - width / 2.0, cy - height / 2.0, price, is_across ? HL_FIT_ON_ACROSS : HL_FIT_ON_DOWN, NULL);
       if (fabs (off) > length / 2.0 + along / 4.0)
         continue;
       price += 14.0;
       if (is_across)
         {
-          try_label (search, cx - width / 2.0, cy - GAP - height, price, BESIDE, NULL);
-          try_label (search, cx - width / 2.0, cy + GAP, price + 2.0, BESIDE, NULL);
+          try_label (search, cx - width / 2.0, cy - GAP - height, price, HL_FIT_BESIDE, NULL);
+          try_label (search, cx - width / 2.0, cy + GAP, price + 2.0, HL_FIT_BESIDE, NULL);
         }
       else
         {
-          try_label (search, cx + GAP + 1.0, cy - height / 2.0, price, BESIDE, NULL);
-          try_label (search, cx - GAP - 1.0 - width, cy - height / 2.0, price + 2.0, BESIDE, NULL);
+          try_label (search, cx + GAP + 1.0, cy - height / 2.0, price, HL_FIT_BESIDE, NULL);
+          try_label (search, cx - GAP - 1.0 - width, cy - height / 2.0, price + 2.0, HL_FIT_BESIDE, NULL);
         }
     }
 }
@@ -193,15 +196,15 @@ price_of_leader (const LabelSearch *search, const HlPoint *leader)
 static void
 try_led (LabelSearch *search, double x, double y, int dx, int dy, double distance, double shift, double base)
 {
-  double width = search->size.width, height = search->size.height;
+  double width = search->width, height = search->height;
   HlPoint leader[2] = { { x, y }, { x + dx * distance, y + dy * distance } };
   double price = base + 0.5 * distance + 0.04 * fabs (shift);
   double left = dx == 0 ? x - width / 2.0 + shift : dx > 0 ? leader[1].x : leader[1].x - width;
   double top = dy == 0 ? y - height / 2.0 : dy > 0 ? leader[1].y : leader[1].y - height;
-  if (price >= search->best_price)
+  if (price >= search->best.price)
     return;
   price += price_of_leader (search, leader);
-  try_label (search, left, top, price, BESIDE, leader);
+  try_label (search, left, top, price, HL_FIT_BESIDE, leader);
 }
 
 /* Where there is no room at the line: further out. */
@@ -225,7 +228,7 @@ try_segment_led (LabelSearch *search, guint n)
                 continue;
               }
             for (int shift = -2; shift <= 2; shift++)
-              try_led (search, x, y, 0, side, distance, shift * search->size.width * 0.21, base);
+              try_led (search, x, y, 0, side, distance, shift * search->width * 0.21, base);
           }
     }
 }
@@ -234,7 +237,8 @@ try_segment_led (LabelSearch *search, guint n)
 static void
 lead_back (LabelSearch *search)
 {
-  const HlBox *box = &search->best;
+  HlLabelSpot *spot = &search->best;
+  const HlBox *box = &spot->box;
   double x = box->x + box->width / 2.0, y = box->y + box->height / 2.0, nearest = HUGE_VAL;
   for (guint i = 0; i + 1 < search->n_way; i++)
     {
@@ -246,9 +250,9 @@ lead_back (LabelSearch *search)
       if (distance >= nearest)
         continue;
       nearest = distance;
-      search->has_leader = distance > GAP + 4.0;
-      search->leader[0] = on;
-      search->leader[1] = edge;
+      spot->has_leader = distance > GAP + 4.0;
+      spot->leader[0] = on;
+      spot->leader[1] = edge;
     }
 }
 
@@ -257,7 +261,7 @@ search_label (LabelSearch *search)
 {
   for (guint i = 0; i + 1 < search->n_way; i++)
     try_segment (search, i);
-  if (search->best_price > TROUBLE)
+  if (search->best.price > TROUBLE)
     for (guint i = 0; i + 1 < search->n_way; i++)
       try_segment_led (search, i);
 }
@@ -283,34 +287,62 @@ take_label (const HlLayout *layout, HlFreeSpace *space, guint n, void (*act) (Hl
     }
 }
 
-/* Returns what the place costs. */
-static double
-place_label (HlLayout *layout, HlFreeSpace *space, guint n, const HlStreamPlace *before)
+static LabelSearch
+begin_search (const HlLayout *layout, HlFreeSpace *space, guint n)
 {
-  const HlStream *stream = hl_plant_stream (layout->plant, n);
-  HlStreamPlace *place = &layout->streams[n];
-  LabelSearch search = { .space = space, .size = place->label, .best = place->label, .best_price = HUGE_VAL };
+  const HlStreamPlace *place = &layout->streams[n];
+  LabelSearch search = { .space = space, .width = place->label.width, .height = place->label.height };
   search.way = (HlGridPoint *) (gpointer) layout->ways[n]->data;
   search.n_way = layout->ways[n]->len;
-  if (before != NULL && before->label.width > 0.0)
-    {
-      search.has_kept = TRUE;
-      search.kept = before->label;
-    }
+  search.best.box = place->label;
+  search.best.price = HUGE_VAL;
+  return search;
+}
+
+static void
+settle_label (HlLayout *layout, HlFreeSpace *space, guint n, const HlLabelSpot *spot)
+{
+  HlStreamPlace *place = &layout->streams[n];
+  layout->spots[n] = *spot;
+  place->label = spot->box;
+  place->has_leader = spot->has_leader;
+  place->leader[0] = spot->leader[0];
+  place->leader[1] = spot->leader[1];
+  take_label (layout, space, n, hl_free_space_take);
+}
+
+static void
+place_label (HlLayout *layout, HlFreeSpace *space, guint n, const HlBox *kept)
+{
+  const HlStream *stream = hl_plant_stream (layout->plant, n);
+  LabelSearch search = begin_search (layout, space, n);
+  search.kept = kept;
   if (stream->has_label_place)
     {
-      search.best.x = stream->label_x * HL_UNIT - place->label.width / 2.0;
-      search.best.y = stream->label_y * HL_UNIT - place->label.height / 2.0;
+      search.best.box.x = stream->label_x * HL_UNIT - search.width / 2.0;
+      search.best.box.y = stream->label_y * HL_UNIT - search.height / 2.0;
+      search.best.price = 0.0;
       lead_back (&search);
     }
   else
     search_label (&search);
-  place->label = search.best;
-  place->has_leader = search.has_leader;
-  place->leader[0] = search.leader[0];
-  place->leader[1] = search.leader[1];
-  take_label (layout, space, n, hl_free_space_take);
-  return stream->has_label_place ? 0.0 : search.best_price;
+  settle_label (layout, space, n, &search.best);
+}
+
+/* A label whose line and size are as before stays when it covers no more than it did. */
+static gboolean
+keep_label (HlLayout *layout, HlFreeSpace *space, guint n, const HlLayout *previous, guint before)
+{
+  const HlLabelSpot *spot = &previous->spots[before];
+  const GArray *way = layout->ways[n], *old = previous->ways[before];
+  LabelSearch search = begin_search (layout, space, n);
+  if (hl_plant_stream (layout->plant, n)->has_label_place || spot->box.width != search.width
+      || way->len != old->len || memcmp (way->data, old->data, way->len * sizeof (HlGridPoint)) != 0)
+    return FALSE;
+  if (price_of_spot (&search, &spot->box, spot->base, spot->fit, HUGE_VAL) > spot->price + 1.0)
+    return FALSE;
+  settle_label (layout, space, n, spot);
+  return TRUE;
 }
 
 typedef struct { guint stream; int freedom; } Turn;
@@ -350,21 +382,25 @@ hl_layout_place_words (HlLayout *layout, const HlLayout *previous)
 {
   g_autoptr (HlFreeSpace) space = chart (layout);
   g_autoptr (GArray) turns = order_labels (layout);
-  g_autofree double *prices = g_new0 (double, layout->n_streams + 1);
+  g_autofree int *before = g_new (int, layout->n_streams + 1);        /* index in @previous, -1: none */
+  g_autofree gboolean *is_kept = g_new0 (gboolean, layout->n_streams + 1);
   for (guint i = 0; i < layout->n_components; i++)
     place_title (layout, space, i);
+  for (guint i = 0; i < turns->len; i++)
+    {
+      guint n = g_array_index (turns, Turn, i).stream;
+      before[n] = previous != NULL ? hl_plant_stream_index (previous->plant, hl_plant_stream (layout->plant, n)->id) : -1;
+      is_kept[n] = before[n] >= 0 && keep_label (layout, space, n, previous, (guint) before[n]);
+    }
   /* After the first round each is placed again with all the others there; those that stand well need no more. */
   for (int round = 0; round < 4; round++)
     for (guint i = 0; i < turns->len; i++)
       {
         guint n = g_array_index (turns, Turn, i).stream;
-        int before = -1;
-        if (round > 1 && prices[n] < TROUBLE)
+        if (is_kept[n] || (round > 1 && layout->spots[n].price < TROUBLE))
           continue;
-        if (previous != NULL)
-          before = hl_plant_stream_index (previous->plant, hl_plant_stream (layout->plant, n)->id);
         if (round > 0)
           take_label (layout, space, n, hl_free_space_give_back);
-        prices[n] = place_label (layout, space, n, before >= 0 ? &previous->streams[before] : NULL);
+        place_label (layout, space, n, before[n] >= 0 && previous->streams[before[n]].label.width > 0.0 ? &previous->streams[before[n]].label : NULL);
       }
 }

@@ -7,12 +7,23 @@ G_BEGIN_DECLS
 
 typedef struct { guint n_points; HlPoint *points; HlGridPoint *grid; } HlShaftLink;   /* points in pixels, led on beneath the symbols; grid: ends at the shaft places */
 
+/* A place for a label and what it costs: @base for where it is, @price with what it covers there. */
+typedef enum { HL_FIT_ON_ACROSS, HL_FIT_ON_DOWN, HL_FIT_BESIDE } HlLabelFit;    /* ON: the label interrupts its line, which runs through it once */
+typedef struct {
+  HlBox      box;
+  double     base, price;
+  HlLabelFit fit;
+  gboolean   has_leader;
+  HlPoint    leader[2];
+} HlLabelSpot;
+
 struct _HlLayout {
   gatomicrefcount   ref_count;
   HlPlant          *plant;
   guint             n_streams, n_components;
   HlStreamPlace    *streams;
   GArray          **ways;          /* [n_streams] of HlGridPoint */
+  HlLabelSpot      *spots;         /* [n_streams] */
   HlComponentPlace *components;
   GArray           *shafts;        /* of HlShaftLink */
   HlBox             extents;
