@@ -218,7 +218,7 @@ hl_stream_line_bounds (const HlStreamPlace *place, HlBox *box)
   if (box->width < 0.0)
     box->width = 0.0;
   else
-    grow (box, MAX (MAX (place->lead_from, place->lead_to) + HALO / 2.0, ARC_RADIUS + 3.0));
+    grow (box, MAX (MAX (place->lead_from, place->lead_to), ARC_RADIUS) + HALO / 2.0 + 1.0);
 }
 
 void

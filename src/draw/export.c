@@ -119,6 +119,43 @@ finish (cairo_t *cr, cairo_surface_t *surface, HlFormat format, GByteArray *byte
   return FALSE;
 }
 
+/* Cairo numbers the surfaces of an SVG file on through the life of the program: "surface6" of the second file would be
+ * "surface1" of the first.  Numbered anew in order of appearance the same picture has the same bytes. */
+static GByteArray *
+renumber_surfaces (const GByteArray *svg)
+{
+  static const char mark[] = "surface";
+  g_autoptr (GHashTable) numbers = g_hash_table_new (NULL, NULL);
+  GByteArray *out = g_byte_array_sized_new (svg->len);
+  const char *text = (const char *) svg->data, *end = text + svg->len, *from = text, *found;
+  while ((found = g_strstr_len (from, end - from, mark)) != NULL)
+    {
+      const char *digits = found + strlen (mark), *after = digits;
+      char number[16];
+      guint old = 0;
+      gpointer new_number;
+      while (after < end && g_ascii_isdigit (*after) && old < 100000000)
+        old = old * 10 + (guint) (*after++ - '0');
+      g_byte_array_append (out, (const guint8 *) from, (guint) (digits - from));
+      from = after;
+      if (after == digits || found == text || (found[-1] != '"' && found[-1] != '#'))
+        {
+          g_byte_array_append (out, (const guint8 *) digits, (guint) (after - digits));
+          continue;
+        }
+      new_number = g_hash_table_lookup (numbers, GUINT_TO_POINTER (old));
+      if (new_number == NULL)
+        {
+          new_number = GUINT_TO_POINTER (g_hash_table_size (numbers) + 1);
+          g_hash_table_insert (numbers, GUINT_TO_POINTER (old), new_number);
+        }
+      g_snprintf (number, sizeof number, "%u", GPOINTER_TO_UINT (new_number));
+      g_byte_array_append (out, (const guint8 *) number, (guint) strlen (number));
+    }
+  g_byte_array_append (out, (const guint8 *) from, (guint) (end - from));
+  return out;
+}
+
 GBytes *
 hl_export_picture (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme_id, double width, double height, double scale, GError **error)
 {
@@ -150,7 +187,9 @@ hl_export_picture (const HlSolution *solution, HlPicture picture, HlFormat forma
   is_done = finish (cr, surface, format, bytes, error);
   cairo_destroy (cr);
   cairo_surface_destroy (surface);
-  return is_done ? g_byte_array_free_to_bytes (g_steal_pointer (&bytes)) : NULL;
+  if (!is_done)
+    return NULL;
+  return g_byte_array_free_to_bytes (format == HL_FORMAT_SVG ? renumber_surfaces (bytes) : g_byte_array_ref (bytes));
 }
 
 static gboolean

@@ -219,7 +219,7 @@ try_segment_led (LabelSearch *search, guint n)
     {
       double x = (a->x + dx * k) * HL_UNIT, y = (a->y + dy * k) * HL_UNIT;
       double base = 55.0 + 0.9 * fabs (k - length / 2.0);
-      for (double distance = 14.0; distance <= 120.0; distance += 8.0)
+      for (double distance = 14.0; distance <= 184.0; distance += 10.0)
         for (int side = -1; side <= 1; side += 2)
           {
             if (!is_across)

@@ -245,6 +245,8 @@ typedef struct {
   int      start_heading;       /* -1: any */
   int      goal_heading;        /* -1: any */
   gboolean must_start_straight;
+  guint32  haste;                /* eighths by which what lies ahead counts more than it costs: less is looked at, more paid */
+  gboolean starts_at_bend;       /* a hand has set a bend here: where all else is equal the line turns here, not later */
 } Leg;
 
 /* Price up to a state and at least on to the goal. */
@@ -253,7 +255,8 @@ rank_of (const HlRouter *router, const Leg *leg, int cell, int heading, guint32 
 {
   int x = cell % router->width + router->left, y = cell / router->width + router->top;
   int dx = leg->goal_x - x, dy = leg->goal_y - y;
-  return price + STEP * (abs (dx) + abs (dy)) + BEND * least_bends (dx, dy, heading, leg->goal_heading);
+  guint32 ahead = STEP * (abs (dx) + abs (dy)) + BEND * least_bends (dx, dy, heading, leg->goal_heading);
+  return price + ahead + ahead * leg->haste / 8;
 }
 
 static void
@@ -283,6 +286,8 @@ expand (HlRouter *router, const Leg *leg, int cell, int heading, guint32 price)
             continue;
           total += price_of_turn (router, cell, new_heading);
         }
+      else if (cell == leg->start && leg->starts_at_bend)
+        total += STEP / 2;
       if (router->fixed[next] == BLOCKED)
         continue;
       open_state (router, leg, next, new_heading, heading, total + price_of_cell (router, next, new_heading));
@@ -319,19 +324,21 @@ trace (HlRouter *router, const Leg *leg, guint32 state, gboolean skip_first, GAr
   return last_heading;
 }
 
-/* Returns the heading at the goal, or -1. */
+/* Returns the heading at the goal, -1 where there is no way, -2 where @most steps did not find one. */
 static int
-search (HlRouter *router, const Leg *leg, gboolean skip_first, GArray *way)
+search_with_haste (HlRouter *router, const Leg *leg, guint most, gboolean skip_first, GArray *way)
 {
   router->run++;
   g_array_set_size (router->heap, 0);
   for (int heading = 0; heading < 4; heading++)
     if (leg->start_heading < 0 || heading == leg->start_heading)
       open_state (router, leg, leg->start, heading, heading, 0);
-  for (guint n = 0; router->heap->len > 0 && n < MOST_STEPS; n++)
+  for (guint n = 0; router->heap->len > 0; n++)
     {
       Open best = heap_pop (router->heap);
       int cell = best.state / 4, heading = best.state % 4;
+      if (n >= most)
+        return -2;
       if (cell == leg->goal && (leg->goal_heading < 0 || heading == leg->goal_heading))
         return trace (router, leg, best.state, skip_first, way);
       if (best.rank > rank_of (router, leg, cell, heading, router->price[best.state]))
@@ -339,6 +346,20 @@ search (HlRouter *router, const Leg *leg, gboolean skip_first, GArray *way)
       expand (router, leg, cell, heading, router->price[best.state]);
     }
   return -1;
+}
+
+/* Carefully first; through a thicket of lines, where nearly every way costs the same, with haste. */
+static int
+search (HlRouter *router, Leg *leg, gboolean skip_first, GArray *way)
+{
+  static const struct { guint32 haste; guint most; } tries[] = { { 1, 4000 }, { 8, 6000 }, { 40, MOST_STEPS } };
+  int heading = -2;
+  for (guint i = 0; i < G_N_ELEMENTS (tries) && heading == -2; i++)
+    {
+      leg->haste = tries[i].haste;
+      heading = search_with_haste (router, leg, tries[i].most, skip_first, way);
+    }
+  return heading;
 }
 
 /* The cells from a port out of its own box are opened for its line, and closed again afterwards. */
@@ -440,6 +461,7 @@ find_legs (HlRouter *router, const HlRouteEnd *from, const HlRouteEnd *to, const
         return FALSE;
       leg.start = leg.goal;
       leg.must_start_straight = FALSE;
+      leg.starts_at_bend = TRUE;
     }
   return TRUE;
 }
