@@ -7,7 +7,7 @@
 /* Prices.  Covering a symbol or other words is what must not happen, covering a foreign line what should not. */
 #define PRICE_SYMBOL   2000.0    /* a grid point of a symbol */
 #define PRICE_WORDS    40.0      /* a pixel squared of other words */
-#define PRICE_LINE     90.0      /* a grid point of a foreign line */
+#define PRICE_LINE     110.0     /* a grid point of a foreign line */
 #define PRICE_OWN_LINE 14.0      /* a grid point of the own line that is not simply passed through */
 #define KEPT           25.0      /* what a label gains by staying where it was */
 #define TROUBLE        62.0      /* dearer: nowhere at its line without covering something; about the cheapest place with a leader */
@@ -377,6 +377,55 @@ order_labels (const HlLayout *layout)
   return turns;
 }
 
+static const HlBox *
+before_box (const HlLayout *previous, const int *before, guint n)
+{
+  return before[n] >= 0 && previous->streams[before[n]].label.width > 0.0 ? &previous->streams[before[n]].label : NULL;
+}
+
+typedef struct { guint stream; HlLabelSpot spot; } Troubled;
+
+static int
+compare_troubled (gconstpointer a, gconstpointer b)
+{
+  const Troubled *x = a, *y = b;
+  if (x->spot.price > y->spot.price || x->spot.price < y->spot.price)
+    return x->spot.price < y->spot.price ? 1 : -1;
+  return (x->stream > y->stream) - (x->stream < y->stream);
+}
+
+/* Takes all labels away that stand badly and places them anew, the worst first; TRUE when that was better. */
+static gboolean
+shuffle_troubled (HlLayout *layout, HlFreeSpace *space, const HlLayout *previous, const int *before, const GArray *turns, const gboolean *is_kept)
+{
+  g_autoptr (GArray) troubled = g_array_new (FALSE, FALSE, sizeof (Troubled));
+  double old_sum = 0.0, new_sum = 0.0;
+  for (guint i = 0; i < turns->len; i++)
+    {
+      guint n = g_array_index (turns, Turn, i).stream;
+      Troubled entry = { n, layout->spots[n] };
+      if (is_kept[n] || entry.spot.price < TROUBLE)
+        continue;
+      old_sum += entry.spot.price;
+      g_array_append_val (troubled, entry);
+      take_label (layout, space, n, hl_free_space_give_back);
+    }
+  g_array_sort (troubled, compare_troubled);
+  for (guint i = 0; i < troubled->len; i++)
+    {
+      guint n = g_array_index (troubled, Troubled, i).stream;
+      place_label (layout, space, n, before_box (previous, before, n));
+      new_sum += layout->spots[n].price;
+    }
+  if (new_sum < old_sum - 1.0)
+    return TRUE;
+  for (guint i = 0; i < troubled->len; i++)
+    take_label (layout, space, g_array_index (troubled, Troubled, i).stream, hl_free_space_give_back);
+  for (guint i = 0; i < troubled->len; i++)
+    settle_label (layout, space, g_array_index (troubled, Troubled, i).stream, &g_array_index (troubled, Troubled, i).spot);
+  return FALSE;
+}
+
 void
 hl_layout_place_words (HlLayout *layout, const HlLayout *previous)
 {
@@ -392,15 +441,17 @@ hl_layout_place_words (HlLayout *layout, const HlLayout *previous)
       before[n] = previous != NULL ? hl_plant_stream_index (previous->plant, hl_plant_stream (layout->plant, n)->id) : -1;
       is_kept[n] = before[n] >= 0 && keep_label (layout, space, n, previous, (guint) before[n]);
     }
-  /* After the first round each is placed again with all the others there; those that stand well need no more. */
-  for (int round = 0; round < 4; round++)
+  /* After the first round each is placed again with all the others there. */
+  for (int round = 0; round < 2; round++)
     for (guint i = 0; i < turns->len; i++)
       {
         guint n = g_array_index (turns, Turn, i).stream;
-        if (is_kept[n] || (round > 1 && layout->spots[n].price < TROUBLE))
+        if (is_kept[n])
           continue;
         if (round > 0)
           take_label (layout, space, n, hl_free_space_give_back);
-        place_label (layout, space, n, before[n] >= 0 && previous->streams[before[n]].label.width > 0.0 ? &previous->streams[before[n]].label : NULL);
+        place_label (layout, space, n, before_box (previous, before, n));
       }
+  for (int round = 0; round < 3 && shuffle_troubled (layout, space, previous, before, turns, is_kept); round++)
+    ;
 }
