@@ -256,8 +256,14 @@ hl_draw_component_title (cairo_t *cr, const HlTheme *theme, const HlComponentPla
 {
   const HlBox *box = &place->title;
   double x = place->title_align < 0 ? box->x : place->title_align > 0 ? box->x + box->width : box->x + box->width / 2.0;
+  HlColour veil = theme->ground;
   if (place->title_lines[0] == NULL)
     return;
+  /* Where there is no place without a line, the line steps back behind the words. */
+  veil.a = 0.8;
+  hl_set_colour (cr, &veil);
+  cairo_rectangle (cr, box->x - 1.0, box->y, box->width + 2.0, box->height);
+  cairo_fill (cr);
   hl_set_colour (cr, &theme->ink);
   hl_text_show (cr, theme, place->title_lines[0], x, box->y + 10.6, place->title_align, HL_TITLE_SIZE, TRUE);
   if (place->title_lines[1] == NULL)

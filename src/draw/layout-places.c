@@ -8,9 +8,12 @@
 #define PRICE_SYMBOL   2000.0    /* a grid point of a symbol */
 #define PRICE_WORDS    40.0      /* a pixel squared of other words */
 #define PRICE_LINE     110.0     /* a grid point of a foreign line */
+#define PRICE_STRUCK   350.0     /* a grid point of a line that runs through a title, which has no ground of its own */
 #define PRICE_OWN_LINE 14.0      /* a grid point of the own line that is not simply passed through */
 #define KEPT           25.0      /* what a label gains by staying where it was */
 #define TROUBLE        62.0      /* dearer: nowhere at its line without covering something; about the cheapest place with a leader */
+#define NEAR_BY        60.0      /* pixels within which words may have to make room for a label */
+#define COVERING       200.0     /* dearer: covers something */
 #define SYMBOL_MARGIN  4.0
 #define LINE_MARGIN    4.0
 #define WORDS_MARGIN   3.0
@@ -85,7 +88,7 @@ place_title (HlLayout *layout, HlFreeSpace *space, guint n)
       HlBox box = title_box (component, &title_spots[i], &place->title, &align);
       double price = title_spots[i].price
         + PRICE_SYMBOL * hl_free_space_boxes (space, &box, SYMBOL_MARGIN)
-        + PRICE_LINE * hl_free_space_lines (space, &box, LINE_MARGIN)
+        + PRICE_STRUCK * hl_free_space_lines (space, &box, LINE_MARGIN)
         + PRICE_WORDS * hl_free_space_taken (space, &box, WORDS_MARGIN);
       if (price < best_price)
         {
@@ -95,6 +98,7 @@ place_title (HlLayout *layout, HlFreeSpace *space, guint n)
         }
     }
   place->title = best;
+  layout->title_prices[n] = best_price;
   hl_free_space_take (space, (int) n, &best);
 }
 
@@ -188,7 +192,8 @@ price_of_leader (const LabelSearch *search, const HlPoint *leader)
   HlBox box = { MIN (leader[0].x, leader[1].x), MIN (leader[0].y, leader[1].y),
                 fabs (leader[0].x - leader[1].x), fabs (leader[0].y - leader[1].y) };
   int lines = hl_free_space_lines (search->space, &box, 1.0) - hl_count_line_points (search->way, search->n_way, &box, 1.0);
-  return PRICE_SYMBOL * hl_free_space_boxes (search->space, &box, 2.0) + 30.0 * MAX (lines, 0)
+  /* Crossing a line may be, running along on one may not. */
+  return PRICE_SYMBOL * hl_free_space_boxes (search->space, &box, 2.0) + (lines > 3 ? 90.0 : 30.0) * MAX (lines, 0)
     + PRICE_WORDS * hl_free_space_taken (search->space, &box, 2.0);
 }
 
@@ -219,7 +224,7 @@ try_segment_led (LabelSearch *search, guint n)
     {
       double x = (a->x + dx * k) * HL_UNIT, y = (a->y + dy * k) * HL_UNIT;
       double base = 55.0 + 0.9 * fabs (k - length / 2.0);
-      for (double distance = 14.0; distance <= 184.0; distance += 10.0)
+      for (double distance = 14.0; distance <= 160.0; distance += 8.0)
         for (int side = -1; side <= 1; side += 2)
           {
             if (!is_across)
@@ -233,27 +238,77 @@ try_segment_led (LabelSearch *search, guint n)
     }
 }
 
-/* From the nearest point of the line to a label that a hand has put away from it. */
-static void
-lead_back (LabelSearch *search)
+/* The nearest points of line and label: where a leader in any direction runs. Returns the distance. */
+static double
+nearest_points (const LabelSearch *search, const HlBox *box, HlPoint leader[2])
 {
-  HlLabelSpot *spot = &search->best;
-  const HlBox *box = &spot->box;
   double x = box->x + box->width / 2.0, y = box->y + box->height / 2.0, nearest = HUGE_VAL;
   for (guint i = 0; i + 1 < search->n_way; i++)
     {
       const HlGridPoint *a = &search->way[i], *b = &search->way[i + 1];
-      HlPoint on = { CLAMP (x, MIN (a->x, b->x) * HL_UNIT, MAX (a->x, b->x) * HL_UNIT),
-                     CLAMP (y, MIN (a->y, b->y) * HL_UNIT, MAX (a->y, b->y) * HL_UNIT) };
-      HlPoint edge = { CLAMP (on.x, box->x, box->x + box->width), CLAMP (on.y, box->y, box->y + box->height) };
+      double inset_x = 0.2 * HL_UNIT * ABS (b->x - a->x), inset_y = 0.2 * HL_UNIT * ABS (b->y - a->y);   /* off the ends */
+      HlPoint on = { CLAMP (x, MIN (a->x, b->x) * HL_UNIT + inset_x, MAX (a->x, b->x) * HL_UNIT - inset_x),
+                     CLAMP (y, MIN (a->y, b->y) * HL_UNIT + inset_y, MAX (a->y, b->y) * HL_UNIT - inset_y) };
+      HlPoint edge = { CLAMP (on.x, box->x + 10.0, box->x + box->width - 10.0), CLAMP (on.y, box->y, box->y + box->height) };
       double distance = hypot (on.x - edge.x, on.y - edge.y);
       if (distance >= nearest)
         continue;
       nearest = distance;
-      spot->has_leader = distance > GAP + 4.0;
-      spot->leader[0] = on;
-      spot->leader[1] = edge;
+      leader[0] = on;
+      leader[1] = edge;
     }
+  return nearest;
+}
+
+/* A label that a hand has put away from its line is led back to it. */
+static void
+lead_back (LabelSearch *search)
+{
+  HlLabelSpot *spot = &search->best;
+  spot->has_leader = nearest_points (search, &spot->box, spot->leader) > GAP + 4.0;
+}
+
+/* What a slanted leader runs over, looked at every few pixels. */
+static double
+price_of_slanted_leader (const LabelSearch *search, const HlPoint *leader, double limit)
+{
+  double length = hypot (leader[1].x - leader[0].x, leader[1].y - leader[0].y), price = 0.0;
+  int n = (int) (length / 5.0);
+  for (int k = 0; k < n && price < limit; k++)
+    {
+      double t = (k + 0.5) / n;
+      HlBox at = { leader[0].x + t * (leader[1].x - leader[0].x), leader[0].y + t * (leader[1].y - leader[0].y), 0.0, 0.0 };
+      int lines = hl_free_space_lines (search->space, &at, 5.0) - hl_count_line_points (search->way, search->n_way, &at, 5.0);
+      price += PRICE_SYMBOL * hl_free_space_boxes (search->space, &at, 5.0) + 25.0 * MAX (lines, 0)
+        + PRICE_WORDS * hl_free_space_taken (search->space, &at, 3.0);
+    }
+  return price;
+}
+
+/* The last resort: anywhere around, led back by a slanted leader. */
+static void
+try_anywhere (LabelSearch *search)
+{
+  int left = G_MAXINT, right = G_MININT, top = G_MAXINT, bottom = G_MININT;
+  for (guint i = 0; i < search->n_way; i++)
+    {
+      left = MIN (left, search->way[i].x);
+      right = MAX (right, search->way[i].x);
+      top = MIN (top, search->way[i].y);
+      bottom = MAX (bottom, search->way[i].y);
+    }
+  for (double y = top * HL_UNIT - 110.0; y <= bottom * HL_UNIT + 110.0 - search->height; y += 12.0)
+    for (double x = left * HL_UNIT - 190.0; x <= right * HL_UNIT + 190.0 - search->width; x += 15.0)
+      {
+        HlBox box = { x, y, search->width, search->height };
+        HlPoint leader[2];
+        double distance = nearest_points (search, &box, leader), base = 80.0 + 0.7 * distance;
+        if (distance < GAP || distance > 110.0 || base >= search->best.price
+            || price_of_spot (search, &box, base, HL_FIT_BESIDE, search->best.price) >= search->best.price)
+          continue;
+        base += price_of_slanted_leader (search, leader, search->best.price);
+        try_label (search, x, y, base, HL_FIT_BESIDE, leader);
+      }
 }
 
 static void
@@ -264,14 +319,24 @@ search_label (LabelSearch *search)
   if (search->best.price > TROUBLE)
     for (guint i = 0; i + 1 < search->n_way; i++)
       try_segment_led (search, i);
+  if (search->best.price > COVERING)
+    try_anywhere (search);
 }
 
-/* A leader takes a thin strip, so that later labels keep off it. */
-static HlBox
-leader_strip (const HlStreamPlace *place)
+/* A leader takes a thin strip, in pieces where it is slanted, so that later labels keep off it. */
+static void
+take_leader (const HlStreamPlace *place, HlFreeSpace *space, int id, void (*act) (HlFreeSpace *space, int id, const HlBox *box))
 {
   const HlPoint *a = &place->leader[0], *b = &place->leader[1];
-  return (HlBox) { MIN (a->x, b->x) - 1.0, MIN (a->y, b->y) - 1.0, fabs (a->x - b->x) + 2.0, fabs (a->y - b->y) + 2.0 };
+  gboolean is_slanted = fabs (a->x - b->x) > 1.0 && fabs (a->y - b->y) > 1.0;
+  int n = is_slanted ? (int) (hypot (a->x - b->x, a->y - b->y) / 8.0) + 1 : 1;
+  for (int k = 0; k < n; k++)
+    {
+      double x = a->x + (b->x - a->x) * k / n, y = a->y + (b->y - a->y) * k / n;
+      double next_x = a->x + (b->x - a->x) * (k + 1) / n, next_y = a->y + (b->y - a->y) * (k + 1) / n;
+      HlBox strip = { MIN (x, next_x) - 1.0, MIN (y, next_y) - 1.0, fabs (next_x - x) + 2.0, fabs (next_y - y) + 2.0 };
+      act (space, id, &strip);
+    }
 }
 
 static void
@@ -281,10 +346,7 @@ take_label (const HlLayout *layout, HlFreeSpace *space, guint n, void (*act) (Hl
   int id = (int) (layout->n_components + n);
   act (space, id, &place->label);
   if (place->has_leader)
-    {
-      HlBox strip = leader_strip (place);
-      act (space, id, &strip);
-    }
+    take_leader (place, space, id, act);
 }
 
 static LabelSearch
@@ -383,46 +445,182 @@ before_box (const HlLayout *previous, const int *before, guint n)
   return before[n] >= 0 && previous->streams[before[n]].label.width > 0.0 ? &previous->streams[before[n]].label : NULL;
 }
 
-typedef struct { guint stream; HlLabelSpot spot; } Troubled;
+/* Orders in which badly placed labels are tried anew: none is best for all plants. */
+typedef enum { WORST_FIRST, LEFT_FIRST, RIGHT_FIRST, BEST_FIRST, N_ORDERS } Order;
+typedef struct { guint stream; double rank; HlLabelSpot spot; } LabelBefore;
+typedef struct { guint component; double price; HlBox title; int align; } TitleBefore;
+/* Words taken away to be placed anew, and how they stood before. */
+typedef struct { GArray *labels, *titles; double sum; } Shuffle;
 
 static int
-compare_troubled (gconstpointer a, gconstpointer b)
+compare_labels (gconstpointer a, gconstpointer b)
 {
-  const Troubled *x = a, *y = b;
-  if (x->spot.price > y->spot.price || x->spot.price < y->spot.price)
-    return x->spot.price < y->spot.price ? 1 : -1;
+  const LabelBefore *x = a, *y = b;
+  if (x->rank > y->rank || x->rank < y->rank)
+    return x->rank > y->rank ? 1 : -1;
   return (x->stream > y->stream) - (x->stream < y->stream);
 }
 
-/* Takes all labels away that stand badly and places them anew, the worst first; TRUE when that was better. */
-static gboolean
-shuffle_troubled (HlLayout *layout, HlFreeSpace *space, const HlLayout *previous, const int *before, const GArray *turns, const gboolean *is_kept)
+static double
+rank_of (const HlLayout *layout, guint n, Order order)
 {
-  g_autoptr (GArray) troubled = g_array_new (FALSE, FALSE, sizeof (Troubled));
-  double old_sum = 0.0, new_sum = 0.0;
+  const HlGridPoint *first = &g_array_index (layout->ways[n], HlGridPoint, 0);
+  switch (order)
+    {
+    case LEFT_FIRST:  return first->x;
+    case RIGHT_FIRST: return -first->x;
+    case BEST_FIRST:  return layout->spots[n].price;
+    default:          return -layout->spots[n].price;
+    }
+}
+
+static gboolean
+is_near_line (const HlBox *box, const GArray *way)
+{
+  return hl_count_line_points ((const HlGridPoint *) (gconstpointer) way->data, way->len, box, NEAR_BY) > 0;
+}
+
+static void
+take_label_away (HlLayout *layout, HlFreeSpace *space, Shuffle *shuffle, guint n, double rank)
+{
+  LabelBefore label = { n, rank, layout->spots[n] };
+  shuffle->sum += label.spot.price;
+  g_array_append_val (shuffle->labels, label);
+  take_label (layout, space, n, hl_free_space_give_back);
+}
+
+static void
+take_title_away (HlLayout *layout, HlFreeSpace *space, Shuffle *shuffle, guint n)
+{
+  const HlComponentPlace *place = &layout->components[n];
+  TitleBefore title = { n, layout->title_prices[n], place->title, place->title_align };
+  shuffle->sum += title.price;
+  g_array_append_val (shuffle->titles, title);
+  hl_free_space_give_back (space, (int) n, &place->title);
+}
+
+static double
+place_labels (HlLayout *layout, HlFreeSpace *space, const Shuffle *shuffle, guint from)
+{
+  double sum = 0.0;
+  for (guint i = from; i < shuffle->labels->len; i++)
+    {
+      guint n = g_array_index (shuffle->labels, LabelBefore, i).stream;
+      place_label (layout, space, n, NULL);
+      sum += layout->spots[n].price;
+    }
+  return sum;
+}
+
+static double
+place_titles (HlLayout *layout, HlFreeSpace *space, const Shuffle *shuffle)
+{
+  double sum = 0.0;
+  for (guint i = 0; i < shuffle->titles->len; i++)
+    {
+      guint n = g_array_index (shuffle->titles, TitleBefore, i).component;
+      place_title (layout, space, n);
+      sum += layout->title_prices[n];
+    }
+  return sum;
+}
+
+/* All words of the shuffle, placed again, back to where they stood. */
+static void
+undo_shuffle (HlLayout *layout, HlFreeSpace *space, const Shuffle *shuffle)
+{
+  for (guint i = 0; i < shuffle->titles->len; i++)
+    {
+      const TitleBefore *before = &g_array_index (shuffle->titles, TitleBefore, i);
+      HlComponentPlace *place = &layout->components[before->component];
+      hl_free_space_give_back (space, (int) before->component, &place->title);
+      place->title = before->title;
+      place->title_align = before->align;
+      layout->title_prices[before->component] = before->price;
+      hl_free_space_take (space, (int) before->component, &place->title);
+    }
+  for (guint i = 0; i < shuffle->labels->len; i++)
+    take_label (layout, space, g_array_index (shuffle->labels, LabelBefore, i).stream, hl_free_space_give_back);
+  for (guint i = 0; i < shuffle->labels->len; i++)
+    {
+      const LabelBefore *before = &g_array_index (shuffle->labels, LabelBefore, i);
+      settle_label (layout, space, before->stream, &before->spot);
+    }
+}
+
+static Shuffle
+begin_shuffle (void)
+{
+  return (Shuffle) { g_array_new (FALSE, FALSE, sizeof (LabelBefore)), g_array_new (FALSE, FALSE, sizeof (TitleBefore)), 0.0 };
+}
+
+static void
+end_shuffle (HlLayout *layout, HlFreeSpace *space, Shuffle *shuffle, double new_sum)
+{
+  if (!(new_sum < shuffle->sum - 1.0))
+    undo_shuffle (layout, space, shuffle);
+  g_array_unref (shuffle->labels);
+  g_array_unref (shuffle->titles);
+}
+
+/* All labels that stand badly are placed anew; where that was no better they stay. */
+static void
+shuffle_troubled (HlLayout *layout, HlFreeSpace *space, const GArray *turns, Order order)
+{
+  Shuffle shuffle = begin_shuffle ();
   for (guint i = 0; i < turns->len; i++)
     {
       guint n = g_array_index (turns, Turn, i).stream;
-      Troubled entry = { n, layout->spots[n] };
-      if (is_kept[n] || entry.spot.price < TROUBLE)
-        continue;
-      old_sum += entry.spot.price;
-      g_array_append_val (troubled, entry);
-      take_label (layout, space, n, hl_free_space_give_back);
+      if (layout->spots[n].price >= TROUBLE)
+        take_label_away (layout, space, &shuffle, n, rank_of (layout, n, order));
     }
-  g_array_sort (troubled, compare_troubled);
-  for (guint i = 0; i < troubled->len; i++)
+  g_array_sort (shuffle.labels, compare_labels);
+  end_shuffle (layout, space, &shuffle, place_labels (layout, space, &shuffle, 0));
+}
+
+/* All words near one line make room for its label: it is placed first, then they. */
+static void
+shuffle_around (HlLayout *layout, HlFreeSpace *space, const GArray *turns, guint stream, Order order, gboolean are_titles_first)
+{
+  Shuffle shuffle = begin_shuffle ();
+  double sum = 0.0;
+  for (guint i = 0; i < turns->len; i++)
     {
-      guint n = g_array_index (troubled, Troubled, i).stream;
-      place_label (layout, space, n, before_box (previous, before, n));
-      new_sum += layout->spots[n].price;
+      guint n = g_array_index (turns, Turn, i).stream;
+      if (n == stream || is_near_line (&layout->streams[n].label, layout->ways[stream]))
+        take_label_away (layout, space, &shuffle, n, n == stream ? -HUGE_VAL : rank_of (layout, n, order));
     }
-  if (new_sum < old_sum - 1.0)
-    return TRUE;
-  for (guint i = 0; i < troubled->len; i++)
-    take_label (layout, space, g_array_index (troubled, Troubled, i).stream, hl_free_space_give_back);
-  for (guint i = 0; i < troubled->len; i++)
-    settle_label (layout, space, g_array_index (troubled, Troubled, i).stream, &g_array_index (troubled, Troubled, i).spot);
+  for (guint c = 0; c < layout->n_components; c++)
+    if (is_near_line (&layout->components[c].title, layout->ways[stream]))
+      take_title_away (layout, space, &shuffle, c);
+  g_array_sort (shuffle.labels, compare_labels);
+  place_label (layout, space, stream, NULL);
+  sum += layout->spots[stream].price;
+  if (are_titles_first)
+    sum += place_titles (layout, space, &shuffle);
+  sum += place_labels (layout, space, &shuffle, 1);
+  if (!are_titles_first)
+    sum += place_titles (layout, space, &shuffle);
+  end_shuffle (layout, space, &shuffle, sum);
+}
+
+static void
+shuffle_around_all (HlLayout *layout, HlFreeSpace *space, const GArray *turns)
+{
+  for (guint i = 0; i < turns->len; i++)
+    {
+      guint n = g_array_index (turns, Turn, i).stream;
+      for (int k = 0; k < 2 * N_ORDERS && layout->spots[n].price > COVERING; k++)
+        shuffle_around (layout, space, turns, n, k / 2, k % 2 == 0);
+    }
+}
+
+static gboolean
+is_any_covering (const HlLayout *layout)
+{
+  for (guint i = 0; i < layout->n_streams; i++)
+    if (layout->spots[i].price > COVERING)
+      return TRUE;
   return FALSE;
 }
 
@@ -452,6 +650,9 @@ hl_layout_place_words (HlLayout *layout, const HlLayout *previous)
           take_label (layout, space, n, hl_free_space_give_back);
         place_label (layout, space, n, before_box (previous, before, n));
       }
-  for (int round = 0; round < 3 && shuffle_troubled (layout, space, previous, before, turns, is_kept); round++)
-    ;
+  /* In a drag what moved must only be good enough; the layout after it gets the care. */
+  for (int k = 0; previous == NULL && k < N_ORDERS && is_any_covering (layout); k++)
+    shuffle_troubled (layout, space, turns, k);
+  if (previous == NULL)
+    shuffle_around_all (layout, space, turns);
 }

@@ -25,6 +25,7 @@ struct _HlLayout {
   GArray          **ways;          /* [n_streams] of HlGridPoint */
   HlLabelSpot      *spots;         /* [n_streams] */
   HlComponentPlace *components;
+  double           *title_prices;  /* [n_components] what each title's place costs */
   GArray           *shafts;        /* of HlShaftLink */
   HlBox             extents;
   int               left, top, right, bottom;   /* field of the lines [grid units] */

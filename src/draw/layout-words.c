@@ -6,12 +6,12 @@
 #include "draw/text.h"
 #include "plant/i18n.h"
 
-#define LONGEST_TITLE 170.0   /* pixels; longer names are cut */
+#define LONGEST_TITLE 220.0   /* pixels; longer names are cut */
 
 /* The figures that a drawing shows beside a symbol; with their sign where a unit does not tell. */
 static const struct {
   const char *kind;
-  struct { const char *key, *sign; gboolean is_unitless; } figures[2];    /* unitless: the figure after it says the unit for both */
+  struct { const char *key, *sign; enum { PLAIN, UNITLESS, PER_CENT } form; } figures[2];    /* UNITLESS: the figure after it says the unit for both */
 } figures_of_kind[] = {
   { "heat_input",    { { "heat", NULL } } },
   { "boiler",        { { "heat", NULL }, { "efficiency", "η" } } },
@@ -19,9 +19,9 @@ static const struct {
   { "generator",     { { "power", NULL } } },
   { "condenser",     { { "heat", NULL } } },
   { "pump",          { { "power", NULL } } },
-  { "pipe",          { { "pressure_loss", "Δp" } } },
+  { "pipe",          { { "pressure_loss", "Δp", PER_CENT } } },
   { "open_heater",   { { "heat", NULL } } },
-  { "closed_heater", { { "terminal_difference", "TTD", TRUE }, { "drain_approach", "DCA" } } },
+  { "closed_heater", { { "terminal_difference", "TTD", UNITLESS }, { "drain_approach", "DCA" } } },
   { "steam_user",    { { "heat", NULL } } },
 };
 
@@ -56,9 +56,12 @@ figure_line (const HlPlant *plant, const HlSolution *solution, const HlComponent
           double value;
           if (kind == NULL || !find_figure (plant, solution, component, key, &value))
             continue;
-          text = figures_of_kind[i].figures[k].is_unitless
-            ? hl_units_format_number (value, kind->dimension, hl_plant_units (plant))
-            : hl_units_format (value, kind->dimension, hl_plant_units (plant));
+          switch (figures_of_kind[i].figures[k].form)
+            {
+            case UNITLESS: text = hl_units_format_number (value, kind->dimension, hl_plant_units (plant)); break;
+            case PER_CENT: text = g_strdup_printf ("%.1f %%", value * 100.0); break;
+            default:       text = hl_units_format (value, kind->dimension, hl_plant_units (plant)); break;
+            }
           g_string_append_printf (line, "%s%s%s%s", line->len > 0 ? " · " : "", sign != NULL ? sign : "", sign != NULL ? " " : "", text);
         }
   return g_string_free (line, line->len == 0);

@@ -49,6 +49,7 @@ hl_layout_unref (HlLayout *layout)
     }
   g_free (layout->streams);
   g_free (layout->spots);
+  g_free (layout->title_prices);
   g_free (layout->ways);
   g_free (layout->components);
   g_array_unref (layout->shafts);
@@ -462,6 +463,7 @@ hl_layout_next (const HlLayout *previous, const HlPlant *plant, const HlSolution
   layout->n_streams = hl_plant_n_streams (plant);
   layout->n_components = hl_plant_n_components (plant);
   layout->streams = g_new0 (HlStreamPlace, layout->n_streams + 1);
+  layout->title_prices = g_new0 (double, layout->n_components + 1);
   layout->spots = g_new0 (HlLabelSpot, layout->n_streams + 1);
   layout->components = g_new0 (HlComponentPlace, layout->n_components + 1);
   layout->ways = g_new0 (GArray *, layout->n_streams + 1);
