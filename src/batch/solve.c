@@ -8,7 +8,7 @@
 #include "plant/i18n.h"
 
 /* The options that take a file name, which may be "-". */
-static const char *const file_options[] = { "json", "csv", "drawing", "diagram", NULL };
+static const char *const file_options[] = { "json", "csv", "ledger", "drawing", "diagram", NULL };
 
 #define LONGEST_INPUT (17u << 20)
 
@@ -105,7 +105,7 @@ static gboolean
 write_outputs (const HlSolution *solution, const GArray *yielded, const HlArguments *arguments, GError **error)
 {
   const char *json_path = hl_arguments_value (arguments, "json"), *csv_path = hl_arguments_value (arguments, "csv");
-  const char *drawing = hl_arguments_value (arguments, "drawing");
+  const char *ledger_path = hl_arguments_value (arguments, "ledger"), *drawing = hl_arguments_value (arguments, "drawing");
   char *const *diagram = hl_arguments_option (arguments, "diagram", 0);
   if (json_path != NULL)
     {
@@ -117,6 +117,12 @@ write_outputs (const HlSolution *solution, const GArray *yielded, const HlArgume
     {
       g_autofree char *csv = hl_ledger_csv (solution, hl_plant_units (hl_solution_plant (solution)));
       if (!hl_export_text_file (csv, csv_path, error))
+        return FALSE;
+    }
+  if (ledger_path != NULL)
+    {
+      g_autofree char *text = hl_ledger_text (solution, hl_plant_units (hl_solution_plant (solution)));
+      if (!hl_export_text_file (text, ledger_path, error))
         return FALSE;
     }
   return (drawing == NULL || write_picture (solution, HL_PICTURE_DRAWING, drawing, error))
@@ -167,6 +173,7 @@ static const HlBatchOption solve_options[] = {
   { "set", N_("ADDRESS=VALUE"), TRUE, N_("give a value, as 'T1.inlet.p=80 bar'; may be repeated") },
   { "json", N_("FILE"), FALSE, N_("write results, streams and findings as JSON, in SI") },
   { "csv", N_("FILE"), FALSE, N_("write the ledger of all streams as CSV, in the plant's units") },
+  { "ledger", N_("FILE"), FALSE, N_("write the ledger as text in aligned columns") },
   { "drawing", N_("FILE"), FALSE, N_("write the drawing; .svg, .pdf or .png") },
   { "diagram", N_("ts FILE"), FALSE, N_("write the temperature-entropy diagram; .svg, .pdf or .png") },
 };

@@ -16,5 +16,7 @@ GBytes  *hl_export_picture      (const HlSolution *solution, HlPicture picture, 
 gboolean hl_export_picture_file (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, const char *path, GError **error);
 /* The ledger: RFC 4180, units in the header, decimal points whatever the locale.  g_free(). */
 char    *hl_ledger_csv          (const HlSolution *solution, HlUnitSet units);
+/* The ledger in aligned columns, as rounded on screen.  g_free(). */
+char    *hl_ledger_text         (const HlSolution *solution, HlUnitSet units);
 gboolean hl_export_text_file    (const char *text, const char *path, GError **error);
 G_END_DECLS
