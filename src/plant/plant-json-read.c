@@ -1,250 +1,47 @@
 /* JSON text to plants: every refusal says where, what and how to mend.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "plant/plant-private.h"
+#include "plant/json-reader.h"
 #include "plant/i18n.h"
 #include <math.h>
 #include <string.h>
 
 #define MAX_FILE   (16 * 1024 * 1024)
 #define MAX_ITEMS  20000
-#define MAX_NAME   1000
-#define MAX_GRID   1000000
 #define MAX_ROUTE  1000
 #define VERSION    1
 
-typedef struct {
-  HlPlant      *plant;
-  HlJsonPlaces  places;
-  const char   *list;        /* list of the item being read, or NULL */
-  guint         item;
-  const char   *id;          /* its id once known */
-  GError      **error;
-} Reader;
+/* Items of the lists. */
 
 static gboolean
-refuse_as (Reader *reader, HlPlantError code, const char *key, const char *why)
-{
-  GString *where = g_string_new (reader->places.name);
-  guint line = reader->list != NULL ? hl_json_line (&reader->places, reader->list, reader->item) : 0;
-  if (line > 0)
-    g_string_append_printf (where, ":%u", line);
-  if (reader->list != NULL || key != NULL)
-    g_string_append (where, ": ");
-  if (reader->list != NULL)
-    g_string_append_printf (where, "%s[%u]", reader->list, reader->item);
-  if (reader->list != NULL && reader->id != NULL)
-    g_string_append_printf (where, " \"%s\"", reader->id);
-  if (key != NULL)
-    g_string_append_printf (where, reader->list != NULL ? ".%s" : "%s", key);
-  g_set_error (reader->error, HL_PLANT_ERROR, code, "%s: %s", where->str, why);
-  g_string_free (where, TRUE);
-  return FALSE;
-}
-
-static gboolean
-refuse (Reader *reader, const char *key, const char *format, ...) G_GNUC_PRINTF (3, 4);
-static gboolean
-refuse (Reader *reader, const char *key, const char *format, ...)
-{
-  g_autofree char *why = NULL;
-  va_list arguments;
-  va_start (arguments, format);
-  why = g_strdup_vprintf (format, arguments);
-  va_end (arguments);
-  return refuse_as (reader, HL_PLANT_ERROR_CONTENT, key, why);
-}
-
-/* Passes on the error of a check, with the place put before it. */
-static gboolean
-refuse_with (Reader *reader, const char *key, GError *why)
-{
-  HlPlantError code = why->domain == HL_PLANT_ERROR ? (HlPlantError) why->code : HL_PLANT_ERROR_CONTENT;
-  refuse_as (reader, code, key, why->message);
-  g_error_free (why);
-  return FALSE;
-}
-
-/* --- members of objects ---------------------------------------------------------------------------------------- */
-
-static JsonNode *
-member (JsonObject *object, const char *key)
-{
-  return object != NULL && json_object_has_member (object, key) ? json_object_get_member (object, key) : NULL;
-}
-
-static const char *
-type_in_words (JsonNode *node)
-{
-  switch (json_node_get_node_type (node))
-    {
-    case JSON_NODE_OBJECT:
-      return _("an object");
-    case JSON_NODE_ARRAY:
-      return _("a list");
-    case JSON_NODE_NULL:
-      return _("null");
-    case JSON_NODE_VALUE:
-    default:
-      return json_node_get_value_type (node) == G_TYPE_STRING ? _("a text")
-             : json_node_get_value_type (node) == G_TYPE_BOOLEAN ? _("true or false") : _("a number");
-    }
-}
-
-static gboolean
-is_string (JsonNode *node)
-{
-  return JSON_NODE_HOLDS_VALUE (node) && json_node_get_value_type (node) == G_TYPE_STRING;
-}
-
-static gboolean
-is_number (JsonNode *node)
-{
-  return JSON_NODE_HOLDS_VALUE (node)
-         && (json_node_get_value_type (node) == G_TYPE_INT64 || json_node_get_value_type (node) == G_TYPE_DOUBLE);
-}
-
-/* These leave @result alone where the key is absent. */
-static gboolean
-read_string (Reader *reader, JsonObject *object, const char *key, const char **result)
-{
-  JsonNode *node = member (object, key);
-  if (node == NULL)
-    return TRUE;
-  if (!is_string (node))
-    return refuse (reader, key, _("must be a text in quotes, not %s"), type_in_words (node));
-  if (strlen (json_node_get_string (node)) > MAX_NAME)
-    return refuse (reader, key, _("is longer than %d bytes; shorten it"), MAX_NAME);
-  *result = json_node_get_string (node);
-  return TRUE;
-}
-
-static gboolean
-read_object (Reader *reader, JsonObject *object, const char *key, JsonObject **result)
-{
-  JsonNode *node = member (object, key);
-  if (node == NULL)
-    return TRUE;
-  if (!JSON_NODE_HOLDS_OBJECT (node))
-    return refuse (reader, key, _("must be an object in { }, not %s"), type_in_words (node));
-  *result = json_node_get_object (node);
-  return TRUE;
-}
-
-static gboolean
-read_list (Reader *reader, JsonObject *object, const char *key, guint most, JsonArray **result)
-{
-  JsonNode *node = member (object, key);
-  if (node == NULL)
-    return TRUE;
-  if (!JSON_NODE_HOLDS_ARRAY (node))
-    return refuse (reader, key, _("must be a list in [ ], not %s"), type_in_words (node));
-  if (json_array_get_length (json_node_get_array (node)) > most)
-    return refuse (reader, key, _("has more than %u items; split the plant"), most);
-  *result = json_node_get_array (node);
-  return TRUE;
-}
-
-static gboolean
-node_to_int (JsonNode *node, int least, int most, int *result)
-{
-  double number;
-  if (!is_number (node))
-    return FALSE;
-  number = json_node_get_double (node);
-  if (!(number >= least && number <= most) || fabs (number - rint (number)) > 0.0)
-    return FALSE;
-  *result = (int) number;
-  return TRUE;
-}
-
-static gboolean
-read_int (Reader *reader, JsonObject *object, const char *key, int least, int most, int *result)
-{
-  JsonNode *node = member (object, key);
-  if (node == NULL || node_to_int (node, least, most, result))
-    return TRUE;
-  return refuse (reader, key, _("must be a whole number from %d to %d"), least, most);
-}
-
-static gboolean
-read_boolean (Reader *reader, JsonObject *object, const char *key, gboolean *result)
-{
-  JsonNode *node = member (object, key);
-  if (node == NULL)
-    return TRUE;
-  if (!JSON_NODE_HOLDS_VALUE (node) || json_node_get_value_type (node) != G_TYPE_BOOLEAN)
-    return refuse (reader, key, _("must be true or false, not %s"), type_in_words (node));
-  *result = json_node_get_boolean (node);
-  return TRUE;
-}
-
-static gboolean
-node_to_point (JsonNode *node, HlGridPoint *point)
-{
-  JsonArray *pair = JSON_NODE_HOLDS_ARRAY (node) ? json_node_get_array (node) : NULL;
-  return pair != NULL && json_array_get_length (pair) == 2
-         && node_to_int (json_array_get_element (pair, 0), -MAX_GRID, MAX_GRID, &point->x)
-         && node_to_int (json_array_get_element (pair, 1), -MAX_GRID, MAX_GRID, &point->y);
-}
-
-static gboolean
-read_point (Reader *reader, JsonObject *object, const char *key, HlGridPoint *point)
-{
-  JsonNode *node = member (object, key);
-  if (node == NULL || node_to_point (node, point))
-    return TRUE;
-  return refuse (reader, key, _("must be two whole numbers, [x, y] in grid units"));
-}
-
-/* What is not in @known, to be written back. */
-static JsonObject *
-unknown_members (JsonObject *object, const char *const *known, const HlKind *kind)
-{
-  JsonObjectIter iter;
-  const char *key;
-  JsonNode *node;
-  JsonObject *extra = NULL;
-  json_object_iter_init_ordered (&iter, object);
-  while (json_object_iter_next_ordered (&iter, &key, &node))
-    {
-      if (g_strv_contains (known, key) || (kind != NULL && hl_kind_find_option (kind, key) >= 0))
-        continue;
-      if (extra == NULL)
-        extra = json_object_new ();
-      json_object_set_member (extra, key, json_node_ref (node));
-    }
-  return extra;
-}
-
-/* --- items ------------------------------------------------------------------------------------------------------ */
-
-static gboolean
-read_id (Reader *reader, JsonObject *object, gboolean is_stream, GHashTable *ids)
+read_id (HlReader *reader, JsonObject *object, gboolean is_stream, GHashTable *ids)
 {
   const char *id = NULL, *other;
-  if (!read_string (reader, object, "id", &id))
+  if (!hl_reader_string (reader, object, "id", &id))
     return FALSE;
   if (id == NULL)
-    return refuse (reader, "id", _("is missing; every item needs one, for instance \"T1\""));
+    return hl_reader_refuse (reader, "id", _("is missing; every item needs one, for instance \"T1\""));
   if (!hl_id_is_valid (id, is_stream))
-    return refuse (reader, "id", is_stream ? _("“%.40s” is no id: letters, digits and _ only, at most 32, and neither “plant” nor “stream”")
-                                           : _("“%.40s” is no id: a letter first, then letters, digits and _ only, at most 32, and neither “plant” nor “stream”"), id);
+    {
+      g_autofree char *clipped = hl_reader_clip (id);
+      return hl_reader_refuse (reader, "id", is_stream ? _("“%s” is no id: letters, digits and _ only, at most 32, and neither “plant” nor “stream”")
+                                                       : _("“%s” is no id: a letter first, then letters, digits and _ only, at most 32, and neither “plant” nor “stream”"), clipped);
+    }
   other = g_hash_table_lookup (ids, id);
   if (other != NULL)
-    return refuse (reader, "id", _("“%s” is already the id of an item of %s; ids must be unique, so rename one"), id, other);
+    return hl_reader_refuse (reader, "id", _("“%s” is already the id of an item of %s; ids must be unique, so rename one"), id, other);
   reader->id = g_intern_string (id);
   g_hash_table_insert (ids, (gpointer) reader->id, (gpointer) reader->list);
   return TRUE;
 }
 
 static gboolean
-read_option (Reader *reader, JsonObject *object, HlComponent *component, guint n)
+read_option (HlReader *reader, JsonObject *object, HlComponent *component, guint n)
 {
   const HlOptionKind *option = &component->kind->options[n];
   const char *word = NULL;
   if (option->choices == NULL)
-    return read_int (reader, object, option->key, option->least, option->most, &component->options[n]);
-  if (!read_string (reader, object, option->key, &word))
+    return hl_reader_int (reader, object, option->key, option->least, option->most, &component->options[n]);
+  if (!hl_reader_string (reader, object, option->key, &word))
     return FALSE;
   if (word == NULL)
     return TRUE;
@@ -256,16 +53,16 @@ read_option (Reader *reader, JsonObject *object, HlComponent *component, guint n
       }
   {
     g_autofree char *words = g_strjoinv ("”, “", (char **) option->choices);
-    return refuse (reader, option->key, _("“%s” is none of “%s”"), word, words);
+    return hl_reader_refuse (reader, option->key, _("“%s” is none of “%s”"), word, words);
   }
 }
 
 static gboolean
-read_kind (Reader *reader, JsonObject *object, const HlKind **kind)
+read_kind (HlReader *reader, JsonObject *object, const HlKind **kind)
 {
   const char *word = NULL;
   g_autoptr (GString) known = NULL;
-  if (!read_string (reader, object, "kind", &word))
+  if (!hl_reader_string (reader, object, "kind", &word))
     return FALSE;
   *kind = word != NULL ? hl_kind_lookup (word) : NULL;
   if (*kind != NULL)
@@ -274,12 +71,12 @@ read_kind (Reader *reader, JsonObject *object, const HlKind **kind)
   for (guint i = 0; i < hl_kind_count (); i++)
     g_string_append_printf (known, "%s%s", i > 0 ? ", " : "", hl_kind_nth (i)->id);
   if (word == NULL)
-    return refuse (reader, "kind", _("is missing; it is one of %s"), known->str);
-  return refuse (reader, "kind", _("“%s” is not known; it is one of %s"), word, known->str);
+    return hl_reader_refuse (reader, "kind", _("is missing; it is one of %s"), known->str);
+  return hl_reader_refuse (reader, "kind", _("“%s” is not known; it is one of %s"), word, known->str);
 }
 
 static gboolean
-read_component (Reader *reader, JsonObject *object, GHashTable *ids)
+read_component (HlReader *reader, JsonObject *object, GHashTable *ids)
 {
   static const char *const known[] = { "id", "kind", "name", "at", "turn", "mirror", "given", "assumed", "tied", NULL };
   g_autoptr (HlComponent) component = NULL;
@@ -289,9 +86,9 @@ read_component (Reader *reader, JsonObject *object, GHashTable *ids)
   if (!read_id (reader, object, FALSE, ids) || !read_kind (reader, object, &kind))
     return FALSE;
   component = hl_component_new_bare (kind, reader->id, 0, 0);
-  if (!read_string (reader, object, "name", &name) || !read_point (reader, object, "at", &at)
-      || !read_int (reader, object, "turn", 0, 3, &component->turn)
-      || !read_boolean (reader, object, "mirror", &component->is_mirrored))
+  if (!hl_reader_string (reader, object, "name", &name) || !hl_reader_point (reader, object, "at", &at)
+      || !hl_reader_int (reader, object, "turn", 0, 3, &component->turn)
+      || !hl_reader_boolean (reader, object, "mirror", &component->is_mirrored))
     return FALSE;
   hl_component_set_name (component, name);
   component->x = at.x;
@@ -299,21 +96,21 @@ read_component (Reader *reader, JsonObject *object, GHashTable *ids)
   for (guint i = 0; i < kind->n_options; i++)
     if (!read_option (reader, object, component, i))
       return FALSE;
-  component->extra = unknown_members (object, known, kind);
+  component->extra = hl_reader_unknown (object, known, kind);
   g_ptr_array_add (reader->plant->components, g_steal_pointer (&component));
   return TRUE;
 }
 
 /* "B1.steam" to its two parts. */
 static gboolean
-read_end (Reader *reader, JsonObject *object, const char *key, char **id, char **port)
+read_end (HlReader *reader, JsonObject *object, const char *key, char **id, char **port)
 {
   const char *text = NULL, *dot;
-  if (!read_string (reader, object, key, &text))
+  if (!hl_reader_string (reader, object, key, &text))
     return FALSE;
   dot = text != NULL ? strchr (text, '.') : NULL;
   if (dot == NULL)
-    return refuse (reader, key, _("must name a component and its port, for instance \"B1.steam\""));
+    return hl_reader_refuse (reader, key, _("must name a component and its port, for instance \"B1.steam\""));
   *id = g_strndup (text, (gsize) (dot - text));
   *port = g_strdup (dot + 1);
   return TRUE;
@@ -321,13 +118,13 @@ read_end (Reader *reader, JsonObject *object, const char *key, char **id, char *
 
 /* Two lines at one port; @taken maps "id.port" to the stream that is there. */
 static gboolean
-take_port (Reader *reader, const char *key, GHashTable *taken, const char *id, const char *port)
+take_port (HlReader *reader, const char *key, GHashTable *taken, const char *id, const char *port)
 {
   char *name = g_strdup_printf ("%s.%s", id, port);
   const char *other = g_hash_table_lookup (taken, name);
   if (other != NULL)
     {
-      gboolean ok = refuse (reader, key, _("%s already has stream %s; a port holds one line, so put a splitter or a mixer there"), name, other);
+      gboolean ok = hl_reader_refuse (reader, key, _("%s already has stream %s; a port holds one line, so put a splitter or a mixer there"), name, other);
       g_free (name);
       return ok;
     }
@@ -336,21 +133,21 @@ take_port (Reader *reader, const char *key, GHashTable *taken, const char *id, c
 }
 
 static gboolean
-read_route (Reader *reader, JsonObject *object, HlStream *stream)
+read_route (HlReader *reader, JsonObject *object, HlStream *stream)
 {
   JsonArray *points = NULL;
   HlGridPoint label;
-  if (!read_list (reader, object, "route", MAX_ROUTE, &points))
+  if (!hl_reader_list (reader, object, "route", MAX_ROUTE, &points))
     return FALSE;
   stream->n_route = points != NULL ? json_array_get_length (points) : 0;
   stream->route = g_new0 (HlGridPoint, stream->n_route);
   for (guint i = 0; i < stream->n_route; i++)
-    if (!node_to_point (json_array_get_element (points, i), &stream->route[i]))
-      return refuse (reader, "route", _("must be a list of bends, each [x, y] in grid units"));
+    if (!hl_reader_node_to_point (json_array_get_element (points, i), &stream->route[i]))
+      return hl_reader_refuse (reader, "route", _("must be a list of bends, each [x, y] in grid units"));
   stream->has_label_place = json_object_has_member (object, "label");
   if (!stream->has_label_place)
     return TRUE;
-  if (!read_point (reader, object, "label", &label))
+  if (!hl_reader_point (reader, object, "label", &label))
     return FALSE;
   stream->label_x = label.x;
   stream->label_y = label.y;
@@ -358,7 +155,7 @@ read_route (Reader *reader, JsonObject *object, HlStream *stream)
 }
 
 static gboolean
-read_stream (Reader *reader, JsonObject *object, GHashTable *ids, GHashTable *taken)
+read_stream (HlReader *reader, JsonObject *object, GHashTable *ids, GHashTable *taken)
 {
   static const char *const known[] = { "id", "from", "to", "medium", "route", "label", "given", "assumed", "tied", NULL };
   g_autofree char *from_id = NULL, *from_port = NULL, *to_id = NULL, *to_port = NULL;
@@ -367,78 +164,78 @@ read_stream (Reader *reader, JsonObject *object, GHashTable *ids, GHashTable *ta
   const char *medium = "water";
   if (!read_id (reader, object, TRUE, ids)
       || !read_end (reader, object, "from", &from_id, &from_port) || !read_end (reader, object, "to", &to_id, &to_port)
-      || !read_string (reader, object, "medium", &medium))
+      || !hl_reader_string (reader, object, "medium", &medium))
     return FALSE;
   if (!hl_plant_can_connect (reader->plant, from_id, from_port, to_id, to_port, &why))
-    return refuse_with (reader, NULL, why);
+    return hl_reader_refuse_with (reader, NULL, why);
   if (!take_port (reader, "from", taken, from_id, from_port) || !take_port (reader, "to", taken, to_id, to_port))
     return FALSE;
   if (hl_fluid_lookup (medium) == NULL)
-    return refuse (reader, "medium", _("“%s” is not known; write \"water\""), medium);
+    return hl_reader_refuse (reader, "medium", _("“%s” is not known; write \"water\""), medium);
   stream = hl_stream_new (reader->id, from_id, from_port, to_id, to_port);
   stream->medium = g_intern_string (medium);
   if (!read_route (reader, object, stream))
     return FALSE;
-  stream->extra = unknown_members (object, known, NULL);
+  stream->extra = hl_reader_unknown (object, known, NULL);
   g_ptr_array_add (reader->plant->streams, g_steal_pointer (&stream));
   return TRUE;
 }
 
 static gboolean
-read_join (Reader *reader, JsonNode *node, GHashTable *taken, const char **id)
+read_join (HlReader *reader, JsonNode *node, GHashTable *taken, const char **id)
 {
-  const HlComponent *component = is_string (node) ? hl_plant_find_component (reader->plant, json_node_get_string (node)) : NULL;
+  const HlComponent *component = hl_reader_is_string (node) ? hl_plant_find_component (reader->plant, json_node_get_string (node)) : NULL;
   const char *other;
   if (component == NULL)
-    return refuse (reader, "joins", _("must name components of this plant; %s is none"), is_string (node) ? json_node_get_string (node) : type_in_words (node));
+    return hl_reader_refuse (reader, "joins", _("must name components of this plant; %s is none"), hl_reader_is_string (node) ? json_node_get_string (node) : hl_reader_type (node));
   if (component->kind->shaft == HL_SHAFT_NONE)
-    return refuse (reader, "joins", _("%s (%s) has no shaft; turbines, pumps and generators have"), component->id, _(component->kind->name));
+    return hl_reader_refuse (reader, "joins", _("%s (%s) has no shaft; turbines, pumps and generators have"), component->id, _(component->kind->name));
   other = g_hash_table_lookup (taken, component->id);
   if (other != NULL)
-    return refuse (reader, "joins", _("%s is already on shaft %s; take it off one of them"), component->id, other);
+    return hl_reader_refuse (reader, "joins", _("%s is already on shaft %s; take it off one of them"), component->id, other);
   g_hash_table_insert (taken, (gpointer) component->id, (gpointer) reader->id);
   *id = component->id;
   return TRUE;
 }
 
 static gboolean
-read_shaft (Reader *reader, JsonObject *object, GHashTable *ids, GHashTable *taken)
+read_shaft (HlReader *reader, JsonObject *object, GHashTable *ids, GHashTable *taken)
 {
   static const char *const known[] = { "id", "joins", NULL };
   g_autoptr (HlShaft) shaft = NULL;
   g_autofree const char **joins = NULL;
   JsonArray *list = NULL;
   guint n;
-  if (!read_id (reader, object, FALSE, ids) || !read_list (reader, object, "joins", MAX_ITEMS, &list))
+  if (!read_id (reader, object, FALSE, ids) || !hl_reader_list (reader, object, "joins", MAX_ITEMS, &list))
     return FALSE;
   n = list != NULL ? json_array_get_length (list) : 0;
   if (n == 0)
-    return refuse (reader, "joins", _("is missing or empty; list the components on the shaft, for instance [\"T1\", \"G1\"]"));
+    return hl_reader_refuse (reader, "joins", _("is missing or empty; list the components on the shaft, for instance [\"T1\", \"G1\"]"));
   joins = g_new0 (const char *, n);
   for (guint i = 0; i < n; i++)
     if (!read_join (reader, json_array_get_element (list, i), taken, &joins[i]))
       return FALSE;
   shaft = hl_shaft_new (reader->id, joins, n);
-  shaft->extra = unknown_members (object, known, NULL);
+  shaft->extra = hl_reader_unknown (object, known, NULL);
   g_ptr_array_add (reader->plant->shafts, g_steal_pointer (&shaft));
   return TRUE;
 }
 
-typedef gboolean (*ReadItem) (Reader *reader, JsonObject *object, GHashTable *ids, GHashTable *taken);
+typedef gboolean (*ReadItem) (HlReader *reader, JsonObject *object, GHashTable *ids, GHashTable *taken);
 
 static gboolean
-read_component_item (Reader *reader, JsonObject *object, GHashTable *ids, G_GNUC_UNUSED GHashTable *taken)
+read_component_item (HlReader *reader, JsonObject *object, GHashTable *ids, G_GNUC_UNUSED GHashTable *taken)
 {
   return read_component (reader, object, ids);
 }
 
 /* Goes through a list of objects, with the reader set to each. */
 static gboolean
-read_items (Reader *reader, JsonObject *top, const char *list, GHashTable *ids, ReadItem read)
+read_items (HlReader *reader, JsonObject *top, const char *list, GHashTable *ids, ReadItem read)
 {
   g_autoptr (GHashTable) taken = g_hash_table_new_full (g_str_hash, g_str_equal, g_str_equal (list, "streams") ? g_free : NULL, NULL);
   JsonArray *array = NULL;
-  if (!read_list (reader, top, list, MAX_ITEMS, &array))
+  if (!hl_reader_list (reader, top, list, MAX_ITEMS, &array))
     return FALSE;
   for (guint i = 0; array != NULL && i < json_array_get_length (array); i++)
     {
@@ -447,7 +244,7 @@ read_items (Reader *reader, JsonObject *top, const char *list, GHashTable *ids, 
       reader->item = i;
       reader->id = NULL;
       if (!JSON_NODE_HOLDS_OBJECT (node))
-        return refuse (reader, NULL, _("must be an object in { }, not %s"), type_in_words (node));
+        return hl_reader_refuse (reader, NULL, _("must be an object in { }, not %s"), hl_reader_type (node));
       if (!read (reader, json_node_get_object (node), ids, taken))
         return FALSE;
     }
@@ -456,7 +253,7 @@ read_items (Reader *reader, JsonObject *top, const char *list, GHashTable *ids, 
   return TRUE;
 }
 
-/* --- values ----------------------------------------------------------------------------------------------------- */
+/* Values of the items. */
 
 typedef struct { HlOwner owner; const char *id; HlValues *values; } Target;
 
@@ -467,71 +264,71 @@ address_of (const Target *target, const char *key)
 }
 
 static gboolean
-refuse_key (Reader *reader, const char *path, const Target *target, const char *key)
+refuse_key (HlReader *reader, const char *path, const Target *target, const char *key)
 {
   const HlComponent *component;
   if (target->owner == HL_OWNER_STREAM)
-    return refuse (reader, path, _("a stream has no quantity “%s”; it has m, p, T, h, s, x and v"), key);
+    return hl_reader_refuse (reader, path, _("a stream has no quantity “%s”; it has m, p, T, h, s, x and v"), key);
   if (target->owner == HL_OWNER_PLANT)
-    return refuse (reader, path, _("the plant has no quantity “%s”; heatloom-batch kinds lists them"), key);
+    return hl_reader_refuse (reader, path, _("the plant has no quantity “%s”; heatloom-batch kinds lists them"), key);
   component = hl_plant_find_component (reader->plant, target->id);
-  return refuse (reader, path, _("%s (%s) has no quantity “%s”; heatloom-batch kinds lists them, and each port has m, p, T, h, s, x and v"),
+  return hl_reader_refuse (reader, path, _("%s (%s) has no quantity “%s”; heatloom-batch kinds lists them, and each port has m, p, T, h, s, x and v"),
                  target->id, _(component->kind->name), key);
 }
 
 static gboolean
-read_value_node (Reader *reader, const char *path, const HlAddress *address, const HlQuantityKind *kind, HlOrigin origin,
+read_value_node (HlReader *reader, const char *path, const HlAddress *address, const HlQuantityKind *kind, HlOrigin origin,
                  JsonNode *node, HlValue *value)
 {
   g_autofree char *where = hl_address_to_text (address);
   GError *why = NULL;
   if (origin != HL_ORIGIN_TIED)
     {
-      if (!is_number (node))
-        return refuse (reader, path, _("must be a number in %s, not %s"),
-                       *hl_dimension_si_unit (kind->dimension) != '\0' ? hl_dimension_si_unit (kind->dimension) : _("no unit"), type_in_words (node));
+      if (!hl_reader_is_number (node))
+        return hl_reader_refuse (reader, path, _("must be a number in %s, not %s"),
+                       *hl_dimension_si_unit (kind->dimension) != '\0' ? hl_dimension_si_unit (kind->dimension) : _("no unit"), hl_reader_type (node));
       *value = (HlValue) { .origin = origin, .value = json_node_get_double (node) };
       if (!hl_quantity_check (kind, where, value->value, reader->plant->units, &why))
-        return refuse_with (reader, path, why);
+        return hl_reader_refuse_with (reader, path, why);
       return TRUE;
     }
-  if (!is_string (node))
-    return refuse (reader, path, _("must be a tie as a text, for instance \"0.23*B1.steam.p\", not %s"), type_in_words (node));
+  if (!hl_reader_is_string (node))
+    return hl_reader_refuse (reader, path, _("must be a tie as a text, for instance \"0.23*B1.steam.p\", not %s"), hl_reader_type (node));
   if (!hl_tie_read (reader->plant, address, json_node_get_string (node), TRUE, value, &why))
-    return refuse_with (reader, path, why);
+    return hl_reader_refuse_with (reader, path, why);
   if (value->origin != HL_ORIGIN_TIED)
-    return refuse (reader, path, _("“%s” names no other quantity; put a plain number under \"given\""), json_node_get_string (node));
+    return hl_reader_refuse (reader, path, _("“%s” names no other quantity; put a plain number under \"given\""), json_node_get_string (node));
   return TRUE;
 }
 
 static gboolean
-read_origin (Reader *reader, JsonObject *object, const char *prefix, const Target *target, HlOrigin origin)
+read_origin (HlReader *reader, JsonObject *object, const char *prefix, const Target *target, HlOrigin origin)
 {
   g_autofree char *section = g_strconcat (prefix, hl_origin_id (origin), NULL);
   JsonObject *values = NULL;
   JsonObjectIter iter;
   const char *key;
   JsonNode *node;
-  if (!read_object (reader, object, hl_origin_id (origin), &values))
+  if (!hl_reader_object (reader, object, hl_origin_id (origin), &values))
     return FALSE;
   if (values == NULL)
     return TRUE;
   json_object_iter_init_ordered (&iter, values);
   while (json_object_iter_next_ordered (&iter, &key, &node))
     {
-      g_autofree char *path = g_strdup_printf ("%s.%.80s", section, key);
+      g_autofree char *clipped = hl_reader_clip (key), *path = g_strdup_printf ("%s.%s", section, clipped);
       const HlValue *present = hl_values_find (target->values, key);
       const HlQuantityKind *kind;
       HlAddress address;
       HlValue value;
-      if (strlen (key) > 80)
-        return refuse_key (reader, path, target, path);
+      if (strlen (key) > 80)   /* no quantity has such a name, and keys are interned */
+        return refuse_key (reader, path, target, clipped);
       address = address_of (target, key);
       kind = hl_plant_quantity_kind (reader->plant, &address);
       if (kind == NULL)
-        return refuse_key (reader, path, target, key);
+        return refuse_key (reader, path, target, clipped);
       if (present != NULL)
-        return refuse (reader, path, _("stands under “%s” too; a quantity has one origin, so remove one of them"), hl_origin_id (present->origin));
+        return hl_reader_refuse (reader, path, _("stands under “%s” too; a quantity has one origin, so remove one of them"), hl_origin_id (present->origin));
       if (!read_value_node (reader, path, &address, kind, origin, node, &value))
         return FALSE;
       hl_values_set (target->values, key, &value);
@@ -540,7 +337,7 @@ read_origin (Reader *reader, JsonObject *object, const char *prefix, const Targe
 }
 
 static gboolean
-read_values (Reader *reader, JsonObject *object, const char *prefix, const Target *target)
+read_values (HlReader *reader, JsonObject *object, const char *prefix, const Target *target)
 {
   return read_origin (reader, object, prefix, target, HL_ORIGIN_GIVEN)
          && read_origin (reader, object, prefix, target, HL_ORIGIN_ASSUMED)
@@ -549,7 +346,7 @@ read_values (Reader *reader, JsonObject *object, const char *prefix, const Targe
 
 /* Values come last, when every address they may name is there. */
 static gboolean
-read_all_values (Reader *reader, JsonObject *top)
+read_all_values (HlReader *reader, JsonObject *top)
 {
   HlPlant *plant = reader->plant;
   JsonObject *plant_object = NULL;
@@ -577,47 +374,47 @@ read_all_values (Reader *reader, JsonObject *top)
     }
   reader->list = NULL;
   reader->id = NULL;
-  if (!read_object (reader, top, "plant", &plant_object))
+  if (!hl_reader_object (reader, top, "plant", &plant_object))
     return FALSE;
   if (plant_object == NULL)
     return TRUE;
-  plant->plant_extra = unknown_members (plant_object, known, NULL);
+  plant->plant_extra = hl_reader_unknown (plant_object, known, NULL);
   return read_values (reader, plant_object, "plant.", &whole);
 }
 
-/* --- the whole -------------------------------------------------------------------------------------------------- */
+/* The whole file. */
 
 static gboolean
-read_site_number (Reader *reader, JsonObject *site, const char *key, double least, double most, double *result)
+read_site_number (HlReader *reader, JsonObject *site, const char *key, double least, double most, double *result)
 {
   g_autofree char *path = g_strconcat ("site.", key, NULL);
-  JsonNode *node = member (site, key);
+  JsonNode *node = hl_reader_member (site, key);
   double number;
   if (node == NULL)
     return TRUE;
-  if (!is_number (node))
-    return refuse (reader, path, _("must be a number in the SI unit, not %s"), type_in_words (node));
+  if (!hl_reader_is_number (node))
+    return hl_reader_refuse (reader, path, _("must be a number in the SI unit, not %s"), hl_reader_type (node));
   number = json_node_get_double (node);
   if (!(number >= least && number <= most))
     {
       g_autofree char *why = g_strdup_printf (_("%g lies outside %g to %g (SI)"), number, least, most);
-      return refuse_as (reader, HL_PLANT_ERROR_OUT_OF_RANGE, path, why);
+      return hl_reader_refuse_as (reader, HL_PLANT_ERROR_OUT_OF_RANGE, path, why);
     }
   *result = number;
   return TRUE;
 }
 
 static gboolean
-read_site (Reader *reader, JsonObject *top)
+read_site (HlReader *reader, JsonObject *top)
 {
   static const char *const known[] = { "altitude", "ambient_T", "wet_bulb_T", "dead_T", "dead_p", NULL };
   HlSite *site = &reader->plant->site;
   JsonObject *object = NULL;
-  if (!read_object (reader, top, "site", &object))
+  if (!hl_reader_object (reader, top, "site", &object))
     return FALSE;
   if (object == NULL)
     return TRUE;
-  reader->plant->site_extra = unknown_members (object, known, NULL);
+  reader->plant->site_extra = hl_reader_unknown (object, known, NULL);
   /* ISO 2533's troposphere ends at 11 km; the other limits keep to the surface of the Earth. */
   return read_site_number (reader, object, "altitude", -1000.0, 11000.0, &site->altitude)
          && read_site_number (reader, object, "ambient_T", 173.15, 373.15, &site->ambient_T)
@@ -627,30 +424,30 @@ read_site (Reader *reader, JsonObject *top)
 }
 
 static gboolean
-read_header (Reader *reader, JsonObject *top)
+read_header (HlReader *reader, JsonObject *top)
 {
-  JsonNode *version = member (top, "heatloom");
+  JsonNode *version = hl_reader_member (top, "heatloom");
   const char *title = "", *units = "metric", *formulation = "if97";
-  if (version == NULL || !is_number (version))
-    return refuse_as (reader, HL_PLANT_ERROR_FOREIGN, NULL, _("this is JSON, but no Heatloom plant: the key \"heatloom\" with the version number is missing"));
+  if (version == NULL || !hl_reader_is_number (version))
+    return hl_reader_refuse_as (reader, HL_PLANT_ERROR_FOREIGN, NULL, _("this is JSON, but no Heatloom plant: the key \"heatloom\" with the version number is missing"));
   if (json_node_get_double (version) > VERSION)
-    return refuse_as (reader, HL_PLANT_ERROR_FOREIGN, "heatloom", _("this file was made by a later version of Heatloom; update the program"));
+    return hl_reader_refuse_as (reader, HL_PLANT_ERROR_FOREIGN, "heatloom", _("this file was made by a later version of Heatloom; update the program"));
   if (json_node_get_double (version) < VERSION)
-    return refuse_as (reader, HL_PLANT_ERROR_FOREIGN, "heatloom", _("must be 1, the version of the file format"));
-  if (!read_string (reader, top, "title", &title) || !read_string (reader, top, "units", &units)
-      || !read_string (reader, top, "formulation", &formulation))
+    return hl_reader_refuse_as (reader, HL_PLANT_ERROR_FOREIGN, "heatloom", _("must be 1, the version of the file format"));
+  if (!hl_reader_string (reader, top, "title", &title) || !hl_reader_string (reader, top, "units", &units)
+      || !hl_reader_string (reader, top, "formulation", &formulation))
     return FALSE;
   if (!hl_unit_set_from_id (units, &reader->plant->units))
-    return refuse (reader, "units", _("“%s” is none of “metric”, “si”, “us”"), units);
+    return hl_reader_refuse (reader, "units", _("“%s” is none of “metric”, “si”, “us”"), units);
   if (!g_str_equal (formulation, "if97"))
-    return refuse (reader, "formulation", _("“%s” is not known; write \"if97\""), formulation);
+    return hl_reader_refuse (reader, "formulation", _("“%s” is not known; write \"if97\""), formulation);
   g_ref_string_release (reader->plant->title);
   reader->plant->title = g_ref_string_new (title);
   return read_site (reader, top);
 }
 
 static gboolean
-read_top (Reader *reader, JsonObject *top)
+read_top (HlReader *reader, JsonObject *top)
 {
   static const char *const known[] = { "heatloom", "title", "units", "formulation", "site", "components", "streams", "shafts", "plant", NULL };
   g_autoptr (GHashTable) ids = g_hash_table_new (g_str_hash, g_str_equal);
@@ -661,7 +458,7 @@ read_top (Reader *reader, JsonObject *top)
   if (!read_items (reader, top, "streams", ids, read_stream) || !read_items (reader, top, "shafts", ids, read_shaft))
     return FALSE;
   hl_plant_index (plant);
-  plant->extra = unknown_members (top, known, NULL);
+  plant->extra = hl_reader_unknown (top, known, NULL);
   return read_all_values (reader, top);
 }
 
@@ -671,7 +468,7 @@ hl_plant_from_json (const char *text, gssize length, const char *name, GError **
   g_autoptr (HlPlant) plant = NULL;
   g_autoptr (GHashTable) lines = NULL;
   g_autoptr (JsonNode) root = NULL;
-  Reader reader = { NULL };
+  HlReader reader = { NULL };
   gsize size;
   g_return_val_if_fail (text != NULL, NULL);
   size = length >= 0 ? (gsize) length : strlen (text);
@@ -692,7 +489,7 @@ hl_plant_from_json (const char *text, gssize length, const char *name, GError **
   reader.plant = plant;
   if (!JSON_NODE_HOLDS_OBJECT (root))
     {
-      refuse_as (&reader, HL_PLANT_ERROR_FOREIGN, NULL, _("this is JSON, but no Heatloom plant: it must be an object in { }"));
+      hl_reader_refuse_as (&reader, HL_PLANT_ERROR_FOREIGN, NULL, _("this is JSON, but no Heatloom plant: it must be an object in { }"));
       return NULL;
     }
   if (!read_top (&reader, json_node_get_object (root)))

@@ -40,6 +40,8 @@ test_refusals (void)
     { "\"id\": \"G1\"", "\"id\": \"G 1\"", HL_PLANT_ERROR_CONTENT, "“G 1” is no id" },
     { "\"id\": \"G1\"", "\"id\": \"\"", HL_PLANT_ERROR_CONTENT, "“” is no id" },
     { "\"id\": \"G1\"", "\"id\": \"Gaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaaa\"", HL_PLANT_ERROR_CONTENT, "is no id" },
+    { "\"id\": \"G1\"", "\"id\": \"GGéééééééééééééééééééééééééééééééééééééééééé\"", HL_PLANT_ERROR_CONTENT, "“GGééééééééééééééééééééééééééééééééééééé…” is no id" },
+    { "\"net_power\"", "\"nété\"", HL_PLANT_ERROR_CONTENT, "plant.given.nété: the plant has no quantity “nété”" },
     { "\"id\": \"G1\"", "\"id\": 5", HL_PLANT_ERROR_CONTENT, "components[2].id: must be a text" },
     { "\"id\": \"G1\"", "\"id\": \"T1\"", HL_PLANT_ERROR_CONTENT, "components[2].id: “T1” is already the id of an item of components; ids must be unique, so rename one" },
     { "\"kind\": \"generator\", ", "", HL_PLANT_ERROR_CONTENT, "components[2] \"G1\".kind: is missing; it is one of boiler, heat_input" },
