@@ -25,8 +25,7 @@ missing_packages () {
 need_packages () {
   if ! command -v dpkg-query >/dev/null 2>&1
   then
-    say "This is not a Debian system, so nothing is installed.  On Debian the build needs:" \
-        $* >&2
+    say "This is not a Debian system, so nothing is installed.  On Debian the packages are: $*" >&2
     return 0
   fi
   missing=$(missing_packages "$@")
