@@ -259,29 +259,43 @@ append_ring (GtkSnapshot *snapshot, double x, double y, double r, float width, c
 }
 
 /* One tile of the dotted ground, repeated by the renderer. */
-static void
-draw_ground (HlCanvas *self, GtkSnapshot *snapshot, double width, double height)
+static GskRenderNode *
+dots_new (HlCanvas *self, double width, double height)
 {
-  const HlTheme *theme = hl_appearance_theme ();
-  GdkRGBA ground = rgba (&theme->ground, 1), dot = rgba (&theme->grid, 1);
+  GdkRGBA dot = rgba (&hl_appearance_theme ()->grid, 1);
+  GtkSnapshot *snapshot = gtk_snapshot_new ();
   double step = DOT_STEP * self->zoom;
-  graphene_rect_t whole = GRAPHENE_RECT_INIT (0, 0, width, height), tile;
+  graphene_rect_t tile;
 
-  gtk_snapshot_append_color (snapshot, &ground, &whole);
   while (step < 14)
     step *= 2;
   tile = GRAPHENE_RECT_INIT (fmod (self->ox, step) - step / 2, fmod (self->oy, step) - step / 2, step, step);
-  gtk_snapshot_push_repeat (snapshot, &whole, &tile);
+  gtk_snapshot_push_repeat (snapshot, &GRAPHENE_RECT_INIT (0, 0, width, height), &tile);
   gtk_snapshot_append_color (snapshot, &dot, &GRAPHENE_RECT_INIT (tile.origin.x + step / 2 - 0.75, tile.origin.y + step / 2 - 0.75, 1.5, 1.5));
   gtk_snapshot_pop (snapshot);
+  return gtk_snapshot_free_to_node (snapshot);
 }
 
+/* The dots are kept as a node, too: GSK takes a repeated tile for another one unless it is the very same. */
 static void
-append_kept (GtkSnapshot *snapshot, GArray *nodes)
+draw_ground (HlCanvas *self, GtkSnapshot *snapshot, double width, double height)
 {
-  for (guint n = 0; n < nodes->len; n++)
-    if (g_array_index (nodes, HlKeptNode, n).node != NULL)
-      gtk_snapshot_append_node (snapshot, g_array_index (nodes, HlKeptNode, n).node);
+  GdkRGBA ground = rgba (&hl_appearance_theme ()->ground, 1);
+  const double places[] = { width, height, self->ox, self->oy, self->zoom };
+  GByteArray *key = g_byte_array_new ();
+
+  gtk_snapshot_append_color (snapshot, &ground, &GRAPHENE_RECT_INIT (0, 0, width, height));
+  add_flags (key, FALSE, FALSE);
+  add_bytes (key, places, sizeof places);
+  if (!is_same_key (self->dots.key, key))
+    {
+      hl_kept_node_clear (&self->dots);
+      self->dots.key = g_byte_array_ref (key);
+      self->dots.node = dots_new (self, width, height);
+    }
+  if (self->dots.node != NULL)
+    gtk_snapshot_append_node (snapshot, self->dots.node);
+  g_byte_array_unref (key);
 }
 
 static void
@@ -290,6 +304,19 @@ push_view (HlCanvas *self, GtkSnapshot *snapshot)
   gtk_snapshot_save (snapshot);
   gtk_snapshot_translate (snapshot, &GRAPHENE_POINT_INIT (self->ox, self->oy));
   gtk_snapshot_scale (snapshot, self->zoom, self->zoom);
+}
+
+/* Each under a transform of its own: of a scaled group GSK repaints everything when one member changes. */
+static void
+append_kept (HlCanvas *self, GtkSnapshot *snapshot, GArray *nodes)
+{
+  for (guint n = 0; n < nodes->len; n++)
+    if (g_array_index (nodes, HlKeptNode, n).node != NULL)
+      {
+        push_view (self, snapshot);
+        gtk_snapshot_append_node (snapshot, g_array_index (nodes, HlKeptNode, n).node);
+        gtk_snapshot_restore (snapshot);
+      }
 }
 
 /* Marks over everything, in view pixels */
@@ -464,16 +491,12 @@ hl_canvas_draw (HlCanvas *self, GtkSnapshot *snapshot)
 {
   GtkWidget *widget = GTK_WIDGET (self);
   draw_ground (self, snapshot, gtk_widget_get_width (widget), gtk_widget_get_height (widget));
-  push_view (self, snapshot);
-  append_kept (snapshot, self->shafts);
-  append_kept (snapshot, self->lines);
-  gtk_snapshot_restore (snapshot);
+  append_kept (self, snapshot, self->shafts);
+  append_kept (self, snapshot, self->lines);
   for (GtkWidget *child = gtk_widget_get_first_child (widget); child != NULL; child = gtk_widget_get_next_sibling (child))
     if (HL_IS_COMPONENT_ITEM (child))
       gtk_widget_snapshot_child (widget, child, snapshot);
-  push_view (self, snapshot);
-  append_kept (snapshot, self->titles);
-  append_kept (snapshot, self->labels);
-  gtk_snapshot_restore (snapshot);
+  append_kept (self, snapshot, self->titles);
+  append_kept (self, snapshot, self->labels);
   draw_marks (self, snapshot);
 }

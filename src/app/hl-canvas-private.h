@@ -41,6 +41,7 @@ struct _HlCanvas {
   gboolean    is_stale;
   GHashTable *items;                 /* id -> HlComponentItem */
   GArray     *lines, *labels, *titles, *shafts;   /* HlKeptNode, in plant order */
+  HlKeptNode  dots;                  /* the dotted ground */
 
   /* gesture in progress */
   HlCanvasMode mode;

@@ -427,7 +427,10 @@ hl_canvas_size_allocate (GtkWidget *widget, int width, int height, int baseline)
   HlCanvas *self = HL_CANVAS (widget);
   /* A fitted view follows the size, not the plant: what is being edited must not jump. */
   if (self->is_fitted && (width != self->fit_width || height != self->fit_height))
-    fit_into (self, width, height);
+    {
+      fit_into (self, width, height);
+      trace_later (self);
+    }
   for (GtkWidget *child = gtk_widget_get_first_child (widget); child != NULL; child = gtk_widget_get_next_sibling (child))
     {
       GskTransform *transform;
@@ -506,6 +509,7 @@ hl_canvas_finalize (GObject *object)
   g_clear_pointer (&self->titles, g_array_unref);
   g_clear_pointer (&self->shafts, g_array_unref);
   g_clear_pointer (&self->targets, g_array_unref);
+  hl_kept_node_clear (&self->dots);
   G_OBJECT_CLASS (hl_canvas_parent_class)->finalize (object);
 }
 
