@@ -452,6 +452,7 @@ draw_drop (HlCanvas *self, GtkSnapshot *snapshot)
   double w, h;
   cairo_t *cr;
 
+  ghost->turn = self->drop_turn;
   hl_component_half_size (ghost, &hw, &hh);
   w = hw * HL_UNIT + 4;
   h = hh * HL_UNIT + 4;

@@ -436,14 +436,44 @@ dropped_kind (const GValue *value)
   return hl_kind_lookup (text + strlen (HL_SHELF_DRAG_PREFIX));
 }
 
+/* The segment of a line that is nearest to a point: its direction, and the point drawn onto it. */
+static int
+snap_to_line (const HlStreamPlace *place, int *gx, int *gy)
+{
+  double x = *gx * HL_UNIT, y = *gy * HL_UNIT, nearest = G_MAXDOUBLE;
+  int turn = 0;
+  for (guint n = 0; n + 1 < place->n_points; n++)
+    {
+      HlPoint a = place->points[n], b = place->points[n + 1];
+      double px = CLAMP (x, MIN (a.x, b.x), MAX (a.x, b.x)), py = CLAMP (y, MIN (a.y, b.y), MAX (a.y, b.y));
+      if (hypot (px - x, py - y) >= nearest)
+        continue;
+      nearest = hypot (px - x, py - y);
+      *gx = (int) floor (px / HL_UNIT + 0.5);
+      *gy = (int) floor (py / HL_UNIT + 0.5);
+      turn = fabs (b.x - a.x) > fabs (b.y - a.y) ? (b.x > a.x ? 0 : 2) : (b.y > a.y ? 1 : 3);
+    }
+  return turn;
+}
+
+/* Where a component dragged from the shelf would stand, and in which line. */
+static void
+aim_drop (HlCanvas *self, const HlKind *kind, double vx, double vy)
+{
+  hl_canvas_to_grid (self, vx, vy, &self->drop_x, &self->drop_y);
+  self->drop_stream = hl_edit_can_insert (kind) ? stream_at (self, vx, vy) : -1;
+  self->drop_turn = 0;
+  if (self->drop_stream >= 0)
+    self->drop_turn = snap_to_line (hl_layout_stream (self->layout, (guint) self->drop_stream), &self->drop_x, &self->drop_y);
+}
+
 static GdkDragAction
 drop_motion_cb (GtkDropTarget *target, double vx, double vy, HlCanvas *self)
 {
   self->drop_kind = dropped_kind (gtk_drop_target_get_value (target));
   if (self->drop_kind == NULL)
     return gtk_drop_target_get_value (target) == NULL ? GDK_ACTION_COPY : 0;
-  hl_canvas_to_grid (self, vx, vy, &self->drop_x, &self->drop_y);
-  self->drop_stream = hl_edit_can_insert (self->drop_kind) ? stream_at (self, vx, vy) : -1;
+  aim_drop (self, self->drop_kind, vx, vy);
   hl_trace ("over %s %d %d", self->drop_kind->id, self->drop_x, self->drop_y);
   gtk_widget_queue_draw (GTK_WIDGET (self));
   return GDK_ACTION_COPY;
@@ -464,14 +494,16 @@ drop_cb (GtkDropTarget *target, const GValue *value, double vx, double vy, HlCan
   int gx, gy, stream;
   if (kind == NULL)
     return FALSE;
-  hl_canvas_to_grid (self, vx, vy, &gx, &gy);
-  stream = hl_edit_can_insert (kind) ? stream_at (self, vx, vy) : -1;
+  aim_drop (self, kind, vx, vy);
+  stream = self->drop_stream;
+  gx = self->drop_x;
+  gy = self->drop_y;
   drop_leave_cb (target, self);
   self->is_fitted = FALSE;     /* the view stays where the hand is */
   gtk_widget_grab_focus (GTK_WIDGET (self));
   if (stream >= 0)
-    gtk_widget_activate_action (GTK_WIDGET (self), "win.insert-component", "(ssii)", kind->id,
-                                hl_plant_stream (hl_canvas_plant (self), (guint) stream)->id, gx, gy);
+    gtk_widget_activate_action (GTK_WIDGET (self), "win.insert-component", "(ssiii)", kind->id,
+                                hl_plant_stream (hl_canvas_plant (self), (guint) stream)->id, gx, gy, self->drop_turn);
   else
     gtk_widget_activate_action (GTK_WIDGET (self), "win.add-component-at", "(sii)", kind->id, gx, gy);
   return TRUE;

@@ -60,7 +60,7 @@ struct _HlCanvas {
   HlPortRef   hot;                   /* port under the pointer */
   gboolean    is_space_down;
   const HlKind *drop_kind;           /* dragged from the shelf over the canvas */
-  int         drop_x, drop_y;
+  int         drop_x, drop_y, drop_turn;
   int         drop_stream;           /* index of the stream it would be inserted into, or -1 */
   GtkWidget  *popover;               /* context menu or list of ports */
   guint       trace_source;

@@ -286,6 +286,17 @@ through_ports (const HlComponent *component, const char **inlet, const char **ou
   return *inlet != NULL && *outlet != NULL;
 }
 
+/* Whether the line goes straight through the symbol from left to right, so that it can be turned to lie in any line. */
+static gboolean
+runs_through (const HlComponent *component)
+{
+  const char *inlet, *outlet;
+  guint n_in, n_out;
+  return through_ports (component, &inlet, &outlet)
+         && hl_component_find_port (component, inlet, &n_in) && hl_component_find_port (component, outlet, &n_out)
+         && hl_component_port (component, n_in).kind->side == HL_SIDE_LEFT && hl_component_port (component, n_out).kind->side == HL_SIDE_RIGHT;
+}
+
 gboolean
 hl_edit_can_insert (const HlKind *kind)
 {
@@ -295,12 +306,12 @@ hl_edit_can_insert (const HlKind *kind)
 }
 
 HlPlant *
-hl_edit_insert (const HlPlant *plant, const char *stream_id, const HlKind *kind, int x, int y, const char **id, GError **error)
+hl_edit_insert (const HlPlant *plant, const char *stream_id, const HlKind *kind, int x, int y, int turn, const char **id, GError **error)
 {
   const HlStream *stream = hl_plant_find_stream (plant, stream_id);
-  const HlComponent *component;
+  HlComponent *component;
   const char *inlet, *outlet, *own_id;
-  g_autofree char *free_id = NULL;
+  g_autofree char *free_id = NULL, *component_id = NULL;
   HlPlant *result;
   HlStream *before;
 
@@ -309,9 +320,13 @@ hl_edit_insert (const HlPlant *plant, const char *stream_id, const HlKind *kind,
       g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_CONTENT, _("A %s cannot stand in a line; draw lines to its ports"), _(kind->shelf_name));
       return NULL;
     }
-  result = hl_edit_add (plant, kind, x, y, &own_id);
-  component = hl_plant_find_component (result, own_id);
+  component_id = hl_plant_free_id (plant, kind->letter);
+  own_id = g_intern_string (component_id);
+  component = hl_component_new (kind, own_id, x, y);
   through_ports (component, &inlet, &outlet);
+  if (runs_through (component))
+    component->turn = turn;
+  result = hl_plant_with_component (plant, component);
   free_id = hl_plant_free_id (result, "");
   before = hl_stream_copy (stream);
   before->to_id = own_id;

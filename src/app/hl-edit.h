@@ -17,7 +17,8 @@ HlPlant *hl_edit_connect     (const HlPlant *plant, const char *a_id, const char
                               const char **stream, GError **error);
 HlPlant *hl_edit_join_shaft  (const HlPlant *plant, const char *a_id, const char *b_id, GError **error);
 HlPlant *hl_edit_leave_shaft (const HlPlant *plant, const char *id, GError **error);
-HlPlant *hl_edit_insert      (const HlPlant *plant, const char *stream, const HlKind *kind, int x, int y, const char **id, GError **error);
+/* Into a line, at (x, y) on it, turned by @turn quarters where the line runs right (0), down, left or up there. */
+HlPlant *hl_edit_insert      (const HlPlant *plant, const char *stream, const HlKind *kind, int x, int y, int turn, const char **id, GError **error);
 HlPlant *hl_edit_place_label (const HlPlant *plant, const char *stream, gboolean has_place, int x, int y);
 
 /* Whether a line may run between two ports, and if not why. */

@@ -117,15 +117,15 @@ insert_component_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
 {
   HlWindow *self = HL_WINDOW (data);
   const char *kind_id, *stream, *id;
-  int x, y;
+  int x, y, turn;
   const HlKind *kind;
   g_autoptr (GError) error = NULL;
   HlPlant *plant;
 
-  g_variant_get (parameter, "(&s&sii)", &kind_id, &stream, &x, &y);
+  g_variant_get (parameter, "(&s&siii)", &kind_id, &stream, &x, &y, &turn);
   if ((kind = known_kind (self, kind_id)) == NULL)
     return;
-  plant = hl_edit_insert (plant_of (self), stream, kind, x, y, &id, &error);
+  plant = hl_edit_insert (plant_of (self), stream, kind, x, y, turn, &id, &error);
   if (plant == NULL)
     say_error (self, error);
   else
@@ -422,7 +422,7 @@ static const GActionEntry entries[] = {
   { "redo", redo_cb },
   { "add-component", add_component_cb, "s" },
   { "add-component-at", add_component_at_cb, "(sii)" },
-  { "insert-component", insert_component_cb, "(ssii)" },
+  { "insert-component", insert_component_cb, "(ssiii)" },
   { "move", move_cb, "(ii)" },
   { "turn", turn_cb },
   { "mirror", mirror_cb },

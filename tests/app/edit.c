@@ -203,15 +203,16 @@ test_a_valve_is_inserted_into_a_line (void)
   g_autoptr (HlPlant) plant = small_plant ();
   const char *line = hl_plant_stream_at (plant, "C1", "condensate")->id, *id;
   GError *error = NULL;
-  g_autoptr (HlPlant) inserted = hl_edit_insert (plant, line, kind ("valve"), 18, 24, &id, &error);
+  g_autoptr (HlPlant) inserted = hl_edit_insert (plant, line, kind ("valve"), 18, 24, 2, &id, &error);
   g_assert_no_error (error);
   g_assert_cmpuint (hl_plant_n_streams (inserted), ==, 3);
   g_assert_cmpstr (hl_plant_stream_at (inserted, "C1", "condensate")->id, ==, line);
   g_assert_cmpstr (hl_plant_stream_at (inserted, "C1", "condensate")->to_id, ==, id);
   g_assert_cmpstr (hl_plant_stream_at (inserted, "P1", "inlet")->from_id, ==, id);
+  g_assert_cmpint (hl_plant_find_component (inserted, id)->turn, ==, 2);
   g_assert_false (hl_edit_can_insert (kind ("generator")));
   g_assert_false (hl_edit_can_insert (kind ("turbine")));
-  g_assert_null (hl_edit_insert (plant, line, kind ("generator"), 0, 0, NULL, &error));
+  g_assert_null (hl_edit_insert (plant, line, kind ("generator"), 0, 0, 0, NULL, &error));
   g_assert_nonnull (error);
   g_clear_error (&error);
 }
