@@ -14,7 +14,7 @@
 #include "plant/i18n.h"
 
 #define GLANCE_WIDTH 262
-#define GLANCE_FROM_WIDTH 790     /* the glance card needs this much in the work area, beside the diagram */
+#define GLANCE_FROM_WIDTH 740     /* the glance card needs this much in the work area, beside the diagram */
 
 G_DEFINE_FINAL_TYPE (HlWindow, hl_window, GTK_TYPE_APPLICATION_WINDOW)
 
@@ -259,7 +259,7 @@ restore_geometry (HlWindow *self)
   gtk_window_set_default_size (GTK_WINDOW (self), width, height);
   if (hl_settings_get_bool ("window-maximized", FALSE))
     gtk_window_maximize (GTK_WINDOW (self));
-  work_width = width - shelf - remembered ("nameplate-size", 336);
+  work_width = width - shelf - remembered ("nameplate-size", 320);
   gtk_widget_set_size_request (self->glance_bin, GLANCE_WIDTH, -1);
   hl_window_place_diagram (self, is_beside);
   gtk_paned_set_position (self->outer, work_width);
