@@ -49,4 +49,6 @@ xvfb-run -a -s '-screen 0 1600x1000x24 -nolisten tcp' dbus-run-session -- \
   meson test -C "$build" --no-rebuild --print-errorlogs --suite app --logbase window "$@" </dev/null
 
 say ''
-python3 tests/summary.py "$logs/plain.json" "$logs/window.json"
+some=
+[ $# -eq 0 ] || some=--some
+python3 tests/summary.py $some "$logs/plain.json" "$logs/window.json"

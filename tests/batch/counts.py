@@ -8,11 +8,11 @@ import sys
 from tap import SOURCE, main
 
 
-def summary(*tests, status):
+def summary(*tests, status, logs=("log.json",)):
     with open("log.json", "w", encoding="utf-8") as log:
         for test in tests:
             log.write(json.dumps({"name": "t", "stdout": "", "returncode": 0, **test}) + "\n")
-    done = subprocess.run([sys.executable, os.path.join(SOURCE, "tests", "summary.py"), "log.json", "absent.json"],
+    done = subprocess.run([sys.executable, os.path.join(SOURCE, "tests", "summary.py"), *logs],
                           capture_output=True, text=True, timeout=30, check=False)
     assert done.returncode == status, done.stdout + done.stderr
     return done.stdout.splitlines()
@@ -52,6 +52,12 @@ def test_a_timeout_counts():
 def test_a_whole_test_may_be_skipped():
     lines = summary({"result": "SKIP", "stdout": "1..0 # SKIP no display\n"}, {"result": "OK"}, status=0)
     assert lines[-1] == "1 passed, 0 failed, 1 skipped", lines
+
+
+def test_a_log_that_is_missing_is_a_failure():
+    lines = summary({"result": "OK"}, status=1, logs=("log.json", "absent.json"))
+    assert lines[-1] == "1 passed, 1 failed, 0 skipped" and any("absent.json" in line for line in lines), lines
+    assert summary({"result": "OK"}, status=0, logs=("--some", "log.json", "absent.json"))[-1] == "1 passed, 0 failed, 0 skipped"
 
 
 def test_nothing_at_all_is_a_failure():

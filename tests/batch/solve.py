@@ -146,15 +146,17 @@ def test_input_without_end_is_refused():
 
 
 def test_every_output_goes_to_files():
-    out, err = batch("solve", plant("loop.heatloom"), "--json", "ö.json", "--csv", "a.csv", "--drawing", "a.svg",
-                     "--diagram", "ts", "ts.svg")
+    out, err = batch("solve", plant("loop.heatloom"), "--json", "ö.json", "--csv", "a.csv", "--ledger", "a.txt",
+                     "--drawing", "a.svg", "--diagram", "ts", "ts.svg")
     assert err == "" and "10.0" in out
-    assert sorted(os.listdir()) == ["a.csv", "a.svg", "ts.svg", "ö.json"]       # and nothing temporary
+    assert sorted(os.listdir()) == ["a.csv", "a.svg", "a.txt", "ts.svg", "ö.json"]       # and nothing temporary
     with open("ö.json", encoding="utf-8") as file:
         assert json.load(file) == solved()
     with open("a.csv", encoding="utf-8", newline="") as file:
         rows = list(csv.reader(file))
     assert len(rows) == 5 and all(len(row) == len(rows[0]) for row in rows)
+    with open("a.txt", encoding="utf-8") as file:
+        assert "480.0" in file.read()
     for name in ("a.svg", "ts.svg"):
         assert ElementTree.parse(name).getroot().tag == "{http://www.w3.org/2000/svg}svg"
 
@@ -188,7 +190,7 @@ def test_standard_output_takes_one_of_them():
 
 
 def test_a_file_that_cannot_be_written():
-    for option in (["--json"], ["--csv"], ["--drawing"], ["--diagram", "ts"]):
+    for option in (["--json"], ["--csv"], ["--ledger"], ["--drawing"], ["--diagram", "ts"]):
         refused("solve", plant("loop.heatloom"), *option, "/nowhere/at/all/x.svg", status=3, says="/nowhere/at/all/x.svg")
 
 

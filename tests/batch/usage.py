@@ -21,7 +21,7 @@ def test_every_command_has_its_help():
         assert "Caution" in out
         assert "xlsx" not in out and "--report" not in out
     out, _ = batch("solve", "--help")
-    for option in ("--set ADDRESS=VALUE", "--json FILE", "--csv FILE", "--drawing FILE", "--diagram ts FILE"):
+    for option in ("--set ADDRESS=VALUE", "--json FILE", "--csv FILE", "--ledger FILE", "--drawing FILE", "--diagram ts FILE"):
         assert option in out, option
 
 
