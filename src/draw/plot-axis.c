@@ -13,6 +13,14 @@ round_step (double wanted)
   return decade * (mantissa <= 1.0 + 1e-9 ? 1.0 : mantissa <= 2.0 + 1e-9 ? 2.0 : mantissa <= 5.0 + 1e-9 ? 5.0 : 10.0);
 }
 
+/* Ends of the range lie on multiples of this: half a step of 1, a quarter of 2, a fifth of 5. */
+static double
+round_end (double step)
+{
+  double mantissa = step / pow (10.0, floor (log10 (step) + 1e-9));
+  return step / (mantissa < 1.5 ? 2.0 : mantissa < 3.5 ? 4.0 : 5.0);
+}
+
 static int
 decimals_of (double step)
 {
@@ -40,7 +48,7 @@ hl_plot_axis_set (HlPlotAxis *axis, HlDimension dimension, HlUnitSet units, doub
                   double pixel_low, double pixel_high, double spacing)
 {
   double shown_low = hl_units_to_display (low, dimension, units), shown_high = hl_units_to_display (high, dimension, units);
-  double length = fabs (pixel_high - pixel_low), half;
+  double length = fabs (pixel_high - pixel_low), end;
   if (!(shown_high > shown_low))
     shown_high = shown_low + MAX (1e-9, fabs (shown_low) * 1e-6);
   axis->dimension = dimension;
@@ -48,10 +56,10 @@ hl_plot_axis_set (HlPlotAxis *axis, HlDimension dimension, HlUnitSet units, doub
   axis->pixel_low = pixel_low;
   axis->pixel_high = pixel_high;
   axis->step = round_step ((shown_high - shown_low) / CLAMP (length / spacing, 1.0, HL_PLOT_MAX_TICKS - 4));
-  half = axis->step / 2.0;
+  end = round_end (axis->step);
   /* A range that misses a round end by less than a thousandth keeps to it. */
-  shown_low = half * floor (shown_low / half + 2e-3);
-  shown_high = half * ceil (shown_high / half - 2e-3);
+  shown_low = end * floor (shown_low / end + 2e-3);
+  shown_high = end * ceil (shown_high / end - 2e-3);
   axis->low = hl_units_from_display (shown_low, dimension, units);
   axis->high = hl_units_from_display (shown_high, dimension, units);
   set_ticks (axis, shown_low, shown_high);

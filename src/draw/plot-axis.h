@@ -18,7 +18,7 @@ typedef struct {
   char        tick_texts[HL_PLOT_MAX_TICKS][16];
 } HlPlotAxis;
 
-/* The least round range that holds @low to @high [SI]: ends on ticks or half-way between two; ticks stand at least @spacing pixels apart. */
+/* The least round range that holds @low to @high [SI]: ends on ticks or a round part of a step beyond; ticks stand at least @spacing pixels apart. */
 void   hl_plot_axis_set        (HlPlotAxis *axis, HlDimension dimension, HlUnitSet units, double low, double high,
                                 double pixel_low, double pixel_high, double spacing);
 double hl_plot_axis_to_pixel   (const HlPlotAxis *axis, double value);

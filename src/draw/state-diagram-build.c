@@ -43,7 +43,7 @@ hl_state_diagram_set_axes (HlStateDiagram *diagram, const HlCycle *cycle)
 {
   const HlDome *dome = diagram->dome;
   double size = diagram->text_size, left = hl_plot_axis_room_left (size), below = hl_plot_axis_room_below (size);
-  double right = 1.3 * size, above = 0.8 * size, T_critical, T_triple, coldest;
+  double right = 1.3 * size, above = 0.8 * size, T_critical, T_triple, coldest, share;
   Range s, T;
   HlFluidLimits limits;
   hl_fluid_limits (cycle->fluid, &limits);
@@ -54,16 +54,19 @@ hl_state_diagram_set_axes (HlStateDiagram *diagram, const HlCycle *cycle)
     T = (Range) { MAX (T_triple + 30.0, 0.45 * T_critical), T_critical };
   coldest = T.low;
   range_take (&T, T_critical + 0.05 * (T_critical - T.low));
-  T.high = MAX (T_critical + 0.06 * (T_critical - T.low), T.high + 0.05 * (T.high - T.low));
   T.low = MAX (T.low - 0.12 * (T.high - T.low), MIN (T.low, T_triple));
+  /* Above the hottest state there is room for the name of its isobar. */
+  share = MIN (2.4 * size / MAX (diagram->height - above - below, 1.0), 0.2);
+  T.high = (T.high - share * T.low) / (1.0 - share);
   range_take (&s, hl_dome_entropy (dome, T.low, 0.0));
   range_take (&s, hl_dome_entropy (dome, coldest, 1.0));
   s.high += 0.045 * (s.high - s.low);
   diagram->frame = (HlBox) { left, above, MAX (diagram->width - left - right, 20.0), MAX (diagram->height - above - below, 20.0) };
+  /* Figures stand clear of each other, and no more than a dozen of them. */
   hl_plot_axis_set (&diagram->s_axis, HL_DIMENSION_ENTROPY, cycle->units, s.low, s.high,
-                    diagram->frame.x, diagram->frame.x + diagram->frame.width, 6.0 * size);
+                    diagram->frame.x, diagram->frame.x + diagram->frame.width, MAX (5.2 * size, diagram->frame.width / 10.0));
   hl_plot_axis_set (&diagram->T_axis, HL_DIMENSION_TEMPERATURE, cycle->units, T.low, T.high,
-                    diagram->frame.y + diagram->frame.height, diagram->frame.y, 3.8 * size);
+                    diagram->frame.y + diagram->frame.height, diagram->frame.y, MAX (2.5 * size, diagram->frame.height / 12.0));
 }
 
 /* The dome's table is finer than a dotted line needs: points a few pixels apart will do. */
