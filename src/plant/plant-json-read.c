@@ -497,14 +497,34 @@ hl_plant_from_json (const char *text, gssize length, const char *name, GError **
   return g_steal_pointer (&plant);
 }
 
+/* A size of 0 may be a device or a pipe without an end: what is read stays within bounds all the same. */
+static GByteArray *
+read_within_bounds (GFile *file, GError **error)
+{
+  g_autoptr (GFileInputStream) stream = g_file_read (file, NULL, error);
+  g_autoptr (GByteArray) bytes = g_byte_array_new ();
+  guint8 block[16384];
+  gssize n = 1;
+  if (stream == NULL)
+    return NULL;
+  while (n > 0 && bytes->len <= MAX_FILE)
+    {
+      n = g_input_stream_read (G_INPUT_STREAM (stream), block, sizeof block, NULL, error);
+      if (n < 0)
+        return NULL;
+      g_byte_array_append (bytes, block, (guint) n);
+    }
+  return g_steal_pointer (&bytes);
+}
+
 HlPlant *
 hl_plant_load (const char *path, GError **error)
 {
-  g_autofree char *text = NULL, *name = NULL;
+  g_autofree char *name = NULL;
+  g_autoptr (GByteArray) text = NULL;
   g_autoptr (GError) local = NULL;
   g_autoptr (GFile) file = NULL;
   g_autoptr (GFileInfo) info = NULL;
-  gsize length;
   g_return_val_if_fail (path != NULL, NULL);
   name = g_path_get_basename (path);
   file = g_file_new_for_path (path);
@@ -519,10 +539,10 @@ hl_plant_load (const char *path, GError **error)
       g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_FILE, _("%s: larger than %d MiB; this is no plant file"), name, MAX_FILE / 1024 / 1024);
       return NULL;
     }
-  if (info == NULL || !g_file_load_contents (file, NULL, &text, &length, NULL, &local))
+  if (info == NULL || (text = read_within_bounds (file, &local)) == NULL)
     {
       g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_FILE, _("%s could not be read: %s"), path, local->message);
       return NULL;
     }
-  return hl_plant_from_json (text, (gssize) length, name, error);
+  return hl_plant_from_json (text->len > 0 ? (const char *) text->data : "", text->len, name, error);
 }

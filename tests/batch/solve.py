@@ -143,6 +143,7 @@ def test_the_plant_in_the_docs_solves():
 
 def test_input_without_end_is_refused():
     refused("solve", "-", stdin=" " * (20 << 20), status=3, says="larger than")
+    refused("solve", "/dev/zero", status=3, says="larger than")
 
 
 def test_every_output_goes_to_files():
