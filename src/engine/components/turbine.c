@@ -27,6 +27,7 @@ emit_groups (HlEmit *emit, const int *nodes, int n_groups, int section)
       if (!hl_emit_has_value (emit, key))
         {
           hl_system_merge (emit->system, section, efficiency);
+          efficiency = section;
           section_is_used = TRUE;
         }
       hl_emit_done (emit, hl_add_expansion (emit->system, in->fluid, in->p, in->h, out->p, efficiency, out->h), NULL, -1);
