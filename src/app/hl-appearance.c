@@ -79,7 +79,10 @@ load (void)
   g_autofree char *css = NULL;
   g_autoptr (GBytes) sheet = g_resources_lookup_data ("/local/heatloom/Heatloom/style.css", 0, NULL);
   g_autoptr (GBytes) panes = g_resources_lookup_data ("/local/heatloom/Heatloom/style-panes.css", 0, NULL);
-  g_object_set (gtk_settings_get_default (), "gtk-application-prefer-dark-theme", is_dark (), NULL);
+  gboolean was_dark;
+  g_object_get (gtk_settings_get_default (), "gtk-application-prefer-dark-theme", &was_dark, NULL);
+  if (was_dark != is_dark ())      /* setting it anew has GTK read its whole theme again */
+    g_object_set (gtk_settings_get_default (), "gtk-application-prefer-dark-theme", is_dark (), NULL);
   g_return_if_fail (sheet != NULL && panes != NULL);
   css = g_strconcat (colours, (const char *) g_bytes_get_data (sheet, NULL), (const char *) g_bytes_get_data (panes, NULL), NULL);
   hl_compat_load_css (current.provider, css);
@@ -88,8 +91,9 @@ load (void)
 void
 hl_appearance_set (HlAppearance look)
 {
+  gboolean was_dark = is_dark ();
   current.look = look;
-  if (current.provider != NULL)
+  if (current.provider != NULL && is_dark () != was_dark)
     load ();
 }
 
