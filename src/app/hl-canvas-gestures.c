@@ -523,6 +523,8 @@ context_menu (HlCanvas *self)
       g_menu_append (section, _("Connect …"), "win.connect-menu");
       g_menu_append (section, _("Take off its shaft"), "win.leave-shaft");
     }
+  if (n > 1)
+    g_menu_append (section, _("Put on one shaft"), "win.join-selection");
   if (n == 1 && hl_plant_find_stream (hl_canvas_plant (self), ids[0]) != NULL)
     g_menu_append (section, _("Let the label find its place"), "win.reset-label");
   g_menu_append_section (menu, NULL, G_MENU_MODEL (section));

@@ -243,6 +243,42 @@ join_shaft_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
   apply_shaft (self, plant, error, g_strdup_printf (_("Put %s and %s on one shaft"), a_id, b_id));
 }
 
+/* Two or more selected, and each has a shaft. */
+static gboolean
+can_join_selection (HlWindow *self)
+{
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  gboolean is_one_shaft = TRUE;
+  for (guint i = 0; i < n; i++)
+    {
+      const HlComponent *component = hl_plant_find_component (plant_of (self), ids[i]);
+      if (component == NULL || component->kind->shaft == HL_SHAFT_NONE)
+        return FALSE;
+      if (i > 0 && hl_edit_can_join (plant_of (self), ids[0], ids[i], NULL))
+        is_one_shaft = FALSE;
+    }
+  return n >= 2 && !is_one_shaft;
+}
+
+static void
+join_selection_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  HlPlant *plant = hl_plant_ref (plant_of (self));
+  for (guint i = 1; i < n; i++)
+    {
+      HlPlant *next = hl_edit_can_join (plant, ids[0], ids[i], NULL) ? hl_edit_join_shaft (plant, ids[0], ids[i], NULL) : NULL;
+      if (next == NULL)
+        continue;
+      hl_plant_unref (plant);
+      plant = next;
+    }
+  apply_to_selection (self, _("Put %s on one shaft"), plant, TRUE);
+}
+
 static void
 leave_shaft_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
 {
@@ -431,6 +467,7 @@ static const GActionEntry entries[] = {
   { "connect", connect_cb, "(ssss)" },
   { "connect-menu", connect_menu_cb },
   { "join-shaft", join_shaft_cb, "(ss)" },
+  { "join-selection", join_selection_cb },
   { "leave-shaft", leave_shaft_cb },
   { "move-label", move_label_cb, "(sii)" },
   { "reset-label", reset_label_cb },
@@ -486,6 +523,7 @@ hl_window_update_actions (HlWindow *self)
   enable (self, "duplicate", n_components > 0);
   enable (self, "delete", n > 0);
   enable (self, "connect-menu", single != NULL);
+  enable (self, "join-selection", can_join_selection (self));
   enable (self, "leave-shaft", single != NULL && hl_plant_shaft_of (plant, single->id) != NULL);
   enable (self, "reset-label", stream != NULL && stream->has_label_place);
   enable (self, "select-all", has_components);

@@ -196,6 +196,23 @@ test_edits_of_the_selection (void)
   g_assert_true (hl_session_is_selected (session, "T2"));
   act (window, "delete", NULL);
   g_assert_cmpuint (hl_plant_n_components (plant_of (window)), ==, 5);
+
+  /* On and off a shaft. */
+  act (window, "select", "s", "T1");
+  act (window, "leave-shaft", NULL);
+  g_assert_null (hl_plant_shaft_of (plant_of (window), "T1"));
+  g_assert_false (is_enabled (window, "join-selection"));
+  hl_session_select (session, "G1", TRUE);
+  g_assert_true (is_enabled (window, "join-selection"));
+  hl_session_select (session, "C1", TRUE);
+  g_assert_false (is_enabled (window, "join-selection"));      /* a condenser has no shaft */
+  hl_session_select (session, "C1", TRUE);
+  hl_session_select (session, "P1", TRUE);
+  act (window, "join-selection", NULL);
+  g_assert_cmpuint (hl_plant_shaft_of (plant_of (window), "T1")->n_joins, ==, 3);
+  g_assert_false (is_enabled (window, "join-selection"));      /* they are on one already */
+  act (window, "undo", NULL);
+
   act (window, "connect", "(ssss)", "T1", "exhaust", "P1", "inlet");     /* taken: refused, nothing changes */
   g_assert_cmpuint (hl_plant_n_streams (plant_of (window)), ==, 4);
   end_window (window);
