@@ -202,6 +202,30 @@ hl_state_diagram_add_paths (HlStateDiagram *diagram, const HlCycle *cycle)
       }
 }
 
+static void
+clear_text (gpointer text)
+{
+  g_free (((HlDiagramText *) text)->text);
+}
+
+/* Where a small picture has no room for every number, states share dots from farther away: better a dot with three
+ * numbers than one without. */
+static void
+add_marks_and_texts (HlStateDiagram *diagram, const HlCycle *cycle)
+{
+  guint n_background = hl_plot_layer_n (diagram->background);
+  for (double within = 0.6; ; within *= 1.3)
+    {
+      hl_state_diagram_add_marks (diagram, cycle, within * diagram->number_size);
+      if (hl_state_diagram_add_texts (diagram, cycle) || within > 1.5 || cycle->points->len > 100)
+        return;
+      hl_state_diagram_clear_marks (diagram);
+      g_array_set_size (diagram->texts, 0);
+      g_array_set_size (diagram->gaps, 0);
+      g_ptr_array_set_size (diagram->background->series, (int) n_background);
+    }
+}
+
 HlStateDiagram *
 hl_state_diagram_from_cycle (const HlCycle *cycle, double width, double height)
 {
@@ -217,11 +241,11 @@ hl_state_diagram_from_cycle (const HlCycle *cycle, double width, double height)
   diagram->paths = hl_plot_layer_new ();
   diagram->marks = g_array_new (FALSE, TRUE, sizeof (HlMark));
   diagram->texts = g_array_new (FALSE, TRUE, sizeof (HlDiagramText));
+  g_array_set_clear_func (diagram->texts, clear_text);
   diagram->gaps = g_array_new (FALSE, TRUE, sizeof (HlBox));
   hl_state_diagram_set_axes (diagram, cycle);
   hl_state_diagram_add_dome (diagram);
   hl_state_diagram_add_paths (diagram, cycle);
-  hl_state_diagram_add_marks (diagram, cycle);
-  hl_state_diagram_add_texts (diagram, cycle);
+  add_marks_and_texts (diagram, cycle);
   return diagram;
 }

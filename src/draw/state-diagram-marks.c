@@ -113,11 +113,10 @@ add_state (HlStateDiagram *diagram, const HlCycle *cycle, GArray *members)
 
 /* Dots that would overlap become one: the flow that is largest gathers its neighbours, then the next. */
 static void
-add_states (HlStateDiagram *diagram, const HlCycle *cycle)
+add_states (HlStateDiagram *diagram, const HlCycle *cycle, double within)
 {
   guint n = cycle->points->len;
   g_autofree gboolean *is_taken = g_new0 (gboolean, n + 1);
-  double within = 0.6 * diagram->number_size;
   for (guint round = 0; round < n; round++)
     {
       g_autoptr (GArray) members = g_array_new (FALSE, FALSE, sizeof (guint));
@@ -186,8 +185,20 @@ add_ideals (HlStateDiagram *diagram, const HlCycle *cycle)
 }
 
 void
-hl_state_diagram_add_marks (HlStateDiagram *diagram, const HlCycle *cycle)
+hl_state_diagram_add_marks (HlStateDiagram *diagram, const HlCycle *cycle, double within)
 {
-  add_states (diagram, cycle);
+  add_states (diagram, cycle, within);
   add_ideals (diagram, cycle);
+}
+
+void
+hl_state_diagram_clear_marks (HlStateDiagram *diagram)
+{
+  for (guint i = 0; i < diagram->marks->len; i++)
+    {
+      HlMark *mark = &g_array_index (diagram->marks, HlMark, i);
+      g_free (mark->streams);
+      g_free (mark->text);
+    }
+  g_array_set_size (diagram->marks, 0);
 }

@@ -84,10 +84,13 @@ HlStateDiagram *hl_state_diagram_from_cycle (const HlCycle *cycle, double width,
 void            hl_state_diagram_set_axes   (HlStateDiagram *diagram, const HlCycle *cycle);
 void            hl_state_diagram_add_dome   (HlStateDiagram *diagram);
 void            hl_state_diagram_add_paths  (HlStateDiagram *diagram, const HlCycle *cycle);
-void            hl_state_diagram_add_marks  (HlStateDiagram *diagram, const HlCycle *cycle);
+/* States closer than @within pixels share a dot. */
+void            hl_state_diagram_add_marks  (HlStateDiagram *diagram, const HlCycle *cycle, double within);
 GArray         *hl_state_diagram_add_isobars   (HlStateDiagram *diagram, const HlCycle *cycle, HlPlotLabels *labels);
 void            hl_state_diagram_label_isobars (HlStateDiagram *diagram, const HlCycle *cycle, const GArray *lines, HlPlotLabels *labels);
-void            hl_state_diagram_add_texts  (HlStateDiagram *diagram, const HlCycle *cycle);
+/* FALSE where some state's number found no room. */
+gboolean        hl_state_diagram_add_texts  (HlStateDiagram *diagram, const HlCycle *cycle);
+void            hl_state_diagram_clear_marks (HlStateDiagram *diagram);
 /* Size of a text's box, good for every theme. */
 void            hl_state_diagram_text_size  (const char *text, double size, gboolean is_bold, double *width, double *height);
 /* Baseline of a text below the top of its box, as a share of the size. */

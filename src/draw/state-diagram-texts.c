@@ -178,12 +178,13 @@ add_gap (HlStateDiagram *diagram, const HlBox *box)
   g_array_append_val (diagram->gaps, gap);
 }
 
-void
+gboolean
 hl_state_diagram_add_texts (HlStateDiagram *diagram, const HlCycle *cycle)
 {
   HlBox inside = { diagram->frame.x + 2.0, diagram->frame.y + 1.0, diagram->frame.width - 3.0, diagram->frame.height - 3.0 };
   g_autoptr (HlPlotLabels) labels = hl_plot_labels_new (&inside);
   g_autoptr (GArray) lines = NULL;
+  gboolean is_complete = TRUE;
   for (guint i = 0; i < hl_plot_layer_n (diagram->paths); i++)
     add_ink (diagram, labels, hl_plot_layer_series (diagram->paths, i), 1.0);
   add_ink (diagram, labels, diagram->outline, 0.7);
@@ -198,8 +199,14 @@ hl_state_diagram_add_texts (HlStateDiagram *diagram, const HlCycle *cycle)
   place_marks (diagram, labels, HL_MARK_IDEAL);
   place_qualities (diagram, labels);
   for (guint i = 0; i < diagram->marks->len; i++)
-    if (g_array_index (diagram->marks, HlMark, i).label.is_placed)
-      add_gap (diagram, &g_array_index (diagram->marks, HlMark, i).label.box);
+    {
+      const HlMark *mark = &g_array_index (diagram->marks, HlMark, i);
+      if (mark->label.is_placed)
+        add_gap (diagram, &mark->label.box);
+      else if (mark->kind == HL_MARK_STATE)
+        is_complete = FALSE;
+    }
   for (guint i = 0; i < diagram->texts->len; i++)
     add_gap (diagram, &g_array_index (diagram->texts, HlDiagramText, i).box);
+  return is_complete;
 }

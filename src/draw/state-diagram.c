@@ -29,14 +29,7 @@ hl_state_diagram_free (HlStateDiagram *diagram)
 {
   if (diagram == NULL)
     return;
-  for (guint i = 0; i < diagram->marks->len; i++)
-    {
-      HlMark *mark = &g_array_index (diagram->marks, HlMark, i);
-      g_free (mark->streams);
-      g_free (mark->text);
-    }
-  for (guint i = 0; i < diagram->texts->len; i++)
-    g_free (g_array_index (diagram->texts, HlDiagramText, i).text);
+  hl_state_diagram_clear_marks (diagram);
   g_array_unref (diagram->marks);
   g_array_unref (diagram->texts);
   g_array_unref (diagram->gaps);

@@ -33,8 +33,7 @@ check_cycle (HlCycle *cycle, guint may_miss)
     {
       g_autoptr (HlStateDiagram) diagram = hl_state_diagram_from_cycle (cycle, diagram_sizes[i].width, diagram_sizes[i].height);
       check_diagram (diagram);
-      /* A number that the crowd of a small picture leaves no room for stays out rather than overlap. */
-      g_assert_cmpuint (n_without_number (diagram), <=, may_miss + (diagram_sizes[i].width < 500.0 ? 1 : 0));
+      g_assert_cmpuint (n_without_number (diagram), <=, may_miss);
     }
   hl_cycle_free (cycle);
 }
