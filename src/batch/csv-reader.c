@@ -12,10 +12,7 @@
 
 struct _HlCsvReader {
   FILE    *file;
-  char    *line;              /* the record, raw, with its line ends */
-  gsize    length, room;      /* without the last line end; allocated by getline() */
-  char    *more;              /* further lines of a record with line ends inside quotes */
-  gsize    more_room;
+  GString *line;              /* the record, raw; without its last line end once it is whole */
   GString *unquoted;          /* the fields' texts, each with a final NUL */
   GArray  *starts;            /* of gsize: where each field begins there */
   gulong   line_number, n_lines;
@@ -26,6 +23,7 @@ hl_csv_reader_new (FILE *file)
 {
   HlCsvReader *self = g_new0 (HlCsvReader, 1);
   self->file = file;
+  self->line = g_string_new (NULL);
   self->unquoted = g_string_new (NULL);
   self->starts = g_array_new (FALSE, FALSE, sizeof (gsize));
   return self;
@@ -34,41 +32,46 @@ hl_csv_reader_new (FILE *file)
 void
 hl_csv_reader_free (HlCsvReader *self)
 {
-  /* getline() allocates with malloc(). */
-  free (self->line);
-  free (self->more);
+  g_string_free (self->line, TRUE);
   g_string_free (self->unquoted, TRUE);
   g_array_unref (self->starts);
   g_free (self);
 }
 
 static gboolean
-has_open_quote (const char *text, gsize length)
+has_odd_quotes (const char *text, gsize length)
 {
-  gboolean is_open = FALSE;
+  gboolean is_odd = FALSE;
   for (const char *quote = text; (quote = memchr (quote, '"', length - (gsize) (quote - text))) != NULL; quote++)
-    is_open = !is_open;
-  return is_open;
+    is_odd = !is_odd;
+  return is_odd;
 }
 
-/* Appends the next line to the record; FALSE at the end of the file. */
-static gboolean
+typedef enum { LINE_READ, LINE_NONE, LINE_TOO_LONG } LineOutcome;
+
+/* Appends the next line, with its end, to the record. */
+static LineOutcome
 append_line (HlCsvReader *self)
 {
-  gssize n = getline (&self->more, &self->more_room, self->file);
-  if (n < 0)
-    return FALSE;
-  self->n_lines++;
-  gsize needed = self->length + (gsize) n + 1;
-  if (needed > self->room)
+  char block[4096];
+  gsize n = 0, start = self->line->len;
+  int c;
+  while ((c = getc_unlocked (self->file)) != EOF)
     {
-      self->room = MAX (needed, 2 * self->room);
-      self->line = realloc (self->line, self->room);
-      g_assert (self->line != NULL);
+      block[n++] = (char) c;
+      if (n == sizeof block || c == '\n')
+        {
+          g_string_append_len (self->line, block, (gssize) n);
+          n = 0;
+        }
+      if (c == '\n' || self->line->len > LONGEST_RECORD)
+        break;
     }
-  memcpy (self->line + self->length, self->more, (gsize) n + 1);
-  self->length += (gsize) n;
-  return TRUE;
+  g_string_append_len (self->line, block, (gssize) n);
+  if (self->line->len == start)
+    return LINE_NONE;
+  self->n_lines++;
+  return self->line->len > LONGEST_RECORD ? LINE_TOO_LONG : LINE_READ;
 }
 
 static void
@@ -85,8 +88,8 @@ split_fields (HlCsvReader *self)
   g_array_set_size (self->starts, 0);
   gsize start = 0;
   gboolean in_quotes = FALSE;
-  const char *end = self->line + self->length;
-  for (const char *c = self->line; c < end; c++)
+  const char *end = self->line->str + self->line->len;
+  for (const char *c = self->line->str; c < end; c++)
     if (*c == '"' && in_quotes && c + 1 < end && c[1] == '"')
       g_string_append_c (self->unquoted, *c++);
     else if (*c == '"')
@@ -108,33 +111,54 @@ fail (GError **error, const char *what, gulong line)
   return HL_CSV_ERROR;
 }
 
+static void
+drop_byte_order_mark (GString *line)
+{
+  if (g_str_has_prefix (line->str, "\xef\xbb\xbf"))
+    g_string_erase (line, 0, 3);
+}
+
+static HlCsvOutcome
+fail_line (HlCsvReader *self, LineOutcome outcome, gboolean in_quotes, GError **error)
+{
+  if (outcome == LINE_TOO_LONG)
+    return fail (error, in_quotes ? _("a quote is not closed within 16 MiB") : _("the line is longer than 16 MiB; this is no table"),
+                 self->line_number);
+  if (ferror (self->file))
+    return fail (error, g_strerror (errno), self->n_lines + 1);
+  return in_quotes ? fail (error, _("a quote is opened and never closed"), self->line_number) : HL_CSV_END;
+}
+
 HlCsvOutcome
 hl_csv_reader_next (HlCsvReader *self, GError **error)
 {
-  gssize n;
+  LineOutcome outcome;
+  const char *text;
   do
     {
-      errno = 0;
-      n = getline (&self->line, &self->room, self->file);
-      self->line_number = ++self->n_lines;
-      if (n < 0)
-        return ferror (self->file) ? fail (error, g_strerror (errno), self->line_number) : HL_CSV_END;
-      /* A byte order mark is no part of the first column's name. */
-      if (self->line_number == 1 && n >= 3 && memcmp (self->line, "\xef\xbb\xbf", 3) == 0)
-        memmove (self->line, self->line + 3, (gsize) (n -= 3) + 1);
+      g_string_set_size (self->line, 0);
+      self->line_number = self->n_lines + 1;
+      if ((outcome = append_line (self)) != LINE_READ)
+        return fail_line (self, outcome, FALSE, error);
+      /* It is no part of the first column's name. */
+      if (self->line_number == 1)
+        drop_byte_order_mark (self->line);
+      text = self->line->str;
     }
-  while (self->line[0] == '#' || self->line[strspn (self->line, " \t\r\n")] == '\0');
+  while (text[0] == '#' || text[strspn (text, " \t\r\n")] == '\0');
 
-  self->length = (gsize) n;
-  while (has_open_quote (self->line, self->length))
+  gboolean in_quotes = has_odd_quotes (self->line->str, self->line->len);
+  while (in_quotes)
     {
-      if (self->length > LONGEST_RECORD)
-        return fail (error, _("a quote is not closed within 16 MiB"), self->line_number);
-      if (!append_line (self))
-        return fail (error, _("a quote is opened and never closed"), self->line_number);
+      gsize before = self->line->len;
+      if ((outcome = append_line (self)) != LINE_READ)
+        return fail_line (self, outcome, TRUE, error);
+      in_quotes ^= has_odd_quotes (self->line->str + before, self->line->len - before);
     }
-  while (self->length > 0 && (self->line[self->length - 1] == '\n' || self->line[self->length - 1] == '\r'))
-    self->length--;
+  gsize length = self->line->len;
+  while (length > 0 && (self->line->str[length - 1] == '\n' || self->line->str[length - 1] == '\r'))
+    length--;
+  g_string_truncate (self->line, length);
   split_fields (self);
   return HL_CSV_RECORD;
 }
@@ -160,8 +184,8 @@ hl_csv_reader_field (const HlCsvReader *self, guint n)
 const char *
 hl_csv_reader_raw (const HlCsvReader *self, gsize *length)
 {
-  *length = self->length;
-  return self->line;
+  *length = self->line->len;
+  return self->line->str;
 }
 
 void

@@ -144,6 +144,12 @@ def test_tables_that_are_none():
     refused("state", "water", "--table", "absent.csv", status=3, says="absent.csv")
 
 
+def test_a_table_without_end_is_refused():
+    refused("state", "water", "--table", "/dev/zero", status=3, says=["line 1", "16 MiB"])
+    out, err = batch("state", "water", "--table", "-", stdin='p_Pa,T_K\n"' + "1\n" * (9 << 20), status=3)
+    assert "line 2" in err and "quote" in err, err
+
+
 def test_an_open_quote_names_its_line():
     out, err = batch("state", "water", "--table", "-", stdin='p_Pa,T_K\n1e5,300\n"1e5,300\n', status=3)
     assert "line 3" in err and len(out.splitlines()) == 2
