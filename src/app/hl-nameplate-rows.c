@@ -374,6 +374,8 @@ hl_link_row_set (GtkWidget *box, const char *name, const char *text, const char 
   Row *row = row_of (box);
 
   row->id = id;
+  if (strcmp (gtk_label_get_text (GTK_LABEL (row->name)), name) == 0 && strcmp (gtk_label_get_text (GTK_LABEL (row->unit)), text) == 0)
+    return;
   gtk_label_set_text (GTK_LABEL (row->name), name);
   gtk_label_set_text (GTK_LABEL (row->unit), text);
   gtk_widget_set_sensitive (row->control, id != NULL);

@@ -14,6 +14,7 @@ struct _HlNameplate {
   GtkWidget       *scroller;
   char            *subject;       /* whose rows are in the body: "T1 turbine" */
   GHashTable      *drafts;        /* address -> text typed but not taken when the selection changed */
+  char            *file;          /* path of the plant that the drafts belong to */
   gboolean         is_updating;
 };
 
@@ -46,6 +47,19 @@ give_draft_back (GtkWidget *row, gpointer data)
     return;
   hl_quantity_row_put_draft (HL_QUANTITY_ROW (row), text);
   g_hash_table_remove (self->drafts, key);
+}
+
+/* Another file: what was typed into the one before belongs to nobody. */
+static void
+file_changed_cb (HlNameplate *self)
+{
+  const char *path = hl_session_path (self->session);
+
+  if (g_strcmp0 (path, self->file) == 0)
+    return;
+  g_free (self->file);
+  self->file = g_strdup (path);
+  g_hash_table_remove_all (self->drafts);
 }
 
 /* --- update --- */
@@ -182,6 +196,7 @@ static void
 hl_nameplate_finalize (GObject *object)
 {
   g_hash_table_unref (HL_NAMEPLATE (object)->drafts);
+  g_free (HL_NAMEPLATE (object)->file);
   G_OBJECT_CLASS (hl_nameplate_parent_class)->finalize (object);
 }
 
@@ -221,6 +236,7 @@ hl_nameplate_new (HlSession *session)
   gtk_widget_set_parent (self->scroller, GTK_WIDGET (self));
   g_signal_connect_swapped (session, "changed", G_CALLBACK (update), self);
   g_signal_connect_swapped (session, "selection-changed", G_CALLBACK (update), self);
+  g_signal_connect_swapped (session, "file-changed", G_CALLBACK (file_changed_cb), self);
   g_signal_connect (session, "go-to", G_CALLBACK (go_to_cb), self);
   update (self);
   return GTK_WIDGET (self);

@@ -149,30 +149,39 @@ set_origin_class (GtkWidget *widget, HlOrigin origin)
   gtk_widget_add_css_class (widget, hl_origin_id (origin));
 }
 
+/* Telling the accessibility tree costs more than the rest of an update: only where the words are other ones. */
+static void
+describe (HlQuantityRow *self, const char *value, const char *origin)
+{
+  g_autofree char *description = g_strdup_printf ("%s, %s", value, origin), *label = NULL;
+
+  if (g_strcmp0 (description, self->described) == 0)
+    return;
+  label = g_strdup_printf (_("Origin of %s: %s"), self->name, origin);
+  hl_pane_set_accessible (self->origin_button, label, NULL);
+  hl_pane_set_accessible (self->entry, self->name, description);
+  hl_pane_set_accessible (GTK_WIDGET (self), self->name, description);
+  g_free (self->described);
+  self->described = g_steal_pointer (&description);
+}
+
 void
 hl_quantity_row_update_origin (HlQuantityRow *self)
 {
   HlOrigin origin = origin_now (self);
   double si;
-  gboolean is_known = hl_quantity_row_number (self, &si);
-  g_autofree char *help = hl_quantity_row_help (self, "\n");
-  g_autofree char *tooltip = g_strdup_printf ("%s\n%s", self->name, help);
-  g_autofree char *label = g_strdup_printf (_("Origin of %s: %s"), self->name, hl_origin_name (origin));
+  gboolean is_known = hl_quantity_row_number (self, &si), is_found = origin != HL_ORIGIN_FOUND || is_known;
+  /* What is neither given nor solved is not "found": there is none (quality of superheated steam), or it is still open. */
+  const char *other = hl_solution_is_solved (hl_session_solution (self->session)) ? C_("value", "none") : C_("value", "open");
+  const char *word = is_found ? hl_origin_name (origin) : other;
   g_autofree char *shown = is_known ? hl_quantity_format (self->kind, si, hl_pane_units (self->session)) : g_strdup (_("not known"));
-  g_autofree char *description = g_strdup_printf ("%s, %s", shown, hl_origin_name (origin));
 
   set_origin_class (GTK_WIDGET (self), origin);
-  /* What is neither given nor solved is not "found": there is none (quality of superheated steam), or it is still open. */
-  gboolean is_found = origin != HL_ORIGIN_FOUND || is_known;
-  const char *other = hl_solution_is_solved (hl_session_solution (self->session)) ? C_("value", "none") : C_("value", "open");
-  gtk_label_set_text (GTK_LABEL (self->pill), is_found ? hl_origin_name (origin) : other);
+  gtk_label_set_text (GTK_LABEL (self->pill), word);
   if (!is_found)
     gtk_widget_add_css_class (GTK_WIDGET (self), "open");
   else
     gtk_widget_remove_css_class (GTK_WIDGET (self), "open");
   g_simple_action_set_state (self->origin_action, g_variant_new_string (hl_origin_id (origin)));
-  gtk_widget_set_tooltip_text (self->line, tooltip);
-  hl_pane_set_accessible (self->origin_button, label, NULL);
-  hl_pane_set_accessible (self->entry, self->name, description);
-  hl_pane_set_accessible (GTK_WIDGET (self), self->name, description);
+  describe (self, shown, word);
 }

@@ -21,6 +21,7 @@ struct _HlQuantityRow {
   GSimpleActionGroup *actions;
   GSimpleAction *origin_action;
 
+  char          *described;      /* to assistive programs: "65.00 bar, assumed" */
   char          *shown;          /* the text last put into the entry: anything else has been typed */
   gboolean       is_focused;
   gboolean       is_retired;     /* about to be removed: commits nothing any more */

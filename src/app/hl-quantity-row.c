@@ -371,12 +371,24 @@ line_pressed_cb (GtkGestureClick *gesture, int n_press, double x, double y, HlQu
     gtk_widget_grab_focus (self->entry);
 }
 
+static gboolean
+query_tooltip_cb (GtkWidget *line, int x, int y, gboolean by_keyboard, GtkTooltip *tooltip, HlQuantityRow *self)
+{
+  g_autofree char *help = hl_quantity_row_help (self, "\n");
+  g_autofree char *text = g_strdup_printf ("%s\n%s", self->name, help);
+
+  gtk_tooltip_set_text (tooltip, text);
+  return TRUE;
+}
+
 static void
 build (HlQuantityRow *self)
 {
   GtkGesture *click = gtk_gesture_click_new ();
 
   self->line = gtk_box_new (GTK_ORIENTATION_HORIZONTAL, 0);
+  gtk_widget_set_has_tooltip (self->line, TRUE);
+  g_signal_connect (self->line, "query-tooltip", G_CALLBACK (query_tooltip_cb), self);
   gtk_widget_add_css_class (self->line, "line");
   gtk_widget_set_parent (self->line, GTK_WIDGET (self));
   build_name (self);
@@ -432,6 +444,7 @@ hl_quantity_row_finalize (GObject *object)
 {
   HlQuantityRow *self = HL_QUANTITY_ROW (object);
   g_free (self->name);
+  g_free (self->described);
   g_free (self->shown);
   G_OBJECT_CLASS (hl_quantity_row_parent_class)->finalize (object);
 }
