@@ -59,7 +59,7 @@ hl_check_entropy (HlChecker *checker)
       produced += (port->is_out ? 1.0 : -1.0) * node->m * node->st.s;
       flow = fmax (flow, node->m);
     }
-  if (!(produced < -1e-3 * flow))
+  if (!(produced < -1e-3 * flow && flow > 1e-6 * model->system->flow_scale))
     return;
   for (guint k = 0; k < checker->findings->list->len; k++)
     {
@@ -93,6 +93,23 @@ check_flows (HlChecker *checker)
       hl_findings_add (checker->findings, HL_GRADE_ERROR, "negative-flow", hl_address_stream (stream->id, g_intern_static_string ("m")),
         g_strdup_printf (_("Stream %s from %s to %s would flow backwards: %s. The values around it ask for the impossible."), stream->id, stream->from_id, stream->to_id, m));
     }
+}
+
+/* A set of values that only says how things relate is met by a plant in which nothing flows. */
+static void
+check_anything_flows (HlChecker *checker)
+{
+  const HlModel *model = checker->model;
+  guint n = hl_plant_n_streams (model->plant);
+  double largest = 0.0;
+  for (guint i = 0; i < n; i++)
+    largest = fmax (largest, fabs (checker->states[i].m));
+  if (n == 0 || largest > 1e-9 * model->system->flow_scale)
+    return;
+  HlFinding *finding = hl_findings_add (checker->findings, HL_GRADE_ERROR, "nothing-flows", hl_address_plant (g_intern_static_string ("net_power")),
+    g_strdup (_("Nothing flows: the values given say how flows and powers relate, but not how large they are. Give the net power or a flow.")));
+  HlAddress net = hl_address_plant (g_intern_static_string ("net_power"));
+  hl_finding_mend (finding, HL_MEND_EDIT, net, NAN, g_strdup (_("Enter net power of the plant")));
 }
 
 /* A value outside the range of its kind's table is worth a hint. */
@@ -133,5 +150,8 @@ hl_check_all (HlChecker *checker)
   checker->component = NULL;
   /* Where something graver is known, flows run backwards because of it. */
   if (checker->is_complete && !hl_findings_have (checker->findings, HL_GRADE_ERROR))
-    check_flows (checker);
+    {
+      check_flows (checker);
+      check_anything_flows (checker);
+    }
 }

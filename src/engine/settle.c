@@ -3,7 +3,7 @@
 #include "engine/engine.h"
 #include "engine/circuits.h"
 #include "engine/diagnose.h"
-#include "engine/numbers.h"
+#include "engine/solution-private.h"
 #include "plant/i18n.h"
 #include <math.h>
 
@@ -104,6 +104,14 @@ distances (const HlModel *model, int from)
 
 typedef struct { HlAddress address; double order; } Candidate;
 
+/* A typed flow, power or heat sizes the plant: then the assumed net power is what it stands for. */
+static gboolean
+is_size (const Settle *settle)
+{
+  const HlQuantityKind *kind = hl_plant_quantity_kind (settle->plant, settle->edited);
+  return kind != NULL && (kind->dimension == HL_DIMENSION_MASS_FLOW || kind->dimension == HL_DIMENSION_POWER);
+}
+
 /* Lower yields first: same component, then same circuit, then the rest; inside each by the rank of the kind's table, and among
  * equals the nearest. */
 static double
@@ -112,6 +120,8 @@ order_of (Settle *settle, const HlAddress *address, int edited, const int *dista
   const HlQuantityKind *kind = hl_plant_quantity_kind (settle->plant, address);
   double order = kind != NULL ? kind->yield_rank : 50.0;
   int component = component_of (settle, address);
+  if (settle->edited != NULL && address->owner == HL_OWNER_PLANT && kind != NULL && kind->dimension == HL_DIMENSION_POWER && is_size (settle))
+    return order - 3000.0;
   if (edited < 0)
     return order;
   if (component >= 0)
@@ -176,19 +186,20 @@ find_candidates (Settle *settle)
   return candidates;
 }
 
-/* The structure says that a value may go; only numbers say whether what is left still settles everything: where all flows hang
- * on one of them, a value far away may look as good as one near by.  Nothing to say while more is to be settled. */
-static gboolean
-holds_in_numbers (HlPlant *plant)
+typedef enum { CLEAN, SOLVED_WITH_ERRORS, FAILED } Outcome;
+
+/* The structure says that a value may go; only numbers say whether what is left still settles everything, and sensibly: where
+ * all flows hang on one value, one far away may look as good as one near by.  Nothing to say while more is to be settled. */
+static Outcome
+outcome_without (HlPlant *plant, const HlAddress *address)
 {
-  g_autoptr (HlModel) model = hl_model_new (plant);
-  g_autoptr (HlStructure) structure = hl_structure_new (model->system);
-  if (structure->n_over > 0 || structure->n_missing > 0 || model->open_ports->len > 0)
-    return TRUE;
-  HlNumbers numbers;
-  hl_numbers_solve (model->system, structure, &numbers);
-  g_free (numbers.is_known);
-  return numbers.failed == HL_FAILED_NOT;
+  g_autoptr (HlPlant) without = hl_plant_with_value (plant, address, NULL, NULL);
+  if (without == NULL)
+    return FAILED;
+  g_autoptr (HlSolution) solution = hl_solve (without, NULL);
+  if (hl_solution_is_solved (solution) || solution->structure->n_surplus > 0 || solution->structure->n_missing > 0)
+    return CLEAN;
+  return solution->is_complete ? SOLVED_WITH_ERRORS : FAILED;
 }
 
 /* Lets one assumed value of the over-determined part go.  FALSE when none can. */
@@ -199,13 +210,14 @@ yield_one (Settle *settle)
   if (candidates->len == 0)
     return FALSE;
   guint best = 0;
-  for (guint k = 0; k < MIN (candidates->len, MOST_TRIED); k++)
+  Outcome best_outcome = FAILED;
+  for (guint k = 0; k < MIN (candidates->len, MOST_TRIED) && best_outcome != CLEAN; k++)
     {
-      g_autoptr (HlPlant) without = hl_plant_with_value (settle->plant, &g_array_index (candidates, Candidate, k).address, NULL, NULL);
-      if (without == NULL || !holds_in_numbers (without))
+      Outcome outcome = outcome_without (settle->plant, &g_array_index (candidates, Candidate, k).address);
+      if (outcome >= best_outcome)
         continue;
       best = k;
-      break;
+      best_outcome = outcome;
     }
   HlAddress address = g_array_index (candidates, Candidate, best).address;
   say (settle, &address, FALSE);

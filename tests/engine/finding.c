@@ -275,6 +275,16 @@ test_negative_flow (void)
   assert_finding (s, "negative-flow", HL_GRADE_ERROR, "Stream 3 from X1 to Y3 would flow backwards: -0.500 kg/s. The values around it ask for the impossible.");
 }
 
+/* A ratio of two powers instead of one of them: only a plant at rest has it. */
+static void
+test_nothing_flows (void)
+{
+  g_autoptr (HlSolution) s = solve_taken (test_plant_set (test_plant_let_go (test_plant (test_simple_loop), "plant.net_power"), "plant.back_work_ratio", 0.009));
+  const HlFinding *finding = assert_finding (s, "nothing-flows", HL_GRADE_ERROR,
+    "Nothing flows: the values given say how flows and powers relate, but not how large they are. Give the net power or a flow.");
+  assert_mend (finding, 0, HL_MEND_EDIT, "plant.net_power", "Enter net power of the plant");
+}
+
 /* An efficiency above one slips past the tables where an outlet state is typed: entropy would vanish. */
 static void
 test_entropy_destroyed (void)
@@ -392,6 +402,7 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/finding/impossible-neighbours", test_impossible_neighbours);
   g_test_add_func ("/engine/finding/drain-uphill", test_drain_uphill);
   g_test_add_func ("/engine/finding/negative-flow", test_negative_flow);
+  g_test_add_func ("/engine/finding/nothing-flows", test_nothing_flows);
   g_test_add_func ("/engine/finding/entropy-destroyed", test_entropy_destroyed);
   g_test_add_func ("/engine/finding/pump-draws-steam", test_pump_draws_steam);
   g_test_add_func ("/engine/finding/generator-on-no-shaft", test_generator_on_no_shaft);

@@ -97,6 +97,42 @@ test_assumed_net_power_yields (void)
   test_assert_near (test_value (s, "G1.power"), 15e6, 1e-10);
 }
 
+/* A typed flow, power or heat sizes the plant: net power yields before anything else. */
+static void
+test_size_replaces_net_power (void)
+{
+  static const struct { const char *address; double value; } sizes[] = {
+    { "T1.inlet.m", 9.0 }, { "C1.heat", 20e6 }, { "Q1.heat", 30e6 }, { "T1.power", 9e6 }, { "C1.cooling_flow", 500.0 } };
+  for (guint k = 0; k < G_N_ELEMENTS (sizes); k++)
+    {
+      HlPlant *plant = test_plant (NEW_LOOP);
+      HlAddress net = address_of (plant, "plant.net_power");
+      HlValue assumed = { .origin = HL_ORIGIN_ASSUMED, .value = 10e6 };
+      HlPlant *open = hl_plant_with_value (plant, &net, &assumed, NULL);
+      hl_plant_unref (plant);
+      g_autoptr (HlPlant) settled = edit (open, sizes[k].address, sizes[k].value, "net power of the plant is now found");
+      g_autoptr (HlSolution) s = solved (settled);
+      test_assert_near (test_value (s, sizes[k].address), sizes[k].value, 1e-9);
+    }
+}
+
+/* An efficiency of the whole is not met by a plant at rest: what yields is something that it depends on. */
+static void
+test_efficiency_finds_something_else (void)
+{
+  HlPlant *plant = test_plant (NEW_LOOP);
+  GArray *yielded;
+  HlAddress address = address_of (plant, "plant.cycle_efficiency");
+  HlPlant *typed = test_plant_set (plant, "plant.cycle_efficiency", 0.35);
+  g_autoptr (HlPlant) settled = hl_settle (typed, &address, &yielded);
+  hl_plant_unref (typed);
+  g_assert_cmpuint (yielded->len, ==, 1);
+  g_array_unref (yielded);
+  g_autoptr (HlSolution) s = solved (settled);
+  test_assert_near (test_value (s, "plant.cycle_efficiency"), 0.35, 1e-9);
+  test_assert_near (test_value (s, "plant.net_power"), 10e6, 1e-9);
+}
+
 /* Let go again, the usual quantity of the component comes back with its default. */
 static void
 test_what_is_let_go_comes_back (void)
@@ -181,6 +217,8 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/settle/same-component-yields-first", test_same_component_yields_first);
   g_test_add_func ("/engine/settle/typed-values-never-yield", test_typed_values_never_yield);
   g_test_add_func ("/engine/settle/assumed-net-power-yields", test_assumed_net_power_yields);
+  g_test_add_func ("/engine/settle/size-replaces-net-power", test_size_replaces_net_power);
+  g_test_add_func ("/engine/settle/efficiency-finds-something-else", test_efficiency_finds_something_else);
   g_test_add_func ("/engine/settle/what-is-let-go-comes-back", test_what_is_let_go_comes_back);
   g_test_add_func ("/engine/settle/nothing-to-settle", test_nothing_to_settle);
   g_test_add_func ("/engine/settle/topology-settles", test_topology_settles);

@@ -22,7 +22,7 @@ check (HlChecker *checker)
   if (!checker->model->is_on_shaft[checker->index])
     hl_check_add (checker, HL_GRADE_WARNING, "no-shaft", "",
                   g_strdup_printf (_("Generator %s is on no shaft and gives no power. Join it to a turbine."), checker->component->id));
-  else if (hl_check_own (checker, "shaft_power", &power) && power < 0.0)
+  else if (hl_check_own (checker, "shaft_power", &power) && power < -1e-9 * hl_system_scale (checker->model->system, HL_VAR_POWER))
     {
       g_autofree char *text = hl_check_text (checker, HL_DIMENSION_POWER, power);
       hl_check_add (checker, HL_GRADE_ERROR, "shaft-power", "shaft_power",
