@@ -73,4 +73,11 @@ def test_other_systems_are_told_the_list():
     assert log == [] and "gcc xvfb" in said, said
 
 
+def test_every_script_can_be_read():
+    for name in ("src/run.sh", "src/setup.sh", "tests/run.sh"):
+        subprocess.run(["/bin/sh", "-n", os.path.join(SOURCE, name)], check=True, timeout=30)
+    subprocess.run(["/bin/bash", "-n", os.path.join(SOURCE, ".ci", "run")], check=True, timeout=30)
+    assert os.access(os.path.join(SOURCE, ".ci", "run"), os.X_OK)
+
+
 main(globals())
