@@ -49,7 +49,8 @@ give_draft_back (GtkWidget *row, gpointer data)
   g_hash_table_remove (self->drafts, key);
 }
 
-/* Another file: what was typed into the one before belongs to nobody. */
+/* Another plant, with a fresh history: what was typed into the one before belongs to nobody.  Saving under a new name
+ * keeps the history, and the drafts. */
 static void
 file_changed_cb (HlNameplate *self)
 {
@@ -59,7 +60,8 @@ file_changed_cb (HlNameplate *self)
     return;
   g_free (self->file);
   self->file = g_strdup (path);
-  g_hash_table_remove_all (self->drafts);
+  if (!hl_session_can_undo (self->session) && !hl_session_can_redo (self->session))
+    g_hash_table_remove_all (self->drafts);
 }
 
 /* --- update --- */
