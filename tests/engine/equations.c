@@ -1,71 +1,19 @@
 /* Every form of equation: derivatives against differences of its own residual, and closed answers where there are any.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "plants.h"
+#include "laws.h"
 #include "engine/equations.h"
 #include "engine/model.h"
 #include "engine/solution-private.h"
 #include <math.h>
 #include <string.h>
 
-/* Central difference with two steps: the smaller error of both counts, so that neither rounding nor curvature decides. */
-static void
-check_equation (const HlSystem *system, int number)
-{
-  const HlEquation *e = hl_system_equation (system, number);
-  const double *a = &g_array_index (system->constants, double, e->first_constant);
-  const int *vars = hl_equation_vars (system, e);
-  double x[HL_EQUATION_MOST], dr[HL_EQUATION_MOST], unused[HL_EQUATION_MOST], r, up, down;
-  double scale = hl_system_scale (system, e->kind);
-  for (int k = 0; k < e->n; k++)
-    x[k] = system->x[vars[k]];
-  if (e->residual (e, a, x, &r, dr) != HL_OK)
-    return;
-  for (int k = 0; k < e->n; k++)
-    {
-      double unit = hl_system_scale (system, hl_system_var (system, vars[k])->kind), best = INFINITY;
-      for (int step = 0; step < 3; step++)
-        {
-          double h = unit * (step == 0 ? 1e-5 : step == 1 ? 1e-6 : 1e-7), keep = x[k];
-          x[k] = keep + h;
-          HlStatus above = e->residual (e, a, x, &up, unused);
-          x[k] = keep - h;
-          HlStatus below = e->residual (e, a, x, &down, unused);
-          x[k] = keep;
-          if (above != HL_OK || below != HL_OK)
-            continue;
-          best = fmin (best, fabs ((up - down) / (2.0 * h) - dr[k]) * unit / scale / (1e-3 + fabs (dr[k]) * unit / scale));
-        }
-      if (isfinite (best) && !(best < 2e-5))
-        g_error ("equation %d (%s) of component %d: derivative %d is %.10g, off by %.2e", number, e->says != NULL ? e->says : "terms", e->component, k, dr[k], best);
-    }
-}
-
-/* At the solution a state may sit on the saturation line, where it has two slopes: look beside it. */
-static void
-check_plant (const char *text)
-{
-  g_autoptr (HlPlant) plant = test_plant (text);
-  g_autoptr (HlSolution) solution = hl_solve (plant, NULL);
-  g_autoptr (GRand) rand = g_rand_new_with_seed (7);
-  test_assert_solved (solution);
-  HlSystem *system = solution->model->system;
-  g_autofree double *at = g_memdup2 (system->x, sizeof (double) * system->vars->len);
-  for (int round = 0; round < 20; round++)
-    {
-      for (guint v = 0; v < system->vars->len; v++)
-        system->x[v] = at[v] + hl_system_scale (system, hl_system_var (system, v)->kind) * g_rand_double_range (rand, -3e-3, 3e-3);
-      for (guint k = 0; k < system->equations->len; k++)
-        check_equation (system, (int) k);
-    }
-}
-
 static void
 test_derivatives_in_plants (void)
 {
-  check_plant (test_simple_loop);
-  check_plant (test_reheat_plant);
-  check_plant (test_large_plant);
-  check_plant (test_industrial_plant);
+  test_check_derivatives (test_simple_loop);
+  test_check_derivatives (test_reheat_plant);
+  test_check_derivatives (test_large_plant);
+  test_check_derivatives (test_industrial_plant);
 }
 
 #define STRAIGHT_LINE "heat_input Q1 pressure_loss=0 steam.p=60e5 steam.T=750 steam.m=10\n" \
@@ -76,7 +24,7 @@ test_derivatives_in_plants (void)
 static void
 test_straight_line (void)
 {
-  check_plant (STRAIGHT_LINE);
+  test_check_derivatives (STRAIGHT_LINE);
   g_autoptr (HlPlant) plant = test_plant (STRAIGHT_LINE);
   g_autoptr (HlSolution) s = hl_solve (plant, NULL);
   double h1 = test_value (s, "T1.inlet.h"), s1 = test_value (s, "T1.inlet.s"), h2 = test_value (s, "T1.exhaust.h"), s2 = test_value (s, "T1.exhaust.s");
@@ -92,10 +40,10 @@ test_straight_line (void)
 static void
 test_state_conditions (void)
 {
-  check_plant ("boundary Y1 direction:0 outlet.p=10e5 outlet.s=6800 outlet.m=1\nboundary Y2 direction:1\nY1.outlet > Y2.inlet\n");
-  check_plant ("boundary Y1 direction:0 outlet.p=10e5 outlet.v=0.25 outlet.m=1\nboundary Y2 direction:1\nY1.outlet > Y2.inlet\n");
-  check_plant ("boundary Y1 direction:0 outlet.p=10e5 outlet.x=0.9 outlet.m=1\nboundary Y2 direction:1\nY1.outlet > Y2.inlet\n");
-  check_plant ("heat_input Q1 pressure_loss=0 steam.p=60e5 steam.T=750 steam.m=10\nturbine T1 exhaust_moisture=0.08 exhaust.p=1e4 mechanical_efficiency=1\n"
+  test_check_derivatives ("boundary Y1 direction:0 outlet.p=10e5 outlet.s=6800 outlet.m=1\nboundary Y2 direction:1\nY1.outlet > Y2.inlet\n");
+  test_check_derivatives ("boundary Y1 direction:0 outlet.p=10e5 outlet.v=0.25 outlet.m=1\nboundary Y2 direction:1\nY1.outlet > Y2.inlet\n");
+  test_check_derivatives ("boundary Y1 direction:0 outlet.p=10e5 outlet.x=0.9 outlet.m=1\nboundary Y2 direction:1\nY1.outlet > Y2.inlet\n");
+  test_check_derivatives ("heat_input Q1 pressure_loss=0 steam.p=60e5 steam.T=750 steam.m=10\nturbine T1 exhaust_moisture=0.08 exhaust.p=1e4 mechanical_efficiency=1\n"
                "boundary Y1 direction:0 outlet.T=400\nboundary Y2 direction:1\nY1.outlet > Q1.feed\nQ1.steam > T1.inlet\nT1.exhaust > Y2.inlet\nplant other_consumption_fraction=0\n");
 }
 
@@ -180,7 +128,7 @@ test_ties (void)
       double r, dr[2];
       g_assert_cmpint (hl_system_evaluate (system, k, &r, dr), ==, HL_OK);
       g_assert_cmpfloat (fabs (r), <, 1e-9);
-      check_equation (system, k);
+      test_check_equation (system, k);
     }
 }
 

@@ -1,20 +1,11 @@
 /* Whole plants: balances, any quantity given for any other, order and start of no influence, random plants.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "plants.h"
+#include "laws.h"
 #include "engine/solution-private.h"
 #include <math.h>
 #include <string.h>
 
 static const char *const *const plants[] = { &test_simple_loop, &test_reheat_plant, &test_large_plant, &test_industrial_plant };
-
-static void
-assert_balanced (const HlSolution *s)
-{
-  double mass, energy;
-  hl_solution_balances (s, &mass, &energy);
-  g_assert_cmpfloat (fabs (mass), <, 1e-9);
-  g_assert_cmpfloat (fabs (energy), <, 1e-9);
-}
 
 static void
 test_balances_close (void)
@@ -24,7 +15,7 @@ test_balances_close (void)
       g_autoptr (HlPlant) plant = test_plant (*plants[k]);
       g_autoptr (HlSolution) s = hl_solve (plant, NULL);
       test_assert_solved (s);
-      assert_balanced (s);
+      test_assert_balanced (s);
     }
 }
 
@@ -143,97 +134,12 @@ test_sizing_by_duty (void)
   assert_same (s, t, 1e-9);
 }
 
-/* Any quantity that was found may be given, and what then yields is found as it was.
- * All typed values are made assumed first, so that something can yield. */
-static HlPlant *
-all_assumed (const char *text)
-{
-  HlPlant *plant = test_plant (text);
-  for (guint c = 0; c < hl_plant_n_components (plant); c++)
-    {
-      HlComponent *component = hl_component_copy (hl_plant_component (plant, c));
-      for (guint k = 0; k < component->values.n; k++)
-        component->values.entries[k].value.origin = HL_ORIGIN_ASSUMED;
-      HlPlant *next = hl_plant_with_component (plant, component);
-      hl_plant_unref (plant);
-      plant = next;
-    }
-  g_autoptr (HlPlant) typed = hl_plant_ref (plant);
-  const HlValues *values = hl_plant_values (typed);
-  for (guint k = 0; k < values->n; k++)
-    {
-      HlAddress address = hl_address_plant (values->entries[k].key);
-      HlValue value = { .origin = HL_ORIGIN_ASSUMED, .value = values->entries[k].value.value };
-      HlPlant *next = hl_plant_with_value (plant, &address, &value, NULL);
-      hl_plant_unref (plant);
-      plant = next;
-    }
-  return plant;
-}
-
-static gboolean
-gives_back (HlPlant *plant, const HlSolution *s, const HlAddress *address, double value)
-{
-  HlValue given = { .origin = HL_ORIGIN_GIVEN, .value = value };
-  g_autoptr (GError) error = NULL;
-  g_autoptr (HlPlant) typed = hl_plant_with_value (plant, address, &given, &error);
-  g_autofree char *text = hl_address_to_text (address);
-  if (typed == NULL)
-    return FALSE;
-  GArray *yielded;
-  g_autoptr (HlPlant) settled = hl_settle (typed, address, &yielded);
-  g_assert_cmpuint (yielded->len, <=, 1);
-  g_autoptr (HlSolution) t = hl_solve (settled, s);
-  if (!hl_solution_is_solved (t))
-    {
-      for (guint k = 0; k < yielded->len; k++)
-        g_printerr ("# %s\n", g_array_index (yielded, HlYield, k).text);
-      g_array_unref (yielded);
-      test_print (t);
-      g_error ("not solved with %s given", text);
-    }
-  g_array_unref (yielded);
-  double now;
-  g_assert_true (hl_solution_value (t, address, &now));
-  test_assert_near (now, value, 1e-8);
-  assert_balanced (t);
-  return TRUE;
-}
-
 static void
 test_any_quantity_may_be_given (void)
 {
   guint n_given = 0;
   for (guint p = 0; p < G_N_ELEMENTS (plants); p++)
-    {
-      g_autoptr (HlPlant) plant = all_assumed (*plants[p]);
-      g_autoptr (HlSolution) s = hl_solve (plant, NULL);
-      test_assert_solved (s);
-      for (guint c = 0; c < hl_plant_n_components (plant); c++)
-        {
-          const HlComponent *component = hl_plant_component (plant, c);
-          for (guint k = 0; k < hl_component_n_quantities (component); k++)
-            {
-              HlAddress address = hl_address_component (component->id, hl_component_quantity (component, k).key);
-              double value;
-              /* Zero losses and zero flows are no size to give; a shaft's pump has no motor power. */
-              if (hl_plant_value (plant, &address) != NULL || !hl_solution_value (s, &address, &value) || !(fabs (value) > 1e-9))
-                continue;
-              n_given += gives_back (plant, s, &address, value);
-            }
-        }
-      guint n;
-      const HlQuantityKind *kinds = hl_plant_quantities (&n);
-      for (guint k = 0; k < n; k++)
-        {
-          HlAddress address = hl_address_plant (g_intern_string (kinds[k].key));
-          double value;
-          if (hl_plant_value (plant, &address) != NULL || !hl_solution_value (s, &address, &value) || !(fabs (value) > 1e-9)
-              || g_str_equal (kinds[k].key, "carnot_efficiency") || g_str_equal (kinds[k].key, "exhaust_moisture"))
-            continue;
-          n_given += gives_back (plant, s, &address, value);
-        }
-    }
+    n_given += test_give_each (*plants[p]);
   g_assert_cmpuint (n_given, >, 150);
 }
 
@@ -326,7 +232,7 @@ test_random_plants (void)
           test_print (s);
           g_error ("random plant %d is not solved", round);
         }
-      assert_balanced (s);
+      test_assert_balanced (s);
       g_assert_cmpfloat (test_value (s, "plant.cycle_efficiency"), <, test_value (s, "plant.carnot_efficiency"));
       g_assert_cmpfloat (test_value (s, "plant.cycle_efficiency"), >, 0.2);
       if (last != NULL)
