@@ -131,11 +131,11 @@ round_number (double shown, const Rounding *rounding)
   decimals = MIN (decimals, 8);
   g_snprintf (text, sizeof text, "%.*f", decimals, shown);
   /* 9.9996 with four digits becomes 10.0000: one decimal less. */
-  if (decimals > rounding->decimals && fabs (shown) >= 1e-9)
+  if (decimals > rounding->decimals && fabs (shown) >= 1e-9 && strpbrk (text, "123456789") != NULL)
     {
       int digits_before = (int) floor (log10 (fabs (g_ascii_strtod (text, NULL))));
       int fewer = MAX (rounding->decimals, rounding->digits - 1 - digits_before);
-      if (fewer >= 0 && fewer < decimals && strpbrk (text, "123456789") != NULL)
+      if (fewer >= 0 && fewer < decimals)
         g_snprintf (text, sizeof text, "%.*f", fewer, shown);
     }
   if (text[0] == '-' && strpbrk (text, "123456789") == NULL)
