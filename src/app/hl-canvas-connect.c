@@ -225,10 +225,29 @@ say_why_not (HlCanvas *self, double vx, double vy)
   hl_canvas_say (self, error != NULL ? error->message : "");
 }
 
+/* A line may end in the middle of another one, too. */
+static gboolean
+find_branch (HlCanvas *self, double vx, double vy)
+{
+  const HlStream *stream;
+  self->branch = self->mode == MODE_CONNECT && hl_canvas_component_at (self, vx, vy) == NULL ? hl_canvas_stream_at (self, vx, vy) : -1;
+  if (self->branch < 0)
+    return FALSE;
+  stream = hl_plant_stream (hl_canvas_plant (self), (guint) self->branch);
+  hl_canvas_to_grid (self, vx, vy, &self->branch_x, &self->branch_y);
+  self->branch_turn = hl_canvas_snap_to_line (hl_layout_stream (self->layout, (guint) self->branch), &self->branch_x, &self->branch_y);
+  {
+    g_autofree char *text = g_strdup_printf (_("Meet stream %s in a splitter or mixer"), stream->id);
+    hl_canvas_say (self, text);
+  }
+  return TRUE;
+}
+
 void
 hl_canvas_update_line (HlCanvas *self, double vx, double vy)
 {
   HlPortRef found = { 0 };
+  self->branch = -1;
   if (find_target (self, vx, vy, &found))
     {
       const HlComponent *component = hl_plant_find_component (hl_canvas_plant (self), found.id);
@@ -240,7 +259,7 @@ hl_canvas_update_line (HlCanvas *self, double vx, double vy)
           hl_canvas_say (self, text);
         }
     }
-  else
+  else if (!find_branch (self, vx, vy))
     say_why_not (self, vx, vy);
   self->target = found;
   gtk_widget_queue_draw (GTK_WIDGET (self));
@@ -252,6 +271,7 @@ hl_canvas_drop_line (HlCanvas *self)
   GHashTableIter iter;
   gpointer item;
   self->from = self->target = (HlPortRef) { 0 };
+  self->branch = -1;
   if (self->targets != NULL)
     g_array_set_size (self->targets, 0);
   if (self->items == NULL)
@@ -266,10 +286,14 @@ hl_canvas_end_line (HlCanvas *self)
 {
   HlPortRef from = self->from, target = self->target;
   HlCanvasMode mode = self->mode;
+  int branch = self->branch;
 
   hl_canvas_drop_line (self);
   self->mode = MODE_NONE;
   gtk_widget_queue_draw (GTK_WIDGET (self));
+  if (branch >= 0)
+    gtk_widget_activate_action (GTK_WIDGET (self), "win.branch", "(sssiii)", from.id, from.port,
+                                hl_plant_stream (hl_canvas_plant (self), (guint) branch)->id, self->branch_x, self->branch_y, self->branch_turn);
   if (target.id == NULL)
     return;
   if (mode == MODE_CONNECT)

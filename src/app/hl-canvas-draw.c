@@ -407,8 +407,17 @@ draw_new_line (HlCanvas *self, GtkSnapshot *snapshot)
       if (target->port != NULL)
         draw_port (self, snapshot, target, is_under ? 8 : 5.5, TRUE);
     }
-  if (self->target.port == NULL || !hl_canvas_port_point (self, &self->target, &x, &y))
-    hl_canvas_to_canvas (self, self->last_x, self->last_y, &x, &y);
+  hl_canvas_to_canvas (self, self->last_x, self->last_y, &x, &y);
+  if (self->branch >= 0)
+    {
+      double vx, vy;
+      x = self->branch_x * HL_UNIT;
+      y = self->branch_y * HL_UNIT;
+      hl_canvas_to_view (self, x, y, &vx, &vy);
+      append_disc (snapshot, vx, vy, 7, &accent);
+    }
+  else if (self->target.port != NULL)
+    hl_canvas_port_point (self, &self->target, &x, &y);
   push_view (self, snapshot);
   if (self->mode == MODE_CONNECT)
     points = hl_route_preview (hl_canvas_plant (self), self->from.id, self->from.port, x, y, &n);

@@ -11,8 +11,8 @@
 
 /* What lies under the pointer */
 
-static int
-stream_at (HlCanvas *self, double vx, double vy)
+int
+hl_canvas_stream_at (HlCanvas *self, double vx, double vy)
 {
   double x, y;
   hl_canvas_to_canvas (self, vx, vy, &x, &y);
@@ -104,7 +104,7 @@ drag_begin_cb (GtkGestureDrag *drag, double vx, double vy, HlCanvas *self)
     press_stream (self, gesture, stream, TRUE);
   else if ((id = hl_canvas_component_at (self, vx, vy)) != NULL)
     press_component (self, gesture, id);
-  else if ((stream = stream_at (self, vx, vy)) >= 0)
+  else if ((stream = hl_canvas_stream_at (self, vx, vy)) >= 0)
     press_stream (self, gesture, stream, FALSE);
   else
     {
@@ -378,7 +378,7 @@ motion_cb (GtkEventControllerMotion *motion, double vx, double vy, HlCanvas *sel
   else if (hot.port != NULL || shaft != NULL)
     set_cursor (self, "crosshair");
   else
-    set_cursor (self, label_at (self, vx, vy) >= 0 || id != NULL || stream_at (self, vx, vy) >= 0 ? "pointer" : NULL);
+    set_cursor (self, label_at (self, vx, vy) >= 0 || id != NULL || hl_canvas_stream_at (self, vx, vy) >= 0 ? "pointer" : NULL);
 }
 
 static void
@@ -437,8 +437,8 @@ dropped_kind (const GValue *value)
 }
 
 /* The segment of a line that is nearest to a point: its direction, and the point drawn onto it. */
-static int
-snap_to_line (const HlStreamPlace *place, int *gx, int *gy)
+int
+hl_canvas_snap_to_line (const HlStreamPlace *place, int *gx, int *gy)
 {
   double x = *gx * HL_UNIT, y = *gy * HL_UNIT, nearest = G_MAXDOUBLE;
   int turn = 0;
@@ -461,10 +461,10 @@ static void
 aim_drop (HlCanvas *self, const HlKind *kind, double vx, double vy)
 {
   hl_canvas_to_grid (self, vx, vy, &self->drop_x, &self->drop_y);
-  self->drop_stream = hl_edit_can_insert (kind) ? stream_at (self, vx, vy) : -1;
+  self->drop_stream = hl_edit_can_insert (kind) ? hl_canvas_stream_at (self, vx, vy) : -1;
   self->drop_turn = 0;
   if (self->drop_stream >= 0)
-    self->drop_turn = snap_to_line (hl_layout_stream (self->layout, (guint) self->drop_stream), &self->drop_x, &self->drop_y);
+    self->drop_turn = hl_canvas_snap_to_line (hl_layout_stream (self->layout, (guint) self->drop_stream), &self->drop_x, &self->drop_y);
 }
 
 static GdkDragAction
@@ -563,7 +563,7 @@ context_cb (GtkGestureClick *click, int n_press, double vx, double vy, HlCanvas 
   const char *id = hl_canvas_component_at (self, vx, vy);
   int stream = label_at (self, vx, vy);
   if (stream < 0 && id == NULL)
-    stream = stream_at (self, vx, vy);
+    stream = hl_canvas_stream_at (self, vx, vy);
   if (stream >= 0)
     id = hl_plant_stream (hl_canvas_plant (self), (guint) stream)->id;
   if (!hl_session_is_selected (self->session, id))

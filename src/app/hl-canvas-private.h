@@ -55,6 +55,8 @@ struct _HlCanvas {
   HlPortRef   from;                  /* of a line or (port NULL) a shaft being drawn */
   GArray     *targets;               /* HlPortRef that the line may end at */
   HlPortRef   target;                /* the one under the pointer */
+  int         branch;                /* index of the stream under the pointer that the line would end in, or -1 */
+  int         branch_x, branch_y, branch_turn;
 
   const char *hovered;               /* component under the pointer */
   HlPortRef   hot;                   /* port under the pointer */
@@ -85,6 +87,9 @@ void     hl_canvas_draw        (HlCanvas *self, GtkSnapshot *snapshot);
 
 /* hl-canvas-gestures.c */
 void     hl_canvas_add_gestures (HlCanvas *self);
+
+int      hl_canvas_stream_at   (HlCanvas *self, double vx, double vy);                        /* line or label; -1: none */
+int      hl_canvas_snap_to_line (const HlStreamPlace *place, int *gx, int *gy);               /* onto its nearest segment; which way that runs: 0 right, 1 down ... */
 
 /* hl-canvas-connect.c */
 gboolean hl_canvas_port_at     (HlCanvas *self, double vx, double vy, HlPortRef *port);       /* a free port */

@@ -525,7 +525,7 @@ static void
 hl_canvas_init (HlCanvas *self)
 {
   self->zoom = 1.0;
-  self->drop_stream = -1;
+  self->drop_stream = self->branch = -1;
   self->items = g_hash_table_new_full (g_str_hash, g_str_equal, NULL, item_unparent);
   self->lines = kept_nodes_new ();
   self->labels = kept_nodes_new ();

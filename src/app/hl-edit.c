@@ -345,6 +345,49 @@ hl_edit_insert (const HlPlant *plant, const char *stream_id, const HlKind *kind,
   return result;
 }
 
+/* Turns a junction so that its side port looks towards a port.  Unturned it looks down; a mirrored one that is turned by half a
+ * circle passes the line through the same way and looks to the other side. */
+static void
+face (HlComponent *junction, const HlPlant *plant, const char *id, const char *port)
+{
+  static const int look[4][2] = { { 0, 1 }, { -1, 0 }, { 0, -1 }, { 1, 0 } };    /* after so many quarter turns */
+  const HlComponent *component = hl_plant_find_component (plant, id);
+  HlSide side;
+  guint n;
+  int x, y;
+  if (component == NULL || !hl_component_find_port (component, port, &n))
+    return;
+  hl_component_port_place (component, n, &x, &y, &side);
+  if ((x - junction->x) * look[junction->turn][0] + (y - junction->y) * look[junction->turn][1] >= 0)
+    return;
+  junction->is_mirrored = TRUE;
+  junction->turn = (junction->turn + 2) % 4;
+}
+
+HlPlant *
+hl_edit_branch (const HlPlant *plant, const char *a_id, const char *a_port, const char *stream, int x, int y, int turn,
+                const char **id, GError **error)
+{
+  gboolean is_joining = is_outlet (plant, a_id, a_port);
+  const HlKind *kind = hl_kind_lookup (is_joining ? "mixer" : "splitter");
+  const char *own_id;
+  HlPlant *result, *connected;
+  HlComponent *junction;
+
+  g_return_val_if_fail (kind != NULL, NULL);
+  result = hl_edit_insert (plant, stream, kind, x, y, turn, &own_id, error);
+  if (result == NULL)
+    return NULL;
+  junction = hl_component_copy (hl_plant_find_component (result, own_id));
+  face (junction, plant, a_id, a_port);
+  advance (&result, hl_plant_with_component (result, junction));
+  connected = hl_edit_connect (result, a_id, a_port, own_id, is_joining ? "inlet2" : "outlet2", NULL, error);
+  hl_plant_unref (result);
+  if (id != NULL)
+    *id = own_id;
+  return connected;
+}
+
 HlPlant *
 hl_edit_place_label (const HlPlant *plant, const char *stream_id, gboolean has_place, int x, int y)
 {

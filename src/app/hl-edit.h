@@ -19,6 +19,9 @@ HlPlant *hl_edit_join_shaft  (const HlPlant *plant, const char *a_id, const char
 HlPlant *hl_edit_leave_shaft (const HlPlant *plant, const char *id, GError **error);
 /* Into a line, at (x, y) on it, turned by @turn quarters where the line runs right (0), down, left or up there. */
 HlPlant *hl_edit_insert      (const HlPlant *plant, const char *stream, const HlKind *kind, int x, int y, int turn, const char **id, GError **error);
+/* A line from a port to the middle of a line: a splitter where the port is an inlet, a mixer where it is an outlet. */
+HlPlant *hl_edit_branch      (const HlPlant *plant, const char *a_id, const char *a_port, const char *stream, int x, int y, int turn,
+                              const char **id, GError **error);
 HlPlant *hl_edit_place_label (const HlPlant *plant, const char *stream, gboolean has_place, int x, int y);
 
 /* Whether a line may run between two ports, and if not why. */

@@ -222,6 +222,26 @@ connect_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
 }
 
 static void
+branch_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  const char *a_id, *a_port, *stream, *id;
+  int x, y, turn;
+  g_autoptr (GError) error = NULL;
+  HlPlant *plant;
+
+  g_variant_get (parameter, "(&s&s&siii)", &a_id, &a_port, &stream, &x, &y, &turn);
+  plant = hl_edit_branch (plant_of (self), a_id, a_port, stream, x, y, turn, &id, &error);
+  if (plant == NULL)
+    say_error (self, error);
+  else
+    {
+      g_autofree char *name = g_strdup_printf (_("Connect %s to stream %s"), a_id, stream);
+      hl_session_apply (self->session, name, plant, NULL, TRUE);
+    }
+}
+
+static void
 apply_shaft (HlWindow *self, HlPlant *plant, const GError *error, char *name)
 {
   if (plant == NULL)
@@ -465,6 +485,7 @@ static const GActionEntry entries[] = {
   { "delete", delete_cb },
   { "duplicate", duplicate_cb },
   { "connect", connect_cb, "(ssss)" },
+  { "branch", branch_cb, "(sssiii)" },
   { "connect-menu", connect_menu_cb },
   { "join-shaft", join_shaft_cb, "(ss)" },
   { "join-selection", join_selection_cb },

@@ -217,6 +217,39 @@ test_a_valve_is_inserted_into_a_line (void)
   g_clear_error (&error);
 }
 
+/* The side port of the junction looks towards the component, above as below the line. */
+static void
+test_a_line_may_end_in_another_one (void)
+{
+  for (int k = 0; k < 4; k++)
+    {
+      g_autoptr (HlPlant) plant = small_plant (), branched = NULL;
+      gboolean is_above = k % 2 == 0, is_outlet = k / 2 == 0;
+      const char *line = hl_plant_stream_at (plant, "C1", "condensate")->id, *valve, *junction;
+      const HlStream *branch;
+      GError *error = NULL;
+      guint n;
+      int x, y;
+      HlSide side;
+
+      plant = add (plant, "valve", 18, is_above ? 4 : 60, &valve);
+      branched = hl_edit_branch (plant, valve, is_outlet ? "outlet" : "inlet", line, 19, 24, 2, &junction, &error);
+      g_assert_no_error (error);
+      g_assert_cmpstr (hl_plant_find_component (branched, junction)->kind->id, ==, is_outlet ? "mixer" : "splitter");
+      branch = hl_plant_stream_at (branched, valve, is_outlet ? "outlet" : "inlet");
+      g_assert_nonnull (branch);
+      g_assert_cmpstr (is_outlet ? branch->to_id : branch->from_id, ==, junction);
+      g_assert_cmpstr (hl_plant_stream_at (branched, "C1", "condensate")->to_id, ==, junction);
+      g_assert_cmpstr (hl_plant_stream_at (branched, "P1", "inlet")->from_id, ==, junction);
+      g_assert_true (hl_component_find_port (hl_plant_find_component (branched, junction), is_outlet ? "inlet2" : "outlet2", &n));
+      hl_component_port_place (hl_plant_find_component (branched, junction), n, &x, &y, &side);
+      g_assert_cmpint (side, ==, is_above ? HL_SIDE_UP : HL_SIDE_DOWN);
+      g_assert_true (hl_component_find_port (hl_plant_find_component (branched, junction), is_outlet ? "inlet1" : "inlet", &n));
+      hl_component_port_place (hl_plant_find_component (branched, junction), n, &x, &y, &side);
+      g_assert_cmpint (side, ==, HL_SIDE_RIGHT);      /* the line runs to the left there */
+    }
+}
+
 static void
 test_a_free_place_is_free_and_near (void)
 {
@@ -263,6 +296,7 @@ main (int argc, char **argv)
   g_test_add_func ("/app/edit/duplicate", test_duplicates_keep_the_lines_and_the_shaft_among_them);
   g_test_add_func ("/app/edit/shafts", test_shafts_merge_and_part);
   g_test_add_func ("/app/edit/insert", test_a_valve_is_inserted_into_a_line);
+  g_test_add_func ("/app/edit/branch", test_a_line_may_end_in_another_one);
   g_test_add_func ("/app/edit/free-place", test_a_free_place_is_free_and_near);
   g_test_add_func ("/app/edit/words", test_steps_are_named_after_what_they_touch);
   return g_test_run ();

@@ -283,6 +283,19 @@ test_gestures_move_and_connect (void)
   g_assert_cmpuint (hl_plant_n_streams (plant_of (window)), ==, 2);     /* condensate straight to the turbine: legal, if odd */
   act (window, "undo", NULL);
 
+  /* A line that ends on another line meets it in a mixer. */
+  act (window, "add-component-at", "(sii)", "valve", -16, 8);
+  act (window, "zoom-fit", NULL);
+  spin (30);
+  zoom = hl_canvas_get_zoom (canvas);
+  locate (canvas, "V1", "outlet", &x, &y);
+  locate (canvas, "T1", "exhaust", &to_x, &to_y);
+  drag (canvas, x, y, to_x, to_y + 20 * zoom);
+  g_assert_cmpstr (hl_session_undo_name (session), ==, "Connect V1 to stream 1");
+  g_assert_nonnull (hl_plant_find_component (plant_of (window), "M1"));
+  g_assert_cmpstr (hl_plant_stream_at (plant_of (window), "V1", "outlet")->to_id, ==, "M1");
+  g_assert_cmpstr (hl_plant_stream_at (plant_of (window), "C1", "steam")->from_id, ==, "M1");
+
   /* A rubber band over everything selects everything. */
   act (window, "deselect", NULL);
   drag (canvas, 2, 2, gtk_widget_get_width (GTK_WIDGET (canvas)) - 2, gtk_widget_get_height (GTK_WIDGET (canvas)) - 2);
