@@ -148,11 +148,15 @@ file_chosen_cb (const char *path, gpointer data)
   g_object_unref (self);
 }
 
-/* A name without what file systems or shells dislike. */
+/* The name of the plant's file or, where it has none yet, its title; without what file systems or shells dislike. */
 static char *
 proposed_name (HlExportDialog *self)
 {
-  g_autofree char *title = hl_session_display_name (self->session);
+  const char *path = hl_session_path (self->session);
+  g_autofree char *title = path != NULL ? g_path_get_basename (path) : hl_session_display_name (self->session);
+  char *ending = strstr (title, ".heatloom");
+  if (ending != NULL)
+    *ending = '\0';
   gboolean is_table = chosen_what (self) == HL_HAND_OVER_LEDGER;
   char *name = g_strdup_printf ("%s-%s.%s", title, what_suffixes[chosen_what (self)], is_table ? "csv" : formats[chosen_format (self)].ending);
 
