@@ -5,6 +5,7 @@ import os
 import re
 import shutil
 import subprocess
+import tempfile
 import xml.etree.ElementTree as ElementTree
 
 from tap import BUILD, SOURCE, Skip, main, plant
@@ -26,10 +27,14 @@ def need(tool):
         raise Skip(f"there is no {tool}")
 
 
+STAGE = tempfile.TemporaryDirectory()
+
+
 def stage():
-    """Installs into ./stage and returns the prefix in it."""
-    run("meson", "install", "--no-rebuild", "--quiet", "-C", BUILD, "--destdir", os.path.abspath("stage"))
-    return os.path.join(os.path.abspath("stage"), PREFIX)
+    """Installs, the first time, and returns the prefix in the staging directory."""
+    if not os.listdir(STAGE.name):
+        run("meson", "install", "--no-rebuild", "--quiet", "-C", BUILD, "--destdir", STAGE.name)
+    return os.path.join(STAGE.name, PREFIX)
 
 
 def one(pattern):
@@ -109,10 +114,10 @@ def test_the_program_in_the_readme_runs():
     with open("example.c", "w", encoding="utf-8") as file:
         file.write(program)
     pc = one(f"{prefix}/**/heatloom.pc")
-    env = {"PKG_CONFIG_PATH": os.path.dirname(pc), "PKG_CONFIG_SYSROOT_DIR": os.path.abspath("stage")}
+    env = {"PKG_CONFIG_PATH": os.path.dirname(pc), "PKG_CONFIG_SYSROOT_DIR": STAGE.name}
     # The staged files are found below the stage, the system's own without it.
-    flags = run("pkg-config", "--cflags", "--libs", "heatloom", env=env).replace(f"{os.path.abspath('stage')}/usr/include", "/usr/include") \
-        .replace(f"{os.path.abspath('stage')}/usr/lib", "/usr/lib").split()
+    flags = run("pkg-config", "--cflags", "--libs", "heatloom", env=env).replace(f"{STAGE.name}/usr/include", "/usr/include") \
+        .replace(f"{STAGE.name}/usr/lib", "/usr/lib").split()
     run("cc", "-Wall", "-Werror", "example.c", "-o", "example", *flags)
     library = os.path.dirname(one(f"{prefix}/**/libheatloom.so"))
     out = run("./example", plant("loop.heatloom"), env={"LD_LIBRARY_PATH": library})
