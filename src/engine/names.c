@@ -14,6 +14,7 @@ static const struct { const char *key, *name; } hidden[] = {
   { "shaft_power_net", N_("shaft power of turbines less pumps") },
   { "live_steam", N_("live steam flow") },
   { "fuel_heat_hhv", N_("fuel heat (HHV)") },
+  { "partial_sum", N_("partial sum") },
   { "useful", N_("net power and heat delivered") },
   { "saturation_T", N_("saturation temperature") },
 };

@@ -3,26 +3,46 @@
 #include "engine/model.h"
 #include "plant/i18n.h"
 
+#define MOST_TERMS 100
+
+/* sum = all of the parts.  A sum of very many goes over partial sums. */
+static void
+add_sum (HlEmit *emit, HlVarKind kind, const int *parts, int n, int sum)
+{
+  int vars[MOST_TERMS + 1];
+  double factors[MOST_TERMS + 1];
+  if (n > MOST_TERMS)
+    {
+      g_autofree int *partial = g_new (int, n / MOST_TERMS + 1);
+      int n_partial = 0;
+      for (int first = 0; first < n; first += MOST_TERMS)
+        {
+          partial[n_partial] = hl_emit_hidden (emit, "partial_sum", kind);
+          add_sum (emit, kind, parts + first, MIN (MOST_TERMS, n - first), partial[n_partial++]);
+        }
+      add_sum (emit, kind, partial, n_partial, sum);
+      return;
+    }
+  for (int k = 0; k < n; k++)
+    {
+      vars[k] = parts[k];
+      factors[k] = 1.0;
+    }
+  vars[n] = sum;
+  factors[n] = -1.0;
+  hl_emit_done (emit, hl_add_linear (emit->system, kind, vars, factors, n + 1, 0.0), NULL, n);
+}
+
 /* total = sum of the parts; -1 where there are none. */
 static int
 total (HlEmit *emit, const char *key, HlVarKind kind, HlSum sum)
 {
   const GArray *parts = emit->model->sums[sum];
-  int vars[HL_EQUATION_MOST];
-  double factors[HL_EQUATION_MOST];
   if (parts->len == 0)
     return -1;
-  g_return_val_if_fail (parts->len < HL_EQUATION_MOST, -1);
-  int n = (int) parts->len;
-  for (int k = 0; k < n; k++)
-    {
-      vars[k] = g_array_index (parts, int, k);
-      factors[k] = 1.0;
-    }
-  vars[n] = hl_emit_own (emit, key, kind);
-  factors[n] = -1.0;
-  hl_emit_done (emit, hl_add_linear (emit->system, kind, vars, factors, n + 1, 0.0), NULL, n);
-  return vars[n];
+  int var = hl_emit_own (emit, key, kind);
+  add_sum (emit, kind, (const int *) (const void *) parts->data, (int) parts->len, var);
+  return var;
 }
 
 static void
@@ -62,22 +82,21 @@ static int
 fuel_heat_hhv (HlEmit *emit)
 {
   const HlModel *model = emit->model;
-  int n_components = (int) hl_plant_n_components (model->plant), vars[HL_EQUATION_MOST], n = 0;
-  double factors[HL_EQUATION_MOST / 2], minus = -1.0;
-  for (int c = 0; c < n_components && n < HL_EQUATION_MOST / 2 - 2; c++)
+  int n_components = (int) hl_plant_n_components (model->plant);
+  g_autoptr (GArray) parts = g_array_new (FALSE, FALSE, sizeof (int));
+  for (int c = 0; c < n_components; c++)
     {
-      int heat = hl_model_own_var (model, c, "fuel_heat");
-      int ratio = hl_model_own_var (model, c, "fuel_hhv_ratio");
+      int heat = hl_model_own_var (model, c, "fuel_heat"), ratio = hl_model_own_var (model, c, "fuel_hhv_ratio");
       if (heat < 0 || ratio < 0)
         continue;
-      vars[2 * n] = heat;
-      vars[2 * n + 1] = ratio;
-      factors[n++] = 1.0;
+      int part = hl_emit_hidden (emit, "fuel_heat_hhv", HL_VAR_POWER);
+      hl_emit_done (emit, hl_add_product (emit->system, heat, ratio, part), NULL, 2);
+      g_array_append_val (parts, part);
     }
-  if (n == 0)
+  if (parts->len == 0)
     return -1;
   int sum = hl_emit_hidden (emit, "fuel_heat_hhv", HL_VAR_POWER);
-  hl_emit_done (emit, hl_add_energy (emit->system, HL_VAR_POWER, vars, factors, n, &sum, &minus, 1), NULL, 2 * n);
+  add_sum (emit, HL_VAR_POWER, (const int *) (const void *) parts->data, (int) parts->len, sum);
   return sum;
 }
 

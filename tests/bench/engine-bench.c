@@ -84,6 +84,25 @@ bench (const char *name, HlPlant *plant)
            "", cold->numbers.n_evaluations, warm->numbers.n_evaluations, cold->numbers.n_property_calls, warm->numbers.n_property_calls);
 }
 
+/* Growth: so many 300 MW-class plants in one file. */
+static void
+bench_copies (int n)
+{
+  g_autoptr (HlPlant) plant = test_plant_copies (test_large_plant, n, 250.0);
+  g_autoptr (HlSolution) cold = hl_solve (plant, NULL);
+  Times w = { 0.0 };
+  test_assert_solved (cold);
+  int rounds = MAX (200 / n, 4);
+  for (int round = 0; round < rounds; round++)
+    {
+      g_autoptr (HlSolution) warm = hl_solve (plant, cold);
+      add (&w, warm);
+    }
+  double factor = (double) ROUNDS / rounds;
+  g_print ("%3d such plants: warm %.0f us: build %.0f, structure %.0f, numbers %.0f, results %.0f\n", n, w.whole * factor, w.build * factor, w.structure * factor,
+           w.numbers * factor, w.results * factor);
+}
+
 int
 main (int argc, char **argv)
 {
@@ -107,5 +126,7 @@ main (int argc, char **argv)
   g_autoptr (HlPlant) reheat = test_plant (test_reheat_plant), large = test_plant (test_large_plant);
   bench ("reheat, two heaters", reheat);
   bench ("300 MW, seven heaters", large);
+  for (int n = 1; n <= 50; n = n == 1 ? 10 : 5 * n)
+    bench_copies (n);
   return 0;
 }

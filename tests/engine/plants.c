@@ -256,3 +256,49 @@ test_finding (const HlSolution *solution, const char *code)
       return hl_solution_finding (solution, k);
   return NULL;
 }
+
+static const char *
+copy_id (const char *id, int number)
+{
+  g_autofree char *text = g_strdup_printf ("%s_%d", id, number);
+  return g_intern_string (text);
+}
+
+static void
+add_copy (Builder *b, HlPlant *plant, int number, double flow)
+{
+  for (guint i = 0; i < hl_plant_n_components (plant); i++)
+    {
+      HlComponent *component = hl_component_copy (hl_plant_component (plant, i));
+      HlValue value = { .origin = HL_ORIGIN_GIVEN, .value = flow };
+      if (g_str_equal (component->id, "T1"))
+        hl_component_set_value (component, g_intern_static_string ("inlet.m"), &value);
+      component->id = copy_id (component->id, number);
+      take (b, hl_plant_with_component (b->plant, component));
+    }
+  for (guint i = 0; i < hl_plant_n_streams (plant); i++)
+    {
+      const HlStream *stream = hl_plant_stream (plant, i);
+      take (b, hl_plant_with_stream (b->plant, hl_stream_new (copy_id (stream->id, number), copy_id (stream->from_id, number), stream->from_port,
+                                                               copy_id (stream->to_id, number), stream->to_port)));
+    }
+  for (guint i = 0; i < hl_plant_n_shafts (plant); i++)
+    {
+      const HlShaft *shaft = hl_plant_shaft (plant, i);
+      g_autofree const char **joins = g_new (const char *, shaft->n_joins);
+      for (guint k = 0; k < shaft->n_joins; k++)
+        joins[k] = copy_id (shaft->joins[k], number);
+      take (b, hl_plant_with_shaft (b->plant, hl_shaft_new (copy_id (shaft->id, number), joins, shaft->n_joins)));
+    }
+}
+
+HlPlant *
+test_plant_copies (const char *text, int n, double flow)
+{
+  g_autoptr (HlPlant) plant = test_plant (text);
+  Builder b = { hl_plant_new (), 0 };
+  b.plant = test_plant_let_go (b.plant, "plant.net_power");
+  for (int k = 1; k <= n; k++)
+    add_copy (&b, plant, k, flow);
+  return b.plant;
+}

@@ -24,5 +24,8 @@ void     test_print       (const HlSolution *solution);
     if (!(ABS (v_ - e_) <= (relative) * ABS (e_))) \
       g_error ("%s:%d: %s is %.10g, not %.10g (off by %.2e)", __FILE__, __LINE__, #value, v_, e_, v_ / e_ - 1.0); } G_STMT_END
 
+/* @n copies of the plant side by side, ids with the copy's number; every copy with its own flow at T1's inlet. */
+HlPlant *test_plant_copies (const char *text, int n, double flow);
+
 extern const char *const test_simple_loop, *const test_reheat_plant, *const test_large_plant, *const test_industrial_plant;
 G_END_DECLS

@@ -247,6 +247,20 @@ test_random_plants (void)
   hl_solution_unref (last);
 }
 
+/* Many plants in one file: each as if alone, sums over all, more machines than one equation holds. */
+static void
+test_many_plants_in_one (void)
+{
+  g_autoptr (HlPlant) one = test_plant_copies (test_simple_loop, 1, 10.0), many = test_plant_copies (test_simple_loop, 120, 10.0);
+  g_autoptr (HlSolution) s = hl_solve (one, NULL), t = hl_solve (many, NULL);
+  test_assert_solved (s);
+  test_assert_solved (t);
+  test_assert_balanced (t);
+  test_assert_near (test_value (t, "T1_77.power"), test_value (s, "T1_1.power"), 1e-12);
+  test_assert_near (test_value (t, "plant.net_power"), 120.0 * test_value (s, "plant.net_power"), 1e-10);
+  test_assert_near (test_value (t, "plant.cycle_efficiency"), test_value (s, "plant.cycle_efficiency"), 1e-10);
+}
+
 int
 main (int argc, char **argv)
 {
@@ -256,6 +270,7 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/solve/same-twice-and-from-a-start", test_same_twice_and_from_a_start);
   g_test_add_func ("/engine/solve/sizing-by-duty", test_sizing_by_duty);
   g_test_add_func ("/engine/solve/any-quantity-may-be-given", test_any_quantity_may_be_given);
+  g_test_add_func ("/engine/solve/many-plants-in-one", test_many_plants_in_one);
   g_test_add_func ("/engine/solve/random-plants", test_random_plants);
   return g_test_run ();
 }
