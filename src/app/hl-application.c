@@ -34,31 +34,26 @@ static const struct { const char *action; const char *keys[4]; } shortcuts[] = {
   { "app.quit", { "<Control>q" } },
 };
 
-static HlWindow *
-new_window (HlApplication *self)
-{
-  HlWindow *window = hl_window_new (GTK_APPLICATION (self));
-  return window;
-}
-
-static void
-open_demo (HlWindow *window)
+/* The demo plant as a new one without a file.  Read before there is a window, so that the window is filled once. */
+static HlSession *
+demo_session (void)
 {
   g_autofree char *path = g_build_filename (hl_data_folder (), "examples", DEMO_PLANT, NULL);
-  if (g_file_test (path, G_FILE_TEST_EXISTS))
-    hl_window_open_demo (window, path);
+  HlSession *session = hl_session_new ();
+  HlPlant *plant = hl_plant_load (path, NULL);
+  if (plant != NULL)
+    hl_session_reset (session, plant, NULL);
+  return session;
 }
 
 static void
 hl_application_activate (GApplication *application)
 {
-  HlApplication *self = HL_APPLICATION (application);
-  GtkWindow *present = gtk_application_get_active_window (GTK_APPLICATION (self));
+  GtkWindow *present = gtk_application_get_active_window (GTK_APPLICATION (application));
   if (present == NULL)
     {
-      HlWindow *window = new_window (self);
-      open_demo (window);
-      present = GTK_WINDOW (window);
+      g_autoptr (HlSession) session = demo_session ();
+      present = GTK_WINDOW (hl_window_new (GTK_APPLICATION (application), session));
     }
   gtk_window_present (present);
 }
@@ -68,11 +63,13 @@ hl_application_open (GApplication *application, GFile **files, int n_files, cons
 {
   for (int n = 0; n < n_files; n++)
     {
-      HlWindow *window = new_window (HL_APPLICATION (application));
       g_autofree char *path = g_file_get_path (files[n]);
+      g_autoptr (HlSession) session = hl_session_new ();
+      gboolean is_open = path != NULL && hl_session_open (session, path, NULL);
+      HlWindow *window = hl_window_new (GTK_APPLICATION (application), session);
       gtk_window_present (GTK_WINDOW (window));
-      if (path != NULL)
-        hl_window_open_path (window, path);
+      if (path != NULL && !is_open)
+        hl_window_open_path (window, path);     /* once more, to say in the window what is wrong */
     }
 }
 

@@ -408,6 +408,7 @@ void
 hl_session_reset (HlSession *self, HlPlant *plant, const char *path)
 {
   char *own_path = g_strdup (path);    /* @path may be ours */
+  gboolean had_selection = self->selection->len > 0;
   g_clear_pointer (&self->preview, hl_plant_unref);
   g_clear_pointer (&self->last_good, hl_solution_unref);
   g_clear_pointer (&self->saved, hl_plant_unref);
@@ -420,7 +421,8 @@ hl_session_reset (HlSession *self, HlPlant *plant, const char *path)
   g_ptr_array_set_size (self->selection, 0);
   g_clear_pointer (&self->solution, hl_solution_unref);    /* of another plant: no start for this one */
   plant_has_changed (self);
-  g_signal_emit (self, signals[SELECTION_CHANGED], 0);
+  if (had_selection)
+    g_signal_emit (self, signals[SELECTION_CHANGED], 0);
   g_signal_emit (self, signals[FILE_CHANGED], 0);
   g_signal_emit (self, signals[MESSAGE], 0, "");
 }

@@ -16,6 +16,9 @@
 #define GLANCE_WIDTH 262
 #define GLANCE_FROM_WIDTH 740     /* the glance card needs this much in the work area, beside the diagram */
 
+enum { PROP_SESSION = 1, N_PROPERTIES };
+static GParamSpec *properties[N_PROPERTIES];
+
 G_DEFINE_FINAL_TYPE (HlWindow, hl_window, GTK_TYPE_APPLICATION_WINDOW)
 
 /* Where the rows of the nameplate are, for whoever drives the program from outside */
@@ -54,6 +57,14 @@ trace_later (HlWindow *self)
 
 /* Following the session */
 
+/* Setting one asks the display where the pointer is and waits for the answer: not for the same text again. */
+static void
+set_tooltip (GtkWidget *widget, const char *text)
+{
+  if (g_strcmp0 (gtk_widget_get_tooltip_text (widget), text) != 0)
+    gtk_widget_set_tooltip_text (widget, text);
+}
+
 static void
 update_title (HlWindow *self)
 {
@@ -65,7 +76,7 @@ update_title (HlWindow *self)
     file = g_path_get_basename (path);
   gtk_label_set_text (self->title_label, name);
   gtk_label_set_text (self->subtitle_label, file != NULL ? file : _("not saved yet"));
-  gtk_widget_set_tooltip_text (GTK_WIDGET (self->subtitle_label), path);
+  set_tooltip (GTK_WIDGET (self->subtitle_label), path);
   gtk_widget_set_visible (self->dirty_dot, hl_session_is_dirty (self->session));
   window_title = g_strdup_printf ("Heatloom – %s", name);
   gtk_window_set_title (GTK_WINDOW (self), window_title);
@@ -77,8 +88,8 @@ update_history_tooltips (HlWindow *self)
   const char *undo = hl_session_undo_name (self->session), *redo = hl_session_redo_name (self->session);
   g_autofree char *undo_text = undo != NULL ? g_strdup_printf (_("Undo: %s"), undo) : g_strdup (_("Nothing to undo"));
   g_autofree char *redo_text = redo != NULL ? g_strdup_printf (_("Redo: %s"), redo) : g_strdup (_("Nothing to redo"));
-  gtk_widget_set_tooltip_text (GTK_WIDGET (self->undo_button), undo_text);
-  gtk_widget_set_tooltip_text (GTK_WIDGET (self->redo_button), redo_text);
+  set_tooltip (GTK_WIDGET (self->undo_button), undo_text);
+  set_tooltip (GTK_WIDGET (self->redo_button), redo_text);
 }
 
 static void
@@ -207,7 +218,7 @@ static int
 diagram_size (gboolean is_beside, int whole)
 {
   return is_beside ? MIN (remembered ("diagram-beside-size", 540), whole * 45 / 100)
-                   : MIN (remembered ("diagram-below-size", 290), whole * 38 / 100);
+                   : MIN (remembered ("diagram-below-size", 290), whole * 34 / 100);
 }
 
 /* A paned that has just been turned still reckons with its former length, so the division follows the next allocation. */
@@ -325,7 +336,15 @@ static void
 hl_window_init (HlWindow *self)
 {
   gtk_widget_init_template (GTK_WIDGET (self));
-  self->session = hl_session_new ();
+}
+
+static void
+hl_window_constructed (GObject *object)
+{
+  HlWindow *self = HL_WINDOW (object);
+  G_OBJECT_CLASS (hl_window_parent_class)->constructed (object);
+  if (self->session == NULL)
+    self->session = hl_session_new ();
   fill_panes (self);
   hl_window_add_actions (self);
   hl_window_add_file_actions (self);
@@ -338,6 +357,15 @@ hl_window_init (HlWindow *self)
   update_glance (self);
   changed_cb (self);
   file_changed_cb (self);
+}
+
+static void
+hl_window_set_property (GObject *object, guint id, const GValue *value, GParamSpec *spec)
+{
+  if (id == PROP_SESSION)
+    HL_WINDOW (object)->session = g_value_dup_object (value);
+  else
+    G_OBJECT_WARN_INVALID_PROPERTY_ID (object, id, spec);
 }
 
 static void
@@ -361,11 +389,15 @@ static void
 hl_window_class_init (HlWindowClass *class)
 {
   GtkWidgetClass *widget = GTK_WIDGET_CLASS (class);
+  G_OBJECT_CLASS (class)->constructed = hl_window_constructed;
+  G_OBJECT_CLASS (class)->set_property = hl_window_set_property;
   G_OBJECT_CLASS (class)->dispose = hl_window_dispose;
   G_OBJECT_CLASS (class)->finalize = hl_window_finalize;
   GTK_WINDOW_CLASS (class)->close_request = hl_window_close_request;
   widget->size_allocate = hl_window_size_allocate;
   widget->realize = hl_window_realize;
+  properties[PROP_SESSION] = g_param_spec_object ("session", NULL, NULL, HL_TYPE_SESSION, G_PARAM_WRITABLE | G_PARAM_CONSTRUCT_ONLY | G_PARAM_STATIC_STRINGS);
+  g_object_class_install_properties (G_OBJECT_CLASS (class), N_PROPERTIES, properties);
   gtk_widget_class_set_template_from_resource (widget, "/local/heatloom/Heatloom/hl-window.ui");
   static const struct { const char *name; gssize offset; } children[] = {
 #define CHILD(field) { #field, G_STRUCT_OFFSET (HlWindow, field) }
@@ -380,9 +412,9 @@ hl_window_class_init (HlWindowClass *class)
 }
 
 HlWindow *
-hl_window_new (GtkApplication *application)
+hl_window_new (GtkApplication *application, HlSession *session)
 {
-  return g_object_new (HL_TYPE_WINDOW, "application", application, NULL);
+  return g_object_new (HL_TYPE_WINDOW, "application", application, "session", session, NULL);
 }
 
 HlSession *

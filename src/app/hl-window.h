@@ -6,7 +6,7 @@
 G_BEGIN_DECLS
 #define HL_TYPE_WINDOW (hl_window_get_type ())
 G_DECLARE_FINAL_TYPE (HlWindow, hl_window, HL, WINDOW, GtkApplicationWindow)
-HlWindow  *hl_window_new       (GtkApplication *application);    /* with an empty plant */
+HlWindow  *hl_window_new       (GtkApplication *application, HlSession *session);    /* NULL session: an empty plant */
 HlSession *hl_window_session   (HlWindow *self);                 /* (transfer none) */
 /* At once, without a question; an error is shown in the window. */
 gboolean   hl_window_open_path (HlWindow *self, const char *path);

@@ -40,7 +40,7 @@ spin (guint milliseconds)
 static HlWindow *
 new_window (void)
 {
-  HlWindow *window = hl_window_new (GTK_APPLICATION (application));
+  HlWindow *window = hl_window_new (GTK_APPLICATION (application), NULL);
   gtk_window_set_default_size (GTK_WINDOW (window), 1280, 720);
   gtk_window_present (GTK_WINDOW (window));
   gtk_test_widget_wait_for_draw (GTK_WIDGET (window));
