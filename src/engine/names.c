@@ -166,14 +166,21 @@ write_terms (const HlModel *model, const HlEquation *e, gboolean with_numbers)
   return text;
 }
 
+/* target = factor × source + offset; an offset of a temperature or pressure is a difference of such. */
 static char *
 write_tie (const HlModel *model, const HlEquation *e, gboolean with_numbers)
 {
   const double *a = &g_array_index (model->system->constants, double, e->first_constant);
   g_autofree char *target = word (model, e, 0, with_numbers), *source = word (model, e, 1, with_numbers);
-  if (fabs (a[1]) > 0.0)
-    return g_strdup_printf ("%s = %.6g × %s %s %.6g (SI)", target, a[0], source, a[1] < 0.0 ? "−" : "+", fabs (a[1]));
-  return g_strdup_printf ("%s = %.6g × %s", target, a[0], source);
+  HlDimension dimension = hl_name_dimension (e->kind);
+  if (dimension == HL_DIMENSION_TEMPERATURE)
+    dimension = HL_DIMENSION_TEMPERATURE_DIFFERENCE;
+  if (dimension == HL_DIMENSION_PRESSURE)
+    dimension = HL_DIMENSION_PRESSURE_DIFFERENCE;
+  if (!(fabs (a[1]) > 0.0))
+    return g_strdup_printf ("%s = %.6g × %s", target, a[0], source);
+  g_autofree char *offset = hl_units_format (fabs (a[1]), dimension, hl_plant_units (model->plant));
+  return g_strdup_printf ("%s = %.6g × %s %s %s", target, a[0], source, a[1] < 0.0 ? "−" : "+", offset);
 }
 
 char *

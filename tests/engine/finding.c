@@ -371,6 +371,37 @@ test_practice (void)
 }
 
 static void
+test_close_to_the_critical_pressure (void)
+{
+  g_autoptr (HlSolution) s = solve_with (test_simple_loop, "T1.inlet.p", 215e5);
+  const HlFinding *finding = assert_finding (s, "near-critical", HL_GRADE_CAUTION,
+    "Q1 evaporates at 215.0 bar, above 95 % of the critical pressure: control is difficult there. Stay below, or go above the critical pressure.");
+  assert_mend (finding, 0, HL_MEND_EDIT, "Q1.steam.p", "Change pressure at steam outlet of Q1");
+  g_autoptr (HlSolution) below = solve_with (test_simple_loop, "T1.inlet.p", 205e5), above = solve_with (test_simple_loop, "T1.inlet.p", 250e5);
+  g_assert_null (test_finding (below, "near-critical"));
+  g_assert_null (test_finding (above, "near-critical"));
+}
+
+/* What a button cannot do it says; what only points somewhere changes nothing. */
+static void
+test_mends_that_do_nothing (void)
+{
+  g_autoptr (HlPlant) plant = test_plant (test_simple_loop);
+  g_autoptr (GError) error = NULL;
+  HlMend gone = { .kind = HL_MEND_INSERT_VALVE, .address = hl_address_stream ("99", "") };
+  g_assert_null (hl_mend_apply (&gone, plant, &error));
+  g_assert_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_ADDRESS);
+  g_assert_cmpstr (error->message, ==, "there is no stream 99 any more");
+  g_clear_error (&error);
+  HlMend impossible = { .kind = HL_MEND_GIVE, .address = hl_address_component ("T1", "isentropic_efficiency"), .value = 7.0 };
+  g_assert_null (hl_mend_apply (&impossible, plant, &error));
+  g_assert_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_OUT_OF_RANGE);
+  HlMend show = { .kind = HL_MEND_CONNECT, .address = hl_address_component ("T1", "inlet") };
+  g_autoptr (HlPlant) same = hl_mend_apply (&show, plant, NULL);
+  g_assert_true (same == plant);
+}
+
+static void
 test_gravest_first (void)
 {
   g_autoptr (HlSolution) s = solve_taken (test_plant_set (test_plant_set (test_plant (test_reheat_plant), "B1.steam.T", 900.15), "P1.isentropic_efficiency", 0.95));
@@ -407,6 +438,8 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/finding/pump-draws-steam", test_pump_draws_steam);
   g_test_add_func ("/engine/finding/generator-on-no-shaft", test_generator_on_no_shaft);
   g_test_add_func ("/engine/finding/practice", test_practice);
+  g_test_add_func ("/engine/finding/close-to-the-critical-pressure", test_close_to_the_critical_pressure);
+  g_test_add_func ("/engine/finding/mends-that-do-nothing", test_mends_that_do_nothing);
   g_test_add_func ("/engine/finding/gravest-first", test_gravest_first);
   return g_test_run ();
 }

@@ -147,6 +147,56 @@ test_taking_apart (void)
     }
 }
 
+/* Any ports joined to any: most make no sense, and every one is told so. */
+static void
+test_random_drawings (void)
+{
+  g_autoptr (GRand) rand = g_rand_new_with_seed (13);
+  for (int round = 0; round < 300; round++)
+    {
+      HlPlant *plant = hl_plant_new ();
+      int n = g_rand_int_range (rand, 1, 9);
+      HlSolution *last = NULL;
+#define TAKE(expression) G_STMT_START { HlPlant *taken_ = (expression); hl_plant_unref (plant); plant = taken_; } G_STMT_END
+      for (int k = 0; k < n; k++)
+        {
+          const HlKind *kind = hl_kind_nth ((guint) g_rand_int_range (rand, 0, (gint32) hl_kind_count ()));
+          g_autofree char *id = hl_plant_free_id (plant, kind->letter);
+          HlComponent *component = hl_component_new (kind, g_intern_string (id), 14 * k, 0);
+          for (guint o = 0; o < kind->n_options; o++)
+            hl_component_set_option (component, kind->options[o].key, g_rand_int_range (rand, kind->options[o].least, kind->options[o].most + 1));
+          TAKE (hl_plant_with_component (plant, component));
+        }
+      for (int k = 0; k < 6 * n; k++)
+        {
+          const HlComponent *from = hl_plant_component (plant, (guint) g_rand_int_range (rand, 0, n)), *to = hl_plant_component (plant, (guint) g_rand_int_range (rand, 0, n));
+          if (hl_component_n_ports (from) == 0 || hl_component_n_ports (to) == 0)
+            continue;
+          HlPort a = hl_component_port (from, (guint) g_rand_int_range (rand, 0, (gint32) hl_component_n_ports (from)));
+          HlPort b = hl_component_port (to, (guint) g_rand_int_range (rand, 0, (gint32) hl_component_n_ports (to)));
+          if (!hl_plant_can_connect (plant, from->id, a.key, to->id, b.key, NULL))
+            continue;
+          g_autofree char *id = hl_plant_free_id (plant, "");
+          TAKE (hl_plant_with_stream (plant, hl_stream_new (g_intern_string (id), from->id, a.key, to->id, b.key)));
+          TAKE (hl_settle (plant, NULL, NULL));
+          HlSolution *s = hl_solve (plant, last);
+          hl_solution_unref (last);
+          last = s;
+          check (s);
+          /* Every button of every finding can be pressed. */
+          for (guint f = 0; f < hl_solution_n_findings (s); f++)
+            for (guint m = 0; m < hl_solution_finding (s, f)->n_mends; m++)
+              {
+                g_autoptr (HlPlant) mended = hl_mend_apply (&hl_solution_finding (s, f)->mends[m], plant, NULL);
+                g_assert_nonnull (mended);
+              }
+        }
+#undef TAKE
+      hl_solution_unref (last);
+      hl_plant_unref (plant);
+    }
+}
+
 static gpointer
 solve_often (gpointer data)
 {
@@ -187,6 +237,7 @@ main (int argc, char **argv)
   g_test_init (&argc, &argv, NULL);
   g_test_add_func ("/engine/robustness/random-edits", test_random_edits);
   g_test_add_func ("/engine/robustness/taking-apart", test_taking_apart);
+  g_test_add_func ("/engine/robustness/random-drawings", test_random_drawings);
   g_test_add_func ("/engine/robustness/threads", test_threads);
   return g_test_run ();
 }

@@ -88,6 +88,21 @@ check_steam (HlChecker *checker, const char *port, const char *key)
       }
 }
 
+/* Close below the critical pressure liquid and vapour hardly differ: drum level, and properties, become hard to hold. */
+static void
+check_evaporation (HlChecker *checker, const HlNodeResult *steam)
+{
+  HlFluidLimits limits;
+  hl_fluid_limits (hl_fluid_water (), &limits);
+  if (steam == NULL || !steam->has_pressure || !(steam->p > 0.95 * limits.p_critical && steam->p < limits.p_critical))
+    return;
+  g_autofree char *p = hl_check_text (checker, HL_DIMENSION_PRESSURE, steam->p);
+  HlFinding *finding = hl_check_add (checker, HL_GRADE_CAUTION, "near-critical", "steam.p",
+    g_strdup_printf (_("%s evaporates at %s, above 95 %% of the critical pressure: control is difficult there. Stay below, or go above the critical pressure."),
+                     checker->component->id, p));
+  hl_check_offer (checker, finding, "steam.p");
+}
+
 static void
 check_pass (HlChecker *checker, const char *in_key, const char *out_key)
 {
@@ -108,6 +123,7 @@ check (HlChecker *checker)
 {
   const HlNodeResult *steam = hl_check_port (checker, "steam");
   check_steam (checker, "steam", "steam.T");
+  check_evaporation (checker, steam);
   check_pass (checker, "feed", "steam");
   for (int k = 1; k <= hl_component_option (checker->component, "reheats"); k++)
     {
