@@ -323,6 +323,8 @@ hl_quantity_row_start_typing (HlQuantityRow *self, const char *text)
 static void
 build_name (HlQuantityRow *self)
 {
+  g_autofree char *label = g_strdup_printf (_("Explain %s"), self->name);
+
   self->name_label = hl_pane_label (self->name, NULL);
   gtk_label_set_wrap (GTK_LABEL (self->name_label), TRUE);
   gtk_label_set_wrap_mode (GTK_LABEL (self->name_label), PANGO_WRAP_WORD_CHAR);
@@ -333,6 +335,7 @@ build_name (HlQuantityRow *self)
   gtk_button_set_has_frame (GTK_BUTTON (self->name_button), FALSE);
   gtk_widget_add_css_class (self->name_button, "name");
   gtk_widget_set_hexpand (self->name_button, TRUE);
+  hl_pane_set_accessible (self->name_button, label, NULL);
   gtk_actionable_set_action_name (GTK_ACTIONABLE (self->name_button), "row.explain");
   gtk_box_append (GTK_BOX (self->line), self->name_button);
 }
