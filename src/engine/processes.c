@@ -9,6 +9,16 @@ hl_process_node (const HlProcessSink *sink, const char *port)
   return hl_model_port_node (sink->model, sink->index, port);
 }
 
+static void
+add (HlProcessSink *sink, HlProcess *process, const HlNodeResult *flow)
+{
+  process->component = (guint) sink->index;
+  process->m = flow->has_flow ? flow->m : NAN;
+  if (process->kind == HL_PROCESS_EXPANSION || process->kind == HL_PROCESS_COMPRESSION)
+    process->has_isentropic = hl_fluid_state_ps (process->fluid, process->to.p, process->from.s, &process->isentropic) == HL_OK;
+  g_array_append_val (sink->out, *process);
+}
+
 void
 hl_process_add (HlProcessSink *sink, HlProcessKind kind, int from, int to)
 {
@@ -19,12 +29,44 @@ hl_process_add (HlProcessSink *sink, HlProcessKind kind, int from, int to)
   if (!a->has_state || !b->has_state)
     return;
   HlProcess process = {
-    .kind = kind, .component = (guint) sink->index,
-    .from_stream = from_node->stream, .to_stream = to_node->stream,
-    .from = a->st, .to = b->st, .fluid = from_node->fluid,
-    .m = a->has_flow ? a->m : NAN, .is_service = a->is_service && b->is_service,
+    .kind = kind, .from_stream = from_node->stream, .to_stream = to_node->stream,
+    .from = a->st, .to = b->st, .fluid = from_node->fluid, .is_service = a->is_service && b->is_service,
   };
-  if (kind == HL_PROCESS_EXPANSION || kind == HL_PROCESS_COMPRESSION)
-    process.has_isentropic = hl_fluid_state_ps (from_node->fluid, b->st.p, a->st.s, &process.isentropic) == HL_OK;
-  g_array_append_val (sink->out, process);
+  add (sink, &process, a);
+}
+
+void
+hl_process_add_to (HlProcessSink *sink, HlProcessKind kind, int from, const HlState *to)
+{
+  if (from < 0 || !sink->states[from].has_state)
+    return;
+  const HlNode *node = hl_model_node (sink->model, from);
+  HlProcess process = {
+    .kind = kind, .from_stream = node->stream, .to_stream = -1,
+    .from = sink->states[from].st, .to = *to, .fluid = node->fluid, .is_service = sink->states[from].is_service,
+  };
+  add (sink, &process, &sink->states[from]);
+}
+
+void
+hl_process_add_from (HlProcessSink *sink, HlProcessKind kind, const HlState *from, int to)
+{
+  if (to < 0 || !sink->states[to].has_state)
+    return;
+  const HlNode *node = hl_model_node (sink->model, to);
+  HlProcess process = {
+    .kind = kind, .from_stream = -1, .to_stream = node->stream,
+    .from = *from, .to = sink->states[to].st, .fluid = node->fluid, .is_service = sink->states[to].is_service,
+  };
+  add (sink, &process, &sink->states[to]);
+}
+
+gboolean
+hl_process_own (const HlProcessSink *sink, const char *key, double *value)
+{
+  int var = hl_model_own_var (sink->model, sink->index, key);
+  if (var < 0 || !sink->is_known[sink->model->system->root[var]])
+    return FALSE;
+  *value = hl_system_value (sink->model->system, var);
+  return TRUE;
 }

@@ -18,9 +18,14 @@ typedef struct {
   const HlComponent  *component;
   int                 index;
   GArray             *out;         /* HlProcess */
+  const gboolean     *is_known;    /* of variables */
 } HlProcessSink;
 
 int  hl_process_node     (const HlProcessSink *sink, const char *port);          /* -1 when not connected */
 /* Adds the way from one node to another, where both states are known; with the isentropic end for machines. */
 void hl_process_add      (HlProcessSink *sink, HlProcessKind kind, int from, int to);
+/* The same where one end lies inside the component. */
+void hl_process_add_to   (HlProcessSink *sink, HlProcessKind kind, int from, const HlState *to);
+void hl_process_add_from (HlProcessSink *sink, HlProcessKind kind, const HlState *from, int to);
+gboolean hl_process_own  (const HlProcessSink *sink, const char *key, double *value);   /* SI */
 G_END_DECLS

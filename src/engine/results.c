@@ -114,7 +114,7 @@ void
 hl_results_processes (HlSolution *solution)
 {
   solution->processes = g_array_new (FALSE, FALSE, sizeof (HlProcess));
-  HlProcessSink sink = { solution->model, solution->states, NULL, 0, solution->processes };
+  HlProcessSink sink = { solution->model, solution->states, NULL, 0, solution->processes, solution->numbers.is_known };
   for (guint c = 0; c < hl_plant_n_components (solution->plant); c++)
     {
       sink.component = hl_plant_component (solution->plant, c);

@@ -1,12 +1,15 @@
 /* Turbine section: groups between extractions, each with its efficiency, or one straight line in h and s.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "engine/components/components.h"
+#include "engine/wet-expansion.h"
 #include "plant/i18n.h"
 #include <math.h>
 
 #define NODE(emit, n) hl_model_node ((emit)->model, n)
 #define MOST_OUTLETS 32
 enum { BY_GROUP, STRAIGHT_LINE };
+enum { WETNESS_NONE, WETNESS_BAUMANN };
+enum { LOSS_NONE, LOSS_COUNTED };
 
 static const char *
 outlet_key (int n_extractions, int k)
@@ -14,46 +17,102 @@ outlet_key (int n_extractions, int k)
   return k <= n_extractions ? hl_key ("extraction", k) : "exhaust";
 }
 
+/* Where each group begins and ends: inlet, extractions, end of the expansion. */
+typedef struct {
+  const HlFluid *fluid;
+  int p[MOST_OUTLETS], h[MOST_OUTLETS], n_groups;
+  int factor;                     /* of Baumann's rule; -1: moisture costs nothing */
+} Line;
+
+static void
+add_expansion (HlEmit *emit, const Line *line, int from, int to, int efficiency)
+{
+  HlEquation *e = line->factor < 0
+    ? hl_add_expansion (emit->system, line->fluid, line->p[from], line->h[from], line->p[to], efficiency, line->h[to])
+    : hl_add_wet_expansion (emit->system, line->fluid, line->p[from], line->h[from], line->p[to], efficiency, line->factor, line->h[to]);
+  hl_emit_done (emit, e, NULL, -1);
+}
+
+static void
+add_overall (HlEmit *emit, const Line *line, int from, int to, int efficiency)
+{
+  hl_emit_done (emit, hl_add_overall_efficiency (emit->system, line->fluid, line->p[from], line->h[from], line->p[to], efficiency, line->h[to]), NULL, 3);
+}
+
 /* Every group expands from the state that the one before it left. */
 static void
-emit_groups (HlEmit *emit, const int *nodes, int n_groups, int section)
+emit_groups (HlEmit *emit, const Line *line, int section)
 {
   gboolean section_is_used = FALSE;
-  for (int k = 1; k <= n_groups; k++)
+  for (int k = 1; k <= line->n_groups; k++)
     {
       const char *key = hl_key ("group_efficiency", k);
       int efficiency = hl_emit_own (emit, key, HL_VAR_RATIO);
-      const HlNode *in = NODE (emit, nodes[k - 1]), *out = NODE (emit, nodes[k]);
       if (!hl_emit_has_value (emit, key))
         {
           hl_system_merge (emit->system, section, efficiency);
           efficiency = section;
           section_is_used = TRUE;
         }
-      hl_emit_done (emit, hl_add_expansion (emit->system, in->fluid, in->p, in->h, out->p, efficiency, out->h), NULL, -1);
+      add_expansion (emit, line, k - 1, k, efficiency);
     }
   /* Where every group has its own, that of the section is what comes of them; one still assumed for it has no say. */
   if (!section_is_used && !hl_emit_has_value (emit, "isentropic_efficiency"))
-    {
-      const HlNode *in = NODE (emit, nodes[0]), *out = NODE (emit, nodes[n_groups]);
-      hl_emit_done (emit, hl_add_overall_efficiency (emit->system, in->fluid, in->p, in->h, out->p, section, out->h), NULL, 3);
-    }
+    add_overall (emit, line, 0, line->n_groups, section);
 }
 
 static void
-emit_straight_line (HlEmit *emit, const int *nodes, int n_groups, int section)
+emit_straight_line (HlEmit *emit, const Line *line, int section)
 {
-  const HlNode *in = NODE (emit, nodes[0]), *end = NODE (emit, nodes[n_groups]);
-  hl_emit_done (emit, hl_add_expansion (emit->system, in->fluid, in->p, in->h, end->p, section, end->h), NULL, -1);
-  for (int k = 1; k <= n_groups; k++)
+  int end = line->n_groups;
+  add_expansion (emit, line, 0, end, section);
+  for (int k = 1; k <= end; k++)
     {
-      const HlNode *from = NODE (emit, nodes[k - 1]), *to = NODE (emit, nodes[k]);
       int efficiency = hl_emit_own (emit, hl_key ("group_efficiency", k), HL_VAR_RATIO);
-      if (k < n_groups)
-        hl_emit_done (emit, hl_add_straight_line (emit->system, in->fluid, in->p, in->h, end->p, end->h, to->p, to->h), NULL, -1);
+      if (k < end)
+        hl_emit_done (emit, hl_add_straight_line (emit->system, line->fluid, line->p[0], line->h[0], line->p[end], line->h[end], line->p[k], line->h[k]), NULL, -1);
       if (!hl_emit_has_value (emit, hl_key ("group_efficiency", k)))
-        hl_emit_done (emit, hl_add_overall_efficiency (emit->system, in->fluid, from->p, from->h, to->p, efficiency, to->h), NULL, 3);
+        add_overall (emit, line, k - 1, k, efficiency);
     }
+}
+
+/* The expansion ends before the loss of the leaving steam turns back into heat at the exhaust. */
+static int
+end_of_expansion (HlEmit *emit, const HlNode *exhaust)
+{
+  if (hl_component_option (emit->component, "leaving_loss") != LOSS_COUNTED)
+    return exhaust->h;
+  int end = hl_emit_own (emit, "expansion_end_h", HL_VAR_ENTHALPY), loss = hl_emit_own (emit, "exhaust_loss", HL_VAR_ENTHALPY);
+  hl_system_var (emit->system, end)->start = 2.3e6;
+  hl_emit_done (emit, hl_add_linear (emit->system, HL_VAR_ENTHALPY, (const int[]) { exhaust->h, end, loss }, (const double[]) { 1.0, -1.0, -1.0 }, 3, 0.0),
+                N_("{0} = {1} + {2}"), -1);
+  return end;
+}
+
+static void
+emit_expansion (HlEmit *emit, const int *nodes, int n_groups, int section)
+{
+  Line line = { .n_groups = n_groups, .factor = -1 };
+  for (int k = 0; k <= n_groups; k++)
+    {
+      line.p[k] = NODE (emit, nodes[k])->p;
+      line.h[k] = k < n_groups ? NODE (emit, nodes[k])->h : end_of_expansion (emit, NODE (emit, nodes[k]));
+    }
+  line.fluid = NODE (emit, nodes[0])->fluid;
+  if (hl_component_option (emit->component, "wetness") == WETNESS_BAUMANN)
+    line.factor = hl_emit_own (emit, "baumann_factor", HL_VAR_RATIO);
+  if (hl_component_option (emit->component, "expansion") == STRAIGHT_LINE)
+    emit_straight_line (emit, &line, section);
+  else
+    emit_groups (emit, &line, section);
+  if (line.factor >= 0)
+    add_overall (emit, &line, 0, n_groups, hl_emit_own (emit, "overall_efficiency", HL_VAR_RATIO));
+
+  int y = hl_emit_own (emit, "exhaust_moisture", HL_VAR_RATIO);
+  if (hl_emit_has_value (emit, "exhaust_moisture"))
+    hl_emit_done (emit, hl_add_enthalpy_at_moisture (emit->system, line.fluid, line.p[n_groups], y, line.h[n_groups]), NULL, -1);
+  else
+    hl_emit_done (emit, hl_add_moisture (emit->system, line.fluid, line.p[n_groups], line.h[n_groups], y), NULL, 2);
 }
 
 static void
@@ -70,10 +129,7 @@ emit_turbine (HlEmit *emit)
       nodes[k] = hl_emit_port (emit, outlet_key (n_extractions, k));
       hl_emit_guess (emit, nodes[k], k == n_groups ? 2.3e6 : 2.9e6);
     }
-  if (hl_component_option (emit->component, "expansion") == STRAIGHT_LINE)
-    emit_straight_line (emit, nodes, n_groups, section);
-  else
-    emit_groups (emit, nodes, n_groups, section);
+  emit_expansion (emit, nodes, n_groups, section);
 
   for (int k = 0; k <= n_groups; k++)
     {
@@ -83,15 +139,10 @@ emit_turbine (HlEmit *emit)
     }
   hl_emit_balance (emit, flows, 1, flows + 1, n_groups);
   int internal = hl_emit_own (emit, "internal_power", HL_VAR_POWER), power = hl_emit_own (emit, "power", HL_VAR_POWER);
-  int mechanical = hl_emit_own (emit, "mechanical_efficiency", HL_VAR_RATIO), y = hl_emit_own (emit, "exhaust_moisture", HL_VAR_RATIO);
-  const HlNode *exhaust = NODE (emit, nodes[n_groups]);
+  int mechanical = hl_emit_own (emit, "mechanical_efficiency", HL_VAR_RATIO);
   hl_emit_done (emit, hl_add_energy (emit->system, HL_VAR_POWER, pairs, signs, n_groups + 1, &internal, (const double[]) { -1.0 }, 1), NULL,
                 2 * (n_groups + 1));
   hl_emit_done (emit, hl_add_product (emit->system, internal, mechanical, power), NULL, 2);
-  if (hl_emit_has_value (emit, "exhaust_moisture"))
-    hl_emit_done (emit, hl_add_enthalpy_at_moisture (emit->system, exhaust->fluid, exhaust->p, y, exhaust->h), NULL, -1);
-  else
-    hl_emit_done (emit, hl_add_moisture (emit->system, exhaust->fluid, exhaust->p, exhaust->h, y), NULL, 2);
   hl_emit_sum (emit, HL_SUM_TURBINE_POWER, power);
   if (!emit->model->is_on_shaft[emit->index])
     hl_emit_sum (emit, HL_SUM_GROSS, power);
@@ -155,6 +206,15 @@ check (HlChecker *checker)
   hl_check_offer (checker, finding, "inlet.T");
 }
 
+/* State at the end of the expansion, where a leaving loss sets it apart from the exhaust. */
+static gboolean
+find_end (const HlProcessSink *sink, int exhaust, HlState *end)
+{
+  double h;
+  return exhaust >= 0 && sink->states[exhaust].has_state && hl_process_own (sink, "expansion_end_h", &h)
+         && hl_fluid_state_ph (hl_model_node (sink->model, exhaust)->fluid, sink->states[exhaust].p, h, end) == HL_OK;
+}
+
 static void
 processes (HlProcessSink *sink)
 {
@@ -162,7 +222,14 @@ processes (HlProcessSink *sink)
   for (int k = 1; k <= n_extractions + 1; k++)
     {
       int to = hl_process_node (sink, outlet_key (n_extractions, k));
-      hl_process_add (sink, HL_PROCESS_EXPANSION, from, to);
+      HlState end;
+      if (k > n_extractions && find_end (sink, to, &end))
+        {
+          hl_process_add_to (sink, HL_PROCESS_EXPANSION, from, &end);
+          hl_process_add_from (sink, HL_PROCESS_LINE, &end, to);
+        }
+      else
+        hl_process_add (sink, HL_PROCESS_EXPANSION, from, to);
       if (to >= 0)
         from = to;
     }

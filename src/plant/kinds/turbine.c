@@ -5,10 +5,25 @@
 static const char *const expansion_words[] = { "by group", "straight line", NULL };
 static const char *const expansion_names[] = { N_("by group"), N_("straight line"), NULL };
 
+enum { WETNESS_NONE, WETNESS_BAUMANN };
+static const char *const wetness_words[] = { "none", "Baumann", NULL };
+static const char *const wetness_names[] = { N_("not corrected"), N_("by Baumann's rule"), NULL };
+
+enum { LOSS_NONE, LOSS_COUNTED };
+static const char *const loss_words[] = { "none", "counted", NULL };
+static const char *const loss_names[] = { N_("none"), N_("counted"), NULL };
+
+#define WITH_BAUMANN .when_option = "wetness", .when_choice = WETNESS_BAUMANN
+#define WITH_LOSS    .when_option = "leaving_loss", .when_choice = LOSS_COUNTED
+
 static const HlOptionKind options[] = {
   { .key = "extractions", .name = N_("Extractions"), .least = 0, .most = 8, .usual = 0 },
   { .key = "expansion", .name = N_("Expansion"), .least = 0, .most = 1, .usual = 0,
     .choices = expansion_words, .choice_names = expansion_names },
+  { .key = "wetness", .name = N_("Moisture correction"), .least = 0, .most = 1, .usual = WETNESS_NONE,
+    .choices = wetness_words, .choice_names = wetness_names },
+  { .key = "leaving_loss", .name = N_("Exhaust loss"), .least = 0, .most = 1, .usual = LOSS_NONE,
+    .choices = loss_words, .choice_names = loss_names },
 };
 
 static const HlPortKind ports[] = {
@@ -48,6 +63,22 @@ static const HlQuantityKind quantities[] = {
     NO_DEFAULT, RANGE (0.40, 0.95), LIMITS_EFFICIENCY, .yield_rank = 51,
     .help = N_("Isentropic efficiency from one extraction to the next; overrides the efficiency of the section."),
     .repeat = "extractions", .repeat_extra = 1 },
+  { .key = "baumann_factor", .sign = "a", .name = N_("Baumann factor"), .group = N_("Expansion"),
+    .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_ASSUMED,
+    DEFAULT (1.0, N_("Baumann 1921; measured values scatter from 0.4 to 2.5: Senoo and White 2017, quoted from a secondary text")),
+    RANGE (0.4, 2.5), LIMITS (HL_FROM_ZERO, 5.0), .yield_rank = 55,
+    .help = N_("Efficiency lost in the wet part for each part of mean moisture; the isentropic efficiency is then that of dry steam."), WITH_BAUMANN },
+  { .key = "overall_efficiency", .sign = "η", .name = N_("Efficiency with moisture"), .group = N_("Expansion"),
+    .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS_EFFICIENCY, .yield_rank = 54,
+    .help = N_("Isentropic efficiency from inlet to the end of the expansion, moisture counted, exhaust loss not."), WITH_BAUMANN },
+  { .key = "exhaust_loss", .sign = "Δh", .name = N_("Exhaust loss"), .group = N_("Expansion"),
+    .dimension = HL_DIMENSION_ENTHALPY, .flags = HL_QUANTITY_ASSUMED,
+    DEFAULT (25e3, N_("an example, no source; by definition half the square of the leaving velocity: 45 kJ/kg at 300 m/s")),
+    RANGE (5e3, 60e3), LIMITS (HL_FROM_ZERO, 5e5), .yield_rank = 56,
+    .help = N_("Energy of the steam that leaves the last blades and turns back into heat: exhaust enthalpy minus that at the end of the expansion."), WITH_LOSS },
+  { .key = "expansion_end_h", .sign = "h", .name = N_("Enthalpy at the end of the expansion"), .group = N_("Expansion"),
+    .dimension = HL_DIMENSION_ENTHALPY, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS (-1e7, 1e7), .yield_rank = 57,
+    .help = N_("Where the expansion line ends, before the exhaust loss."), WITH_LOSS },
   { .key = "mechanical_efficiency", .sign = "η_m", .name = N_("Mechanical efficiency"), .group = N_("Power"),
     .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_ASSUMED,
     DEFAULT (0.985, N_("Dixon and Hall, quoted from a secondary text: 0.95 for a few kW to 0.99 for large sets")),
@@ -58,7 +89,7 @@ static const HlQuantityKind quantities[] = {
     .help = N_("Vapour mass fraction at the exhaust; none where the exhaust is superheated.") },
   { .key = "exhaust_moisture", .sign = "y", .name = N_("Exhaust moisture"), .group = N_("Expansion"),
     .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_RESULT | HL_QUANTITY_PERCENT, NO_DEFAULT, RANGE (0.0, 0.12), LIMITS_FRACTION,
-    .help = N_("Liquid mass fraction at the exhaust: 1 - x where the exhaust is wet, otherwise 0.") },
+    .help = N_("Liquid mass fraction at the end of the expansion, before any exhaust loss: 1 - x where it is wet, otherwise 0.") },
   { .key = "internal_power", .sign = "P_i", .name = N_("Internal power"), .group = N_("Power"),
     .dimension = HL_DIMENSION_POWER, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS_POWER,
     .help = N_("Power that the steam gives to the rotor.") },
