@@ -102,7 +102,7 @@ distances (const HlModel *model, int from)
   return distance;
 }
 
-typedef struct { HlAddress address; double order; } Candidate;
+typedef struct { HlAddress address; double order, value; } Candidate;
 
 /* A typed flow, power or heat sizes the plant: then the assumed net power is what it stands for. */
 static gboolean
@@ -122,6 +122,8 @@ order_of (Settle *settle, const HlAddress *address, int edited, const int *dista
   int component = component_of (settle, address);
   if (settle->edited != NULL && address->owner == HL_OWNER_PLANT && kind != NULL && kind->dimension == HL_DIMENSION_POWER && is_size (settle))
     return order - 3000.0;
+  if (settle->edited != NULL && settle->edited->owner == HL_OWNER_PLANT && address->owner == HL_OWNER_PLANT)
+    return order - 2000.0;
   if (edited < 0)
     return order;
   if (component >= 0)
@@ -179,7 +181,7 @@ find_candidates (Settle *settle)
       const HlSpec *spec = hl_system_spec (model->system, g_array_index (specs, int, k));
       if (spec->origin != HL_ORIGIN_ASSUMED || is_edited (settle, spec))
         continue;
-      Candidate candidate = { spec->address, order_of (settle, &spec->address, edited, distance) };
+      Candidate candidate = { spec->address, order_of (settle, &spec->address, edited, distance), NAN };
       g_array_append_val (candidates, candidate);
     }
   g_array_sort (candidates, compare_candidates);
@@ -191,15 +193,34 @@ typedef enum { CLEAN, SOLVED_WITH_ERRORS, FAILED } Outcome;
 /* The structure says that a value may go; only numbers say whether what is left still settles everything, and sensibly: where
  * all flows hang on one value, one far away may look as good as one near by.  Nothing to say while more is to be settled. */
 static Outcome
-outcome_without (HlPlant *plant, const HlAddress *address)
+outcome_with (HlPlant *plant, const HlAddress *address, const HlValue *value)
 {
-  g_autoptr (HlPlant) without = hl_plant_with_value (plant, address, NULL, NULL);
-  if (without == NULL)
+  g_autoptr (HlPlant) changed = hl_plant_with_value (plant, address, value, NULL);
+  if (changed == NULL)
     return FAILED;
-  g_autoptr (HlSolution) solution = hl_solve (without, NULL);
+  g_autoptr (HlSolution) solution = hl_solve (changed, NULL);
   if (hl_solution_is_solved (solution) || solution->structure->n_surplus > 0 || solution->structure->n_missing > 0)
     return CLEAN;
   return solution->is_complete ? SOLVED_WITH_ERRORS : FAILED;
+}
+
+/* The first candidate that leaves a sound plant, else one that leaves a solvable one, else the first. */
+static guint
+choose (Settle *settle, const GArray *candidates)
+{
+  guint best = 0;
+  Outcome best_outcome = FAILED;
+  for (guint k = 0; k < MIN (candidates->len, MOST_TRIED) && best_outcome != CLEAN; k++)
+    {
+      const Candidate *candidate = &g_array_index (candidates, Candidate, k);
+      HlValue value = { .origin = HL_ORIGIN_ASSUMED, .value = candidate->value };
+      Outcome outcome = outcome_with (settle->plant, &candidate->address, isnan (candidate->value) ? NULL : &value);
+      if (outcome >= best_outcome)
+        continue;
+      best = k;
+      best_outcome = outcome;
+    }
+  return best;
 }
 
 /* Lets one assumed value of the over-determined part go.  FALSE when none can. */
@@ -209,17 +230,7 @@ yield_one (Settle *settle)
   g_autoptr (GArray) candidates = find_candidates (settle);
   if (candidates->len == 0)
     return FALSE;
-  guint best = 0;
-  Outcome best_outcome = FAILED;
-  for (guint k = 0; k < MIN (candidates->len, MOST_TRIED) && best_outcome != CLEAN; k++)
-    {
-      Outcome outcome = outcome_without (settle->plant, &g_array_index (candidates, Candidate, k).address);
-      if (outcome >= best_outcome)
-        continue;
-      best = k;
-      best_outcome = outcome;
-    }
-  HlAddress address = g_array_index (candidates, Candidate, best).address;
+  HlAddress address = g_array_index (candidates, Candidate, choose (settle, candidates)).address;
   say (settle, &address, FALSE);
   return replace (settle, &address, NULL);
 }
@@ -241,54 +252,48 @@ is_open (const Settle *settle, const HlAddress *address)
   return var >= 0 && settle->structure->is_open[model->system->root[var]];
 }
 
-/* Brings back one assumed value where the edited one left a gap: another of its component, else itself. */
+static void
+consider (Settle *settle, GArray *candidates, HlAddress address, const HlQuantityKind *kind, double value, int edited, const int *distance)
+{
+  if (!(kind->flags & HL_QUANTITY_ASSUMED) || !isfinite (value) || hl_plant_value (settle->plant, &address) != NULL || !is_open (settle, &address))
+    return;
+  Candidate candidate = { address, order_of (settle, &address, edited, distance), value };
+  /* What was let go comes back itself only where nothing else of its component can. */
+  if (hl_address_equal (&address, settle->edited))
+    candidate.order += 400.0;
+  g_array_append_val (candidates, candidate);
+}
+
+/* Brings back one assumed value where the edited one left a gap: another of its component, else itself, else what had yielded
+ * to it elsewhere. */
 static gboolean
 bring_back_one (Settle *settle)
 {
-  int index = edited_component (settle);
-  const HlAddress *edited = settle->edited;
-  HlAddress best = { 0 };
-  double value = NAN, best_order = INFINITY;
-  if (edited->owner == HL_OWNER_PLANT)
+  g_autoptr (GArray) candidates = g_array_new (FALSE, FALSE, sizeof (Candidate));
+  int edited = edited_component (settle);
+  g_autofree int *distance = edited >= 0 ? distances (settle->model, edited) : NULL;
+  guint n;
+  for (guint c = 0; c < hl_plant_n_components (settle->plant); c++)
     {
-      guint n;
-      const HlQuantityKind *kinds = hl_plant_quantities (&n);
-      for (guint k = 0; k < n; k++)
-        {
-          HlAddress address = hl_address_plant (g_intern_static_string (kinds[k].key));
-          if (!(kinds[k].flags & HL_QUANTITY_ASSUMED) || hl_plant_value (settle->plant, &address) != NULL || !is_open (settle, &address))
-            continue;
-          best = address;
-          value = kinds[k].default_value;
-          break;
-        }
-    }
-  else if (index >= 0)
-    {
-      const HlComponent *component = hl_plant_component (settle->plant, (guint) index);
+      const HlComponent *component = hl_plant_component (settle->plant, c);
       for (guint k = 0; k < hl_component_n_quantities (component); k++)
         {
           HlQuantity quantity = hl_component_quantity (component, k);
-          HlAddress address = hl_address_component (component->id, quantity.key);
-          double start = hl_quantity_default (quantity.kind, quantity.number);
-          if (!(quantity.kind->flags & HL_QUANTITY_ASSUMED) || !isfinite (start) || hl_plant_value (settle->plant, &address) != NULL
-              || !is_open (settle, &address))
-            continue;
-          double order = quantity.kind->yield_rank + (hl_address_equal (&address, edited) ? 10000.0 : 0.0);
-          if (order < best_order)
-            {
-              best_order = order;
-              best = address;
-              value = start;
-            }
+          consider (settle, candidates, hl_address_component (component->id, quantity.key), quantity.kind,
+                    hl_quantity_default (quantity.kind, quantity.number), edited, distance);
         }
     }
-  if (best.key == NULL || !isfinite (value))
+  const HlQuantityKind *kinds = hl_plant_quantities (&n);
+  for (guint k = 0; k < n; k++)
+    consider (settle, candidates, hl_address_plant (kinds[k].key), &kinds[k], kinds[k].default_value, edited, distance);
+  if (candidates->len == 0)
     return FALSE;
-  HlValue back = { .origin = HL_ORIGIN_ASSUMED, .value = value };
-  if (!replace (settle, &best, &back))
+  g_array_sort (candidates, compare_candidates);
+  const Candidate *best = &g_array_index (candidates, Candidate, choose (settle, candidates));
+  HlValue back = { .origin = HL_ORIGIN_ASSUMED, .value = best->value };
+  if (!replace (settle, &best->address, &back))
     return FALSE;
-  say (settle, &best, TRUE);
+  say (settle, &best->address, TRUE);
   return TRUE;
 }
 

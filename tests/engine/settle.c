@@ -149,6 +149,27 @@ test_what_is_let_go_comes_back (void)
   g_autoptr (HlSolution) s = solved (last);
 }
 
+/* What yielded elsewhere comes back when that which it yielded to goes: a pressure, a flow, a power. */
+static void
+test_what_yielded_elsewhere_comes_back (void)
+{
+  HlPlant *plant = edit (test_plant (NEW_LOOP), "T1.exhaust.p", 7000.0, "terminal temperature difference of C1 is now found");
+  g_autoptr (HlPlant) again = edit (plant, "T1.exhaust.p", NAN, "terminal temperature difference of C1 is assumed again");
+  g_autoptr (HlSolution) s = solved (again);
+  test_assert_near (test_value (s, "C1.steam.p"), 4008.0, 1e-3);
+
+  HlPlant *sized = test_plant (NEW_LOOP);
+  HlAddress net = address_of (sized, "plant.net_power");
+  HlValue assumed = { .origin = HL_ORIGIN_ASSUMED, .value = 10e6 };
+  HlPlant *open = hl_plant_with_value (sized, &net, &assumed, NULL);
+  hl_plant_unref (sized);
+  open = edit (open, "T1.inlet.m", 9.0, "net power of the plant is now found");
+  open = edit (open, "T1.inlet.m", NAN, "net power of the plant is assumed again");
+  open = edit (open, "plant.gross_power", 15e6, "net power of the plant is now found");
+  g_autoptr (HlPlant) last = edit (open, "plant.gross_power", NAN, "net power of the plant is assumed again");
+  g_autoptr (HlSolution) t = solved (last);
+}
+
 /* Where nothing is missing nothing comes back, and where nothing is too much nothing yields. */
 static void
 test_nothing_to_settle (void)
@@ -220,6 +241,7 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/settle/size-replaces-net-power", test_size_replaces_net_power);
   g_test_add_func ("/engine/settle/efficiency-finds-something-else", test_efficiency_finds_something_else);
   g_test_add_func ("/engine/settle/what-is-let-go-comes-back", test_what_is_let_go_comes_back);
+  g_test_add_func ("/engine/settle/what-yielded-elsewhere-comes-back", test_what_yielded_elsewhere_comes_back);
   g_test_add_func ("/engine/settle/nothing-to-settle", test_nothing_to_settle);
   g_test_add_func ("/engine/settle/topology-settles", test_topology_settles);
   g_test_add_func ("/engine/settle/settles-while-drawing", test_settles_while_drawing);
