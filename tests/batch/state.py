@@ -66,6 +66,13 @@ def test_text_is_for_people():
     assert err == "" and "80" in out and "°C" in out and "kJ/kg" in out and "vapour" in out, out
 
 
+def test_degrees_are_understood_in_every_locale():
+    expected, _ = batch("state", "water", "p=80 bar", "T=480 °C")
+    for locale in ("C", "POSIX", "de_DE.UTF-8", "no_SUCH.UTF-8"):
+        out, _ = batch("state", "water", "p=80 bar", "T=480 °C", env={"LC_ALL": locale, "LANGUAGE": ""})
+        assert out == expected, (locale, out)
+
+
 def test_json_goes_to_a_file():
     out, _ = batch("state", "water", "p=1 bar", "x=1", "--json", "dämpf.json")
     assert out == ""
