@@ -102,21 +102,51 @@ role_text (const HlQuantityKind *quantity)
   return g_strjoinv (", ", (char **) words);
 }
 
+static char *
+range_text (const HlQuantityKind *quantity)
+{
+  if (!isfinite (quantity->credible_low) || !isfinite (quantity->credible_high))
+    return g_strdup ("");
+  g_autofree char *low = hl_quantity_format (quantity, quantity->credible_low, HL_UNITS_METRIC);
+  g_autofree char *high = hl_quantity_format (quantity, quantity->credible_high, HL_UNITS_METRIC);
+  return g_strdup_printf (_("%s to %s"), low, high);
+}
+
+/* When the quantity exists, and what it means. */
+static char *
+meaning_text (const HlKind *kind, const HlQuantityKind *quantity)
+{
+  g_autofree char *exists = NULL;
+  if (quantity->repeat != NULL && quantity->repeat_extra > 0)
+    exists = g_strdup_printf (_("N = 1 to `%s` + %d"), quantity->repeat, quantity->repeat_extra);
+  else if (quantity->repeat != NULL)
+    exists = g_strdup_printf (_("N = 1 to `%s`"), quantity->repeat);
+  else if (quantity->when_option != NULL)
+    exists = g_strdup_printf (_("with `%s` = %s"), quantity->when_option,
+                              kind->options[hl_kind_find_option (kind, quantity->when_option)].choices[quantity->when_choice]);
+  const char *help = quantity->help != NULL && *quantity->help != '\0' ? _(quantity->help) : "";
+  return g_strjoin (exists != NULL && *help != '\0' ? ": " : "", exists != NULL ? exists : "", help, NULL);
+}
+
 static void
-print_quantities (const HlQuantityKind *quantities, guint n)
+print_quantities (const HlKind *kind, const HlQuantityKind *quantities, guint n)
 {
   if (n == 0)
     return;
-  printf ("\n| %s | %s | %s | %s | %s |\n|---|---|---|---|---|\n", _("Quantity"), _("Name"), _("SI unit"), _("Role"), _("Default"));
+  printf ("\n| %s | %s | %s | %s | %s | %s | %s |\n|---|---|---|---|---|---|---|\n", _("Quantity"), _("Name"), _("SI unit"), _("Role"),
+          _("Default"), _("Credible"), _("Meaning"));
   for (guint i = 0; i < n; i++)
     {
       const HlQuantityKind *quantity = &quantities[i];
       g_autofree char *role = role_text (quantity), *initial = default_text (quantity);
+      g_autofree char *range = range_text (quantity), *meaning = meaning_text (kind, quantity);
       print_key (quantity->key);
       print_cell (_(quantity->name));
       print_cell (hl_dimension_si_unit (quantity->dimension));
       print_cell (role);
       print_cell (initial);
+      print_cell (range);
+      print_cell (meaning);
       printf ("|\n");
     }
 }
@@ -131,7 +161,7 @@ print_kind (const HlKind *kind)
   printf ("\n");
   print_ports (kind);
   print_options (kind);
-  print_quantities (kind->quantities, kind->n_quantities);
+  print_quantities (kind, kind->quantities, kind->n_quantities);
 }
 
 static HlExit
@@ -140,17 +170,18 @@ run_kinds (const HlArguments *arguments G_GNUC_UNUSED)
   guint n;
   printf ("# %s\n\n", _("Components"));
   printf (_("What `heatloom-batch kinds` prints: every kind of component with its ports, options and quantities. Each port also\n"
-            "has the state of its stream: `T1.inlet.p`, and likewise T, h, s, x, m, v. N is a number from 1.\n"));
+            "has the state of its stream: `T1.inlet.p`, and likewise T, h, s, x, m, v. N is a number from 1. A value outside its credible\n"
+            "range brings a hint.\n"));
   for (guint i = 0; i < hl_kind_count (); i++)
     print_kind (hl_kind_nth (i));
   printf ("\n## %s\n\n", _("The plant as a whole"));
   printf ("%s\n", _("Addresses begin with `plant.`"));
   const HlQuantityKind *quantities = hl_plant_quantities (&n);
-  print_quantities (quantities, n);
+  print_quantities (NULL, quantities, n);
   printf ("\n## %s\n\n", _("Streams"));
   printf ("%s\n", _("Addresses are the stream's id and the key; a bare number is written `m:1` or `stream:1.m`."));
   quantities = hl_stream_quantities (&n);
-  print_quantities (quantities, n);
+  print_quantities (NULL, quantities, n);
   return HL_EXIT_DONE;
 }
 
