@@ -164,7 +164,14 @@ hl_text_show (cairo_t *cr, const HlTheme *theme, const char *text, double x, dou
   pango_layout_line_get_extents (line, NULL, &extents);
   width = (double) extents.width / PANGO_SCALE;
   cairo_move_to (cr, x - (align < 0 ? 0.0 : align > 0 ? width : width / 2.0), y);
-  pango_cairo_show_layout_line (cr, line);
+  if (cairo_surface_get_type (cairo_get_target (cr)) == CAIRO_SURFACE_TYPE_RECORDING)
+    {
+      /* A recording is replayed at any zoom, where glyphs would jump to whole pixels and the words fall apart. */
+      pango_cairo_layout_line_path (cr, line);
+      cairo_fill (cr);
+    }
+  else
+    pango_cairo_show_layout_line (cr, line);
   g_object_unref (layout);
   return width;
 }
