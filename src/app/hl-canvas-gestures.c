@@ -534,12 +534,15 @@ context_menu (HlCanvas *self)
     {
       g_menu_append (section, _("Turn"), "win.turn");
       g_menu_append (section, _("Mirror"), "win.mirror");
+      g_menu_append (section, _("Cut"), "win.cut");
+      g_menu_append (section, _("Copy"), "win.copy");
       g_menu_append (section, _("Duplicate"), "win.duplicate");
       g_menu_append (section, _("Delete"), "win.delete");
     }
   g_menu_append_section (menu, NULL, G_MENU_MODEL (section));
   g_object_unref (section);
   section = g_menu_new ();
+  g_menu_append (section, _("Paste"), "win.paste");
   g_menu_append (section, _("Select everything"), "win.select-all");
   g_menu_append (section, _("Show the whole plant"), "win.zoom-fit");
   g_menu_append_section (menu, NULL, G_MENU_MODEL (section));

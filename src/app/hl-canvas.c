@@ -559,6 +559,7 @@ add_keys (GtkWidgetClass *class)
     { GDK_KEY_r, 0, "win.turn" }, { GDK_KEY_m, 0, "win.mirror" }, { GDK_KEY_c, 0, "win.connect-menu" },
     { GDK_KEY_BackSpace, 0, "win.delete" }, { GDK_KEY_KP_Delete, 0, "win.delete" }, { GDK_KEY_Delete, 0, "win.delete" },
     { GDK_KEY_a, GDK_CONTROL_MASK, "win.select-all" }, { GDK_KEY_d, GDK_CONTROL_MASK, "win.duplicate" },
+    { GDK_KEY_c, GDK_CONTROL_MASK, "win.copy" }, { GDK_KEY_x, GDK_CONTROL_MASK, "win.cut" }, { GDK_KEY_v, GDK_CONTROL_MASK, "win.paste" },
     { GDK_KEY_Escape, 0, "win.deselect" },
     { GDK_KEY_plus, 0, "win.zoom-in" }, { GDK_KEY_plus, GDK_SHIFT_MASK, "win.zoom-in" }, { GDK_KEY_equal, 0, "win.zoom-in" },
     { GDK_KEY_KP_Add, 0, "win.zoom-in" }, { GDK_KEY_minus, 0, "win.zoom-out" }, { GDK_KEY_KP_Subtract, 0, "win.zoom-out" },

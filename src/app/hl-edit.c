@@ -237,6 +237,32 @@ hl_edit_duplicate (const HlPlant *plant, const char *const *ids, guint n, int dx
   return result;
 }
 
+HlPlant *
+hl_edit_merge (const HlPlant *plant, const HlPlant *other, int dx, int dy, GPtrArray *list)
+{
+  g_autoptr (GHashTable) copies = g_hash_table_new (g_str_hash, g_str_equal);
+  HlPlant *result = hl_plant_ref ((HlPlant *) plant);
+  guint n = hl_plant_n_components (other);
+  g_autofree const char **ids = g_new0 (const char *, n + 1);
+  for (guint i = 0; i < n; i++)
+    ids[i] = hl_plant_component (other, i)->id;
+  copy_components (&result, other, ids, n, dx, dy, copies, list);
+  copy_streams (&result, other, dx, dy, copies);
+  copy_shafts (&result, other, copies);
+  return result;
+}
+
+HlPlant *
+hl_edit_extract (const HlPlant *plant, const char *const *ids, guint n)
+{
+  g_autofree const char **others = g_new0 (const char *, hl_plant_n_components (plant) + 1);
+  guint n_others = 0;
+  for (guint i = 0; i < hl_plant_n_components (plant); i++)
+    if (!is_among (hl_plant_component (plant, i)->id, ids, n))
+      others[n_others++] = hl_plant_component (plant, i)->id;
+  return hl_plant_without (plant, others);
+}
+
 /* Lines */
 
 static gboolean

@@ -12,6 +12,10 @@ HlPlant *hl_edit_mirror      (const HlPlant *plant, const char *const *ids, guin
 HlPlant *hl_edit_delete      (const HlPlant *plant, const char *const *ids, guint n);
 /* Copies of the components with the lines and shafts among them. @copies gets the interned ids of the new components. */
 HlPlant *hl_edit_duplicate   (const HlPlant *plant, const char *const *ids, guint n, int dx, int dy, GPtrArray *copies);
+/* The selected components alone, with the lines and shafts among them: what is put on the clipboard. */
+HlPlant *hl_edit_extract     (const HlPlant *plant, const char *const *ids, guint n);
+/* Everything of @other added to @plant. */
+HlPlant *hl_edit_merge       (const HlPlant *plant, const HlPlant *other, int dx, int dy, GPtrArray *copies);
 /* A line between two ports, whichever of them is the outlet. */
 HlPlant *hl_edit_connect     (const HlPlant *plant, const char *a_id, const char *a_port, const char *b_id, const char *b_port,
                               const char **stream, GError **error);

@@ -199,6 +199,79 @@ duplicate_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
   hl_session_select_many (self->session, (const char *const *) copies->pdata, copies->len);
 }
 
+/* The clipboard carries a plant in the form of its file, as text: between windows, and to be looked at in an editor. */
+
+static void
+copy_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  g_autoptr (HlPlant) extract = hl_edit_extract (plant_of (self), ids, n);
+  g_autofree char *text = hl_plant_to_json (extract);
+  gdk_clipboard_set_text (gtk_widget_get_clipboard (GTK_WIDGET (self)), text);
+}
+
+static void
+cut_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  copy_cb (action, parameter, data);
+  apply_to_selection (self, _("Cut %s"), hl_edit_delete (plant_of (self), ids, n), TRUE);
+}
+
+static gboolean
+is_taken (const HlPlant *plant, int x, int y)
+{
+  for (guint n = 0; n < hl_plant_n_components (plant); n++)
+    if (hl_plant_component (plant, n)->x == x && hl_plant_component (plant, n)->y == y)
+      return TRUE;
+  return FALSE;
+}
+
+/* Where it was copied from, or so far beside it that it covers nothing pasted before. */
+static int
+paste_offset (const HlPlant *plant, const HlPlant *pasted)
+{
+  const HlComponent *first = hl_plant_component (pasted, 0);
+  int offset = 0;
+  while (is_taken (plant, first->x + offset, first->y + offset))
+    offset += COPY_OFFSET;
+  return offset;
+}
+
+static void
+paste_text_cb (GObject *source, GAsyncResult *result, gpointer data)
+{
+  g_autoptr (HlWindow) self = data;
+  g_autofree char *text = gdk_clipboard_read_text_finish (GDK_CLIPBOARD (source), result, NULL);
+  g_autoptr (HlPlant) pasted = text != NULL ? hl_plant_from_json (text, -1, _("clipboard"), NULL) : NULL;
+  g_autoptr (GPtrArray) copies = g_ptr_array_new ();
+  g_autofree char *words = NULL, *name = NULL;
+  HlPlant *plant;
+  int offset;
+
+  if (pasted == NULL || hl_plant_n_components (pasted) == 0)
+    {
+      say (self, _("The clipboard holds no components"));
+      return;
+    }
+  offset = paste_offset (plant_of (self), pasted);
+  plant = hl_edit_merge (plant_of (self), pasted, offset, offset, copies);
+  words = hl_edit_words (plant, (const char *const *) copies->pdata, copies->len);
+  name = g_strdup_printf (_("Paste %s"), words);
+  hl_session_apply (self->session, name, plant, NULL, TRUE);
+  hl_session_select_many (self->session, (const char *const *) copies->pdata, copies->len);
+}
+
+static void
+paste_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  gdk_clipboard_read_text_async (gtk_widget_get_clipboard (GTK_WIDGET (data)), NULL, paste_text_cb, g_object_ref (data));
+}
+
 /* Lines and shafts */
 
 static void
@@ -484,6 +557,9 @@ static const GActionEntry entries[] = {
   { "mirror", mirror_cb },
   { "delete", delete_cb },
   { "duplicate", duplicate_cb },
+  { "copy", copy_cb },
+  { "cut", cut_cb },
+  { "paste", paste_cb },
   { "connect", connect_cb, "(ssss)" },
   { "branch", branch_cb, "(sssiii)" },
   { "connect-menu", connect_menu_cb },
@@ -542,6 +618,8 @@ hl_window_update_actions (HlWindow *self)
   enable (self, "turn", n_components > 0);
   enable (self, "mirror", n_components > 0);
   enable (self, "duplicate", n_components > 0);
+  enable (self, "copy", n_components > 0);
+  enable (self, "cut", n_components > 0);
   enable (self, "delete", n > 0);
   enable (self, "connect-menu", single != NULL);
   enable (self, "join-selection", can_join_selection (self));

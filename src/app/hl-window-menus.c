@@ -104,6 +104,7 @@ static const Shortcut canvas_keys[] = {
   { N_("Move by five grid steps"), "<Shift>Left" },
   { N_("Select everything"), "<Control>a" },
   { N_("Duplicate"), "<Control>d" },
+  { N_("Cut, copy, paste"), "<Control>x <Control>c <Control>v" },
   { N_("Let go"), "Escape" },
   { N_("Next component"), "Tab" },
   { N_("Menu of the selection"), "<Shift>F10" },

@@ -218,6 +218,38 @@ test_edits_of_the_selection (void)
   end_window (window);
 }
 
+static void
+test_the_clipboard_carries_components_between_windows (void)
+{
+  HlWindow *window = new_window (), *other = new_window ();
+  const HlStream *line;
+
+  draw_loop (window);
+  act (window, "set-value", "(ss)", "T1.inlet.p", "72 bar");
+  act (window, "select", "s", "T1");
+  hl_session_select (hl_window_session (window), "G1", TRUE);
+  hl_session_select (hl_window_session (window), "C1", TRUE);
+  act (window, "copy", NULL);
+  g_assert_cmpuint (hl_plant_n_components (plant_of (window)), ==, 5);
+  act (other, "add-component-at", "(sii)", "turbine", 0, 0);
+  act (other, "paste", NULL);
+  spin (50);
+  g_assert_cmpuint (hl_plant_n_components (plant_of (other)), ==, 4);
+  line = hl_plant_stream_at (plant_of (other), "T2", "exhaust");
+  g_assert_nonnull (line);
+  g_assert_cmpstr (line->to_id, ==, "C1");
+  g_assert_cmpuint (hl_plant_shaft_of (plant_of (other), "T2")->n_joins, ==, 2);
+  g_assert_cmpfloat_with_epsilon (hl_values_find (&hl_plant_find_component (plant_of (other), "T2")->values, g_intern_string ("inlet.p"))->value, 72e5, 1e-6);
+  act (other, "cut", NULL);
+  g_assert_cmpuint (hl_plant_n_components (plant_of (other)), ==, 1);
+  gdk_clipboard_set_text (gtk_widget_get_clipboard (GTK_WIDGET (other)), "not a plant");
+  act (other, "paste", NULL);
+  spin (50);
+  g_assert_cmpuint (hl_plant_n_components (plant_of (other)), ==, 1);
+  end_window (other);
+  end_window (window);
+}
+
 static GtkEventController *
 primary_drag (HlCanvas *canvas)
 {
@@ -492,6 +524,7 @@ main (int argc, char **argv)
   g_test_add_func ("/app/window/loop-by-actions", test_a_loop_from_nothing_by_actions);
   g_test_add_func ("/app/window/enabled", test_actions_are_enabled_where_they_make_sense);
   g_test_add_func ("/app/window/selection", test_edits_of_the_selection);
+  g_test_add_func ("/app/window/clipboard", test_the_clipboard_carries_components_between_windows);
   g_test_add_func ("/app/window/gestures", test_gestures_move_and_connect);
   g_test_add_func ("/app/window/escape", test_escape_in_the_middle_of_a_move_puts_it_back);
   g_test_add_func ("/app/window/accessible", test_components_are_named_for_assistive_technology);
