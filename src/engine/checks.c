@@ -72,6 +72,22 @@ hl_check_entropy (HlChecker *checker)
                      checker->component->id, -produced / 1e3));
 }
 
+/* For what lies in a line: pressure may not rise from inlet to outlet. */
+void
+hl_check_pressure_falls (HlChecker *checker)
+{
+  const HlNodeResult *in = hl_check_port (checker, "inlet"), *out = hl_check_port (checker, "outlet");
+  if (in == NULL || out == NULL || !in->has_pressure || !out->has_pressure || out->p <= in->p * (1.0 + 1e-9))
+    return;
+  g_autofree char *p_in = hl_check_text (checker, HL_DIMENSION_PRESSURE, in->p);
+  g_autofree char *p_out = hl_check_text (checker, HL_DIMENSION_PRESSURE, out->p);
+  HlFinding *finding = hl_check_add (checker, HL_GRADE_ERROR, "pressure-rises", "outlet.p",
+    g_strdup_printf (_("Pressure would rise through %s, from %s to %s. Lower the pressure behind it, or raise the one before it."),
+                     checker->component->id, p_in, p_out));
+  hl_check_offer (checker, finding, "outlet.p");
+  hl_check_offer (checker, finding, "inlet.p");
+}
+
 /* --- flows ---------------------------------------------------------------------- */
 
 static void

@@ -28,4 +28,6 @@ HlFinding          *hl_check_add   (HlChecker *checker, HlGrade grade, const cha
 void                hl_check_offer (HlChecker *checker, HlFinding *finding, const char *key);
 /* Entropy may not vanish in a component that exchanges no heat with its surroundings. */
 void                hl_check_entropy (HlChecker *checker);
+/* Pressure may not rise from the port "inlet" to "outlet". */
+void                hl_check_pressure_falls (HlChecker *checker);
 G_END_DECLS

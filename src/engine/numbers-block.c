@@ -33,7 +33,7 @@ struct _HlBlockWork {
 };
 
 HlBlockWork *
-hl_block_work_new (HlSystem *system, G_GNUC_UNUSED int largest)
+hl_block_work_new (HlSystem *system)
 {
   HlBlockWork *w = g_new0 (HlBlockWork, 1);
   w->system = system;

@@ -6,7 +6,7 @@ G_BEGIN_DECLS
 
 typedef struct _HlBlockWork HlBlockWork;
 
-HlBlockWork *hl_block_work_new  (HlSystem *system, int largest);
+HlBlockWork *hl_block_work_new  (HlSystem *system);
 void         hl_block_work_free (HlBlockWork *work);
 /* Solves a block, from where the unknowns stand, else from other starts.  On failure fills in worst and null_vars. */
 HlFailed     hl_block_solve     (HlBlockWork *work, const int *equations, const int *vars, int n, HlNumbers *numbers);

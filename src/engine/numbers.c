@@ -277,7 +277,7 @@ hl_numbers_solve (HlSystem *system, const HlStructure *structure, HlNumbers *num
   numbers->is_known = g_new0 (gboolean, system->vars->len + 1);
   for (guint v = 0; v < system->vars->len; v++)
     numbers->is_known[v] = system->fixed_by[v] >= 0;
-  HlBlockWork *work = hl_block_work_new (system, structure->largest);
+  HlBlockWork *work = hl_block_work_new (system);
   int k;
   for (k = 0; k < structure->n_blocks; k++)
     {

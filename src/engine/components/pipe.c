@@ -1,4 +1,4 @@
-/* Pipe with pressure and heat loss, and throttle valve.
+/* Pipe with pressure and heat loss.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "engine/components/components.h"
 #include "plant/i18n.h"
@@ -29,42 +29,9 @@ emit_pipe (HlEmit *emit)
 }
 
 static void
-emit_valve (HlEmit *emit)
-{
-  const int in_node = hl_emit_port (emit, "inlet"), out_node = hl_emit_port (emit, "outlet");
-  const HlNode *in = hl_model_node (emit->model, in_node), *out = hl_model_node (emit->model, out_node);
-  int loss = hl_emit_own (emit, "pressure_loss", HL_VAR_RATIO);
-  hl_system_merge (emit->system, in->m, out->m);
-  hl_system_merge (emit->system, in->h, out->h);
-  hl_emit_done (emit, hl_add_pressure_loss (emit->system, in->p, out->p, loss), NULL, -1);
-}
-
-static void
-check (HlChecker *checker)
-{
-  const HlNodeResult *in = hl_check_port (checker, "inlet"), *out = hl_check_port (checker, "outlet");
-  if (in == NULL || out == NULL || !in->has_pressure || !out->has_pressure || out->p <= in->p * (1.0 + 1e-9))
-    return;
-  g_autofree char *p_in = hl_check_text (checker, HL_DIMENSION_PRESSURE, in->p);
-  g_autofree char *p_out = hl_check_text (checker, HL_DIMENSION_PRESSURE, out->p);
-  HlFinding *finding = hl_check_add (checker, HL_GRADE_ERROR, "pressure-rises", "outlet.p",
-    g_strdup_printf (_("Pressure would rise through %s, from %s to %s. Lower the pressure behind it, or raise the one before it."),
-                     checker->component->id, p_in, p_out));
-  hl_check_offer (checker, finding, "outlet.p");
-  hl_check_offer (checker, finding, "inlet.p");
-}
-
-static void
-pipe_processes (HlProcessSink *sink)
+processes (HlProcessSink *sink)
 {
   hl_process_add (sink, HL_PROCESS_LINE, hl_process_node (sink, "inlet"), hl_process_node (sink, "outlet"));
 }
 
-static void
-valve_processes (HlProcessSink *sink)
-{
-  hl_process_add (sink, HL_PROCESS_THROTTLING, hl_process_node (sink, "inlet"), hl_process_node (sink, "outlet"));
-}
-
-const HlComponentModel hl_pipe_model = { "pipe", emit_pipe, check, pipe_processes };
-const HlComponentModel hl_valve_model = { "valve", emit_valve, check, valve_processes };
+const HlComponentModel hl_pipe_model = { "pipe", emit_pipe, hl_check_pressure_falls, processes };

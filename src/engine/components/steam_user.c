@@ -1,4 +1,4 @@
-/* Process steam user, make-up water and boundary: where the plant meets the rest of the world.
+/* Process steam user: takes heat, returns part of its condensate.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "engine/components/components.h"
 #include "plant/i18n.h"
@@ -29,7 +29,7 @@ emit_steam_user (HlEmit *emit)
 }
 
 static void
-check_steam_user (HlChecker *checker)
+check (HlChecker *checker)
 {
   const HlNodeResult *steam = hl_check_port (checker, "steam"), *out = hl_check_port (checker, "condensate");
   if (steam == NULL || out == NULL)
@@ -51,25 +51,9 @@ check_steam_user (HlChecker *checker)
 }
 
 static void
-steam_user_processes (HlProcessSink *sink)
+processes (HlProcessSink *sink)
 {
   hl_process_add (sink, HL_PROCESS_COOLING, hl_process_node (sink, "steam"), hl_process_node (sink, "condensate"));
 }
 
-static void
-emit_make_up (HlEmit *emit)
-{
-  hl_emit_guess (emit, hl_emit_port (emit, "outlet"), 63e3);
-}
-
-enum { SOURCE, SINK };
-
-static void
-emit_boundary (HlEmit *emit)
-{
-  hl_emit_port (emit, hl_component_option (emit->component, "direction") == SOURCE ? "outlet" : "inlet");
-}
-
-const HlComponentModel hl_steam_user_model = { "steam_user", emit_steam_user, check_steam_user, steam_user_processes };
-const HlComponentModel hl_make_up_model = { "make_up", emit_make_up, NULL, NULL };
-const HlComponentModel hl_boundary_model = { "boundary", emit_boundary, NULL, NULL };
+const HlComponentModel hl_steam_user_model = { "steam_user", emit_steam_user, check, processes };

@@ -1,0 +1,11 @@
+/* Heat input: feed to live steam, whatever the heat comes from.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "engine/components/heat-source.h"
+
+static void
+emit_heat_input (HlEmit *emit)
+{
+  hl_heat_source_emit (emit);
+}
+
+const HlComponentModel hl_heat_input_model = { "heat_input", emit_heat_input, hl_heat_source_check, hl_heat_source_processes };
