@@ -116,6 +116,24 @@ create_menu_cb (GtkMenuButton *button, gpointer data)
   gtk_menu_button_set_popover (button, popover);
 }
 
+/* All pills are as wide as the longest word, in whatever language and font: measured once the style sheet applies. */
+static void
+pill_rooted_cb (GtkWidget *pill)
+{
+  int widest = 0;
+
+  if (gtk_widget_get_root (pill) == NULL)
+    return;
+  for (HlOrigin origin = HL_ORIGIN_FOUND; origin <= HL_ORIGIN_TIED; origin++)
+    {
+      g_autoptr (PangoLayout) layout = gtk_widget_create_pango_layout (pill, hl_origin_name (origin));
+      int width;
+      pango_layout_get_pixel_size (layout, &width, NULL);
+      widest = MAX (widest, width);
+    }
+  gtk_widget_set_size_request (pill, widest, -1);
+}
+
 void
 hl_quantity_row_add_origin (HlQuantityRow *self)
 {
@@ -130,6 +148,7 @@ hl_quantity_row_add_origin (HlQuantityRow *self)
 
   self->pill = gtk_label_new ("");
   gtk_widget_add_css_class (self->pill, "pill");
+  g_signal_connect (self->pill, "notify::root", G_CALLBACK (pill_rooted_cb), NULL);
   self->origin_button = gtk_menu_button_new ();
   gtk_menu_button_set_child (GTK_MENU_BUTTON (self->origin_button), self->pill);
   gtk_menu_button_set_has_frame (GTK_MENU_BUTTON (self->origin_button), FALSE);
