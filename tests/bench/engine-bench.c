@@ -3,7 +3,8 @@
 #include "plants.h"
 #include "engine/solution-private.h"
 
-#define ROUNDS 1000
+#define ROUNDS  100       /* of which the mean is taken */
+#define BATCHES 10        /* of which the best counts: the machine may have other work */
 
 typedef struct { double build, structure, numbers, results, whole; } Times;
 
@@ -19,16 +20,31 @@ add (Times *sum, const HlSolution *solution)
   sum->whole += hl_solution_seconds (solution) * 1e6 / ROUNDS;
 }
 
+static void
+keep_best (Times *best, const Times *other)
+{
+  best->build = MIN (best->build, other->build);
+  best->structure = MIN (best->structure, other->structure);
+  best->numbers = MIN (best->numbers, other->numbers);
+  best->results = MIN (best->results, other->results);
+  best->whole = MIN (best->whole, other->whole);
+}
+
 static Times
 time_solves (HlPlant *plant, const HlSolution *start)
 {
-  Times sum = { 0.0 };
-  for (int round = 0; round < ROUNDS; round++)
+  Times best = { 1e9, 1e9, 1e9, 1e9, 1e9 };
+  for (int batch = 0; batch < BATCHES; batch++)
     {
-      g_autoptr (HlSolution) solution = hl_solve (plant, start);
-      add (&sum, solution);
+      Times sum = { 0.0 };
+      for (int round = 0; round < ROUNDS; round++)
+        {
+          g_autoptr (HlSolution) solution = hl_solve (plant, start);
+          add (&sum, solution);
+        }
+      keep_best (&best, &sum);
     }
-  return sum;
+  return best;
 }
 
 /* One value typed: new plant, settled, solved from the last solution, the old one dropped. */
@@ -37,10 +53,16 @@ time_edits (HlPlant *plant, const HlAddress *address, double value)
 {
   HlPlant *present = hl_plant_ref (plant);
   HlSolution *last = hl_solve (present, NULL);
+  double best = 1e9;
   gint64 begin = g_get_monotonic_time ();
-  for (int round = 0; round < ROUNDS; round++)
+  for (int round = 0; round < ROUNDS * BATCHES; round++)
     {
       GArray *yielded;
+      if (round > 0 && round % ROUNDS == 0)
+        {
+          best = MIN (best, (double) (g_get_monotonic_time () - begin) / ROUNDS);
+          begin = g_get_monotonic_time ();
+        }
       HlValue next = { .origin = HL_ORIGIN_GIVEN, .value = value * (1.0 + 1e-3 * (round % 20)) };
       g_autoptr (HlPlant) edited = hl_plant_with_value (present, address, &next, NULL);
       HlPlant *settled = hl_settle (edited, address, &yielded);
@@ -51,7 +73,6 @@ time_edits (HlPlant *plant, const HlAddress *address, double value)
       last = solution;
       present = settled;
     }
-  double microseconds = (double) (g_get_monotonic_time () - begin) / ROUNDS;
   if (!hl_solution_is_solved (last))
     {
       test_print (last);
@@ -59,7 +80,7 @@ time_edits (HlPlant *plant, const HlAddress *address, double value)
     }
   hl_solution_unref (last);
   hl_plant_unref (present);
-  return microseconds;
+  return best;
 }
 
 static void
@@ -112,7 +133,7 @@ main (int argc, char **argv)
       g_printerr ("usage: engine-bench FOLDER-OF-THE-DEMO-PLANTS\n");
       return 2;
     }
-  g_print ("microseconds, mean of %d\n%-22s %8s %7s %8s | %6s %6s %6s %6s %6s | %6s %6s %6s | %6s\n", ROUNDS, "plant", "unknowns", "blocks", "largest",
+  g_print ("microseconds, best of %d means of %d\n%-22s %8s %7s %8s | %6s %6s %6s %6s %6s | %6s %6s %6s | %6s\n", BATCHES, ROUNDS, "plant", "unknowns", "blocks", "largest",
            "build", "struct", "cold", "result", "whole", "warm", "result", "whole", "edit");
   for (guint k = 0; k < G_N_ELEMENTS (demos); k++)
     {
