@@ -1,9 +1,7 @@
-/* Pointer and wheel on the canvas: select, move, rubber band, lines, pan, zoom, drops from the shelf, context menu.
+/* Pointer and wheel on the canvas: select, move, rubber band, lines, pan, zoom.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-canvas-private.h"
 #include "app/hl-edit.h"
-#include "app/hl-shelf.h"
-#include "app/hl-trace.h"
 #include "plant/i18n.h"
 
 #define THRESHOLD 8.0      /* a press becomes a drag after this [view px] */
@@ -25,8 +23,8 @@ is_in_box (const HlBox *box, double x, double y)
   return x >= box->x && x <= box->x + box->width && y >= box->y && y <= box->y + box->height;
 }
 
-static int
-label_at (HlCanvas *self, double vx, double vy)
+int
+hl_canvas_label_at (HlCanvas *self, double vx, double vy)
 {
   double x, y;
   hl_canvas_to_canvas (self, vx, vy, &x, &y);
@@ -100,7 +98,7 @@ drag_begin_cb (GtkGestureDrag *drag, double vx, double vy, HlCanvas *self)
       gtk_widget_grab_focus (GTK_WIDGET (self));
       hl_canvas_begin_line (self, &port);
     }
-  else if ((stream = label_at (self, vx, vy)) >= 0)
+  else if ((stream = hl_canvas_label_at (self, vx, vy)) >= 0)
     press_stream (self, gesture, stream, TRUE);
   else if ((id = hl_canvas_component_at (self, vx, vy)) != NULL)
     press_component (self, gesture, id);
@@ -378,7 +376,7 @@ motion_cb (GtkEventControllerMotion *motion, double vx, double vy, HlCanvas *sel
   else if (hot.port != NULL || shaft != NULL)
     set_cursor (self, "crosshair");
   else
-    set_cursor (self, label_at (self, vx, vy) >= 0 || id != NULL || hl_canvas_stream_at (self, vx, vy) >= 0 ? "pointer" : NULL);
+    set_cursor (self, hl_canvas_label_at (self, vx, vy) >= 0 || id != NULL || hl_canvas_stream_at (self, vx, vy) >= 0 ? "pointer" : NULL);
 }
 
 static void
@@ -425,168 +423,6 @@ key_released_cb (GtkEventControllerKey *keys, guint key, guint code, GdkModifier
   set_cursor (self, NULL);
 }
 
-/* Drops from the shelf */
-
-static const HlKind *
-dropped_kind (const GValue *value)
-{
-  const char *text = value != NULL && G_VALUE_HOLDS_STRING (value) ? g_value_get_string (value) : NULL;
-  if (text == NULL || !g_str_has_prefix (text, HL_SHELF_DRAG_PREFIX))
-    return NULL;
-  return hl_kind_lookup (text + strlen (HL_SHELF_DRAG_PREFIX));
-}
-
-/* The segment of a line that is nearest to a point: its direction, and the point drawn onto it. */
-int
-hl_canvas_snap_to_line (const HlStreamPlace *place, int *gx, int *gy)
-{
-  double x = *gx * HL_UNIT, y = *gy * HL_UNIT, nearest = G_MAXDOUBLE;
-  int turn = 0;
-  for (guint n = 0; n + 1 < place->n_points; n++)
-    {
-      HlPoint a = place->points[n], b = place->points[n + 1];
-      double px = CLAMP (x, MIN (a.x, b.x), MAX (a.x, b.x)), py = CLAMP (y, MIN (a.y, b.y), MAX (a.y, b.y));
-      if (hypot (px - x, py - y) >= nearest)
-        continue;
-      nearest = hypot (px - x, py - y);
-      *gx = (int) floor (px / HL_UNIT + 0.5);
-      *gy = (int) floor (py / HL_UNIT + 0.5);
-      turn = fabs (b.x - a.x) > fabs (b.y - a.y) ? (b.x > a.x ? 0 : 2) : (b.y > a.y ? 1 : 3);
-    }
-  return turn;
-}
-
-/* Where a component dragged from the shelf would stand, and in which line. */
-static void
-aim_drop (HlCanvas *self, const HlKind *kind, double vx, double vy)
-{
-  hl_canvas_to_grid (self, vx, vy, &self->drop_x, &self->drop_y);
-  self->drop_stream = hl_edit_can_insert (kind) ? hl_canvas_stream_at (self, vx, vy) : -1;
-  self->drop_turn = 0;
-  if (self->drop_stream >= 0)
-    self->drop_turn = hl_canvas_snap_to_line (hl_layout_stream (self->layout, (guint) self->drop_stream), &self->drop_x, &self->drop_y);
-}
-
-static GdkDragAction
-drop_motion_cb (GtkDropTarget *target, double vx, double vy, HlCanvas *self)
-{
-  self->drop_kind = dropped_kind (gtk_drop_target_get_value (target));
-  if (self->drop_kind == NULL)
-    return gtk_drop_target_get_value (target) == NULL ? GDK_ACTION_COPY : 0;
-  aim_drop (self, self->drop_kind, vx, vy);
-  hl_trace ("over %s %d %d", self->drop_kind->id, self->drop_x, self->drop_y);
-  gtk_widget_queue_draw (GTK_WIDGET (self));
-  return GDK_ACTION_COPY;
-}
-
-static void
-drop_leave_cb (GtkDropTarget *target, HlCanvas *self)
-{
-  self->drop_kind = NULL;
-  self->drop_stream = -1;
-  gtk_widget_queue_draw (GTK_WIDGET (self));
-}
-
-static gboolean
-drop_cb (GtkDropTarget *target, const GValue *value, double vx, double vy, HlCanvas *self)
-{
-  const HlKind *kind = dropped_kind (value);
-  int gx, gy, stream;
-  if (kind == NULL)
-    return FALSE;
-  aim_drop (self, kind, vx, vy);
-  stream = self->drop_stream;
-  gx = self->drop_x;
-  gy = self->drop_y;
-  drop_leave_cb (target, self);
-  self->is_fitted = FALSE;     /* the view stays where the hand is */
-  gtk_widget_grab_focus (GTK_WIDGET (self));
-  if (stream >= 0)
-    gtk_widget_activate_action (GTK_WIDGET (self), "win.insert-component", "(ssiii)", kind->id,
-                                hl_plant_stream (hl_canvas_plant (self), (guint) stream)->id, gx, gy, self->drop_turn);
-  else
-    gtk_widget_activate_action (GTK_WIDGET (self), "win.add-component-at", "(sii)", kind->id, gx, gy);
-  return TRUE;
-}
-
-/* Context menu */
-
-static GMenuModel *
-context_menu (HlCanvas *self)
-{
-  GMenu *menu = g_menu_new (), *section = g_menu_new ();
-  guint n;
-  const char *const *ids = hl_session_selection (self->session, &n);
-
-  if (n == 1 && hl_plant_find_component (hl_canvas_plant (self), ids[0]) != NULL)
-    {
-      g_menu_append (section, _("Connect …"), "win.connect-menu");
-      g_menu_append (section, _("Take off its shaft"), "win.leave-shaft");
-    }
-  if (n > 1)
-    g_menu_append (section, _("Put on one shaft"), "win.join-selection");
-  if (n == 1 && hl_plant_find_stream (hl_canvas_plant (self), ids[0]) != NULL)
-    g_menu_append (section, _("Let the label find its place"), "win.reset-label");
-  g_menu_append_section (menu, NULL, G_MENU_MODEL (section));
-  g_object_unref (section);
-  section = g_menu_new ();
-  if (n > 0)
-    {
-      g_menu_append (section, _("Turn"), "win.turn");
-      g_menu_append (section, _("Mirror"), "win.mirror");
-      g_menu_append (section, _("Cut"), "win.cut");
-      g_menu_append (section, _("Copy"), "win.copy");
-      g_menu_append (section, _("Duplicate"), "win.duplicate");
-      g_menu_append (section, _("Delete"), "win.delete");
-    }
-  g_menu_append_section (menu, NULL, G_MENU_MODEL (section));
-  g_object_unref (section);
-  section = g_menu_new ();
-  g_menu_append (section, _("Paste"), "win.paste");
-  g_menu_append (section, _("Select everything"), "win.select-all");
-  g_menu_append (section, _("Show the whole plant"), "win.zoom-fit");
-  g_menu_append_section (menu, NULL, G_MENU_MODEL (section));
-  g_object_unref (section);
-  return G_MENU_MODEL (menu);
-}
-
-static void
-show_context_menu (HlCanvas *self, double vx, double vy)
-{
-  g_autoptr (GMenuModel) menu = context_menu (self);
-  GtkWidget *popover = gtk_popover_menu_new_from_model (menu);
-  gtk_popover_set_has_arrow (GTK_POPOVER (popover), FALSE);
-  gtk_widget_set_halign (popover, GTK_ALIGN_START);
-  hl_canvas_set_popover (self, popover, vx, vy);
-}
-
-static void
-context_cb (GtkGestureClick *click, int n_press, double vx, double vy, HlCanvas *self)
-{
-  const char *id = hl_canvas_component_at (self, vx, vy);
-  int stream = label_at (self, vx, vy);
-  if (stream < 0 && id == NULL)
-    stream = hl_canvas_stream_at (self, vx, vy);
-  if (stream >= 0)
-    id = hl_plant_stream (hl_canvas_plant (self), (guint) stream)->id;
-  if (!hl_session_is_selected (self->session, id))
-    hl_session_select (self->session, id, FALSE);
-  show_context_menu (self, vx, vy);
-}
-
-static gboolean
-menu_key_cb (GtkWidget *widget, GVariant *arguments, gpointer data)
-{
-  HlCanvas *self = HL_CANVAS (widget);
-  guint n;
-  const char *const *ids = hl_session_selection (self->session, &n);
-  double vx = gtk_widget_get_width (widget) / 2.0, vy = gtk_widget_get_height (widget) / 2.0;
-  if (n > 0)
-    hl_canvas_locate (self, ids[0], NULL, &vx, &vy);
-  show_context_menu (self, vx, vy);
-  return TRUE;
-}
-
 /* Set-up */
 
 static GtkGesture *
@@ -602,7 +438,6 @@ add_drags (HlCanvas *self)
 {
   GtkGesture *drag = add_gesture (self, gtk_gesture_drag_new (), GDK_BUTTON_PRIMARY);
   GtkGesture *pan = add_gesture (self, gtk_gesture_drag_new (), GDK_BUTTON_MIDDLE);
-  GtkGesture *click = add_gesture (self, gtk_gesture_click_new (), GDK_BUTTON_SECONDARY);
   GtkGesture *pinch = gtk_gesture_zoom_new ();
   gtk_event_controller_set_name (GTK_EVENT_CONTROLLER (drag), "primary-drag");    /* tests find it by this */
   g_signal_connect (drag, "drag-begin", G_CALLBACK (drag_begin_cb), self);
@@ -612,33 +447,9 @@ add_drags (HlCanvas *self)
   g_signal_connect (pan, "drag-begin", G_CALLBACK (pan_begin_cb), self);
   g_signal_connect (pan, "drag-update", G_CALLBACK (pan_update_cb), self);
   g_signal_connect (pan, "drag-end", G_CALLBACK (pan_end_cb), self);
-  g_signal_connect (click, "pressed", G_CALLBACK (context_cb), self);
   gtk_widget_add_controller (GTK_WIDGET (self), GTK_EVENT_CONTROLLER (pinch));
   g_signal_connect (pinch, "begin", G_CALLBACK (pinch_begin_cb), self);
   g_signal_connect (pinch, "scale-changed", G_CALLBACK (pinch_cb), self);
-}
-
-static void
-add_drop_target (HlCanvas *self)
-{
-  GtkDropTarget *target = gtk_drop_target_new (G_TYPE_STRING, GDK_ACTION_COPY);
-  gtk_drop_target_set_preload (target, TRUE);
-  g_signal_connect (target, "motion", G_CALLBACK (drop_motion_cb), self);
-  g_signal_connect (target, "leave", G_CALLBACK (drop_leave_cb), self);
-  g_signal_connect (target, "drop", G_CALLBACK (drop_cb), self);
-  gtk_widget_add_controller (GTK_WIDGET (self), GTK_EVENT_CONTROLLER (target));
-}
-
-static void
-add_menu_keys (HlCanvas *self)
-{
-  static const struct { guint key; GdkModifierType modifiers; } keys[] = { { GDK_KEY_Menu, 0 }, { GDK_KEY_F10, GDK_SHIFT_MASK } };
-  GtkEventController *controller = gtk_shortcut_controller_new ();
-  for (guint n = 0; n < G_N_ELEMENTS (keys); n++)
-    gtk_shortcut_controller_add_shortcut (GTK_SHORTCUT_CONTROLLER (controller),
-                                          gtk_shortcut_new (gtk_keyval_trigger_new (keys[n].key, keys[n].modifiers),
-                                                            gtk_callback_action_new (menu_key_cb, NULL, NULL)));
-  gtk_widget_add_controller (GTK_WIDGET (self), controller);
 }
 
 void
@@ -648,8 +459,8 @@ hl_canvas_add_gestures (HlCanvas *self)
   GtkEventController *motion = gtk_event_controller_motion_new (), *keys = gtk_event_controller_key_new ();
 
   add_drags (self);
-  add_drop_target (self);
-  add_menu_keys (self);
+  hl_canvas_add_drop_target (self);
+  hl_canvas_add_menu (self);
   g_signal_connect (scroll, "scroll", G_CALLBACK (scroll_cb), self);
   gtk_widget_add_controller (GTK_WIDGET (self), scroll);
   g_signal_connect (motion, "motion", G_CALLBACK (motion_cb), self);

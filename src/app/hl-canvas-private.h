@@ -87,6 +87,11 @@ void     hl_canvas_draw        (HlCanvas *self, GtkSnapshot *snapshot);
 
 /* hl-canvas-gestures.c */
 void     hl_canvas_add_gestures (HlCanvas *self);
+int      hl_canvas_label_at     (HlCanvas *self, double vx, double vy);                       /* index of the stream; -1: none */
+
+/* hl-canvas-drop.c, hl-canvas-menu.c */
+void     hl_canvas_add_drop_target (HlCanvas *self);
+void     hl_canvas_add_menu     (HlCanvas *self);
 
 int      hl_canvas_stream_at   (HlCanvas *self, double vx, double vy);                        /* line or label; -1: none */
 int      hl_canvas_snap_to_line (const HlStreamPlace *place, int *gx, int *gy);               /* onto its nearest segment; which way that runs: 0 right, 1 down ... */

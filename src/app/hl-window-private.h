@@ -32,6 +32,7 @@ struct _HlWindow {
 
 void hl_window_add_actions    (HlWindow *self);     /* hl-window-actions.c */
 void hl_window_update_actions (HlWindow *self);     /* what is enabled, from the state */
+void hl_window_add_view_actions (HlWindow *self);   /* hl-window-view.c */
 void hl_window_add_file_actions (HlWindow *self);   /* hl-window-file.c */
 void hl_window_fill_menus     (HlWindow *self);     /* hl-window-menus.c */
 void hl_window_place_diagram  (HlWindow *self, gboolean is_beside);

@@ -347,6 +347,7 @@ hl_window_constructed (GObject *object)
     self->session = hl_session_new ();
   fill_panes (self);
   hl_window_add_actions (self);
+  hl_window_add_view_actions (self);
   hl_window_add_file_actions (self);
   hl_window_fill_menus (self);
   g_signal_connect_object (self->session, "changed", G_CALLBACK (changed_cb), self, G_CONNECT_SWAPPED);

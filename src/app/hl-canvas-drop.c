@@ -1,0 +1,99 @@
+/* Components dragged from the shelf onto the canvas, or into a line.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "app/hl-canvas-private.h"
+#include "app/hl-edit.h"
+#include "app/hl-shelf.h"
+#include "app/hl-trace.h"
+
+static const HlKind *
+dropped_kind (const GValue *value)
+{
+  const char *text = value != NULL && G_VALUE_HOLDS_STRING (value) ? g_value_get_string (value) : NULL;
+  if (text == NULL || !g_str_has_prefix (text, HL_SHELF_DRAG_PREFIX))
+    return NULL;
+  return hl_kind_lookup (text + strlen (HL_SHELF_DRAG_PREFIX));
+}
+
+/* The segment of a line that is nearest to a point: its direction, and the point drawn onto it. */
+int
+hl_canvas_snap_to_line (const HlStreamPlace *place, int *gx, int *gy)
+{
+  double x = *gx * HL_UNIT, y = *gy * HL_UNIT, nearest = G_MAXDOUBLE;
+  int turn = 0;
+  for (guint n = 0; n + 1 < place->n_points; n++)
+    {
+      HlPoint a = place->points[n], b = place->points[n + 1];
+      double px = CLAMP (x, MIN (a.x, b.x), MAX (a.x, b.x)), py = CLAMP (y, MIN (a.y, b.y), MAX (a.y, b.y));
+      if (hypot (px - x, py - y) >= nearest)
+        continue;
+      nearest = hypot (px - x, py - y);
+      *gx = (int) floor (px / HL_UNIT + 0.5);
+      *gy = (int) floor (py / HL_UNIT + 0.5);
+      turn = fabs (b.x - a.x) > fabs (b.y - a.y) ? (b.x > a.x ? 0 : 2) : (b.y > a.y ? 1 : 3);
+    }
+  return turn;
+}
+
+/* Where a component dragged from the shelf would stand, and in which line. */
+static void
+aim_drop (HlCanvas *self, const HlKind *kind, double vx, double vy)
+{
+  hl_canvas_to_grid (self, vx, vy, &self->drop_x, &self->drop_y);
+  self->drop_stream = hl_edit_can_insert (kind) ? hl_canvas_stream_at (self, vx, vy) : -1;
+  self->drop_turn = 0;
+  if (self->drop_stream >= 0)
+    self->drop_turn = hl_canvas_snap_to_line (hl_layout_stream (self->layout, (guint) self->drop_stream), &self->drop_x, &self->drop_y);
+}
+
+static GdkDragAction
+drop_motion_cb (GtkDropTarget *target, double vx, double vy, HlCanvas *self)
+{
+  self->drop_kind = dropped_kind (gtk_drop_target_get_value (target));
+  if (self->drop_kind == NULL)
+    return gtk_drop_target_get_value (target) == NULL ? GDK_ACTION_COPY : 0;
+  aim_drop (self, self->drop_kind, vx, vy);
+  hl_trace ("over %s %d %d", self->drop_kind->id, self->drop_x, self->drop_y);
+  gtk_widget_queue_draw (GTK_WIDGET (self));
+  return GDK_ACTION_COPY;
+}
+
+static void
+drop_leave_cb (GtkDropTarget *target, HlCanvas *self)
+{
+  self->drop_kind = NULL;
+  self->drop_stream = -1;
+  gtk_widget_queue_draw (GTK_WIDGET (self));
+}
+
+static gboolean
+drop_cb (GtkDropTarget *target, const GValue *value, double vx, double vy, HlCanvas *self)
+{
+  const HlKind *kind = dropped_kind (value);
+  int gx, gy, stream;
+  if (kind == NULL)
+    return FALSE;
+  aim_drop (self, kind, vx, vy);
+  stream = self->drop_stream;
+  gx = self->drop_x;
+  gy = self->drop_y;
+  drop_leave_cb (target, self);
+  self->is_fitted = FALSE;     /* the view stays where the hand is */
+  gtk_widget_grab_focus (GTK_WIDGET (self));
+  if (stream >= 0)
+    gtk_widget_activate_action (GTK_WIDGET (self), "win.insert-component", "(ssiii)", kind->id,
+                                hl_plant_stream (hl_canvas_plant (self), (guint) stream)->id, gx, gy, self->drop_turn);
+  else
+    gtk_widget_activate_action (GTK_WIDGET (self), "win.add-component-at", "(sii)", kind->id, gx, gy);
+  return TRUE;
+}
+
+void
+hl_canvas_add_drop_target (HlCanvas *self)
+{
+  GtkDropTarget *target = gtk_drop_target_new (G_TYPE_STRING, GDK_ACTION_COPY);
+  gtk_drop_target_set_preload (target, TRUE);
+  g_signal_connect (target, "motion", G_CALLBACK (drop_motion_cb), self);
+  g_signal_connect (target, "leave", G_CALLBACK (drop_leave_cb), self);
+  g_signal_connect (target, "drop", G_CALLBACK (drop_cb), self);
+  gtk_widget_add_controller (GTK_WIDGET (self), GTK_EVENT_CONTROLLER (target));
+}
