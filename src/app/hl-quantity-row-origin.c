@@ -116,22 +116,27 @@ create_menu_cb (GtkMenuButton *button, gpointer data)
   gtk_menu_button_set_popover (button, popover);
 }
 
-/* All pills are as wide as the longest word, in whatever language and font: measured once the style sheet applies. */
-static void
-pill_rooted_cb (GtkWidget *pill)
+static int
+text_width (GtkWidget *widget, const char *text)
 {
-  int widest = 0;
+  g_autoptr (PangoLayout) layout = gtk_widget_create_pango_layout (widget, text);
+  int width;
 
-  if (gtk_widget_get_root (pill) == NULL)
-    return;
+  pango_layout_get_pixel_size (layout, &width, NULL);
+  return width;
+}
+
+/* All pills are as wide as the longest word, in whatever language and font: measured where the style sheet applies. */
+static void
+pill_mapped_cb (GtkWidget *pill)
+{
+  int widest = 0, whole;
+
+  gtk_widget_set_size_request (pill, -1, -1);
+  gtk_widget_measure (pill, GTK_ORIENTATION_HORIZONTAL, -1, NULL, &whole, NULL, NULL);
   for (HlOrigin origin = HL_ORIGIN_FOUND; origin <= HL_ORIGIN_TIED; origin++)
-    {
-      g_autoptr (PangoLayout) layout = gtk_widget_create_pango_layout (pill, hl_origin_name (origin));
-      int width;
-      pango_layout_get_pixel_size (layout, &width, NULL);
-      widest = MAX (widest, width);
-    }
-  gtk_widget_set_size_request (pill, widest, -1);
+    widest = MAX (widest, text_width (pill, hl_origin_name (origin)));
+  gtk_widget_set_size_request (pill, widest + whole - text_width (pill, gtk_label_get_text (GTK_LABEL (pill))), -1);
 }
 
 void
@@ -148,7 +153,7 @@ hl_quantity_row_add_origin (HlQuantityRow *self)
 
   self->pill = gtk_label_new ("");
   gtk_widget_add_css_class (self->pill, "pill");
-  g_signal_connect (self->pill, "notify::root", G_CALLBACK (pill_rooted_cb), NULL);
+  g_signal_connect (self->pill, "map", G_CALLBACK (pill_mapped_cb), NULL);
   self->origin_button = gtk_menu_button_new ();
   gtk_menu_button_set_child (GTK_MENU_BUTTON (self->origin_button), self->pill);
   gtk_menu_button_set_has_frame (GTK_MENU_BUTTON (self->origin_button), FALSE);
