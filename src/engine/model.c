@@ -475,17 +475,19 @@ has_spec (const HlSystem *system, int var)
   return FALSE;
 }
 
-/* Temperatures that somebody asked for.  One given for steam on its way to a condenser, where no pressure is given, is that of
- * condensing: the steam may be wet, and then the temperature sets the pressure and not the enthalpy. */
+/* Temperatures that somebody asked for.  One given where no pressure is: wet steam takes its pressure from it, dry steam and
+ * water their enthalpy.  Steam on its way to a condenser is taken for wet at first, all else for dry. */
 static void
-add_temperatures (HlModel *model)
+add_temperatures (HlModel *model, const gboolean *other, guint n_other)
 {
   for (guint k = 0; k < model->nodes->len; k++)
     {
-      const HlNode *node = hl_model_node (model, (int) k);
+      HlNode *node = hl_model_node (model, (int) k);
       HlEquation *e;
       if (node->T < 0)
         continue;
+      node->T_is_free = node->T_drives && node->subcooling < 0 && !has_spec (model->system, node->p);
+      node->T_is_saturation = node->T_is_free && node->is_exhaust != (k < n_other && other[k]);
       if (node->subcooling >= 0)
         {
           e = hl_add_subcooled_temperature (model->system, node->fluid, node->p, node->subcooling, node->T);
@@ -493,7 +495,7 @@ add_temperatures (HlModel *model)
         }
       else if (!node->T_drives)
         e = hl_add_temperature (model->system, node->fluid, node->p, node->h, node->T);
-      else if (node->is_exhaust && !has_spec (model->system, node->p))
+      else if (node->T_is_saturation)
         e = hl_add_saturation (model->system, node->fluid, node->p, node->T);
       else
         e = hl_add_enthalpy_at_temperature (model->system, node->fluid, node->p, node->T, node->h);
@@ -559,7 +561,7 @@ add_shafts (HlModel *model)
 }
 
 HlModel *
-hl_model_new (HlPlant *plant)
+hl_model_new_other (HlPlant *plant, const gboolean *other, guint n_other)
 {
   HlModel *model = g_new0 (HlModel, 1);
   model->plant = hl_plant_ref (plant);
@@ -587,7 +589,13 @@ hl_model_new (HlPlant *plant)
   hl_emit_plant (model);
   model->first_own[n + 1] = (int) model->own->len;
   add_values (model);
-  add_temperatures (model);
+  add_temperatures (model, other, n_other);
   hl_system_close (model->system);
   return model;
+}
+
+HlModel *
+hl_model_new (HlPlant *plant)
+{
+  return hl_model_new_other (plant, NULL, 0);
 }

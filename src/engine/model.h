@@ -15,6 +15,8 @@ typedef struct {
   gboolean       T_drives;        /* the temperature sets the enthalpy; else it is computed from it */
   int            subcooling;      /* liquid this far below saturation: its temperature follows from that; -1: any state */
   gboolean       is_exhaust;      /* steam on its way to be condensed: may be wet */
+  gboolean       T_is_free;       /* a temperature drives, and no pressure is put in: which of the two it sets, depends */
+  gboolean       T_is_saturation; /* it sets the pressure, as for wet steam; else the enthalpy */
 } HlNode;
 
 typedef struct { const char *key; int node; gboolean is_out; } HlPortNode;
@@ -48,6 +50,8 @@ typedef struct _HlModel {
 } HlModel;
 
 HlModel *hl_model_new  (HlPlant *plant);
+/* @other: [n nodes] where a free temperature is to set the other of pressure and enthalpy than the first guess says; or NULL. */
+HlModel *hl_model_new_other (HlPlant *plant, const gboolean *other, guint n_other);
 void     hl_model_free (HlModel *model);
 G_DEFINE_AUTOPTR_CLEANUP_FUNC (HlModel, hl_model_free)
 

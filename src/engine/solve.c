@@ -64,22 +64,19 @@ fill_effort (HlSolution *solution)
   solution->effort.n_iterations = (guint) solution->numbers.n_iterations;
 }
 
-HlSolution *
-hl_solve (HlPlant *plant, const HlSolution *start)
+/* Plant to unknowns, and numbers for them. */
+static void
+try_solve (HlSolution *solution, const HlSolution *start, const gboolean *other, guint n_other)
 {
-  g_return_val_if_fail (plant != NULL, NULL);
-  HlSolution *solution = g_new0 (HlSolution, 1);
-  gint64 begin = g_get_monotonic_time (), phase = begin;
-  g_atomic_ref_count_init (&solution->ref_count);
-  solution->plant = hl_plant_ref (plant);
-  hl_findings_init (&solution->findings);
-  solution->model = hl_model_new (plant);
-  solution->effort.seconds_build = seconds_since (phase);
+  gint64 phase = g_get_monotonic_time ();
+  solution->model = hl_model_new_other (solution->plant, other, n_other);
+  solution->effort.seconds_build += seconds_since (phase);
 
   phase = g_get_monotonic_time ();
   solution->structure = hl_structure_new (solution->model->system);
+  hl_findings_init (&solution->findings);
   gboolean may_try = hl_diagnose_structure (solution->model, solution->structure, &solution->findings);
-  solution->effort.seconds_structure = seconds_since (phase);
+  solution->effort.seconds_structure += seconds_since (phase);
 
   phase = g_get_monotonic_time ();
   start_from (solution->model->system, start);
@@ -88,9 +85,85 @@ hl_solve (HlPlant *plant, const HlSolution *start)
   else
     hl_numbers_skip (solution->model->system, &solution->numbers);
   solution->is_complete = may_try && solution->numbers.failed == HL_FAILED_NOT && solution->structure->n_missing == 0;
-  solution->effort.seconds_numbers = seconds_since (phase);
+  solution->effort.seconds_numbers += seconds_since (phase);
+}
 
-  phase = g_get_monotonic_time ();
+static void
+forget_try (HlSolution *solution)
+{
+  g_clear_pointer (&solution->model, hl_model_free);
+  g_clear_pointer (&solution->structure, hl_structure_free);
+  g_clear_pointer (&solution->numbers.is_known, g_free);
+  hl_findings_clear (&solution->findings);
+}
+
+typedef enum { FORMS_HOLD, FORMS_MAY_BE_WRONG, FORMS_ARE_WRONG } Forms;
+
+static gboolean
+leaves_turbine (const HlModel *model, const HlNode *node)
+{
+  return node->component >= 0 && hl_plant_component (model->plant, (guint) node->component)->kind->shaft == HL_SHAFT_DRIVES
+         && !g_str_equal (node->port, "inlet");
+}
+
+/* Was a temperature which set a pressure that of wet steam?  Marks where not: that answer is none.  After a failure marks
+ * where steam from a turbine was taken for dry: it may have been wet. */
+static Forms
+look_at_forms (const HlSolution *solution, gboolean *other)
+{
+  const HlModel *model = solution->model;
+  const HlSystem *system = model->system;
+  gboolean failed = solution->numbers.failed != HL_FAILED_NOT;
+  Forms forms = FORMS_HOLD;
+  for (guint k = 0; k < model->nodes->len; k++)
+    {
+      const HlNode *node = hl_model_node (model, (int) k);
+      HlSaturation sat;
+      other[k] = FALSE;
+      if (!node->T_is_free)
+        continue;
+      if (!node->T_is_saturation)
+        {
+          other[k] = failed && leaves_turbine (model, node);
+          forms = MAX (forms, other[k] ? FORMS_MAY_BE_WRONG : FORMS_HOLD);
+        }
+      else if (solution->numbers.is_known[system->root[node->h]] && solution->numbers.is_known[system->root[node->p]]
+               && hl_fluid_saturation_p (node->fluid, hl_system_value (system, node->p), &sat) == HL_OK)
+        {
+          double h = hl_system_value (system, node->h), slack = 1e-7 * sat.h_vapour;
+          other[k] = h > sat.h_vapour + slack || h < sat.h_liquid - slack;
+          forms = MAX (forms, other[k] ? FORMS_ARE_WRONG : FORMS_HOLD);
+        }
+    }
+  return forms;
+}
+
+/* Tries the other form where a temperature may have been taken for the wrong one. */
+static void
+reconsider (HlSolution *solution, const HlSolution *start)
+{
+  guint n = solution->model->nodes->len;
+  g_autofree gboolean *other = g_new0 (gboolean, n + 1), *again = g_new0 (gboolean, n + 1);
+  Forms forms = look_at_forms (solution, other);
+  if (forms == FORMS_HOLD)
+    return;
+  HlSolution second = *solution;
+  try_solve (&second, start, other, n);
+  gboolean is_good = second.is_complete && look_at_forms (&second, again) == FORMS_HOLD;
+  if (is_good || forms == FORMS_ARE_WRONG)
+    {
+      HlSolution keep = *solution;
+      *solution = second;
+      second = keep;
+    }
+  forget_try (&second);
+}
+
+/* What follows from the numbers, and whether it can be. */
+static void
+finish (HlSolution *solution)
+{
+  gint64 phase = g_get_monotonic_time ();
   hl_results_states (solution);
   hl_results_plant (solution);
   hl_results_processes (solution);
@@ -105,6 +178,20 @@ hl_solve (HlPlant *plant, const HlSolution *start)
   hl_findings_sort (&solution->findings);
   fill_effort (solution);
   solution->effort.seconds_results = seconds_since (phase);
+}
+
+HlSolution *
+hl_solve (HlPlant *plant, const HlSolution *start)
+{
+  g_return_val_if_fail (plant != NULL, NULL);
+  HlSolution *solution = g_new0 (HlSolution, 1);
+  gint64 begin = g_get_monotonic_time ();
+  g_atomic_ref_count_init (&solution->ref_count);
+  solution->plant = hl_plant_ref (plant);
+  try_solve (solution, start, NULL, 0);
+  if (solution->structure->n_over == 0)
+    reconsider (solution, start);
+  finish (solution);
   solution->seconds = seconds_since (begin);
   return solution;
 }

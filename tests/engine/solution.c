@@ -221,6 +221,28 @@ test_exhaust_by_temperature (void)
   test_assert_near (test_value (t, "C1.steam.p"), sat.p, 1e-9);
 }
 
+#define BACK_PRESSURE "heat_input Q1 pressure_loss=0 steam.p=60e5 steam.T=750 steam.m=10\n" \
+  "turbine T1 isentropic_efficiency=0.8 mechanical_efficiency=1\nboundary Y1 direction:0 outlet.T=400\nboundary Y2 direction:1\n" \
+  "Y1.outlet > Q1.feed\nQ1.steam > T1.inlet\nT1.exhaust > Y2.inlet\nplant other_consumption_fraction=0\n"
+
+/* Whether steam known by its temperature is wet shows only in the end: dry where wet was expected, and the other way round. */
+static void
+test_temperature_of_wet_or_dry_steam (void)
+{
+  g_autoptr (HlPlant) dry = test_plant_set (test_plant_set (test_plant_let_go (test_plant (test_simple_loop), "T1.exhaust.p"), "T1.exhaust.T", 420.0), "Q1.steam.T", 1000.0);
+  g_autoptr (HlSolution) s = hl_solve (dry, NULL);
+  test_assert_solved (s);
+  test_assert_near (test_value (s, "T1.exhaust.T"), 420.0, 1e-9);
+  g_assert_true (isnan (test_value (s, "T1.exhaust.x")));
+  g_autoptr (HlPlant) back = test_plant_set (test_plant (BACK_PRESSURE), "T1.exhaust.T", 470.0), wet = test_plant_set (test_plant (BACK_PRESSURE), "T1.exhaust.T", 330.0);
+  g_autoptr (HlSolution) t = hl_solve (back, NULL), u = hl_solve (wet, NULL);
+  test_assert_solved (t);
+  test_assert_solved (u);
+  test_assert_near (test_value (t, "T1.exhaust.T"), 470.0, 1e-9);
+  test_assert_near (test_value (u, "T1.exhaust.T"), 330.0, 1e-9);
+  g_assert_cmpfloat (test_value (u, "T1.exhaust.x"), <, 1.0);
+}
+
 static void
 test_what_is_known_of_an_unfinished_plant (void)
 {
@@ -248,6 +270,7 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/solution/processes", test_processes);
   g_test_add_func ("/engine/solution/turbine-driven-pump", test_turbine_driven_pump);
   g_test_add_func ("/engine/solution/exhaust-by-temperature", test_exhaust_by_temperature);
+  g_test_add_func ("/engine/solution/temperature-of-wet-or-dry-steam", test_temperature_of_wet_or_dry_steam);
   g_test_add_func ("/engine/solution/unfinished-plant", test_what_is_known_of_an_unfinished_plant);
   return g_test_run ();
 }
