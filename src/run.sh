@@ -17,6 +17,12 @@ plant=${plant:-$PWD/data/examples/tallow-fen.heatloom}
 [ -f "$plant" ] || fail "there is no plant file $plant"
 
 need_packages $build_packages
+# The programs and what they read, without the tests.
+targets='src/app/heatloom src/batch/heatloom-batch data/gschemas.compiled'
+for language in $(cat po/LINGUAS)
+do
+  targets="$targets po/$language/LC_MESSAGES/heatloom.mo"
+done
 build_in build
 
 # The translations of the build, where the program is not installed.

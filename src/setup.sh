@@ -58,7 +58,9 @@ $by_hand"
 $by_hand"
 }
 
-# Configures DIR once with the given options, and builds; quick when nothing has changed.
+# Configures DIR once with the given options, and builds the targets in $targets, all when there are none; quick when
+# nothing has changed.
+targets=
 build_in () {
   dir=$1
   shift
@@ -70,5 +72,5 @@ build_in () {
     # Made from sources that lay elsewhere, or never finished.
     meson setup --wipe "$dir" "$@" || fail "meson could not configure $dir; remove it and run this again."
   fi
-  meson compile -C "$dir" || fail "the build in $dir failed; the first error above is the one to look at."
+  ninja -C "$dir" $targets || fail "the build in $dir failed; the first error above is the one to look at."
 }
