@@ -13,7 +13,8 @@
 struct _HlDiagramView {
   GtkWidget       parent_instance;
   HlSession      *session;
-  GtkWidget      *readout, *empty;
+  GtkWidget      *readout, *empty, *chooser;
+  HlStateDiagramKind kind;
   HlStateDiagram *diagram;          /* of shown, at the size below; NULL: to be made */
   HlSolution     *shown;
   int             width, height;
@@ -87,19 +88,21 @@ static void
 describe (HlDiagramView *self)
 {
   HlUnitSet units = hl_plant_units (shown_plant (self));
+  HlDimension across, up;
   GString *text = g_string_new (NULL);
   HlStreamResult result;
 
+  hl_state_diagram_dimensions (self->kind, &across, &up);
   for (guint n = 0; n < hl_plant_n_streams (shown_plant (self)); n++)
     {
       hl_solution_stream (self->shown, n, &result);
       if (!result.has_state)
         continue;
-      g_autofree char *T = hl_units_format (result.state.T, HL_DIMENSION_TEMPERATURE, units);
-      g_autofree char *s = hl_units_format (result.state.s, HL_DIMENSION_ENTROPY, units);
+      g_autofree char *T = hl_units_format (up == HL_DIMENSION_TEMPERATURE ? result.state.T : up == HL_DIMENSION_ENTHALPY ? result.state.h : result.state.p, up, units);
+      g_autofree char *s = hl_units_format (across == HL_DIMENSION_ENTROPY ? result.state.s : result.state.h, across, units);
       g_string_append_printf (text, "%s%s: %s, %s", text->len > 0 ? "; " : "", hl_plant_stream (shown_plant (self), n)->id, T, s);
     }
-  hl_pane_set_accessible (GTK_WIDGET (self), _("Temperature-entropy diagram"), text->str);
+  hl_pane_set_accessible (GTK_WIDGET (self), hl_state_diagram_title (self->kind), text->str);
   g_string_free (text, TRUE);
 }
 
@@ -111,12 +114,13 @@ show_empty (HlDiagramView *self)
 
 /* --- the read-out --- */
 
-/* Beside a state: its stream in full.  Elsewhere: entropy and temperature under the pointer. */
+/* Beside a state: its stream in full.  Elsewhere: what the axes say under the pointer. */
 static char *
 readout_text (HlDiagramView *self)
 {
   HlUnitSet units = hl_plant_units (shown_plant (self));
-  double s, T;
+  double across, up;
+  HlDimension dimension_across, dimension_up;
   int stream = hl_state_diagram_stream_at (self->diagram, self->x, self->y, HIT_RADIUS);
 
   if (stream >= 0)
@@ -131,11 +135,12 @@ readout_text (HlDiagramView *self)
       g_autofree char *wet = is_wet ? g_strdup_printf (" · x %s", x) : g_strdup ("");
       return g_strdup_printf ("%s   %s · %s%s · %s", hl_plant_stream (shown_plant (self), (guint) stream)->id, p, t, wet, h);
     }
-  if (!hl_state_diagram_to_state (self->diagram, self->x, self->y, &s, &T))
+  if (!hl_state_diagram_to_state (self->diagram, self->x, self->y, &across, &up))
     return NULL;
-  g_autofree char *t = hl_units_format (T, HL_DIMENSION_TEMPERATURE, units);
-  g_autofree char *entropy = hl_units_format (s, HL_DIMENSION_ENTROPY, units);
-  return g_strdup_printf ("%s · %s", t, entropy);
+  hl_state_diagram_dimensions (self->kind, &dimension_across, &dimension_up);
+  g_autofree char *first = hl_units_format (up, dimension_up, units);
+  g_autofree char *second = hl_units_format (across, dimension_across, units);
+  return g_strdup_printf ("%s · %s", first, second);
 }
 
 static void
@@ -162,7 +167,7 @@ make_diagram (HlDiagramView *self)
   forget_diagram (self);
   self->width = width;
   self->height = height;
-  self->diagram = hl_state_diagram_new (self->shown, hl_plant_units (shown_plant (self)), width, height);
+  self->diagram = hl_state_diagram_new_of_kind (self->shown, self->kind, hl_plant_units (shown_plant (self)), width, height);
 }
 
 /* The same node as long as nothing changes: only the crosshair is then drawn anew. */
@@ -312,9 +317,13 @@ hl_diagram_view_allocate (GtkWidget *widget, int width, int height, int baseline
 {
   HlDiagramView *self = HL_DIAGRAM_VIEW (widget);
   GtkRequisition size;
+  int left = 56;
 
+  gtk_widget_get_preferred_size (self->chooser, NULL, &size);
+  place (self->chooser, 56, 8);
+  left += size.width + 8;
   gtk_widget_get_preferred_size (self->readout, NULL, &size);
-  place (self->readout, MIN (56, MAX (0, width - size.width)), 8);        /* cold and hot at once: no state lies there */
+  place (self->readout, MIN (left, MAX (0, width - size.width)), 8);        /* cold and hot at once: no state lies there */
   gtk_widget_get_preferred_size (self->empty, NULL, &size);
   place (self->empty, MAX (0, (width - size.width) / 2), MAX (0, (height - size.height) / 2));
 }
@@ -350,6 +359,31 @@ hl_diagram_view_class_init (HlDiagramViewClass *klass)
 }
 
 static void
+chosen_cb (HlDiagramView *self)
+{
+  self->kind = (HlStateDiagramKind) gtk_drop_down_get_selected (GTK_DROP_DOWN (self->chooser));
+  forget_diagram (self);
+  if (self->shown != NULL)
+    describe (self);
+  gtk_widget_queue_draw (GTK_WIDGET (self));
+}
+
+static GtkWidget *
+build_chooser (HlDiagramView *self)
+{
+  GtkStringList *signs = gtk_string_list_new (NULL);
+  GtkWidget *chooser;
+
+  for (int kind = 0; kind < HL_N_STATE_DIAGRAMS; kind++)
+    gtk_string_list_append (signs, hl_state_diagram_sign ((HlStateDiagramKind) kind));
+  chooser = gtk_drop_down_new (G_LIST_MODEL (signs), NULL);
+  hl_pane_set_accessible (chooser, _("Kind of state diagram"), NULL);
+  gtk_widget_set_tooltip_text (chooser, _("Kind of state diagram"));
+  g_signal_connect_swapped (chooser, "notify::selected", G_CALLBACK (chosen_cb), self);
+  return chooser;
+}
+
+static void
 hl_diagram_view_init (HlDiagramView *self)
 {
   GtkEventController *motion = gtk_event_controller_motion_new ();
@@ -362,6 +396,8 @@ hl_diagram_view_init (HlDiagramView *self)
   gtk_widget_set_can_target (self->readout, FALSE);
   gtk_widget_set_visible (self->readout, FALSE);
   gtk_widget_set_parent (self->readout, GTK_WIDGET (self));
+  self->chooser = build_chooser (self);
+  gtk_widget_set_parent (self->chooser, GTK_WIDGET (self));
   self->empty = hl_pane_label (_("States appear here as soon as the plant solves."), "quiet");
   gtk_widget_set_parent (self->empty, GTK_WIDGET (self));
   g_signal_connect (motion, "enter", G_CALLBACK (motion_cb), self);
@@ -382,4 +418,11 @@ hl_diagram_view_new (HlSession *session)
   g_signal_connect_swapped (session, "selection-changed", G_CALLBACK (gtk_widget_queue_draw), self);
   changed_cb (self);
   return GTK_WIDGET (self);
+}
+
+void
+hl_diagram_view_set_kind (HlDiagramView *self, HlStateDiagramKind kind)
+{
+  g_return_if_fail (HL_IS_DIAGRAM_VIEW (self) && kind < HL_N_STATE_DIAGRAMS);
+  gtk_drop_down_set_selected (GTK_DROP_DOWN (self->chooser), kind);
 }

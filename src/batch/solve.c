@@ -5,6 +5,7 @@
 #include "batch/command.h"
 #include "batch/solve-output.h"
 #include "draw/export.h"
+#include "draw/state-diagram.h"
 #include "plant/i18n.h"
 
 /* The options that take a file name, which may be "-". */
@@ -74,20 +75,34 @@ set_values (HlPlant **plant, const HlArguments *arguments, GArray *yielded, GErr
   return TRUE;
 }
 
+/* @diagram: which, and the file. */
+static gboolean
+check_diagram (char *const *diagram, GError **error)
+{
+  HlStateDiagramKind kind;
+  HlFormat format;
+  if (hl_state_diagram_kind_from_id (diagram[0], &kind))
+    return strcmp (diagram[1], "-") == 0 || hl_format_from_path (diagram[1], &format, error);
+  g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("--diagram: there is no diagram “%s”; there are ts, hs and ph"), diagram[0]);
+  return FALSE;
+}
+
 /* Mistakes of the command line show before anything is read or written. */
 static gboolean
 check_usage (const HlArguments *arguments, GError **error)
 {
-  char *const *diagram = hl_arguments_option (arguments, "diagram", 0);
   const char *drawing = hl_arguments_value (arguments, "drawing");
+  char *const *diagram;
   HlFormat format;
   if (hl_arguments_count_standard_output (arguments, file_options) > 1)
     g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("only one output can go to standard output (-)"));
-  else if (diagram != NULL && strcmp (diagram[0], "ts") != 0)
-    g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("--diagram: there is no diagram “%s”; there is ts"), diagram[0]);
   else
-    return (diagram == NULL || strcmp (diagram[1], "-") == 0 || hl_format_from_path (diagram[1], &format, error))
-           && (drawing == NULL || strcmp (drawing, "-") == 0 || hl_format_from_path (drawing, &format, error));
+    {
+      for (guint n = 0; (diagram = hl_arguments_option (arguments, "diagram", n)) != NULL; n++)
+        if (!check_diagram (diagram, error))
+          return FALSE;
+      return drawing == NULL || strcmp (drawing, "-") == 0 || hl_format_from_path (drawing, &format, error);
+    }
   return FALSE;
 }
 
@@ -102,11 +117,26 @@ write_picture (const HlSolution *solution, HlPicture picture, const char *path, 
 }
 
 static gboolean
+write_diagrams (const HlSolution *solution, const HlArguments *arguments, GError **error)
+{
+  static const HlPicture pictures[HL_N_STATE_DIAGRAMS] = {
+    [HL_STATE_DIAGRAM_TS] = HL_PICTURE_STATE_DIAGRAM, [HL_STATE_DIAGRAM_HS] = HL_PICTURE_HS_DIAGRAM, [HL_STATE_DIAGRAM_PH] = HL_PICTURE_PH_DIAGRAM,
+  };
+  char *const *diagram;
+  for (guint n = 0; (diagram = hl_arguments_option (arguments, "diagram", n)) != NULL; n++)
+    {
+      HlStateDiagramKind kind;
+      if (hl_state_diagram_kind_from_id (diagram[0], &kind) && !write_picture (solution, pictures[kind], diagram[1], error))
+        return FALSE;
+    }
+  return TRUE;
+}
+
+static gboolean
 write_outputs (const HlSolution *solution, const GArray *yielded, const HlArguments *arguments, GError **error)
 {
   const char *json_path = hl_arguments_value (arguments, "json"), *csv_path = hl_arguments_value (arguments, "csv");
   const char *ledger_path = hl_arguments_value (arguments, "ledger"), *drawing = hl_arguments_value (arguments, "drawing");
-  char *const *diagram = hl_arguments_option (arguments, "diagram", 0);
   if (json_path != NULL)
     {
       g_autofree char *json = hl_solution_json (solution, yielded);
@@ -125,8 +155,7 @@ write_outputs (const HlSolution *solution, const GArray *yielded, const HlArgume
       if (!hl_export_text_file (text, ledger_path, error))
         return FALSE;
     }
-  return (drawing == NULL || write_picture (solution, HL_PICTURE_DRAWING, drawing, error))
-         && (diagram == NULL || write_picture (solution, HL_PICTURE_STATE_DIAGRAM, diagram[1], error));
+  return (drawing == NULL || write_picture (solution, HL_PICTURE_DRAWING, drawing, error)) && write_diagrams (solution, arguments, error);
 }
 
 static HlExit
@@ -175,7 +204,7 @@ static const HlBatchOption solve_options[] = {
   { "csv", N_("FILE"), FALSE, N_("write the ledger of all streams as CSV, in the plant's units") },
   { "ledger", N_("FILE"), FALSE, N_("write the ledger as text in aligned columns") },
   { "drawing", N_("FILE"), FALSE, N_("write the drawing; .svg, .pdf or .png") },
-  { "diagram", N_("ts FILE"), FALSE, N_("write the temperature-entropy diagram; .svg, .pdf or .png") },
+  { "diagram", N_("ts|hs|ph FILE"), TRUE, N_("write a state diagram: temperature-entropy, enthalpy-entropy, pressure-enthalpy; may be repeated") },
 };
 
 const HlBatchCommand hl_command_solve = {

@@ -38,9 +38,9 @@ hl_format_from_path (const char *path, HlFormat *format, GError **error)
 }
 
 static void
-draw_state_diagram (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, double width, double height)
+draw_state_diagram (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, HlStateDiagramKind kind, double width, double height)
 {
-  g_autoptr (HlStateDiagram) diagram = hl_state_diagram_new (solution, hl_plant_units (hl_solution_plant (solution)), width, height);
+  g_autoptr (HlStateDiagram) diagram = hl_state_diagram_new_of_kind (solution, kind, hl_plant_units (hl_solution_plant (solution)), width, height);
   hl_state_diagram_draw (diagram, cr, theme, !hl_solution_is_solved (solution), -1);
 }
 
@@ -49,10 +49,21 @@ draw_picture (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, HlP
 {
   hl_set_colour (cr, &theme->ground);
   cairo_paint (cr);
-  if (picture == HL_PICTURE_DRAWING)
-    hl_draw_sheet (cr, theme, hl_solution_plant (solution), solution, width, height);
-  else
-    draw_state_diagram (cr, theme, solution, width, height);
+  switch (picture)
+    {
+    case HL_PICTURE_DRAWING:
+      hl_draw_sheet (cr, theme, hl_solution_plant (solution), solution, width, height);
+      break;
+    case HL_PICTURE_HS_DIAGRAM:
+      draw_state_diagram (cr, theme, solution, HL_STATE_DIAGRAM_HS, width, height);
+      break;
+    case HL_PICTURE_PH_DIAGRAM:
+      draw_state_diagram (cr, theme, solution, HL_STATE_DIAGRAM_PH, width, height);
+      break;
+    case HL_PICTURE_STATE_DIAGRAM:
+    default:
+      draw_state_diagram (cr, theme, solution, HL_STATE_DIAGRAM_TS, width, height);
+    }
 }
 
 static cairo_status_t

@@ -5,7 +5,12 @@
 #include "draw/theme.h"
 G_BEGIN_DECLS
 
-typedef enum { HL_PICTURE_DRAWING, HL_PICTURE_STATE_DIAGRAM } HlPicture;
+typedef enum {
+  HL_PICTURE_DRAWING,
+  HL_PICTURE_STATE_DIAGRAM,       /* T-s */
+  HL_PICTURE_HS_DIAGRAM,
+  HL_PICTURE_PH_DIAGRAM,
+} HlPicture;
 typedef enum { HL_FORMAT_SVG, HL_FORMAT_PDF, HL_FORMAT_PNG } HlFormat;
 gboolean hl_format_from_path (const char *path, HlFormat *format, GError **error);   /* by its ending; says which endings do */
 

@@ -53,6 +53,7 @@ hl_plot_axis_set (HlPlotAxis *axis, HlDimension dimension, HlUnitSet units, doub
     shown_high = shown_low + MAX (1e-9, fabs (shown_low) * 1e-6);
   axis->dimension = dimension;
   axis->units = units;
+  axis->is_log = FALSE;
   axis->pixel_low = pixel_low;
   axis->pixel_high = pixel_high;
   axis->step = round_step ((shown_high - shown_low) / CLAMP (length / spacing, 1.0, HL_PLOT_MAX_TICKS - 4));
@@ -65,15 +66,80 @@ hl_plot_axis_set (HlPlotAxis *axis, HlDimension dimension, HlUnitSet units, doub
   set_ticks (axis, shown_low, shown_high);
 }
 
+/* Figures of a decade, from one to three of them. */
+static const double mantissas[3][3] = { { 1.0 }, { 1.0, 3.0 }, { 1.0, 2.0, 5.0 } };
+
+static double
+round_log (double shown, int n, gboolean is_up)
+{
+  double decade = pow (10.0, floor (log10 (shown) + 1e-9)), best = decade;
+  for (int i = 0; i < n; i++)
+    {
+      double here = decade * mantissas[n - 1][i];
+      if (is_up && here >= shown * (1.0 - 1e-9))
+        return here;
+      if (here <= shown * (1.0 + 1e-9))
+        best = here;
+    }
+  return is_up ? 10.0 * decade : best;
+}
+
+/* Without exponent and needless zeros: 0.05, 1, 200. */
+static void
+set_log_ticks (HlPlotAxis *axis, double shown_low, double shown_high, int n, int stride)
+{
+  axis->n_ticks = 0;
+  for (int k = (int) floor (log10 (shown_low) + 1e-9); pow (10.0, k) <= shown_high * (1.0 + 1e-9); k++)
+    for (int i = 0; i < n && axis->n_ticks < HL_PLOT_MAX_TICKS; i++)
+      {
+        double shown = pow (10.0, k) * mantissas[n - 1][i];
+        if (shown < shown_low * (1.0 - 1e-9) || shown > shown_high * (1.0 + 1e-9) || (stride > 1 && ((k % stride) + stride) % stride != 0))
+          continue;
+        axis->ticks[axis->n_ticks] = hl_units_from_display (shown, axis->dimension, axis->units);
+        g_snprintf (axis->tick_texts[axis->n_ticks], sizeof axis->tick_texts[0], "%.*f", MAX (0, -k), shown);
+        axis->n_ticks++;
+      }
+}
+
+void
+hl_plot_axis_set_log (HlPlotAxis *axis, HlDimension dimension, HlUnitSet units, double low, double high,
+                      double pixel_low, double pixel_high, double spacing)
+{
+  double shown_low = hl_units_to_display (low, dimension, units), shown_high = hl_units_to_display (high, dimension, units), decade;
+  int n, stride = 1;
+  g_return_if_fail (shown_low > 0.0);
+  shown_high = MAX (shown_high, shown_low * 1.5);
+  decade = fabs (pixel_high - pixel_low) / log10 (shown_high / shown_low);
+  /* The least gaps within a decade are those from 5 to 10 and 1 to 2, and from 3 to 10. */
+  n = decade * log10 (2.0) >= spacing ? 3 : decade * log10 (3.0) >= spacing ? 2 : 1;
+  while (n == 1 && decade * stride < spacing)
+    stride++;
+  axis->dimension = dimension;
+  axis->units = units;
+  axis->is_log = TRUE;
+  axis->pixel_low = pixel_low;
+  axis->pixel_high = pixel_high;
+  axis->step = 0.0;
+  shown_low = round_log (shown_low, 3, FALSE);
+  shown_high = round_log (shown_high, 3, TRUE);
+  axis->low = hl_units_from_display (shown_low, dimension, units);
+  axis->high = hl_units_from_display (shown_high, dimension, units);
+  set_log_ticks (axis, shown_low, shown_high, n, stride);
+}
+
 double
 hl_plot_axis_to_pixel (const HlPlotAxis *axis, double value)
 {
+  if (axis->is_log)
+    return axis->pixel_low + log (MAX (value, 1e-300) / axis->low) / log (axis->high / axis->low) * (axis->pixel_high - axis->pixel_low);
   return axis->pixel_low + (value - axis->low) / (axis->high - axis->low) * (axis->pixel_high - axis->pixel_low);
 }
 
 double
 hl_plot_axis_from_pixel (const HlPlotAxis *axis, double pixel)
 {
+  if (axis->is_log)
+    return axis->low * pow (axis->high / axis->low, (pixel - axis->pixel_low) / (axis->pixel_high - axis->pixel_low));
   return axis->low + (pixel - axis->pixel_low) / (axis->pixel_high - axis->pixel_low) * (axis->high - axis->low);
 }
 

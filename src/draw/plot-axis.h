@@ -10,6 +10,7 @@ G_BEGIN_DECLS
 typedef struct {
   HlDimension dimension;
   HlUnitSet   units;
+  gboolean    is_log;                             /* equal ratios are equally far apart; low above 0 */
   double      low, high;                          /* ends of the range [SI] */
   double      pixel_low, pixel_high;              /* where they lie; pixel_low > pixel_high for an axis that runs up */
   double      step;                               /* between ticks [unit shown] */
@@ -20,6 +21,9 @@ typedef struct {
 
 /* The least round range that holds @low to @high [SI]: ends on ticks or a round part of a step beyond; ticks stand at least @spacing pixels apart. */
 void   hl_plot_axis_set        (HlPlotAxis *axis, HlDimension dimension, HlUnitSet units, double low, double high,
+                                double pixel_low, double pixel_high, double spacing);
+/* The same by decades: ends and ticks at 1, 2 and 5 times a power of ten, or at powers of ten only where there is less room. */
+void   hl_plot_axis_set_log    (HlPlotAxis *axis, HlDimension dimension, HlUnitSet units, double low, double high,
                                 double pixel_low, double pixel_high, double spacing);
 double hl_plot_axis_to_pixel   (const HlPlotAxis *axis, double value);
 double hl_plot_axis_from_pixel (const HlPlotAxis *axis, double pixel);

@@ -19,6 +19,9 @@ dome_new (const HlFluid *fluid)
   HlState critical;
   hl_fluid_limits (fluid, &limits);
   dome->T = g_new (double, N_DOME + 1);
+  dome->p = g_new (double, N_DOME + 1);
+  dome->h_liquid = g_new (double, N_DOME + 1);
+  dome->h_vapour = g_new (double, N_DOME + 1);
   dome->s_liquid = g_new (double, N_DOME + 1);
   dome->s_vapour = g_new (double, N_DOME + 1);
   for (int i = 0; i < N_DOME; i++)
@@ -30,16 +33,25 @@ dome_new (const HlFluid *fluid)
       dome->T[dome->n] = T;
       dome->s_liquid[dome->n] = saturation.s_liquid;
       dome->s_vapour[dome->n] = saturation.s_vapour;
+      dome->p[dome->n] = saturation.p;
+      dome->h_liquid[dome->n] = saturation.h_liquid;
+      dome->h_vapour[dome->n] = saturation.h_vapour;
       dome->n++;
     }
   if (dome->n == 0)
     return dome;
   dome->T[dome->n] = limits.T_critical;
+  dome->p[dome->n] = limits.p_critical;
   dome->s_liquid[dome->n] = (dome->s_liquid[dome->n - 1] + dome->s_vapour[dome->n - 1]) / 2.0;
+  dome->h_liquid[dome->n] = (dome->h_liquid[dome->n - 1] + dome->h_vapour[dome->n - 1]) / 2.0;
   if (hl_fluid_state_pT (fluid, limits.p_critical, limits.T_critical, &critical) == HL_OK
       && critical.s > dome->s_liquid[dome->n - 1] && critical.s < dome->s_vapour[dome->n - 1])
-    dome->s_liquid[dome->n] = critical.s;
+    {
+      dome->s_liquid[dome->n] = critical.s;
+      dome->h_liquid[dome->n] = critical.h;
+    }
   dome->s_vapour[dome->n] = dome->s_liquid[dome->n];
+  dome->h_vapour[dome->n] = dome->h_liquid[dome->n];
   dome->n++;
   return dome;
 }
@@ -62,12 +74,11 @@ hl_dome_of (const HlFluid *fluid)
   return dome;
 }
 
-double
-hl_dome_entropy (const HlDome *dome, double T, double quality)
+/* The entry below @T, and how far on from it to the next. */
+static guint
+find_entry (const HlDome *dome, double T, double *share)
 {
   guint low = 0, high = dome->n - 1;
-  double t, liquid, vapour;
-  g_return_val_if_fail (dome->n >= 2, NAN);
   T = CLAMP (T, dome->T[0], dome->T[dome->n - 1]);
   while (high - low > 1)
     {
@@ -77,8 +88,43 @@ hl_dome_entropy (const HlDome *dome, double T, double quality)
       else
         high = middle;
     }
-  t = (T - dome->T[low]) / (dome->T[high] - dome->T[low]);
-  liquid = dome->s_liquid[low] + t * (dome->s_liquid[high] - dome->s_liquid[low]);
-  vapour = dome->s_vapour[low] + t * (dome->s_vapour[high] - dome->s_vapour[low]);
-  return liquid + quality * (vapour - liquid);
+  *share = (T - dome->T[low]) / (dome->T[high] - dome->T[low]);
+  return low;
+}
+
+static double
+between (const double *liquid, const double *vapour, guint n, double share, double quality)
+{
+  double l = liquid[n] + share * (liquid[n + 1] - liquid[n]), v = vapour[n] + share * (vapour[n + 1] - vapour[n]);
+  return l + quality * (v - l);
+}
+
+double
+hl_dome_entropy (const HlDome *dome, double T, double quality)
+{
+  double share;
+  guint n;
+  g_return_val_if_fail (dome->n >= 2, NAN);
+  n = find_entry (dome, T, &share);
+  return between (dome->s_liquid, dome->s_vapour, n, share, quality);
+}
+
+HlPoint
+hl_dome_point (const HlDome *dome, HlStateDiagramKind kind, double T, double quality)
+{
+  double share, p;
+  guint n;
+  g_return_val_if_fail (dome->n >= 2, ((HlPoint) { NAN, NAN }));
+  n = find_entry (dome, T, &share);
+  /* Vapour pressure runs nearly straight as its logarithm. */
+  p = dome->p[n] * pow (dome->p[n + 1] / dome->p[n], share);
+  return hl_axes_point (kind, p, CLAMP (T, dome->T[0], dome->T[dome->n - 1]),
+                        between (dome->h_liquid, dome->h_vapour, n, share, quality), between (dome->s_liquid, dome->s_vapour, n, share, quality));
+}
+
+HlPoint
+hl_dome_nth (const HlDome *dome, HlStateDiagramKind kind, guint n, double quality)
+{
+  return hl_axes_point (kind, dome->p[n], dome->T[n], dome->h_liquid[n] + quality * (dome->h_vapour[n] - dome->h_liquid[n]),
+                        dome->s_liquid[n] + quality * (dome->s_vapour[n] - dome->s_liquid[n]));
 }

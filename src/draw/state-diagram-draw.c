@@ -25,7 +25,7 @@ fill_dome (const HlStateDiagram *diagram, cairo_t *cr, const HlTheme *theme)
 {
   cairo_save (cr);
   clip_to_frame (diagram, cr);
-  hl_plot_series_path (diagram->outline, cr, &diagram->s_axis, &diagram->T_axis, TRUE);
+  hl_plot_series_path (diagram->outline, cr, &diagram->x_axis, &diagram->y_axis, TRUE);
   cairo_close_path (cr);
   hl_set_colour (cr, &theme->dome_fill);
   cairo_fill (cr);
@@ -37,7 +37,7 @@ stroke_outline (const HlStateDiagram *diagram, cairo_t *cr, const HlTheme *theme
 {
   cairo_save (cr);
   clip_to_frame (diagram, cr);
-  hl_plot_series_path (diagram->outline, cr, &diagram->s_axis, &diagram->T_axis, TRUE);
+  hl_plot_series_path (diagram->outline, cr, &diagram->x_axis, &diagram->y_axis, TRUE);
   hl_set_colour (cr, hl_plot_colour (theme, diagram->outline->colour, is_stale));
   cairo_set_line_width (cr, diagram->outline->width);
   cairo_set_line_join (cr, CAIRO_LINE_JOIN_ROUND);
@@ -115,23 +115,52 @@ draw_number (const HlStateDiagram *diagram, const HlMark *mark, cairo_t *cr, con
   draw_text (cr, theme, mark->text, &mark->label.box, is_state ? diagram->number_size : 0.95 * diagram->text_size, is_state);
 }
 
+static const char *
+axis_name (HlDimension dimension)
+{
+  switch (dimension)
+    {
+    case HL_DIMENSION_ENTROPY:
+      return _("specific entropy");
+    case HL_DIMENSION_ENTHALPY:
+      return _("specific enthalpy");
+    case HL_DIMENSION_PRESSURE:
+      return _("pressure");
+    default:
+      return _("temperature");
+    }
+}
+
+static void
+draw_critical (const HlStateDiagram *diagram, cairo_t *cr, const HlTheme *theme, gboolean is_stale)
+{
+  cairo_save (cr);
+  clip_to_frame (diagram, cr);
+  cairo_new_path (cr);
+  cairo_arc (cr, diagram->critical.x, diagram->critical.y, 2.6, 0.0, 2.0 * G_PI);
+  hl_set_colour (cr, hl_plot_colour (theme, HL_PLOT_OUTLINE, is_stale));
+  cairo_fill (cr);
+  cairo_restore (cr);
+}
+
 void
 hl_state_diagram_draw (const HlStateDiagram *diagram, cairo_t *cr, const HlTheme *theme, gboolean is_stale, int selected_stream)
 {
-  g_autofree char *s_title = NULL, *T_title = NULL;
+  g_autofree char *x_title = NULL, *y_title = NULL;
   g_return_if_fail (diagram != NULL && cr != NULL && theme != NULL);
-  s_title = hl_plot_axis_title (&diagram->s_axis, _("specific entropy"));
-  T_title = hl_plot_axis_title (&diagram->T_axis, _("temperature"));
+  x_title = hl_plot_axis_title (&diagram->x_axis, axis_name (diagram->x_axis.dimension));
+  y_title = hl_plot_axis_title (&diagram->y_axis, axis_name (diagram->y_axis.dimension));
   cairo_save (cr);
   draw_ground (diagram, cr, theme);
   fill_dome (diagram, cr, theme);
-  hl_plot_axes_draw_grid (cr, theme, &diagram->s_axis, &diagram->T_axis);
-  hl_plot_layer_draw (diagram->background, cr, theme, &diagram->s_axis, &diagram->T_axis,
+  hl_plot_axes_draw_grid (cr, theme, &diagram->x_axis, &diagram->y_axis);
+  hl_plot_layer_draw (diagram->background, cr, theme, &diagram->x_axis, &diagram->y_axis,
                       (const HlBox *) (gpointer) diagram->gaps->data, diagram->gaps->len, is_stale);
   stroke_outline (diagram, cr, theme, is_stale);
+  draw_critical (diagram, cr, theme, is_stale);
   hl_set_colour (cr, &theme->quiet);
-  hl_plot_axes_draw_frame (cr, theme, &diagram->s_axis, &diagram->T_axis, s_title, T_title, diagram->text_size);
-  hl_plot_layer_draw (diagram->paths, cr, theme, &diagram->s_axis, &diagram->T_axis, NULL, 0, is_stale);
+  hl_plot_axes_draw_frame (cr, theme, &diagram->x_axis, &diagram->y_axis, x_title, y_title, diagram->text_size);
+  hl_plot_layer_draw (diagram->paths, cr, theme, &diagram->x_axis, &diagram->y_axis, NULL, 0, is_stale);
   draw_texts (diagram, cr, theme);
   for (guint i = 0; i < diagram->marks->len; i++)
     draw_leader (&g_array_index (diagram->marks, HlMark, i), cr, theme);

@@ -1,4 +1,4 @@
-/* Isobars of the diagram: at which pressures, where they end, where their labels stand.
+/* Isobars and isotherms of the diagram: at which values, where they end, where their labels stand.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "draw/state-diagram-private.h"
 #include <math.h>
@@ -83,7 +83,7 @@ usual_isobars (const HlStateDiagram *diagram, const HlCycle *cycle)
     {
       Isobar isobar = { .p = hl_units_from_display (pow (10.0, k), HL_DIMENSION_PRESSURE, cycle->units) };
       HlSaturation saturation;
-      if (isobar.p > 0.6 * limits.p_critical || hl_fluid_saturation_p (cycle->fluid, isobar.p, &saturation) != HL_OK || saturation.T < diagram->T_axis.low)
+      if (isobar.p > 0.6 * limits.p_critical || hl_fluid_saturation_p (cycle->fluid, isobar.p, &saturation) != HL_OK || saturation.T < diagram->dome->T[0] || (diagram->kind == HL_STATE_DIAGRAM_TS && saturation.T < diagram->y_axis.low))
         continue;
       g_array_append_val (isobars, isobar);
     }
@@ -110,7 +110,8 @@ pressure_text (double p, HlUnitSet units)
 }
 
 typedef struct {
-  double        p;
+  HlTextKind    kind;
+  char         *text;
   HlPlotSeries *series;
   GArray       *pixels;      /* of HlPoint, cut at the frame */
   double        keep;        /* length from the start that a label must leave [pixels] */
@@ -118,9 +119,9 @@ typedef struct {
 } Line;
 
 static HlPoint
-pixel (const HlStateDiagram *diagram, double s, double T)
+pixel (const HlStateDiagram *diagram, HlPoint at)
 {
-  return (HlPoint) { hl_plot_axis_to_pixel (&diagram->s_axis, s), hl_plot_axis_to_pixel (&diagram->T_axis, T) };
+  return (HlPoint) { hl_plot_axis_to_pixel (&diagram->x_axis, at.x), hl_plot_axis_to_pixel (&diagram->y_axis, at.y) };
 }
 
 static void
@@ -128,34 +129,56 @@ line_clear (gpointer data)
 {
   Line *line = data;
   g_array_unref (line->pixels);
+  g_free (line->text);
 }
 
-/* Path in pixels up to the right end of the frame. */
 static Line
-make_line (HlStateDiagram *diagram, const HlCycle *cycle, const Isobar *isobar)
+line_new (HlTextKind kind, char *text, HlPlotDash dash)
 {
-  Line line = { isobar->p, hl_plot_series_new (HL_PLOT_QUIET, HL_PLOT_SOLID, 0.7), g_array_new (FALSE, FALSE, sizeof (HlPoint)), 0.0, 0.0 };
+  return (Line) { kind, text, hl_plot_series_new (HL_PLOT_QUIET, dash, 0.7), g_array_new (FALSE, FALSE, sizeof (HlPoint)), 0.0, 0.0 };
+}
+
+/* Takes a point of the path, in pixels up to the right end of the frame.  FALSE beyond it. */
+static gboolean
+line_take (Line *line, const HlStateDiagram *diagram, const HlPathPoint *point)
+{
+  HlPoint value = hl_axes_point (diagram->kind, point->p, point->T, point->h, point->s), at = pixel (diagram, value), last = at;
+  double right = diagram->frame.x + diagram->frame.width;
+  if (line->pixels->len > 0)
+    last = g_array_index (line->pixels, HlPoint, line->pixels->len - 1);
+  hl_plot_series_add (line->series, value.x, value.y);
+  if (last.x >= right)
+    return FALSE;
+  if (at.x > right)
+    at = (HlPoint) { right, last.y + (at.y - last.y) * (right - last.x) / (at.x - last.x) };
+  g_array_append_val (line->pixels, at);
+  line->length += hypot (at.x - last.x, at.y - last.y);
+  return TRUE;
+}
+
+static double
+hottest_of_isobar (const HlStateDiagram *diagram, const HlFluid *fluid, double p)
+{
   HlFluidLimits limits;
-  double T_high, T_low;
-  GArray *path;
-  hl_fluid_limits (cycle->fluid, &limits);
-  T_high = MIN (diagram->T_axis.high, limits.T_max);
-  T_low = MAX (diagram->T_axis.low, limits.T_triple);
-  path = hl_isobar_path (cycle->fluid, isobar->p, T_low, T_high, &diagram->s_axis, &diagram->T_axis);
+  HlState top;
+  hl_fluid_limits (fluid, &limits);
+  if (diagram->kind == HL_STATE_DIAGRAM_TS)
+    return MIN (diagram->y_axis.high, limits.T_max);
+  return hl_fluid_state_ph (fluid, p, diagram->y_axis.high, &top) == HL_OK ? MIN (top.T, limits.T_max) : limits.T_max;
+}
+
+static Line
+make_isobar (HlStateDiagram *diagram, const HlCycle *cycle, const Isobar *isobar)
+{
+  Line line = line_new (HL_TEXT_PRESSURE, pressure_text (isobar->p, cycle->units), HL_PLOT_SOLID);
+  double T_low = diagram->kind == HL_STATE_DIAGRAM_TS ? MAX (diagram->y_axis.low, diagram->dome->T[0]) : diagram->dome->T[0];
+  GArray *path = hl_isobar_path (cycle->fluid, isobar->p, T_low, hottest_of_isobar (diagram, cycle->fluid, isobar->p),
+                                 diagram->kind, &diagram->x_axis, &diagram->y_axis);
   for (guint i = 0; i < path->len; i++)
     {
       const HlPathPoint *point = &g_array_index (path, HlPathPoint, i);
-      HlPoint at = pixel (diagram, point->s, point->T), last = at;
-      double right = diagram->frame.x + diagram->frame.width;
-      if (line.pixels->len > 0)
-        last = g_array_index (line.pixels, HlPoint, line.pixels->len - 1);
-      hl_plot_series_add (line.series, point->s, point->T);
-      if (last.x >= right)
+      if (!line_take (&line, diagram, point))
         continue;
-      if (at.x > right)
-        at = (HlPoint) { right, last.y + (at.y - last.y) * (right - last.x) / (at.x - last.x) };
-      g_array_append_val (line.pixels, at);
-      line.length += hypot (at.x - last.x, at.y - last.y);
       /* The dome's part and a little more stays, and what the cycle runs along. */
       if (i <= 1)
         line.keep = line.length + 2.2 * diagram->text_size;
@@ -164,6 +187,85 @@ make_line (HlStateDiagram *diagram, const HlCycle *cycle, const Isobar *isobar)
     }
   g_array_unref (path);
   return line;
+}
+
+/* --- isotherms: beside the isobars of h-s where steam is superheated, in place of them in p-h --- */
+
+#define MOST_ISOTHERMS 8
+
+/* The pressure at which an isotherm of h-s leaves the frame on the right. */
+static double
+pressure_at_right (const HlStateDiagram *diagram, const HlFluid *fluid, double T, double p_high)
+{
+  double low = log (p_high) - 16.0, high = log (p_high);
+  for (int i = 0; i < 40; i++)
+    {
+      double middle = (low + high) / 2.0;
+      HlState state;
+      if (hl_fluid_state_pT (fluid, exp (middle), T, &state) == HL_OK && state.s > diagram->x_axis.high)
+        low = middle;
+      else
+        high = middle;
+    }
+  return exp (low);
+}
+
+static Line
+make_isotherm (HlStateDiagram *diagram, const HlCycle *cycle, double T, char *text)
+{
+  Line line = line_new (HL_TEXT_ISOTHERM, text, HL_PLOT_DASHED);
+  HlFluidLimits limits;
+  HlSaturation saturation;
+  double p_high, p_low;
+  guint n_kept;
+  GArray *path;
+  hl_fluid_limits (cycle->fluid, &limits);
+  if (diagram->kind == HL_STATE_DIAGRAM_PH)
+    {
+      p_high = MIN (diagram->y_axis.high, limits.p_max);
+      p_low = diagram->y_axis.low;
+    }
+  else
+    {
+      gboolean has_vapour = T < limits.T_critical && hl_fluid_saturation_T (cycle->fluid, T, &saturation) == HL_OK;
+      p_high = has_vapour ? NAN : 2.0 * limits.p_critical;
+      p_low = pressure_at_right (diagram, cycle->fluid, T, has_vapour ? saturation.p : p_high);
+    }
+  path = hl_isotherm_path (cycle->fluid, T, p_high, p_low, diagram->kind, &diagram->x_axis, &diagram->y_axis, &n_kept);
+  for (guint i = 0; i < path->len; i++)
+    if (line_take (&line, diagram, &g_array_index (path, HlPathPoint, i)) && i < n_kept)
+      line.keep = line.length + diagram->text_size;
+  g_array_unref (path);
+  return line;
+}
+
+/* The hottest temperature that the diagram shows where the vapour is thin. */
+static double
+hottest_shown (const HlStateDiagram *diagram, const HlFluid *fluid)
+{
+  HlFluidLimits limits;
+  HlState thin;
+  double h = diagram->kind == HL_STATE_DIAGRAM_PH ? diagram->x_axis.high : diagram->y_axis.high;
+  hl_fluid_limits (fluid, &limits);
+  return hl_fluid_state_ph (fluid, 0.005 * limits.p_critical, h, &thin) == HL_OK ? MIN (thin.T, limits.T_max) : limits.T_max;
+}
+
+static void
+add_isotherms (HlStateDiagram *diagram, const HlCycle *cycle, GArray *lines)
+{
+  double low = hl_units_to_display (diagram->dome->T[0], HL_DIMENSION_TEMPERATURE, cycle->units);
+  double high = hl_units_to_display (hottest_shown (diagram, cycle->fluid), HL_DIMENSION_TEMPERATURE, cycle->units), step = 50.0;
+  /* The cold ones of h-s run along each other at the foot of the vapour line. */
+  if (diagram->kind == HL_STATE_DIAGRAM_HS)
+    low += 0.15 * (high - low);
+  while ((high - low) / step > MOST_ISOTHERMS)
+    step *= 2.0;
+  for (double shown = step * ceil (low / step); shown <= high; shown += step)
+    {
+      double T = hl_units_from_display (shown, HL_DIMENSION_TEMPERATURE, cycle->units);
+      Line line = make_isotherm (diagram, cycle, T, g_strdup_printf ("%.0f %s", shown, hl_units_label (HL_DIMENSION_TEMPERATURE, cycle->units)));
+      g_array_append_val (lines, line);
+    }
 }
 
 /* Place and direction @from_end pixels before the end. */
@@ -198,8 +300,9 @@ box_for (HlPoint at, HlPoint direction, int side, double width, double height)
 }
 
 static gboolean
-place_label (HlStateDiagram *diagram, HlPlotLabels *labels, const Line *line, const char *text, double *end)
+place_label (HlStateDiagram *diagram, HlPlotLabels *labels, const Line *line, double *end)
 {
+  const char *text = line->text;
   double width, height, best = G_MAXDOUBLE;
   HlBox best_box = { 0.0, 0.0, 0.0, 0.0 };
   HlPlotLabelPlace place;
@@ -228,7 +331,7 @@ place_label (HlStateDiagram *diagram, HlPlotLabels *labels, const Line *line, co
     return FALSE;
   hl_plot_labels_take (labels, &best_box, &place);
   {
-    HlDiagramText item = { HL_TEXT_PRESSURE, g_strdup (text), best_box };
+    HlDiagramText item = { line->kind, g_strdup (text), best_box };
     g_array_append_val (diagram->texts, item);
   }
   return TRUE;
@@ -242,7 +345,7 @@ cut_series (const HlStateDiagram *diagram, HlPlotSeries *series, double end)
   for (guint i = 1; i < hl_plot_series_n (series); i++)
     {
       HlPoint *a = &g_array_index (series->points, HlPoint, i - 1), *b = &g_array_index (series->points, HlPoint, i);
-      HlPoint pixel_a = pixel (diagram, a->x, a->y), pixel_b = pixel (diagram, b->x, b->y);
+      HlPoint pixel_a = pixel (diagram, *a), pixel_b = pixel (diagram, *b);
       double step = hypot (pixel_b.x - pixel_a.x, pixel_b.y - pixel_a.y);
       if (length + step > end && step > 1e-9)
         {
@@ -255,12 +358,10 @@ cut_series (const HlStateDiagram *diagram, HlPlotSeries *series, double end)
     }
 }
 
-/* Adds the lines of the isobars, and their ink to @labels; element-type Line, for the next function. */
-GArray *
-hl_state_diagram_add_isobars (HlStateDiagram *diagram, const HlCycle *cycle, HlPlotLabels *labels)
+static void
+add_isobars (HlStateDiagram *diagram, const HlCycle *cycle, GArray *lines)
 {
-  GArray *isobars = cycle_isobars (cycle), *lines = g_array_new (FALSE, FALSE, sizeof (Line));
-  g_array_set_clear_func (lines, line_clear);
+  GArray *isobars = cycle_isobars (cycle);
   if (isobars->len == 0)
     {
       g_array_unref (isobars);
@@ -268,27 +369,49 @@ hl_state_diagram_add_isobars (HlStateDiagram *diagram, const HlCycle *cycle, HlP
     }
   for (guint i = 0; i < isobars->len; i++)
     {
-      Line line = make_line (diagram, cycle, &g_array_index (isobars, Isobar, i));
+      Line line = make_isobar (diagram, cycle, &g_array_index (isobars, Isobar, i));
       g_array_append_val (lines, line);
-      hl_plot_layer_add (diagram->background, line.series);
-      for (guint k = 1; k < line.pixels->len; k++)
-        hl_plot_labels_add_line (labels, g_array_index (line.pixels, HlPoint, k - 1), g_array_index (line.pixels, HlPoint, k), 0.25);
     }
   g_array_unref (isobars);
+}
+
+/* Adds the lines of equal pressure or temperature, and their ink to @labels; element-type Line, for the next function. */
+GArray *
+hl_state_diagram_add_isolines (HlStateDiagram *diagram, const HlCycle *cycle, HlPlotLabels *labels)
+{
+  GArray *lines = g_array_new (FALSE, FALSE, sizeof (Line));
+  g_array_set_clear_func (lines, line_clear);
+  if (diagram->kind != HL_STATE_DIAGRAM_PH)
+    add_isobars (diagram, cycle, lines);
+  if (diagram->kind != HL_STATE_DIAGRAM_TS)
+    add_isotherms (diagram, cycle, lines);
+  for (guint i = 0; i < lines->len; i++)
+    {
+      const Line *line = &g_array_index (lines, Line, i);
+      hl_plot_layer_add (diagram->background, line->series);
+      for (guint k = 1; k < line->pixels->len; k++)
+        hl_plot_labels_add_line (labels, g_array_index (line->pixels, HlPoint, k - 1), g_array_index (line->pixels, HlPoint, k), 0.25);
+    }
   return lines;
 }
 
-/* The lowest and the highest pressure are named first, then from high to low; what finds no room stays without a name. */
-void
-hl_state_diagram_label_isobars (HlStateDiagram *diagram, const HlCycle *cycle, const GArray *lines, HlPlotLabels *labels)
+static void
+label_line (HlStateDiagram *diagram, const Line *line, HlPlotLabels *labels)
 {
+  double end;
+  if (line->pixels->len >= 2 && place_label (diagram, labels, line, &end))
+    cut_series (diagram, line->series, end);
+}
+
+/* The lowest and the highest pressure are named first, then from high to low, then temperatures; what finds no room stays without a name. */
+void
+hl_state_diagram_label_isolines (HlStateDiagram *diagram, const GArray *lines, HlPlotLabels *labels)
+{
+  guint n_isobars = 0;
   for (guint i = 0; i < lines->len; i++)
-    {
-      guint n = i == 0 ? 0 : lines->len - i;
-      const Line *line = &g_array_index (lines, Line, n);
-      g_autofree char *text = pressure_text (line->p, cycle->units);
-      double end;
-      if (line->pixels->len >= 2 && place_label (diagram, labels, line, text, &end))
-        cut_series (diagram, line->series, end);
-    }
+    n_isobars += g_array_index (lines, Line, i).kind == HL_TEXT_PRESSURE;
+  for (guint i = 0; i < n_isobars; i++)
+    label_line (diagram, &g_array_index (lines, Line, i == 0 ? 0 : n_isobars - i), labels);
+  for (guint i = n_isobars; i < lines->len; i++)
+    label_line (diagram, &g_array_index (lines, Line, i), labels);
 }

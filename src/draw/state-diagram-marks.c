@@ -70,7 +70,8 @@ join_ids (const HlCycle *cycle, const GArray *members)
 static HlPoint
 place_of (const HlStateDiagram *diagram, const HlState *state)
 {
-  return (HlPoint) { hl_plot_axis_to_pixel (&diagram->s_axis, state->s), hl_plot_axis_to_pixel (&diagram->T_axis, state->T) };
+  HlPoint at = hl_axes_state (diagram->kind, state);
+  return (HlPoint) { hl_plot_axis_to_pixel (&diagram->x_axis, at.x), hl_plot_axis_to_pixel (&diagram->y_axis, at.y) };
 }
 
 static HlPlotColour

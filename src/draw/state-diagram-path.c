@@ -1,4 +1,4 @@
-/* True paths of processes and isobars in the temperature-entropy plane, sampled until they look smooth.
+/* True paths of processes and isobars in the plane of a state diagram, sampled until they look smooth.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "draw/state-diagram-private.h"
 #include <math.h>
@@ -14,7 +14,8 @@ struct Path {
   const HlFluid    *fluid;
   HlState           from, to;
   double            factor;                /* of an expansion or compression: (h2 - h1) / (h2s - h1) */
-  const HlPlotAxis *s_axis, *T_axis;
+  HlStateDiagramKind kind;
+  const HlPlotAxis *x_axis, *y_axis;
   GArray           *points;
   gboolean          has_failed;
 };
@@ -56,6 +57,20 @@ at_isobar (const Path *path, double t, HlState *state)
   return hl_fluid_state_pT (path->fluid, path->from.p, path->from.T + t * (path->to.T - path->from.T), state);
 }
 
+/* Isotherm from the higher to the lower pressure: from and to carry p and T only. */
+static HlStatus
+at_isotherm (const Path *path, double t, HlState *state)
+{
+  return hl_fluid_state_pT (path->fluid, pressure_between (path, t), path->from.T, state);
+}
+
+/* The vertical of T-s and h-s. */
+static HlStatus
+at_constant_entropy (const Path *path, double t, HlState *state)
+{
+  return hl_fluid_state_ps (path->fluid, pressure_between (path, t), path->from.s, state);
+}
+
 static HlLook
 look_of (const HlState *state)
 {
@@ -73,7 +88,8 @@ add (Path *path, const HlState *state)
 static HlPoint
 pixel (const Path *path, const HlState *state)
 {
-  return (HlPoint) { hl_plot_axis_to_pixel (path->s_axis, state->s), hl_plot_axis_to_pixel (path->T_axis, state->T) };
+  HlPoint at = hl_axes_state (path->kind, state);
+  return (HlPoint) { hl_plot_axis_to_pixel (path->x_axis, at.x), hl_plot_axis_to_pixel (path->y_axis, at.y) };
 }
 
 static double
@@ -155,9 +171,9 @@ set_process (Path *path, const HlProcess *process)
 }
 
 GArray *
-hl_process_path (const HlProcess *process, const HlPlotAxis *s_axis, const HlPlotAxis *T_axis)
+hl_process_path (const HlProcess *process, HlStateDiagramKind kind, const HlPlotAxis *x_axis, const HlPlotAxis *y_axis)
 {
-  Path path = { .s_axis = s_axis, .T_axis = T_axis };
+  Path path = { .kind = kind, .x_axis = x_axis, .y_axis = y_axis };
   g_return_val_if_fail (process->fluid != NULL, NULL);
   path.points = g_array_new (FALSE, FALSE, sizeof (HlPathPoint));
   set_process (&path, process);
@@ -172,9 +188,9 @@ hl_process_path (const HlProcess *process, const HlPlotAxis *s_axis, const HlPlo
 }
 
 GArray *
-hl_isobar_path (const HlFluid *fluid, double p, double T_low, double T_high, const HlPlotAxis *s_axis, const HlPlotAxis *T_axis)
+hl_isobar_path (const HlFluid *fluid, double p, double T_low, double T_high, HlStateDiagramKind kind, const HlPlotAxis *x_axis, const HlPlotAxis *y_axis)
 {
-  Path path = { .at = at_isobar, .fluid = fluid, .s_axis = s_axis, .T_axis = T_axis };
+  Path path = { .at = at_isobar, .fluid = fluid, .kind = kind, .x_axis = x_axis, .y_axis = y_axis };
   HlState liquid, vapour;
   path.points = g_array_new (FALSE, FALSE, sizeof (HlPathPoint));
   if (hl_fluid_state_px (fluid, p, 0.0, &liquid) == HL_OK && hl_fluid_state_px (fluid, p, 1.0, &vapour) == HL_OK)
@@ -193,5 +209,57 @@ hl_isobar_path (const HlFluid *fluid, double p, double T_low, double T_high, con
     sample (&path);
   else
     add (&path, &path.from);
+  return path.points;
+}
+
+/* Samples one piece of an isotherm; where the equation does not reach its start, nothing. */
+static void
+add_isotherm_piece (Path *path, double T, double p_from, double p_to)
+{
+  if (!(p_from > p_to) || hl_fluid_state_pT (path->fluid, p_from, T, &path->from) != HL_OK
+      || hl_fluid_state_pT (path->fluid, p_to, T, &path->to) != HL_OK)
+    return;
+  sample (path);
+}
+
+GArray *
+hl_isotherm_path (const HlFluid *fluid, double T, double p_high, double p_low, HlStateDiagramKind kind, const HlPlotAxis *x_axis, const HlPlotAxis *y_axis, guint *n_kept)
+{
+  Path path = { .at = at_isotherm, .fluid = fluid, .kind = kind, .x_axis = x_axis, .y_axis = y_axis };
+  HlState liquid, vapour;
+  path.points = g_array_new (FALSE, FALSE, sizeof (HlPathPoint));
+  *n_kept = 0;
+  if (hl_fluid_state_Tx (fluid, T, 0.0, &liquid) == HL_OK && hl_fluid_state_Tx (fluid, T, 1.0, &vapour) == HL_OK)
+    {
+      /* The saturated ends are those of the dome; the pieces stop just short of them. */
+      if (isfinite (p_high))
+        {
+          add_isotherm_piece (&path, T, p_high, liquid.p * (1.0 + 1e-9));
+          add (&path, &liquid);
+        }
+      add (&path, &vapour);
+      *n_kept = path.points->len;
+      add_isotherm_piece (&path, T, vapour.p * (1.0 - 1e-9), p_low);
+    }
+  else if (isfinite (p_high))
+    add_isotherm_piece (&path, T, p_high, p_low);
+  return path.points;
+}
+
+GArray *
+hl_ideal_path (const HlProcess *process, HlStateDiagramKind kind, const HlPlotAxis *x_axis, const HlPlotAxis *y_axis)
+{
+  Path path = { .at = at_constant_entropy, .fluid = process->fluid, .from = process->from, .to = process->isentropic,
+                .kind = kind, .x_axis = x_axis, .y_axis = y_axis };
+  path.points = g_array_new (FALSE, FALSE, sizeof (HlPathPoint));
+  /* Straight in T-s and h-s: sampling would only cut it into pieces. */
+  if (kind == HL_STATE_DIAGRAM_PH)
+    sample (&path);
+  if (kind != HL_STATE_DIAGRAM_PH || path.has_failed)
+    {
+      g_array_set_size (path.points, 0);
+      add (&path, &path.from);
+      add (&path, &path.to);
+    }
   return path.points;
 }

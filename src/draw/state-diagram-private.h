@@ -16,6 +16,7 @@ typedef struct {
 typedef struct {
   const HlFluid *fluid;
   HlUnitSet      units;
+  HlStateDiagramKind kind;      /* T-s unless set */
   GArray        *points;        /* of HlCyclePoint */
   GArray        *processes;     /* of HlProcess; none of a service circuit */
 } HlCycle;
@@ -27,11 +28,26 @@ G_DEFINE_AUTOPTR_CLEANUP_FUNC (HlCycle, hl_cycle_free)
 /* Saturation line of a fluid from the triple point to the critical point; computed on first use and kept. */
 typedef struct {
   guint   n;
-  double *T, *s_liquid, *s_vapour;    /* [n], rising T; the last one is the critical point */
+  double *T, *p, *s_liquid, *s_vapour, *h_liquid, *h_vapour;    /* [n], rising T; the last one is the critical point */
 } HlDome;
 const HlDome *hl_dome_of (const HlFluid *fluid);
 /* Entropy of the saturation line at @T between two entries of the dome, for drawing; quality 0 to 1. */
 double        hl_dome_entropy (const HlDome *dome, double T, double quality);
+/* The same point where a diagram shows it. */
+HlPoint       hl_dome_point   (const HlDome *dome, HlStateDiagramKind kind, double T, double quality);
+HlPoint       hl_dome_nth     (const HlDome *dome, HlStateDiagramKind kind, guint n, double quality);
+
+/* Where a state lies on the axes of a diagram. */
+static inline HlPoint
+hl_axes_point (HlStateDiagramKind kind, double p, double T, double h, double s)
+{
+  return (HlPoint) { kind == HL_STATE_DIAGRAM_PH ? h : s, kind == HL_STATE_DIAGRAM_TS ? T : kind == HL_STATE_DIAGRAM_HS ? h : p };
+}
+static inline HlPoint
+hl_axes_state (HlStateDiagramKind kind, const HlState *state)
+{
+  return hl_axes_point (kind, state->p, state->T, state->h, state->s);
+}
 
 /* True path of a process in the diagram. */
 typedef struct {
@@ -40,9 +56,14 @@ typedef struct {
 } HlPathPoint;
 /* Samples adaptively until the picture deviates by less than a fraction of a pixel; element-type HlPathPoint; never NULL.
  * Where a property call fails the path is the straight line between its ends. */
-GArray *hl_process_path (const HlProcess *process, const HlPlotAxis *s_axis, const HlPlotAxis *T_axis);
+GArray *hl_process_path (const HlProcess *process, HlStateDiagramKind kind, const HlPlotAxis *x_axis, const HlPlotAxis *y_axis);
 /* The isobar from the saturated liquid (above the critical pressure: from @T_low) to @T_high. */
-GArray *hl_isobar_path  (const HlFluid *fluid, double p, double T_low, double T_high, const HlPlotAxis *s_axis, const HlPlotAxis *T_axis);
+GArray *hl_isobar_path  (const HlFluid *fluid, double p, double T_low, double T_high, HlStateDiagramKind kind, const HlPlotAxis *x_axis, const HlPlotAxis *y_axis);
+/* The isotherm from @p_high down to @p_low, across the dome where it meets it; NaN as @p_high: from the saturated vapour.
+ * @n_kept: (out): points up to and with the saturated vapour, 0 where there is none. */
+GArray *hl_isotherm_path (const HlFluid *fluid, double T, double p_high, double p_low, HlStateDiagramKind kind, const HlPlotAxis *x_axis, const HlPlotAxis *y_axis, guint *n_kept);
+/* The drop at constant entropy from the start of a process to its ideal end. */
+GArray *hl_ideal_path    (const HlProcess *process, HlStateDiagramKind kind, const HlPlotAxis *x_axis, const HlPlotAxis *y_axis);
 
 typedef enum {
   HL_MARK_STATE,                /* a numbered state, ringed */
@@ -59,7 +80,7 @@ typedef struct {
   HlPlotLabelPlace label;
 } HlMark;
 
-typedef enum { HL_TEXT_PRESSURE, HL_TEXT_QUALITY } HlTextKind;
+typedef enum { HL_TEXT_PRESSURE, HL_TEXT_QUALITY, HL_TEXT_ISOTHERM } HlTextKind;
 typedef struct {
   HlTextKind kind;
   char      *text;
@@ -67,11 +88,13 @@ typedef struct {
 } HlDiagramText;
 
 struct _HlStateDiagram {
+  HlStateDiagramKind kind;
   double         width, height;
   double         text_size, number_size;   /* pixels */
-  HlPlotAxis     s_axis, T_axis;
+  HlPlotAxis     x_axis, y_axis;
   HlBox          frame;                    /* plot area in pixels */
   const HlDome  *dome;
+  HlPoint        critical;                 /* pixels */
   HlPlotSeries  *outline;                  /* the saturation line, left to right */
   HlPlotLayer   *background;               /* quality lines, isobars */
   HlPlotLayer   *paths;                    /* processes, and isentropic drops */
@@ -86,8 +109,8 @@ void            hl_state_diagram_add_dome   (HlStateDiagram *diagram);
 void            hl_state_diagram_add_paths  (HlStateDiagram *diagram, const HlCycle *cycle);
 /* States closer than @within pixels share a dot. */
 void            hl_state_diagram_add_marks  (HlStateDiagram *diagram, const HlCycle *cycle, double within);
-GArray         *hl_state_diagram_add_isobars   (HlStateDiagram *diagram, const HlCycle *cycle, HlPlotLabels *labels);
-void            hl_state_diagram_label_isobars (HlStateDiagram *diagram, const HlCycle *cycle, const GArray *lines, HlPlotLabels *labels);
+GArray         *hl_state_diagram_add_isolines   (HlStateDiagram *diagram, const HlCycle *cycle, HlPlotLabels *labels);
+void            hl_state_diagram_label_isolines (HlStateDiagram *diagram, const GArray *lines, HlPlotLabels *labels);
 /* FALSE where some state's number found no room. */
 gboolean        hl_state_diagram_add_texts  (HlStateDiagram *diagram, const HlCycle *cycle);
 void            hl_state_diagram_clear_marks (HlStateDiagram *diagram);

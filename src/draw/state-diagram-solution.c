@@ -56,8 +56,15 @@ hl_cycle_from_solution (const HlSolution *solution, HlUnitSet units)
 HlStateDiagram *
 hl_state_diagram_new (const HlSolution *solution, HlUnitSet units, double width, double height)
 {
+  return hl_state_diagram_new_of_kind (solution, HL_STATE_DIAGRAM_TS, units, width, height);
+}
+
+HlStateDiagram *
+hl_state_diagram_new_of_kind (const HlSolution *solution, HlStateDiagramKind kind, HlUnitSet units, double width, double height)
+{
   g_autoptr (HlCycle) cycle = NULL;
-  g_return_val_if_fail (solution != NULL, NULL);
+  g_return_val_if_fail (solution != NULL && kind < HL_N_STATE_DIAGRAMS, NULL);
   cycle = hl_cycle_from_solution (solution, units);
+  cycle->kind = kind;
   return hl_state_diagram_from_cycle (cycle, width, height);
 }

@@ -23,8 +23,8 @@ add_ink (const HlStateDiagram *diagram, HlPlotLabels *labels, const HlPlotSeries
   for (guint i = 1; i < hl_plot_series_n (series); i++)
     {
       const HlPoint *a = hl_plot_series_point (series, i - 1), *b = hl_plot_series_point (series, i);
-      HlPoint from = { hl_plot_axis_to_pixel (&diagram->s_axis, a->x), hl_plot_axis_to_pixel (&diagram->T_axis, a->y) };
-      HlPoint to = { hl_plot_axis_to_pixel (&diagram->s_axis, b->x), hl_plot_axis_to_pixel (&diagram->T_axis, b->y) };
+      HlPoint from = { hl_plot_axis_to_pixel (&diagram->x_axis, a->x), hl_plot_axis_to_pixel (&diagram->y_axis, a->y) };
+      HlPoint to = { hl_plot_axis_to_pixel (&diagram->x_axis, b->x), hl_plot_axis_to_pixel (&diagram->y_axis, b->y) };
       hl_plot_labels_add_line (labels, from, to, weight);
     }
 }
@@ -133,42 +133,81 @@ place_marks (HlStateDiagram *diagram, HlPlotLabels *labels, HlMarkKind kind)
     place_one (diagram, labels, g_array_index (turns, Turn, i).mark);
 }
 
-/* "x = 0.2", "0.4" ... centred on their lines, all at one temperature where that is possible. */
-static void
-place_qualities (HlStateDiagram *diagram, HlPlotLabels *labels)
+/* The coldest point of the dome inside the axes. */
+static double
+lowest_shown (const HlStateDiagram *diagram)
 {
-  static const double qualities[] = { 0.2, 0.4, 0.6, 0.8 };
   const HlDome *dome = diagram->dome;
-  double T_top = dome->T[dome->n - 1], T_low = MAX (dome->T[0], diagram->T_axis.low), best = G_MAXDOUBLE;
-  HlBox best_boxes[G_N_ELEMENTS (qualities)];
+  guint n = 0;
+  while (n + 1 < dome->n && hl_dome_nth (dome, diagram->kind, n, 0.5).y < diagram->y_axis.low)
+    n++;
+  return diagram->kind == HL_STATE_DIAGRAM_TS ? MAX (dome->T[0], diagram->y_axis.low) : dome->T[n];
+}
+
+#define N_NAMED 4
+
+static const double named_qualities[N_NAMED] = { 0.2, 0.4, 0.6, 0.8 };
+
+static char *
+quality_text (guint n)
+{
+  return g_strdup_printf (n == 0 ? "x = %.1f" : "%.1f", named_qualities[n]);
+}
+
+static HlBox
+quality_box (const HlStateDiagram *diagram, guint n, double T)
+{
+  g_autofree char *text = quality_text (n);
+  HlPoint at = hl_dome_point (diagram->dome, diagram->kind, T, named_qualities[n]);
+  double width, height;
+  hl_state_diagram_text_size (text, 0.9 * diagram->text_size, FALSE, &width, &height);
+  return (HlBox) { hl_plot_axis_to_pixel (&diagram->x_axis, at.x) - width / 2.0,
+                   hl_plot_axis_to_pixel (&diagram->y_axis, at.y) - height / 2.0, width, height };
+}
+
+/* Names the qualities @first to @last, centred on their lines, all at the temperature that suits best. */
+static void
+place_row (HlStateDiagram *diagram, HlPlotLabels *labels, guint first, guint last)
+{
+  const HlDome *dome = diagram->dome;
+  double T_top = dome->T[dome->n - 1], T_low = lowest_shown (diagram), best = G_MAXDOUBLE;
+  HlBox best_boxes[N_NAMED];
   for (double level = 0.06; level < 0.7; level += 0.01)
     {
       double T = T_low + level * (T_top - T_low), cost = 3.0 * level;
-      HlBox boxes[G_N_ELEMENTS (qualities)];
-      guint n_free = 0;
-      for (guint i = 0; i < G_N_ELEMENTS (qualities); i++)
+      HlBox boxes[N_NAMED];
+      gboolean is_free = TRUE;
+      for (guint i = first; i <= last && is_free; i++)
         {
-          g_autofree char *text = g_strdup_printf (i == 0 ? "x = %.1f" : "%.1f", qualities[i]);
-          double x = hl_plot_axis_to_pixel (&diagram->s_axis, hl_dome_entropy (dome, T, qualities[i])), width, height;
-          hl_state_diagram_text_size (text, 0.9 * diagram->text_size, FALSE, &width, &height);
-          boxes[i] = (HlBox) { x - width / 2.0, hl_plot_axis_to_pixel (&diagram->T_axis, T) - height / 2.0, width, height };
-          n_free += hl_plot_labels_is_free (labels, &boxes[i]);
-          cost += hl_plot_labels_cost (labels, &boxes[i]);
+          boxes[i] = quality_box (diagram, i, T);
+          is_free = hl_plot_labels_is_free (labels, &boxes[i]);
+          cost += is_free ? hl_plot_labels_cost (labels, &boxes[i]) : 0.0;
         }
-      if (n_free == G_N_ELEMENTS (qualities) && cost < best && boxes[3].x - boxes[0].x > 5.0 * boxes[0].width)
-        {
-          best = cost;
-          for (guint i = 0; i < n_free; i++)
-            best_boxes[i] = boxes[i];
-        }
+      /* In h-s the lines of low quality run so close that a name would belong to none of them. */
+      if (!is_free || cost >= best || (last == first && cost > 12.0) || (last > first && boxes[last].x - boxes[first].x <= 5.0 * boxes[first].width))
+        continue;
+      best = cost;
+      for (guint i = first; i <= last; i++)
+        best_boxes[i] = boxes[i];
     }
-  for (guint i = 0; best < G_MAXDOUBLE && i < G_N_ELEMENTS (qualities); i++)
+  for (guint i = first; best < G_MAXDOUBLE && i <= last; i++)
     {
-      HlDiagramText text = { HL_TEXT_QUALITY, g_strdup_printf (i == 0 ? "x = %.1f" : "%.1f", qualities[i]), best_boxes[i] };
+      HlDiagramText text = { HL_TEXT_QUALITY, quality_text (i), best_boxes[i] };
       HlPlotLabelPlace place;
       hl_plot_labels_take (labels, &best_boxes[i], &place);
       g_array_append_val (diagram->texts, text);
     }
+}
+
+/* "x = 0.2", "0.4" ... in a row where one temperature is a level line; in h-s each finds its own place. */
+static void
+place_qualities (HlStateDiagram *diagram, HlPlotLabels *labels)
+{
+  if (diagram->kind != HL_STATE_DIAGRAM_HS)
+    place_row (diagram, labels, 0, N_NAMED - 1);
+  else
+    for (guint i = 0; i < N_NAMED; i++)
+      place_row (diagram, labels, i, i);
 }
 
 static void
@@ -188,14 +227,15 @@ hl_state_diagram_add_texts (HlStateDiagram *diagram, const HlCycle *cycle)
   for (guint i = 0; i < hl_plot_layer_n (diagram->paths); i++)
     add_ink (diagram, labels, hl_plot_layer_series (diagram->paths, i), 1.0);
   add_ink (diagram, labels, diagram->outline, 0.7);
-  lines = hl_state_diagram_add_isobars (diagram, cycle, labels);
+  lines = hl_state_diagram_add_isolines (diagram, cycle, labels);
+  hl_plot_labels_add_block (labels, &(HlBox) { diagram->critical.x - 3.5, diagram->critical.y - 3.5, 7.0, 7.0 }, -1);
   for (guint i = 0; i < diagram->marks->len; i++)
     {
       HlBox box = box_of_mark (&g_array_index (diagram->marks, HlMark, i));
       hl_plot_labels_add_block (labels, &box, (int) i);
     }
   place_marks (diagram, labels, HL_MARK_STATE);
-  hl_state_diagram_label_isobars (diagram, cycle, lines, labels);
+  hl_state_diagram_label_isolines (diagram, lines, labels);
   place_marks (diagram, labels, HL_MARK_IDEAL);
   place_qualities (diagram, labels);
   for (guint i = 0; i < diagram->marks->len; i++)

@@ -1,7 +1,52 @@
-/* The temperature-entropy diagram: what it is made from, and where things lie for the pointer.
+/* State diagrams: what it is made from, and where things lie for the pointer.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "draw/state-diagram-private.h"
+#include "plant/i18n.h"
 #include <math.h>
+#include <string.h>
+
+static const struct { const char *id, *sign, *title; HlDimension across, up; } kinds[HL_N_STATE_DIAGRAMS] = {
+  [HL_STATE_DIAGRAM_TS] = { "ts", "T-s", N_("Temperature-entropy diagram"), HL_DIMENSION_ENTROPY, HL_DIMENSION_TEMPERATURE },
+  [HL_STATE_DIAGRAM_HS] = { "hs", "h-s", N_("Enthalpy-entropy diagram"), HL_DIMENSION_ENTROPY, HL_DIMENSION_ENTHALPY },
+  [HL_STATE_DIAGRAM_PH] = { "ph", "p-h", N_("Pressure-enthalpy diagram"), HL_DIMENSION_ENTHALPY, HL_DIMENSION_PRESSURE },
+};
+
+const char *
+hl_state_diagram_sign (HlStateDiagramKind kind)
+{
+  return kinds[kind].sign;
+}
+
+const char *
+hl_state_diagram_id (HlStateDiagramKind kind)
+{
+  return kinds[kind].id;
+}
+
+const char *
+hl_state_diagram_title (HlStateDiagramKind kind)
+{
+  return _(kinds[kind].title);
+}
+
+gboolean
+hl_state_diagram_kind_from_id (const char *id, HlStateDiagramKind *kind)
+{
+  for (guint i = 0; i < HL_N_STATE_DIAGRAMS; i++)
+    if (strcmp (kinds[i].id, id) == 0)
+      {
+        *kind = (HlStateDiagramKind) i;
+        return TRUE;
+      }
+  return FALSE;
+}
+
+void
+hl_state_diagram_dimensions (HlStateDiagramKind kind, HlDimension *across, HlDimension *up)
+{
+  *across = kinds[kind].across;
+  *up = kinds[kind].up;
+}
 
 HlCycle *
 hl_cycle_new (const HlFluid *fluid, HlUnitSet units)
@@ -67,20 +112,20 @@ hl_state_diagram_stream_at (const HlStateDiagram *diagram, double x, double y, d
 }
 
 gboolean
-hl_state_diagram_to_state (const HlStateDiagram *diagram, double x, double y, double *s, double *T)
+hl_state_diagram_to_state (const HlStateDiagram *diagram, double x, double y, double *across, double *up)
 {
   g_return_val_if_fail (diagram != NULL, FALSE);
   if (!is_in_box (&diagram->frame, x, y))
     return FALSE;
-  *s = hl_plot_axis_from_pixel (&diagram->s_axis, x);
-  *T = hl_plot_axis_from_pixel (&diagram->T_axis, y);
+  *across = hl_plot_axis_from_pixel (&diagram->x_axis, x);
+  *up = hl_plot_axis_from_pixel (&diagram->y_axis, y);
   return TRUE;
 }
 
 void
-hl_state_diagram_to_pixel (const HlStateDiagram *diagram, double s, double T, double *x, double *y)
+hl_state_diagram_to_pixel (const HlStateDiagram *diagram, double across, double up, double *x, double *y)
 {
   g_return_if_fail (diagram != NULL);
-  *x = hl_plot_axis_to_pixel (&diagram->s_axis, s);
-  *y = hl_plot_axis_to_pixel (&diagram->T_axis, T);
+  *x = hl_plot_axis_to_pixel (&diagram->x_axis, across);
+  *y = hl_plot_axis_to_pixel (&diagram->y_axis, up);
 }

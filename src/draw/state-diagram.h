@@ -1,4 +1,4 @@
-/* The temperature-entropy diagram: dome, isobars, quality lines, process paths, numbered states.
+/* State diagrams (T-s, h-s, log p-h): dome, isobars, quality lines, process paths, numbered states.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #pragma once
 #include "draw/theme.h"
@@ -6,13 +6,28 @@ G_BEGIN_DECLS
 
 /* What the diagram shows and where: computed once per solution and size, drawn as often as needed. */
 typedef struct _HlStateDiagram HlStateDiagram;
-HlStateDiagram *hl_state_diagram_new   (const HlSolution *solution, HlUnitSet units, double width, double height);   /* pixels */
+typedef enum {
+  HL_STATE_DIAGRAM_TS,          /* temperature over entropy */
+  HL_STATE_DIAGRAM_HS,          /* enthalpy over entropy */
+  HL_STATE_DIAGRAM_PH,          /* pressure, by decades, over enthalpy */
+  HL_N_STATE_DIAGRAMS
+} HlStateDiagramKind;
+/* "T-s" for choosers; the word of the batch program, "ts"; "Temperature-entropy diagram", translated. */
+const char     *hl_state_diagram_sign  (HlStateDiagramKind kind);
+const char     *hl_state_diagram_id    (HlStateDiagramKind kind);
+const char     *hl_state_diagram_title (HlStateDiagramKind kind);
+gboolean        hl_state_diagram_kind_from_id (const char *id, HlStateDiagramKind *kind);
+
+HlStateDiagram *hl_state_diagram_new   (const HlSolution *solution, HlUnitSet units, double width, double height);   /* T-s; pixels */
+HlStateDiagram *hl_state_diagram_new_of_kind (const HlSolution *solution, HlStateDiagramKind kind, HlUnitSet units, double width, double height);
 void            hl_state_diagram_free  (HlStateDiagram *diagram);
 /* @stale: drawn grey (last solve failed). @selected_stream: index ringed, or -1. */
 void            hl_state_diagram_draw  (const HlStateDiagram *diagram, cairo_t *cr, const HlTheme *theme, gboolean is_stale, int selected_stream);
 int             hl_state_diagram_stream_at (const HlStateDiagram *diagram, double x, double y, double within);   /* -1: none */
-/* Coordinates to (s [J/(kg K)], T [K]) and back; FALSE outside the axes. */
-gboolean        hl_state_diagram_to_state (const HlStateDiagram *diagram, double x, double y, double *s, double *T);
-void            hl_state_diagram_to_pixel (const HlStateDiagram *diagram, double s, double T, double *x, double *y);
+/* Pixels to what the axes show and back; FALSE outside the axes.  T-s: s [J/(kg K)], T [K]; h-s: s, h [J/kg]; p-h: h, p [Pa]. */
+gboolean        hl_state_diagram_to_state (const HlStateDiagram *diagram, double x, double y, double *across, double *up);
+void            hl_state_diagram_to_pixel (const HlStateDiagram *diagram, double across, double up, double *x, double *y);
+/* Dimensions of the two axes, across and up. */
+void            hl_state_diagram_dimensions (HlStateDiagramKind kind, HlDimension *across, HlDimension *up);
 G_DEFINE_AUTOPTR_CLEANUP_FUNC (HlStateDiagram, hl_state_diagram_free)
 G_END_DECLS

@@ -20,6 +20,25 @@ add (HlProcessSink *sink, HlProcess *process, const HlNodeResult *flow)
 }
 
 void
+hl_process_add_trapped (HlProcessSink *sink, int from, int to)
+{
+  guint n = sink->out->len;
+  HlState before_trap;
+  hl_process_add (sink, HL_PROCESS_COOLING, from, to);
+  if (sink->out->len == n)
+    return;
+  HlProcess *cooling = &g_array_index (sink->out, HlProcess, n);
+  if (!(cooling->to.p < cooling->from.p * (1.0 - 1e-9))
+      || hl_fluid_state_ph (cooling->fluid, cooling->from.p, cooling->to.h, &before_trap) != HL_OK)
+    return;
+  HlProcess trap = *cooling;
+  trap.kind = HL_PROCESS_THROTTLING;
+  trap.from_stream = cooling->to_stream = -1;
+  trap.from = cooling->to = before_trap;
+  g_array_append_val (sink->out, trap);
+}
+
+void
 hl_process_add (HlProcessSink *sink, HlProcessKind kind, int from, int to)
 {
   if (from < 0 || to < 0)

@@ -28,4 +28,7 @@ void hl_process_add      (HlProcessSink *sink, HlProcessKind kind, int from, int
 void hl_process_add_to   (HlProcessSink *sink, HlProcessKind kind, int from, const HlState *to);
 void hl_process_add_from (HlProcessSink *sink, HlProcessKind kind, const HlState *from, int to);
 gboolean hl_process_own  (const HlProcessSink *sink, const char *key, double *value);   /* SI */
+/* Cooling at the pressure of @from, then a drop to that of @to at constant enthalpy: a steam trap behind the heating surface.
+ * Where the pressure does not fall, or that state is not known, plain cooling. */
+void hl_process_add_trapped (HlProcessSink *sink, int from, int to);
 G_END_DECLS

@@ -47,6 +47,27 @@ place_of (Fixture *f, guint stream, double *x, double *y)
   hl_state_diagram_to_pixel (diagram, result.state.s, result.state.T, x, y);
 }
 
+/* In the p-h diagram states lie elsewhere, and are found there. */
+static void
+test_the_chooser_changes_the_axes (Fixture *f, gconstpointer data)
+{
+  HlSolution *solution = hl_session_solution (f->session);
+  HlStreamResult result;
+  double x, y;
+
+  hl_diagram_view_set_kind (HL_DIAGRAM_VIEW (f->view), HL_STATE_DIAGRAM_PH);
+  gtk_test_widget_wait_for_draw (f->window);
+  g_autoptr (HlStateDiagram) diagram = hl_state_diagram_new_of_kind (solution, HL_STATE_DIAGRAM_PH, HL_UNITS_METRIC,
+                                                                     gtk_widget_get_width (f->view), gtk_widget_get_height (f->view));
+  hl_solution_stream (solution, 1, &result);
+  hl_state_diagram_to_pixel (diagram, result.state.h, result.state.p, &x, &y);
+  g_signal_emit_by_name (controller_of (f->view, GTK_TYPE_GESTURE_CLICK), "pressed", 1, x, y);
+  g_assert_true (hl_session_is_selected (f->session, "2"));
+  g_signal_emit_by_name (controller_of (f->view, GTK_TYPE_EVENT_CONTROLLER_MOTION), "motion", x / 2.0, y / 2.0);
+  g_assert_true (shows_text (f->view, " bar"));
+  g_assert_true (shows_text (f->view, "kJ/kg"));
+}
+
 static void
 test_click_on_a_state_selects_its_stream (Fixture *f, gconstpointer data)
 {
@@ -110,6 +131,7 @@ main (int argc, char **argv)
     return 0;
 #define ADD(name, func) g_test_add ("/app/diagram-view/" name, Fixture, NULL, set_up, func, tear_down)
   ADD ("click on a state selects its stream", test_click_on_a_state_selects_its_stream);
+  ADD ("the chooser changes the axes", test_the_chooser_changes_the_axes);
   ADD ("pointer reads off", test_pointer_reads_off);
   ADD ("empty sheet says so", test_empty_sheet_says_so);
   ADD ("failure keeps the last good states", test_failure_keeps_the_last_good_states);

@@ -158,12 +158,13 @@ def test_every_output_goes_to_files():
     assert len(rows) == 5 and all(len(row) == len(rows[0]) for row in rows)
     with open("a.txt", encoding="utf-8") as file:
         assert "480.0" in file.read()
-    for name in ("a.svg", "ts.svg"):
+    batch("solve", plant("loop.heatloom"), "--diagram", "hs", "hs.svg", "--diagram", "ph", "ph.svg")       # several at once
+    for name in ("a.svg", "ts.svg", "hs.svg", "ph.svg"):
         assert ElementTree.parse(name).getroot().tag == "{http://www.w3.org/2000/svg}svg"
 
 
 def test_pictures_have_the_format_of_their_ending():
-    for kind in (["--drawing"], ["--diagram", "ts"]):
+    for kind in (["--drawing"], ["--diagram", "ts"], ["--diagram", "hs"], ["--diagram", "ph"]):
         for ending, start in (("svg", b"<?xml"), ("pdf", b"%PDF-"), ("png", b"\x89PNG\r\n\x1a\n")):
             batch("solve", plant("loop.heatloom"), *kind, f"x.{ending}")
             with open(f"x.{ending}", "rb") as file:

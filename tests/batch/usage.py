@@ -21,7 +21,7 @@ def test_every_command_has_its_help():
         assert "Caution" in out
         assert "xlsx" not in out and "--report" not in out
     out, _ = batch("solve", "--help")
-    for option in ("--set ADDRESS=VALUE", "--json FILE", "--csv FILE", "--ledger FILE", "--drawing FILE", "--diagram ts FILE"):
+    for option in ("--set ADDRESS=VALUE", "--json FILE", "--csv FILE", "--ledger FILE", "--drawing FILE", "--diagram ts|hs|ph FILE"):
         assert option in out, option
 
 
@@ -56,11 +56,11 @@ def test_words_too_few_and_too_many():
 
 def test_values_of_options():
     refused("solve", "x", "--json", status=2, says=["--json", "FILE"])
-    refused("solve", "x", "--diagram", "ts", status=2, says=["--diagram", "ts FILE"])
+    refused("solve", "x", "--diagram", "ts", status=2, says=["--diagram", "ts|hs|ph FILE"])
     refused("solve", "x", "--json", "a", "--json", "b", status=2, says="twice")
     refused("check", "x", "--strict=yes", status=2, says="--strict")
     refused("solve", "x", "--json", "-", "--csv", "-", status=2, says="standard output")
-    refused("solve", "x", "--diagram", "hs", "a.svg", status=2, says=["hs", "ts"])
+    refused("solve", "x", "--diagram", "pv", "a.svg", status=2, says=["pv", "ts, hs and ph"])
     refused("solve", "x", "--drawing", "a.jpeg", status=2, says=["a.jpeg", "svg"])
 
 

@@ -76,6 +76,33 @@ test_title_names_the_unit (void)
   g_assert_cmpstr (ratio, ==, "quality");
 }
 
+/* Equal ratios, equal distances; ticks at 1, 2, 5 or fewer, apart, without needless zeros. */
+static void
+test_axis_by_decades (void)
+{
+  static const double ranges[][2] = { { 1e3, 1e7 }, { 5e4, 6e5 }, { 6e2, 3e8 } };
+  for (guint i = 0; i < G_N_ELEMENTS (ranges); i++)
+    for (double length = 100.0; length < 1500.0; length *= 1.7)
+      {
+        HlPlotAxis axis;
+        hl_plot_axis_set_log (&axis, HL_DIMENSION_PRESSURE, HL_UNITS_METRIC, ranges[i][0], ranges[i][1], 20.0 + length, 20.0, 24.0);
+        g_assert_cmpfloat (axis.low, <=, ranges[i][0] * 1.000001);
+        g_assert_cmpfloat (axis.high, >=, ranges[i][1] * 0.999999);
+        g_assert_cmpfloat_with_epsilon (hl_plot_axis_to_pixel (&axis, axis.low), 20.0 + length, 1e-9);
+        g_assert_cmpfloat_with_epsilon (hl_plot_axis_to_pixel (&axis, axis.high), 20.0, 1e-9);
+        g_assert_cmpfloat_with_epsilon (hl_plot_axis_to_pixel (&axis, sqrt (axis.low * axis.high)), 20.0 + length / 2.0, 1e-9);
+        g_assert_cmpfloat_with_epsilon (hl_plot_axis_from_pixel (&axis, hl_plot_axis_to_pixel (&axis, 2e5)), 2e5, 1e-6);
+        g_assert_cmpuint (axis.n_ticks, >=, 1);
+        for (guint k = 0; k < axis.n_ticks; k++)
+          {
+            double shown = g_ascii_strtod (axis.tick_texts[k], NULL);
+            g_assert_cmpfloat_with_epsilon (hl_units_from_display (shown, HL_DIMENSION_PRESSURE, HL_UNITS_METRIC) / axis.ticks[k], 1.0, 1e-9);
+            if (k > 0)
+              g_assert_cmpfloat (hl_plot_axis_to_pixel (&axis, axis.ticks[k - 1]) - hl_plot_axis_to_pixel (&axis, axis.ticks[k]), >, 20.0);
+          }
+      }
+}
+
 int
 main (int argc, char **argv)
 {
@@ -84,5 +111,6 @@ main (int argc, char **argv)
   g_test_add_func ("/draw/plot-axis/range-holds-what-was-asked-for", test_range_holds_what_was_asked_for_and_little_more);
   g_test_add_func ("/draw/plot-axis/pixels-and-values-are-inverse", test_pixels_and_values_are_inverse);
   g_test_add_func ("/draw/plot-axis/title-names-the-unit", test_title_names_the_unit);
+  g_test_add_func ("/draw/plot-axis/by-decades", test_axis_by_decades);
   return g_test_run ();
 }

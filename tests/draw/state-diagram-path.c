@@ -50,7 +50,7 @@ distance_to_path (const Fixture *fixture, const GArray *path, HlPoint at)
 static GArray *
 path_of (const Fixture *fixture, const HlProcess *process)
 {
-  return hl_process_path (process, &fixture->diagram->s_axis, &fixture->diagram->T_axis);
+  return hl_process_path (process, HL_STATE_DIAGRAM_TS, &fixture->diagram->x_axis, &fixture->diagram->y_axis);
 }
 
 /* What holds for every path: it starts and ends at its states, and T and s of a sample belong to its p and h. */
@@ -233,7 +233,7 @@ test_isobars_from_boiling_to_the_top (Fixture *fixture, gconstpointer data)
   for (guint i = 0; i < G_N_ELEMENTS (pressures); i++)
     {
       const HlStateDiagram *diagram = fixture->diagram;
-      GArray *path = hl_isobar_path (hl_fluid_water (), pressures[i], 280.0, 850.0, &diagram->s_axis, &diagram->T_axis);
+      GArray *path = hl_isobar_path (hl_fluid_water (), pressures[i], 280.0, 850.0, HL_STATE_DIAGRAM_TS, &diagram->x_axis, &diagram->y_axis);
       const HlPathPoint *first = &g_array_index (path, HlPathPoint, 0);
       HlSaturation saturation;
       g_assert_cmpuint (path->len, >, 5);

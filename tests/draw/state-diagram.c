@@ -78,7 +78,117 @@ test_an_empty_plant_shows_dome_and_pressures (void)
   g_assert_true (has_text (diagram, "10 bar"));
   g_assert_true (has_text (diagram, "100 bar"));
   /* The top of the dome lies inside, with air above. */
-  g_assert_cmpfloat (diagram->T_axis.high, >, 647.096 + 10.0);
+  g_assert_cmpfloat (diagram->y_axis.high, >, 647.096 + 10.0);
+}
+
+/* The other two diagrams stand the same checks; every state lies where its values say. */
+static void
+check_kind (HlCycle *cycle, HlStateDiagramKind kind, guint may_miss)
+{
+  cycle->kind = kind;
+  for (guint i = 0; i < cycle->points->len; i++)
+    {
+      g_autoptr (HlStateDiagram) diagram = hl_state_diagram_from_cycle (cycle, 960.0, 600.0);
+      const HlState *state = &cycle_point (cycle, i)->state;
+      double x, y, across = 0.0, up = 0.0;
+      hl_state_diagram_to_pixel (diagram, kind == HL_STATE_DIAGRAM_HS ? state->s : state->h, kind == HL_STATE_DIAGRAM_HS ? state->h : state->p, &x, &y);
+      g_assert_true (hl_state_diagram_to_state (diagram, x, y, &across, &up));
+      g_assert_cmpfloat_with_epsilon (across, kind == HL_STATE_DIAGRAM_HS ? state->s : state->h, 1e-3);
+      g_assert_cmpfloat_with_epsilon (up, kind == HL_STATE_DIAGRAM_HS ? state->h : state->p, 1e-3);
+      g_assert_cmpint (hl_state_diagram_stream_at (diagram, x, y, 8.0), >=, 0);
+    }
+  check_cycle (cycle, may_miss);
+}
+
+static void
+test_other_kinds (void)
+{
+  for (int kind = HL_STATE_DIAGRAM_HS; kind < HL_N_STATE_DIAGRAMS; kind++)
+    {
+      for (int units = 0; units < HL_N_UNIT_SETS; units++)
+        {
+          check_kind (cycle_simple ((HlUnitSet) units), (HlStateDiagramKind) kind, 0);
+          check_kind (cycle_industry ((HlUnitSet) units), (HlStateDiagramKind) kind, 0);
+          check_kind (cycle_reheat ((HlUnitSet) units, 168e5, 811.15), (HlStateDiagramKind) kind, 0);
+          check_kind (cycle_reheat ((HlUnitSet) units, 260e5, 873.15), (HlStateDiagramKind) kind, 0);
+          check_kind (hl_cycle_new (NULL, (HlUnitSet) units), (HlStateDiagramKind) kind, 0);
+        }
+      for (guint32 seed = 1; seed <= 12; seed++)
+        check_kind (cycle_random (seed, 4 + seed % 17), (HlStateDiagramKind) kind, 0);
+    }
+}
+
+/* p-h: isotherms instead of isobars; h-s: both.  Points of an isotherm have its temperature. */
+static void
+test_lines_of_other_kinds (void)
+{
+  g_autoptr (HlCycle) cycle = cycle_simple (HL_UNITS_METRIC);
+  cycle->kind = HL_STATE_DIAGRAM_PH;
+  {
+    g_autoptr (HlStateDiagram) diagram = hl_state_diagram_from_cycle (cycle, 960.0, 600.0);
+    guint n_kept;
+    GArray *path = hl_isotherm_path (hl_fluid_water (), 500.0, 100e5, 1e4, HL_STATE_DIAGRAM_PH, &diagram->x_axis, &diagram->y_axis, &n_kept);
+    g_assert_true (diagram->y_axis.is_log);
+    g_assert_true (has_text (diagram, "200 °C"));
+    g_assert_cmpuint (n_texts_of (diagram, HL_TEXT_PRESSURE), ==, 0);
+    g_assert_true (has_text (diagram, "2s"));
+    g_assert_cmpuint (n_kept, >=, 4);
+    g_assert_cmpuint (path->len, >, n_kept + 2);
+    for (guint i = 0; i < path->len; i++)
+      {
+        const HlPathPoint *point = &g_array_index (path, HlPathPoint, i);
+        g_assert_cmpfloat_with_epsilon (point->T, 500.0, 1e-9);
+        if (i > 0)
+          g_assert_cmpfloat (point->h, >, g_array_index (path, HlPathPoint, i - 1).h - 4000.0);
+      }
+    /* IAPWS R7-97(2012), table 35: saturation pressure at 500 K. */
+    g_assert_cmpfloat_with_epsilon (g_array_index (path, HlPathPoint, n_kept - 1).p, 0.263889776e7, 0.01);
+    g_array_unref (path);
+  }
+  cycle->kind = HL_STATE_DIAGRAM_HS;
+  {
+    g_autoptr (HlStateDiagram) diagram = hl_state_diagram_from_cycle (cycle, 960.0, 600.0);
+    g_assert_true (has_text (diagram, "80 bar"));
+    g_assert_true (has_text (diagram, "0.08 bar"));
+    g_assert_true (has_text (diagram, "400 °C"));
+    /* The critical point of water: 4412 J/(kg K), 2087.5 kJ/kg (IAPWS-IF97 at 647.096 K, 322 kg/m3). */
+    {
+      double x, y;
+      hl_state_diagram_to_pixel (diagram, 4412.0, 2087.5e3, &x, &y);
+      g_assert_cmpfloat (hypot (diagram->critical.x - x, diagram->critical.y - y), <, 1.0);
+    }
+  }
+}
+
+/* The ideal drop keeps its entropy, also where it is no straight line. */
+static void
+test_ideal_drop_of_ph (void)
+{
+  g_autoptr (HlCycle) cycle = cycle_simple (HL_UNITS_METRIC);
+  cycle->kind = HL_STATE_DIAGRAM_PH;
+  g_autoptr (HlStateDiagram) diagram = hl_state_diagram_from_cycle (cycle, 960.0, 600.0);
+  for (guint i = 0; i < cycle->processes->len; i++)
+    {
+      const HlProcess *process = &g_array_index (cycle->processes, HlProcess, i);
+      if (process->kind != HL_PROCESS_EXPANSION)
+        continue;
+      GArray *path = hl_ideal_path (process, HL_STATE_DIAGRAM_PH, &diagram->x_axis, &diagram->y_axis);
+      g_assert_cmpuint (path->len, >, 5);
+      for (guint k = 0; k < path->len; k++)
+        g_assert_cmpfloat_with_epsilon (g_array_index (path, HlPathPoint, k).s, process->from.s, 1e-2);
+      g_array_unref (path);
+    }
+}
+
+static void
+test_words_of_the_kinds (void)
+{
+  HlStateDiagramKind kind = HL_STATE_DIAGRAM_TS;
+  g_assert_true (hl_state_diagram_kind_from_id ("ph", &kind));
+  g_assert_cmpint (kind, ==, HL_STATE_DIAGRAM_PH);
+  g_assert_false (hl_state_diagram_kind_from_id ("pv", &kind));
+  g_assert_cmpint (kind, ==, HL_STATE_DIAGRAM_PH);
+  g_assert_cmpstr (hl_state_diagram_sign (HL_STATE_DIAGRAM_HS), ==, "h-s");
 }
 
 static void
@@ -242,6 +352,10 @@ main (int argc, char **argv)
   g_test_add_func ("/draw/state-diagram/texts-of-random-states", test_texts_of_random_states);
   g_test_add_func ("/draw/state-diagram/a-crowd-gives-way", test_a_crowd_gives_way);
   g_test_add_func ("/draw/state-diagram/an-empty-plant", test_an_empty_plant_shows_dome_and_pressures);
+  g_test_add_func ("/draw/state-diagram/other-kinds", test_other_kinds);
+  g_test_add_func ("/draw/state-diagram/lines-of-other-kinds", test_lines_of_other_kinds);
+  g_test_add_func ("/draw/state-diagram/ideal-drop-of-ph", test_ideal_drop_of_ph);
+  g_test_add_func ("/draw/state-diagram/words-of-the-kinds", test_words_of_the_kinds);
   g_test_add_func ("/draw/state-diagram/numbers-pressures-and-ideal-points", test_numbers_pressures_and_ideal_points);
   g_test_add_func ("/draw/state-diagram/runs-are-drawn-together", test_runs_of_coinciding_states_are_drawn_together);
   g_test_add_func ("/draw/state-diagram/isobars-of-close-pressures-merge", test_isobars_of_close_pressures_merge);

@@ -169,7 +169,7 @@ test_processes (void)
   g_assert_cmpuint (count (s, HL_PROCESS_COOLING, FALSE), ==, 2);       /* condenser and user */
   g_assert_cmpuint (count (s, HL_PROCESS_MIXING, FALSE), ==, 4);        /* steam and three waters into the deaerator */
   g_assert_cmpuint (count (s, HL_PROCESS_LINE, FALSE), ==, 2);
-  g_assert_cmpuint (count (s, HL_PROCESS_THROTTLING, FALSE), ==, 1);
+  g_assert_cmpuint (count (s, HL_PROCESS_THROTTLING, FALSE), ==, 2);    /* valve, and the trap of the user */
   for (guint k = 0; k < hl_solution_n_processes (s); k++)
     {
       const HlProcess *process = hl_solution_process (s, k);

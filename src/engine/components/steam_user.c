@@ -53,7 +53,7 @@ check (HlChecker *checker)
 static void
 processes (HlProcessSink *sink)
 {
-  hl_process_add (sink, HL_PROCESS_COOLING, hl_process_node (sink, "steam"), hl_process_node (sink, "condensate"));
+  hl_process_add_trapped (sink, hl_process_node (sink, "steam"), hl_process_node (sink, "condensate"));
 }
 
 const HlComponentModel hl_steam_user_model = { "steam_user", emit_steam_user, check, processes };
