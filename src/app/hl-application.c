@@ -107,6 +107,7 @@ hl_application_startup (GApplication *application)
   static const GActionEntry entries[] = { { "quit", quit_cb } };
   g_autofree char *look = NULL;
 
+  g_set_prgname ("local.heatloom.Heatloom");    /* the desktop file's name: shells match windows by it */
   G_APPLICATION_CLASS (hl_application_parent_class)->startup (application);
   hl_appearance_start ();
   look = hl_settings_get_string ("look", "system");

@@ -61,7 +61,6 @@ button_row (GtkWidget *window, const char *const *buttons, Question *question)
     {
       gtk_widget_add_css_class (button, "suggested-action");
       gtk_window_set_default_widget (GTK_WINDOW (window), button);
-      gtk_window_set_focus (GTK_WINDOW (window), button);
     }
   return row;
 }
@@ -91,6 +90,8 @@ hl_confirm (GtkWindow *parent, const char *title, const char *body, const char *
   gtk_box_append (GTK_BOX (box), text);
   gtk_window_set_child (GTK_WINDOW (window), box);
   gtk_box_append (GTK_BOX (box), button_row (window, buttons, question));
+  /* The focus can only go to what is in the window already. */
+  gtk_window_set_focus (GTK_WINDOW (window), gtk_window_get_default_widget (GTK_WINDOW (window)));
   add_escape (window);
   hl_pane_set_accessible (window, title, body);
   gtk_window_present (GTK_WINDOW (window));

@@ -7,7 +7,6 @@ main (int argc, char **argv)
 {
   g_autoptr (HlApplication) application = NULL;
   hl_application_prepare_process ();
-  g_set_prgname ("local.heatloom.Heatloom");    /* the desktop file's name: shells match windows by it */
   g_set_application_name ("Heatloom");
   application = hl_application_new (g_getenv ("HEATLOOM_NON_UNIQUE") != NULL ? G_APPLICATION_NON_UNIQUE : 0);
   return g_application_run (G_APPLICATION (application), argc, argv);
