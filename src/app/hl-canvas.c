@@ -545,8 +545,8 @@ add_move_key (GtkWidgetClass *class, guint key, guint keypad_key, int dx, int dy
   const struct { GdkModifierType modifiers; int step; } ways[] = { { 0, 1 }, { GDK_SHIFT_MASK, 5 } };
   for (guint n = 0; n < G_N_ELEMENTS (ways); n++)
     {
-      gtk_widget_class_add_binding_action (class, key, ways[n].modifiers, "win.move", "(ii)", dx * ways[n].step, dy * ways[n].step);
-      gtk_widget_class_add_binding_action (class, keypad_key, ways[n].modifiers, "win.move", "(ii)", dx * ways[n].step, dy * ways[n].step);
+      gtk_widget_class_add_binding_action (class, key, ways[n].modifiers, "win.nudge", "(ii)", dx * ways[n].step, dy * ways[n].step);
+      gtk_widget_class_add_binding_action (class, keypad_key, ways[n].modifiers, "win.nudge", "(ii)", dx * ways[n].step, dy * ways[n].step);
     }
 }
 

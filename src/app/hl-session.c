@@ -5,6 +5,7 @@
 #include "plant/i18n.h"
 
 #define LONGEST_HISTORY 500
+#define CLOSE_STEPS (1 * G_USEC_PER_SEC)     /* between presses of a key that make one step together */
 
 /* A state of the plant, and the step that led to it from the one before. */
 typedef struct {
@@ -16,6 +17,7 @@ struct _HlSession {
   GObject     parent_instance;
   GPtrArray  *steps;         /* Step; never empty */
   guint       now;           /* index of the committed state */
+  gint64      again_time;    /* when hl_session_apply_again() made the last step; 0: something else did */
   HlPlant    *preview;       /* of a gesture in progress, or NULL */
   gboolean    has_solved_preview;
   HlSolution *solution;
@@ -216,11 +218,33 @@ hl_session_apply (HlSession *self, const char *name, HlPlant *plant, const HlAdd
     }
   g_clear_pointer (&self->preview, hl_plant_unref);
   self->has_solved_preview = FALSE;
+  self->again_time = 0;
   push_step (self, plant, name);
   hl_trace ("step %s", name);
   plant_has_changed (self);
   g_signal_emit (self, signals[FILE_CHANGED], 0);
   say_yielded (self, yielded);
+}
+
+void
+hl_session_apply_again (HlSession *self, const char *name, HlPlant *plant)
+{
+  gint64 now = g_get_monotonic_time ();
+  Step *last = step_at (self, self->now);
+  gboolean is_again = self->again_time != 0 && now - self->again_time < CLOSE_STEPS && self->now > 0
+                      && g_strcmp0 (last->name, name) == 0 && last->plant != self->saved;
+
+  if (is_again)
+    {
+      forget_redo (self);
+      hl_plant_unref (last->plant);
+      last->plant = plant;
+      plant_has_changed (self);
+      g_signal_emit (self, signals[FILE_CHANGED], 0);
+    }
+  else
+    hl_session_apply (self, name, plant, NULL, FALSE);
+  self->again_time = now;
 }
 
 void
@@ -321,6 +345,7 @@ static void
 go_to_step (HlSession *self, guint n)
 {
   g_clear_pointer (&self->preview, hl_plant_unref);
+  self->again_time = 0;
   self->now = n;
   plant_has_changed (self);
   g_signal_emit (self, signals[FILE_CHANGED], 0);

@@ -24,6 +24,8 @@ HlSolution       *hl_session_last_good    (HlSession *self);      /* (transfer n
 
 /* One undoable step named @name (translated: "Move Pump P1").  Takes @plant; settles for @edited (nullable) when @settle; solves at once; emits "changed". */
 void              hl_session_apply        (HlSession *self, const char *name, HlPlant *plant, const HlAddress *edited, gboolean settle);
+/* The same for steps that follow each other closely and have one name, like those of a held arrow key: they become one. */
+void              hl_session_apply_again  (HlSession *self, const char *name, HlPlant *plant);
 /* The same for a gesture in progress: replaces the plant without a history step until hl_session_apply or hl_session_cancel_preview.
  * Takes @plant.  Emits "changed" where it solves, else "previewed". */
 void              hl_session_preview      (HlSession *self, HlPlant *plant, gboolean solve);

@@ -156,6 +156,20 @@ move_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
     hl_session_cancel_preview (self->session);
 }
 
+/* By arrow key: what a held key does is undone in one step. */
+static void
+nudge_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  int dx, dy;
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  g_autofree char *words = hl_edit_words (plant_of (self), ids, n);
+  g_autofree char *name = g_strdup_printf (_("Move %s"), words);
+  g_variant_get (parameter, "(ii)", &dx, &dy);
+  hl_session_apply_again (self->session, name, hl_edit_move (hl_session_base (self->session), ids, n, dx, dy));
+}
+
 static void
 turn_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
 {
@@ -473,6 +487,7 @@ static const GActionEntry entries[] = {
   { "add-component-at", add_component_at_cb, "(sii)" },
   { "insert-component", insert_component_cb, "(ssiii)" },
   { "move", move_cb, "(ii)" },
+  { "nudge", nudge_cb, "(ii)" },
   { "turn", turn_cb },
   { "mirror", mirror_cb },
   { "delete", delete_cb },
@@ -520,6 +535,7 @@ hl_window_update_actions (HlWindow *self)
   enable (self, "undo", hl_session_can_undo (self->session));
   enable (self, "redo", hl_session_can_redo (self->session));
   enable (self, "move", n_components > 0);
+  enable (self, "nudge", n_components > 0);
   enable (self, "turn", n_components > 0);
   enable (self, "mirror", n_components > 0);
   enable (self, "duplicate", n_components > 0);

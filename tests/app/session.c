@@ -281,6 +281,29 @@ test_a_file_that_cannot_be_opened_changes_nothing (void)
 }
 
 static void
+nudge (HlSession *session, const char *id)
+{
+  hl_session_apply_again (session, "Move", hl_edit_move (hl_session_plant (session), &id, 1, 1, 0));
+}
+
+static void
+test_a_held_key_makes_one_step (void)
+{
+  g_autoptr (HlSession) session = hl_session_new ();
+  const char *id = add (session, "pump", 0, 0);
+  for (int n = 0; n < 5; n++)
+    nudge (session, id);
+  g_assert_cmpint (hl_plant_find_component (hl_session_plant (session), id)->x, ==, 5);
+  hl_session_undo (session);
+  g_assert_cmpint (hl_plant_find_component (hl_session_plant (session), id)->x, ==, 0);
+  hl_session_redo (session);
+  nudge (session, id);             /* after something else it is a step of its own */
+  g_assert_cmpint (hl_plant_find_component (hl_session_plant (session), id)->x, ==, 6);
+  hl_session_undo (session);
+  g_assert_cmpint (hl_plant_find_component (hl_session_plant (session), id)->x, ==, 5);
+}
+
+static void
 count_cb (HlSession *session, guint *count)
 {
   (*count)++;
@@ -317,6 +340,7 @@ main (int argc, char **argv)
   g_test_add_func ("/app/session/typed-value", test_a_typed_value_is_given_and_an_empty_one_let_go);
   g_test_add_func ("/app/session/file", test_saving_and_opening_keep_the_plant);
   g_test_add_func ("/app/session/bad-file", test_a_file_that_cannot_be_opened_changes_nothing);
+  g_test_add_func ("/app/session/held-key", test_a_held_key_makes_one_step);
   g_test_add_func ("/app/session/signals", test_one_step_is_one_change);
   return g_test_run ();
 }
