@@ -3,7 +3,7 @@
 
 # What the build itself needs.  fonts, themes and loaders are what the window needs to look right.
 build_packages='gcc libc6-dev meson ninja-build pkg-config gettext
-  libglib2.0-dev libjson-glib-dev libsuitesparse-dev libcairo2-dev libpango1.0-dev libgtk-4-dev
+  libglib2.0-dev libjson-glib-dev libsuitesparse-dev libcairo2-dev libpango1.0-dev libgtk-4-dev libxlsxwriter-dev
   adwaita-icon-theme librsvg2-common fonts-dejavu-core'
 
 say () { printf '%s\n' "$@"; }

@@ -6,10 +6,12 @@
 #include "batch/solve-output.h"
 #include "draw/export.h"
 #include "draw/state-diagram.h"
+#include "draw/tables.h"
+#include "draw/xlsx.h"
 #include "plant/i18n.h"
 
 /* The options that take a file name, which may be "-". */
-static const char *const file_options[] = { "json", "csv", "ledger", "drawing", "diagram", NULL };
+static const char *const file_options[] = { "json", "csv", "summary", "ledger", "xlsx", "drawing", "diagram", NULL };
 
 #define LONGEST_INPUT (17u << 20)
 
@@ -133,10 +135,26 @@ write_diagrams (const HlSolution *solution, const HlArguments *arguments, GError
 }
 
 static gboolean
+write_summary (const HlSolution *solution, const char *path, GError **error)
+{
+  g_autoptr (HlTable) table = hl_table_summary (solution, hl_plant_units (hl_solution_plant (solution)));
+  g_autofree char *csv = hl_table_csv (table);
+  return hl_export_text_file (csv, path, error);
+}
+
+static gboolean
+write_workbook (const HlSolution *solution, const char *path, GError **error)
+{
+  g_autoptr (GBytes) bytes = hl_export_workbook (solution, hl_plant_units (hl_solution_plant (solution)), error);
+  return bytes != NULL && hl_export_bytes_file (bytes, path, error);
+}
+
+static gboolean
 write_outputs (const HlSolution *solution, const GArray *yielded, const HlArguments *arguments, GError **error)
 {
   const char *json_path = hl_arguments_value (arguments, "json"), *csv_path = hl_arguments_value (arguments, "csv");
   const char *ledger_path = hl_arguments_value (arguments, "ledger"), *drawing = hl_arguments_value (arguments, "drawing");
+  const char *summary = hl_arguments_value (arguments, "summary"), *workbook = hl_arguments_value (arguments, "xlsx");
   if (json_path != NULL)
     {
       g_autofree char *json = hl_solution_json (solution, yielded);
@@ -155,6 +173,8 @@ write_outputs (const HlSolution *solution, const GArray *yielded, const HlArgume
       if (!hl_export_text_file (text, ledger_path, error))
         return FALSE;
     }
+  if ((summary != NULL && !write_summary (solution, summary, error)) || (workbook != NULL && !write_workbook (solution, workbook, error)))
+    return FALSE;
   return (drawing == NULL || write_picture (solution, HL_PICTURE_DRAWING, drawing, error)) && write_diagrams (solution, arguments, error);
 }
 
@@ -202,7 +222,9 @@ static const HlBatchOption solve_options[] = {
   { "set", N_("ADDRESS=VALUE"), TRUE, N_("give a value, as 'T1.inlet.p=80 bar'; may be repeated") },
   { "json", N_("FILE"), FALSE, N_("write results, streams and findings as JSON, in SI") },
   { "csv", N_("FILE"), FALSE, N_("write the ledger of all streams as CSV, in the plant's units") },
+  { "summary", N_("FILE"), FALSE, N_("write the performance summary as CSV, each figure with its unit and basis") },
   { "ledger", N_("FILE"), FALSE, N_("write the ledger as text in aligned columns") },
+  { "xlsx", N_("FILE"), FALSE, N_("write summary, streams, components, values and findings as a workbook") },
   { "drawing", N_("FILE"), FALSE, N_("write the drawing; .svg, .pdf or .png") },
   { "diagram", N_("ts|hs|ph FILE"), TRUE, N_("write a state diagram: temperature-entropy, enthalpy-entropy, pressure-enthalpy; may be repeated") },
 };

@@ -230,10 +230,15 @@ hl_export_picture_file (const HlSolution *solution, HlPicture picture, HlFormat 
 {
   double scale = format == HL_FORMAT_PNG ? 2.0 : 1.0;    /* sharp on screens and slides */
   g_autoptr (GBytes) bytes = hl_export_picture (solution, picture, format, theme, 0.0, 0.0, scale, error);
+  return bytes != NULL && hl_export_bytes_file (bytes, path, error);
+}
+
+gboolean
+hl_export_bytes_file (GBytes *bytes, const char *path, GError **error)
+{
   gsize length;
   const void *data;
-  if (bytes == NULL)
-    return FALSE;
+  g_return_val_if_fail (bytes != NULL && path != NULL, FALSE);
   data = g_bytes_get_data (bytes, &length);
   return write_file (path, data, length, error);
 }

@@ -24,4 +24,5 @@ char    *hl_ledger_csv          (const HlSolution *solution, HlUnitSet units);
 /* The ledger in aligned columns, as rounded on screen.  g_free(). */
 char    *hl_ledger_text         (const HlSolution *solution, HlUnitSet units);
 gboolean hl_export_text_file    (const char *text, const char *path, GError **error);
+gboolean hl_export_bytes_file   (GBytes *bytes, const char *path, GError **error);
 G_END_DECLS

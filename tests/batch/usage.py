@@ -19,9 +19,9 @@ def test_every_command_has_its_help():
         out, _ = batch(command, "--help")
         assert out.startswith(f"Usage: heatloom-batch {command}"), out
         assert "Caution" in out
-        assert "xlsx" not in out and "--report" not in out
+        assert "--report" not in out
     out, _ = batch("solve", "--help")
-    for option in ("--set ADDRESS=VALUE", "--json FILE", "--csv FILE", "--ledger FILE", "--drawing FILE", "--diagram ts|hs|ph FILE"):
+    for option in ("--set ADDRESS=VALUE", "--json FILE", "--csv FILE", "--summary FILE", "--ledger FILE", "--xlsx FILE", "--drawing FILE", "--diagram ts|hs|ph FILE"):
         assert option in out, option
 
 
@@ -40,7 +40,7 @@ def test_unknown_commands_are_refused_with_the_list():
 
 
 def test_unknown_options_are_refused_with_the_list():
-    refused("solve", "x.heatloom", "--xlsx", "a.xlsx", status=2, says=["--xlsx", "--json", "--drawing"])
+    refused("solve", "x.heatloom", "--ods", "a.ods", status=2, says=["--ods", "--json", "--drawing"])
     refused("check", "x.heatloom", "--json", "-", status=2, says=["--json", "--strict"])
     refused("kinds", "--all", status=2, says="--all")
     refused("solve", "-j", "x", status=2, says="-j")

@@ -1,0 +1,134 @@
+# What is handed over: the summary as CSV, the workbook.
+# SPDX-License-Identifier: GPL-3.0-or-later
+import csv
+import io
+import json
+import os
+import re
+import time
+import xml.etree.ElementTree as ElementTree
+import zipfile
+
+from tap import SOURCE, batch, main, plant, refused
+
+DEMOS = ("ferry-lane", "linden-row", "tallow-fen")
+SHEET = {"s": "http://schemas.openxmlformats.org/spreadsheetml/2006/main"}
+RELATION = "{http://schemas.openxmlformats.org/officeDocument/2006/relationships}id"
+
+
+def demo(name):
+    return os.path.join(SOURCE, "data", "examples", f"{name}.heatloom")
+
+
+def read_workbook(path):
+    """Name of each sheet -> rows of cells, text or number, with the headings first; and the XML of each."""
+    sheets, sources = {}, {}
+    with zipfile.ZipFile(path) as archive:
+        assert archive.testzip() is None
+        strings = ["".join(part.text or "" for part in item.iter(f"{{{SHEET['s']}}}t"))
+                   for item in ElementTree.fromstring(archive.read("xl/sharedStrings.xml"))]
+        book = ElementTree.fromstring(archive.read("xl/workbook.xml"))
+        for number, sheet in enumerate(book.find("s:sheets", SHEET), 1):
+            assert sheet.get(RELATION) == f"rId{number}"
+            root = ElementTree.fromstring(archive.read(f"xl/worksheets/sheet{number}.xml"))
+            rows = {}
+            for cell in root.iter(f"{{{SHEET['s']}}}c"):
+                letters, row = re.fullmatch(r"([A-Z]+)(\d+)", cell.get("r")).groups()
+                assert len(letters) == 1 and cell.find("s:f", SHEET) is None
+                value = cell.find("s:v", SHEET)
+                if value is not None:
+                    rows.setdefault(int(row), {})[ord(letters) - ord("A")] = \
+                        strings[int(value.text)] if cell.get("t") == "s" else float(value.text)
+            sheets[sheet.get("name")] = [rows[n] for n in sorted(rows)]
+            sources[sheet.get("name")] = root
+    return sheets, sources
+
+
+def test_the_summary_agrees_with_the_json():
+    for name in DEMOS:
+        found = json.loads(batch("solve", demo(name), "--json", "-")[0])["plant"]
+        rows = list(csv.DictReader(io.StringIO(batch("solve", demo(name), "--summary", "-")[0], newline="")))
+        assert all(list(row) == ["Group", "Quantity", "Value", "Unit", "Basis", "Key"] for row in rows)
+        keys = [row["Key"] for row in rows]
+        assert len(set(keys)) == len(keys) > 12, keys
+        values = {row["Key"]: float(row["Value"]) * {"MW": 1e6, "kW": 1e3, "W": 1.0, "%": 0.01}.get(row["Unit"], 1.0) for row in rows}
+        for key, same in (("net_power", "net_power_W"), ("gross_power", "gross_power_W"), ("own_consumption", "own_consumption_W"),
+                          ("heat_input", "heat_input_W"), ("net_efficiency_lhv", "net_efficiency_lhv"), ("cooling_duty", "heat_rejected_W")):
+            assert abs(values[key] - found[same]) <= 1e-9 * abs(found[same]), (name, key)
+        # Every efficiency and heat rate says what it counts from.
+        assert all(row["Basis"] for row in rows if row["Unit"] in ("%", "kJ/kWh")), rows
+
+
+def test_the_workbook_holds_every_table_in_real_numbers():
+    for name in DEMOS:
+        batch("solve", demo(name), "--xlsx", "x.xlsx", "--csv", "x.csv", "--summary", "s.csv")
+        sheets, sources = read_workbook("x.xlsx")
+        assert list(sheets) == ["Performance", "Streams", "Components", "Given and assumed values", "Findings"], list(sheets)
+        for root in sources.values():
+            pane = root.find("s:sheetViews/s:sheetView/s:pane", SHEET)
+            assert pane is not None and pane.get("state") == "frozen" and pane.get("ySplit") == "4"
+        for sheet, path in (("Streams", "x.csv"), ("Performance", "s.csv")):
+            with open(path, encoding="utf-8", newline="") as file:
+                table = list(csv.reader(file))
+            rows = sheets[sheet][2:]      # title and caution stand above
+            assert len(rows) == len(table)
+            for cells, line in zip(rows, table):
+                for column, text in enumerate(line):
+                    cell = cells.get(column, "")
+                    if isinstance(cell, float):
+                        assert abs(cell - float(text)) <= 1e-9 * abs(cell), (sheet, cell, text)
+                    else:
+                        assert cell == text, (sheet, cell, text)
+            assert sum(isinstance(cell, float) for cells in rows for cell in cells.values()) > 10
+        assert "Concept figures only" in sheets["Performance"][1][0]
+        with open(demo(name), encoding="utf-8") as file:
+            document = json.load(file)
+        # A pair of rows above, then one for each value of the file, each with its source.
+        values = sheets["Given and assumed values"][3:]
+        n_values = sum(len(item.get("given", {})) + len(item.get("assumed", {})) + len(item.get("tied", {}))
+                       for item in [document, *document["components"], *document["streams"]])
+        assert len(values) >= n_values and all(cells[4] for cells in values), (len(values), n_values)
+
+
+def test_the_workbook_is_the_same_bytes_each_time():
+    contents = []
+    for _ in range(2):
+        batch("solve", plant("loop.heatloom"), "--xlsx", "x.xlsx")
+        with open("x.xlsx", "rb") as file:
+            contents.append(file.read())
+        time.sleep(2.1)                   # the clock of archives ticks every two seconds
+    assert contents[0] == contents[1]
+
+
+def test_no_temporary_file_stays():
+    os.mkdir("tmp")
+    out, _ = batch("solve", plant("loop.heatloom"), "--xlsx", "-", text=False, env={"TMPDIR": os.path.abspath("tmp")})
+    assert out.startswith(b"PK") and os.listdir("tmp") == []
+
+
+def test_a_plant_that_is_not_solved_has_no_performance():
+    with open(demo("ferry-lane"), encoding="utf-8") as file:
+        document = json.load(file)
+    document["streams"] = document["streams"][:-1]
+    batch("solve", "-", "--xlsx", "x.xlsx", "--summary", "s.csv", stdin=json.dumps(document), status=1)
+    sheets, _ = read_workbook("x.xlsx")
+    assert len(sheets["Performance"]) == 3 and len(sheets["Findings"]) > 3
+    with open("s.csv", encoding="utf-8", newline="") as file:
+        assert len(list(csv.reader(file))) == 1
+
+
+def test_names_of_other_scripts_and_long_ones():
+    with open(demo("ferry-lane"), encoding="utf-8") as file:
+        document = json.load(file)
+    document["title"] = "محطة توليد 发电厂 <&> \"x\" " + 60 * "long "
+    batch("solve", "-", "--xlsx", "x.xlsx", stdin=json.dumps(document))
+    sheets, _ = read_workbook("x.xlsx")
+    assert sheets["Streams"][0][0].startswith(document["title"])
+
+
+def test_files_that_cannot_be_written():
+    for option in ("--summary", "--xlsx"):
+        refused("solve", plant("loop.heatloom"), option, "/nowhere/at/all/x", status=3, says="/nowhere/at/all/x")
+
+
+main(globals())
