@@ -268,6 +268,27 @@ group_equations (const HlModel *model, const int *equations, int n)
   return group;
 }
 
+/* Equations of a group less the unknowns that they share. */
+static int
+excess (const HlModel *model, const int *equations, int n)
+{
+  HlSystem *system = model->system;
+  g_autofree gboolean *seen = g_new0 (gboolean, system->vars->len + 1);
+  int n_vars = 0;
+  for (int k = 0; k < n; k++)
+    {
+      const HlEquation *e = hl_system_equation (system, equations[k]);
+      const int *vars = hl_equation_vars (system, e);
+      for (int i = 0; i < e->n; i++)
+        if (system->fixed_by[vars[i]] < 0 && !seen[vars[i]])
+          {
+            seen[vars[i]] = TRUE;
+            n_vars++;
+          }
+    }
+  return n - n_vars;
+}
+
 static void
 find_surplus_group (const HlModel *model, const int *equations, int n, HlFindings *findings)
 {
@@ -290,8 +311,10 @@ find_surplus_group (const HlModel *model, const int *equations, int n, HlFinding
     g_ptr_array_add (names, spec_with_value (model, hl_system_spec (model->system, g_array_index (specs, int, k))));
   g_autofree char *list = hl_name_list ((char **) names->pdata, names->len, TRUE);
   const HlSpec *first = hl_system_spec (model->system, g_array_index (specs, int, 0));
+  int n_surplus = excess (model, equations, n);
   HlFinding *finding = hl_findings_add (findings, HL_GRADE_ERROR, "surplus-value", first->address,
-    g_strdup_printf (_("One value too many: let one of these be found: %s."), list));
+    n_surplus > 1 ? g_strdup_printf (_("%d values too many: let some be found, for instance %s."), n_surplus, list)
+                  : g_strdup_printf (_("One value too many: let one of these be found: %s."), list));
   offer_to_let_go (model, finding, specs);
 }
 

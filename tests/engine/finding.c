@@ -142,6 +142,15 @@ test_surplus (void)
   test_assert_solved (after);
 }
 
+static void
+test_two_too_many (void)
+{
+  g_autoptr (HlSolution) s = solve_taken (test_plant_set (test_plant_set (test_plant (test_simple_loop), "T1.inlet.m", 10.0), "C1.heat", 20e6));
+  const HlFinding *finding = test_finding (s, "surplus-value");
+  g_assert_nonnull (finding);
+  g_assert_true (g_str_has_prefix (finding->text, "2 values too many: let some be found, for instance heat rejected of C1 (20.00 MW), mass flow at steam inlet of T1 (10.00 kg/s) or net power"));
+}
+
 /* Two typed pressures of one vessel; the valve that is offered makes it solvable. */
 static void
 test_pressures_meet (void)
@@ -424,6 +433,7 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/finding/mends-of-deficits-mend", test_mends_of_deficits_mend);
   g_test_add_func ("/engine/finding/missing-and-surplus-at-once", test_missing_and_surplus_at_once);
   g_test_add_func ("/engine/finding/surplus", test_surplus);
+  g_test_add_func ("/engine/finding/two-too-many", test_two_too_many);
   g_test_add_func ("/engine/finding/pressures-meet", test_pressures_meet);
   g_test_add_func ("/engine/finding/circuit-that-loses-water", test_circuit_that_loses_water);
   g_test_add_func ("/engine/finding/nothing-holds-the-pressure", test_nothing_holds_the_pressure);
