@@ -23,6 +23,8 @@ static const struct {
   { "open_heater",   { { "heat", NULL } } },
   { "closed_heater", { { "terminal_difference", "TTD", UNITLESS }, { "drain_approach", "DCA" } } },
   { "steam_user",    { { "heat", NULL } } },
+  { "exchanger",     { { "heat", NULL } } },
+  { "recuperator",   { { "heat", NULL } } },
 };
 
 /* A value from the solution, else what was typed or assumed. */

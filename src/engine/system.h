@@ -37,7 +37,7 @@ typedef HlStatus (*HlResidual) (const HlEquation *equation, const double *a, con
 
 struct _HlEquation {
   HlResidual     residual;
-  const HlFluid *fluid;
+  const HlFluid *fluid, *other_fluid;   /* the other one: of an exchanger whose sides carry two media */
   int            n, first;         /* its variables in HlSystem.index */
   int            first_constant;   /* its constants in HlSystem.constants */
   guint32        linear;           /* bit k: linear in variable k while the others stand still */

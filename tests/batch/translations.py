@@ -31,10 +31,10 @@ def listed():
 def test_every_file_with_words_is_listed():
     with_words = []
     for path in glob.glob(os.path.join(SOURCE, "src", "**", "*"), recursive=True):
-        if path.endswith((".c", ".ui")):
+        if path.endswith((".c", ".h", ".ui")) and not path.endswith("i18n.h"):
             with open(path, encoding="utf-8") as file:
                 text = file.read()
-            if (path.endswith(".c") and MARKED.search(text)) or 'translatable="yes"' in text:
+            if (path.endswith((".c", ".h")) and MARKED.search(text)) or 'translatable="yes"' in text:
                 with_words.append(os.path.relpath(path, SOURCE))
     sources = [name for name in listed() if name.startswith("src/")]
     assert set(with_words) == set(sources), f"missing {set(with_words) - set(sources)}, too many {set(sources) - set(with_words)}"

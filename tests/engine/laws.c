@@ -117,7 +117,8 @@ gives_back (HlPlant *plant, const HlSolution *s, const HlAddress *address, doubl
   g_array_unref (yielded);
   double now;
   g_assert_true (hl_solution_value (t, address, &now));
-  test_assert_near (now, value, 1e-8);
+  if (!(fabs (now - value) <= 1e-8 * fabs (value)))
+    g_error ("%s is %.10g, not the %.10g that was given", text, now, value);
   test_assert_balanced (t);
   return TRUE;
 }

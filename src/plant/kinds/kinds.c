@@ -3,7 +3,7 @@
 #include "plant/kinds/kinds.h"
 
 static const HlKind *const kinds[] = {
-  &hl_kind_boiler, &hl_kind_heat_input,
+  &hl_kind_boiler, &hl_kind_heat_input, &hl_kind_exchanger, &hl_kind_recuperator,
   &hl_kind_turbine, &hl_kind_generator,
   &hl_kind_condenser,
   &hl_kind_pump, &hl_kind_open_heater, &hl_kind_closed_heater, &hl_kind_make_up,
