@@ -20,11 +20,18 @@ struct _HlFluid {
   HlStatus (*state_hs) (const HlFluid *fluid, double h, double s, HlState *state);
   HlStatus (*state_px) (const HlFluid *fluid, double p, double x, HlState *state);
   HlStatus (*state_Tx) (const HlFluid *fluid, double T, double x, HlState *state);
+  HlStatus (*state_dT) (const HlFluid *fluid, double density, double T, HlState *state);   /* NULL: found by pressure, see fluid-density.c */
   HlStatus (*saturation_p) (const HlFluid *fluid, double p, HlSaturation *saturation);
   HlStatus (*saturation_T) (const HlFluid *fluid, double T, HlSaturation *saturation);
   char    *(*explain_failure) (const HlFluid *fluid, HlStatus status, const char *pair, double a, double b);
 };
 
 extern const HlFluid hl_water_if97;
+
+/* Media by coefficient files, fluid-registry.c; NULL when unknown. */
+const HlFluid *hl_registry_lookup (const char *id);
+
+/* (density,T) by a search for the pressure, for fluids whose equations are not in density. */
+HlStatus hl_density_by_pressure (const HlFluid *fluid, double density, double T, HlState *state);
 
 G_END_DECLS

@@ -8,7 +8,11 @@ static const HlFluid *const fluids[] = { &hl_water_if97 };
 
 /**
  * hl_fluid_lookup:
- * @id: short name of a fluid, such as "water"
+ * @id: short name of a fluid, such as "water" or "isopentane"; for another zero
+ *   of enthalpy and entropy with "@IIR", "@NBP" or "@ASHRAE" after it
+ *
+ * The first look-up of a medium reads its coefficients and takes some milliseconds;
+ * every later one finds it in a table.
  *
  * Returns: (nullable): the fluid, or NULL where none has this id
  */
@@ -18,7 +22,7 @@ hl_fluid_lookup (const char *id)
   for (gsize i = 0; id != NULL && i < G_N_ELEMENTS (fluids); i++)
     if (strcmp (id, fluids[i]->id) == 0)
       return fluids[i];
-  return NULL;
+  return id != NULL ? hl_registry_lookup (id) : NULL;
 }
 
 /**
@@ -214,6 +218,24 @@ hl_fluid_state_Tx (const HlFluid *fluid, double T, double x, HlState *state)
 }
 
 /**
+ * hl_fluid_state_dT:
+ * @fluid: a fluid
+ * @density: [kg/m3]
+ * @T: temperature [K]
+ * @state: (out): the complete state; untouched on failure
+ *
+ * Returns: HL_OK; HL_OUTSIDE_RANGE where the pair lies outside the published
+ *   range or is no number; HL_NOT_CONVERGED
+ */
+HlStatus
+hl_fluid_state_dT (const HlFluid *fluid, double density, double T, HlState *state)
+{
+  if (fluid->state_dT == NULL)
+    return hl_density_by_pressure (fluid, density, T, state);
+  return fluid->state_dT (fluid, density, T, state);
+}
+
+/**
  * hl_fluid_saturation_p:
  * @fluid: a fluid
  * @p: pressure [Pa]
@@ -245,7 +267,7 @@ hl_fluid_saturation_T (const HlFluid *fluid, double T, HlSaturation *saturation)
  * hl_fluid_explain_failure:
  * @fluid: a fluid
  * @status: what the call returned
- * @pair: "pT", "ph", "ps", "hs", "px" or "Tx"
+ * @pair: "pT", "ph", "ps", "hs", "px", "Tx" or "dT"
  * @a: first argument of the call, SI
  * @b: second argument of the call, SI
  *

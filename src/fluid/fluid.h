@@ -54,9 +54,24 @@ typedef struct {
   double molar_mass;                      /* [kg/mol] */
 } HlFluidLimits;
 
-/* Fluids are static and immutable: every call may run in any thread.
+/* Which state has the zero of enthalpy and entropy; only differences within one circuit mean anything. */
+typedef enum {
+  HL_REFERENCE_PUBLISHED,   /* as the authors' constants give it */
+  HL_REFERENCE_IIR,         /* h = 200 kJ/kg, s = 1 kJ/(kg K): saturated liquid at 273.15 K */
+  HL_REFERENCE_NBP,         /* h = s = 0: saturated liquid at 101325 Pa */
+  HL_REFERENCE_ASHRAE,      /* h = s = 0: saturated liquid at 233.15 K */
+} HlReference;
+
+#define HL_FLUID_ERROR (hl_fluid_error_quark ())
+HL_PUBLIC GQuark hl_fluid_error_quark (void);
+typedef enum { HL_FLUID_ERROR_FILE } HlFluidError;      /* a coefficient file is not right */
+
+/* Fluids live as long as the program and are immutable: every call may run in any thread.
  * Out parameters are untouched on failure. */
-HL_PUBLIC const HlFluid *hl_fluid_lookup      (const char *id);         /* "water"; NULL when unknown */
+HL_PUBLIC const HlFluid *hl_fluid_lookup      (const char *id);         /* "water", "isopentane", "r134a@IIR"; NULL when unknown */
+HL_PUBLIC const HlFluid *hl_fluid_with_reference (const HlFluid *fluid, HlReference reference);
+HL_PUBLIC const HlFluid *hl_fluid_load_file   (const char *path, GError **error);   /* the user's own coefficients */
+HL_PUBLIC char         **hl_fluid_list        (void);                   /* ids of all; free with g_strfreev() */
 HL_PUBLIC const HlFluid *hl_fluid_water       (void);                   /* IAPWS-IF97 */
 HL_PUBLIC const char    *hl_fluid_id          (const HlFluid *fluid);
 HL_PUBLIC const char    *hl_fluid_name        (const HlFluid *fluid);   /* English name, translatable by the caller */
@@ -69,6 +84,7 @@ HL_PUBLIC HlStatus hl_fluid_state_ps (const HlFluid *fluid, double p, double s, 
 HL_PUBLIC HlStatus hl_fluid_state_hs (const HlFluid *fluid, double h, double s, HlState *state) G_GNUC_WARN_UNUSED_RESULT;
 HL_PUBLIC HlStatus hl_fluid_state_px (const HlFluid *fluid, double p, double x, HlState *state) G_GNUC_WARN_UNUSED_RESULT;
 HL_PUBLIC HlStatus hl_fluid_state_Tx (const HlFluid *fluid, double T, double x, HlState *state) G_GNUC_WARN_UNUSED_RESULT;
+HL_PUBLIC HlStatus hl_fluid_state_dT (const HlFluid *fluid, double density, double T, HlState *state) G_GNUC_WARN_UNUSED_RESULT;
 HL_PUBLIC HlStatus hl_fluid_saturation_p (const HlFluid *fluid, double p, HlSaturation *saturation) G_GNUC_WARN_UNUSED_RESULT;
 HL_PUBLIC HlStatus hl_fluid_saturation_T (const HlFluid *fluid, double T, HlSaturation *saturation) G_GNUC_WARN_UNUSED_RESULT;
 
@@ -77,6 +93,6 @@ HL_PUBLIC const char *hl_phase_name      (HlPhase phase);               /* "liqu
 
 /* A sentence that names the limit which the pair of arguments breaks, for
  * instance "1200 bar is above 1000 bar, the highest pressure of IAPWS-IF97";
- * pair is "pT", "ph", "ps", "hs", "px" or "Tx".  Free with g_free(). */
+ * pair is "pT", "ph", "ps", "hs", "px", "Tx" or "dT" (density in kg/m3).  Free with g_free(). */
 HL_PUBLIC char *hl_fluid_explain_failure (const HlFluid *fluid, HlStatus status, const char *pair, double a, double b);
 G_END_DECLS

@@ -1,0 +1,115 @@
+/* Times of property calls for media by coefficients, beside water by IAPWS-IF97.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "fluid/fluid.h"
+
+#include <math.h>
+#include <stdio.h>
+
+#define N_STATES 512
+#define N_ROUNDS 5
+#define TARGET_PH 3000.0        /* ns, for (p,h) of a medium by coefficients */
+
+typedef struct {
+  const HlFluid *fluid;
+  HlState        states[N_STATES];
+} Sample;
+
+/* Pressures of a cycle: 0.02 to 0.9 of the critical one below it, 1.1 to 3 above. */
+static void
+fill (Sample *sample, const char *where)
+{
+  HlFluidLimits limits;
+  HlSaturation sat;
+  g_autoptr (GRand) rand = g_rand_new_with_seed (4711);
+  hl_fluid_limits (sample->fluid, &limits);
+  for (gsize i = 0; i < N_STATES; i++)
+    {
+      double low = fmax (0.02 * limits.p_critical, 1.05 * limits.p_triple), p = low + (0.9 * limits.p_critical - low) * g_rand_double (rand);
+      HlState *state = &sample->states[i];
+      HlStatus status = hl_fluid_saturation_p (sample->fluid, p, &sat);
+      g_assert_cmpint (status, ==, HL_OK);
+      double share = g_rand_double_range (rand, 0.02, 0.98);
+      if (where[0] == 'l')
+        status = hl_fluid_state_pT (sample->fluid, p, limits.T_min + (sat.T - limits.T_min) * (0.3 + 0.69 * share), state);
+      else if (where[0] == 'v')
+        status = hl_fluid_state_pT (sample->fluid, p, sat.T + (limits.T_max - sat.T) * share, state);
+      else if (where[0] == 'm')
+        status = hl_fluid_state_px (sample->fluid, p, share, state);
+      else
+        {
+          p = fmin (limits.p_critical * g_rand_double_range (rand, 1.1, 3.0), limits.p_max);
+          status = hl_fluid_state_pT (sample->fluid, p, limits.T_critical * (0.9 + 0.25 * share) < limits.T_max ? limits.T_critical * (0.9 + 0.25 * share) : limits.T_max, state);
+        }
+      g_assert_cmpint (status, ==, HL_OK);
+    }
+}
+
+static double
+call (const HlFluid *fluid, const char *pair, const HlState *at)
+{
+  HlState s;
+  HlSaturation sat;
+  HlStatus status;
+  if (g_str_equal (pair, "pT"))
+    status = hl_fluid_state_pT (fluid, at->p, at->T, &s);
+  else if (g_str_equal (pair, "ph"))
+    status = hl_fluid_state_ph (fluid, at->p, at->h, &s);
+  else if (g_str_equal (pair, "ps"))
+    status = hl_fluid_state_ps (fluid, at->p, at->s, &s);
+  else if (g_str_equal (pair, "hs"))
+    status = hl_fluid_state_hs (fluid, at->h, at->s, &s);
+  else
+    {
+      status = hl_fluid_saturation_p (fluid, at->p, &sat);
+      return status == HL_OK ? sat.T : NAN;
+    }
+  return status == HL_OK ? s.T : NAN;
+}
+
+/* Least of some rounds: other programs on the machine only ever add. */
+static double
+time_pair (const Sample *sample, const char *pair)
+{
+  double best = INFINITY;
+  for (int round = 0; round < N_ROUNDS; round++)
+    {
+      volatile double sum = 0.0;
+      gint64 begin = g_get_monotonic_time ();
+      for (gsize i = 0; i < N_STATES; i++)
+        sum += call (sample->fluid, pair, &sample->states[i]);
+      best = fmin (best, (double) (g_get_monotonic_time () - begin) * 1e3 / N_STATES);
+      g_assert_true (isfinite (sum));
+    }
+  return best;
+}
+
+int
+main (void)
+{
+  static const char *const ids[] = { "water", "water-95", "isopentane", "toluene", "r134a", "r245fa", "ammonia", "propane", "carbon-dioxide", "mm", "cyclopentane", "r1233zde" };
+  static const struct { const char *where, *pair; } columns[] = {
+    { "liquid", "ph" }, { "vapour", "ph" }, { "mixture", "ph" }, { "supercritical", "ph" }, { "liquid", "ps" }, { "vapour", "ps" },
+    { "vapour", "pT" }, { "liquid", "pT" }, { "vapour", "hs" }, { "mixture", "saturation" },
+  };
+  static Sample sample;
+  printf ("nanoseconds a call; (p,h) is to stay below %g\n%-16s", TARGET_PH, "");
+  for (gsize c = 0; c < G_N_ELEMENTS (columns); c++)
+    printf (" %6.6s %-4.4s", columns[c].where, columns[c].pair);
+  printf ("\n");
+  for (gsize i = 0; i < G_N_ELEMENTS (ids); i++)
+    {
+      gint64 begin = g_get_monotonic_time ();
+      sample.fluid = hl_fluid_lookup (ids[i]);
+      double load = (double) (g_get_monotonic_time () - begin) * 1e-3;
+      printf ("%-16s", ids[i]);
+      for (gsize c = 0; c < G_N_ELEMENTS (columns); c++)
+        {
+          fill (&sample, columns[c].where);
+          double ns = time_pair (&sample, columns[c].pair);
+          printf (" %10.0f%c", ns, columns[c].pair[1] == 'h' && ns > TARGET_PH ? '!' : ' ');
+          fflush (stdout);
+        }
+      printf (" first look-up %.2f ms\n", load);
+    }
+  return 0;
+}
