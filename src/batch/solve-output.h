@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #pragma once
 #include <stdio.h>
+#include "batch/command.h"
 #include "engine/engine.h"
 G_BEGIN_DECLS
 
@@ -10,4 +11,7 @@ char *hl_solution_json      (const HlSolution *solution, const GArray *yielded);
 void  hl_print_solution     (FILE *out, const HlSolution *solution, const GArray *yielded);
 /* Findings of at least @grade, each with its place and mends. */
 void  hl_print_findings     (FILE *out, const HlSolution *solution, HlGrade at_least);
+/* Summary, workbook, drawing on paper: mistakes of the command line first, then the files. */
+gboolean hl_check_handover  (const HlArguments *arguments, GError **error);
+gboolean hl_write_handover  (const HlSolution *solution, const HlArguments *arguments, GError **error);
 G_END_DECLS

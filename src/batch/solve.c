@@ -6,8 +6,6 @@
 #include "batch/solve-output.h"
 #include "draw/export.h"
 #include "draw/state-diagram.h"
-#include "draw/tables.h"
-#include "draw/xlsx.h"
 #include "plant/i18n.h"
 
 /* The options that take a file name, which may be "-". */
@@ -103,6 +101,8 @@ check_usage (const HlArguments *arguments, GError **error)
       for (guint n = 0; (diagram = hl_arguments_option (arguments, "diagram", n)) != NULL; n++)
         if (!check_diagram (diagram, error))
           return FALSE;
+      if (!hl_check_handover (arguments, error))
+        return FALSE;
       return drawing == NULL || strcmp (drawing, "-") == 0 || hl_format_from_path (drawing, &format, error);
     }
   return FALSE;
@@ -135,26 +135,10 @@ write_diagrams (const HlSolution *solution, const HlArguments *arguments, GError
 }
 
 static gboolean
-write_summary (const HlSolution *solution, const char *path, GError **error)
-{
-  g_autoptr (HlTable) table = hl_table_summary (solution, hl_plant_units (hl_solution_plant (solution)));
-  g_autofree char *csv = hl_table_csv (table);
-  return hl_export_text_file (csv, path, error);
-}
-
-static gboolean
-write_workbook (const HlSolution *solution, const char *path, GError **error)
-{
-  g_autoptr (GBytes) bytes = hl_export_workbook (solution, hl_plant_units (hl_solution_plant (solution)), error);
-  return bytes != NULL && hl_export_bytes_file (bytes, path, error);
-}
-
-static gboolean
 write_outputs (const HlSolution *solution, const GArray *yielded, const HlArguments *arguments, GError **error)
 {
   const char *json_path = hl_arguments_value (arguments, "json"), *csv_path = hl_arguments_value (arguments, "csv");
   const char *ledger_path = hl_arguments_value (arguments, "ledger"), *drawing = hl_arguments_value (arguments, "drawing");
-  const char *summary = hl_arguments_value (arguments, "summary"), *workbook = hl_arguments_value (arguments, "xlsx");
   if (json_path != NULL)
     {
       g_autofree char *json = hl_solution_json (solution, yielded);
@@ -173,9 +157,9 @@ write_outputs (const HlSolution *solution, const GArray *yielded, const HlArgume
       if (!hl_export_text_file (text, ledger_path, error))
         return FALSE;
     }
-  if ((summary != NULL && !write_summary (solution, summary, error)) || (workbook != NULL && !write_workbook (solution, workbook, error)))
-    return FALSE;
-  return (drawing == NULL || write_picture (solution, HL_PICTURE_DRAWING, drawing, error)) && write_diagrams (solution, arguments, error);
+  return hl_write_handover (solution, arguments, error)
+         && (drawing == NULL || hl_arguments_value (arguments, "paper") != NULL || write_picture (solution, HL_PICTURE_DRAWING, drawing, error))
+         && write_diagrams (solution, arguments, error);
 }
 
 static HlExit
@@ -193,7 +177,10 @@ run_solve (const HlArguments *arguments)
 
   g_autoptr(HlSolution) solution = hl_solve (plant, NULL);
   if (!write_outputs (solution, yielded, arguments, &error))
-    return hl_complain (HL_EXIT_FILE, g_steal_pointer (&error));
+    {
+      HlExit status = g_error_matches (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE) ? HL_EXIT_USAGE : HL_EXIT_FILE;
+      return hl_complain (status, g_steal_pointer (&error));
+    }
   /* Where standard output carries a file, a person still hears of errors. */
   if (hl_arguments_count_standard_output (arguments, file_options) == 0)
     hl_print_solution (stdout, solution, yielded);
@@ -226,6 +213,9 @@ static const HlBatchOption solve_options[] = {
   { "ledger", N_("FILE"), FALSE, N_("write the ledger as text in aligned columns") },
   { "xlsx", N_("FILE"), FALSE, N_("write summary, streams, components, values and findings as a workbook") },
   { "drawing", N_("FILE"), FALSE, N_("write the drawing; .svg, .pdf or .png") },
+  { "paper", N_("SIZE"), FALSE, N_("put the drawing on a sheet with title block and legends: A4, A3, A2, A1, Letter, Tabloid") },
+  { "scale", N_("NUMBER"), FALSE, N_("scale of the drawing on its sheet; as large as fits when it is not given") },
+  { "field", N_("NAME=TEXT"), TRUE, N_("fill a field of the sheet: variant, case, date, revision, drawn, checked, approved; may be repeated") },
   { "diagram", N_("ts|hs|ph FILE"), TRUE, N_("write a state diagram: temperature-entropy, enthalpy-entropy, pressure-enthalpy; may be repeated") },
 };
 

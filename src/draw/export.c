@@ -168,39 +168,58 @@ renumber_surfaces (const GByteArray *svg)
 }
 
 GBytes *
-hl_export_picture (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme_id, double width, double height, double scale, GError **error)
+hl_export_drawn (HlFormat format, const char *title, double width, double height, double scale, HlDrawFunc draw, gpointer data, GError **error)
 {
-  HlTheme theme;
   g_autoptr (GByteArray) bytes = g_byte_array_new ();
-  const HlPlant *plant;
   cairo_surface_t *surface;
   cairo_t *cr;
   gboolean is_done;
-  double usual_width = DIAGRAM_WIDTH, usual_height = DIAGRAM_HEIGHT;
-  g_return_val_if_fail (solution != NULL, NULL);
-  plant = hl_solution_plant (solution);
-  theme = *hl_theme (theme_id);
-  theme.font = HL_EXPORT_FONT;    /* the machine's own fonts would change the bytes */
-  if (picture == HL_PICTURE_DRAWING && !(width > 0.0 && height > 0.0))
-    hl_sheet_usual_size (&theme, plant, solution, &usual_width, &usual_height);
-  width = width > 0.0 ? width : usual_width;
-  height = height > 0.0 ? height : usual_height;
-  scale = scale > 0.0 ? scale : 1.0;
+  g_return_val_if_fail (draw != NULL, NULL);
   if (!check_size (width, height, scale, format, error))
     return NULL;
-  surface = open_surface (format, hl_plant_title (plant), width, height, scale, bytes);
+  surface = open_surface (format, title, width, height, scale, bytes);
   cr = cairo_create (surface);
   if (format == HL_FORMAT_PDF)
     cairo_scale (cr, POINTS_A_PIXEL, POINTS_A_PIXEL);
   else if (format == HL_FORMAT_PNG)
     cairo_scale (cr, scale, scale);
-  draw_picture (cr, &theme, solution, picture, width, height);
+  draw (cr, data);
   is_done = finish (cr, surface, format, bytes, error);
   cairo_destroy (cr);
   cairo_surface_destroy (surface);
   if (!is_done)
     return NULL;
   return g_byte_array_free_to_bytes (format == HL_FORMAT_SVG ? renumber_surfaces (bytes) : g_byte_array_ref (bytes));
+}
+
+typedef struct {
+  HlTheme           theme;
+  const HlSolution *solution;
+  HlPicture         picture;
+  double            width, height;
+} Picture;
+
+static void
+draw_picture_cb (cairo_t *cr, gpointer data)
+{
+  const Picture *picture = data;
+  draw_picture (cr, &picture->theme, picture->solution, picture->picture, picture->width, picture->height);
+}
+
+GBytes *
+hl_export_picture (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme_id, double width, double height, double scale, GError **error)
+{
+  Picture what = { .solution = solution, .picture = picture, .width = DIAGRAM_WIDTH, .height = DIAGRAM_HEIGHT };
+  const HlPlant *plant;
+  g_return_val_if_fail (solution != NULL, NULL);
+  plant = hl_solution_plant (solution);
+  what.theme = *hl_theme (theme_id);
+  what.theme.font = HL_EXPORT_FONT;    /* the machine's own fonts would change the bytes */
+  if (picture == HL_PICTURE_DRAWING && !(width > 0.0 && height > 0.0))
+    hl_sheet_usual_size (&what.theme, plant, solution, &what.width, &what.height);
+  what.width = width > 0.0 ? width : what.width;
+  what.height = height > 0.0 ? height : what.height;
+  return hl_export_drawn (format, hl_plant_title (plant), what.width, what.height, scale > 0.0 ? scale : 1.0, draw_picture_cb, &what, error);
 }
 
 static gboolean

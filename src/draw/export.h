@@ -19,6 +19,9 @@ gboolean hl_format_from_path (const char *path, HlFormat *format, GError **error
 GBytes  *hl_export_picture      (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, double width, double height, double scale, GError **error);
 /* To a file (temporary file, then renamed); path "-" is standard output. */
 gboolean hl_export_picture_file (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, const char *path, GError **error);
+/* Any drawing of @width x @height pixels, drawn once by @draw. */
+typedef void (*HlDrawFunc) (cairo_t *cr, gpointer data);
+GBytes  *hl_export_drawn        (HlFormat format, const char *title, double width, double height, double scale, HlDrawFunc draw, gpointer data, GError **error);
 /* The ledger: RFC 4180, units in the header, decimal points whatever the locale.  g_free(). */
 char    *hl_ledger_csv          (const HlSolution *solution, HlUnitSet units);
 /* The ledger in aligned columns, as rounded on screen.  g_free(). */

@@ -5,11 +5,13 @@ import io
 import json
 import os
 import re
+import shutil
+import subprocess
 import time
 import xml.etree.ElementTree as ElementTree
 import zipfile
 
-from tap import SOURCE, batch, main, plant, refused
+from tap import SOURCE, Skip, batch, main, plant, refused
 
 DEMOS = ("ferry-lane", "linden-row", "tallow-fen")
 SHEET = {"s": "http://schemas.openxmlformats.org/spreadsheetml/2006/main"}
@@ -124,6 +126,66 @@ def test_names_of_other_scripts_and_long_ones():
     batch("solve", "-", "--xlsx", "x.xlsx", stdin=json.dumps(document))
     sheets, _ = read_workbook("x.xlsx")
     assert sheets["Streams"][0][0].startswith(document["title"])
+
+
+def poppler(tool, *arguments):
+    if shutil.which(tool) is None:
+        raise Skip(f"there is no {tool}")
+    return subprocess.run([tool, *arguments], capture_output=True, text=True, timeout=60, check=True).stdout
+
+
+PAPERS = {"A4": (297, 210), "A3": (420, 297), "A2": (594, 420), "A1": (841, 594), "Letter": (279.4, 215.9), "Tabloid": (431.8, 279.4)}
+CAUTION = "Concept figures only: not for construction, operation or purchase; local codes and licensed practice decide."
+
+
+def test_every_drawing_fits_every_paper():
+    for name in DEMOS:
+        found = json.loads(batch("solve", demo(name), "--json", "-")[0])
+        with open(demo(name), encoding="utf-8") as file:
+            document = json.load(file)
+        n_assumed = int(re.search(r"(\d+) values assumed", batch("solve", demo(name))[0])[1])
+        for paper, (width, height) in PAPERS.items():
+            batch("solve", demo(name), "--drawing", "x.pdf", "--paper", paper.lower(), "--field", "date=2026-12-01", "--field", "drawn=H. Weaver",
+                  "--field", "checked=J. Reed", "--field", "case=100 % load", "--field", "variant=base", "--field", "revision=B")
+            size = re.search(r"Page size:\s+([\d.]+) x ([\d.]+) pts", poppler("pdfinfo", "x.pdf"))
+            assert abs(float(size[1]) - width / 25.4 * 72) < 0.6 and abs(float(size[2]) - height / 25.4 * 72) < 0.6, (paper, size[0])
+            text = " ".join(poppler("pdftotext", "-layout", "x.pdf", "-").split())
+            raw = " ".join(poppler("pdftotext", "-raw", "x.pdf", "-").split())
+            for words in (document["title"], "2026-12-01", "H. Weaver", "J. Reed", "100 % load", "Approved", "Legend", "Performance", "flow [kg/s]"):
+                assert words in text or words in raw, (name, paper, words)
+            assert CAUTION in raw, (name, paper)
+            # No figure, name or field of the sheet was cut.
+            assert "…" not in text, (name, paper, text)
+            assert f"{found['plant']['net_power_W'] / 1e6:.2f} MW" in text and f"{100 * found['plant']['cycle_efficiency']:.2f} %" in text
+            assert f"Assumed values open {n_assumed} Findings {len(found['findings'])} " in raw, (name, paper, raw)
+            fonts = poppler("pdffonts", "x.pdf").splitlines()[2:]
+            assert fonts and all(line.split()[-5] == "yes" for line in fonts), fonts
+
+
+def test_a_sheet_is_the_same_bytes_each_time_in_every_format():
+    for ending, start in (("svg", b"<?xml"), ("pdf", b"%PDF-"), ("png", b"\x89PNG")):
+        contents = []
+        for _ in range(2):
+            batch("solve", demo("ferry-lane"), "--drawing", f"x.{ending}", "--paper", "A4")
+            with open(f"x.{ending}", "rb") as file:
+                contents.append(file.read())
+        assert contents[0] == contents[1] and contents[0].startswith(start), ending
+
+
+def test_the_scale_is_kept_or_refused():
+    batch("solve", demo("tallow-fen"), "--drawing", "x.pdf", "--paper", "A3", "--scale", "0.5")
+    assert "A3 · 0.50" in poppler("pdftotext", "x.pdf", "-")
+    refused("solve", demo("tallow-fen"), "--drawing", "x.svg", "--paper", "A4", "--scale", "3", status=2, says=["--scale", "larger than a sheet of A4"])
+
+
+def test_mistakes_of_the_sheet_are_named():
+    loop = plant("loop.heatloom")
+    refused("solve", loop, "--drawing", "x.pdf", "--paper", "A9", status=2, says=["A9", "A4, A3, A2, A1, Letter, Tabloid"])
+    refused("solve", loop, "--paper", "A4", status=2, says="--drawing")
+    refused("solve", loop, "--drawing", "x.pdf", "--scale", "1", status=2, says="--paper")
+    refused("solve", loop, "--drawing", "x.pdf", "--paper", "A4", "--scale", "big", status=2, says="big")
+    refused("solve", loop, "--drawing", "x.pdf", "--paper", "A4", "--field", "author=x", status=2, says=["author", "approved"])
+    refused("solve", loop, "--drawing", "x.pdf", "--paper", "A4", "--field", "date", status=2, says="NAME=TEXT")
 
 
 def test_files_that_cannot_be_written():

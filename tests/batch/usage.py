@@ -21,7 +21,7 @@ def test_every_command_has_its_help():
         assert "Caution" in out
         assert "--report" not in out
     out, _ = batch("solve", "--help")
-    for option in ("--set ADDRESS=VALUE", "--json FILE", "--csv FILE", "--summary FILE", "--ledger FILE", "--xlsx FILE", "--drawing FILE", "--diagram ts|hs|ph FILE"):
+    for option in ("--set ADDRESS=VALUE", "--json FILE", "--csv FILE", "--summary FILE", "--ledger FILE", "--xlsx FILE", "--drawing FILE", "--paper SIZE", "--field NAME=TEXT", "--diagram ts|hs|ph FILE"):
         assert option in out, option
 
 
