@@ -3,6 +3,7 @@
 #pragma once
 #include "app/hl-quantity-row.h"
 #include "app/hl-pane.h"
+#include "app/hl-scrub.h"
 G_BEGIN_DECLS
 
 struct _HlQuantityRow {
@@ -24,6 +25,9 @@ struct _HlQuantityRow {
   char          *described;      /* to assistive programs: "65.00 bar, assumed" */
   char          *shown;          /* the text last put into the entry: anything else has been typed */
   gboolean       is_focused;
+  HlScrub       *scrub;          /* while the value is being dragged */
+  double         drag_x, drag_amount;   /* last place of the pointer; what the value has moved [units shown] */
+  gboolean       is_drag_over;   /* this drag has nothing to move, or not any more */
   gboolean       is_retired;     /* about to be removed: commits nothing any more */
 };
 
@@ -33,6 +37,13 @@ const HlValue *hl_quantity_row_value   (HlQuantityRow *self);                /* 
 gboolean       hl_quantity_row_number  (HlQuantityRow *self, double *si);    /* as given or solved; FALSE unknown */
 void           hl_quantity_row_set_note (HlQuantityRow *self, const char *text, gboolean is_error);   /* NULL: none */
 void           hl_quantity_row_start_typing (HlQuantityRow *self, const char *text);
+gboolean       hl_quantity_row_is_typing (HlQuantityRow *self);
+/* Tries what has been typed; FALSE where it cannot be taken: it stays, with what is wrong under it. */
+gboolean       hl_quantity_row_commit (HlQuantityRow *self);
+/* hl-quantity-row-scrub.c */
+void           hl_quantity_row_add_scrub    (HlQuantityRow *self);
+void           hl_quantity_row_update_scrub (HlQuantityRow *self);
+gboolean       hl_quantity_row_can_scrub    (HlQuantityRow *self);
 /* hl-quantity-row-origin.c */
 void           hl_quantity_row_add_origin    (HlQuantityRow *self);
 void           hl_quantity_row_update_origin (HlQuantityRow *self);

@@ -112,8 +112,8 @@ value_text (HlQuantityRow *self, char **unit)
 
 /* --- the entry --- */
 
-static gboolean
-is_typing (HlQuantityRow *self)
+gboolean
+hl_quantity_row_is_typing (HlQuantityRow *self)
 {
   return g_strcmp0 (gtk_editable_get_text (GTK_EDITABLE (self->entry)), self->shown) != 0;
 }
@@ -123,7 +123,7 @@ static void
 fit_entry (HlQuantityRow *self)
 {
   long length = g_utf8_strlen (gtk_editable_get_text (GTK_EDITABLE (self->entry)), -1);
-  gboolean is_edited = self->is_focused || is_typing (self);
+  gboolean is_edited = self->is_focused || hl_quantity_row_is_typing (self);
   int chars = (int) CLAMP (is_edited ? MAX (length + 1, 7) : length, 2, 17);
 
   gtk_widget_set_visible (self->origin_button, !is_edited || length <= 10);      /* room for a tie */
@@ -142,7 +142,7 @@ show_value (HlQuantityRow *self)
 
   gtk_label_set_text (GTK_LABEL (self->unit), unit);
   gtk_widget_set_visible (self->unit, *unit != '\0');
-  if (g_strcmp0 (text, self->shown) == 0 && !is_typing (self))
+  if (g_strcmp0 (text, self->shown) == 0 && !hl_quantity_row_is_typing (self))
     return;
   g_free (self->shown);
   self->shown = g_strdup (text);
@@ -179,17 +179,16 @@ restore (HlQuantityRow *self)
   show_value (self);
 }
 
-/* Tries what has been typed; a bad text stays, with what is wrong under it. */
-static void
-commit (HlQuantityRow *self)
+gboolean
+hl_quantity_row_commit (HlQuantityRow *self)
 {
   g_autoptr (GError) error = NULL;
   g_autofree char *text = g_strstrip (g_strdup (gtk_editable_get_text (GTK_EDITABLE (self->entry))));
   HlAddress carrier = hl_quantity_row_carrier (self);
   gboolean done;
 
-  if (self->is_retired || !is_typing (self))
-    return;
+  if (self->is_retired || !hl_quantity_row_is_typing (self))
+    return TRUE;
   g_object_ref (self);               /* "changed" may take the row away */
   if (*text == '\0')
     done = hl_quantity_row_value (self) == NULL || hl_session_set_value (self->session, &carrier, NULL, &error);
@@ -204,6 +203,7 @@ commit (HlQuantityRow *self)
     }
   hl_quantity_row_update (self);
   g_object_unref (self);
+  return done;
 }
 
 /* Return on an assumed value that was not touched confirms it. */
@@ -225,8 +225,8 @@ confirm_assumed (HlQuantityRow *self)
 static void
 entry_activate_cb (GtkEntry *entry, HlQuantityRow *self)
 {
-  if (is_typing (self))
-    commit (self);
+  if (hl_quantity_row_is_typing (self))
+    hl_quantity_row_commit (self);
   else
     confirm_assumed (self);
 }
@@ -235,7 +235,7 @@ static void
 entry_changed_cb (GtkEditable *entry, HlQuantityRow *self)
 {
   fit_entry (self);
-  if (is_typing (self))
+  if (hl_quantity_row_is_typing (self))
     gtk_widget_add_css_class (self->entry, "typing");
   else
     gtk_widget_remove_css_class (self->entry, "typing");
@@ -245,7 +245,7 @@ static gboolean
 select_all_idle (gpointer data)
 {
   HlQuantityRow *self = data;
-  if (self->is_focused && !is_typing (self))
+  if (self->is_focused && !hl_quantity_row_is_typing (self))
     gtk_editable_select_region (GTK_EDITABLE (self->entry), 0, -1);
   return G_SOURCE_REMOVE;
 }
@@ -255,7 +255,7 @@ focus_enter_cb (GtkEventControllerFocus *controller, HlQuantityRow *self)
 {
   self->is_focused = TRUE;
   gtk_widget_add_css_class (GTK_WIDGET (self), "active");
-  if (is_typing (self))
+  if (hl_quantity_row_is_typing (self))
     return;
   show_value (self);
   /* A click places the cursor after the focus has come: select afterwards. */
@@ -268,8 +268,8 @@ focus_leave_cb (GtkEventControllerFocus *controller, HlQuantityRow *self)
   self->is_focused = FALSE;
   gtk_widget_remove_css_class (GTK_WIDGET (self), "active");
   gtk_editable_select_region (GTK_EDITABLE (self->entry), 0, 0);
-  if (is_typing (self))
-    commit (self);
+  if (hl_quantity_row_is_typing (self))
+    hl_quantity_row_commit (self);
   else
     restore (self);
   fit_entry (self);
@@ -281,7 +281,7 @@ key_pressed_cb (GtkEventControllerKey *controller, guint key, guint code, GdkMod
   switch (key)
     {
     case GDK_KEY_Escape:
-      if (!is_typing (self) && !gtk_widget_get_visible (self->note))
+      if (!hl_quantity_row_is_typing (self) && !gtk_widget_get_visible (self->note))
         return GDK_EVENT_PROPAGATE;
       restore (self);
       return GDK_EVENT_STOP;
@@ -399,6 +399,7 @@ build (HlQuantityRow *self)
   hl_quantity_row_add_origin (self);
   g_signal_connect (click, "pressed", G_CALLBACK (line_pressed_cb), self);
   gtk_widget_add_controller (self->line, GTK_EVENT_CONTROLLER (click));
+  hl_quantity_row_add_scrub (self);
 
   self->note = hl_pane_label ("", "note");
   gtk_label_set_wrap (GTK_LABEL (self->note), TRUE);
@@ -434,6 +435,8 @@ hl_quantity_row_dispose (GObject *object)
   GtkWidget *child;
 
   self->is_retired = TRUE;
+  if (self->scrub != NULL)
+    hl_scrub_cancel_later (g_steal_pointer (&self->scrub));
   while ((child = gtk_widget_get_first_child (GTK_WIDGET (self))) != NULL)
     gtk_widget_unparent (child);
   g_clear_object (&self->session);
@@ -514,7 +517,8 @@ hl_quantity_row_update (HlQuantityRow *self)
   if (self->is_retired || hl_plant_quantity_kind (plant, &self->address) == NULL)
     return;
   hl_quantity_row_update_origin (self);
-  if (!is_typing (self))
+  hl_quantity_row_update_scrub (self);
+  if (!hl_quantity_row_is_typing (self))
     show_value (self);
   if (gtk_widget_get_visible (self->explanation))
     hl_quantity_row_update_explanation (self);
@@ -529,7 +533,7 @@ hl_quantity_row_address (HlQuantityRow *self)
 char *
 hl_quantity_row_take_draft (HlQuantityRow *self)
 {
-  char *draft = is_typing (self) ? g_strdup (gtk_editable_get_text (GTK_EDITABLE (self->entry))) : NULL;
+  char *draft = hl_quantity_row_is_typing (self) ? g_strdup (gtk_editable_get_text (GTK_EDITABLE (self->entry))) : NULL;
   self->is_retired = TRUE;
   return draft;
 }

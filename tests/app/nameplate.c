@@ -306,6 +306,142 @@ test_several_selected_are_listed (Fixture *f, gconstpointer data)
   g_assert_false (hl_session_is_selected (f->session, "T1"));
 }
 
+static gpointer
+controller_of (GtkWidget *widget, GType type)
+{
+  g_autoptr (GListModel) controllers = gtk_widget_observe_controllers (widget);
+
+  for (guint n = 0; n < g_list_model_get_n_items (controllers); n++)
+    {
+      g_autoptr (GtkEventController) controller = g_list_model_get_item (controllers, n);
+      if (G_TYPE_CHECK_INSTANCE_TYPE (controller, type))
+        return controller;              /* the widget keeps it */
+    }
+  g_assert_not_reached ();
+}
+
+static void
+press (Fixture *f, const char *address, guint key, GdkModifierType state)
+{
+  gboolean handled = FALSE;
+
+  g_signal_emit_by_name (controller_of (find_row (f, address), GTK_TYPE_EVENT_CONTROLLER_KEY), "key-pressed", key, 0u, state, &handled);
+  settle_down ();
+  g_assert_true (handled);
+}
+
+static void
+test_ctrl_arrows_step_the_value (Fixture *f, gconstpointer data)
+{
+  gtk_widget_grab_focus (entry_of (f, "T1.inlet.p"));
+  press (f, "T1.inlet.p", GDK_KEY_Up, GDK_CONTROL_MASK);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 65.5e5, 1e-3);     /* 1 % of 65 bar, rounded */
+  press (f, "T1.inlet.p", GDK_KEY_Up, GDK_CONTROL_MASK);
+  press (f, "T1.inlet.p", GDK_KEY_Down, GDK_CONTROL_MASK | GDK_SHIFT_MASK);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 65.95e5, 1e-3);
+  g_assert_cmpstr (text_of (f, "T1.inlet.p"), ==, "65.95");
+  g_assert_true (hl_solution_is_solved (hl_session_solution (f->session)));
+  /* Presses close to each other are one step. */
+  hl_session_undo (f->session);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 65e5, 1e-3);
+  g_assert_false (hl_session_can_undo (f->session));
+}
+
+/* An efficiency steps by a hundredth, and is given from then on; its limit holds. */
+static void
+test_ctrl_arrows_keep_the_limits (Fixture *f, gconstpointer data)
+{
+  press (f, "T1.mechanical_efficiency", GDK_KEY_Up, GDK_CONTROL_MASK);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.mechanical_efficiency")->value, 1.0, 1e-9);
+  g_assert_cmpint (value_of (f, "T1.mechanical_efficiency")->origin, ==, HL_ORIGIN_GIVEN);
+  press (f, "T1.mechanical_efficiency", GDK_KEY_Up, GDK_CONTROL_MASK);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.mechanical_efficiency")->value, 1.0, 1e-9);
+  g_assert_true (shows_text (find_row (f, "T1.mechanical_efficiency"), "1.01"));
+}
+
+static void
+test_found_and_unread_values_do_not_step (Fixture *f, gconstpointer data)
+{
+  press (f, "T1.power", GDK_KEY_Up, GDK_CONTROL_MASK);
+  g_assert_null (value_of (f, "T1.power"));
+  g_assert_true (shows_text (find_row (f, "T1.power"), "given or assumed"));
+  gtk_widget_grab_focus (entry_of (f, "T1.inlet.p"));
+  gtk_editable_set_text (GTK_EDITABLE (entry_of (f, "T1.inlet.p")), "eighty");
+  press (f, "T1.inlet.p", GDK_KEY_Up, GDK_CONTROL_MASK);
+  g_assert_cmpstr (text_of (f, "T1.inlet.p"), ==, "eighty");
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 65e5, 1e-3);
+  g_assert_false (hl_session_can_undo (f->session));
+}
+
+static gboolean
+has_drag (GtkWidget *widget, gconstpointer data)
+{
+  return gtk_widget_has_css_class (widget, "line");
+}
+
+static gboolean
+is_name (GtkWidget *widget, gconstpointer data)
+{
+  return gtk_widget_has_css_class (widget, "name");
+}
+
+/* The gesture on a row's line, begun on the name of the quantity. */
+static gpointer
+begin_drag (Fixture *f, const char *address)
+{
+  GtkWidget *row = find_row (f, address), *line = find_widget (row, has_drag, NULL), *name = find_widget (row, is_name, NULL);
+  gpointer drag = controller_of (line, GTK_TYPE_GESTURE_DRAG);
+  graphene_rect_t bounds;
+
+  gtk_test_widget_wait_for_draw (f->window);
+  g_assert_true (gtk_widget_compute_bounds (name, line, &bounds));
+  g_signal_emit_by_name (drag, "drag-begin", bounds.origin.x + 12.0, bounds.origin.y + bounds.size.height / 2.0);
+  return drag;
+}
+
+static void
+test_drag_on_the_name_moves_the_value (Fixture *f, gconstpointer data)
+{
+  gpointer drag = begin_drag (f, "T1.inlet.p");
+
+  g_signal_emit_by_name (drag, "drag-update", 3.0, 0.0);
+  g_assert_true (hl_session_plant (f->session) == hl_session_base (f->session));
+  g_signal_emit_by_name (drag, "drag-update", 6.0 + 60.0, 0.0);              /* ten steps of 0.5 bar */
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 70e5, 1e-3);
+  g_assert_true (hl_solution_plant (hl_session_solution (f->session)) == hl_session_plant (f->session));   /* solved live */
+  g_assert_true (g_str_has_prefix (text_of (f, "T1.inlet.p"), "70"));
+  g_assert_false (hl_session_can_undo (f->session));
+  g_signal_emit_by_name (drag, "drag-update", 6.0 - 60.0, 0.0);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 60e5, 1e-3);
+  g_signal_emit_by_name (drag, "drag-end", 6.0 - 60.0, 0.0);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 60e5, 1e-3);
+  g_assert_true (hl_session_plant (f->session) == hl_session_base (f->session));
+  hl_session_undo (f->session);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 65e5, 1e-3);
+  g_assert_false (hl_session_can_undo (f->session));
+}
+
+static void
+test_escape_and_undo_end_a_drag (Fixture *f, gconstpointer data)
+{
+  gpointer drag = begin_drag (f, "T1.inlet.p");
+
+  g_signal_emit_by_name (drag, "drag-update", 66.0, 0.0);
+  press (f, "T1.inlet.p", GDK_KEY_Escape, 0);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 65e5, 1e-3);
+  g_signal_emit_by_name (drag, "drag-update", 90.0, 0.0);                    /* over, though the button is still down */
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 65e5, 1e-3);
+  g_signal_emit_by_name (drag, "drag-end", 90.0, 0.0);
+  g_assert_false (hl_session_can_undo (f->session));
+  /* The row goes while its value is dragged: nothing stays of it. */
+  drag = begin_drag (f, "T1.inlet.p");
+  g_signal_emit_by_name (drag, "drag-update", 66.0, 0.0);
+  hl_session_select (f->session, "P1", FALSE);
+  settle_down ();
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.inlet.p")->value, 65e5, 1e-3);
+  g_assert_true (hl_session_plant (f->session) == hl_session_base (f->session));
+}
+
 int
 main (int argc, char **argv)
 {
@@ -329,6 +465,11 @@ main (int argc, char **argv)
   ADD ("going to a quantity focuses its row", "P1", test_going_to_a_quantity_focuses_its_row);
   ADD ("nothing selected shows the plant", NULL, test_nothing_selected_shows_the_plant);
   ADD ("several selected are listed", NULL, test_several_selected_are_listed);
+  ADD ("Ctrl and arrows step the value", "T1", test_ctrl_arrows_step_the_value);
+  ADD ("Ctrl and arrows keep the limits", "T1", test_ctrl_arrows_keep_the_limits);
+  ADD ("found and unread values do not step", "T1", test_found_and_unread_values_do_not_step);
+  ADD ("drag on the name moves the value", "T1", test_drag_on_the_name_moves_the_value);
+  ADD ("Escape and undo end a drag", "T1", test_escape_and_undo_end_a_drag);
 #undef ADD
   return g_test_run ();
 }
