@@ -20,6 +20,8 @@ hl_helmholtz_free (HlHelmholtz *eq)
   g_free (eq->safety_class);
   g_free (eq->safety_source);
   g_free (eq->gwp_source);
+  g_free (eq->hazard);
+  g_free (eq->stable_source);
   g_strfreev (eq->aliases);
   g_free (eq->ideal_power);
   g_free (eq->planck);

@@ -82,9 +82,10 @@ typedef struct {
 
 typedef struct {
   HlFluid fluid;                         /* its data points back to this record */
-  char   *source, *formula, *cas, *note, *safety_class, *safety_source, *zero, *gwp_source;
+  char   *source, *formula, *cas, *note, *safety_class, *safety_source, *zero, *gwp_source, *hazard, *stable_source;
   GStrv   aliases;
-  double  gwp100;                        /* NaN where not known */
+  double  gwp100, T_stable;              /* NaN where not known */
+  gboolean is_stable_weak;
   double  acentric_factor;
   double  R;                             /* gas constant over molar mass [J/(kg K)] */
   double  d_reducing, T_reducing;        /* [kg/m3], [K] */

@@ -330,6 +330,22 @@ read_density_start (Reader *reader, JsonObject *starts, const char *key, double 
   return refuse (reader, "%sform is \"%s\"; known are linear, exp, exp_tau", path, form);
 }
 
+/* Up to which temperature the substance itself is known to last. */
+static gboolean
+read_stability (Reader *reader, JsonObject *root, HlHelmholtz *eq)
+{
+  eq->T_stable = NAN;
+  if (member (root, "stable_to") == NULL)
+    return TRUE;
+  JsonObject *stable = read_object (reader, root, "stable_to");
+  if (stable == NULL || !read_number (reader, stable, "stable_to.", "T_K", 0.0, &eq->T_stable)
+      || !read_text (reader, stable, "source", TRUE, &eq->stable_source))
+    return FALSE;
+  JsonNode *weak = member (stable, "weak");
+  eq->is_stable_weak = weak == NULL || !JSON_NODE_HOLDS_VALUE (weak) || json_node_get_boolean (weak);
+  return TRUE;
+}
+
 static gboolean
 read_words (Reader *reader, JsonObject *root, HlHelmholtz *eq)
 {
@@ -340,7 +356,8 @@ read_words (Reader *reader, JsonObject *root, HlHelmholtz *eq)
                 && read_text (reader, root, "note", FALSE, &eq->note) && read_text (reader, root, "zero", FALSE, &eq->zero)
                 && read_text (reader, root, "safety_class", FALSE, &eq->safety_class)
                 && read_text (reader, root, "safety_class_source", FALSE, &eq->safety_source)
-                && read_text (reader, root, "gwp100_source", FALSE, &eq->gwp_source);
+                && read_text (reader, root, "gwp100_source", FALSE, &eq->gwp_source) && read_text (reader, root, "hazard", FALSE, &eq->hazard)
+                && read_stability (reader, root, eq);
   eq->fluid.id = id;
   eq->fluid.name = name;
   eq->fluid.formulation = formulation;

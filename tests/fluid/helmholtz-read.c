@@ -47,6 +47,7 @@ test_wrong_files_are_refused (void)
     { "\"d\": [1, 1, 1,", "\"d\": [1, 1,", "residual[0].\"d\" has 11 numbers but \"n\" has 12" },
     { "\"l\": [0, 0", "\"l\": [0.5, 0", "whole numbers from 0 to 16" },
     { "[1.0963, -3.0402", "[1.0963, true", "residual[0].\"n\"[1] is no finite number" },
+    { "{ \"T_K\": 543.15", "{ \"T_K\": \"hot\"", "stable_to.T_K is missing or no number" },
     { "\"form\": \"linear\"", "\"form\": \"line\"", "saturation_start.rho_liquid.form is \"line\"; known are linear" },
     /* Figures that read well and cannot be right. */
     { "\"a\": 3 }", "\"a\": -30 }", "no positive heat capacity" },
