@@ -3,6 +3,7 @@
 #pragma once
 #include <stdio.h>
 #include "batch/command.h"
+#include "draw/export.h"
 #include "engine/engine.h"
 G_BEGIN_DECLS
 
@@ -14,4 +15,9 @@ void  hl_print_findings     (FILE *out, const HlSolution *solution, HlGrade at_l
 /* Summary, workbook, drawing on paper: mistakes of the command line first, then the files. */
 gboolean hl_check_handover  (const HlArguments *arguments, GError **error);
 gboolean hl_write_handover  (const HlSolution *solution, const HlArguments *arguments, GError **error);
+/* State diagrams, heat diagrams: mistakes of the command line first, those in @plant too where it is known; then the files. */
+gboolean hl_check_pictures  (const HlPlant *plant, const HlArguments *arguments, GError **error);
+gboolean hl_write_pictures  (const HlSolution *solution, const HlArguments *arguments, GError **error);
+/* @component: an index, or -1. */
+gboolean hl_write_picture   (const HlSolution *solution, HlPicture picture, int component, const char *path, GError **error);
 G_END_DECLS

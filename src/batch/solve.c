@@ -5,11 +5,10 @@
 #include "batch/command.h"
 #include "batch/solve-output.h"
 #include "draw/export.h"
-#include "draw/state-diagram.h"
 #include "plant/i18n.h"
 
 /* The options that take a file name, which may be "-". */
-static const char *const file_options[] = { "json", "csv", "summary", "ledger", "xlsx", "drawing", "diagram", NULL };
+static const char *const file_options[] = { "json", "csv", "summary", "ledger", "xlsx", "drawing", "diagram", "heat", NULL };
 
 #define LONGEST_INPUT (17u << 20)
 
@@ -75,63 +74,21 @@ set_values (HlPlant **plant, const HlArguments *arguments, GArray *yielded, GErr
   return TRUE;
 }
 
-/* @diagram: which, and the file. */
-static gboolean
-check_diagram (char *const *diagram, GError **error)
-{
-  HlStateDiagramKind kind;
-  HlFormat format;
-  if (hl_state_diagram_kind_from_id (diagram[0], &kind))
-    return strcmp (diagram[1], "-") == 0 || hl_format_from_path (diagram[1], &format, error);
-  g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("--diagram: there is no diagram “%s”; there are ts, hs and ph"), diagram[0]);
-  return FALSE;
-}
-
 /* Mistakes of the command line show before anything is read or written. */
 static gboolean
 check_usage (const HlArguments *arguments, GError **error)
 {
   const char *drawing = hl_arguments_value (arguments, "drawing");
-  char *const *diagram;
   HlFormat format;
   if (hl_arguments_count_standard_output (arguments, file_options) > 1)
     g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("only one output can go to standard output (-)"));
   else
     {
-      for (guint n = 0; (diagram = hl_arguments_option (arguments, "diagram", n)) != NULL; n++)
-        if (!check_diagram (diagram, error))
-          return FALSE;
-      if (!hl_check_handover (arguments, error))
+      if (!hl_check_pictures (NULL, arguments, error) || !hl_check_handover (arguments, error))
         return FALSE;
       return drawing == NULL || strcmp (drawing, "-") == 0 || hl_format_from_path (drawing, &format, error);
     }
   return FALSE;
-}
-
-static gboolean
-write_picture (const HlSolution *solution, HlPicture picture, const char *path, GError **error)
-{
-  /* A picture without a file name has no ending that says its format. */
-  HlFormat format = HL_FORMAT_SVG;
-  if (strcmp (path, "-") != 0 && !hl_format_from_path (path, &format, error))
-    return FALSE;
-  return hl_export_picture_file (solution, picture, format, HL_THEME_PAPER, path, error);
-}
-
-static gboolean
-write_diagrams (const HlSolution *solution, const HlArguments *arguments, GError **error)
-{
-  static const HlPicture pictures[HL_N_STATE_DIAGRAMS] = {
-    [HL_STATE_DIAGRAM_TS] = HL_PICTURE_STATE_DIAGRAM, [HL_STATE_DIAGRAM_HS] = HL_PICTURE_HS_DIAGRAM, [HL_STATE_DIAGRAM_PH] = HL_PICTURE_PH_DIAGRAM,
-  };
-  char *const *diagram;
-  for (guint n = 0; (diagram = hl_arguments_option (arguments, "diagram", n)) != NULL; n++)
-    {
-      HlStateDiagramKind kind;
-      if (hl_state_diagram_kind_from_id (diagram[0], &kind) && !write_picture (solution, pictures[kind], diagram[1], error))
-        return FALSE;
-    }
-  return TRUE;
 }
 
 static gboolean
@@ -158,8 +115,8 @@ write_outputs (const HlSolution *solution, const GArray *yielded, const HlArgume
         return FALSE;
     }
   return hl_write_handover (solution, arguments, error)
-         && (drawing == NULL || hl_arguments_value (arguments, "paper") != NULL || write_picture (solution, HL_PICTURE_DRAWING, drawing, error))
-         && write_diagrams (solution, arguments, error);
+         && (drawing == NULL || hl_arguments_value (arguments, "paper") != NULL || hl_write_picture (solution, HL_PICTURE_DRAWING, -1, drawing, error))
+         && hl_write_pictures (solution, arguments, error);
 }
 
 static HlExit
@@ -172,7 +129,7 @@ run_solve (const HlArguments *arguments)
   if (plant == NULL)
     return hl_complain (HL_EXIT_FILE, g_steal_pointer (&error));
   g_autoptr(GArray) yielded = g_array_new (FALSE, FALSE, sizeof (HlYield));
-  if (!set_values (&plant, arguments, yielded, &error))
+  if (!hl_check_pictures (plant, arguments, &error) || !set_values (&plant, arguments, yielded, &error))
     return hl_complain (HL_EXIT_USAGE, g_steal_pointer (&error));
 
   g_autoptr(HlSolution) solution = hl_solve (plant, NULL);
@@ -217,6 +174,7 @@ static const HlBatchOption solve_options[] = {
   { "scale", N_("NUMBER"), FALSE, N_("scale of the drawing on its sheet; as large as fits when it is not given") },
   { "field", N_("NAME=TEXT"), TRUE, N_("fill a field of the sheet: variant, case, date, revision, drawn, checked, approved; may be repeated") },
   { "diagram", N_("ts|hs|ph FILE"), TRUE, N_("write a state diagram: temperature-entropy, enthalpy-entropy, pressure-enthalpy; may be repeated") },
+  { "heat", N_("COMPONENT FILE"), TRUE, N_("write temperature over heat of an exchanger, or of all together (all); may be repeated") },
 };
 
 const HlBatchCommand hl_command_solve = {

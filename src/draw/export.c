@@ -6,6 +6,7 @@
 #include <math.h>
 #include <stdio.h>
 #include <string.h>
+#include "draw/heat-diagram.h"
 #include "draw/sheet.h"
 #include "draw/state-diagram.h"
 #include "draw/text.h"
@@ -45,7 +46,14 @@ draw_state_diagram (cairo_t *cr, const HlTheme *theme, const HlSolution *solutio
 }
 
 static void
-draw_picture (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, HlPicture picture, double width, double height)
+draw_heat (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, int component, double width, double height)
+{
+  g_autoptr (HlHeatDiagram) diagram = hl_heat_diagram_new (solution, component, hl_plant_units (hl_solution_plant (solution)), width, height);
+  hl_heat_diagram_draw (diagram, cr, theme, !hl_solution_is_solved (solution));
+}
+
+static void
+draw_picture (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, HlPicture picture, int component, double width, double height)
 {
   hl_set_colour (cr, &theme->ground);
   cairo_paint (cr);
@@ -59,6 +67,9 @@ draw_picture (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, HlP
       break;
     case HL_PICTURE_PH_DIAGRAM:
       draw_state_diagram (cr, theme, solution, HL_STATE_DIAGRAM_PH, width, height);
+      break;
+    case HL_PICTURE_HEAT:
+      draw_heat (cr, theme, solution, component, width, height);
       break;
     case HL_PICTURE_STATE_DIAGRAM:
     default:
@@ -196,6 +207,7 @@ typedef struct {
   HlTheme           theme;
   const HlSolution *solution;
   HlPicture         picture;
+  int               component;
   double            width, height;
 } Picture;
 
@@ -203,13 +215,13 @@ static void
 draw_picture_cb (cairo_t *cr, gpointer data)
 {
   const Picture *picture = data;
-  draw_picture (cr, &picture->theme, picture->solution, picture->picture, picture->width, picture->height);
+  draw_picture (cr, &picture->theme, picture->solution, picture->picture, picture->component, picture->width, picture->height);
 }
 
 GBytes *
-hl_export_picture (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme_id, double width, double height, double scale, GError **error)
+hl_export_component (const HlSolution *solution, HlPicture picture, int component, HlFormat format, HlThemeId theme_id, double width, double height, double scale, GError **error)
 {
-  Picture what = { .solution = solution, .picture = picture, .width = DIAGRAM_WIDTH, .height = DIAGRAM_HEIGHT };
+  Picture what = { .solution = solution, .picture = picture, .component = component, .width = DIAGRAM_WIDTH, .height = DIAGRAM_HEIGHT };
   const HlPlant *plant;
   g_return_val_if_fail (solution != NULL, NULL);
   plant = hl_solution_plant (solution);
@@ -220,6 +232,12 @@ hl_export_picture (const HlSolution *solution, HlPicture picture, HlFormat forma
   what.width = width > 0.0 ? width : what.width;
   what.height = height > 0.0 ? height : what.height;
   return hl_export_drawn (format, hl_plant_title (plant), what.width, what.height, scale > 0.0 ? scale : 1.0, draw_picture_cb, &what, error);
+}
+
+GBytes *
+hl_export_picture (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, double width, double height, double scale, GError **error)
+{
+  return hl_export_component (solution, picture, -1, format, theme, width, height, scale, error);
 }
 
 static gboolean
@@ -245,10 +263,10 @@ write_file (const char *path, const void *data, gsize length, GError **error)
 }
 
 gboolean
-hl_export_picture_file (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, const char *path, GError **error)
+hl_export_component_file (const HlSolution *solution, HlPicture picture, int component, HlFormat format, HlThemeId theme, const char *path, GError **error)
 {
   double scale = format == HL_FORMAT_PNG ? 2.0 : 1.0;    /* sharp on screens and slides */
-  g_autoptr (GBytes) bytes = hl_export_picture (solution, picture, format, theme, 0.0, 0.0, scale, error);
+  g_autoptr (GBytes) bytes = hl_export_component (solution, picture, component, format, theme, 0.0, 0.0, scale, error);
   return bytes != NULL && hl_export_bytes_file (bytes, path, error);
 }
 
@@ -260,6 +278,12 @@ hl_export_bytes_file (GBytes *bytes, const char *path, GError **error)
   g_return_val_if_fail (bytes != NULL && path != NULL, FALSE);
   data = g_bytes_get_data (bytes, &length);
   return write_file (path, data, length, error);
+}
+
+gboolean
+hl_export_picture_file (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, const char *path, GError **error)
+{
+  return hl_export_component_file (solution, picture, -1, format, theme, path, error);
 }
 
 gboolean

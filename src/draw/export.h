@@ -10,6 +10,7 @@ typedef enum {
   HL_PICTURE_STATE_DIAGRAM,       /* T-s */
   HL_PICTURE_HS_DIAGRAM,
   HL_PICTURE_PH_DIAGRAM,
+  HL_PICTURE_HEAT,                /* of one component, or composite curves of all exchangers */
 } HlPicture;
 typedef enum { HL_FORMAT_SVG, HL_FORMAT_PDF, HL_FORMAT_PNG } HlFormat;
 gboolean hl_format_from_path (const char *path, HlFormat *format, GError **error);   /* by its ending; says which endings do */
@@ -17,6 +18,9 @@ gboolean hl_format_from_path (const char *path, HlFormat *format, GError **error
 /* @width, @height in pixels at 96 dpi, 0 for the picture's usual size (drawing: its extents; diagram 960 x 600); @scale multiplies PNG pixels.
  * Writes the same bytes for the same input. */
 GBytes  *hl_export_picture      (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, double width, double height, double scale, GError **error);
+/* The same of one component, an index of the plant; -1: of all. */
+GBytes  *hl_export_component    (const HlSolution *solution, HlPicture picture, int component, HlFormat format, HlThemeId theme, double width, double height, double scale, GError **error);
+gboolean hl_export_component_file (const HlSolution *solution, HlPicture picture, int component, HlFormat format, HlThemeId theme, const char *path, GError **error);
 /* To a file (temporary file, then renamed); path "-" is standard output. */
 gboolean hl_export_picture_file (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, const char *path, GError **error);
 /* Any drawing of @width x @height pixels, drawn once by @draw. */

@@ -13,6 +13,10 @@ hl_plot_colour (const HlTheme *theme, HlPlotColour colour, gboolean is_stale)
       return is_stale ? &theme->stale : &theme->wet;
     case HL_PLOT_WATER:
       return is_stale ? &theme->stale : &theme->water;
+    case HL_PLOT_COOLING:
+      return is_stale ? &theme->stale : &theme->cooling;
+    case HL_PLOT_GAS:
+      return is_stale ? &theme->stale : &theme->gas;
     case HL_PLOT_ACCENT:
       return &theme->accent;
     case HL_PLOT_OUTLINE:

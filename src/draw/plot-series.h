@@ -13,6 +13,8 @@ typedef enum {
   HL_PLOT_STEAM,
   HL_PLOT_WET,
   HL_PLOT_WATER,
+  HL_PLOT_COOLING,
+  HL_PLOT_GAS,
   HL_PLOT_ACCENT,
 } HlPlotColour;
 const HlColour *hl_plot_colour (const HlTheme *theme, HlPlotColour colour, gboolean is_stale);

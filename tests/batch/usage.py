@@ -21,7 +21,7 @@ def test_every_command_has_its_help():
         assert "Caution" in out
         assert "--report" not in out
     out, _ = batch("solve", "--help")
-    for option in ("--set ADDRESS=VALUE", "--json FILE", "--csv FILE", "--summary FILE", "--ledger FILE", "--xlsx FILE", "--drawing FILE", "--paper SIZE", "--field NAME=TEXT", "--diagram ts|hs|ph FILE"):
+    for option in ("--set ADDRESS=VALUE", "--json FILE", "--csv FILE", "--summary FILE", "--ledger FILE", "--xlsx FILE", "--drawing FILE", "--paper SIZE", "--field NAME=TEXT", "--diagram ts|hs|ph FILE", "--heat COMPONENT FILE"):
         assert option in out, option
 
 
@@ -61,6 +61,7 @@ def test_values_of_options():
     refused("check", "x", "--strict=yes", status=2, says="--strict")
     refused("solve", "x", "--json", "-", "--csv", "-", status=2, says="standard output")
     refused("solve", "x", "--diagram", "pv", "a.svg", status=2, says=["pv", "ts, hs and ph"])
+    refused("solve", "x", "--heat", "C1", "a.jpeg", status=2, says=["a.jpeg", "svg"])
     refused("solve", "x", "--drawing", "a.jpeg", status=2, says=["a.jpeg", "svg"])
 
 

@@ -71,9 +71,11 @@ test_pictures_of_example_plants_are_clean (void)
       g_assert_no_error (error);
       solution = hl_solve (plant, NULL);
       test_assert_solved (solution);
-      for (guint i = 0; i < G_N_ELEMENTS (diagram_sizes); i++)
+      for (guint i = 0; i < HL_N_STATE_DIAGRAMS * G_N_ELEMENTS (diagram_sizes); i++)
         {
-          g_autoptr (HlStateDiagram) diagram = hl_state_diagram_new (solution, hl_plant_units (plant), diagram_sizes[i].width, diagram_sizes[i].height);
+          HlStateDiagramKind kind = (HlStateDiagramKind) (i / G_N_ELEMENTS (diagram_sizes));
+          guint size = i % G_N_ELEMENTS (diagram_sizes);
+          g_autoptr (HlStateDiagram) diagram = hl_state_diagram_new_of_kind (solution, kind, hl_plant_units (plant), diagram_sizes[size].width, diagram_sizes[size].height);
           check_diagram (diagram);
           g_assert_cmpuint (n_without_number (diagram), ==, 0);
           g_assert_cmpuint (diagram->marks->len, >, 2);

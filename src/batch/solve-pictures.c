@@ -1,0 +1,94 @@
+/* The diagrams that solve writes: what the command line asks for, and the files.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#include <string.h>
+#include "batch/solve-output.h"
+#include "draw/heat-diagram.h"
+#include "draw/state-diagram.h"
+#include "plant/i18n.h"
+
+static gboolean
+check_path (const char *path, GError **error)
+{
+  HlFormat format;
+  return strcmp (path, "-") == 0 || hl_format_from_path (path, &format, error);
+}
+
+/* @diagram: which, and the file. */
+static gboolean
+check_diagram (char *const *diagram, GError **error)
+{
+  HlStateDiagramKind kind;
+  if (hl_state_diagram_kind_from_id (diagram[0], &kind))
+    return check_path (diagram[1], error);
+  g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("--diagram: there is no diagram “%s”; there are ts, hs and ph"), diagram[0]);
+  return FALSE;
+}
+
+/* @heat: which component, and the file. */
+static gboolean
+check_heat (const HlPlant *plant, char *const *heat, GError **error)
+{
+  if (plant == NULL || strcmp (heat[0], "all") == 0 || hl_plant_component_index (plant, heat[0]) >= 0)
+    return check_path (heat[1], error);
+  g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("--heat: there is no component “%s”; all stands for all exchangers together"), heat[0]);
+  return FALSE;
+}
+
+gboolean
+hl_check_pictures (const HlPlant *plant, const HlArguments *arguments, GError **error)
+{
+  char *const *values;
+  for (guint n = 0; (values = hl_arguments_option (arguments, "diagram", n)) != NULL; n++)
+    if (!check_diagram (values, error))
+      return FALSE;
+  for (guint n = 0; (values = hl_arguments_option (arguments, "heat", n)) != NULL; n++)
+    if (!check_heat (plant, values, error))
+      return FALSE;
+  return TRUE;
+}
+
+gboolean
+hl_write_picture (const HlSolution *solution, HlPicture picture, int component, const char *path, GError **error)
+{
+  /* A picture without a file name has no ending that says its format. */
+  HlFormat format = HL_FORMAT_SVG;
+  if (strcmp (path, "-") != 0 && !hl_format_from_path (path, &format, error))
+    return FALSE;
+  return hl_export_component_file (solution, picture, component, format, HL_THEME_PAPER, path, error);
+}
+
+static gboolean
+write_diagrams (const HlSolution *solution, const HlArguments *arguments, GError **error)
+{
+  static const HlPicture pictures[HL_N_STATE_DIAGRAMS] = {
+    [HL_STATE_DIAGRAM_TS] = HL_PICTURE_STATE_DIAGRAM, [HL_STATE_DIAGRAM_HS] = HL_PICTURE_HS_DIAGRAM, [HL_STATE_DIAGRAM_PH] = HL_PICTURE_PH_DIAGRAM,
+  };
+  char *const *diagram;
+  for (guint n = 0; (diagram = hl_arguments_option (arguments, "diagram", n)) != NULL; n++)
+    {
+      HlStateDiagramKind kind;
+      if (hl_state_diagram_kind_from_id (diagram[0], &kind) && !hl_write_picture (solution, pictures[kind], -1, diagram[1], error))
+        return FALSE;
+    }
+  return TRUE;
+}
+
+/* The id of a component, even where it is "all", comes first. */
+static gboolean
+write_heats (const HlSolution *solution, const HlArguments *arguments, GError **error)
+{
+  char *const *heat;
+  for (guint n = 0; (heat = hl_arguments_option (arguments, "heat", n)) != NULL; n++)
+    {
+      int component = hl_plant_component_index (hl_solution_plant (solution), heat[0]);
+      if (!hl_write_picture (solution, HL_PICTURE_HEAT, component >= 0 ? component : HL_HEAT_ALL, heat[1], error))
+        return FALSE;
+    }
+  return TRUE;
+}
+
+gboolean
+hl_write_pictures (const HlSolution *solution, const HlArguments *arguments, GError **error)
+{
+  return write_diagrams (solution, arguments, error) && write_heats (solution, arguments, error);
+}
