@@ -23,6 +23,9 @@ static const struct {
   { "open_heater",   { { "heat", NULL } } },
   { "closed_heater", { { "terminal_difference", "TTD", UNITLESS }, { "drain_approach", "DCA" } } },
   { "steam_user",    { { "heat", NULL } } },
+  { "district_heater", { { "heat", NULL } } },
+  { "air_condenser", { { "heat", NULL } } },
+  { "cooling_tower", { { "heat", NULL } } },
   { "exchanger",     { { "heat", NULL } } },
   { "recuperator",   { { "heat", NULL } } },
 };

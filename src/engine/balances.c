@@ -41,7 +41,8 @@ book_doors (const HlSolution *solution, int c, Balance *mass, Balance *energy)
     book (energy, own (solution, c, "power"));
   else if (g_str_equal (kind, "pipe"))
     book (energy, -own (solution, c, "heat_loss"));
-  else if (g_str_equal (kind, "condenser") && !is_cooled)
+  else if ((g_str_equal (kind, "condenser") && !is_cooled) || g_str_equal (kind, "air_condenser") || g_str_equal (kind, "cooling_tower")
+           || (g_str_equal (kind, "district_heater") && hl_model_port_node (model, c, "water_inlet") < 0))
     book (energy, -own (solution, c, "heat"));
   else if (g_str_equal (kind, "steam_user"))
     {

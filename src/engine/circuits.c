@@ -85,7 +85,8 @@ hl_circuits_service (const HlModel *model, const int *circuits)
       for (int k = model->first_port[c]; k < model->first_port[c + 1]; k++)
         {
           const HlPortNode *port = &g_array_index (model->ports, HlPortNode, k);
-          if (g_str_equal (port->key, "cooling_inlet") || g_str_equal (port->key, "cooling_outlet"))
+          if (g_str_equal (port->key, "cooling_inlet") || g_str_equal (port->key, "cooling_outlet")
+              || g_str_equal (port->key, "water_inlet") || g_str_equal (port->key, "water_outlet"))
             is_cooling[circuits[port->node]] = TRUE;
           else if (is_turbine)
             is_working[circuits[port->node]] = TRUE;

@@ -263,6 +263,17 @@ hl_emit_constant (HlEmit *emit, HlVarKind kind, double value)
   return var;
 }
 
+int
+hl_emit_site (HlEmit *emit, const char *option, const char *key, double site_value)
+{
+  if (hl_component_option (emit->component, option) != 0)
+    return hl_emit_own (emit, key, HL_VAR_TEMPERATURE);
+  int var = hl_emit_hidden (emit, key, HL_VAR_TEMPERATURE);
+  HlAddress nowhere = hl_address_component (emit->component->id, "");
+  hl_system_add_spec (emit->system, var, nowhere, HL_ORIGIN_GIVEN, site_value);
+  return var;
+}
+
 static const HlValue *
 value_of (HlEmit *emit, const char *key)
 {

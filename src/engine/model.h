@@ -84,6 +84,8 @@ int      hl_emit_constant  (HlEmit *emit, HlVarKind kind, double value);
 gboolean hl_emit_has_value (HlEmit *emit, const char *key);
 gboolean hl_emit_is_fixed_at (HlEmit *emit, const char *key, double value);   /* given or assumed as exactly this */
 const char *hl_key         (const char *base, int number);                 /* "extraction2" */
+/* The air's temperature: of the plant's site, or an own quantity where the option says so. */
+int      hl_emit_site     (HlEmit *emit, const char *option, const char *key, double site_value);
 int      hl_emit_T         (HlEmit *emit, int node, gboolean drives);
 void     hl_emit_sum       (HlEmit *emit, HlSum sum, int var);
 void     hl_emit_guess     (HlEmit *emit, int node, double h);

@@ -10,12 +10,17 @@
 static const struct { const char *key, *name; } hidden[] = {
   { "turbine_power", N_("shaft power of the turbines") },
   { "pump_power", N_("shaft power of the pumps") },
-  { "motor_power", N_("power of the pumps' motors") },
+  { "motor_power", N_("power of motors and fans") },
   { "shaft_power_net", N_("shaft power of turbines less pumps") },
   { "live_steam", N_("live steam flow") },
   { "fuel_heat_hhv", N_("fuel heat (HHV)") },
   { "partial_sum", N_("partial sum") },
   { "useful", N_("net power and heat delivered") },
+  { "ambient_T", N_("air temperature of the site") },
+  { "wet_bulb_T", N_("wet bulb temperature of the site") },
+  { "water_outlet_p", N_("outlet pressure of the water") },
+  { "water_inlet_h", N_("inlet enthalpy of the water") },
+  { "water_outlet_h", N_("outlet enthalpy of the water") },
   { "saturation_T", N_("saturation temperature") },
 };
 

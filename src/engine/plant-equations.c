@@ -100,6 +100,23 @@ fuel_heat_hhv (HlEmit *emit)
   return sum;
 }
 
+/* Fans take a part of gross power; where there is none, nothing. */
+static void
+emit_fans (HlEmit *emit, int gross)
+{
+  const HlModel *model = emit->model;
+  for (int c = 0; c < (int) hl_plant_n_components (model->plant); c++)
+    {
+      int fraction = hl_model_own_var (model, c, "fan_fraction"), power = hl_model_own_var (model, c, "fan_power");
+      if (fraction < 0 || power < 0)
+        continue;
+      HlEquation *e = gross >= 0 ? hl_add_product (emit->system, gross, fraction, power)
+                                 : hl_add_linear (emit->system, HL_VAR_POWER, &power, (const double[]) { 1.0 }, 1, 0.0);
+      e->output = gross >= 0 ? 2 : 0;
+      e->component = c;
+    }
+}
+
 void
 hl_emit_plant (HlModel *model)
 {
@@ -110,6 +127,7 @@ hl_emit_plant (HlModel *model)
   if (model->sums[HL_SUM_PUMP_POWER]->len > 0)
     pumps = total (emit, "pump_power", HL_VAR_POWER, HL_SUM_PUMP_POWER);
   int gross = total (emit, "gross_power", HL_VAR_POWER, HL_SUM_GROSS);
+  emit_fans (emit, gross);
   int heat = total (emit, "heat_input", HL_VAR_POWER, HL_SUM_HEAT_INPUT);
   int fuel = total (emit, "fuel_heat", HL_VAR_POWER, HL_SUM_FUEL_HEAT);
   total (emit, "fuel_flow", HL_VAR_FLOW, HL_SUM_FUEL_FLOW);

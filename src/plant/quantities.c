@@ -40,7 +40,7 @@ static const HlQuantityKind plant_quantities[] = {
   RESULT_POWER ("gross_power", "P_gross", N_("Gross power"), N_("Power"),
                 N_("Electrical power at the terminals of all generators.")),
   RESULT_POWER ("own_consumption", "P_own", N_("Own consumption"), N_("Power"),
-                N_("Electrical power of the pumps' motors and of other consumers.")),
+                N_("Electrical power of motors, of the fans of air-cooled condensers, and of other consumers.")),
   RESULT_POWER ("other_consumption", "P_other", N_("Other consumption"), N_("Power"),
                 N_("Own consumption of what is not drawn: fans, fuel handling, lighting, cooling pumps.")),
   { .key = "other_consumption_fraction", .sign = "P/P", .name = N_("Other consumption of gross"), .group = N_("Power"),

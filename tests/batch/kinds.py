@@ -5,7 +5,7 @@ import os
 from tap import SOURCE, batch, main
 
 KINDS = ("heat_input", "boiler", "turbine", "generator", "condenser", "pump", "pipe", "valve", "open_heater",
-         "closed_heater", "splitter", "mixer", "steam_user", "make_up", "boundary", "recuperator", "exchanger")
+         "closed_heater", "splitter", "mixer", "steam_user", "make_up", "boundary", "cooling_tower", "air_condenser", "district_heater", "recuperator", "exchanger")
 
 
 def test_every_kind_is_there():

@@ -82,6 +82,11 @@ emit_condenser (HlEmit *emit)
     emit_own_cooling (emit, NODE (emit, steam)->fluid, T_sat, heat, rise, difference);
   hl_emit_done (emit, hl_add_log_mean (emit->system, mean, rise, difference), NULL, 0);
   hl_emit_done (emit, hl_add_quotient (emit->system, ua, heat, mean), NULL, 0);
+  if (hl_emit_has_value (emit, "cleanliness") || hl_emit_has_value (emit, "clean_UA"))
+    {
+      int cleanliness = hl_emit_own (emit, "cleanliness", HL_VAR_RATIO), clean = hl_emit_own (emit, "clean_UA", HL_VAR_CONDUCTANCE);
+      hl_emit_done (emit, hl_add_quotient (emit->system, clean, ua, cleanliness), NULL, 0);
+    }
 }
 
 /* --- checks ------------------------------------------------------------------- */

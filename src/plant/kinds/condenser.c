@@ -69,6 +69,14 @@ static const HlQuantityKind quantities[] = {
   { .key = "UA", .sign = "UA", .name = N_("Conductance"), .group = N_("Result"),
     .dimension = HL_DIMENSION_CONDUCTANCE, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS_CONDUCTANCE,
     .help = N_("Heat transfer coefficient times area: heat over log mean temperature difference."), WITH_WATER },
+  { .key = "cleanliness", .sign = "F_c", .name = N_("Cleanliness factor"), .group = N_("Result"),
+    .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_ASSUMED,
+    DEFAULT (0.85, N_("HEI, quoted from a secondary text: copper alloys 0.85, titanium and stainless steel 0.90")),
+    RANGE (0.7, 0.95), LIMITS (0.0, 1.0), .yield_rank = 5,
+    .help = N_("Conductance as it is in service over that of clean tubes."), WITH_WATER },
+  { .key = "clean_UA", .sign = "UA_c", .name = N_("Clean conductance"), .group = N_("Result"),
+    .dimension = HL_DIMENSION_CONDUCTANCE, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS_CONDUCTANCE,
+    .help = N_("Conductance of the same surface with clean tubes: what it must be bought for."), WITH_WATER },
 };
 
 const HlKind hl_kind_condenser = {
