@@ -16,7 +16,7 @@ static const char *const key_signs[HL_N_STATE_KEYS] = { "p", "T", "h", "s", "rho
 typedef struct {
   HlStateKey first, second;
   StateCall  call;
-  const char *pair;        /* word of hl_fluid_explain_failure() */
+  const char *pair;        /* word of hl_fluid_explain_failure(); NULL where a search would say no more */
 } StraightPair;
 
 static const StraightPair straight_pairs[] = {
@@ -26,6 +26,7 @@ static const StraightPair straight_pairs[] = {
   { HL_STATE_H, HL_STATE_S, hl_fluid_state_hs, "hs" },
   { HL_STATE_P, HL_STATE_X, hl_fluid_state_px, "px" },
   { HL_STATE_T, HL_STATE_X, hl_fluid_state_Tx, "Tx" },
+  { HL_STATE_RHO, HL_STATE_T, hl_fluid_state_dT, NULL },
 };
 
 /* One quantity is held, another is sought by moving along the third. */
@@ -263,6 +264,13 @@ is_same_state (const HlState *a, const HlState *b)
   return fabs (a->h - b->h) < 1e-6 * (1.0 + fabs (a->h)) && fabs (a->p - b->p) < 1e-6 * a->p;
 }
 
+static char *
+say_no_state (const HlFluid *fluid, HlStateKey first, double a, HlStateKey second, double b)
+{
+  return g_strdup_printf (_("no state of %s has %s = %.9g and %s = %.9g (SI) within %s"), hl_fluid_id (fluid), key_signs[first], a,
+                          key_signs[second], b, hl_fluid_formulation (fluid));
+}
+
 static gboolean
 search_states (const Search *search, HlState *state, char **message)
 {
@@ -276,9 +284,7 @@ search_states (const Search *search, HlState *state, char **message)
 
   if (states->len == 0)
     {
-      *message = g_strdup_printf (_("no state of %s has %s = %.9g and %s = %.9g (SI) within %s"), hl_fluid_id (search->fluid),
-                                  key_signs[search->held], search->held_value, key_signs[search->sought], search->sought_value,
-                                  hl_fluid_formulation (search->fluid));
+      *message = say_no_state (search->fluid, search->held, search->held_value, search->sought, search->sought_value);
       return FALSE;
     }
   const HlState *found = &g_array_index (states, HlState, 0);
@@ -303,7 +309,8 @@ state_straight (const HlFluid *fluid, const StraightPair *pair, double a, double
 {
   HlStatus status = pair->call (fluid, a, b, state);
   if (status != HL_OK)
-    *message = hl_fluid_explain_failure (fluid, status, pair->pair, a, b);
+    *message = pair->pair != NULL ? hl_fluid_explain_failure (fluid, status, pair->pair, a, b)
+                                  : say_no_state (fluid, pair->first, a, pair->second, b);
   return status == HL_OK;
 }
 
@@ -313,6 +320,11 @@ hl_state_from_pair (const HlFluid *fluid, HlStateKey first, double first_value, 
 {
   g_return_val_if_fail (first != second && first < HL_N_STATE_KEYS && second < HL_N_STATE_KEYS, FALSE);
 
+  if ((first == HL_STATE_RHO && !(first_value > 0.0)) || (second == HL_STATE_RHO && !(second_value > 0.0)))
+    {
+      *message = g_strdup (_("a density lies above 0"));
+      return FALSE;
+    }
   for (guint i = 0; i < G_N_ELEMENTS (straight_pairs); i++)
     {
       const StraightPair *pair = &straight_pairs[i];
@@ -324,11 +336,6 @@ hl_state_from_pair (const HlFluid *fluid, HlStateKey first, double first_value, 
 
   /* What is held, in the order of how well the search moves with it. */
   static const HlStateKey holders[] = { HL_STATE_X, HL_STATE_P, HL_STATE_T };
-  if ((first == HL_STATE_RHO && !(first_value > 0.0)) || (second == HL_STATE_RHO && !(second_value > 0.0)))
-    {
-      *message = g_strdup (_("a density lies above 0"));
-      return FALSE;
-    }
   for (guint i = 0; i < G_N_ELEMENTS (holders); i++)
     {
       if (first == holders[i])

@@ -149,7 +149,7 @@ run_state (const HlArguments *arguments)
   const char *json_path = hl_arguments_value (arguments, "json");
   const HlFluid *fluid = hl_fluid_lookup (id);
   if (fluid == NULL)
-    g_set_error (&error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("there is no medium “%s”; there is “%s”"), id, "water");
+    g_set_error (&error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("there is no medium “%s”; heatloom-batch fluids lists them"), id);
   else if (table != NULL && (json_path != NULL || hl_arguments_n_words (arguments) > 1))
     g_set_error (&error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("--table takes its states from the table; leave the others out"));
   else if (table == NULL && hl_arguments_n_words (arguments) != 3)
@@ -184,8 +184,8 @@ const HlBatchCommand hl_command_state = {
   .usage = N_("MEDIUM QUANTITY=VALUE QUANTITY=VALUE | MEDIUM --table FILE"),
   .summary = N_("the state of a medium from two quantities, or a table of states"),
   .details = N_(
-    "The medium is water. The quantities are two of p, T, h, s, x, with units: 'p=80 bar' 'T=480 °C'.\n"
-    "A bare number is in bar, °C, kJ/kg, kJ/(kg K).\n\n"
+    "The medium is water, or another one that heatloom-batch fluids lists. The quantities are two of p, T, h, s, x,\n"
+    "with units: 'p=80 bar' 'T=480 °C'. A bare number is in bar, °C, kJ/kg, kJ/(kg K).\n\n"
     "The header of a table names two of p_Pa T_K h_J_kg s_J_kgK rho_kg_m3 x. Other columns are copied, lines\n"
     "that begin with # are left out. Every row gets out_phase out_p_Pa out_T_K out_rho_kg_m3 out_x out_h_J_kg\n"
     "out_s_J_kgK out_cp_J_kgK out_w_m_s in full precision; a row without a state gets them empty, and out_error\n"

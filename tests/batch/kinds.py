@@ -1,6 +1,7 @@
-# heatloom-batch kinds, and docs/components.md that is made from it.
+# heatloom-batch kinds and fluids, and docs/components.md that is made from it.
 # SPDX-License-Identifier: GPL-3.0-or-later
 import os
+import re
 
 from tap import SOURCE, batch, main
 
@@ -27,6 +28,16 @@ def test_tables_are_whole():
             width = bars
         else:
             width = None
+
+
+def test_every_medium_is_listed_and_answers():
+    out, err = batch("fluids")
+    rows = re.findall(r"^\| `([^`]+)` .*\| (\S+) °C to \S+ °C \|.*\| (\S+) °C, ", out, re.MULTILINE)
+    ids = [row[0] for row in rows]
+    assert err == "" and "water" in ids and len(ids) == len(set(ids)) == out.count("\n") - 2 > 30, ids
+    for medium, coldest, critical in rows:
+        middle = (float(coldest) + float(critical)) / 2
+        assert "kJ/kg" in batch("state", medium, f"T={middle} °C", "x=0.5")[0], medium
 
 
 def test_the_page_in_docs_is_this_one():

@@ -16,9 +16,13 @@ def state(*pair):
     return json.loads(out)
 
 
-def table(text, status=0):
-    out, err = batch("state", "water", "--table", "-", stdin=text, status=status)
+def csv_rows(medium, text, status=0):
+    out, err = batch("state", medium, "--table", "-", stdin=text, status=status)
     return list(csv.DictReader(io.StringIO(out))), err
+
+
+def table(text, status=0):
+    return csv_rows("water", text, status)
 
 
 def close(value, expected, relative=1e-9):
@@ -43,6 +47,15 @@ def test_keys_carry_their_units():
     close(found["p_Pa"], 80e5, 1e-15)
     close(found["T_K"], 753.15, 1e-15)
     close(found["rho_kg_m3"] * found["v_m3_kg"], 1.0, 1e-14)
+
+
+def test_other_media_answer_by_their_own_equation():
+    out, _ = batch("state", "isopentane", "p=5 bar", "T=100 °C", "--json", "-")
+    found = json.loads(out)
+    assert found["fluid"] == "isopentane" and "IF97" not in found["formulation"]
+    rows, _ = csv_rows("isopentane", f"T_K,rho_kg_m3\n{found['T_K']!r},{found['rho_kg_m3']!r}\n")
+    close(float(rows[0]["out_p_Pa"]), 5e5, 1e-8)
+    close(float(rows[0]["out_h_J_kg"]), found["h_J_kg"], 1e-8)
 
 
 def test_units_and_pairs_mean_the_same_state():
@@ -81,7 +94,7 @@ def test_json_goes_to_a_file():
 
 
 def test_mistakes_are_named():
-    refused("state", "ether", "p=1 bar", "T=300 K", status=2, says=["ether", "water"])
+    refused("state", "ether", "p=1 bar", "T=300 K", status=2, says=["ether", "heatloom-batch fluids"])
     refused("state", "water", "p=80 bar", status=2, says="two quantities")
     refused("state", "water", "p=80 bar", "p=70 bar", status=2, says="same quantity")
     refused("state", "water", "p=80 bar", "q=3", status=2, says=["q=3", "p, T, h, s, x"])
