@@ -14,6 +14,7 @@ G_DEFINE_QUARK (hl-fluid-error-quark, hl_fluid_error)
  * a file that is loaded again leaves the older one to those who hold it. */
 static GMutex lock;
 static GHashTable *known;              /* id -> HlHelmholtz, guarded by lock */
+static GSList *older;                  /* what a file that was read again replaced, guarded by lock */
 
 static const struct { const char *word; HlReference reference; } references[] = {
   { "IIR", HL_REFERENCE_IIR }, { "NBP", HL_REFERENCE_NBP }, { "ASHRAE", HL_REFERENCE_ASHRAE },
@@ -154,6 +155,9 @@ hl_fluid_load_file (const char *path, GError **error)
   g_mutex_lock (&lock);
   if (known == NULL)
     known = g_hash_table_new (g_str_hash, g_str_equal);
+  HlHelmholtz *replaced = g_hash_table_lookup (known, eq->fluid.id);
+  if (replaced != NULL)
+    older = g_slist_prepend (older, replaced);
   g_hash_table_replace (known, (gpointer) eq->fluid.id, eq);
   g_mutex_unlock (&lock);
   return &eq->fluid;

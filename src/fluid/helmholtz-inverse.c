@@ -118,7 +118,7 @@ solve_safe (const Search *search, HlState *state, HlSide *side)
   double rounding = 1e-13 * fmax (fabs (search->value), held_of (search->held, &hot) - held_of (search->held, &cold));
   if (below < -rounding || above < -rounding)
     {
-      *side = below < -rounding ? HL_SIDE_COLD : HL_SIDE_HOT;
+      *side = above < -rounding ? HL_SIDE_HOT : HL_SIDE_COLD;
       return HL_OUTSIDE_RANGE;
     }
   double low = search->T_low, high = search->T_high;

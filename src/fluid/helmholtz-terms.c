@@ -19,6 +19,40 @@ add_term (HlAlpha *sum, double a, double D, double D_d, double T, double T_t)
   sum->tt += a * (T * (T - 1.0) + T_t);
 }
 
+/* e^x of a whole column at once, which the compiler turns into vector
+ * instructions where exp() would be called number by number.  x = k ln 2 + r with
+ * |r| <= ln(2)/2; Taylor's series to r^13, whose next term is below 5e-18; 2^k goes
+ * into the exponent bits.  Below -708 the result is the smallest normal number, as
+ * good as 0 here. */
+static void
+exp_column (double *x, guint n)
+{
+  const double per_ln2 = 1.4426950408889634, ln2_high = 0x1.62e42fee00000p-1, ln2_low = 0x1.a39ef35793c76p-33;
+  const double shift = 0x1.8p52;      /* adding it rounds to a whole number, which then stands in the low bits */
+  for (guint i = 0; i < n; i++)
+    {
+      double in = x[i] > -708.0 ? x[i] : -708.0;
+      double shifted = in * per_ln2 + shift, k = shifted - shift;
+      double r = (in - k * ln2_high) - k * ln2_low;
+      double sum = 1.0 / 6227020800.0;
+      sum = sum * r + 1.0 / 479001600.0;
+      sum = sum * r + 1.0 / 39916800.0;
+      sum = sum * r + 1.0 / 3628800.0;
+      sum = sum * r + 1.0 / 362880.0;
+      sum = sum * r + 1.0 / 40320.0;
+      sum = sum * r + 1.0 / 5040.0;
+      sum = sum * r + 1.0 / 720.0;
+      sum = sum * r + 1.0 / 120.0;
+      sum = sum * r + 1.0 / 24.0;
+      sum = sum * r + 1.0 / 6.0;
+      sum = sum * r + 0.5;
+      sum = 1.0 + (r + r * r * sum);
+      union { double number; guint64 bits; } whole = { shifted }, result = { sum };
+      result.bits += whole.bits << 52;
+      x[i] = result.number;
+    }
+}
+
 static void
 add_power_terms (const HlHelmholtz *eq, double delta, double ln_delta, double ln_tau, HlAlpha *sum)
 {
@@ -32,12 +66,11 @@ add_power_terms (const HlHelmholtz *eq, double delta, double ln_delta, double ln
     delta_l[l] = power *= delta;
   for (guint i = 0; i < n; i++)
     value[i] = terms->t[i] * ln_tau + terms->d[i] * ln_delta - delta_l[terms->l[i]];
-  for (guint i = 0; i < n; i++)
-    value[i] = terms->n[i] * exp (value[i]);
+  exp_column (value, n);
   for (guint i = 0; i < n; i++)
     {
       double l = terms->l[i], l_delta_l = l * delta_l[terms->l[i]];
-      add_term (sum, value[i], terms->d[i] - l_delta_l, -l * l_delta_l, terms->t[i], 0.0);
+      add_term (sum, terms->n[i] * value[i], terms->d[i] - l_delta_l, -l * l_delta_l, terms->t[i], 0.0);
     }
 }
 

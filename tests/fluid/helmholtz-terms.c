@@ -64,6 +64,28 @@ test_derivatives_agree_with_differences (void)
         check_differences (hl_helmholtz_of (hl_fluid_lookup (ids[i])), delta, tau);
 }
 
+/* A single power term against the formula by the C library, over all sizes that occur.
+ * The argument of the exponential reaches some hundreds, so its last bit is 1e-14. */
+static void
+test_power_terms_follow_their_formula (void)
+{
+  double n = -0.3, d = 4.0, t = 2.625;
+  guint8 l = 3;
+  HlHelmholtz eq = { .power = { .n_terms = 1, .n = &n, .d = &d, .t = &t, .l = &l }, .power_l_max = 3 };
+  for (double delta = 1e-30; delta < 12.0; delta *= 1.7)
+    for (double tau = 0.05; tau < 20.0; tau *= 1.3)
+      {
+        HlAlpha a;
+        double expected = n * pow (delta, d) * pow (tau, t) * exp (-delta * delta * delta);
+        hl_helmholtz_residual (&eq, delta, tau, &a);
+        if (fabs (expected) > 1e-300)
+          g_assert_cmpfloat_with_epsilon (a.a / expected, 1.0, 2e-13);
+        else
+          g_assert_cmpfloat (fabs (a.a), <, 1e-299);
+      }
+  check_differences (&eq, 1.1, 1.3);
+}
+
 /* Kinds which only a user's file may have, against their formulas in other words. */
 static void
 test_exponential_terms_follow_their_formula (void)
@@ -99,6 +121,7 @@ main (int argc, char *argv[])
   g_test_init (&argc, &argv, NULL);
   g_test_add_func ("/fluid/helmholtz-terms/table6", test_parts_agree_with_table6);
   g_test_add_func ("/fluid/helmholtz-terms/differences", test_derivatives_agree_with_differences);
+  g_test_add_func ("/fluid/helmholtz-terms/power", test_power_terms_follow_their_formula);
   g_test_add_func ("/fluid/helmholtz-terms/exponential", test_exponential_terms_follow_their_formula);
   g_test_add_func ("/fluid/helmholtz-terms/planck", test_planck_terms_follow_their_formula);
   return g_test_run ();
