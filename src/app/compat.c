@@ -1,4 +1,4 @@
-/* What newer GTK does otherwise, in one place: file choosing, style sheets.
+/* What newer GTK does otherwise, in one place: file choosing, style sheets, tooltips.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/compat.h"
 #include "plant/i18n.h"
@@ -59,4 +59,30 @@ hl_compat_ask_file (GtkWindow *parent, const HlFileQuestion *question, HlFileCho
     gtk_file_chooser_set_current_name (chooser, question->name);
   g_signal_connect (dialog, "response", G_CALLBACK (response_cb), answer);
   gtk_native_dialog_show (GTK_NATIVE_DIALOG (dialog));
+}
+
+/* Tooltips */
+
+static gboolean
+query_tip_cb (GtkWidget *widget, int x, int y, gboolean is_keyboard, GtkTooltip *tooltip, gpointer data)
+{
+  const char *text = g_object_get_data (G_OBJECT (widget), "hl-tip");
+  gtk_tooltip_set_text (tooltip, text);
+  return text != NULL;
+}
+
+void
+hl_compat_set_tip (GtkWidget *widget, const char *text)
+{
+  const char *former = g_object_get_data (G_OBJECT (widget), "hl-tip");
+  if (g_strcmp0 (former, text) == 0)
+    return;
+  if (former == NULL && !gtk_widget_get_has_tooltip (widget))
+    g_signal_connect (widget, "query-tooltip", G_CALLBACK (query_tip_cb), NULL);
+  g_object_set_data_full (G_OBJECT (widget), "hl-tip", g_strdup (text), g_free);
+  gtk_widget_set_has_tooltip (widget, TRUE);
+  if (text != NULL)
+    gtk_accessible_update_property (GTK_ACCESSIBLE (widget), GTK_ACCESSIBLE_PROPERTY_DESCRIPTION, text, -1);
+  else
+    gtk_accessible_reset_property (GTK_ACCESSIBLE (widget), GTK_ACCESSIBLE_PROPERTY_DESCRIPTION);
 }

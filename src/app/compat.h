@@ -1,9 +1,13 @@
-/* What newer GTK does otherwise, in one place: file choosing, style sheets.
+/* What newer GTK does otherwise, in one place: file choosing, style sheets, tooltips.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #pragma once
 #include <gtk/gtk.h>
 G_BEGIN_DECLS
 void hl_compat_load_css (GtkCssProvider *provider, const char *css);
+
+/* A tooltip that is asked for when the pointer rests.  gtk_widget_set_tooltip_text() waits three times for the display's
+ * answer, which shows where a window sets fifty of them. @text may be NULL; it also describes the widget to a screen reader. */
+void hl_compat_set_tip (GtkWidget *widget, const char *text);
 
 /* Asks for a file of one type. @done gets the chosen path, or NULL where the dialog was closed. */
 typedef void (*HlFileChosen) (const char *path, gpointer data);

@@ -1,6 +1,7 @@
 /* The card of key results.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-glance.h"
+#include "app/compat.h"
 #include "app/hl-pane.h"
 #include "plant/i18n.h"
 
@@ -104,7 +105,7 @@ rebuild (HlGlance *self, const GArray *results)
       gtk_label_set_xalign (GTK_LABEL (number), 1.0f);
       gtk_widget_add_css_class (number, "number");
       if (kind->help != NULL)
-        gtk_widget_set_tooltip_text (name, _(kind->help));
+        hl_compat_set_tip (name, _(kind->help));
       gtk_grid_attach (GTK_GRID (self->grid), name, 0, (int) i, 1, 1);
       gtk_grid_attach (GTK_GRID (self->grid), number, 1, (int) i, 1, 1);
     }

@@ -1,5 +1,6 @@
 /* Rows of the nameplate that are not quantities: options, the site, units, links and limits.
  * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "app/compat.h"
 #include "app/hl-appearance.h"
 #include "app/hl-nameplate-private.h"
 #include "app/hl-pane.h"
@@ -263,7 +264,7 @@ hl_site_row_new (HlSession *session, HlSiteNumber which)
   gtk_label_set_wrap (GTK_LABEL (row->note), TRUE);
   gtk_widget_set_visible (row->note, FALSE);
   gtk_box_append (GTK_BOX (box), row->note);
-  gtk_widget_set_tooltip_text (line, _(site_numbers[which].help));
+  hl_compat_set_tip (line, _(site_numbers[which].help));
   hl_site_row_update (box);
   return box;
 }

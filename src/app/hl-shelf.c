@@ -1,6 +1,7 @@
 /* The strip that components are taken from.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-shelf.h"
+#include "app/compat.h"
 #include "app/hl-appearance.h"
 #include "app/hl-trace.h"
 #include "draw/symbols.h"
@@ -167,7 +168,7 @@ shelf_item_new (const HlKind *kind)
   g_autofree char *tip = g_strdup_printf ("%s\n%s", _(kind->name), _(kind->help));
   self->kind = kind;
   gtk_label_set_text (GTK_LABEL (self->label), _(kind->shelf_name));
-  gtk_widget_set_tooltip_text (GTK_WIDGET (self), tip);
+  hl_compat_set_tip (GTK_WIDGET (self), tip);
   gtk_accessible_update_property (GTK_ACCESSIBLE (self), GTK_ACCESSIBLE_PROPERTY_LABEL, _(kind->name),
                                   GTK_ACCESSIBLE_PROPERTY_DESCRIPTION, _(kind->help), -1);
   return GTK_WIDGET (self);

@@ -220,12 +220,19 @@ shortcuts_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
   gtk_window_present (GTK_WINDOW (window));
 }
 
+/* Menus are made when they are opened: the demo plants are read for their titles then. */
+static void
+make_popup_cb (GtkMenuButton *button, gpointer make_model)
+{
+  g_autoptr (GMenuModel) model = ((GMenuModel *(*) (void)) make_model) ();
+  gtk_menu_button_set_popover (button, gtk_popover_menu_new_from_model (model));
+}
+
 void
 hl_window_fill_menus (HlWindow *self)
 {
   static const GActionEntry entries[] = { { "shortcuts", shortcuts_cb } };
-  g_autoptr (GMenuModel) opening = open_menu (), general = main_menu ();
-  gtk_menu_button_set_menu_model (self->open_button, opening);
-  gtk_menu_button_set_menu_model (self->menu_button, general);
+  gtk_menu_button_set_create_popup_func (self->open_button, make_popup_cb, open_menu, NULL);
+  gtk_menu_button_set_create_popup_func (self->menu_button, make_popup_cb, main_menu, NULL);
   g_action_map_add_action_entries (G_ACTION_MAP (self), entries, G_N_ELEMENTS (entries), self);
 }

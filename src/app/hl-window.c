@@ -1,6 +1,7 @@
 /* The main window: places the panes, follows the session with title and size.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-window-private.h"
+#include "app/compat.h"
 #include "app/hl-diagram-view.h"
 #include "app/hl-findings.h"
 #include "app/hl-glance.h"
@@ -57,14 +58,6 @@ trace_later (HlWindow *self)
 
 /* Following the session */
 
-/* Setting one asks the display where the pointer is and waits for the answer: not for the same text again. */
-static void
-set_tooltip (GtkWidget *widget, const char *text)
-{
-  if (g_strcmp0 (gtk_widget_get_tooltip_text (widget), text) != 0)
-    gtk_widget_set_tooltip_text (widget, text);
-}
-
 static void
 update_title (HlWindow *self)
 {
@@ -76,7 +69,7 @@ update_title (HlWindow *self)
     file = g_path_get_basename (path);
   gtk_label_set_text (self->title_label, name);
   gtk_label_set_text (self->subtitle_label, file != NULL ? file : _("not saved yet"));
-  set_tooltip (GTK_WIDGET (self->subtitle_label), path);
+  hl_compat_set_tip (GTK_WIDGET (self->subtitle_label), path);
   gtk_widget_set_visible (self->dirty_dot, hl_session_is_dirty (self->session));
   window_title = g_strdup_printf ("Heatloom – %s", name);
   gtk_window_set_title (GTK_WINDOW (self), window_title);
@@ -88,8 +81,8 @@ update_history_tooltips (HlWindow *self)
   const char *undo = hl_session_undo_name (self->session), *redo = hl_session_redo_name (self->session);
   g_autofree char *undo_text = undo != NULL ? g_strdup_printf (_("Undo: %s"), undo) : g_strdup (_("Nothing to undo"));
   g_autofree char *redo_text = redo != NULL ? g_strdup_printf (_("Redo: %s"), redo) : g_strdup (_("Nothing to redo"));
-  set_tooltip (GTK_WIDGET (self->undo_button), undo_text);
-  set_tooltip (GTK_WIDGET (self->redo_button), redo_text);
+  hl_compat_set_tip (GTK_WIDGET (self->undo_button), undo_text);
+  hl_compat_set_tip (GTK_WIDGET (self->redo_button), redo_text);
 }
 
 static void
@@ -124,10 +117,33 @@ zoom_changed_cb (HlWindow *self)
 
 /* Panes */
 
+/* A page that is built when it is first looked at. */
+static const struct { const char *name, *title; GtkWidget *(*build) (HlSession *session); } late_tabs[] = {
+  { "ledger", N_("Ledger"), hl_ledger_view_new },
+  { "findings", N_("Findings"), hl_findings_new },
+};
+
 static void
-add_tab (HlWindow *self, GtkWidget *page, const char *name, const char *title)
+add_tabs (HlWindow *self)
 {
-  gtk_stack_add_titled (self->stack, page, name, title);
+  gtk_stack_add_titled (self->stack, hl_diagram_view_new (self->session), "state", _("State"));
+  for (guint n = 0; n < G_N_ELEMENTS (late_tabs); n++)
+    gtk_stack_add_titled (self->stack, gtk_box_new (GTK_ORIENTATION_VERTICAL, 0), late_tabs[n].name, _(late_tabs[n].title));
+}
+
+static void
+tab_shown_cb (HlWindow *self)
+{
+  const char *name = gtk_stack_get_visible_child_name (self->stack);
+  GtkWidget *page = gtk_stack_get_visible_child (self->stack);
+  for (guint n = 0; n < G_N_ELEMENTS (late_tabs); n++)
+    if (g_strcmp0 (name, late_tabs[n].name) == 0 && gtk_widget_get_first_child (page) == NULL)
+      {
+        GtkWidget *content = late_tabs[n].build (self->session);
+        gtk_widget_set_hexpand (content, TRUE);
+        gtk_widget_set_vexpand (content, TRUE);
+        gtk_box_append (GTK_BOX (page), content);
+      }
 }
 
 static void
@@ -139,9 +155,8 @@ fill_panes (HlWindow *self)
   gtk_box_append (GTK_BOX (self->strip_bin), hl_status_strip_new (self->session));
   gtk_box_append (GTK_BOX (self->nameplate_bin), hl_nameplate_new (self->session));
   gtk_box_append (GTK_BOX (self->glance_bin), hl_glance_new (self->session));
-  add_tab (self, hl_diagram_view_new (self->session), "state", _("State"));
-  add_tab (self, hl_ledger_view_new (self->session), "ledger", _("Ledger"));
-  add_tab (self, hl_findings_new (self->session), "findings", _("Findings"));
+  add_tabs (self);
+  g_signal_connect_object (self->stack, "notify::visible-child", G_CALLBACK (tab_shown_cb), self, G_CONNECT_SWAPPED);
   for (GtkWidget *bin[] = { self->strip_bin, self->nameplate_bin, self->glance_bin, NULL }, **b = bin; *b != NULL; b++)
     {
       gtk_widget_set_hexpand (gtk_widget_get_first_child (*b), TRUE);

@@ -2,6 +2,8 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-application.h"
 #include "app/hl-canvas.h"
+#include "app/hl-findings.h"
+#include "app/hl-ledger-view.h"
 #include "app/hl-window.h"
 #include <glib/gstdio.h>
 
@@ -233,7 +235,8 @@ test_the_clipboard_carries_components_between_windows (void)
   g_assert_cmpuint (hl_plant_n_components (plant_of (window)), ==, 5);
   act (other, "add-component-at", "(sii)", "turbine", 0, 0);
   act (other, "paste", NULL);
-  spin (50);
+  for (int n = 0; n < 500 && hl_plant_n_components (plant_of (other)) == 1; n++)     /* the clipboard answers in its own time */
+    spin (10);
   g_assert_cmpuint (hl_plant_n_components (plant_of (other)), ==, 4);
   line = hl_plant_stream_at (plant_of (other), "T2", "exhaust");
   g_assert_nonnull (line);
@@ -508,6 +511,23 @@ test_both_looks_and_both_places_of_the_diagram (void)
   end_window (window);
 }
 
+static void
+test_pages_are_built_when_they_are_first_shown (void)
+{
+  HlWindow *window = new_window ();
+  g_assert_null (find_widget (GTK_WIDGET (window), hl_ledger_view_get_type ()));
+  g_assert_null (find_widget (GTK_WIDGET (window), hl_findings_get_type ()));
+  for (int n = 0; n < 2; n++)     /* the second time nothing is added */
+    {
+      act (window, "tab", "s", "ledger");
+      g_assert_nonnull (find_widget (GTK_WIDGET (window), hl_ledger_view_get_type ()));
+      act (window, "tab", "s", "findings");
+      g_assert_nonnull (find_widget (GTK_WIDGET (window), hl_findings_get_type ()));
+    }
+  g_assert_null (gtk_widget_get_next_sibling (find_widget (GTK_WIDGET (window), hl_findings_get_type ())));
+  end_window (window);
+}
+
 int
 main (int argc, char **argv)
 {
@@ -532,6 +552,7 @@ main (int argc, char **argv)
   g_test_add_func ("/app/window/bad-file", test_a_bad_file_is_told_and_nothing_lost);
   g_test_add_func ("/app/window/zoom", test_zoom_keeps_what_lies_in_the_middle);
   g_test_add_func ("/app/window/looks", test_both_looks_and_both_places_of_the_diagram);
+  g_test_add_func ("/app/window/pages", test_pages_are_built_when_they_are_first_shown);
   result = g_test_run ();
   g_object_unref (application);
   return result;
