@@ -3,6 +3,7 @@
 #include "batch/solve-output.h"
 #include <math.h>
 #include <string.h>
+#include "draw/report.h"
 #include "draw/sheet-paper.h"
 #include "draw/tables.h"
 #include "draw/xlsx.h"
@@ -65,8 +66,8 @@ hl_check_handover (const HlArguments *arguments, GError **error)
   g_autoptr (GError) failure = NULL;
   if (paper_text != NULL && !hl_paper_from_id (paper_text, &paper, &failure))
     return usage_error (error, g_strdup_printf ("--paper: %s", failure->message));
-  if (paper_text != NULL && hl_arguments_value (arguments, "drawing") == NULL)
-    return usage_error (error, g_strdup (_("--paper needs --drawing FILE")));
+  if (paper_text != NULL && hl_arguments_value (arguments, "drawing") == NULL && hl_arguments_value (arguments, "report") == NULL)
+    return usage_error (error, g_strdup (_("--paper needs --drawing FILE or --report FILE")));
   if (paper_text == NULL && hl_arguments_value (arguments, "scale") != NULL)
     return usage_error (error, g_strdup (_("--scale needs --paper SIZE")));
   return read_fields (arguments, &fields, texts, error) && read_scale (arguments, &scale, error);
@@ -106,15 +107,28 @@ write_sheet (const HlSolution *solution, const HlArguments *arguments, const HlS
   return bytes != NULL && hl_export_bytes_file (bytes, path, error);
 }
 
+static gboolean
+write_report (const HlSolution *solution, const HlArguments *arguments, const HlSheetFields *fields, const char *path, GError **error)
+{
+  HlPaper paper = HL_PAPER_A3;
+  g_autoptr (GBytes) bytes = NULL;
+  if (hl_arguments_value (arguments, "paper") != NULL && !hl_paper_from_id (hl_arguments_value (arguments, "paper"), &paper, error))
+    return FALSE;
+  bytes = hl_export_report (solution, paper, fields, error);
+  return bytes != NULL && hl_export_bytes_file (bytes, path, error);
+}
+
 gboolean
 hl_write_handover (const HlSolution *solution, const HlArguments *arguments, GError **error)
 {
   g_autoptr (GPtrArray) texts = g_ptr_array_new_with_free_func (g_free);
   const char *summary = hl_arguments_value (arguments, "summary"), *workbook = hl_arguments_value (arguments, "xlsx");
   const char *drawing = hl_arguments_value (arguments, "paper") != NULL ? hl_arguments_value (arguments, "drawing") : NULL;
+  const char *report = hl_arguments_value (arguments, "report");
   HlSheetFields fields;
   return read_fields (arguments, &fields, texts, error)
          && (summary == NULL || write_summary (solution, summary, error))
          && (workbook == NULL || write_workbook (solution, workbook, error))
-         && (drawing == NULL || write_sheet (solution, arguments, &fields, drawing, error));
+         && (drawing == NULL || write_sheet (solution, arguments, &fields, drawing, error))
+         && (report == NULL || write_report (solution, arguments, &fields, report, error));
 }

@@ -8,7 +8,7 @@
 #include "plant/i18n.h"
 
 /* The options that take a file name, which may be "-". */
-static const char *const file_options[] = { "json", "csv", "summary", "ledger", "xlsx", "drawing", "diagram", "heat", NULL };
+static const char *const file_options[] = { "json", "csv", "summary", "ledger", "xlsx", "report", "drawing", "diagram", "heat", NULL };
 
 #define LONGEST_INPUT (17u << 20)
 
@@ -170,6 +170,7 @@ static const HlBatchOption solve_options[] = {
   { "ledger", N_("FILE"), FALSE, N_("write the ledger as text in aligned columns") },
   { "xlsx", N_("FILE"), FALSE, N_("write summary, streams, components, values and findings as a workbook") },
   { "drawing", N_("FILE"), FALSE, N_("write the drawing; .svg, .pdf or .png") },
+  { "report", N_("FILE"), FALSE, N_("write everything as one PDF: basis, drawing, diagram, tables, findings, assumed values, equations") },
   { "paper", N_("SIZE"), FALSE, N_("put the drawing on a sheet with title block and legends: A4, A3, A2, A1, Letter, Tabloid") },
   { "scale", N_("NUMBER"), FALSE, N_("scale of the drawing on its sheet; as large as fits when it is not given") },
   { "field", N_("NAME=TEXT"), TRUE, N_("fill a field of the sheet: variant, case, date, revision, drawn, checked, approved; may be repeated") },

@@ -47,6 +47,28 @@ hl_table_cell (const HlTable *table, guint row, guint column)
   return &table->cells[row * table->n_columns + column];
 }
 
+HlTable *
+hl_table_pick (const HlTable *table, const guint *rows, guint n)
+{
+  HlTable *picked;
+  g_return_val_if_fail (table != NULL, NULL);
+  picked = hl_table_new (table->title, table->n_columns, n);
+  picked->has_parts = table->has_parts;
+  for (guint column = 0; column < table->n_columns; column++)
+    {
+      hl_table_head (picked, column, table->columns[column].heading, table->columns[column].is_number);
+      for (guint k = 0; k < n; k++)
+        {
+          HlTableCell *to = &picked->cells[k * table->n_columns + column];
+          g_free (to->text);
+          *to = *hl_table_cell (table, rows[k], column);
+          to->text = g_strdup (to->text);
+          picked->is_head[k] = table->is_head[rows[k]];
+        }
+    }
+  return picked;
+}
+
 static HlTableCell *
 cell (HlTable *table, guint row, guint column)
 {

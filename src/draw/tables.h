@@ -49,6 +49,7 @@ HlTable           *hl_table_components (const HlSolution *solution, HlUnitSet un
 /* Values that the plant file carries, with their sources; only the assumed ones where @assumed_only. */
 HlTable           *hl_table_values     (const HlSolution *solution, HlUnitSet units, gboolean assumed_only);
 HlTable           *hl_table_findings   (const HlSolution *solution);
+HlTable           *hl_table_pick       (const HlTable *table, const guint *rows, guint n);    /* these rows only */
 void               hl_table_free       (HlTable *table);
 const HlTableCell *hl_table_cell       (const HlTable *table, guint row, guint column);
 char              *hl_table_csv        (const HlTable *table);    /* RFC 4180, ten digits, decimal points; g_free() */

@@ -51,7 +51,7 @@ def test_the_batch_commands_of_the_readme_run():
         done = subprocess.run(["/bin/sh", "-c", command], capture_output=True, text=True, timeout=60, check=False,
                               env={**os.environ, "PATH": f"{os.path.abspath('bin')}:/usr/bin:/bin"})
         assert done.returncode == 0 and done.stderr == "", (command, done.stderr)
-    for name in ("streams.csv", "plant.pdf", "ts.svg", "states.csv"):
+    for name in ("streams.csv", "plant.pdf", "ts.svg", "report.pdf", "tables.xlsx", "states.csv"):
         assert os.path.getsize(name) > 0, name
 
 
