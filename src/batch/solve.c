@@ -3,76 +3,13 @@
 #include <stdio.h>
 #include <string.h>
 #include "batch/command.h"
+#include "batch/plant-input.h"
 #include "batch/solve-output.h"
 #include "draw/export.h"
 #include "plant/i18n.h"
 
 /* The options that take a file name, which may be "-". */
 static const char *const file_options[] = { "json", "csv", "summary", "ledger", "xlsx", "report", "drawing", "diagram", "heat", NULL };
-
-#define LONGEST_INPUT (17u << 20)
-
-static HlPlant *
-load_plant (const char *path, GError **error)
-{
-  if (strcmp (path, "-") != 0)
-    return hl_plant_load (path, error);
-
-  g_autoptr(GString) text = g_string_new (NULL);
-  char block[65536];
-  gsize n;
-  /* Beyond what any plant needs, the reader refuses what it has got. */
-  while (text->len <= LONGEST_INPUT && (n = fread (block, 1, sizeof block, stdin)) > 0)
-    g_string_append_len (text, block, (gssize) n);
-  if (ferror (stdin))
-    {
-      g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_CONTENT, _("standard input could not be read to the end"));
-      return NULL;
-    }
-  return hl_plant_from_json (text->str, (gssize) text->len, _("standard input"), error);
-}
-
-/* One --set, as if typed in the window: the value is given, and an assumed one may yield to it. */
-static gboolean
-set_value (HlPlant **plant, const char *text, GArray *yielded, GError **error)
-{
-  const char *equals = strchr (text, '=');
-  if (!g_utf8_validate (text, -1, NULL) || equals == NULL || equals == text)
-    {
-      g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE,
-                   _("--set needs ADDRESS=VALUE, for instance 'T1.inlet.p=80 bar'; got “%s”"), text);
-      return FALSE;
-    }
-  g_autofree char *name = g_strstrip (g_strndup (text, (gsize) (equals - text)));
-  HlAddress address;
-  HlValue value;
-  if (!hl_address_parse (name, *plant, &address, error) || !hl_value_parse (*plant, &address, equals + 1, &value, error))
-    return FALSE;
-  g_autoptr(HlPlant) with_value = hl_plant_with_value (*plant, &address, &value, error);
-  if (with_value == NULL)
-    return FALSE;
-
-  g_autoptr(GArray) now_yielded = NULL;
-  HlPlant *settled = hl_settle (with_value, &address, &now_yielded);
-  if (now_yielded != NULL && now_yielded->len > 0)
-    g_array_append_vals (yielded, now_yielded->data, now_yielded->len);
-  hl_plant_unref (*plant);
-  *plant = settled;
-  return TRUE;
-}
-
-static gboolean
-set_values (HlPlant **plant, const HlArguments *arguments, GArray *yielded, GError **error)
-{
-  char *const *values;
-  for (guint n = 0; (values = hl_arguments_option (arguments, "set", n)) != NULL; n++)
-    if (!set_value (plant, values[0], yielded, error))
-      {
-        g_prefix_error (error, "--set '%s': ", values[0]);
-        return FALSE;
-      }
-  return TRUE;
-}
 
 /* Mistakes of the command line show before anything is read or written. */
 static gboolean
@@ -125,11 +62,11 @@ run_solve (const HlArguments *arguments)
   g_autoptr(GError) error = NULL;
   if (!check_usage (arguments, &error))
     return hl_complain (HL_EXIT_USAGE, g_steal_pointer (&error));
-  g_autoptr(HlPlant) plant = load_plant (hl_arguments_word (arguments, 0), &error);
+  g_autoptr(HlPlant) plant = hl_input_plant (hl_arguments_word (arguments, 0), &error);
   if (plant == NULL)
     return hl_complain (HL_EXIT_FILE, g_steal_pointer (&error));
   g_autoptr(GArray) yielded = g_array_new (FALSE, FALSE, sizeof (HlYield));
-  if (!hl_check_pictures (plant, arguments, &error) || !set_values (&plant, arguments, yielded, &error))
+  if (!hl_check_pictures (plant, arguments, &error) || !hl_input_values (&plant, arguments, yielded, &error))
     return hl_complain (HL_EXIT_USAGE, g_steal_pointer (&error));
 
   g_autoptr(HlSolution) solution = hl_solve (plant, NULL);
@@ -150,7 +87,7 @@ static HlExit
 run_check (const HlArguments *arguments)
 {
   g_autoptr(GError) error = NULL;
-  g_autoptr(HlPlant) plant = load_plant (hl_arguments_word (arguments, 0), &error);
+  g_autoptr(HlPlant) plant = hl_input_plant (hl_arguments_word (arguments, 0), &error);
   if (plant == NULL)
     return hl_complain (HL_EXIT_FILE, g_steal_pointer (&error));
   g_autoptr(HlSolution) solution = hl_solve (plant, NULL);

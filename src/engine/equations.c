@@ -634,6 +634,28 @@ hl_equation_wants_saturation (const HlEquation *e)
          || e->residual == enthalpy_at_moisture || e->residual == quality;
 }
 
+const char *
+hl_equation_source (const HlEquation *e)
+{
+  if (e->source != NULL)
+    return e->source;
+  if (e->residual == tie)
+    return N_("tie that was put in");
+  if (e->is_balance)
+    return N_("conservation of mass");
+  if (e->residual == energy && e->says == NULL)
+    return N_("conservation of energy");
+  if (e->residual == expansion || e->residual == compression)
+    return N_("definition of the isentropic efficiency");
+  if (e->residual == straight_line)
+    return N_("straight expansion line in h and s: simplification, no source");
+  if (e->residual == log_mean)
+    return N_("logarithmic mean of the end differences, counterflow");
+  if (e->residual == cooling_heat)
+    return N_("conservation of energy");
+  return e->fluid != NULL ? N_("property of the medium") : N_("definition");
+}
+
 int
 hl_equation_property_calls (const HlEquation *e)
 {

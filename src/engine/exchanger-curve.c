@@ -170,6 +170,7 @@ with_fluids (HlEquation *e, const HlFluid *hot, const HlFluid *cold, const char 
 {
   e->fluid = hot;
   e->other_fluid = cold;
+  e->source = N_("counterflow, part by part along the heat");
   e->says = says;
   e->output = output;
   return e;

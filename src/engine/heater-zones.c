@@ -185,6 +185,7 @@ hl_add_heater_conductance (HlSystem *system, const HlFluid *fluid, const int inp
   HlEquation *e = hl_system_add_equation (system, heater_conductance, HL_VAR_CONDUCTANCE, 1u << N, vars, N + 1, NULL, 0);
   e->fluid = fluid;
   e->output = N;
+  e->source = N_("counterflow, zone by zone; ΔT_m of each by its end differences");
   e->says = N_("{10} = sum over desuperheating, condensing and subcooling of heat ÷ logarithmic mean difference");
   return e;
 }

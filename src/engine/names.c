@@ -136,16 +136,18 @@ fill_in (const HlModel *model, const HlEquation *e, const char *pattern, gboolea
 }
 
 static void
-add_term (GString *side, const char *text)
+add_term (GString *side, double factor, const char *text)
 {
   if (side->len > 0)
     g_string_append (side, " + ");
+  if (fabs (fabs (factor) - 1.0) > 0.0)
+    g_string_append_printf (side, "%.17g × ", fabs (factor));
   g_string_append (side, text);
 }
 
 /* Terms with a plus on the left, those with a minus on the right. */
 static char *
-write_terms (const HlModel *model, const HlEquation *e, gboolean with_numbers)
+template_of_terms (const HlModel *model, const HlEquation *e)
 {
   const double *a = &g_array_index (model->system->constants, double, e->first_constant);
   gboolean is_energy = hl_equation_is_energy (e);
@@ -154,16 +156,15 @@ write_terms (const HlModel *model, const HlEquation *e, gboolean with_numbers)
   GString *left = g_string_new (NULL), *right = g_string_new (NULL);
   for (int k = 0; k < n_pairs; k++)
     {
-      g_autofree char *first = word (model, e, 2 * k, with_numbers), *second = word (model, e, 2 * k + 1, with_numbers);
-      g_autofree char *text = g_strdup_printf ("%s × %s", first, second);
-      add_term (signs[k] > 0.0 ? left : right, text);
+      g_autofree char *text = g_strdup_printf ("{%d} × {%d}", 2 * k, 2 * k + 1);
+      add_term (signs[k] > 0.0 ? left : right, signs[k], text);
     }
   for (int k = 2 * n_pairs; k < e->n; k++)
     {
-      g_autofree char *text = word (model, e, k, with_numbers);
+      g_autofree char *text = g_strdup_printf ("{%d}", k);
       double factor = factors[k - 2 * n_pairs];
       if (fabs (factor) > 0.0)
-        add_term (factor > 0.0 ? left : right, text);
+        add_term (factor > 0.0 ? left : right, factor, text);
     }
   char *text = g_strdup_printf ("%s = %s", left->len > 0 ? left->str : "0", right->len > 0 ? right->str : "0");
   g_string_free (left, TRUE);
@@ -173,35 +174,45 @@ write_terms (const HlModel *model, const HlEquation *e, gboolean with_numbers)
 
 /* target = factor × source + offset; an offset of a temperature or pressure is a difference of such. */
 static char *
-write_tie (const HlModel *model, const HlEquation *e, gboolean with_numbers)
+template_of_tie (const HlModel *model, const HlEquation *e, gboolean in_si)
 {
   const double *a = &g_array_index (model->system->constants, double, e->first_constant);
-  g_autofree char *target = word (model, e, 0, with_numbers), *source = word (model, e, 1, with_numbers);
   HlDimension dimension = hl_name_dimension (e->kind);
   if (dimension == HL_DIMENSION_TEMPERATURE)
     dimension = HL_DIMENSION_TEMPERATURE_DIFFERENCE;
   if (dimension == HL_DIMENSION_PRESSURE)
     dimension = HL_DIMENSION_PRESSURE_DIFFERENCE;
   if (!(fabs (a[1]) > 0.0))
-    return g_strdup_printf ("%s = %.6g × %s", target, a[0], source);
+    return g_strdup_printf (in_si ? "{0} = %.17g × {1}" : "{0} = %.6g × {1}", a[0]);
+  if (in_si)
+    return g_strdup_printf ("{0} = %.17g × {1} %s %.17g", a[0], a[1] < 0.0 ? "−" : "+", fabs (a[1]));
   g_autofree char *offset = hl_units_format (fabs (a[1]), dimension, hl_plant_units (model->plant));
-  return g_strdup_printf ("%s = %.6g × %s %s %s", target, a[0], source, a[1] < 0.0 ? "−" : "+", offset);
+  return g_strdup_printf ("{0} = %.6g × {1} %s %s", a[0], a[1] < 0.0 ? "−" : "+", offset);
+}
+
+char *
+hl_name_template (const HlModel *model, int equation, gboolean in_si)
+{
+  const HlEquation *e = hl_system_equation (model->system, equation);
+  if (e->says != NULL)
+    return g_strdup (in_si ? e->says : _(e->says));
+  if (hl_equation_is_tie (e))
+    return template_of_tie (model, e, in_si);
+  if (hl_equation_is_energy (e) || hl_equation_is_linear (e))
+    return template_of_terms (model, e);
+  double value = hl_var_to_si (e->kind, g_array_index (model->system->constants, double, e->first_constant));
+  if (in_si)
+    return g_strdup_printf ("{0} = %.17g", value);
+  g_autofree char *text = hl_units_format (value, hl_name_dimension (e->kind), hl_plant_units (model->plant));
+  return g_strdup_printf ("{0} = %s", text);
 }
 
 char *
 hl_name_equation (const HlModel *model, int equation, gboolean with_numbers)
 {
   const HlEquation *e = hl_system_equation (model->system, equation);
-  if (e->says != NULL)
-    return fill_in (model, e, _(e->says), with_numbers);
-  if (hl_equation_is_tie (e))
-    return write_tie (model, e, with_numbers);
-  if (hl_equation_is_energy (e) || hl_equation_is_linear (e))
-    return write_terms (model, e, with_numbers);
-  g_autofree char *name = word (model, e, 0, FALSE);
-  g_autofree char *value = hl_units_format (hl_var_to_si (e->kind, g_array_index (model->system->constants, double, e->first_constant)),
-                                            hl_name_dimension (e->kind), hl_plant_units (model->plant));
-  return g_strdup_printf ("%s = %s", name, value);
+  g_autofree char *pattern = hl_name_template (model, equation, FALSE);
+  return fill_in (model, e, pattern, with_numbers && (e->says != NULL || e->n > 1));
 }
 
 char *

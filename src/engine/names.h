@@ -11,6 +11,8 @@ char     *hl_name_value    (const HlModel *model, int var);            /* "0.070
 HlDimension hl_name_dimension (HlVarKind kind);
 /* The equation with the names of its variables, or with their numbers. */
 char     *hl_name_equation (const HlModel *model, int equation, gboolean with_numbers);
+/* The same with {k} where variable k of the equation stands: for people in their language and units, or in SI with all digits. */
+char     *hl_name_template (const HlModel *model, int equation, gboolean in_si);
 /* "a", "a or b", "a, b or c"; frees nothing. */
 char     *hl_name_list     (char *const *names, guint n, gboolean is_choice);
 /* "T1", "T1 and C1": components of some equations. */

@@ -89,7 +89,8 @@ fuel_heat_hhv (HlEmit *emit)
       int heat = hl_model_own_var (model, c, "fuel_heat"), ratio = hl_model_own_var (model, c, "fuel_hhv_ratio");
       if (heat < 0 || ratio < 0)
         continue;
-      int part = hl_emit_hidden (emit, "fuel_heat_hhv", HL_VAR_POWER);
+      HlEmit boiler = { emit->model, emit->system, hl_plant_component (model->plant, (guint) c), c };
+      int part = hl_emit_hidden (&boiler, "fuel_heat_hhv", HL_VAR_POWER);
       hl_emit_done (emit, hl_add_product (emit->system, heat, ratio, part), NULL, 2);
       g_array_append_val (parts, part);
     }

@@ -43,9 +43,9 @@ add_result (HlSolution *solution, const HlQuantityKind *kind, double value)
   g_array_append_val (solution->results, result);
 }
 
-/* Highest and lowest temperature of the working fluid: what carries the turbines. */
-static gboolean
-carnot (const HlSolution *solution, double *value)
+/* Nodes with the lowest and highest temperature of the working fluid: what carries the turbines. */
+gboolean
+hl_results_extremes (const HlSolution *solution, int *lowest, int *highest)
 {
   const HlModel *model = solution->model;
   double low = INFINITY, high = 0.0;
@@ -64,11 +64,24 @@ carnot (const HlSolution *solution, double *value)
       const char *kind = n->component >= 0 ? hl_plant_component (model->plant, (guint) n->component)->kind->id : "";
       if (g_str_equal (kind, "make_up") || g_str_equal (kind, "boundary") || g_str_equal (kind, "steam_user"))
         continue;
+      if (node->st.T < low)
+        *lowest = (int) k;
+      if (node->st.T > high)
+        *highest = (int) k;
       low = fmin (low, node->st.T);
       high = fmax (high, node->st.T);
     }
-  *value = 1.0 - low / high;
   return high > low;
+}
+
+static gboolean
+carnot (const HlSolution *solution, double *value)
+{
+  int lowest, highest;
+  if (!hl_results_extremes (solution, &lowest, &highest))
+    return FALSE;
+  *value = 1.0 - solution->states[lowest].st.T / solution->states[highest].st.T;
+  return TRUE;
 }
 
 static gboolean

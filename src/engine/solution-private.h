@@ -30,4 +30,6 @@ struct _HlSolution {
 void hl_results_states    (HlSolution *solution);
 void hl_results_plant     (HlSolution *solution);
 void hl_results_processes (HlSolution *solution);
+/* Nodes between whose temperatures the Carnot efficiency counts; FALSE where there are none. */
+gboolean hl_results_extremes (const HlSolution *solution, int *lowest, int *highest);
 G_END_DECLS

@@ -151,6 +151,7 @@ hl_add_wet_expansion (HlSystem *system, const HlFluid *fluid, int p_in, int h_in
   const int vars[N] = { p_in, h_in, p_out, efficiency, factor, h_out };
   HlEquation *e = hl_system_add_equation (system, wet_expansion, HL_VAR_ENTHALPY, 1u << FACTOR, vars, N, NULL, 0);
   e->fluid = fluid;
+  e->source = N_("Baumann 1921");
   e->says = N_("{5} = {1} − {3} × ({1} − h({2}, s({0}, {1}))) + {3} × {4} × mean moisture × isentropic drop of the wet part");
   return e;
 }

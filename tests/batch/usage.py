@@ -2,7 +2,7 @@
 # SPDX-License-Identifier: GPL-3.0-or-later
 from tap import batch, main, refused
 
-COMMANDS = ("solve", "check", "state", "kinds", "fluids")
+COMMANDS = ("solve", "check", "note", "state", "kinds", "fluids")
 
 
 def test_help_names_the_commands_and_the_caution():
@@ -10,7 +10,7 @@ def test_help_names_the_commands_and_the_caution():
     for command in COMMANDS:
         assert f"\n  {command} " in out, command
     assert "Caution" in out and "licensed practice" in out
-    for later in ("sweep", "optimum", "note", "gallery"):
+    for later in ("sweep", "optimum", "gallery"):
         assert f"\n  {later} " not in out, later
 
 
@@ -34,7 +34,7 @@ def test_no_command_is_an_error():
 
 
 def test_unknown_commands_are_refused_with_the_list():
-    refused("frobnicate", status=2, says=["frobnicate", "solve, check, state, kinds, fluids"])
+    refused("frobnicate", status=2, says=["frobnicate", "solve, check, note, state, kinds, fluids"])
     refused("sweep", "x.heatloom", status=2, says="sweep")
 
 
