@@ -47,6 +47,7 @@ static char *
 note_json (const HlNote *note)
 {
   HlJsonText *json = hl_json_text_new ();
+  hl_json_text_begin (json, NULL, '{', FALSE);
   hl_json_text_begin (json, "inputs", '[', FALSE);
   for (guint k = 0; k < hl_note_n_inputs (note); k++)
     write_term (json, hl_note_input (note, k));
@@ -54,6 +55,7 @@ note_json (const HlNote *note)
   hl_json_text_begin (json, "lines", '[', FALSE);
   for (guint k = 0; k < hl_note_n_lines (note); k++)
     write_line (json, hl_note_line (note, k));
+  hl_json_text_end (json);
   hl_json_text_end (json);
   return hl_json_text_finish (json);
 }

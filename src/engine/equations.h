@@ -52,7 +52,7 @@ gboolean hl_equation_is_energy (const HlEquation *equation);
 gboolean hl_equation_is_linear (const HlEquation *equation);
 gboolean hl_equation_is_tie    (const HlEquation *equation);
 gboolean hl_equation_wants_saturation (const HlEquation *equation);   /* has no meaning above the critical pressure */
-const char *hl_equation_source (const HlEquation *equation);          /* N_() where it comes from */
+const char *hl_equation_source (const HlEquation *equation);          /* marked for translation: where it comes from */
 
 static inline gboolean
 hl_equation_linear_in (const HlEquation *equation, int k)
