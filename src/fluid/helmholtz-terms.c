@@ -117,13 +117,16 @@ add_gao_terms (const HlHelmholtz *eq, double delta, double tau, double ln_delta,
 
 /* IAPWS R6-95(2018), Table 5, with the factors (delta-1)^-1 taken out so that the
  * line delta = 1 needs no limit; at the critical point itself Delta = 0 and its
- * powers have no bound, so the distance is kept above 1e-12 there. */
+ * powers have no bound, so the distance is kept above 1e-12 there (xx is its
+ * square).  Far from that point the exponential leaves nothing: e^-80 times the
+ * largest factor of a second derivative, (2 D)^2, is below 1e-28. */
 static void
-add_non_analytic_term (const HlNonAnalyticTerm *c, double delta, double tau, HlAlpha *sum)
+add_non_analytic_term (const HlNonAnalyticTerm *c, double delta, double tau, double xx, double ln_xx, HlAlpha *sum)
 {
   double x = delta - 1.0, y = 1.0 - tau;
-  double xx = fmax (x * x, 1e-24);
-  double inner = pow (xx, 0.5 / c->beta - 1.0), outer = pow (xx, c->a - 1.0);
+  if (c->C * x * x + c->D * y * y > 80.0)
+    return;
+  double inner = exp ((0.5 / c->beta - 1.0) * ln_xx), outer = exp ((c->a - 1.0) * ln_xx);
   double theta = y + c->A * inner * xx;
   double Delta = theta * theta + c->B * outer * xx;
   /* Delta_d = x slope, Delta_dd = slope + curve */
@@ -131,7 +134,7 @@ add_non_analytic_term (const HlNonAnalyticTerm *c, double delta, double tau, HlA
   double curve = 4.0 * c->B * c->a * (c->a - 1.0) * outer + 2.0 * c->A * c->A / (c->beta * c->beta) * inner * inner * xx
                  + c->A * theta * 4.0 / c->beta * (0.5 / c->beta - 1.0) * inner;
   double Delta_d = x * slope, Delta_dd = slope + curve;
-  double P = pow (Delta, c->b), P1 = c->b * P / Delta, P2 = (c->b - 1.0) * P1 / Delta;
+  double P = exp (c->b * log (Delta)), P1 = c->b * P / Delta, P2 = (c->b - 1.0) * P1 / Delta;
   double P_d = P1 * Delta_d, P_dd = P1 * Delta_dd + P2 * Delta_d * Delta_d;
   double P_t = -2.0 * theta * P1, P_tt = 2.0 * P1 + 4.0 * theta * theta * P2;
   double P_dt = -c->A * 2.0 / c->beta * P1 * x * inner - 2.0 * theta * P2 * Delta_d;
@@ -156,8 +159,12 @@ hl_helmholtz_residual (const HlHelmholtz *eq, double delta, double tau, HlAlpha 
   add_exponential_terms (eq, ln_delta, ln_tau, &sum);
   add_gaussian_terms (eq, delta, tau, ln_delta, ln_tau, &sum);
   add_gao_terms (eq, delta, tau, ln_delta, ln_tau, &sum);
-  for (guint i = 0; i < eq->n_non_analytic; i++)
-    add_non_analytic_term (&eq->non_analytic[i], delta, tau, &sum);
+  if (eq->n_non_analytic > 0)
+    {
+      double xx = fmax ((delta - 1.0) * (delta - 1.0), 1e-24), ln_xx = log (xx);
+      for (guint i = 0; i < eq->n_non_analytic; i++)
+        add_non_analytic_term (&eq->non_analytic[i], delta, tau, xx, ln_xx, &sum);
+    }
   *alpha = sum;
 }
 
