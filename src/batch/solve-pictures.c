@@ -38,13 +38,14 @@ gboolean
 hl_check_pictures (const HlPlant *plant, const HlArguments *arguments, GError **error)
 {
   char *const *values;
+  const char *bands;
   for (guint n = 0; (values = hl_arguments_option (arguments, "diagram", n)) != NULL; n++)
     if (!check_diagram (values, error))
       return FALSE;
   for (guint n = 0; (values = hl_arguments_option (arguments, "heat", n)) != NULL; n++)
     if (!check_heat (plant, values, error))
       return FALSE;
-  return TRUE;
+  return (bands = hl_arguments_value (arguments, "bands")) == NULL || check_path (bands, error);
 }
 
 gboolean
@@ -90,5 +91,7 @@ write_heats (const HlSolution *solution, const HlArguments *arguments, GError **
 gboolean
 hl_write_pictures (const HlSolution *solution, const HlArguments *arguments, GError **error)
 {
-  return write_diagrams (solution, arguments, error) && write_heats (solution, arguments, error);
+  const char *bands = hl_arguments_value (arguments, "bands");
+  return write_diagrams (solution, arguments, error) && write_heats (solution, arguments, error)
+         && (bands == NULL || hl_write_picture (solution, HL_PICTURE_BANDS, -1, bands, error));
 }

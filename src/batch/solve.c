@@ -9,7 +9,7 @@
 #include "plant/i18n.h"
 
 /* The options that take a file name, which may be "-". */
-static const char *const file_options[] = { "json", "csv", "summary", "ledger", "xlsx", "report", "drawing", "diagram", "heat", NULL };
+static const char *const file_options[] = { "json", "csv", "summary", "ledger", "xlsx", "report", "drawing", "diagram", "heat", "bands", NULL };
 
 /* Mistakes of the command line show before anything is read or written. */
 static gboolean
@@ -113,6 +113,7 @@ static const HlBatchOption solve_options[] = {
   { "field", N_("NAME=TEXT"), TRUE, N_("fill a field of the sheet: variant, case, date, revision, drawn, checked, approved; may be repeated") },
   { "diagram", N_("ts|hs|ph FILE"), TRUE, N_("write a state diagram: temperature-entropy, enthalpy-entropy, pressure-enthalpy; may be repeated") },
   { "heat", N_("COMPONENT FILE"), TRUE, N_("write temperature over heat of an exchanger, or of all together (all); may be repeated") },
+  { "bands", N_("FILE"), FALSE, N_("write where the energy of the plant comes from and goes, as bands to scale") },
 };
 
 const HlBatchCommand hl_command_solve = {

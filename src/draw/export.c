@@ -6,6 +6,7 @@
 #include <math.h>
 #include <stdio.h>
 #include <string.h>
+#include "draw/bands.h"
 #include "draw/heat-diagram.h"
 #include "draw/sheet.h"
 #include "draw/state-diagram.h"
@@ -46,6 +47,13 @@ draw_state_diagram (cairo_t *cr, const HlTheme *theme, const HlSolution *solutio
 }
 
 static void
+draw_bands (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, double width, double height)
+{
+  g_autoptr (HlBandsPicture) picture = hl_bands_picture_new (solution, hl_plant_units (hl_solution_plant (solution)), width, height);
+  hl_bands_picture_draw (picture, cr, theme, !hl_solution_is_solved (solution));
+}
+
+static void
 draw_heat (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, int component, double width, double height)
 {
   g_autoptr (HlHeatDiagram) diagram = hl_heat_diagram_new (solution, component, hl_plant_units (hl_solution_plant (solution)), width, height);
@@ -67,6 +75,9 @@ draw_picture (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, HlP
       break;
     case HL_PICTURE_PH_DIAGRAM:
       draw_state_diagram (cr, theme, solution, HL_STATE_DIAGRAM_PH, width, height);
+      break;
+    case HL_PICTURE_BANDS:
+      draw_bands (cr, theme, solution, width, height);
       break;
     case HL_PICTURE_HEAT:
       draw_heat (cr, theme, solution, component, width, height);

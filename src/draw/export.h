@@ -10,6 +10,7 @@ typedef enum {
   HL_PICTURE_STATE_DIAGRAM,       /* T-s */
   HL_PICTURE_HS_DIAGRAM,
   HL_PICTURE_PH_DIAGRAM,
+  HL_PICTURE_BANDS,               /* energy of the plant, widths to scale */
   HL_PICTURE_HEAT,                /* of one component, or composite curves of all exchangers */
 } HlPicture;
 typedef enum { HL_FORMAT_SVG, HL_FORMAT_PDF, HL_FORMAT_PNG } HlFormat;

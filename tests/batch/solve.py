@@ -164,7 +164,7 @@ def test_every_output_goes_to_files():
 
 
 def test_pictures_have_the_format_of_their_ending():
-    for kind in (["--drawing"], ["--diagram", "ts"], ["--diagram", "hs"], ["--diagram", "ph"], ["--heat", "C1"], ["--heat", "all"]):
+    for kind in (["--drawing"], ["--diagram", "ts"], ["--diagram", "hs"], ["--diagram", "ph"], ["--heat", "C1"], ["--heat", "all"], ["--bands"]):
         for ending, start in (("svg", b"<?xml"), ("pdf", b"%PDF-"), ("png", b"\x89PNG\r\n\x1a\n")):
             batch("solve", plant("loop.heatloom"), *kind, f"x.{ending}")
             with open(f"x.{ending}", "rb") as file:
