@@ -342,6 +342,12 @@ add_marks_and_texts (HlStateDiagram *diagram, const HlCycle *cycle)
 HlStateDiagram *
 hl_state_diagram_from_cycle (const HlCycle *cycle, double width, double height)
 {
+  return hl_state_diagram_from_cycle_on (cycle, NULL, width, height);
+}
+
+HlStateDiagram *
+hl_state_diagram_from_cycle_on (const HlCycle *cycle, const HlStateDiagram *other, double width, double height)
+{
   HlStateDiagram *diagram = g_new0 (HlStateDiagram, 1);
   double scale;
   diagram->kind = cycle->kind;
@@ -358,6 +364,11 @@ hl_state_diagram_from_cycle (const HlCycle *cycle, double width, double height)
   g_array_set_clear_func (diagram->texts, clear_text);
   diagram->gaps = g_array_new (FALSE, TRUE, sizeof (HlBox));
   hl_state_diagram_set_axes (diagram, cycle);
+  if (other != NULL)
+    {
+      diagram->x_axis = other->x_axis;
+      diagram->y_axis = other->y_axis;
+    }
   hl_state_diagram_add_dome (diagram);
   hl_state_diagram_add_paths (diagram, cycle);
   add_marks_and_texts (diagram, cycle);

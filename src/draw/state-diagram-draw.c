@@ -143,8 +143,40 @@ draw_critical (const HlStateDiagram *diagram, cairo_t *cr, const HlTheme *theme,
   cairo_restore (cr);
 }
 
+/* On axes that were made for another solution a state may lie outside. */
+static gboolean
+mark_is_inside (const HlStateDiagram *diagram, const HlMark *mark)
+{
+  const HlBox *frame = &diagram->frame;
+  return mark->at.x >= frame->x - 1.0 && mark->at.x <= frame->x + frame->width + 1.0
+         && mark->at.y >= frame->y - 1.0 && mark->at.y <= frame->y + frame->height + 1.0;
+}
+
+/* Without its numbers: they would lie beside those of the present one. */
+static void
+draw_ghost (const HlStateDiagram *ghost, cairo_t *cr, const HlTheme *theme)
+{
+  cairo_push_group (cr);
+  hl_plot_layer_draw (ghost->paths, cr, theme, &ghost->x_axis, &ghost->y_axis, NULL, 0, TRUE);
+  for (guint i = 0; i < ghost->marks->len; i++)
+    {
+      const HlMark *mark = &g_array_index (ghost->marks, HlMark, i);
+      if (mark->kind == HL_MARK_STATE)
+        draw_dot (mark, cr, theme, TRUE, FALSE);
+    }
+  cairo_pop_group_to_source (cr);
+  cairo_paint_with_alpha (cr, 0.7);
+}
+
 void
 hl_state_diagram_draw (const HlStateDiagram *diagram, cairo_t *cr, const HlTheme *theme, gboolean is_stale, int selected_stream)
+{
+  hl_state_diagram_draw_over (diagram, NULL, cr, theme, is_stale, selected_stream);
+}
+
+void
+hl_state_diagram_draw_over (const HlStateDiagram *diagram, const HlStateDiagram *ghost, cairo_t *cr, const HlTheme *theme,
+                            gboolean is_stale, int selected_stream)
 {
   g_autofree char *x_title = NULL, *y_title = NULL;
   g_return_if_fail (diagram != NULL && cr != NULL && theme != NULL);
@@ -160,6 +192,8 @@ hl_state_diagram_draw (const HlStateDiagram *diagram, cairo_t *cr, const HlTheme
   draw_critical (diagram, cr, theme, is_stale);
   hl_set_colour (cr, &theme->quiet);
   hl_plot_axes_draw_frame (cr, theme, &diagram->x_axis, &diagram->y_axis, x_title, y_title, diagram->text_size);
+  if (ghost != NULL)
+    draw_ghost (ghost, cr, theme);
   hl_plot_layer_draw (diagram->paths, cr, theme, &diagram->x_axis, &diagram->y_axis, NULL, 0, is_stale);
   draw_texts (diagram, cr, theme);
   for (guint i = 0; i < diagram->marks->len; i++)
@@ -169,7 +203,7 @@ hl_state_diagram_draw (const HlStateDiagram *diagram, cairo_t *cr, const HlTheme
       {
         const HlMark *mark = &g_array_index (diagram->marks, HlMark, i);
         gboolean is_selected = mark_has_stream (mark, selected_stream);
-        if ((int) mark->kind != kind)
+        if ((int) mark->kind != kind || !mark_is_inside (diagram, mark))
           continue;
         draw_dot (mark, cr, theme, is_stale, is_selected);
         draw_number (diagram, mark, cr, theme, is_stale, is_selected);

@@ -103,6 +103,8 @@ struct _HlStateDiagram {
   GArray        *gaps;                     /* of HlBox: where the background leaves room for texts */
 };
 HlStateDiagram *hl_state_diagram_from_cycle (const HlCycle *cycle, double width, double height);
+/* On the axes of @other, or on its own where that is NULL. */
+HlStateDiagram *hl_state_diagram_from_cycle_on (const HlCycle *cycle, const HlStateDiagram *other, double width, double height);
 /* Steps of the above, in this order. */
 void            hl_state_diagram_set_axes   (HlStateDiagram *diagram, const HlCycle *cycle);
 void            hl_state_diagram_add_dome   (HlStateDiagram *diagram);

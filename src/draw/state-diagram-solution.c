@@ -68,3 +68,13 @@ hl_state_diagram_new_of_kind (const HlSolution *solution, HlStateDiagramKind kin
   cycle->kind = kind;
   return hl_state_diagram_from_cycle (cycle, width, height);
 }
+
+HlStateDiagram *
+hl_state_diagram_new_on (const HlSolution *solution, const HlStateDiagram *other)
+{
+  g_autoptr (HlCycle) cycle = NULL;
+  g_return_val_if_fail (solution != NULL && other != NULL, NULL);
+  cycle = hl_cycle_from_solution (solution, other->x_axis.units);
+  cycle->kind = other->kind;
+  return hl_state_diagram_from_cycle_on (cycle, other, other->width, other->height);
+}

@@ -20,9 +20,14 @@ gboolean        hl_state_diagram_kind_from_id (const char *id, HlStateDiagramKin
 
 HlStateDiagram *hl_state_diagram_new   (const HlSolution *solution, HlUnitSet units, double width, double height);   /* T-s; pixels */
 HlStateDiagram *hl_state_diagram_new_of_kind (const HlSolution *solution, HlStateDiagramKind kind, HlUnitSet units, double width, double height);
+/* Of the same kind, size and axes as @other, so that both can be drawn over each other; a state may then lie outside. */
+HlStateDiagram *hl_state_diagram_new_on (const HlSolution *solution, const HlStateDiagram *other);
 void            hl_state_diagram_free  (HlStateDiagram *diagram);
 /* @stale: drawn grey (last solve failed). @selected_stream: index ringed, or -1. */
 void            hl_state_diagram_draw  (const HlStateDiagram *diagram, cairo_t *cr, const HlTheme *theme, gboolean is_stale, int selected_stream);
+/* The same with @ghost (nullable, on the same axes) beneath it: its processes and states, grey and pale. */
+void            hl_state_diagram_draw_over (const HlStateDiagram *diagram, const HlStateDiagram *ghost, cairo_t *cr, const HlTheme *theme,
+                                            gboolean is_stale, int selected_stream);
 int             hl_state_diagram_stream_at (const HlStateDiagram *diagram, double x, double y, double within);   /* -1: none */
 /* Pixels to what the axes show and back; FALSE outside the axes.  T-s: s [J/(kg K)], T [K]; h-s: s, h [J/kg]; p-h: h, p [Pa]. */
 gboolean        hl_state_diagram_to_state (const HlStateDiagram *diagram, double x, double y, double *across, double *up);
