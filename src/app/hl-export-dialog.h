@@ -5,7 +5,15 @@
 #include "app/hl-session.h"
 G_BEGIN_DECLS
 
-typedef enum { HL_HAND_OVER_DRAWING, HL_HAND_OVER_STATE_DIAGRAM, HL_HAND_OVER_LEDGER } HlHandOver;
+typedef enum {
+  HL_HAND_OVER_DRAWING,
+  HL_HAND_OVER_STATE_DIAGRAM,
+  HL_HAND_OVER_HS_DIAGRAM,
+  HL_HAND_OVER_PH_DIAGRAM,
+  HL_HAND_OVER_HEAT,
+  HL_HAND_OVER_BANDS,
+  HL_HAND_OVER_LEDGER,            /* the last one: the only table */
+} HlHandOver;
 
 #define HL_TYPE_EXPORT_DIALOG (hl_export_dialog_get_type ())
 G_DECLARE_FINAL_TYPE (HlExportDialog, hl_export_dialog, HL, EXPORT_DIALOG, GtkWindow)
