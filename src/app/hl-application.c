@@ -54,8 +54,11 @@ hl_application_activate (GApplication *application)
     {
       g_autoptr (HlSession) session = demo_session ();
       present = GTK_WINDOW (hl_window_new (GTK_APPLICATION (application), session));
+      gtk_window_present (present);
+      hl_window_offer_recovery (HL_WINDOW (present));
     }
-  gtk_window_present (present);
+  else
+    gtk_window_present (present);
 }
 
 static void
@@ -70,6 +73,8 @@ hl_application_open (GApplication *application, GFile **files, int n_files, cons
       gtk_window_present (GTK_WINDOW (window));
       if (path != NULL && !is_open)
         hl_window_open_path (window, path);     /* once more, to say in the window what is wrong */
+      else if (is_open)
+        hl_window_offer_recovery (window);
     }
 }
 

@@ -153,6 +153,7 @@ hl_window_open_path (HlWindow *self, const char *path)
   if (hl_session_open (self->session, path, &error))
     {
       hl_canvas_fit (self->canvas);
+      hl_window_offer_recovery (self);
       return TRUE;
     }
   hl_window_show_error (self, _("The plant could not be opened"), error);

@@ -1,6 +1,7 @@
 /* What the files of the window share.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #pragma once
+#include "app/hl-autosave.h"
 #include "app/hl-canvas.h"
 #include "app/hl-window.h"
 G_BEGIN_DECLS
@@ -9,6 +10,7 @@ struct _HlWindow {
   GtkApplicationWindow parent_instance;
   HlSession *session;
   HlCanvas  *canvas;
+  HlAutosave *autosave;
   gboolean   may_close;        /* the question about unsaved work has been answered */
   gboolean   is_wide;          /* there is room for the glance card */
   guint      fold_source;      /* idle that shows or hides it */
@@ -37,6 +39,7 @@ void hl_window_add_file_actions (HlWindow *self);   /* hl-window-file.c */
 void hl_window_fill_menus     (HlWindow *self);     /* hl-window-menus.c */
 void hl_window_place_diagram  (HlWindow *self, gboolean is_beside);
 gboolean hl_window_diagram_is_beside (HlWindow *self);
+gboolean hl_window_recover   (HlWindow *self, const char *kept, GError **error);    /* hl-window-recover.c */
 void hl_window_show_error     (HlWindow *self, const char *title, const GError *error);
 /* Runs @then at once, or after the question about unsaved work has been answered with anything but "cancel". */
 void hl_window_when_safe      (HlWindow *self, void (*then) (HlWindow *self, gpointer data), gpointer data, GDestroyNotify free_data);

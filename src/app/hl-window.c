@@ -14,6 +14,7 @@
 #include "app/hl-trace.h"
 #include "plant/i18n.h"
 
+#define AUTOSAVE_DELAY 2000       /* milliseconds after an edit */
 #define GLANCE_WIDTH 262
 #define GLANCE_FROM_WIDTH 740     /* the glance card needs this much in the work area, beside the diagram */
 
@@ -360,6 +361,7 @@ hl_window_constructed (GObject *object)
   G_OBJECT_CLASS (hl_window_parent_class)->constructed (object);
   if (self->session == NULL)
     self->session = hl_session_new ();
+  self->autosave = hl_autosave_new (self->session, AUTOSAVE_DELAY);
   fill_panes (self);
   hl_window_add_actions (self);
   hl_window_add_view_actions (self);
@@ -391,6 +393,7 @@ hl_window_dispose (GObject *object)
   g_clear_handle_id (&self->fold_source, g_source_remove);
   g_clear_handle_id (&self->divide_source, g_source_remove);
   g_clear_handle_id (&self->trace_source, g_source_remove);
+  g_clear_pointer (&self->autosave, hl_autosave_free);
   G_OBJECT_CLASS (hl_window_parent_class)->dispose (object);
 }
 
