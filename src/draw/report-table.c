@@ -9,6 +9,7 @@
 #define MOST_COLUMNS 16
 #define PADDING      0.55     /* of the text size, each side of a cell */
 #define INDENT       1.2
+#define LEAST_SIZE   0.75     /* of the usual size of the text */
 #define TICK         "☐"
 
 typedef struct {
@@ -58,8 +59,9 @@ widest_word (const Printer *p, const char *text, gboolean is_bold)
   return widest;
 }
 
-/* Natural widths where they fit together; otherwise the wide columns of text share what is left. */
-static void
+/* Natural widths where they fit together; otherwise the wide columns of text share what is left.
+ * FALSE where even the least widths are too much at this size. */
+static gboolean
 measure (Printer *p)
 {
   double natural[MOST_COLUMNS], least[MOST_COLUMNS], room = p->report->right - p->report->left, sum = 0.0, low = 0.0, high = room;
@@ -72,7 +74,7 @@ measure (Printer *p)
           const char *text = text_in (p, p->like, row, k);
           double width = hl_text_width (&p->report->theme, text, p->size, FALSE) + p->indent[k];
           natural[k] = MAX (natural[k], width);
-          least[k] = MAX (least[k], is_number (p, k) ? width : MIN (widest_word (p, text, FALSE), 9.0 * p->size) + p->indent[k]);
+          least[k] = MAX (least[k], is_number (p, k) ? width : MIN (widest_word (p, text, FALSE), 14.0 * p->size) + p->indent[k]);
         }
       natural[k] = ceil (natural[k] * 1.01) + 2.0 * PADDING * p->size;
       least[k] = ceil (least[k] * 1.01) + 2.0 * PADDING * p->size;
@@ -80,7 +82,7 @@ measure (Printer *p)
     }
   memcpy (p->widths, natural, sizeof natural);
   if (sum <= room)
-    return;
+    return TRUE;
   for (int step = 0; step < 40; step++)
     {
       double limit = (low + high) / 2.0;
@@ -89,7 +91,21 @@ measure (Printer *p)
         sum += p->widths[k] = MIN (natural[k], MAX (least[k], limit));
       *(sum > room ? &high : &low) = limit;
     }
-  /* Where even the least is too much, everything gives way alike. */
+  sum = 0.0;
+  for (int k = 0; k < p->n; k++)
+    sum += p->widths[k];
+  return sum <= room + 1.0;
+}
+
+/* Smaller text where words would have to be torn; where nothing helps everything gives way alike. */
+static void
+choose_widths (Printer *p)
+{
+  double usual = p->size, room = p->report->right - p->report->left, sum = 0.0;
+  while (!measure (p) && p->size > LEAST_SIZE * usual)
+    p->size *= 0.97;
+  for (int k = 0; k < p->n; k++)
+    sum += p->widths[k];
   for (int k = 0; k < p->n && sum > room + 1.0; k++)
     p->widths[k] *= room / sum;
 }
@@ -98,10 +114,16 @@ static PangoLayout *
 cell_layout (const Printer *p, const char *text, int k, gboolean is_bold, double indent)
 {
   PangoLayout *layout = hl_text_layout (p->report->cr, &p->report->theme, text, p->size, is_bold);
+  PangoAttrList *attributes;
   pango_layout_set_single_paragraph_mode (layout, FALSE);
   pango_layout_set_width (layout, (int) ((p->widths[k] - 2.0 * PADDING * p->size - indent) * PANGO_SCALE));
   pango_layout_set_wrap (layout, PANGO_WRAP_WORD_CHAR);
   pango_layout_set_auto_dir (layout, FALSE);
+  /* A hyphen in an address or a unit would be read as part of it. */
+  attributes = pango_attr_list_copy (pango_layout_get_attributes (layout));
+  pango_attr_list_insert (attributes, pango_attr_insert_hyphens_new (FALSE));
+  pango_layout_set_attributes (layout, attributes);
+  pango_attr_list_unref (attributes);
   pango_layout_set_alignment (layout, is_number (p, k) ? PANGO_ALIGN_RIGHT : PANGO_ALIGN_LEFT);
   return layout;
 }
@@ -199,7 +221,7 @@ hl_report_table (HlReport *report, const HlTable *table, const HlTable *like, co
     p.columns[p.n] = columns[p.n];
   if (last_heading != NULL)
     p.columns[p.n++] = -1;
-  measure (&p);
+  choose_widths (&p);
   hl_report_room (report, 7.0 * size);
   draw_headings (&p);
   for (guint row = 0; row < table->n_rows; row++)
