@@ -4,6 +4,8 @@
 #include "app/compat.h"
 #include "app/hl-pane.h"
 #include "draw/export.h"
+#include "draw/report.h"
+#include "draw/xlsx.h"
 #include "plant/i18n.h"
 
 #define WIDTH 900
@@ -19,8 +21,9 @@ struct _HlExportDialog {
 G_DEFINE_FINAL_TYPE (HlExportDialog, hl_export_dialog, GTK_TYPE_WINDOW)
 
 static const char *const what_names[] = { N_("Drawing"), N_("State diagram"), N_("h-s diagram"), N_("p-h diagram"),
-                                         N_("Composite curves"), N_("Energy bands"), N_("Ledger"), NULL };
-static const char *const what_suffixes[] = { "drawing", "states", "hs", "ph", "heat", "bands", "ledger" };
+                                         N_("Composite curves"), N_("Energy bands"), N_("Ledger"),
+                                         N_("Heat balance drawing, A3"), N_("Report, PDF"), N_("Workbook, all tables"), NULL };
+static const char *const what_suffixes[] = { "drawing", "states", "hs", "ph", "heat", "bands", "ledger", "sheet", "report", "tables" };
 static const HlPicture what_pictures[] = { HL_PICTURE_DRAWING, HL_PICTURE_STATE_DIAGRAM, HL_PICTURE_HS_DIAGRAM, HL_PICTURE_PH_DIAGRAM,
                                            HL_PICTURE_HEAT, HL_PICTURE_BANDS };
 static const struct { const char *name, *filter, *pattern, *ending; } formats[] = {
@@ -49,6 +52,19 @@ chosen_theme (HlExportDialog *self)
   return themes[gtk_drop_down_get_selected (GTK_DROP_DOWN (self->theme))];
 }
 
+/* What has one form only: its ending and what the file dialog says of it; NULL for pictures. */
+static const struct { const char *ending, *filter, *pattern, *remark; } documents[HL_HAND_OVER_WORKBOOK + 1] = {
+  [HL_HAND_OVER_LEDGER] = { "csv", N_("Comma-separated tables"), "*.csv", N_("Comma-separated table, units in the headings, decimal points") },
+  [HL_HAND_OVER_REPORT] = { "pdf", N_("PDF documents"), "*.pdf", N_("Basis, drawing, diagrams, tables, findings, assumed values and equations; shown here: performance") },
+  [HL_HAND_OVER_WORKBOOK] = { "xlsx", N_("Workbooks"), "*.xlsx", N_("Performance, streams, components, values and findings, a sheet each; shown here: performance") },
+};
+
+static gboolean
+is_document (HlExportDialog *self)
+{
+  return documents[chosen_what (self)].ending != NULL;
+}
+
 static HlPicture
 chosen_picture (HlExportDialog *self)
 {
@@ -68,8 +84,10 @@ static void
 preview_picture (HlExportDialog *self)
 {
   g_autoptr (GError) error = NULL;
-  g_autoptr (GBytes) bytes = hl_export_picture (hl_session_solution (self->session), chosen_picture (self), HL_FORMAT_PNG,
-                                                chosen_theme (self), 0.0, 0.0, 1.0, &error);
+  const HlSolution *solution = hl_session_solution (self->session);
+  g_autoptr (GBytes) bytes = chosen_what (self) == HL_HAND_OVER_SHEET
+    ? hl_export_sheet (solution, HL_PAPER_A3, NULL, 0.0, HL_FORMAT_PNG, &error)
+    : hl_export_picture (solution, chosen_picture (self), HL_FORMAT_PNG, chosen_theme (self), 0.0, 0.0, 1.0, &error);
   g_autoptr (GdkTexture) texture = bytes != NULL ? gdk_texture_new_from_bytes (bytes, &error) : NULL;
 
   gtk_picture_set_paintable (GTK_PICTURE (self->picture), GDK_PAINTABLE (texture));
@@ -78,11 +96,14 @@ preview_picture (HlExportDialog *self)
 }
 
 static void
-preview_ledger (HlExportDialog *self)
+preview_table (HlExportDialog *self)
 {
-  g_autofree char *csv = hl_ledger_csv (hl_session_solution (self->session), hl_pane_units (self->session));
+  const HlSolution *solution = hl_session_solution (self->session);
+  g_autoptr (HlTable) summary = hl_table_summary (solution, hl_pane_units (self->session));
+  g_autofree char *text = chosen_what (self) == HL_HAND_OVER_LEDGER ? hl_ledger_csv (solution, hl_pane_units (self->session))
+                                                                    : hl_table_text (summary);
 
-  gtk_text_buffer_set_text (gtk_text_view_get_buffer (GTK_TEXT_VIEW (self->text)), csv, -1);
+  gtk_text_buffer_set_text (gtk_text_view_get_buffer (GTK_TEXT_VIEW (self->text)), text, -1);
   gtk_stack_set_visible_child (GTK_STACK (self->stack), gtk_widget_get_parent (self->text));
   show_note (self, NULL);
 }
@@ -90,15 +111,16 @@ preview_ledger (HlExportDialog *self)
 static void
 update (HlExportDialog *self)
 {
-  gboolean is_table = chosen_what (self) == HL_HAND_OVER_LEDGER;
-  GtkWidget *of_pictures[] = { self->format_label, self->format, self->theme_label, self->theme };
+  gboolean is_table = is_document (self), has_theme = !is_table && chosen_what (self) != HL_HAND_OVER_SHEET;
 
-  for (guint n = 0; n < G_N_ELEMENTS (of_pictures); n++)
-    gtk_widget_set_sensitive (of_pictures[n], !is_table);
-  gtk_label_set_text (GTK_LABEL (self->remark), is_table ? _("Comma-separated table, units in the headings, decimal points")
+  gtk_widget_set_sensitive (self->format_label, !is_table);
+  gtk_widget_set_sensitive (self->format, !is_table);
+  gtk_widget_set_sensitive (self->theme_label, has_theme);
+  gtk_widget_set_sensitive (self->theme, has_theme);
+  gtk_label_set_text (GTK_LABEL (self->remark), is_table ? _(documents[chosen_what (self)].remark)
                                                          : _("Colours and fonts as they will be in the file"));
   if (is_table)
-    preview_ledger (self);
+    preview_table (self);
   else
     preview_picture (self);
 }
@@ -110,9 +132,43 @@ static char *
 full_path (HlExportDialog *self, const char *path)
 {
   g_autofree char *name = g_path_get_basename (path);
-  const char *ending = chosen_what (self) == HL_HAND_OVER_LEDGER ? "csv" : formats[chosen_format (self)].ending;
+  const char *ending = is_document (self) ? documents[chosen_what (self)].ending : formats[chosen_format (self)].ending;
 
   return strchr (name, '.') != NULL ? g_strdup (path) : g_strdup_printf ("%s.%s", path, ending);
+}
+
+/* The ending names another thing than what is chosen: a report in a file called .svg helps nobody. */
+static gboolean
+check_ending (HlExportDialog *self, const char *path, GError **error)
+{
+  g_autofree char *lower = g_ascii_strdown (path, -1), *ending = g_strconcat (".", documents[chosen_what (self)].ending, NULL);
+
+  if (g_str_has_suffix (lower, ending))
+    return TRUE;
+  g_set_error (error, G_IO_ERROR, G_IO_ERROR_INVALID_FILENAME, _("%s: let the file's name end in %s"), path, ending);
+  return FALSE;
+}
+
+static gboolean
+write_bytes (HlExportDialog *self, const char *path, GError **error)
+{
+  const HlSolution *solution = hl_session_solution (self->session);
+  g_autoptr (GBytes) bytes = NULL;
+  HlFormat format;
+
+  switch (chosen_what (self))
+    {
+    case HL_HAND_OVER_REPORT:
+      bytes = check_ending (self, path, error) ? hl_export_report (solution, HL_PAPER_A3, NULL, error) : NULL;
+      break;
+    case HL_HAND_OVER_WORKBOOK:
+      bytes = check_ending (self, path, error) ? hl_export_workbook (solution, hl_pane_units (self->session), error) : NULL;
+      break;
+    case HL_HAND_OVER_SHEET:
+    default:
+      bytes = hl_format_from_path (path, &format, error) ? hl_export_sheet (solution, HL_PAPER_A3, NULL, 0.0, format, error) : NULL;
+    }
+  return bytes != NULL && hl_export_bytes_file (bytes, path, error);
 }
 
 gboolean
@@ -129,6 +185,8 @@ hl_export_dialog_write (HlExportDialog *self, const char *path)
       g_autofree char *csv = hl_ledger_csv (solution, hl_pane_units (self->session));
       done = hl_export_text_file (csv, full, &error);
     }
+  else if (chosen_what (self) >= HL_HAND_OVER_SHEET)
+    done = write_bytes (self, full, &error);
   else
     done = hl_format_from_path (full, &format, &error)
            && hl_export_picture_file (solution, chosen_picture (self), format, chosen_theme (self), full, &error);
@@ -160,8 +218,8 @@ proposed_name (HlExportDialog *self)
   char *ending = strstr (title, ".heatloom");
   if (ending != NULL)
     *ending = '\0';
-  gboolean is_table = chosen_what (self) == HL_HAND_OVER_LEDGER;
-  char *name = g_strdup_printf ("%s-%s.%s", title, what_suffixes[chosen_what (self)], is_table ? "csv" : formats[chosen_format (self)].ending);
+  char *name = g_strdup_printf ("%s-%s.%s", title, what_suffixes[chosen_what (self)],
+                                is_document (self) ? documents[chosen_what (self)].ending : formats[chosen_format (self)].ending);
 
   g_strdelimit (name, "/\\:*?\"<>|", '-');
   g_strdelimit (name, " ", '-');
@@ -171,13 +229,13 @@ proposed_name (HlExportDialog *self)
 static void
 save_clicked_cb (GtkButton *button, HlExportDialog *self)
 {
-  gboolean is_table = chosen_what (self) == HL_HAND_OVER_LEDGER;
+  gboolean is_table = is_document (self);
   const char *path = hl_session_path (self->session);
   g_autofree char *folder = path != NULL ? g_path_get_dirname (path) : NULL, *name = proposed_name (self);
   HlFileQuestion question = {
     .title = _("Hand over"), .accept = _("Save"),
-    .filter_name = is_table ? _("Comma-separated tables") : _(formats[chosen_format (self)].filter),
-    .pattern = is_table ? "*.csv" : formats[chosen_format (self)].pattern,
+    .filter_name = is_table ? _(documents[chosen_what (self)].filter) : _(formats[chosen_format (self)].filter),
+    .pattern = is_table ? documents[chosen_what (self)].pattern : formats[chosen_format (self)].pattern,
     .folder = folder, .name = name, .is_save = TRUE,
   };
 

@@ -12,7 +12,10 @@ typedef enum {
   HL_HAND_OVER_PH_DIAGRAM,
   HL_HAND_OVER_HEAT,
   HL_HAND_OVER_BANDS,
-  HL_HAND_OVER_LEDGER,            /* the last one: the only table */
+  HL_HAND_OVER_LEDGER,            /* before it the pictures of hl_export_picture() */
+  HL_HAND_OVER_SHEET,             /* the drawing on A3 with title block */
+  HL_HAND_OVER_REPORT,
+  HL_HAND_OVER_WORKBOOK,
 } HlHandOver;
 
 #define HL_TYPE_EXPORT_DIALOG (hl_export_dialog_get_type ())

@@ -87,6 +87,34 @@ test_hand_over_writes_every_format (void)
 }
 
 static void
+test_hand_over_writes_documents (void)
+{
+  static const struct { HlHandOver what; const char *ending, *begin; } documents[] = {
+    { HL_HAND_OVER_SHEET, "svg", "<?xml" }, { HL_HAND_OVER_REPORT, "pdf", "%PDF" }, { HL_HAND_OVER_WORKBOOK, "xlsx", "PK" },
+  };
+  HlSession *session = loop_session ();
+  GtkWidget *window = window_with (gtk_label_new ("parent"));
+  g_autoptr (GError) error = NULL;
+  g_autofree char *folder = g_dir_make_tmp ("heatloom-XXXXXX", &error);
+
+  hl_export_dialog_present (GTK_WINDOW (window), session);
+  GtkWidget *dialog = dialog_over (window);
+  for (guint i = 0; i < G_N_ELEMENTS (documents); i++)
+    {
+      g_autofree char *bare = g_strdup_printf ("%s/%u", folder, i), *full = g_strdup_printf ("%s.%s", bare, documents[i].ending);
+      choose (dialog, 0, documents[i].what);
+      g_assert_true (hl_export_dialog_write (HL_EXPORT_DIALOG (dialog), bare));      /* adds its own ending */
+      assert_begins (full, documents[i].begin);
+    }
+  g_assert_false (hl_export_dialog_write (HL_EXPORT_DIALOG (dialog), "/tmp/heatloom-tables.pdf"));
+  g_assert_true (shows_text (dialog, ".xlsx"));
+  g_assert_false (g_file_test ("/tmp/heatloom-tables.pdf", G_FILE_TEST_EXISTS));
+  g_assert_cmpint (g_rmdir (folder), ==, 0);
+  gtk_window_destroy (GTK_WINDOW (dialog));
+  close_window (window, session);
+}
+
+static void
 test_hand_over_says_what_it_cannot_write (void)
 {
   HlSession *session = loop_session ();
@@ -112,7 +140,7 @@ test_hand_over_of_an_unsolved_plant (void)
   hl_session_reset (session, hl_plant_new (), NULL);
   hl_export_dialog_present (GTK_WINDOW (window), session);
   GtkWidget *dialog = dialog_over (window);
-  for (guint what = 0; what <= HL_HAND_OVER_LEDGER; what++)
+  for (guint what = 0; what <= HL_HAND_OVER_WORKBOOK; what++)
     choose (dialog, 0, what);                                   /* must not fall over an empty sheet */
   gtk_window_destroy (GTK_WINDOW (dialog));
   close_window (window, session);
@@ -175,6 +203,7 @@ main (int argc, char **argv)
   if (!test_init (&argc, &argv))
     return 0;
   g_test_add_func ("/app/dialogs/hand over writes every format", test_hand_over_writes_every_format);
+  g_test_add_func ("/app/dialogs/hand over writes documents", test_hand_over_writes_documents);
   g_test_add_func ("/app/dialogs/hand over says what it cannot write", test_hand_over_says_what_it_cannot_write);
   g_test_add_func ("/app/dialogs/hand over of an unsolved plant", test_hand_over_of_an_unsolved_plant);
   g_test_add_func ("/app/dialogs/question is answered once", test_question_is_answered_once);
