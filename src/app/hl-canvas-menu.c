@@ -4,6 +4,20 @@
 #include "plant/i18n.h"
 
 static GMenuModel *
+order_menu (void)
+{
+  static const struct { const char *label, *action; } lines[] = {
+    { N_("Left edges"), "win.align::left" }, { N_("Centres, one above the other"), "win.align::centre" }, { N_("Right edges"), "win.align::right" },
+    { N_("Top edges"), "win.align::top" }, { N_("Middles, side by side"), "win.align::middle" }, { N_("Bottom edges"), "win.align::bottom" },
+    { N_("Space evenly across"), "win.distribute::across" }, { N_("Space evenly down"), "win.distribute::down" },
+  };
+  GMenu *menu = g_menu_new ();
+  for (guint n = 0; n < G_N_ELEMENTS (lines); n++)
+    g_menu_append (menu, _(lines[n].label), lines[n].action);
+  return G_MENU_MODEL (menu);
+}
+
+static GMenuModel *
 context_menu (HlCanvas *self)
 {
   GMenu *menu = g_menu_new (), *section = g_menu_new ();
@@ -16,7 +30,11 @@ context_menu (HlCanvas *self)
       g_menu_append (section, _("Take off its shaft"), "win.leave-shaft");
     }
   if (n > 1)
-    g_menu_append (section, _("Put on one shaft"), "win.join-selection");
+    {
+      g_autoptr (GMenuModel) order = order_menu ();
+      g_menu_append (section, _("Put on one shaft"), "win.join-selection");
+      g_menu_append_submenu (section, _("Line up"), order);
+    }
   if (n == 1 && hl_plant_find_stream (hl_canvas_plant (self), ids[0]) != NULL)
     g_menu_append (section, _("Let the label find its place"), "win.reset-label");
   g_menu_append_section (menu, NULL, G_MENU_MODEL (section));

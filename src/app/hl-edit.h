@@ -28,6 +28,12 @@ HlPlant *hl_edit_branch      (const HlPlant *plant, const char *a_id, const char
                               const char **id, GError **error);
 HlPlant *hl_edit_place_label (const HlPlant *plant, const char *stream, gboolean has_place, int x, int y);
 
+/* Components lined up at an edge or the middle of the box around them: left, centre, right move them across, the others down. */
+typedef enum { HL_ALIGN_LEFT, HL_ALIGN_CENTRE, HL_ALIGN_RIGHT, HL_ALIGN_TOP, HL_ALIGN_MIDDLE, HL_ALIGN_BOTTOM } HlAlignment;
+HlPlant *hl_edit_align       (const HlPlant *plant, const char *const *ids, guint n, HlAlignment alignment);
+/* The middles of three or more evenly spaced between the outermost two, which stay. */
+HlPlant *hl_edit_distribute  (const HlPlant *plant, const char *const *ids, guint n, gboolean is_across);
+
 /* Whether a line may run between two ports, and if not why. */
 gboolean hl_edit_can_connect (const HlPlant *plant, const char *a_id, const char *a_port, const char *b_id, const char *b_port, GError **error);
 gboolean hl_edit_can_join    (const HlPlant *plant, const char *a_id, const char *b_id, GError **error);

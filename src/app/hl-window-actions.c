@@ -480,7 +480,43 @@ units_cb (GSimpleAction *action, GVariant *value, gpointer data)
   hl_session_apply (self->session, _("Change units"), hl_plant_with_units (plant_of (self), units), NULL, FALSE);
 }
 
+/* Order */
+
+/* A step only where something moved. */
+static void
+apply_order (HlWindow *self, const char *format, HlPlant *plant)
+{
+  if (plant == plant_of (self))
+    hl_plant_unref (plant);
+  else
+    apply_to_selection (self, format, plant, FALSE);
+}
+
+static void
+align_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  static const char *const words[] = { "left", "centre", "right", "top", "middle", "bottom" };
+  HlWindow *self = HL_WINDOW (data);
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  for (guint i = 0; i < G_N_ELEMENTS (words); i++)
+    if (g_str_equal (words[i], g_variant_get_string (parameter, NULL)))
+      apply_order (self, _("Align %s"), hl_edit_align (plant_of (self), ids, n, (HlAlignment) i));
+}
+
+static void
+distribute_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  apply_order (self, _("Space %s evenly"),
+               hl_edit_distribute (plant_of (self), ids, n, g_str_equal (g_variant_get_string (parameter, NULL), "across")));
+}
+
 static const GActionEntry entries[] = {
+  { "align", align_cb, "s" },
+  { "distribute", distribute_cb, "s" },
   { "undo", undo_cb },
   { "redo", redo_cb },
   { "add-component", add_component_cb, "s" },
@@ -537,6 +573,8 @@ hl_window_update_actions (HlWindow *self)
   enable (self, "move", n_components > 0);
   enable (self, "nudge", n_components > 0);
   enable (self, "turn", n_components > 0);
+  enable (self, "align", n_components > 1);
+  enable (self, "distribute", n_components > 2);
   enable (self, "mirror", n_components > 0);
   enable (self, "duplicate", n_components > 0);
   enable (self, "copy", n_components > 0);

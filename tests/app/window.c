@@ -528,6 +528,54 @@ test_pages_are_built_when_they_are_first_shown (void)
   end_window (window);
 }
 
+static const HlComponent *
+component_of (HlWindow *window, const char *id)
+{
+  return hl_plant_find_component (plant_of (window), id);
+}
+
+static void
+test_components_line_up_and_space_evenly (void)
+{
+  HlWindow *window = new_window ();
+  HlSession *session = hl_window_session (window);
+  int hw_turbine, hw_valve, h;
+  act (window, "add-component-at", "(sii)", "turbine", 0, 0);
+  act (window, "add-component-at", "(sii)", "valve", 11, 20);
+  g_assert_false (is_enabled (window, "align"));
+  act (window, "add-component-at", "(sii)", "valve", 40, 50);
+  act (window, "select-all", NULL);
+  hl_component_half_size (component_of (window, "T1"), &hw_turbine, &h);
+  hl_component_half_size (component_of (window, "V1"), &hw_valve, &h);
+
+  act (window, "align", "s", "left");
+  g_assert_cmpstr (hl_session_undo_name (session), ==, "Align 3 items");
+  g_assert_cmpint (component_of (window, "T1")->x, ==, 0);
+  g_assert_cmpint (component_of (window, "V1")->x, ==, hw_valve - hw_turbine);
+  g_assert_cmpint (component_of (window, "V2")->x, ==, hw_valve - hw_turbine);
+  g_assert_cmpint (component_of (window, "V1")->y, ==, 20);
+  act (window, "align", "s", "left");      /* nothing moves: no step */
+  act (window, "undo", NULL);
+  g_assert_cmpint (component_of (window, "V1")->x, ==, 11);
+  act (window, "align", "s", "right");
+  g_assert_cmpint (component_of (window, "T1")->x, ==, 40 + hw_valve - hw_turbine);
+  g_assert_cmpint (component_of (window, "V1")->x, ==, 40);
+  act (window, "undo", NULL);
+
+  act (window, "distribute", "s", "across");
+  g_assert_cmpint (component_of (window, "T1")->x, ==, 0);
+  g_assert_cmpint (component_of (window, "V1")->x, ==, 20);
+  g_assert_cmpint (component_of (window, "V2")->x, ==, 40);
+  act (window, "distribute", "s", "down");
+  g_assert_cmpint (component_of (window, "V1")->y, ==, 25);
+  act (window, "align", "s", "middle");
+  g_assert_cmpint (component_of (window, "T1")->y, ==, component_of (window, "V2")->y);
+  hl_session_select (session, "V2", TRUE);
+  g_assert_true (is_enabled (window, "align"));
+  g_assert_false (is_enabled (window, "distribute"));     /* two have nothing between them */
+  end_window (window);
+}
+
 int
 main (int argc, char **argv)
 {
@@ -553,6 +601,7 @@ main (int argc, char **argv)
   g_test_add_func ("/app/window/zoom", test_zoom_keeps_what_lies_in_the_middle);
   g_test_add_func ("/app/window/looks", test_both_looks_and_both_places_of_the_diagram);
   g_test_add_func ("/app/window/pages", test_pages_are_built_when_they_are_first_shown);
+  g_test_add_func ("/app/window/order", test_components_line_up_and_space_evenly);
   result = g_test_run ();
   g_object_unref (application);
   return result;
