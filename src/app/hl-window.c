@@ -6,6 +6,7 @@
 #include "app/hl-findings.h"
 #include "app/hl-glance.h"
 #include "app/hl-ledger-view.h"
+#include "app/hl-picture-view.h"
 #include "app/hl-nameplate.h"
 #include "app/hl-quantity-row.h"
 #include "app/hl-settings.h"
@@ -120,6 +121,8 @@ zoom_changed_cb (HlWindow *self)
 
 /* A page that is built when it is first looked at. */
 static const struct { const char *name, *title; GtkWidget *(*build) (HlSession *session); } late_tabs[] = {
+  { "heat", N_("Heat"), hl_heat_view_new },
+  { "bands", N_("Bands"), hl_bands_view_new },
   { "ledger", N_("Ledger"), hl_ledger_view_new },
   { "findings", N_("Findings"), hl_findings_new },
 };
