@@ -26,6 +26,8 @@ static const struct {
   { "district_heater", { { "heat", NULL } } },
   { "air_condenser", { { "heat", NULL } } },
   { "cooling_tower", { { "heat", NULL } } },
+  { "compressor",    { { "power", NULL } } },
+  { "motor",         { { "power", NULL } } },
   { "exchanger",     { { "heat", NULL } } },
   { "recuperator",   { { "heat", NULL } } },
 };

@@ -37,7 +37,7 @@ book_doors (const HlSolution *solution, int c, Balance *mass, Balance *energy)
     book (energy, own (solution, c, "heat"));
   else if (g_str_equal (kind, "turbine"))
     book (energy, -own (solution, c, "internal_power"));
-  else if (g_str_equal (kind, "pump"))
+  else if (g_str_equal (kind, "pump") || g_str_equal (kind, "compressor"))
     book (energy, own (solution, c, "power"));
   else if (g_str_equal (kind, "pipe"))
     book (energy, -own (solution, c, "heat_loss"));

@@ -544,6 +544,30 @@ look_at_shafts (HlModel *model)
     }
 }
 
+static const char *
+shaft_key (HlShaftRole role)
+{
+  return role == HL_SHAFT_GENERATOR ? "shaft_power" : role == HL_SHAFT_LOSS ? "loss" : "power";
+}
+
+/* What a gearbox takes its loss from: the power of all drivers of its shaft. */
+static void
+add_gearbox_input (HlModel *model, int gearbox, const int *vars, const double *signs, int n)
+{
+  int drivers[HL_EQUATION_MOST], n_drivers = 0;
+  double factors[HL_EQUATION_MOST];
+  for (int k = 0; k < n && n_drivers < HL_EQUATION_MOST - 1; k++)
+    if (signs[k] > 0.0)
+      {
+        drivers[n_drivers] = vars[k];
+        factors[n_drivers++] = 1.0;
+      }
+  drivers[n_drivers] = hl_model_own_var (model, gearbox, "input_power");
+  factors[n_drivers] = -1.0;
+  HlEquation *e = hl_add_linear (model->system, HL_VAR_POWER, drivers, factors, n_drivers + 1, 0.0);
+  e->component = gearbox;
+}
+
 static void
 add_shafts (HlModel *model)
 {
@@ -559,15 +583,21 @@ add_shafts (HlModel *model)
           if (c < 0 || !model->is_on_shaft[c])
             continue;
           HlShaftRole role = hl_plant_component (plant, (guint) c)->kind->shaft;
-          const char *key = role == HL_SHAFT_GENERATOR ? "shaft_power" : "power";
-          int var = hl_model_own_var (model, c, key);
+          int var = hl_model_own_var (model, c, shaft_key (role));
           if (var < 0)
             continue;
           vars[n] = var;
           signs[n++] = role == HL_SHAFT_DRIVES ? 1.0 : -1.0;
         }
-      if (n > 0)
-        hl_add_linear (model->system, HL_VAR_POWER, vars, signs, n, 0.0);
+      if (n == 0)
+        continue;
+      hl_add_linear (model->system, HL_VAR_POWER, vars, signs, n, 0.0);
+      for (guint k = 0; k < shaft->n_joins; k++)
+        {
+          int c = hl_plant_component_index (plant, shaft->joins[k]);
+          if (c >= 0 && model->is_on_shaft[c] && hl_plant_component (plant, (guint) c)->kind->shaft == HL_SHAFT_LOSS)
+            add_gearbox_input (model, c, vars, signs, n);
+        }
     }
 }
 

@@ -16,6 +16,7 @@ static const struct { const char *key, *name; } hidden[] = {
   { "fuel_heat_hhv", N_("fuel heat (HHV)") },
   { "partial_sum", N_("partial sum") },
   { "useful", N_("net power and heat delivered") },
+  { "moisture_flow", N_("moisture of the steam as a flow") },
   { "ambient_T", N_("air temperature of the site") },
   { "wet_bulb_T", N_("wet bulb temperature of the site") },
   { "water_outlet_p", N_("outlet pressure of the water") },

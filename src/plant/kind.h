@@ -71,6 +71,7 @@ typedef enum {
   HL_SHAFT_NONE,
   HL_SHAFT_DRIVES,                     /* turbine: gives power to the shaft */
   HL_SHAFT_DRIVEN,                     /* pump: may take power from a shaft instead of its motor */
+  HL_SHAFT_LOSS,                       /* gearbox: loses a part of what the others give */
   HL_SHAFT_GENERATOR,                  /* takes what the others leave */
 } HlShaftRole;
 
