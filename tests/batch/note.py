@@ -26,13 +26,13 @@ def test_json_lines_carry_formula_and_terms():
     out, _ = batch("note", plant("loop.heatloom"), "--json", "-")
     note = json.loads(out)
     assert list(note) == ["inputs", "lines"] and len(note["inputs"]) > 5
-    powers = [line for line in note["lines"] if line["terms"][line["result"]]["at"] == "T1.power"]
+    powers = [line for line in note["lines"] if line["terms"][line["result"]]["at"] == "P1.power"]
     assert len(powers) == 1
     line = powers[0]
-    assert line["formula"] == "{2} = {0} × {1}"
-    internal, efficiency, power = line["terms"]
-    assert abs(internal["value"] * efficiency["value"] - power["value"]) <= 1e-9 * power["value"]
-    assert power["unit"] == "W" and efficiency["origin"] in ("given", "assumed") and internal["origin"] == "found"
+    assert line["formula"] == "{4} = {0} × ({1} − {3})"
+    flow, leaves, _, enters, power = line["terms"]
+    assert abs(flow["value"] * (leaves["value"] - enters["value"]) - power["value"]) <= 1e-9 * power["value"]
+    assert power["unit"] == "W" and power["origin"] == "found" and power["at"] == "P1.power"
 
 
 def test_a_value_can_be_set():
