@@ -20,4 +20,6 @@ gboolean hl_check_pictures  (const HlPlant *plant, const HlArguments *arguments,
 gboolean hl_write_pictures  (const HlSolution *solution, const HlArguments *arguments, GError **error);
 /* @component: an index, or -1. */
 gboolean hl_write_picture   (const HlSolution *solution, HlPicture picture, int component, const char *path, GError **error);
+/* How the result moves with 1 % more of each value put in, the largest effect first. */
+void  hl_print_sensitivity  (FILE *out, const HlSolution *solution, const HlAddress *result);
 G_END_DECLS

@@ -2,6 +2,8 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "batch/solve-output.h"
 
+#include <math.h>
+#include <stdlib.h>
 #include "plant/i18n.h"
 
 static void
@@ -62,4 +64,49 @@ hl_print_solution (FILE *out, const HlSolution *solution, const GArray *yielded)
   if (hl_solution_n_findings (solution) > 0)
     fprintf (out, "\n");
   hl_print_findings (out, solution, HL_GRADE_HINT);
+}
+
+/* What a person varies: 1 % of the value, or 1 K of a temperature, whose zero is arbitrary. */
+static double
+step_of (const HlPlant *plant, const HlSensitivity *s)
+{
+  const HlQuantityKind *kind = hl_plant_quantity_kind (plant, &s->given);
+  return kind != NULL && kind->dimension == HL_DIMENSION_TEMPERATURE ? 1.0 : 0.01 * s->value;
+}
+
+static int
+compare_effects (gconstpointer a, gconstpointer b, gpointer plant)
+{
+  const HlSensitivity *x = a, *y = b;
+  double left = fabs (x->derivative * step_of (plant, x)), right = fabs (y->derivative * step_of (plant, y));
+  return left < right ? 1 : left > right ? -1 : 0;
+}
+
+void
+hl_print_sensitivity (FILE *out, const HlSolution *solution, const HlAddress *result)
+{
+  HlPlant *plant = hl_solution_plant (solution);
+  const HlQuantityKind *kind = hl_plant_quantity_kind (plant, result);
+  g_autofree char *name = hl_plant_describe (plant, result);
+  g_autoptr (GArray) list = hl_solution_sensitivities (solution, result);
+  double now;
+  if (list == NULL || kind == NULL || !hl_solution_value (solution, result, &now))
+    {
+      fprintf (out, _("\nNo derivative of %s: it is not found, or the plant is not solved.\n"), name);
+      return;
+    }
+  g_array_sort_with_data (list, compare_effects, plant);
+  g_autofree char *text = hl_quantity_format (kind, now, hl_plant_units (plant));
+  fprintf (out, _("\nEffect on %s (%s) of 1 %% more of each value put in, of a temperature 1 K more:\n"), name, text);
+  for (guint k = 0; k < list->len; k++)
+    {
+      const HlSensitivity *s = &g_array_index (list, HlSensitivity, k);
+      double effect = s->derivative * step_of (plant, s);
+      const HlQuantityKind *given = hl_plant_quantity_kind (plant, &s->given);
+      if (given == NULL || !(fabs (effect) > 1e-12 * fabs (now)))
+        continue;
+      g_autofree char *what = hl_plant_describe (plant, &s->given), *value = hl_quantity_format (given, s->value, hl_plant_units (plant));
+      g_autofree char *left = g_strdup_printf ("%s = %s", what, value);
+      fprintf (out, "  %s%*s%+.4f %%\n", left, (int) MAX (1, 60 - g_utf8_strlen (left, -1)), "", 100.0 * effect / fabs (now));
+    }
 }

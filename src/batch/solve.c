@@ -68,6 +68,13 @@ run_solve (const HlArguments *arguments)
   g_autoptr(GArray) yielded = g_array_new (FALSE, FALSE, sizeof (HlYield));
   if (!hl_check_pictures (plant, arguments, &error) || !hl_input_values (&plant, arguments, yielded, &error))
     return hl_complain (HL_EXIT_USAGE, g_steal_pointer (&error));
+  const char *moved = hl_arguments_value (arguments, "sensitivity");
+  HlAddress result;
+  if (moved != NULL && !hl_address_parse (moved, plant, &result, &error))
+    {
+      g_prefix_error (&error, "--sensitivity: ");
+      return hl_complain (HL_EXIT_USAGE, g_steal_pointer (&error));
+    }
 
   g_autoptr(HlSolution) solution = hl_solve (plant, NULL);
   if (!write_outputs (solution, yielded, arguments, &error))
@@ -77,7 +84,11 @@ run_solve (const HlArguments *arguments)
     }
   /* Where standard output carries a file, a person still hears of errors. */
   if (hl_arguments_count_standard_output (arguments, file_options) == 0)
-    hl_print_solution (stdout, solution, yielded);
+    {
+      hl_print_solution (stdout, solution, yielded);
+      if (moved != NULL)
+        hl_print_sensitivity (stdout, solution, &result);
+    }
   else
     hl_print_findings (stderr, solution, HL_GRADE_ERROR);
   return hl_solution_is_solved (solution) ? HL_EXIT_DONE : HL_EXIT_PLANT;
@@ -100,6 +111,7 @@ run_check (const HlArguments *arguments)
 }
 
 static const HlBatchOption solve_options[] = {
+  { "sensitivity", N_("ADDRESS"), FALSE, N_("print how this result moves with 1 % more of each value put in") },
   { "set", N_("ADDRESS=VALUE"), TRUE, N_("give a value, as 'T1.inlet.p=80 bar'; may be repeated") },
   { "json", N_("FILE"), FALSE, N_("write results, streams and findings as JSON, in SI") },
   { "csv", N_("FILE"), FALSE, N_("write the ledger of all streams as CSV, in the plant's units") },

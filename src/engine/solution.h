@@ -64,6 +64,13 @@ HL_PUBLIC char *hl_solution_summary (const HlSolution *solution);
 /* How a found value came about: the equation in words and numbers, its inputs and their origin; several lines. NULL where unknown.  g_free(). */
 HL_PUBLIC char *hl_solution_explain (const HlSolution *solution, const HlAddress *address);
 
+/* How a result moves with a value that was put in (given or assumed), all others held: d result / d value [SI over SI].
+ * FALSE where the plant is not solved, or one of the two is not such. */
+HL_PUBLIC gboolean hl_solution_sensitivity   (const HlSolution *solution, const HlAddress *result, const HlAddress *given, double *value);
+/* The same for all values put in, in one go.  Returns: (transfer full) (nullable): element-type HlSensitivity, g_array_unref(). */
+typedef struct { HlAddress given; double value, derivative; } HlSensitivity;
+HL_PUBLIC GArray  *hl_solution_sensitivities (const HlSolution *solution, const HlAddress *result);
+
 /* Balances of the whole plant, relative to the largest term. */
 HL_PUBLIC void hl_solution_balances (const HlSolution *solution, double *mass, double *energy);
 

@@ -31,6 +31,22 @@ def close(value, expected, relative=1e-9):
     assert abs(value - expected) <= relative * abs(expected), f"{value!r} is not {expected!r}"
 
 
+def test_sensitivity_is_a_table_sorted_by_effect():
+    out, _ = batch("solve", plant("loop.heatloom"), "--sensitivity", "plant.net_efficiency_lhv")
+    table = out.split("Effect on ")[1]
+    assert table.startswith("net efficiency (lhv) of the plant (") or table.lower().startswith("net efficiency (lhv)"), table
+    effects = [abs(float(row.split()[-2])) for row in table.splitlines()[1:] if row.endswith(" %")]
+    assert len(effects) >= 5 and effects == sorted(effects, reverse=True) and effects[0] > 0.1, effects
+    # Against a second solution: 1 % of the isentropic efficiency.
+    row = [row for row in table.splitlines() if "isentropic efficiency of T1" in row][0]
+    before, more = solved()["plant"]["net_efficiency_lhv"], solved("--set", "T1.isentropic_efficiency=0.838300")["plant"]["net_efficiency_lhv"]
+    assert abs(float(row.split()[-2]) - 100 * (more / before - 1)) < 2e-3, (row, before, more)
+
+
+def test_sensitivity_of_what_is_not_there():
+    refused("solve", plant("loop.heatloom"), "--sensitivity", "plant.colour", status=2, says=["--sensitivity", "colour"])
+
+
 def test_json_has_the_members_of_the_contract():
     found = solved()
     assert list(found) == ["solved", "plant", "streams", "components", "findings", "yielded"], list(found)
