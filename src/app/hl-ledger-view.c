@@ -3,6 +3,7 @@
 #include "app/hl-ledger-view.h"
 #include "app/hl-ledger-line.h"
 #include "app/hl-pane.h"
+#include "app/hl-settings.h"
 #include "plant/i18n.h"
 
 #define COLUMN_KEY "hl-column"
@@ -13,6 +14,8 @@ struct _HlLedgerView {
   GListStore       *lines;           /* HlLedgerLine in the order of the plant */
   GtkSelectionModel *selection;
   GtkWidget        *scroller, *table, *empty;
+  GSimpleActionGroup *actions;       /* "show-p" and the like: which columns are shown */
+  GMenu            *column_menu;     /* of every heading */
   HlUnitSet         units;           /* in the headings */
   gboolean          is_linking;      /* one selection follows the other */
 };
@@ -82,7 +85,90 @@ add_column (HlLedgerView *self, guint column)
   gtk_column_view_column_set_sorter (view_column, sorter);
   gtk_column_view_column_set_resizable (view_column, TRUE);
   g_object_set_data (G_OBJECT (view_column), COLUMN_KEY, data);
+  gtk_column_view_column_set_header_menu (view_column, G_MENU_MODEL (self->column_menu));
   gtk_column_view_append_column (GTK_COLUMN_VIEW (self->table), view_column);
+}
+
+/* --- which columns --- */
+
+/* The number says which stream a row is: it always stays. */
+static gboolean
+can_hide (guint column)
+{
+  return strcmp (hl_ledger_column (column)->key, "id") != 0;
+}
+
+static char *
+action_name (guint column)
+{
+  g_autofree char *name = g_strdup_printf ("show-%s", hl_ledger_column (column)->key);
+  return g_strdelimit (g_steal_pointer (&name), "_", '-');
+}
+
+static gboolean
+is_shown (HlLedgerView *self, guint column)
+{
+  g_autofree char *name = action_name (column);
+  g_autoptr (GVariant) state = g_action_group_get_action_state (G_ACTION_GROUP (self->actions), name);
+  return state == NULL || g_variant_get_boolean (state);
+}
+
+static void
+save_columns (HlLedgerView *self)
+{
+  g_autoptr (GString) hidden = g_string_new (NULL);
+
+  for (guint n = 0; n < hl_ledger_n_columns (); n++)
+    if (!is_shown (self, n))
+      g_string_append_printf (hidden, "%s%s", hidden->len > 0 ? "," : "", hl_ledger_column (n)->key);
+  hl_settings_set_string ("ledger-hidden", hidden->str);
+}
+
+static void
+show_columns (HlLedgerView *self)
+{
+  GListModel *columns = gtk_column_view_get_columns (GTK_COLUMN_VIEW (self->table));
+
+  for (guint n = 0; n < g_list_model_get_n_items (columns); n++)
+    {
+      g_autoptr (GtkColumnViewColumn) column = g_list_model_get_item (columns, n);
+      gtk_column_view_column_set_visible (column, is_shown (self, column_of (column)));
+    }
+}
+
+static void
+show_column_cb (GSimpleAction *action, GVariant *state, gpointer data)
+{
+  HlLedgerView *self = data;
+
+  g_simple_action_set_state (action, state);
+  show_columns (self);
+  save_columns (self);
+}
+
+static void
+add_column_actions (HlLedgerView *self)
+{
+  g_autofree char *remembered = hl_settings_get_string ("ledger-hidden", "");
+  g_auto (GStrv) hidden = g_strsplit (remembered, ",", -1);
+  g_autoptr (GMenu) section = g_menu_new ();
+
+  self->actions = g_simple_action_group_new ();
+  for (guint n = 0; n < hl_ledger_n_columns (); n++)
+    {
+      const HlLedgerColumn *column = hl_ledger_column (n);
+      g_autofree char *name = action_name (n), *full = g_strconcat ("ledger.", name, NULL);
+      gboolean shown = !g_strv_contains ((const char *const *) hidden, column->key);
+      if (!can_hide (n))
+        continue;
+      g_autoptr (GSimpleAction) action = g_simple_action_new_stateful (name, NULL, g_variant_new_boolean (shown));
+      g_signal_connect (action, "change-state", G_CALLBACK (show_column_cb), self);
+      g_action_map_add_action (G_ACTION_MAP (self->actions), G_ACTION (action));
+      g_menu_append (section, _(column->name), full);
+    }
+  self->column_menu = g_menu_new ();
+  g_menu_append_section (self->column_menu, _("Columns"), G_MENU_MODEL (section));
+  gtk_widget_insert_action_group (GTK_WIDGET (self), "ledger", G_ACTION_GROUP (self->actions));
 }
 
 /* The number of the stream, its figures, then the words: figures are what a ledger is read for. */
@@ -242,11 +328,20 @@ rows_selected_cb (HlLedgerView *self)
 
 /* --- copying --- */
 
+/* The columns that are shown; @line NULL: their headings. */
 static void
-append_cells (GString *text, HlLedgerLine *line)
+append_cells (HlLedgerView *self, GString *text, HlLedgerLine *line)
 {
+  gboolean is_first = TRUE;
+
   for (guint n = 0; n < hl_ledger_n_columns (); n++)
-    g_string_append_printf (text, "%s%s", n > 0 ? "\t" : "", hl_ledger_line_text (line, n));
+    {
+      g_autofree char *heading = line == NULL ? hl_ledger_heading (n, self->units) : NULL;
+      if (!is_shown (self, n))
+        continue;
+      g_string_append_printf (text, "%s%s", is_first ? "" : "\t", line != NULL ? hl_ledger_line_text (line, n) : heading);
+      is_first = FALSE;
+    }
   g_string_append_c (text, '\n');
 }
 
@@ -258,17 +353,12 @@ hl_ledger_view_text (HlLedgerView *self)
   gboolean all = gtk_bitset_is_empty (selected);
 
   update (self);
-  for (guint n = 0; n < hl_ledger_n_columns (); n++)
-    {
-      g_autofree char *heading = hl_ledger_heading (n, self->units);
-      g_string_append_printf (text, "%s%s", n > 0 ? "\t" : "", heading);
-    }
-  g_string_append_c (text, '\n');
+  append_cells (self, text, NULL);
   for (guint n = 0; n < g_list_model_get_n_items (G_LIST_MODEL (self->selection)); n++)
     {
       g_autoptr (HlLedgerLine) line = g_list_model_get_item (G_LIST_MODEL (self->selection), n);
       if (all || gtk_bitset_contains (selected, n))
-        append_cells (text, line);
+        append_cells (self, text, line);
     }
   return g_string_free (text, FALSE);
 }
@@ -308,6 +398,8 @@ hl_ledger_view_dispose (GObject *object)
     gtk_widget_unparent (child);
   g_clear_object (&self->selection);
   g_clear_object (&self->lines);
+  g_clear_object (&self->actions);
+  g_clear_object (&self->column_menu);
   g_clear_object (&self->session);
   G_OBJECT_CLASS (hl_ledger_view_parent_class)->dispose (object);
 }
@@ -337,7 +429,9 @@ hl_ledger_view_init (HlLedgerView *self)
   gtk_column_view_set_show_row_separators (GTK_COLUMN_VIEW (self->table), TRUE);
   hl_pane_set_accessible (self->table, _("Ledger of all streams"), _("Ctrl+C copies the selected rows"));
   g_signal_connect_swapped (self->selection, "selection-changed", G_CALLBACK (rows_selected_cb), self);
+  add_column_actions (self);
   add_columns (self);
+  show_columns (self);
   align_headings (self);
   self->scroller = gtk_scrolled_window_new ();
   gtk_scrolled_window_set_child (GTK_SCROLLED_WINDOW (self->scroller), self->table);

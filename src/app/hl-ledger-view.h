@@ -8,6 +8,6 @@ G_BEGIN_DECLS
 #define HL_TYPE_LEDGER_VIEW (hl_ledger_view_get_type ())
 G_DECLARE_FINAL_TYPE (HlLedgerView, hl_ledger_view, HL, LEDGER_VIEW, GtkWidget)
 GtkWidget *hl_ledger_view_new (HlSession *session);
-/* Selected rows (all when none is), headings first, cells parted by tabs.  g_free(). */
+/* Selected rows (all when none is) of the columns shown, headings first, cells parted by tabs.  g_free(). */
 char      *hl_ledger_view_text (HlLedgerView *self);
 G_END_DECLS

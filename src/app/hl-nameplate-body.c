@@ -3,6 +3,7 @@
 #include "app/hl-nameplate-body.h"
 #include "app/hl-pane.h"
 #include "app/hl-quantity-row.h"
+#include "app/hl-shared-row.h"
 
 typedef struct {
   GtkWidget *widget;
@@ -105,6 +106,8 @@ drop_old (GHashTable *parts, guint round)
         /* Losing the focus must not commit what was typed into a quantity that is gone. */
         if (HL_IS_QUANTITY_ROW (part->widget))
           g_free (hl_quantity_row_take_draft (HL_QUANTITY_ROW (part->widget)));
+        else if (HL_IS_SHARED_ROW (part->widget))
+          hl_shared_row_retire (HL_SHARED_ROW (part->widget));
         gtk_widget_unparent (part->widget);
         g_hash_table_iter_remove (&iter);
       }

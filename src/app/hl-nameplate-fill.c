@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-nameplate-private.h"
 #include "app/hl-pane.h"
+#include "app/hl-shared-row.h"
 #include "plant/i18n.h"
 
 #include <math.h>
@@ -230,6 +231,46 @@ hl_nameplate_fill_plant (HlNameplateBody *body, HlSession *session)
 
 /* --- several --- */
 
+static gboolean
+have_quantity (const HlPlant *plant, const char *const *ids, guint n_ids, const HlQuantityKind *kind, const char *key)
+{
+  for (guint n = 0; n < n_ids; n++)
+    {
+      HlAddress address = hl_address_component (ids[n], key);
+      const HlQuantityKind *its = hl_plant_quantity_kind (plant, &address);
+      if (its == NULL || its->dimension != kind->dimension)
+        return FALSE;
+    }
+  return TRUE;
+}
+
+/* What all the components have in common, in the order of the first one; streams that are selected with them do not matter. */
+static void
+put_shared (HlNameplateBody *body, HlSession *session, const char *const *ids, guint n_ids)
+{
+  const HlPlant *plant = hl_session_plant (session);
+  g_autofree const char **components = g_new (const char *, n_ids);
+  guint n_components = 0;
+
+  for (guint n = 0; n < n_ids; n++)
+    if (hl_plant_find_component (plant, ids[n]) != NULL)
+      components[n_components++] = ids[n];
+  const HlComponent *first = n_components > 1 ? hl_plant_find_component (plant, components[0]) : NULL;
+  for (guint n = 0; first != NULL && n < hl_component_n_quantities (first); n++)
+    {
+      HlQuantity quantity = hl_component_quantity (first, n);
+      g_autofree char *key = g_strdup_printf ("shared %s", quantity.key), *name = hl_component_quantity_name (first, n);
+      GtkWidget *row = hl_nameplate_body_find (body, key);
+      if (!have_quantity (plant, components, n_components, quantity.kind, quantity.key))
+        continue;
+      if (row == NULL)
+        row = hl_shared_row_new (session, quantity.key, name);
+      else
+        hl_shared_row_update (HL_SHARED_ROW (row));
+      hl_nameplate_body_put (body, _("For all of them"), key, row);
+    }
+}
+
 void
 hl_nameplate_fill_many (HlNameplateBody *body, HlSession *session)
 {
@@ -237,6 +278,7 @@ hl_nameplate_fill_many (HlNameplateBody *body, HlSession *session)
   guint n_selected;
   const char *const *ids = hl_session_selection (session, &n_selected);
 
+  put_shared (body, session, ids, n_selected);
   for (guint n = 0; n < n_selected; n++)
     {
       const HlComponent *component = hl_plant_find_component (plant, ids[n]);

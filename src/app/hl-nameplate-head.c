@@ -116,6 +116,21 @@ name_key_cb (GtkEventControllerKey *controller, guint key, guint code, GdkModifi
   return GDK_EVENT_STOP;
 }
 
+/* Room for about so many characters of the title at its full size, and at the next smaller one. */
+#define SHORT_TITLE 26
+#define LONG_TITLE  38
+
+static void
+fit_name (HlNameplateHead *self)
+{
+  long length = g_utf8_strlen (gtk_editable_get_text (GTK_EDITABLE (self->name)), -1);
+
+  gtk_widget_remove_css_class (self->name, "long");
+  gtk_widget_remove_css_class (self->name, "longer");
+  if (length > SHORT_TITLE)
+    gtk_widget_add_css_class (self->name, length > LONG_TITLE ? "longer" : "long");
+}
+
 static void
 show_name (HlNameplateHead *self, const char *of, const char *name, const char *placeholder)
 {
@@ -283,6 +298,7 @@ build_name (HlNameplateHead *self)
   gtk_widget_set_hexpand (self->name, TRUE);
   gtk_editable_set_width_chars (GTK_EDITABLE (self->name), 6);
   g_signal_connect (self->name, "activate", G_CALLBACK (name_activate_cb), self);
+  g_signal_connect_swapped (self->name, "changed", G_CALLBACK (fit_name), self);
   g_signal_connect (focus, "leave", G_CALLBACK (name_leave_cb), self);
   gtk_widget_add_controller (self->name, focus);
   gtk_event_controller_set_propagation_phase (keys, GTK_PHASE_CAPTURE);

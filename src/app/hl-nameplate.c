@@ -78,7 +78,13 @@ subject_now (HlNameplate *self, const HlComponent **component, const HlStream **
     return g_strdup_printf ("component %s %s", (*component)->id, (*component)->kind->id);
   if (*stream != NULL)
     return g_strdup_printf ("stream %s", (*stream)->id);
-  return g_strdup (*n == 0 ? "plant" : "many");
+  if (*n == 0)
+    return g_strdup ("plant");
+  /* Each set of components is a subject of its own: what is half typed for one set does not go to another. */
+  GString *many = g_string_new ("many");
+  for (guint i = 0; i < *n; i++)
+    g_string_append_printf (many, " %s", ids[i]);
+  return g_string_free (many, FALSE);
 }
 
 static void

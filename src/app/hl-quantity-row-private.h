@@ -4,6 +4,7 @@
 #include "app/hl-quantity-row.h"
 #include "app/hl-pane.h"
 #include "app/hl-scrub.h"
+#include "app/hl-tie-completion.h"
 G_BEGIN_DECLS
 
 struct _HlQuantityRow {
@@ -25,6 +26,7 @@ struct _HlQuantityRow {
   char          *described;      /* to assistive programs: "65.00 bar, assumed" */
   char          *shown;          /* the text last put into the entry: anything else has been typed */
   gboolean       is_focused;
+  HlTieCompletion *completion;   /* addresses offered while a tie is typed */
   HlScrub       *scrub;          /* while the value is being dragged */
   double         drag_x, drag_amount;   /* last place of the pointer; what the value has moved [units shown] */
   gboolean       is_drag_over;   /* this drag has nothing to move, or not any more */

@@ -9,25 +9,6 @@ G_DEFINE_FINAL_TYPE (HlQuantityRow, hl_quantity_row, GTK_TYPE_WIDGET)
 
 /* --- what the plant knows about the quantity --- */
 
-/* The stream whose state @address names, and the key there; NULL for every other quantity. */
-static const HlStream *
-stream_of (const HlPlant *plant, const HlAddress *address, const char **key)
-{
-  const char *dot;
-
-  if (address->owner == HL_OWNER_STREAM)
-    {
-      *key = address->key;
-      return hl_plant_find_stream (plant, address->id);
-    }
-  if (address->owner != HL_OWNER_COMPONENT || (dot = strrchr (address->key, '.')) == NULL
-      || hl_stream_quantity_lookup (dot + 1) == NULL)
-    return NULL;
-  g_autofree char *port = g_strndup (address->key, dot - address->key);
-  *key = dot + 1;
-  return hl_plant_stream_at (plant, address->id, port);
-}
-
 HlAddress
 hl_quantity_row_carrier (HlQuantityRow *self)
 {
@@ -37,7 +18,7 @@ hl_quantity_row_carrier (HlQuantityRow *self)
 
   if (hl_plant_value (plant, &self->address) != NULL)
     return self->address;
-  const HlStream *stream = stream_of (plant, &self->address, &key);
+  const HlStream *stream = hl_state_stream (plant, &self->address, &key);
   if (stream != NULL && hl_plant_state_value (plant, stream, key, &where) != NULL)
     return where;
   return self->address;
@@ -231,6 +212,18 @@ entry_activate_cb (GtkEntry *entry, HlQuantityRow *self)
     confirm_assumed (self);
 }
 
+/* Only what is being typed here is completed: a tie that is merely shown needs no list. */
+static void
+offer_addresses (HlQuantityRow *self)
+{
+  if (self->completion == NULL)
+    return;
+  if (self->is_focused && hl_quantity_row_is_typing (self))
+    hl_tie_completion_update (self->completion);
+  else
+    hl_tie_completion_close (self->completion);
+}
+
 static void
 entry_changed_cb (GtkEditable *entry, HlQuantityRow *self)
 {
@@ -239,6 +232,7 @@ entry_changed_cb (GtkEditable *entry, HlQuantityRow *self)
     gtk_widget_add_css_class (self->entry, "typing");
   else
     gtk_widget_remove_css_class (self->entry, "typing");
+  offer_addresses (self);
 }
 
 static gboolean
@@ -266,6 +260,8 @@ static void
 focus_leave_cb (GtkEventControllerFocus *controller, HlQuantityRow *self)
 {
   self->is_focused = FALSE;
+  if (self->completion != NULL)
+    hl_tie_completion_close (self->completion);
   gtk_widget_remove_css_class (GTK_WIDGET (self), "active");
   gtk_editable_select_region (GTK_EDITABLE (self->entry), 0, 0);
   if (hl_quantity_row_is_typing (self))
@@ -278,6 +274,8 @@ focus_leave_cb (GtkEventControllerFocus *controller, HlQuantityRow *self)
 static gboolean
 key_pressed_cb (GtkEventControllerKey *controller, guint key, guint code, GdkModifierType state, HlQuantityRow *self)
 {
+  if (self->completion != NULL && hl_tie_completion_key (self->completion, key))
+    return GDK_EVENT_STOP;
   switch (key)
     {
     case GDK_KEY_Escape:
@@ -354,6 +352,7 @@ build_entry (HlQuantityRow *self)
   gtk_widget_set_valign (self->entry, GTK_ALIGN_CENTER);
   g_signal_connect (self->entry, "activate", G_CALLBACK (entry_activate_cb), self);
   g_signal_connect (self->entry, "changed", G_CALLBACK (entry_changed_cb), self);
+  g_signal_connect_swapped (self->entry, "notify::cursor-position", G_CALLBACK (offer_addresses), self);
   g_signal_connect (focus, "enter", G_CALLBACK (focus_enter_cb), self);
   g_signal_connect (focus, "leave", G_CALLBACK (focus_leave_cb), self);
   gtk_widget_add_controller (self->entry, focus);
@@ -400,6 +399,7 @@ build (HlQuantityRow *self)
   g_signal_connect (click, "pressed", G_CALLBACK (line_pressed_cb), self);
   gtk_widget_add_controller (self->line, GTK_EVENT_CONTROLLER (click));
   hl_quantity_row_add_scrub (self);
+  self->completion = hl_tie_completion_new (GTK_WIDGET (self), self->entry, self->session, &self->address);
 
   self->note = hl_pane_label ("", "note");
   gtk_label_set_wrap (GTK_LABEL (self->note), TRUE);
@@ -439,6 +439,7 @@ hl_quantity_row_dispose (GObject *object)
     hl_scrub_cancel_later (g_steal_pointer (&self->scrub));
   while ((child = gtk_widget_get_first_child (GTK_WIDGET (self))) != NULL)
     gtk_widget_unparent (child);
+  g_clear_object (&self->completion);
   g_clear_object (&self->session);
   g_clear_object (&self->actions);
   g_clear_object (&self->origin_action);

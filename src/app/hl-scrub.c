@@ -4,6 +4,7 @@
 #include "plant/i18n.h"
 
 #include <math.h>
+#include <string.h>
 
 struct _HlScrub {
   HlSession *session;
@@ -73,6 +74,24 @@ hl_scrub_moved (const HlPlant *plant, const HlQuantityKind *kind, double si, dou
 }
 
 /* --- values --- */
+
+const HlStream *
+hl_state_stream (const HlPlant *plant, const HlAddress *address, const char **key)
+{
+  const char *dot;
+
+  if (address->owner == HL_OWNER_STREAM)
+    {
+      *key = address->key;
+      return hl_plant_find_stream (plant, address->id);
+    }
+  if (address->owner != HL_OWNER_COMPONENT || (dot = strrchr (address->key, '.')) == NULL
+      || hl_stream_quantity_lookup (dot + 1) == NULL)
+    return NULL;
+  g_autofree char *port = g_strndup (address->key, dot - address->key);
+  *key = dot + 1;
+  return hl_plant_stream_at (plant, address->id, port);
+}
 
 const HlValue *
 hl_scrub_value_at (const HlPlant *plant, const HlAddress *address, HlAddress *where)

@@ -9,6 +9,8 @@ double   hl_scrub_step (const HlQuantityKind *kind, double si, HlUnitSet units, 
 /* The value @amount [shown units] further, rounded to a multiple of @step; @si itself where that changes nothing. */
 double   hl_scrub_moved (const HlPlant *plant, const HlQuantityKind *kind, double si, double amount, double step);
 
+/* The stream whose state @address names, and the key there; NULL for every other quantity. */
+const HlStream *hl_state_stream (const HlPlant *plant, const HlAddress *address, const char **key);
 /* The value at @address or at another name of the same state, where it is given or assumed: only those can be moved. */
 const HlValue *hl_scrub_value_at (const HlPlant *plant, const HlAddress *address, HlAddress *where);
 

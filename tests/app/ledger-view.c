@@ -129,6 +129,27 @@ test_rows_follow_the_streams (Fixture *f, gconstpointer data)
   g_assert_cmpuint (g_list_model_get_n_items (G_LIST_MODEL (model_of (f))), ==, 4);
 }
 
+static void
+test_columns_are_chosen_and_remembered (Fixture *f, gconstpointer data)
+{
+  g_assert_true (gtk_column_view_column_get_visible (column_titled (f, "Enthalpy")));
+  g_assert_nonnull (gtk_column_view_column_get_header_menu (column_titled (f, "Enthalpy")));
+  g_assert_true (gtk_widget_activate_action (f->table, "ledger.show-h", NULL));
+  g_assert_false (gtk_column_view_column_get_visible (column_titled (f, "Enthalpy")));
+  g_autofree char *text = hl_ledger_view_text (HL_LEDGER_VIEW (f->ledger));
+  g_assert_null (strstr (text, "Enthalpy"));
+  g_assert_nonnull (strstr (text, "Pressure"));
+
+  /* Another ledger, as in the next run. */
+  g_autoptr (GtkWidget) other = g_object_ref_sink (hl_ledger_view_new (f->session));
+  g_autofree char *again = hl_ledger_view_text (HL_LEDGER_VIEW (other));
+  g_assert_cmpstr (again, ==, text);
+  g_assert_true (gtk_widget_activate_action (f->table, "ledger.show-h", NULL));
+  g_assert_true (gtk_column_view_column_get_visible (column_titled (f, "Enthalpy")));
+  g_autofree char *whole = hl_ledger_view_text (HL_LEDGER_VIEW (f->ledger));
+  g_assert_nonnull (strstr (whole, "Enthalpy"));
+}
+
 int
 main (int argc, char **argv)
 {
@@ -141,6 +162,7 @@ main (int argc, char **argv)
   ADD ("text has headings and the selected rows", test_text_has_headings_and_the_selected_rows);
   ADD ("cells follow edits and units", test_cells_follow_edits_and_units);
   ADD ("rows follow the streams", test_rows_follow_the_streams);
+  ADD ("columns are chosen and remembered", test_columns_are_chosen_and_remembered);
 #undef ADD
   return g_test_run ();
 }

@@ -2,6 +2,8 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-nameplate.h"
 #include "app/hl-quantity-row.h"
+#include "app/hl-shared-row.h"
+#include "app/hl-tie-completion.h"
 #include "panes.h"
 
 typedef struct { HlSession *session; GtkWidget *window, *nameplate; } Fixture;
@@ -442,6 +444,167 @@ test_escape_and_undo_end_a_drag (Fixture *f, gconstpointer data)
   g_assert_true (hl_session_plant (f->session) == hl_session_base (f->session));
 }
 
+/* --- several at once --- */
+
+static gboolean
+is_shared_named (GtkWidget *widget, gconstpointer data)
+{
+  return HL_IS_SHARED_ROW (widget) && find_widget (widget, is_label_with, data) != NULL;
+}
+
+static GtkWidget *
+shared_entry (Fixture *f, const char *name)
+{
+  GtkWidget *row = find_widget (f->nameplate, is_shared_named, name);
+
+  g_assert_nonnull (row);
+  return find_type (row, GTK_TYPE_ENTRY);
+}
+
+static void
+select_turbine_and_pump (Fixture *f)
+{
+  const char *ids[] = { g_intern_static_string ("T1"), g_intern_static_string ("P1"), g_intern_static_string ("2") };
+
+  hl_session_select_many (f->session, ids, G_N_ELEMENTS (ids));
+  gtk_test_widget_wait_for_draw (f->window);
+  settle_down ();
+}
+
+static void
+test_common_quantities_edit_together (Fixture *f, gconstpointer data)
+{
+  select_turbine_and_pump (f);
+  GtkWidget *entry = shared_entry (f, "Isentropic efficiency");
+  g_assert_cmpstr (gtk_editable_get_text (GTK_EDITABLE (entry)), ==, "");             /* 0.83 and 0.75 */
+  g_assert_cmpstr (gtk_entry_get_placeholder_text (GTK_ENTRY (entry)), ==, "various");
+  g_assert_false (shows_text (f->nameplate, "Exhaust pressure"));                     /* a pump has none */
+  gtk_editable_set_text (GTK_EDITABLE (entry), "80 %");
+  g_signal_emit_by_name (entry, "activate");
+  settle_down ();
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.isentropic_efficiency")->value, 0.8, 1e-12);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "P1.isentropic_efficiency")->value, 0.8, 1e-12);
+  g_assert_cmpint (value_of (f, "P1.isentropic_efficiency")->origin, ==, HL_ORIGIN_GIVEN);
+  g_assert_cmpstr (gtk_editable_get_text (GTK_EDITABLE (entry)), ==, "0.800");
+  hl_session_undo (f->session);
+  settle_down ();
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.isentropic_efficiency")->value, 0.83, 1e-12);
+  g_assert_cmpfloat_with_epsilon (value_of (f, "P1.isentropic_efficiency")->value, 0.75, 1e-12);
+  g_assert_false (hl_session_can_undo (f->session));
+}
+
+static void
+test_bad_common_text_changes_none (Fixture *f, gconstpointer data)
+{
+  select_turbine_and_pump (f);
+  GtkWidget *entry = shared_entry (f, "Isentropic efficiency");
+  gtk_editable_set_text (GTK_EDITABLE (entry), "1.7");
+  g_signal_emit_by_name (entry, "activate");
+  g_assert_true (shows_text (f->nameplate, "1.7"));                                   /* with what is wrong */
+  g_assert_cmpfloat_with_epsilon (value_of (f, "T1.isentropic_efficiency")->value, 0.83, 1e-12);
+  g_assert_false (hl_session_can_undo (f->session));
+  /* Another selection drops it. */
+  hl_session_select (f->session, "P1", FALSE);
+  settle_down ();
+  g_assert_false (hl_session_can_undo (f->session));
+}
+
+/* --- completion of ties --- */
+
+static void
+test_word_of_a_tie (void)
+{
+  static const struct { const char *text; int cursor; gboolean is_word; int start, end; } rows[] = {
+    { "=", 1, TRUE, 1, 1 }, { "=B1", 3, TRUE, 1, 3 }, { "=0.23*B1.st", 11, TRUE, 6, 11 }, { "=0.23*", 6, TRUE, 6, 6 },
+    { "=0.23", 5, FALSE, 0, 0 }, { "=T1.inlet.p - ", 14, FALSE, 0, 0 }, { "80 bar", 6, FALSE, 0, 0 }, { "=B1.steam.p", 3, TRUE, 1, 11 },
+    { "", 0, FALSE, 0, 0 }, { "=B1", 0, FALSE, 0, 0 },
+  };
+  for (guint n = 0; n < G_N_ELEMENTS (rows); n++)
+    {
+      int start = 0, end = 0;
+      g_test_message ("%s at %d", rows[n].text, rows[n].cursor);
+      g_assert_cmpint (hl_tie_word (rows[n].text, rows[n].cursor, &start, &end), ==, rows[n].is_word);
+      if (!rows[n].is_word)
+        continue;
+      g_assert_cmpint (start, ==, rows[n].start);
+      g_assert_cmpint (end, ==, rows[n].end);
+    }
+}
+
+static void
+press_in_entry (Fixture *f, const char *address, guint key)
+{
+  gboolean handled = FALSE;
+
+  g_signal_emit_by_name (controller_of (entry_of (f, address), GTK_TYPE_EVENT_CONTROLLER_KEY), "key-pressed", key, 0u, 0, &handled);
+  g_assert_true (handled);
+}
+
+static void
+type_draft (Fixture *f, const char *address, const char *text)
+{
+  gtk_widget_grab_focus (entry_of (f, address));
+  settle_down ();
+  gtk_editable_set_text (GTK_EDITABLE (entry_of (f, address)), text);
+  gtk_editable_set_position (GTK_EDITABLE (entry_of (f, address)), -1);
+  settle_down ();
+}
+
+static GtkWidget *
+offer_of (Fixture *f, const char *address)
+{
+  GtkWidget *list = find_type (find_row (f, address), GTK_TYPE_LIST_BOX);
+  return gtk_widget_get_ancestor (list, GTK_TYPE_POPOVER);
+}
+
+static void
+test_matches_have_the_dimension_and_their_value (Fixture *f, gconstpointer data)
+{
+  HlAddress own = hl_address_component ("T1", g_intern_static_string ("exhaust.p"));
+  g_autoptr (GPtrArray) all = hl_tie_matches (hl_session_solution (f->session), &own, "");
+  g_autoptr (GPtrArray) boiler = hl_tie_matches (hl_session_solution (f->session), &own, "b1.st");
+  gboolean has_inlet = FALSE;
+
+  for (guint n = 0; n < all->len; n++)
+    {
+      const HlTieMatch *match = g_ptr_array_index (all, n);
+      g_assert_cmpint (hl_plant_quantity_kind (hl_session_plant (f->session), &match->address)->dimension, ==, HL_DIMENSION_PRESSURE);
+      g_assert_false (hl_address_equal (&match->address, &own));
+      g_assert_cmpstr (match->text, !=, "C1.steam.p");                       /* the same state by another name */
+      has_inlet |= g_str_equal (match->text, "T1.inlet.p") && g_str_has_prefix (match->value, "65");
+    }
+  g_assert_true (has_inlet);
+  g_assert_cmpuint (boiler->len, >, 0);
+  g_assert_cmpstr (((HlTieMatch *) g_ptr_array_index (boiler, 0))->text, ==, "B1.steam.p");
+  g_assert_cmpuint (boiler->len, <, all->len);
+}
+
+static void
+test_completion_by_keys (Fixture *f, gconstpointer data)
+{
+  type_draft (f, "T1.exhaust.p", "=0.001*B1.st");
+  g_assert_true (gtk_widget_get_visible (offer_of (f, "T1.exhaust.p")));
+  press_in_entry (f, "T1.exhaust.p", GDK_KEY_Down);
+  press_in_entry (f, "T1.exhaust.p", GDK_KEY_Return);
+  g_assert_cmpstr (text_of (f, "T1.exhaust.p"), ==, "=0.001*B1.steam.p");
+  settle_down ();
+  g_assert_false (gtk_widget_get_visible (offer_of (f, "T1.exhaust.p")));
+  g_assert_cmpint (value_of (f, "T1.exhaust.p")->origin, ==, HL_ORIGIN_GIVEN);                /* only completed yet */
+  g_signal_emit_by_name (entry_of (f, "T1.exhaust.p"), "activate");
+  settle_down ();
+  g_assert_cmpint (value_of (f, "T1.exhaust.p")->origin, ==, HL_ORIGIN_TIED);
+
+  /* Tab takes the first; Escape leaves the text and closes, a second one restores it. */
+  type_draft (f, "T1.exhaust.p", "=0.002*B1.st");
+  press_in_entry (f, "T1.exhaust.p", GDK_KEY_Tab);
+  g_assert_cmpstr (text_of (f, "T1.exhaust.p"), ==, "=0.002*B1.steam.p");
+  type_draft (f, "T1.exhaust.p", "=T1");
+  press_in_entry (f, "T1.exhaust.p", GDK_KEY_Escape);
+  g_assert_cmpstr (text_of (f, "T1.exhaust.p"), ==, "=T1");
+  press_in_entry (f, "T1.exhaust.p", GDK_KEY_Escape);
+  g_assert_true (g_str_has_prefix (text_of (f, "T1.exhaust.p"), "=0.001"));
+}
+
 int
 main (int argc, char **argv)
 {
@@ -470,6 +633,11 @@ main (int argc, char **argv)
   ADD ("found and unread values do not step", "T1", test_found_and_unread_values_do_not_step);
   ADD ("drag on the name moves the value", "T1", test_drag_on_the_name_moves_the_value);
   ADD ("Escape and undo end a drag", "T1", test_escape_and_undo_end_a_drag);
+  ADD ("common quantities edit together", "T1", test_common_quantities_edit_together);
+  ADD ("bad common text changes none", "T1", test_bad_common_text_changes_none);
+  ADD ("matches have the dimension and their value", "T1", test_matches_have_the_dimension_and_their_value);
+  ADD ("completion by keys", "T1", test_completion_by_keys);
 #undef ADD
+  g_test_add_func ("/app/nameplate/word of a tie", test_word_of_a_tie);
   return g_test_run ();
 }
