@@ -4,6 +4,7 @@
 #include "engine/components/components.h"
 #include "plant/i18n.h"
 #include <math.h>
+#include <string.h>
 
 const HlNodeResult *
 hl_check_port (const HlChecker *checker, const char *port)
@@ -128,6 +129,33 @@ check_anything_flows (HlChecker *checker)
   hl_finding_mend (finding, HL_MEND_EDIT, net, NAN, g_strdup (_("Enter net power of the plant")));
 }
 
+/* No component but a machine raises a pressure: a loss that had to be found may not come out negative. */
+static void
+check_losses (HlChecker *checker)
+{
+  const HlComponent *component = checker->component;
+  for (guint k = 0; k < checker->findings->list->len; k++)
+    {
+      const HlFinding *finding = &g_array_index (checker->findings->list, HlFinding, k);
+      if (finding->at.id == component->id && g_str_equal (finding->code, "pressure-rises"))
+        return;
+    }
+  for (guint k = 0; k < hl_component_n_quantities (component); k++)
+    {
+      HlQuantity quantity = hl_component_quantity (component, k);
+      double loss;
+      if (strstr (quantity.key, "pressure_loss") == NULL || !hl_check_own (checker, quantity.key, &loss) || loss >= -1e-9)
+        continue;
+      HlAddress address = hl_address_component (component->id, quantity.key);
+      g_autofree char *name = hl_plant_describe (checker->model->plant, &address);
+      g_autofree char *text = hl_quantity_format (quantity.kind, loss, hl_plant_units (checker->model->plant));
+      HlFinding *finding = hl_check_add (checker, HL_GRADE_ERROR, "pressure-rises", quantity.key,
+        g_strdup_printf (_("Pressure would rise through %s: %s comes out as %s. Lower the pressure behind it, or raise the one before it."),
+                         component->id, name, text));
+      hl_check_offer (checker, finding, quantity.key);
+    }
+}
+
 /* A value outside the range of its kind's table is worth a hint. */
 static void
 check_credible (HlChecker *checker)
@@ -161,6 +189,7 @@ hl_check_all (HlChecker *checker)
       const HlComponentModel *model = hl_component_model (checker->component->kind);
       if (model != NULL && model->check != NULL)
         model->check (checker);
+      check_losses (checker);
       check_credible (checker);
     }
   checker->component = NULL;

@@ -207,6 +207,15 @@ test_exhaust_above_inlet (void)
 }
 
 static void
+test_pressure_rising_in_a_boiler (void)
+{
+  g_autoptr (HlSolution) s = solve_taken (test_plant_set (test_plant_let_go (test_plant (test_simple_loop), "Q1.pressure_loss"), "P1.outlet.p", 60e5));
+  assert_finding (s, "pressure-rises", HL_GRADE_ERROR,
+    "Pressure would rise through Q1: pressure loss of Q1 comes out as -8.33 %. Lower the pressure behind it, or raise the one before it.");
+  g_assert_false (hl_solution_is_solved (s));
+}
+
+static void
 test_heater_outlet_hotter_than_its_steam (void)
 {
   g_autoptr (HlSolution) s = solve_taken (test_plant_set (test_plant_let_go (test_plant (test_reheat_plant), "H1.terminal_difference"), "H1.feed_outlet.T", 673.15));
@@ -438,6 +447,7 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/finding/circuit-that-loses-water", test_circuit_that_loses_water);
   g_test_add_func ("/engine/finding/nothing-holds-the-pressure", test_nothing_holds_the_pressure);
   g_test_add_func ("/engine/finding/exhaust-above-inlet", test_exhaust_above_inlet);
+  g_test_add_func ("/engine/finding/pressure-rising-in-a-boiler", test_pressure_rising_in_a_boiler);
   g_test_add_func ("/engine/finding/heater-outlet-hotter-than-its-steam", test_heater_outlet_hotter_than_its_steam);
   g_test_add_func ("/engine/finding/beyond-the-formulation", test_beyond_the_formulation);
   g_test_add_func ("/engine/finding/impossible-neighbours", test_impossible_neighbours);
