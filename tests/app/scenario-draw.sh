@@ -2,56 +2,9 @@
 # By mouse and keys, as a user: draw a loop from the shelf, type values, undo and redo, save by the dialog, read the file.
 # SPDX-License-Identifier: GPL-3.0-or-later
 # Usage: scenario-draw.sh PROGRAM.  Needs an X display (Xvfb does), xdotool and python3.
-program=$1
-if [ -z "$DISPLAY" ] || ! command -v xdotool >/dev/null || ! command -v python3 >/dev/null; then
-  echo "1..0 # SKIP needs a display, xdotool and python3"
-  exit 0
-fi
-
-folder=$(mktemp -d)
-trace=$folder/trace
-export HEATLOOM_TRACE=1 HEATLOOM_NON_UNIQUE=1 GTK_A11Y=none HOME=$folder XDG_CONFIG_HOME=$folder/config XDG_DATA_HOME=$folder/data
+. "$(dirname "$0")/scenario.sh"
 export HEATLOOM_DATADIR=$folder      # no demo plant: an empty sheet
-count=0
 
-finish () {
-  kill "$pid" 2>/dev/null
-  wait "$pid" 2>/dev/null
-  rm -rf "$folder"
-}
-trap finish EXIT
-
-ok () {
-  count=$((count + 1))
-  echo "ok $count - $1"
-}
-fail () {
-  echo "not ok $((count + 1)) - $1"
-  grep -v '^frame' "$trace" | tail -25 | sed 's/^/# /'
-  sed 's/^/# stderr: /' "$folder/stderr"
-  echo "1..$((count + 1))"
-  exit 1
-}
-
-# wait_line PATTERN COUNT: until so many lines of the trace match; 10 s.
-wait_line () {
-  tries=0
-  while [ "$(grep -c "$1" "$trace")" -lt "$2" ]; do
-    tries=$((tries + 1))
-    [ $tries -gt 200 ] && return 1
-    sleep 0.05
-  done
-}
-place () { grep "^$1 $2 " "$trace" | tail -1 | cut -d' ' -f3,4; }
-
-# drag X Y TO_X TO_Y: in several steps, or the threshold of a drag is not crossed.
-drag () {
-  xdotool mousemove "$1" "$2" sleep 0.1 mousedown 1 sleep 0.1
-  for n in 1 2 3 4 5 6 7 8 9 10 11 12; do
-    xdotool mousemove $(($1 + ($3 - $1) * n / 12)) $(($2 + ($4 - $2) * n / 12)) sleep 0.015
-  done
-  xdotool sleep 0.15 mouseup 1
-}
 # take KIND TO_X TO_Y: drags from the shelf; lets go once the canvas has answered.
 take () {
   set -- $(place shelf "$1") "$2" "$3" "$1"
@@ -62,12 +15,6 @@ take () {
   done
   wait_line "^over $5 " $((seen + 1))
   xdotool sleep 0.3 mouseup 1
-}
-# step COUNT NAME: waits for the step and for the places after it.
-step () {
-  wait_line '^step ' "$1" || fail "$2"
-  sleep 0.3
-  ok "$2"
 }
 steps () { grep -c '^step ' "$trace"; }
 
