@@ -136,29 +136,15 @@ test_both_ways (void)
 }
 
 static void
-expect (const char *text, const char *code, HlGrade grade, const char *part)
-{
-  g_autoptr (HlPlant) plant = test_plant (text);
-  g_autoptr (HlSolution) s = hl_solve (plant, NULL);
-  const HlFinding *finding = test_finding (s, code);
-  if (finding == NULL)
-    test_print (s);
-  g_assert_nonnull (finding);
-  g_assert_cmpint (finding->grade, ==, grade);
-  if (strstr (finding->text, part) == NULL)
-    g_error ("\"%s\" lacks \"%s\"", finding->text, part);
-}
-
-static void
 test_findings (void)
 {
-  expect (HEAT_PLANT ("terminal_difference=-3", "initial_difference=30"), "temperature-cross", HL_GRADE_ERROR,
+  test_expect_finding (HEAT_PLANT ("terminal_difference=-3", "initial_difference=30"), "temperature-cross", HL_GRADE_ERROR,
           "District water of DH1 would leave at 95.0 °C, but the steam condenses at 92.0 °C.");
-  expect (HEAT_PLANT ("terminal_difference=1.5", "initial_difference=30"), "small-difference", HL_GRADE_CAUTION, "Only 1.5 K remain between steam and district water of DH1");
-  expect (HEAT_PLANT ("terminal_difference=5", "initial_difference=-4"), "temperature-cross", HL_GRADE_ERROR, "Steam of AC1 would condense 4.0 K below the temperature of the air");
-  expect (HEAT_PLANT ("terminal_difference=5", "initial_difference=1.5"), "small-difference", HL_GRADE_CAUTION, "Only 1.5 K remain between steam and air of AC1; 15 to 35 K are usual.");
-  expect (TOWER_PLANT ("air:1 wet_bulb_T=291.15 approach=2"), "small-approach", HL_GRADE_CAUTION, "The approach of CT1 is 2.0 K; about 2.5 K is the least");
-  expect (TOWER_PLANT ("air:1 wet_bulb_T=291.15 approach=-1"), "below-wet-bulb", HL_GRADE_ERROR, "Water would leave CT1 at the wet bulb temperature or below it");
+  test_expect_finding (HEAT_PLANT ("terminal_difference=1.5", "initial_difference=30"), "small-difference", HL_GRADE_CAUTION, "Only 1.5 K remain between steam and district water of DH1");
+  test_expect_finding (HEAT_PLANT ("terminal_difference=5", "initial_difference=-4"), "temperature-cross", HL_GRADE_ERROR, "Steam of AC1 would condense 4.0 K below the temperature of the air");
+  test_expect_finding (HEAT_PLANT ("terminal_difference=5", "initial_difference=1.5"), "small-difference", HL_GRADE_CAUTION, "Only 1.5 K remain between steam and air of AC1; 15 to 35 K are usual.");
+  test_expect_finding (TOWER_PLANT ("air:1 wet_bulb_T=291.15 approach=2"), "small-approach", HL_GRADE_CAUTION, "The approach of CT1 is 2.0 K; about 2.5 K is the least");
+  test_expect_finding (TOWER_PLANT ("air:1 wet_bulb_T=291.15 approach=-1"), "below-wet-bulb", HL_GRADE_ERROR, "Water would leave CT1 at the wet bulb temperature or below it");
 }
 
 int

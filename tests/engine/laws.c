@@ -156,3 +156,17 @@ test_give_each (const char *text)
     }
   return n_given;
 }
+
+void
+test_expect_finding (const char *text, const char *code, HlGrade grade, const char *part)
+{
+  g_autoptr (HlPlant) plant = test_plant (text);
+  g_autoptr (HlSolution) s = hl_solve (plant, NULL);
+  const HlFinding *finding = test_finding (s, code);
+  if (finding == NULL)
+    test_print (s);
+  g_assert_nonnull (finding);
+  g_assert_cmpint (finding->grade, ==, grade);
+  if (strstr (finding->text, part) == NULL)
+    g_error ("\"%s\" lacks \"%s\"", finding->text, part);
+}

@@ -13,4 +13,6 @@ void  test_check_derivatives (const char *text);
 void  test_assert_balanced   (const HlSolution *solution);
 /* Gives every found quantity in turn, so that an assumed one yields, and wants the same solution back.  How many were given. */
 guint test_give_each         (const char *text);
+/* The plant solved must have a finding of that code and grade whose sentence holds @part. */
+void  test_expect_finding    (const char *text, const char *code, HlGrade grade, const char *part);
 G_END_DECLS
