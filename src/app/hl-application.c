@@ -19,6 +19,7 @@ G_DEFINE_FINAL_TYPE (HlApplication, hl_application, GTK_TYPE_APPLICATION)
 static const struct { const char *action; const char *keys[4]; } shortcuts[] = {
   { "win.open", { "<Control>o" } },
   { "win.new", { "<Control>n" } },
+  { "app.new-window", { "<Control><Shift>n" } },
   { "win.save", { "<Control>s" } },
   { "win.save-as", { "<Control><Shift>s" } },
   { "win.export", { "<Control>e" } },
@@ -61,15 +62,34 @@ hl_application_activate (GApplication *application)
     gtk_window_present (present);
 }
 
+/* The window that shows a file already. */
+static GtkWindow *
+window_of (GtkApplication *application, const char *path)
+{
+  for (GList *l = gtk_application_get_windows (application); l != NULL && path != NULL; l = l->next)
+    if (HL_IS_WINDOW (l->data) && g_strcmp0 (hl_session_path (hl_window_session (l->data)), path) == 0)
+      return l->data;
+  return NULL;
+}
+
 static void
 hl_application_open (GApplication *application, GFile **files, int n_files, const char *hint)
 {
   for (int n = 0; n < n_files; n++)
     {
       g_autofree char *path = g_file_get_path (files[n]);
-      g_autoptr (HlSession) session = hl_session_new ();
-      gboolean is_open = path != NULL && hl_session_open (session, path, NULL);
-      HlWindow *window = hl_window_new (GTK_APPLICATION (application), session);
+      GtkWindow *present = window_of (GTK_APPLICATION (application), path);
+      g_autoptr (HlSession) session = NULL;
+      gboolean is_open;
+      HlWindow *window;
+      if (present != NULL)
+        {
+          gtk_window_present (present);
+          continue;
+        }
+      session = hl_session_new ();
+      is_open = path != NULL && hl_session_open (session, path, NULL);
+      window = hl_window_new (GTK_APPLICATION (application), session);
       gtk_window_present (GTK_WINDOW (window));
       if (path != NULL && !is_open)
         hl_window_open_path (window, path);     /* once more, to say in the window what is wrong */
@@ -87,6 +107,14 @@ hl_application_handle_local_options (GApplication *application, GVariantDict *op
       return 0;
     }
   return -1;
+}
+
+static void
+new_window_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  g_autoptr (HlSession) session = hl_session_new ();
+  hl_session_reset (session, hl_window_new_plant (), NULL);
+  gtk_window_present (GTK_WINDOW (hl_window_new (GTK_APPLICATION (data), session)));
 }
 
 /* Closes window by window, so that each can ask about unsaved work. */
@@ -109,7 +137,7 @@ add_shortcuts (GtkApplication *application)
 static void
 hl_application_startup (GApplication *application)
 {
-  static const GActionEntry entries[] = { { "quit", quit_cb } };
+  static const GActionEntry entries[] = { { "quit", quit_cb }, { "new-window", new_window_cb } };
   g_autofree char *look = NULL;
 
   g_set_prgname ("local.heatloom.Heatloom");    /* the desktop file's name: shells match windows by it */

@@ -463,6 +463,24 @@ hl_session_open (HlSession *self, const char *path, GError **error)
 }
 
 gboolean
+hl_session_revert (HlSession *self, GError **error)
+{
+  HlPlant *plant;
+  if (self->path == NULL)
+    {
+      g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_FILE, _("This plant has no file yet; choose one with Save as"));
+      return FALSE;
+    }
+  plant = hl_plant_load (self->path, error);
+  if (plant == NULL)
+    return FALSE;
+  g_clear_pointer (&self->saved, hl_plant_unref);
+  self->saved = hl_plant_ref (plant);
+  hl_session_apply (self, _("Revert to the file"), plant, NULL, FALSE);
+  return TRUE;
+}
+
+gboolean
 hl_session_save (HlSession *self, const char *path, GError **error)
 {
   g_autofree char *target = g_strdup (path != NULL ? path : self->path);

@@ -52,6 +52,7 @@ void              hl_session_go_to        (HlSession *self, const HlAddress *add
 
 gboolean          hl_session_open         (HlSession *self, const char *path, GError **error);
 gboolean          hl_session_save         (HlSession *self, const char *path, GError **error);  /* NULL path: its own */
+gboolean          hl_session_revert       (HlSession *self, GError **error);    /* one undoable step: what its file holds now */
 void              hl_session_reset        (HlSession *self, HlPlant *plant, const char *path);  /* (transfer full plant) fresh history */
 const char       *hl_session_path         (HlSession *self);      /* NULL: never saved */
 gboolean          hl_session_is_dirty     (HlSession *self);

@@ -1,6 +1,7 @@
 /* What can be done in the window, as actions: gestures, menus, shortcuts and tests all come through here.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-window-private.h"
+#include "app/hl-settings.h"
 #include "app/hl-edit.h"
 #include "plant/i18n.h"
 
@@ -477,6 +478,7 @@ units_cb (GSimpleAction *action, GVariant *value, gpointer data)
   HlUnitSet units;
   if (!hl_unit_set_from_id (g_variant_get_string (value, NULL), &units) || units == hl_plant_units (plant_of (self)))
     return;
+  hl_settings_set_string ("units", hl_unit_set_id (units));     /* of the next new plant */
   hl_session_apply (self->session, _("Change units"), hl_plant_with_units (plant_of (self), units), NULL, FALSE);
 }
 
@@ -587,6 +589,7 @@ hl_window_update_actions (HlWindow *self)
   enable (self, "select-all", has_components);
   enable (self, "zoom-fit", has_components);
   enable (self, "export", has_components);
+  enable (self, "revert", hl_session_path (self->session) != NULL);
   g_simple_action_set_state (G_SIMPLE_ACTION (g_action_map_lookup_action (G_ACTION_MAP (self), "units")),
                              g_variant_new_string (hl_unit_set_id (hl_plant_units (plant))));
 }

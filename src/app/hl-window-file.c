@@ -44,6 +44,7 @@ save_to (HlWindow *self, const char *path)
   if (hl_session_save (self->session, path, &error))
     {
       g_autofree char *text = g_strdup_printf (_("Saved as %s"), hl_session_path (self->session));
+      hl_window_know_file (self);
       g_signal_emit_by_name (self->session, "message", text);
       return TRUE;
     }
@@ -113,15 +114,58 @@ pending_new (HlWindow *self, Then then, gpointer data, GDestroyNotify free_data)
 }
 
 static void
+save_and_go_on (Pending *pending)
+{
+  if (save_to (pending->window, NULL) && pending->then != NULL)
+    pending->then (pending->window, pending->data);
+  pending_free (pending);
+}
+
+static void
+overwrite_answer_cb (int button, gpointer data)
+{
+  Pending *pending = data;
+  if (button == 2)
+    save_and_go_on (pending);
+  else if (button == 1)
+    ask_where_to_save (pending);
+  else
+    pending_free (pending);
+}
+
+static void
+ask_whether_to_overwrite (Pending *pending)
+{
+  const char *const buttons[] = { _("Cancel"), _("Save as …"), _("Overwrite"), NULL };
+  g_autofree char *name = g_path_get_basename (hl_session_path (pending->window->session));
+  g_autofree char *title = g_strdup_printf (_("Overwrite “%s”?"), name);
+  hl_confirm (GTK_WINDOW (pending->window), title, _("Another program has changed the file since it was read or saved here. Its changes would be lost."),
+              buttons, overwrite_answer_cb, pending);
+}
+
+/* Saves under the file's own name where that is possible and nobody else's work is lost; else asks.  Takes @pending. */
+static void
+save_pending (Pending *pending)
+{
+  HlWindow *self = pending->window;
+  if (hl_session_path (self->session) == NULL || hl_window_is_read_only (self))
+    ask_where_to_save (pending);
+  else if (hl_window_file_state (self) == HL_FILE_CHANGED)
+    ask_whether_to_overwrite (pending);
+  else
+    save_and_go_on (pending);
+}
+
+static void
 save_answer_cb (int button, gpointer data)
 {
   Pending *pending = data;
-  if (button == 2 && hl_session_path (pending->window->session) == NULL)
+  if (button == 2)
     {
-      ask_where_to_save (pending);
+      save_pending (pending);
       return;
     }
-  if (button == 1 || (button == 2 && save_to (pending->window, NULL)))
+  if (button == 1)
     pending->then (pending->window, pending->data);
   pending_free (pending);
 }
@@ -145,6 +189,15 @@ hl_window_when_safe (HlWindow *self, Then then, gpointer data, GDestroyNotify fr
 }
 
 /* Opening */
+
+HlPlant *
+hl_window_new_plant (void)
+{
+  g_autofree char *id = hl_settings_get_string ("units", "metric");
+  g_autoptr (HlPlant) plant = hl_plant_new ();
+  HlUnitSet units;
+  return hl_unit_set_from_id (id, &units) ? hl_plant_with_units (plant, units) : hl_plant_ref (plant);
+}
 
 gboolean
 hl_window_open_path (HlWindow *self, const char *path)
@@ -190,7 +243,7 @@ open_demo_now (HlWindow *self, gpointer data)
 static void
 new_now (HlWindow *self, gpointer data)
 {
-  hl_session_reset (self->session, hl_plant_new (), NULL);
+  hl_session_reset (self->session, hl_window_new_plant (), NULL);
   hl_canvas_fit (self->canvas);
 }
 
@@ -243,11 +296,7 @@ new_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
 static void
 save_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
 {
-  HlWindow *self = HL_WINDOW (data);
-  if (hl_session_path (self->session) != NULL)
-    save_to (self, NULL);
-  else
-    ask_where_to_save (pending_new (self, NULL, NULL, NULL));
+  save_pending (pending_new (HL_WINDOW (data), NULL, NULL, NULL));
 }
 
 static void

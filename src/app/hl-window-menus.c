@@ -59,16 +59,43 @@ append_demos (GMenu *menu)
     }
 }
 
+/* Files opened lately, with their folder where two have one name. */
+static void
+append_recent (GMenu *menu)
+{
+  g_auto (GStrv) paths = hl_window_recent_paths (6);
+  for (char **path = paths; *path != NULL; path++)
+    {
+      g_autofree char *name = g_path_get_basename (*path), *folder = g_path_get_dirname (*path);
+      g_autofree char *label = NULL;
+      gboolean is_shared = FALSE;
+      for (char **other = paths; *other != NULL; other++)
+        {
+          g_autofree char *other_name = g_path_get_basename (*other);
+          is_shared |= other != path && g_str_equal (name, other_name);
+        }
+      label = is_shared ? g_strdup_printf ("%s (%s)", name, folder) : g_strdup (name);
+      append_choice (menu, label, "win.open-path", *path);
+    }
+}
+
 static GMenuModel *
 open_menu (void)
 {
   GMenu *menu = g_menu_new (), *section = append_section (menu, NULL);
   append (section, _("Open a plant …"), "win.open");
   append (section, _("New plant"), "win.new");
+  append (section, _("New window"), "app.new-window");
+  section = g_menu_new ();
+  append_recent (section);
+  if (g_menu_model_get_n_items (G_MENU_MODEL (section)) > 0)
+    g_menu_append_section (menu, _("Opened lately"), G_MENU_MODEL (section));
+  g_object_unref (section);
   append_demos (append_section (menu, _("Demo plants")));
   section = append_section (menu, NULL);
   append (section, _("Save"), "win.save");
   append (section, _("Save as …"), "win.save-as");
+  append (section, _("Revert to the file"), "win.revert");
   return G_MENU_MODEL (menu);
 }
 
@@ -119,6 +146,7 @@ static const Shortcut view_keys[] = {
 static const Shortcut general_keys[] = {
   { N_("Open"), "<Control>o" },
   { N_("New plant"), "<Control>n" },
+  { N_("New window"), "<Control><Shift>n" },
   { N_("Save"), "<Control>s" },
   { N_("Save as"), "<Control><Shift>s" },
   { N_("Hand over"), "<Control>e" },

@@ -3,6 +3,7 @@
 #pragma once
 #include "app/hl-autosave.h"
 #include "app/hl-canvas.h"
+#include "app/hl-file-watch.h"
 #include "app/hl-window.h"
 G_BEGIN_DECLS
 
@@ -11,6 +12,8 @@ struct _HlWindow {
   HlSession *session;
   HlCanvas  *canvas;
   HlAutosave *autosave;
+  HlFileWatch *watch;
+  char      *known_path;       /* whose content the watch knows */
   gboolean   may_close;        /* the question about unsaved work has been answered */
   gboolean   is_wide;          /* there is room for the glance card */
   guint      fold_source;      /* idle that shows or hides it */
@@ -26,6 +29,7 @@ struct _HlWindow {
   GtkPaned      *outer, *work;
   GtkWidget     *shelf_bin, *canvas_bin, *strip_bin, *nameplate_bin;
   GtkWidget     *empty_hint;
+  GtkBox        *notice_bin;
   GtkLabel      *zoom_label;
   GtkBox        *diagram_area;
   GtkStack      *stack;
@@ -36,6 +40,12 @@ void hl_window_add_actions    (HlWindow *self);     /* hl-window-actions.c */
 void hl_window_update_actions (HlWindow *self);     /* what is enabled, from the state */
 void hl_window_add_view_actions (HlWindow *self);   /* hl-window-view.c */
 void hl_window_add_file_actions (HlWindow *self);   /* hl-window-file.c */
+void hl_window_watch_disk     (HlWindow *self);     /* hl-window-disk.c */
+void hl_window_unwatch_disk   (HlWindow *self);
+void hl_window_know_file      (HlWindow *self);     /* what the disk has now is what the window has */
+gboolean    hl_window_is_read_only (HlWindow *self);
+HlFileState hl_window_file_state   (HlWindow *self);
+char      **hl_window_recent_paths (guint most);    /* that still exist, the latest first; g_strfreev() */
 void hl_window_fill_menus     (HlWindow *self);     /* hl-window-menus.c */
 void hl_window_place_diagram  (HlWindow *self, gboolean is_beside);
 gboolean hl_window_diagram_is_beside (HlWindow *self);

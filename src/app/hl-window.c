@@ -92,6 +92,7 @@ file_changed_cb (HlWindow *self)
 {
   update_title (self);
   update_history_tooltips (self);
+  hl_window_update_actions (self);     /* what needs a file */
 }
 
 static void
@@ -369,6 +370,7 @@ hl_window_constructed (GObject *object)
   hl_window_add_actions (self);
   hl_window_add_view_actions (self);
   hl_window_add_file_actions (self);
+  hl_window_watch_disk (self);
   hl_window_fill_menus (self);
   g_signal_connect_object (self->session, "changed", G_CALLBACK (changed_cb), self, G_CONNECT_SWAPPED);
   g_signal_connect_object (self->session, "selection-changed", G_CALLBACK (selection_changed_cb), self, G_CONNECT_SWAPPED);
@@ -397,6 +399,7 @@ hl_window_dispose (GObject *object)
   g_clear_handle_id (&self->divide_source, g_source_remove);
   g_clear_handle_id (&self->trace_source, g_source_remove);
   g_clear_pointer (&self->autosave, hl_autosave_free);
+  hl_window_unwatch_disk (self);
   G_OBJECT_CLASS (hl_window_parent_class)->dispose (object);
 }
 
@@ -425,7 +428,7 @@ hl_window_class_init (HlWindowClass *class)
 #define CHILD(field) { #field, G_STRUCT_OFFSET (HlWindow, field) }
     CHILD (open_button), CHILD (menu_button), CHILD (undo_button), CHILD (redo_button), CHILD (export_button),
     CHILD (title_label), CHILD (subtitle_label), CHILD (dirty_dot), CHILD (outer), CHILD (work), CHILD (shelf_bin),
-    CHILD (canvas_bin), CHILD (strip_bin), CHILD (nameplate_bin), CHILD (empty_hint), CHILD (zoom_label),
+    CHILD (canvas_bin), CHILD (strip_bin), CHILD (nameplate_bin), CHILD (empty_hint), CHILD (notice_bin), CHILD (zoom_label),
     CHILD (diagram_area), CHILD (stack), CHILD (glance_bin),
 #undef CHILD
   };

@@ -12,6 +12,8 @@ HlSession *hl_window_session   (HlWindow *self);                 /* (transfer no
 gboolean   hl_window_open_path (HlWindow *self, const char *path);
 /* A demo plant: opened as a new plant without a file, so that saving asks for a place. */
 gboolean   hl_window_open_demo (HlWindow *self, const char *path);
+/* An empty plant in the unit set that was chosen last. */
+HlPlant   *hl_window_new_plant (void);
 /* Asks whether to take up work on this plant that a crash has left behind, if there is any. */
 void       hl_window_offer_recovery (HlWindow *self);
 G_END_DECLS

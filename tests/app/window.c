@@ -1,104 +1,9 @@
 /* The window by its actions and by gestures in the same process: a loop is drawn from nothing, valued, saved and read back.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "app/hl-application.h"
-#include "app/hl-canvas.h"
+#include "windows.h"
 #include "app/hl-findings.h"
 #include "app/hl-ledger-view.h"
-#include "app/hl-window.h"
 #include <glib/gstdio.h>
-
-static HlApplication *application;
-
-static void
-act (HlWindow *window, const char *action, const char *format, ...)
-{
-  GVariant *parameter = NULL;
-  va_list args;
-  if (format != NULL)
-    {
-      va_start (args, format);
-      parameter = g_variant_new_va (format, NULL, &args);
-      va_end (args);
-    }
-  g_assert_true (g_action_group_has_action (G_ACTION_GROUP (window), action));
-  g_action_group_activate_action (G_ACTION_GROUP (window), action, parameter);
-}
-
-static gboolean
-is_enabled (HlWindow *window, const char *action)
-{
-  return g_action_group_get_action_enabled (G_ACTION_GROUP (window), action);
-}
-
-static void
-spin (guint milliseconds)
-{
-  gint64 end = g_get_monotonic_time () + milliseconds * 1000;
-  while (g_get_monotonic_time () < end)
-    if (!g_main_context_iteration (NULL, FALSE))
-      g_usleep (1000);
-}
-
-static HlWindow *
-new_window (void)
-{
-  HlWindow *window = hl_window_new (GTK_APPLICATION (application), NULL);
-  gtk_window_set_default_size (GTK_WINDOW (window), 1280, 720);
-  gtk_window_present (GTK_WINDOW (window));
-  gtk_test_widget_wait_for_draw (GTK_WIDGET (window));
-  return window;
-}
-
-/* Discards what is unsaved and waits until the window is gone. */
-static void
-end_window (HlWindow *window)
-{
-  g_object_add_weak_pointer (G_OBJECT (window), (gpointer *) &window);
-  gtk_window_destroy (GTK_WINDOW (window));
-  spin (50);
-  g_assert_null (window);     /* finalised: nothing keeps a reference */
-}
-
-static GtkWidget *
-find_widget (GtkWidget *root, GType type)
-{
-  if (G_TYPE_CHECK_INSTANCE_TYPE (root, type))
-    return root;
-  for (GtkWidget *child = gtk_widget_get_first_child (root); child != NULL; child = gtk_widget_get_next_sibling (child))
-    {
-      GtkWidget *found = find_widget (child, type);
-      if (found != NULL)
-        return found;
-    }
-  return NULL;
-}
-
-static HlCanvas *
-canvas_of (HlWindow *window)
-{
-  return HL_CANVAS (find_widget (GTK_WIDGET (window), HL_TYPE_CANVAS));
-}
-
-static HlPlant *
-plant_of (HlWindow *window)
-{
-  return hl_session_plant (hl_window_session (window));
-}
-
-static void
-draw_loop (HlWindow *window)
-{
-  act (window, "add-component-at", "(sii)", "heat_input", 10, 20);
-  act (window, "add-component-at", "(sii)", "turbine", 30, 10);
-  act (window, "add-component-at", "(sii)", "generator", 40, 10);
-  act (window, "add-component-at", "(sii)", "condenser", 36, 24);
-  act (window, "add-component-at", "(sii)", "pump", 20, 30);
-  act (window, "connect", "(ssss)", "Q1", "steam", "T1", "inlet");
-  act (window, "connect", "(ssss)", "T1", "exhaust", "C1", "steam");
-  act (window, "connect", "(ssss)", "C1", "condensate", "P1", "inlet");
-  act (window, "connect", "(ssss)", "P1", "outlet", "Q1", "feed");
-  act (window, "join-shaft", "(ss)", "T1", "G1");
-}
 
 static double
 value_of (HlWindow *window, const char *text)
@@ -380,41 +285,6 @@ test_components_are_named_for_assistive_technology (void)
   end_window (window);
 }
 
-static GtkWidget *
-find_button (GtkWidget *root, const char *label)
-{
-  if (GTK_IS_BUTTON (root) && g_strcmp0 (gtk_button_get_label (GTK_BUTTON (root)), label) == 0)
-    return root;
-  for (GtkWidget *child = gtk_widget_get_first_child (root); child != NULL; child = gtk_widget_get_next_sibling (child))
-    {
-      GtkWidget *found = find_button (child, label);
-      if (found != NULL)
-        return found;
-    }
-  return NULL;
-}
-
-/* Presses a button of the dialog over @window. */
-static void
-answer (HlWindow *window, const char *label)
-{
-  GListModel *toplevels = gtk_window_get_toplevels ();
-  spin (30);
-  for (guint n = 0; n < g_list_model_get_n_items (toplevels); n++)
-    {
-      g_autoptr (GtkWindow) dialog = g_list_model_get_item (toplevels, n);
-      GtkWidget *button;
-      if (gtk_window_get_transient_for (dialog) != GTK_WINDOW (window))
-        continue;
-      button = find_button (GTK_WIDGET (dialog), label);
-      g_assert_nonnull (button);
-      g_signal_emit_by_name (button, "clicked");
-      spin (30);
-      return;
-    }
-  g_error ("no dialog with a button “%s”", label);
-}
-
 static void
 test_unsaved_work_is_asked_about (void)
 {
@@ -579,16 +449,8 @@ test_components_line_up_and_space_evenly (void)
 int
 main (int argc, char **argv)
 {
-  int result;
-  if (g_getenv ("DISPLAY") == NULL)
-    {
-      g_print ("1..0 # SKIP no display\n");
-      return 0;
-    }
-  hl_application_prepare_process ();
-  gtk_test_init (&argc, &argv, NULL);
-  application = hl_application_new (G_APPLICATION_NON_UNIQUE);
-  g_assert_true (g_application_register (G_APPLICATION (application), NULL, NULL));
+  if (!windows_init (&argc, &argv))
+    return 0;
   g_test_add_func ("/app/window/loop-by-actions", test_a_loop_from_nothing_by_actions);
   g_test_add_func ("/app/window/enabled", test_actions_are_enabled_where_they_make_sense);
   g_test_add_func ("/app/window/selection", test_edits_of_the_selection);
@@ -602,7 +464,5 @@ main (int argc, char **argv)
   g_test_add_func ("/app/window/looks", test_both_looks_and_both_places_of_the_diagram);
   g_test_add_func ("/app/window/pages", test_pages_are_built_when_they_are_first_shown);
   g_test_add_func ("/app/window/order", test_components_line_up_and_space_evenly);
-  result = g_test_run ();
-  g_object_unref (application);
-  return result;
+  return windows_run ();
 }
