@@ -1,6 +1,7 @@
 /* What the canvas can do to a plant, as functions from plant to plant.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-edit.h"
+#include "plant/circuit.h"
 #include "plant/i18n.h"
 
 #define CLEARANCE 2     /* free grid units round a component that finds its own place */
@@ -291,9 +292,10 @@ hl_edit_connect (const HlPlant *plant, const char *a_id, const char *a_port, con
     return NULL;
   if (stream != NULL)
     *stream = g_intern_string (free_id);
-  if (is_outlet (plant, a_id, a_port))
-    return hl_plant_with_stream (plant, hl_stream_new (free_id, a_id, a_port, b_id, b_port));
-  return hl_plant_with_stream (plant, hl_stream_new (free_id, b_id, b_port, a_id, a_port));
+  HlStream *line = is_outlet (plant, a_id, a_port) ? hl_stream_new (free_id, a_id, a_port, b_id, b_port)
+                                                  : hl_stream_new (free_id, b_id, b_port, a_id, a_port);
+  line->medium = hl_plant_line_medium (plant, line->from_id, line->from_port, line->to_id, line->to_port);
+  return hl_plant_with_stream (plant, line);
 }
 
 /* Ports of a component that can stand in a line: the first inlet and the first outlet of one circuit. */

@@ -6,6 +6,7 @@
 #include "draw/sheet-private.h"
 #include "draw/state-diagram.h"
 #include "draw/text.h"
+#include "plant/circuit.h"
 #include "plant/i18n.h"
 
 #define COVER_TITLE    30.0
@@ -135,8 +136,7 @@ write_site (HlReport *report)
   g_autofree char *pressure = hl_units_format (hl_plant_site_pressure (report->plant), HL_DIMENSION_PRESSURE, units (report));
   g_autofree char *ambient = hl_units_format (site->ambient_T, HL_DIMENSION_TEMPERATURE, units (report));
   g_autofree char *wet_bulb = hl_units_format (site->wet_bulb_T, HL_DIMENSION_TEMPERATURE, units (report));
-  g_autofree char *formulation = g_ascii_strup (hl_plant_formulation (report->plant), -1);
-  g_autofree char *water = g_strdup_printf (_("IAPWS %s; pressures are absolute"), formulation);
+  g_autofree char *water = g_strdup_printf (_("%s; pressures are absolute"), hl_plant_formulation_name (report->plant));
   g_autofree char *size = g_strdup_printf (_("%u components, %u streams"), hl_plant_n_components (report->plant), hl_plant_n_streams (report->plant));
   g_autofree char *height = g_strdup_printf (_("%s, air pressure %s (ISO 2533)"), altitude, pressure);
   hl_report_pair (report, _("Plant"), plant_title (report));

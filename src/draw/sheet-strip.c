@@ -5,6 +5,7 @@
 #include "draw/free-space.h"
 #include "draw/tables.h"
 #include "draw/text.h"
+#include "plant/circuit.h"
 #include "plant/i18n.h"
 
 #define THIN_LINE   0.8
@@ -181,9 +182,9 @@ draw_title_block (cairo_t *cr, const HlStrip *strip, const HlBox *box)
   double size = strip->text, head = 3.3 * size, row = 2.85 * size, foot = box->height - head - 3.0 * row;
   double y = box->y + head, third = box->width / 3.0, fifth = box->width / 5.0, padding = PADDING * size, used;
   const char *title = hl_plant_title (strip->plant);
-  g_autofree char *units_text = units_words (units), *formulation = g_ascii_strup (hl_plant_formulation (strip->plant), -1);
+  g_autofree char *units_text = units_words (units);
   g_autofree char *ambient = hl_units_format (hl_plant_site (strip->plant)->ambient_T, HL_DIMENSION_TEMPERATURE, units);
-  g_autofree char *water = g_strdup_printf (_("IAPWS %s, ambient %s"), formulation, ambient);
+  g_autofree char *water = g_strdup_printf (_("%s, ambient %s"), hl_plant_formulation_name (strip->plant), ambient);
   g_autofree char *open = g_strdup_printf ("%u", hl_plant_n_assumed (strip->plant));
   g_autofree char *findings = strip->solution != NULL ? g_strdup_printf ("%u", hl_solution_n_findings (strip->solution)) : NULL;
   g_autofree char *sheet = g_strdup_printf ("%s · %.2f", strip->paper, strip->scale);

@@ -13,6 +13,20 @@ hl_check_port (const HlChecker *checker, const char *port)
   return node >= 0 ? &checker->states[node] : NULL;
 }
 
+const HlFluid *
+hl_check_fluid (const HlChecker *checker, const char *port)
+{
+  int node = hl_model_port_node (checker->model, checker->index, port);
+  return node >= 0 ? hl_model_node (checker->model, node)->fluid : checker->model->water;
+}
+
+gboolean
+hl_check_is_water (const HlChecker *checker, const char *port)
+{
+  const HlFluid *fluid = hl_check_fluid (checker, port);
+  return fluid == hl_fluid_water () || g_str_equal (hl_fluid_id (fluid), "water-95");
+}
+
 gboolean
 hl_check_own (const HlChecker *checker, const char *key, double *value)
 {

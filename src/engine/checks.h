@@ -20,6 +20,8 @@ void hl_check_all (HlChecker *checker);
 
 /* For components. */
 const HlNodeResult *hl_check_port  (const HlChecker *checker, const char *port);             /* NULL: not connected */
+const HlFluid      *hl_check_fluid (const HlChecker *checker, const char *port);             /* medium at a port; never NULL */
+gboolean            hl_check_is_water (const HlChecker *checker, const char *port);          /* by either formulation */
 gboolean            hl_check_own   (const HlChecker *checker, const char *key, double *value);   /* SI */
 char               *hl_check_text  (const HlChecker *checker, HlDimension dimension, double value);  /* in the plant's units */
 /* Adds a finding about @key of the component ("" for the whole); takes @text. */

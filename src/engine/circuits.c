@@ -1,7 +1,7 @@
 /* Circuits: connected parts of the mass-balance graph; the two sides of an exchanger are two.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "engine/circuits.h"
-#include <string.h>
+#include "plant/circuit.h"
 
 static int
 find (int *circuits, int node)
@@ -9,20 +9,6 @@ find (int *circuits, int node)
   while (circuits[node] != node)
     node = circuits[node] = circuits[circuits[node]];
   return node;
-}
-
-/* Side of an exchanger that a port belongs to; "inlet#" in the table stands for "inlet1", "inlet2" ... */
-static int
-side_of (const HlKind *kind, const char *key)
-{
-  for (guint k = 0; k < kind->n_ports; k++)
-    {
-      const char *name = kind->ports[k].key;
-      gsize length = strcspn (name, "#");
-      if (strncmp (name, key, length) == 0 && (name[length] == '#' ? g_ascii_isdigit (key[length]) : key[length] == '\0'))
-        return kind->ports[k].side_circuit;
-    }
-  return 0;
 }
 
 /* Nodes at the connected ports of a component. */
@@ -34,7 +20,7 @@ nodes_of (const HlModel *model, int component, int *nodes, int *sides, int most)
   for (int k = model->first_port[component]; k < model->first_port[component + 1] && n < most; k++)
     {
       const HlPortNode *port = &g_array_index (model->ports, HlPortNode, k);
-      sides[n] = side_of (kind, port->key);
+      sides[n] = hl_kind_side_of_port (kind, port->key);
       nodes[n++] = port->node;
     }
   return n;

@@ -97,7 +97,9 @@ find_range (const HlModel *model, int equation, HlFindings *findings)
   g_autofree char *name = spec != NULL ? hl_plant_describe (model->plant, &spec->address) : hl_name_var (model, var);
   g_autofree char *where = hl_name_components (model, &equation, 1);
   HlFinding *finding = hl_findings_add (findings, HL_GRADE_ERROR, "outside-range", spec != NULL ? spec->address : address_of (model, e),
-    g_strdup_printf (_("%s: a state lies outside the range of the property formulation: %s. Look at %s."), where, why, name));
+    e->fluid == model->water
+      ? g_strdup_printf (_("%s: a state lies outside the range of the property formulation: %s. Look at %s."), where, why, name)
+      : g_strdup_printf (_("%s: a state lies outside the range of %s: %s. Look at %s."), where, _(hl_fluid_name (e->fluid)), why, name));
   if (spec != NULL)
     offer_spec (model, spec, finding);
   else

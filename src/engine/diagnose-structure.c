@@ -586,6 +586,8 @@ gboolean
 hl_diagnose_structure (const HlModel *model, const HlStructure *structure, HlFindings *findings)
 {
   find_open_ports (model, findings);
+  if (hl_diagnose_media (model, findings))
+    return FALSE;
   if (find_leaks (model, findings))
     return FALSE;
   if (structure->n_over > 0)

@@ -10,6 +10,9 @@ G_BEGIN_DECLS
 gboolean hl_diagnose_structure (const HlModel *model, const HlStructure *structure, HlFindings *findings);
 void     hl_diagnose_numbers   (const HlModel *model, const HlStructure *structure, const HlNumbers *numbers, HlFindings *findings);
 
+/* Two media in one circuit: a finding for each such circuit.  Returns whether there is one. */
+gboolean hl_diagnose_media     (const HlModel *model, HlFindings *findings);
+
 /* Values that somebody put in and that take part in the equations of the over-determined part: indices of specs.
  * Returns (transfer full), element-type int. */
 GArray  *hl_diagnose_surplus   (const HlModel *model, const int *equations, int n);

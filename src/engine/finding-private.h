@@ -14,6 +14,7 @@ void       hl_findings_clear (HlFindings *findings);
 HlFinding *hl_findings_add   (HlFindings *findings, HlGrade grade, const char *code, HlAddress at, char *text);
 /* Takes @text. */
 void       hl_finding_mend   (HlFinding *finding, HlMendKind kind, HlAddress address, double value, char *text);
+void       hl_finding_mend_medium (HlFinding *finding, HlAddress stream, const char *medium, char *text);
 /* Gravest first, otherwise as they came. */
 void       hl_findings_sort  (HlFindings *findings);
 gboolean   hl_findings_have  (const HlFindings *findings, HlGrade at_least);

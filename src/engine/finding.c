@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "engine/finding.h"
 #include "engine/finding-private.h"
+#include "plant/circuit.h"
 #include "plant/i18n.h"
 
 static const struct { const char *id, *name; } grades[] = {
@@ -60,7 +61,14 @@ void
 hl_finding_mend (HlFinding *finding, HlMendKind kind, HlAddress address, double value, char *text)
 {
   finding->mends = g_renew (HlMend, finding->mends, finding->n_mends + 1);
-  finding->mends[finding->n_mends++] = (HlMend) { kind, address, value, text };
+  finding->mends[finding->n_mends++] = (HlMend) { kind, address, value, text, NULL };
+}
+
+void
+hl_finding_mend_medium (HlFinding *finding, HlAddress stream, const char *medium, char *text)
+{
+  hl_finding_mend (finding, HL_MEND_MEDIUM, stream, 0.0, text);
+  finding->mends[finding->n_mends - 1].medium = g_intern_string (medium);
 }
 
 /* Insertion keeps the order of equals; there are never many. */
@@ -142,6 +150,8 @@ hl_mend_apply (const HlMend *mend, HlPlant *plant, GError **error)
       return hl_plant_with_value (plant, &mend->address, NULL, error);
     case HL_MEND_INSERT_VALVE:
       return insert_valve (plant, mend->address.id, error);
+    case HL_MEND_MEDIUM:
+      return hl_plant_with_medium (plant, mend->address.id, mend->medium, error);
     case HL_MEND_EDIT:
     case HL_MEND_CONNECT:
       break;

@@ -14,6 +14,7 @@ typedef enum {
   HL_MEND_EDIT,            /* nothing automatic: go to @address and change it */
   HL_MEND_INSERT_VALVE,    /* insert a throttle valve in stream @address.id */
   HL_MEND_CONNECT,         /* go to the open port @address (component, port key) */
+  HL_MEND_MEDIUM,          /* make the whole circuit of stream @address.id carry @medium */
 } HlMendKind;
 
 typedef struct {
@@ -21,6 +22,7 @@ typedef struct {
   HlAddress  address;
   double     value;        /* SI; of GIVE */
   char      *text;         /* translated button text: "Give exhaust pressure of T1: 0.07 bar" */
+  const char *medium;      /* interned id of a medium; of MEDIUM, else NULL */
 } HlMend;
 
 typedef struct {

@@ -162,7 +162,7 @@ static HlStatus
 heater_conductance (const HlEquation *e, G_GNUC_UNUSED const double *a, const double *x, double *r, double *dr)
 {
   DualZones z;
-  HlStatus status = split (e->fluid, e->fluid, x, &z);
+  HlStatus status = split (e->fluid, e->other_fluid, x, &z);
   if (status != HL_OK)
     return status;
   Dual sum = dual (0.0);
@@ -176,14 +176,15 @@ heater_conductance (const HlEquation *e, G_GNUC_UNUSED const double *a, const do
 }
 
 HlEquation *
-hl_add_heater_conductance (HlSystem *system, const HlFluid *fluid, const int inputs[HL_N_ZONE_INPUTS], int conductance)
+hl_add_heater_conductance (HlSystem *system, const HlFluid *shell, const HlFluid *feed, const int inputs[HL_N_ZONE_INPUTS], int conductance)
 {
   int vars[N + 1];
   for (int k = 0; k < N; k++)
     vars[k] = inputs[k];
   vars[N] = conductance;
   HlEquation *e = hl_system_add_equation (system, heater_conductance, HL_VAR_CONDUCTANCE, 1u << N, vars, N + 1, NULL, 0);
-  e->fluid = fluid;
+  e->fluid = shell;
+  e->other_fluid = feed;
   e->output = N;
   e->source = N_("counterflow, zone by zone; ΔT_m of each by its end differences");
   e->says = N_("{10} = sum over desuperheating, condensing and subcooling of heat ÷ logarithmic mean difference");

@@ -20,5 +20,5 @@ typedef struct {
 
 HlStatus    hl_heater_zones (const HlFluid *shell, const HlFluid *feed, const double inputs[HL_N_ZONE_INPUTS], HlHeaterZones *zones);
 /* conductance = sum over the zones of heat over logarithmic mean difference; variables in the order above, then UA. */
-HlEquation *hl_add_heater_conductance (HlSystem *system, const HlFluid *fluid, const int inputs[HL_N_ZONE_INPUTS], int conductance);
+HlEquation *hl_add_heater_conductance (HlSystem *system, const HlFluid *shell, const HlFluid *feed, const int inputs[HL_N_ZONE_INPUTS], int conductance);
 G_END_DECLS

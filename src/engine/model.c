@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "engine/model.h"
 #include "engine/components/components.h"
+#include "plant/circuit.h"
 #include "plant/i18n.h"
 #include <math.h>
 #include <string.h>
@@ -46,6 +47,7 @@ add_node (HlModel *model, HlNode node)
   node.m = hl_system_add_var (model->system, HL_VAR_FLOW, state_address (model, &node, "m"), NAN);
   node.p = hl_system_add_var (model->system, HL_VAR_PRESSURE, state_address (model, &node, "p"), NAN);
   node.h = hl_system_add_var (model->system, HL_VAR_ENTHALPY, state_address (model, &node, "h"), NAN);
+  hl_system_var (model->system, node.p)->scale = hl_system_var (model->system, node.h)->scale = hl_fluid_scale (node.fluid);
   g_array_append_val (model->nodes, node);
 }
 
@@ -66,9 +68,9 @@ add_streams (HlModel *model)
       HlNode node = { .stream = (int) i, .port = stream->from_port, .to_port = stream->to_port };
       node.component = ends[2 * i] = GPOINTER_TO_INT (g_hash_table_lookup (index, stream->from_id)) - 1;
       node.to_component = ends[2 * i + 1] = GPOINTER_TO_INT (g_hash_table_lookup (index, stream->to_id)) - 1;
-      node.fluid = hl_fluid_lookup (stream->medium);
+      node.fluid = hl_plant_fluid (model->plant, stream->medium);
       if (node.fluid == NULL)
-        node.fluid = hl_fluid_water ();
+        node.fluid = model->water;
       add_node (model, node);
       for (int end = 0; end < 2; end++)
         if (ends[2 * i + end] >= 0)
@@ -223,6 +225,22 @@ hl_emit_optional (HlEmit *emit, const char *key)
   return -1;
 }
 
+/* Medium of the lines on the same side of the component. */
+static const HlFluid *
+fluid_beside (const HlEmit *emit, const char *key)
+{
+  const HlModel *model = emit->model;
+  const HlKind *kind = emit->component->kind;
+  int side = hl_kind_side_of_port (kind, key);
+  for (int k = model->first_port[emit->index]; k < model->first_port[emit->index + 1]; k++)
+    {
+      const HlPortNode *port = &g_array_index (model->ports, HlPortNode, k);
+      if (hl_kind_side_of_port (kind, port->key) == side)
+        return hl_model_node (model, port->node)->fluid;
+    }
+  return model->water;
+}
+
 int
 hl_emit_port (HlEmit *emit, const char *key)
 {
@@ -232,7 +250,7 @@ hl_emit_port (HlEmit *emit, const char *key)
   for (guint k = hl_plant_n_streams (emit->model->plant); k < emit->model->nodes->len; k++)
     if (hl_model_node (emit->model, (int) k)->component == emit->index && same (hl_model_node (emit->model, (int) k)->port, key))
       return (int) k;
-  HlNode open = { .stream = -1, .component = emit->index, .to_component = -1, .port = key, .fluid = hl_fluid_water () };
+  HlNode open = { .stream = -1, .component = emit->index, .to_component = -1, .port = key, .fluid = fluid_beside (emit, key) };
   HlAddress address = hl_address_component (emit->component->id, open.port);
   g_array_append_val (emit->model->open_ports, address);
   add_node (emit->model, open);
@@ -298,6 +316,14 @@ hl_emit_is_fixed_at (HlEmit *emit, const char *key, double value)
 }
 
 static int
+add_state_var (HlModel *model, const HlNode *node, HlVarKind kind, const char *letter)
+{
+  int var = hl_system_add_var (model->system, kind, state_address (model, node, letter), NAN);
+  hl_system_var (model->system, var)->scale = hl_fluid_scale (node->fluid);
+  return var;
+}
+
+static int
 state_var (HlModel *model, int n, char letter, gboolean drives)
 {
   HlNode *node = hl_model_node (model, n);
@@ -307,12 +333,12 @@ state_var (HlModel *model, int n, char letter, gboolean drives)
     case 'T':
       node->T_drives |= drives;
       if (node->T < 0)
-        node->T = hl_system_add_var (system, HL_VAR_TEMPERATURE, state_address (model, node, "T"), NAN);
+        node->T = add_state_var (model, node, HL_VAR_TEMPERATURE, "T");
       return node->T;
     case 's':
       if (node->s < 0)
         {
-          node->s = hl_system_add_var (system, HL_VAR_ENTROPY, state_address (model, node, "s"), NAN);
+          node->s = add_state_var (model, node, HL_VAR_ENTROPY, "s");
           if (drives)
             hl_add_enthalpy_at_entropy (system, node->fluid, node->p, node->s, node->h)->component = node->component;
           else
@@ -332,7 +358,7 @@ state_var (HlModel *model, int n, char letter, gboolean drives)
     case 'v':
       if (node->v < 0)
         {
-          node->v = hl_system_add_var (system, HL_VAR_VOLUME, state_address (model, node, "v"), NAN);
+          node->v = add_state_var (model, node, HL_VAR_VOLUME, "v");
           hl_add_volume (system, node->fluid, node->p, node->h, node->v)->component = node->component;
         }
       return node->v;
@@ -357,7 +383,7 @@ void
 hl_emit_guess (HlEmit *emit, int node, double h)
 {
   int var = hl_model_node (emit->model, node)->h;
-  hl_system_var (emit->system, var)->start = h;
+  hl_system_var (emit->system, var)->start = hl_fluid_scale_enthalpy (hl_fluid_scale (hl_model_node (emit->model, node)->fluid), h);
 }
 
 HlEquation *
@@ -606,6 +632,7 @@ hl_model_new_other (HlPlant *plant, const gboolean *other, guint n_other)
 {
   HlModel *model = g_new0 (HlModel, 1);
   model->plant = hl_plant_ref (plant);
+  model->water = hl_plant_fluid (plant, "water");
   model->system = hl_system_new ();
   model->nodes = g_array_sized_new (FALSE, FALSE, sizeof (HlNode), 64);
   model->ports = g_array_sized_new (FALSE, FALSE, sizeof (HlPortNode), 128);

@@ -38,6 +38,7 @@ typedef enum {
 
 typedef struct _HlModel {
   HlPlant  *plant;
+  const HlFluid *water;           /* by the plant's formulation: of water that is drawn nowhere, and of ports that no line reaches */
   HlSystem *system;
   GArray   *nodes;                /* HlNode; the streams' come first, in their order */
   GArray   *ports;                /* HlPortNode by component */

@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "engine/note-private.h"
 #include "engine/names.h"
+#include "fluid/fluid-facts.h"
 #include "plant/i18n.h"
 
 struct _HlNote {
@@ -183,6 +184,43 @@ write_line (const HlNoteLine *line, gboolean is_first, GString *text)
                             line->n_together - 1);
 }
 
+/* State in which enthalpy and entropy are zero, or what they are there. */
+static const char *
+zero_words (const HlFluid *fluid)
+{
+  static const struct { const char *zero, *words; } rows[] = {
+    { "NBP", N_("h = s = 0 for the saturated liquid at 1.01325 bar") },
+    { "IIR", N_("h = 200 kJ/kg, s = 1 kJ/(kg K) for the saturated liquid at 0 °C") },
+    { "ASHRAE", N_("h = s = 0 for the saturated liquid at −40 °C") },
+  };
+  HlFluidFacts facts;
+  hl_fluid_facts (fluid, &facts);
+  if (fluid == hl_fluid_water () || g_str_equal (hl_fluid_id (fluid), "water-95"))
+    return _("u = s = 0 for the saturated liquid at the triple point");
+  for (guint k = 0; k < G_N_ELEMENTS (rows); k++)
+    if (g_strcmp0 (facts.zero, rows[k].zero) == 0)
+      return _(rows[k].words);
+  return _("zero of h and s as published");
+}
+
+/* Every medium with its equation and zero: enthalpies of two tables compare only where their zeros agree. */
+static void
+write_media (const HlSolution *solution, GString *text)
+{
+  const HlModel *model = solution->model;
+  g_autoptr (GPtrArray) fluids = g_ptr_array_new ();
+  for (guint i = 0; i < hl_plant_n_streams (solution->plant); i++)
+    {
+      const HlFluid *fluid = hl_model_node (model, (int) i)->fluid;
+      if (g_ptr_array_find (fluids, fluid, NULL))
+        continue;
+      if (fluids->len == 0)
+        g_string_append_printf (text, "\n%s\n", _("Media"));
+      g_ptr_array_add (fluids, (gpointer) fluid);
+      g_string_append_printf (text, "  %s: %s; %s\n", _(hl_fluid_name (fluid)), hl_fluid_formulation (fluid), zero_words (fluid));
+    }
+}
+
 char *
 hl_note_to_text (const HlNote *note)
 {
@@ -191,6 +229,7 @@ hl_note_to_text (const HlNote *note)
   const char *title = hl_plant_title (note->solution->plant);
   g_autofree char *summary = hl_solution_summary (note->solution);
   g_string_append_printf (text, "%s%s%s\n%s\n", _("Calculation note"), *title != '\0' ? ": " : "", title, summary);
+  write_media (note->solution, text);
   g_string_append_printf (text, "\n%s\n", _("Put in"));
   for (guint k = 0; k < note->inputs->len; k++)
     {

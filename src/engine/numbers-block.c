@@ -268,7 +268,22 @@ merit_of (const double *f, int n)
   return sum;
 }
 
-/* How much of the step may be taken: pressures by a factor of two, enthalpies by 400 kJ/kg, temperatures by 100 K. */
+/* What stands for the zero of water's enthalpy: cold liquid. */
+static double
+enthalpy_zero (const HlFluidScale *scale)
+{
+  return hl_fluid_scale_enthalpy (scale, 0.0);
+}
+
+/* Heat of evaporation as a part of that of water, which steps and swings are stated for. */
+static double
+enthalpy_step (const HlFluidScale *scale)
+{
+  return scale != NULL ? hl_fluid_scale_enthalpy (scale, 1e6) / 1e6 - enthalpy_zero (scale) / 1e6 : 1.0;
+}
+
+/* How much of the step may be taken: pressures by a factor of two, enthalpies by a fifth of the heat of evaporation (400 kJ/kg of
+ * water), temperatures by 100 K. */
 static double
 step_cap (const HlBlockWork *w)
 {
@@ -279,7 +294,7 @@ step_cap (const HlBlockWork *w)
       switch (hl_system_var (w->system, w->vars[i])->kind)
         {
         case HL_VAR_PRESSURE: cap = 0.7; break;
-        case HL_VAR_ENTHALPY: cap = 0.4; break;
+        case HL_VAR_ENTHALPY: cap = 0.4 * enthalpy_step (hl_system_var (w->system, w->vars[i])->scale); break;
         case HL_VAR_TEMPERATURE: cap = 0.33; break;
         case HL_VAR_RATIO: cap = 1.0; break;
         default: continue;
@@ -390,12 +405,12 @@ other_start (HlBlockWork *w, int number)
   for (int i = 0; i < w->n; i++)
     {
       const HlVar *var = hl_system_var (w->system, w->vars[i]);
-      double usual = isnan (var->start) ? hl_system_start (var->kind, w->system->flow_scale) : var->start;
+      double usual = hl_system_start (var, w->system->flow_scale);
       double swing = sin (2.3 * number + 1.1 * i * (number - 1));
       switch (var->kind)
         {
         case HL_VAR_PRESSURE: usual += number == 1 ? 0.0 : 1.5 * swing; break;
-        case HL_VAR_ENTHALPY: usual *= number == 1 ? 1.0 : 1.0 + 0.25 * swing; break;
+        case HL_VAR_ENTHALPY: usual += number == 1 ? 0.0 : 0.25 * swing * (var->scale != NULL ? usual - enthalpy_zero (var->scale) : usual); break;
         case HL_VAR_TEMPERATURE: usual += number == 1 ? 0.0 : 60.0 * swing; break;
         case HL_VAR_FLOW: usual *= number == 1 ? 1.0 : number == 2 ? 0.1 : 1.0 + 0.5 * swing; break;
         default: break;

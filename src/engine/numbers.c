@@ -12,15 +12,15 @@
 
 /* Bounds inside which a single unknown is looked for. */
 static void
-bounds (HlVarKind kind, double *low, double *high)
+bounds (HlVarKind kind, const HlFluidScale *scale, double *low, double *high)
 {
   switch (kind)
     {
-    case HL_VAR_PRESSURE: *low = log (611.7); *high = log (1e8); break;
-    case HL_VAR_ENTHALPY: *low = 100.0; *high = 7.3e6; break;
-    case HL_VAR_TEMPERATURE: *low = 273.16; *high = 2273.15; break;
-    case HL_VAR_ENTROPY: *low = -8.0; *high = 13e3; break;
-    case HL_VAR_VOLUME: *low = 9e-4; *high = 2e3; break;
+    case HL_VAR_PRESSURE: *low = log (scale->p_low); *high = log (scale->p_high); break;
+    case HL_VAR_ENTHALPY: *low = scale->h_low; *high = scale->h_high; break;
+    case HL_VAR_TEMPERATURE: *low = scale->T_low; *high = scale->T_high; break;
+    case HL_VAR_ENTROPY: *low = scale->s_low; *high = scale->s_high; break;
+    case HL_VAR_VOLUME: *low = scale->v_low; *high = scale->v_high; break;
     case HL_VAR_RATIO: *low = -2.0; *high = 2.0; break;
     default: *low = -INFINITY; *high = INFINITY;
     }
@@ -193,7 +193,11 @@ solve_scalar (HlSystem *system, int equation, int var, HlNumbers *numbers)
   double unit = hl_system_scale (system, kind);
   HlFailed failed = HL_FAILED_NOT;
   scalar_init (&s, system, equation, var);
-  bounds (kind, &low, &high);
+  /* An equation of a medium looks where that medium is, whoever owns the unknown. */
+  const HlFluidScale *scale = s.equation->fluid != NULL ? hl_fluid_scale (s.equation->fluid) : hl_system_var (system, var)->scale;
+  if (scale == NULL)
+    scale = hl_fluid_scale (hl_fluid_water ());
+  bounds (kind, scale, &low, &high);
   if (scalar_is_linear (&s))
     {
       double x = system->x[var];
@@ -206,7 +210,7 @@ solve_scalar (HlSystem *system, int equation, int var, HlNumbers *numbers)
       count_calls (numbers, s.equation, s.n);
       return failed;
     }
-  double cap = kind == HL_VAR_PRESSURE ? 1.0 : kind == HL_VAR_ENTHALPY ? 8e5 : INFINITY, value = system->x[var];
+  double cap = kind == HL_VAR_PRESSURE ? 1.0 : kind == HL_VAR_ENTHALPY ? 8e5 / 2108e3 * scale->h_step : INFINITY, value = system->x[var];
   if (!scalar_newton (&s, low, high, unit, cap, &value))
     {
       failed = HL_FAILED_STEPS;

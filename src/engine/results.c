@@ -29,7 +29,7 @@ hl_results_states (HlSolution *solution)
       double h = hl_system_value (system, node->h);
       HlSaturation sat;
       if (node->subcooling >= 0 && hl_fluid_saturation_p (node->fluid, result->p, &sat) == HL_OK
-          && fabs (h - sat.h_liquid) <= 1e-9 * fabs (sat.h_liquid))
+          && fabs (h - sat.h_liquid) <= 1e-9 * (sat.h_vapour - sat.h_liquid))
         result->has_state = hl_fluid_state_px (node->fluid, result->p, 0.0, &result->st) == HL_OK;
       else
         result->has_state = hl_fluid_state_ph (node->fluid, result->p, h, &result->st) == HL_OK;

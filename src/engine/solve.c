@@ -130,7 +130,7 @@ look_at_forms (const HlSolution *solution, gboolean *other)
       else if (solution->numbers.is_known[system->root[node->h]] && solution->numbers.is_known[system->root[node->p]]
                && hl_fluid_saturation_p (node->fluid, hl_system_value (system, node->p), &sat) == HL_OK)
         {
-          double h = hl_system_value (system, node->h), slack = 1e-7 * sat.h_vapour;
+          double h = hl_system_value (system, node->h), slack = 1e-7 * (sat.h_vapour - sat.h_liquid);
           other[k] = h > sat.h_vapour + slack || h < sat.h_liquid - slack;
           forms = MAX (forms, other[k] ? FORMS_ARE_WRONG : FORMS_HOLD);
         }

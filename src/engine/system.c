@@ -38,7 +38,7 @@ hl_system_free (HlSystem *system)
 int
 hl_system_add_var (HlSystem *system, HlVarKind kind, HlAddress address, double start)
 {
-  HlVar var = { address, kind, (int) system->vars->len, start };
+  HlVar var = { address, kind, (int) system->vars->len, start, NULL };
   g_array_append_val (system->vars, var);
   return var.parent;
 }
@@ -71,6 +71,8 @@ hl_system_merge (HlSystem *system, int a, int b)
   double start = hl_system_var (system, other)->start;
   if (isnan (hl_system_var (system, root)->start))
     hl_system_var (system, root)->start = start;
+  if (hl_system_var (system, root)->scale == NULL)
+    hl_system_var (system, root)->scale = hl_system_var (system, other)->scale;
 }
 
 HlEquation *
@@ -160,7 +162,7 @@ hl_system_close (HlSystem *system)
       const HlVar *var = hl_system_var (system, i);
       system->root[i] = hl_system_find (system, (int) i);
       system->fixed_by[i] = -1;
-      system->x[i] = isnan (var->start) ? hl_system_start (var->kind, system->flow_scale) : var->start;
+      system->x[i] = hl_system_start (var, system->flow_scale);
     }
   fix_classes (system);
   g_array_append_vals (system->raw, system->index->data, system->index->len);
@@ -187,9 +189,19 @@ hl_system_scale (const HlSystem *system, HlVarKind kind)
 }
 
 double
-hl_system_start (HlVarKind kind, double flow_scale)
+hl_system_start (const HlVar *var, double flow_scale)
 {
-  switch (kind)
+  if (!isnan (var->start))
+    return var->start;
+  if (var->scale != NULL)
+    switch (var->kind)
+      {
+      case HL_VAR_PRESSURE: return log (var->scale->p_usual);
+      case HL_VAR_ENTHALPY: return hl_fluid_scale_enthalpy (var->scale, 5e5);
+      case HL_VAR_TEMPERATURE: return var->scale->T_usual;
+      default: break;
+      }
+  switch (var->kind)
     {
     case HL_VAR_FLOW: return flow_scale;
     case HL_VAR_PRESSURE: return log (5e5);

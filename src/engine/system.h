@@ -1,6 +1,7 @@
 /* Unknowns and equations of a plant, as plain arrays: what the numerical core works on.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #pragma once
+#include "engine/fluid-scale.h"
 #include "plant/plant.h"
 G_BEGIN_DECLS
 
@@ -27,6 +28,7 @@ typedef struct {
   HlVarKind kind;
   int       parent;       /* towards the root of its class; the root names itself */
   double    start;        /* cold start of the iteration; NaN: the usual one of its kind */
+  const HlFluidScale *scale;   /* of the medium whose state it is; NULL: of none */
 } HlVar;
 
 typedef struct _HlEquation HlEquation;
@@ -90,7 +92,7 @@ HlSpec     *hl_system_add_spec     (HlSystem *system, int var, HlAddress address
 void        hl_system_close        (HlSystem *system);
 
 double      hl_system_scale        (const HlSystem *system, HlVarKind kind);
-double      hl_system_start        (HlVarKind kind, double flow_scale);
+double      hl_system_start        (const HlVar *var, double flow_scale);
 HlStatus    hl_system_evaluate     (const HlSystem *system, int equation, double *r, double *dr);
 /* In SI as the engineer knows it: a pressure, not its logarithm. */
 double      hl_system_value        (const HlSystem *system, int var);

@@ -64,7 +64,7 @@ hl_fluid_facts (const HlFluid *fluid, HlFluidFacts *facts)
   HlSaturation boiling;
   *facts = (HlFluidFacts) {
     .formula = eq->formula, .cas = eq->cas, .source = fluid == described ? eq->source : fluid->formulation, .note = eq->note,
-    .expansion = expansion_of (fluid), .T_boiling = NAN,
+    .expansion = expansion_of (fluid), .zero = fluid == described ? eq->zero : NULL, .T_boiling = NAN,
     .safety_class = eq->safety_class, .safety_source = eq->safety_source, .hazard = eq->hazard,
     .gwp100 = eq->gwp100, .gwp_source = eq->gwp_source,
     .T_stable = eq->T_stable, .stable_source = eq->stable_source, .is_stable_weak = eq->is_stable_weak,

@@ -17,6 +17,7 @@ typedef enum { HL_HAZARD_NO, HL_HAZARD_YES, HL_HAZARD_UNKNOWN } HlHazard;
 typedef struct {
   const char     *formula, *cas, *source, *note;    /* source: of the equation of state */
   HlExpansionType expansion;                        /* between 0.60 and 0.88 of the critical temperature */
+  const char     *zero;                             /* state with h = s = 0: "NBP", "IIR" ...; "as published": by its paper; NULL: not known */
   double          T_boiling;                        /* at 101325 Pa [K]; NaN where it is no liquid there */
   const char     *safety_class, *safety_source;     /* ASHRAE 34: "A1" ... "B3" */
   const char     *hazard;                           /* how to treat it where it has no class */

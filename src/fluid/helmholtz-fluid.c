@@ -202,6 +202,7 @@ hl_helmholtz_with_reference (const HlHelmholtz *eq, HlReference reference, const
         moved->start.s[level][i] += add_s;
       }
   moved->fluid.id = g_strdup (id);
+  moved->zero = g_strdup (strchr (id, '@') + 1);
   moved->fluid.data = moved;
   return moved;
 }

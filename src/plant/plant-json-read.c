@@ -1,6 +1,7 @@
 /* JSON text to plants: every refusal says where, what and how to mend.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "plant/json-reader.h"
+#include "plant/circuit.h"
 #include "plant/i18n.h"
 #include <math.h>
 #include <string.h>
@@ -171,7 +172,7 @@ read_stream (HlReader *reader, JsonObject *object, GHashTable *ids, GHashTable *
   if (!take_port (reader, "from", taken, from_id, from_port) || !take_port (reader, "to", taken, to_id, to_port))
     return FALSE;
   if (hl_fluid_lookup (medium) == NULL)
-    return hl_reader_refuse (reader, "medium", _("“%s” is not known; write \"water\""), medium);
+    return hl_reader_refuse (reader, "medium", _("“%s” is not a medium known here; heatloom-batch fluids lists them"), medium);
   stream = hl_stream_new (reader->id, from_id, from_port, to_id, to_port);
   stream->medium = g_intern_string (medium);
   if (!read_route (reader, object, stream))
@@ -424,6 +425,17 @@ read_site (HlReader *reader, JsonObject *top)
 }
 
 static gboolean
+is_formulation (const char *id)
+{
+  guint n;
+  const HlFormulation *list = hl_formulations (&n);
+  for (guint i = 0; i < n; i++)
+    if (g_str_equal (list[i].id, id))
+      return TRUE;
+  return FALSE;
+}
+
+static gboolean
 read_header (HlReader *reader, JsonObject *top)
 {
   JsonNode *version = hl_reader_member (top, "heatloom");
@@ -439,8 +451,9 @@ read_header (HlReader *reader, JsonObject *top)
     return FALSE;
   if (!hl_unit_set_from_id (units, &reader->plant->units))
     return hl_reader_refuse (reader, "units", _("“%s” is none of “metric”, “si”, “us”"), units);
-  if (!g_str_equal (formulation, "if97"))
-    return hl_reader_refuse (reader, "formulation", _("“%s” is not known; write \"if97\""), formulation);
+  if (!is_formulation (formulation))
+    return hl_reader_refuse (reader, "formulation", _("“%s” is not known; write \"if97\" or \"iapws95\""), formulation);
+  reader->plant->formulation = g_intern_string (formulation);
   g_ref_string_release (reader->plant->title);
   reader->plant->title = g_ref_string_new (title);
   return read_site (reader, top);

@@ -29,7 +29,7 @@ G_DEFINE_AUTOPTR_CLEANUP_FUNC (HlPlant, hl_plant_unref)
 /* Reading.  Indices run in file order; pointers stay valid as long as the plant. */
 HL_PUBLIC const char        *hl_plant_title         (const HlPlant *plant);
 HL_PUBLIC HlUnitSet          hl_plant_units         (const HlPlant *plant);
-HL_PUBLIC const char        *hl_plant_formulation   (const HlPlant *plant);   /* "if97" */
+HL_PUBLIC const char        *hl_plant_formulation   (const HlPlant *plant);   /* "if97" or "iapws95", see plant/circuit.h */
 HL_PUBLIC const HlSite      *hl_plant_site          (const HlPlant *plant);
 HL_PUBLIC double             hl_plant_site_pressure (const HlPlant *plant);   /* from the altitude [Pa] */
 HL_PUBLIC guint              hl_plant_n_components  (const HlPlant *plant);

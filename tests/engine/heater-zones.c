@@ -92,7 +92,7 @@ test_derivatives_in_each_regime (void)
       for (int k = 0; k < HL_N_ZONE_INPUTS; k++)
         vars[k] = hl_system_add_var (system, kinds[k], hl_address_plant (g_intern_static_string ("")), x[k]);
       int ua = hl_system_add_var (system, HL_VAR_CONDUCTANCE, hl_address_plant (g_intern_static_string ("")), 5e5);
-      hl_add_heater_conductance (system, hl_fluid_water (), vars, ua);
+      hl_add_heater_conductance (system, hl_fluid_water (), hl_fluid_water (), vars, ua);
       hl_system_close (system);
       g_assert_cmpint (hl_system_evaluate (system, 0, &r, dr), ==, HL_OK);
       for (int k = 0; k < HL_N_ZONE_INPUTS; k++)

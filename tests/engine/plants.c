@@ -1,6 +1,7 @@
 /* Plants for tests, written in a few lines of text.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "plants.h"
+#include "plant/circuit.h"
 #include <math.h>
 #include <string.h>
 
@@ -190,6 +191,15 @@ read_line (Builder *b, const char *line)
         }
       take (b, hl_plant_with_shaft (b->plant, hl_shaft_new (g_intern_static_string ("S1"), (const char *const *) words + 1, g_strv_length (words) - 1)));
     }
+  else if (g_str_equal (words[0], "medium"))
+    {
+      g_autoptr (GError) error = NULL;
+      HlPlant *next = hl_plant_with_medium (b->plant, words[1], words[2], &error);
+      g_assert_no_error (error);
+      take (b, next);
+    }
+  else if (g_str_equal (words[0], "formulation"))
+    take (b, hl_plant_with_formulation (b->plant, words[1]));
   else if (g_str_equal (words[0], "plant"))
     for (char **word = words + 1; *word != NULL; word++)
       {

@@ -113,7 +113,7 @@ static const char head[] =
   "  \"heatloom\": {\"description\": \"version of the format\", \"const\": 1},\n"
   "  \"title\": {\"type\": \"string\"},\n"
   "  \"units\": {\"description\": \"units shown on screen; the file is in SI\", \"enum\": [\"metric\", \"si\", \"us\"]},\n"
-  "  \"formulation\": {\"description\": \"of water and steam\", \"enum\": [\"if97\"]},\n"
+  "  \"formulation\": {\"description\": \"of water and steam\", \"enum\": [\"if97\", \"iapws95\"]},\n"
   "  \"site\": {\"type\": \"object\", \"properties\": {\n"
   "    \"altitude\": {\"$ref\": \"#/$defs/length\", \"minimum\": -1000, \"maximum\": 11000},\n"
   "    \"ambient_T\": {\"$ref\": \"#/$defs/temperature\", \"minimum\": 173.15, \"maximum\": 373.15},\n"

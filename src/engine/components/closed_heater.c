@@ -61,7 +61,7 @@ emit_closed_heater (HlEmit *emit)
   const int zones[HL_N_ZONE_INPUTS] = {
     NODE (emit, steam)->p, NODE (emit, steam)->m, NODE (emit, steam)->h, NODE (emit, drain)->m, NODE (emit, drain)->h,
     NODE (emit, feed_in)->m, NODE (emit, feed_in)->p, NODE (emit, feed_in)->h, NODE (emit, feed_out)->p, NODE (emit, feed_out)->h };
-  hl_emit_done (emit, hl_add_heater_conductance (system, NODE (emit, steam)->fluid, zones, ua), NULL, -1);
+  hl_emit_done (emit, hl_add_heater_conductance (system, NODE (emit, steam)->fluid, NODE (emit, feed_in)->fluid, zones, ua), NULL, -1);
 }
 
 /* --- checks ------------------------------------------------------------------- */
@@ -138,7 +138,7 @@ check (HlChecker *checker)
   const HlNodeResult *steam = hl_check_port (checker, "steam"), *drain = hl_check_port (checker, "drain");
   const HlNodeResult *in = hl_check_port (checker, "feed_inlet"), *out = hl_check_port (checker, "feed_outlet");
   HlSaturation sat;
-  if (steam == NULL || !steam->has_pressure || hl_fluid_saturation_p (hl_fluid_water (), steam->p, &sat) != HL_OK)
+  if (steam == NULL || !steam->has_pressure || hl_fluid_saturation_p (hl_check_fluid (checker, "steam"), steam->p, &sat) != HL_OK)
     return;
   check_drain_inlet (checker, steam);
   if (check_outlet (checker, sat.T, steam, out))
@@ -158,7 +158,7 @@ check (HlChecker *checker)
     return;
   const double inputs[HL_N_ZONE_INPUTS] = { log (steam->p), steam->m, steam->st.h, drain->m, drain->st.h, in->m, log (in->p), in->st.h, log (out->p), out->st.h };
   HlHeaterZones zones;
-  if (hl_heater_zones (hl_fluid_water (), hl_fluid_water (), inputs, &zones) == HL_OK)
+  if (hl_heater_zones (hl_check_fluid (checker, "steam"), hl_check_fluid (checker, "feed_inlet"), inputs, &zones) == HL_OK)
     check_zones (checker, &zones, in->m * (out->st.h - in->st.h));
   hl_check_entropy (checker);
 }

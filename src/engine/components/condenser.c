@@ -79,7 +79,7 @@ emit_condenser (HlEmit *emit)
   if (is_connected)
     emit_connected_cooling (emit, T_sat, heat, rise, difference);
   else
-    emit_own_cooling (emit, NODE (emit, steam)->fluid, T_sat, heat, rise, difference);
+    emit_own_cooling (emit, emit->model->water, T_sat, heat, rise, difference);
   hl_emit_done (emit, hl_add_log_mean (emit->system, mean, rise, difference), NULL, 0);
   hl_emit_done (emit, hl_add_quotient (emit->system, ua, heat, mean), NULL, 0);
   if (hl_emit_has_value (emit, "cleanliness") || hl_emit_has_value (emit, "clean_UA"))
@@ -102,7 +102,7 @@ check_difference (HlChecker *checker)
   if (!(least < 2.0) || steam == NULL || !steam->has_pressure)
     return;
   HlSaturation sat;
-  if (hl_fluid_saturation_p (hl_fluid_water (), steam->p, &sat) != HL_OK)
+  if (hl_fluid_saturation_p (hl_check_fluid (checker, "steam"), steam->p, &sat) != HL_OK)
     return;
   g_autofree char *T_sat = hl_check_text (checker, HL_DIMENSION_TEMPERATURE, sat.T);
   g_autofree char *T_out = hl_check_text (checker, HL_DIMENSION_TEMPERATURE, sat.T - difference);
@@ -136,7 +136,7 @@ check (HlChecker *checker)
   if (steam != NULL && out != NULL && steam->has_state && out->has_state && steam->st.h <= out->st.h)
     hl_check_add (checker, HL_GRADE_ERROR, "nothing-to-condense", "",
       g_strdup_printf (_("What enters %s holds no more heat than its condensate: there is nothing to condense."), checker->component->id));
-  if (steam != NULL && steam->has_pressure && steam->p < 3000.0)
+  if (steam != NULL && steam->has_pressure && steam->p < 3000.0 && hl_check_is_water (checker, "steam"))
     {
       g_autofree char *p = hl_check_text (checker, HL_DIMENSION_PRESSURE, steam->p);
       HlFinding *finding = hl_check_add (checker, HL_GRADE_CAUTION, "condenser-pressure", "steam.p",

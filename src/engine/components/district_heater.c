@@ -8,7 +8,7 @@
 #define NODE(emit, n) hl_model_node ((emit)->model, n)
 
 /* Variables of the water at both ends, wherever they come from. */
-typedef struct { int m, p_in, h_in, T_in, p_out, h_out, T_out; } Water;
+typedef struct { const HlFluid *fluid; int m, p_in, h_in, T_in, p_out, h_out, T_out; } Water;
 
 static void
 use_lines (HlEmit *emit, Water *water)
@@ -20,14 +20,16 @@ use_lines (HlEmit *emit, Water *water)
   hl_system_merge (emit->system, T_out, water->T_out);
   hl_system_merge (emit->system, NODE (emit, in)->m, water->m);
   hl_system_merge (emit->system, NODE (emit, in)->p, water->p_in);
+  water->fluid = NODE (emit, in)->fluid;
   water->p_out = NODE (emit, out)->p;
   water->h_in = NODE (emit, in)->h;
   water->h_out = NODE (emit, out)->h;
 }
 
 static void
-use_own (HlEmit *emit, const HlFluid *fluid, Water *water)
+use_own (HlEmit *emit, Water *water)
 {
+  const HlFluid *fluid = water->fluid = emit->model->water;
   water->p_out = hl_emit_hidden (emit, "water_outlet_p", HL_VAR_PRESSURE);
   water->h_in = hl_emit_hidden (emit, "water_inlet_h", HL_VAR_ENTHALPY);
   water->h_out = hl_emit_hidden (emit, "water_outlet_h", HL_VAR_ENTHALPY);
@@ -59,7 +61,7 @@ emit_district_heater (HlEmit *emit)
   if (has_lines (emit))
     use_lines (emit, &water);
   else
-    use_own (emit, NODE (emit, steam)->fluid, &water);
+    use_own (emit, &water);
   hl_emit_done (emit, hl_add_pressure_loss (system, water.p_in, water.p_out, loss), NULL, -1);
   hl_emit_done (emit, hl_add_saturation (system, NODE (emit, steam)->fluid, NODE (emit, steam)->p, T_sat), NULL, 1);
   hl_emit_done (emit, hl_add_linear (system, HL_VAR_TEMPERATURE, (const int[]) { T_sat, water.T_out, difference }, (const double[]) { 1.0, -1.0, -1.0 }, 3, 0.0),
@@ -70,7 +72,7 @@ emit_district_heater (HlEmit *emit)
   const int zones[HL_N_ZONE_INPUTS] = {
     NODE (emit, steam)->p, NODE (emit, steam)->m, NODE (emit, steam)->h, NODE (emit, drain)->m, NODE (emit, drain)->h,
     water.m, water.p_in, water.h_in, water.p_out, water.h_out };
-  hl_emit_done (emit, hl_add_heater_conductance (system, NODE (emit, steam)->fluid, zones, ua), NULL, -1);
+  hl_emit_done (emit, hl_add_heater_conductance (system, NODE (emit, steam)->fluid, water.fluid, zones, ua), NULL, -1);
   hl_emit_sum (emit, HL_SUM_DELIVERED, heat);
 }
 

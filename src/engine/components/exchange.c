@@ -91,7 +91,7 @@ hl_exchange_check (HlChecker *checker)
   if (hot_in == NULL || hot_out == NULL || cold_in == NULL || cold_out == NULL || !hot_in->has_state || !hot_out->has_state || !cold_in->has_state
       || !cold_out->has_state)
     return;
-  if (hot_out->st.h > hot_in->st.h * (1.0 + 1e-9) || cold_out->st.h < cold_in->st.h * (1.0 - 1e-9))
+  if (hot_out->st.h > hot_in->st.h + 1e-3 || cold_out->st.h < cold_in->st.h - 1e-3)
     {
       g_autofree char *hot = hl_check_text (checker, HL_DIMENSION_TEMPERATURE, hot_in->st.T);
       g_autofree char *cold = hl_check_text (checker, HL_DIMENSION_TEMPERATURE, cold_in->st.T);

@@ -71,7 +71,7 @@ static void
 check_evaporation (HlChecker *checker, const HlNodeResult *steam)
 {
   HlFluidLimits limits;
-  hl_fluid_limits (hl_fluid_water (), &limits);
+  hl_fluid_limits (hl_check_fluid (checker, "steam"), &limits);
   if (steam == NULL || !steam->has_pressure || !(steam->p > 0.95 * limits.p_critical && steam->p < limits.p_critical))
     return;
   g_autofree char *p = hl_check_text (checker, HL_DIMENSION_PRESSURE, steam->p);

@@ -44,10 +44,12 @@ check (HlChecker *checker)
     }
   if (in->has_state && in->st.phase == HL_PHASE_TWO_PHASE && in->st.x > 1e-6)
     hl_check_add (checker, HL_GRADE_ERROR, "pump-steam", "inlet.x",
-      g_strdup_printf (_("%s draws water with %.1f %% steam in it: a pump needs liquid. Condense it first."), checker->component->id, 100.0 * in->st.x));
-  else if (in->has_state && in->st.phase == HL_PHASE_VAPOUR && in->st.p < 22e6)
+      g_strdup_printf (hl_check_is_water (checker, "inlet") ? _("%s draws water with %.1f %% steam in it: a pump needs liquid. Condense it first.")
+                                                     : _("%s draws liquid with %.1f %% vapour in it: a pump needs liquid. Condense it first."), checker->component->id, 100.0 * in->st.x));
+  else if (in->has_state && in->st.phase == HL_PHASE_VAPOUR)
     hl_check_add (checker, HL_GRADE_ERROR, "pump-steam", "inlet.x",
-      g_strdup_printf (_("%s draws steam: a pump needs liquid. Condense it first."), checker->component->id));
+      g_strdup_printf (hl_check_is_water (checker, "inlet") ? _("%s draws steam: a pump needs liquid. Condense it first.")
+                                                     : _("%s draws vapour: a pump needs liquid. Condense it first."), checker->component->id));
   hl_check_entropy (checker);
 }
 

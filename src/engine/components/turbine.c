@@ -83,7 +83,8 @@ end_of_expansion (HlEmit *emit, const HlNode *exhaust)
   if (hl_component_option (emit->component, "leaving_loss") != LOSS_COUNTED)
     return exhaust->h;
   int end = hl_emit_own (emit, "expansion_end_h", HL_VAR_ENTHALPY), loss = hl_emit_own (emit, "exhaust_loss", HL_VAR_ENTHALPY);
-  hl_system_var (emit->system, end)->start = 2.3e6;
+  hl_system_var (emit->system, end)->scale = hl_fluid_scale (exhaust->fluid);
+  hl_system_var (emit->system, end)->start = hl_fluid_scale_enthalpy (hl_fluid_scale (exhaust->fluid), 2.3e6);
   hl_emit_done (emit, hl_add_linear (emit->system, HL_VAR_ENTHALPY, (const int[]) { exhaust->h, end, loss }, (const double[]) { 1.0, -1.0, -1.0 }, 3, 0.0),
                 N_("{0} = {1} + {2}"), -1);
   return end;
@@ -166,7 +167,8 @@ check_outlet (HlChecker *checker, const char *above, const char *outlet, const H
       HlAddress before = hl_address_component (checker->component->id, g_intern_string (above_key));
       g_autofree char *name = hl_plant_describe (checker->model->plant, &at), *before_name = hl_plant_describe (checker->model->plant, &before);
       HlFinding *finding = hl_check_add (checker, HL_GRADE_ERROR, "pressure-rises", key,
-        g_strdup_printf (_("Steam cannot expand in %s: %s (%s) is above %s (%s). Lower the first or raise the second."),
+        g_strdup_printf (hl_check_is_water (checker, "inlet") ? _("Steam cannot expand in %s: %s (%s) is above %s (%s). Lower the first or raise the second.")
+                           : _("Vapour cannot expand in %s: %s (%s) is above %s (%s). Lower the first or raise the second."),
                          checker->component->id, name, p_out, before_name, p_in));
       hl_check_offer (checker, finding, key);
       hl_check_offer (checker, finding, above_key);
@@ -189,7 +191,9 @@ check (HlChecker *checker)
     {
       g_autofree char *T = hl_check_text (checker, HL_DIMENSION_TEMPERATURE, inlet->st.T);
       HlFinding *finding = hl_check_add (checker, HL_GRADE_ERROR, "water-at-turbine", "inlet.T",
-        g_strdup_printf (_("Water, not steam, reaches %s: at its inlet pressure %s is below boiling. Raise the temperature or lower the pressure."),
+        g_strdup_printf (hl_check_is_water (checker, "inlet")
+                           ? _("Water, not steam, reaches %s: at its inlet pressure %s is below boiling. Raise the temperature or lower the pressure.")
+                           : _("Liquid, not vapour, reaches %s: at its inlet pressure %s is below boiling. Raise the temperature or lower the pressure."),
                          checker->component->id, T));
       hl_check_offer (checker, finding, "inlet.T");
       hl_check_offer (checker, finding, "inlet.p");
