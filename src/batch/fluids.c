@@ -17,7 +17,10 @@ print_fluid (const HlFluid *fluid)
   g_autofree char *p_critical = hl_units_format (limits.p_critical, HL_DIMENSION_PRESSURE, HL_UNITS_METRIC);
   printf ("| `%s` | %s | %s | ", hl_fluid_id (fluid), _(hl_fluid_name (fluid)), hl_fluid_formulation (fluid));
   printf (_("%s to %s"), low, high);
-  printf (" | %s | %s, %s |\n", p_max, T_critical, p_critical);
+  if (hl_fluid_has_dome (fluid))
+    printf (" | %s | %s, %s |\n", p_max, T_critical, p_critical);
+  else
+    printf (" | %s | %s |\n", p_max, _("has no dome"));
 }
 
 static HlExit

@@ -147,8 +147,11 @@ run_state (const HlArguments *arguments)
   g_autoptr(GError) error = NULL;
   const char *id = hl_arguments_word (arguments, 0), *table = hl_arguments_value (arguments, "table");
   const char *json_path = hl_arguments_value (arguments, "json");
-  const HlFluid *fluid = hl_fluid_lookup (id);
-  if (fluid == NULL)
+  g_autoptr(GError) why = NULL;
+  const HlFluid *fluid = hl_fluid_find (id, &why);
+  if (fluid == NULL && g_error_matches (why, HL_FLUID_ERROR, HL_FLUID_ERROR_GAS))
+    g_set_error_literal (&error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, why->message);
+  else if (fluid == NULL)
     g_set_error (&error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("there is no medium “%s”; heatloom-batch fluids lists them"), id);
   else if (table != NULL && (json_path != NULL || hl_arguments_n_words (arguments) > 1))
     g_set_error (&error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("--table takes its states from the table; leave the others out"));

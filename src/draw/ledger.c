@@ -51,7 +51,8 @@ text_medium (const Row *row)
 }
 
 /* The fluid's own words have no translations of theirs; these lines offer them to the translators. */
-G_GNUC_UNUSED static const char *const words_of_fluids[] = { N_("Water and steam"), N_("liquid"), N_("vapour"), N_("supercritical") };
+G_GNUC_UNUSED static const char *const words_of_fluids[] = { N_("Water and steam"), N_("liquid"), N_("vapour"), N_("supercritical"),
+                                                                  N_("gas"), N_("Air"), N_("Flue gas"), N_("Gas mixture") };
 
 static char *
 text_phase (const Row *row)
@@ -62,6 +63,8 @@ text_phase (const Row *row)
   /* A quality is known on the saturation line and between. */
   if (!isfinite (state->x))
     return g_strdup (_(hl_phase_name (state->phase)));
+  if (row->result.fluid != NULL && !hl_fluid_has_dome (row->result.fluid))
+    return g_strdup (_("gas with condensate"));
   if (state->x < 1e-6)
     return g_strdup (_("saturated liquid"));
   return g_strdup (state->x > 1.0 - 1e-6 ? _("saturated vapour") : _("wet steam"));

@@ -82,6 +82,8 @@ hl_stream_look (const HlStreamResult *result)
       if (result->state.x < 1e-6)
         return HL_LOOK_WATER;
       return result->state.x > 1.0 - 1e-6 ? HL_LOOK_STEAM : HL_LOOK_WET;
+    case HL_PHASE_GAS:
+      return HL_LOOK_GAS;
     case HL_PHASE_VAPOUR:
     case HL_PHASE_SUPERCRITICAL:
     default:

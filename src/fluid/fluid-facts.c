@@ -5,6 +5,7 @@
 #include <math.h>
 #include <string.h>
 
+#include "fluid/gas-private.h"
 #include "fluid/helmholtz-private.h"
 
 /* The stretch of the saturation line that power cycles use. */
@@ -48,6 +49,16 @@ hazards_of (HlFluidFacts *facts)
     }
 }
 
+/* Nothing is said of a gas's hazards: what it brings depends on where it comes from. */
+static void
+facts_of_gas (HlFluidFacts *facts)
+{
+  *facts = (HlFluidFacts) {
+    .source = hl_gas_data ()->source, .expansion = HL_EXPANSION_NONE, .T_boiling = NAN,
+    .is_flammable = HL_HAZARD_UNKNOWN, .is_toxic = HL_HAZARD_UNKNOWN, .gwp100 = NAN, .T_stable = NAN,
+  };
+}
+
 /**
  * hl_fluid_facts:
  * @fluid: a fluid
@@ -59,6 +70,11 @@ hazards_of (HlFluidFacts *facts)
 void
 hl_fluid_facts (const HlFluid *fluid, HlFluidFacts *facts)
 {
+  if (hl_gas_is_mixture (fluid))
+    {
+      facts_of_gas (facts);
+      return;
+    }
   const HlFluid *described = fluid == hl_fluid_water () ? hl_fluid_lookup ("water-95") : fluid;
   const HlHelmholtz *eq = hl_helmholtz_of (described);
   HlSaturation boiling;
@@ -80,7 +96,7 @@ hl_fluid_facts (const HlFluid *fluid, HlFluidFacts *facts)
  * hl_expansion_type_name:
  * @type: a kind of expansion
  *
- * Returns: "wet", "isentropic" or "dry"
+ * Returns: "wet", "isentropic", "dry" or "none"
  */
 const char *
 hl_expansion_type_name (HlExpansionType type)
@@ -90,6 +106,7 @@ hl_expansion_type_name (HlExpansionType type)
     case HL_EXPANSION_WET: return "wet";
     case HL_EXPANSION_ISENTROPIC: return "isentropic";
     case HL_EXPANSION_DRY: return "dry";
+    case HL_EXPANSION_NONE: return "none";
     }
   return "unknown";
 }

@@ -9,6 +9,7 @@ typedef enum {
   HL_EXPANSION_WET,         /* into the wet region: ds''/dT is negative throughout */
   HL_EXPANSION_ISENTROPIC,  /* the sign of ds''/dT changes: nearly along the line */
   HL_EXPANSION_DRY,         /* into superheated vapour: ds''/dT is positive throughout */
+  HL_EXPANSION_NONE,        /* a gas without saturation line */
 } HlExpansionType;
 
 typedef enum { HL_HAZARD_NO, HL_HAZARD_YES, HL_HAZARD_UNKNOWN } HlHazard;
@@ -30,6 +31,6 @@ typedef struct {
 } HlFluidFacts;
 
 HL_PUBLIC void        hl_fluid_facts          (const HlFluid *fluid, HlFluidFacts *facts);
-HL_PUBLIC const char *hl_expansion_type_name  (HlExpansionType type);      /* "wet", "isentropic", "dry" */
+HL_PUBLIC const char *hl_expansion_type_name  (HlExpansionType type);      /* "wet", "isentropic", "dry", "none" */
 
 G_END_DECLS

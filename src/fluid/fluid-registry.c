@@ -4,6 +4,7 @@
 
 #include <string.h>
 
+#include "fluid/gas-private.h"
 #include "hl-fluid-data.h"
 
 #define RESOURCES "/local/heatloom/fluids/"
@@ -146,7 +147,7 @@ hl_fluid_load_file (const char *path, GError **error)
   if (eq == NULL)
     return NULL;
   g_autoptr (GBytes) ours = carried (eq->fluid.id);
-  if (ours != NULL || strcmp (eq->fluid.id, hl_water_if97.id) == 0)
+  if (ours != NULL || strcmp (eq->fluid.id, hl_water_if97.id) == 0 || hl_gas_lookup (eq->fluid.id, NULL) != NULL)
     {
       g_set_error (error, HL_FLUID_ERROR, HL_FLUID_ERROR_FILE, "%s: id \"%s\" belongs to a medium of the program; choose another id", where, eq->fluid.id);
       hl_helmholtz_free (eq);
@@ -172,7 +173,7 @@ compare_ids (gconstpointer a, gconstpointer b)
 /**
  * hl_fluid_list:
  *
- * Returns: (transfer full): ids of all media, water first, then by name of id; free with g_strfreev()
+ * Returns: (transfer full): ids of all media, water first, then by name of id, gases last; free with g_strfreev()
  */
 char **
 hl_fluid_list (void)
@@ -197,6 +198,7 @@ hl_fluid_list (void)
   g_mutex_unlock (&lock);
   g_ptr_array_sort (ids, compare_ids);
   g_ptr_array_insert (ids, 0, g_strdup (hl_water_if97.id));
+  hl_gas_list (ids);
   g_ptr_array_add (ids, NULL);
   return (char **) g_ptr_array_free (ids, FALSE);
 }

@@ -2,14 +2,18 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "fluid/fluid-private.h"
 
+#include <math.h>
 #include <string.h>
+
+#include "fluid/gas-private.h"
 
 static const HlFluid *const fluids[] = { &hl_water_if97 };
 
 /**
  * hl_fluid_lookup:
  * @id: short name of a fluid, such as "water" or "isopentane"; for another zero
- *   of enthalpy and entropy with "@IIR", "@NBP" or "@ASHRAE" after it
+ *   of enthalpy and entropy with "@IIR", "@NBP" or "@ASHRAE" after it; a gas by
+ *   its mole fractions, see gas.h
  *
  * The first look-up of a medium reads its coefficients and takes some milliseconds;
  * every later one finds it in a table.
@@ -19,10 +23,32 @@ static const HlFluid *const fluids[] = { &hl_water_if97 };
 const HlFluid *
 hl_fluid_lookup (const char *id)
 {
-  for (gsize i = 0; id != NULL && i < G_N_ELEMENTS (fluids); i++)
+  return id != NULL ? hl_fluid_find (id, NULL) : NULL;
+}
+
+/**
+ * hl_fluid_find:
+ * @id: as for hl_fluid_lookup()
+ * @error: says why no medium has this id, and what is known instead
+ *
+ * Returns: (nullable): the fluid; NULL with @error set
+ */
+const HlFluid *
+hl_fluid_find (const char *id, GError **error)
+{
+  g_autoptr (GError) why = NULL;
+  g_return_val_if_fail (id != NULL, NULL);
+  for (gsize i = 0; i < G_N_ELEMENTS (fluids); i++)
     if (strcmp (id, fluids[i]->id) == 0)
       return fluids[i];
-  return id != NULL ? hl_registry_lookup (id) : NULL;
+  const HlFluid *fluid = hl_gas_lookup (id, &why);
+  if (fluid == NULL && why == NULL)
+    fluid = hl_registry_lookup (id);
+  if (fluid == NULL && why != NULL)
+    g_propagate_error (error, g_steal_pointer (&why));
+  else if (fluid == NULL)
+    g_set_error (error, HL_FLUID_ERROR, HL_FLUID_ERROR_ID, "no medium has the id \"%s\"", id);
+  return fluid;
 }
 
 /**
@@ -85,6 +111,19 @@ hl_fluid_limits (const HlFluid *fluid, HlFluidLimits *limits)
 }
 
 /**
+ * hl_fluid_has_dome:
+ * @fluid: a fluid
+ *
+ * Returns: whether it has a saturation line that ends at a critical point; where
+ *   not, the critical data of its limits are NaN and saturation calls fail
+ */
+gboolean
+hl_fluid_has_dome (const HlFluid *fluid)
+{
+  return !isnan (fluid->limits.T_critical);
+}
+
+/**
  * hl_status_describe:
  * @status: a status
  *
@@ -117,6 +156,7 @@ hl_phase_name (HlPhase phase)
     case HL_PHASE_TWO_PHASE: return "two-phase";
     case HL_PHASE_VAPOUR: return "vapour";
     case HL_PHASE_SUPERCRITICAL: return "supercritical";
+    case HL_PHASE_GAS: return "gas";
     }
   return "unknown";
 }

@@ -19,6 +19,7 @@ typedef enum {
   HL_PHASE_TWO_PHASE,
   HL_PHASE_VAPOUR,          /* below the critical pressure, or below the critical temperature with p < psat */
   HL_PHASE_SUPERCRITICAL,   /* above the critical pressure and temperature */
+  HL_PHASE_GAS,             /* of a medium that has no saturation line, see hl_fluid_has_dome() */
 } HlPhase;
 
 /* A complete state.  In the two-phase region cp, cv and w are NaN, and the
@@ -49,8 +50,8 @@ typedef struct {
 
 typedef struct {
   double p_min, p_max, T_min, T_max;      /* outer box of the published range [Pa], [K]; p_min 0: every p above 0 */
-  double p_critical, T_critical, v_critical;
-  double p_triple, T_triple;
+  double p_critical, T_critical, v_critical;        /* NaN where the medium has no dome */
+  double p_triple, T_triple;                        /* the same */
   double molar_mass;                      /* [kg/mol] */
 } HlFluidLimits;
 
@@ -64,11 +65,16 @@ typedef enum {
 
 #define HL_FLUID_ERROR (hl_fluid_error_quark ())
 HL_PUBLIC GQuark hl_fluid_error_quark (void);
-typedef enum { HL_FLUID_ERROR_FILE } HlFluidError;      /* a coefficient file is not right */
+typedef enum {
+  HL_FLUID_ERROR_FILE,      /* a coefficient file is not right */
+  HL_FLUID_ERROR_ID,        /* no medium has this id */
+  HL_FLUID_ERROR_GAS,       /* a composition that is none */
+} HlFluidError;
 
 /* Fluids live as long as the program and are immutable: every call may run in any thread.
  * Out parameters are untouched on failure. */
-HL_PUBLIC const HlFluid *hl_fluid_lookup      (const char *id);         /* "water", "isopentane", "r134a@IIR"; NULL when unknown */
+HL_PUBLIC const HlFluid *hl_fluid_lookup      (const char *id);         /* "water", "r134a@IIR", "gas:N2=0.8,O2=0.2"; NULL when unknown */
+HL_PUBLIC const HlFluid *hl_fluid_find        (const char *id, GError **error);     /* the same, and why there is none */
 HL_PUBLIC const HlFluid *hl_fluid_with_reference (const HlFluid *fluid, HlReference reference);
 HL_PUBLIC const HlFluid *hl_fluid_load_file   (const char *path, GError **error);   /* the user's own coefficients */
 HL_PUBLIC char         **hl_fluid_list        (void);                   /* ids of all; free with g_strfreev() */
@@ -77,6 +83,7 @@ HL_PUBLIC const char    *hl_fluid_id          (const HlFluid *fluid);
 HL_PUBLIC const char    *hl_fluid_name        (const HlFluid *fluid);   /* English name, translatable by the caller */
 HL_PUBLIC const char    *hl_fluid_formulation (const HlFluid *fluid);   /* "IAPWS-IF97, R7-97(2012)" */
 HL_PUBLIC void           hl_fluid_limits      (const HlFluid *fluid, HlFluidLimits *limits);
+HL_PUBLIC gboolean       hl_fluid_has_dome    (const HlFluid *fluid);   /* saturation line and critical point; FALSE for ideal gases */
 
 HL_PUBLIC HlStatus hl_fluid_state_pT (const HlFluid *fluid, double p, double T, HlState *state) G_GNUC_WARN_UNUSED_RESULT;
 HL_PUBLIC HlStatus hl_fluid_state_ph (const HlFluid *fluid, double p, double h, HlState *state) G_GNUC_WARN_UNUSED_RESULT;
@@ -89,7 +96,7 @@ HL_PUBLIC HlStatus hl_fluid_saturation_p (const HlFluid *fluid, double p, HlSatu
 HL_PUBLIC HlStatus hl_fluid_saturation_T (const HlFluid *fluid, double T, HlSaturation *saturation) G_GNUC_WARN_UNUSED_RESULT;
 
 HL_PUBLIC const char *hl_status_describe (HlStatus status);
-HL_PUBLIC const char *hl_phase_name      (HlPhase phase);               /* "liquid", "two-phase", "vapour", "supercritical" */
+HL_PUBLIC const char *hl_phase_name      (HlPhase phase);               /* "liquid", "two-phase", "vapour", "supercritical", "gas" */
 
 /* A sentence that names the limit which the pair of arguments breaks, for
  * instance "1200 bar is above 1000 bar, the highest pressure of IAPWS-IF97";

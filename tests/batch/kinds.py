@@ -33,11 +33,22 @@ def test_tables_are_whole():
 def test_every_medium_is_listed_and_answers():
     out, err = batch("fluids")
     rows = re.findall(r"^\| `([^`]+)` .*\| (\S+) °C to \S+ °C \|.*\| (\S+) °C, ", out, re.MULTILINE)
-    ids = [row[0] for row in rows]
+    gases = re.findall(r"^\| `([^`]+)` .*\| has no dome \|$", out, re.MULTILINE)
+    ids = [row[0] for row in rows] + gases
+    assert gases == ["air", "flue-gas"], gases
+    for gas in gases:
+        assert "kJ/kg" in batch("state", gas, "p=1 bar", "T=150 °C")[0], gas
     assert err == "" and "water" in ids and len(ids) == len(set(ids)) == out.count("\n") - 2 > 30, ids
     for medium, coldest, critical in rows:
         middle = (float(coldest) + float(critical)) / 2
         assert "kJ/kg" in batch("state", medium, f"T={middle} °C", "x=0.5")[0], medium
+
+
+def test_a_gas_of_ones_own_answers_or_says_why():
+    out, _ = batch("state", "gas:N2=0.75,CO2=0.08,H2O=0.1,O2=0.07", "p=1 bar", "T=40 °C")
+    assert "two-phase" in out, out
+    _, err = batch("state", "gas:N2=0.8,XY=0.2", "p=1 bar", "T=40 °C", status=2)
+    assert 'species "XY" is not known; known are N2' in err, err
 
 
 def test_the_page_in_docs_is_this_one():

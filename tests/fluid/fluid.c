@@ -43,6 +43,7 @@ test_every_status_and_phase_has_words (void)
   g_assert_cmpstr (hl_phase_name (HL_PHASE_TWO_PHASE), ==, "two-phase");
   g_assert_cmpstr (hl_phase_name (HL_PHASE_VAPOUR), ==, "vapour");
   g_assert_cmpstr (hl_phase_name (HL_PHASE_SUPERCRITICAL), ==, "supercritical");
+  g_assert_cmpstr (hl_phase_name (HL_PHASE_GAS), ==, "gas");
   g_assert_cmpstr (hl_phase_name ((HlPhase) 99), ==, "unknown");
 }
 

@@ -8,15 +8,20 @@
 
 #define MAX_MEDIA 64
 
-/* All media but water by IF97; the list is g_strfreev()ed by the caller. */
+/* All media with a dome but water by IF97; the list is g_strfreev()ed by the caller. */
 static inline char **
 all_media (void)
 {
   char **ids = hl_fluid_list ();
-  guint n = g_strv_length (ids);
+  guint n = 0;
   g_assert_cmpstr (ids[0], ==, "water");
   g_free (ids[0]);
-  memmove (ids, ids + 1, n * sizeof *ids);
+  for (guint i = 1; ids[i] != NULL; i++)
+    if (hl_fluid_has_dome (hl_fluid_lookup (ids[i])))
+      ids[n++] = ids[i];
+    else
+      g_free (ids[i]);
+  ids[n] = NULL;
   return ids;
 }
 
