@@ -28,6 +28,8 @@ static GtkWidget *
 assumed_row (const HlPlant *plant, const HlAddress *address, double si)
 {
   const HlQuantityKind *kind = hl_plant_quantity_kind (plant, address);
+  const HlComponent *owner = address->owner == HL_OWNER_COMPONENT ? hl_plant_find_component (plant, address->id) : NULL;
+  const char *from = hl_component_default_source (owner, kind);
   GtkWidget *box = gtk_box_new (GTK_ORIENTATION_VERTICAL, 0), *line = gtk_box_new (GTK_ORIENTATION_HORIZONTAL, 12);
   g_autofree char *words = hl_plant_describe (plant, address);
   g_autofree char *text = hl_quantity_format (kind, si, hl_plant_units (plant));
@@ -38,11 +40,11 @@ assumed_row (const HlPlant *plant, const HlAddress *address, double si)
   gtk_box_append (GTK_BOX (line), name);
   gtk_box_append (GTK_BOX (line), value);
   gtk_box_append (GTK_BOX (box), line);
-  if (kind->default_source != NULL && *kind->default_source != '\0')
+  if (from != NULL && *from != '\0')
     {
-      GtkWidget *source = hl_pane_label (_(kind->default_source), "quiet");
+      GtkWidget *source = hl_pane_label (_(from), "quiet");
       gtk_label_set_ellipsize (GTK_LABEL (source), PANGO_ELLIPSIZE_END);
-      gtk_widget_set_tooltip_text (source, _(kind->default_source));
+      gtk_widget_set_tooltip_text (source, _(from));
       gtk_box_append (GTK_BOX (box), source);
     }
   gtk_list_box_row_set_child (GTK_LIST_BOX_ROW (row), box);

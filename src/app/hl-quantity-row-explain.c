@@ -32,7 +32,9 @@ hl_quantity_row_help (HlQuantityRow *self, const char *line_break)
 {
   const HlPlant *plant = hl_session_plant (self->session);
   const HlQuantityKind *kind = self->kind;
-  double usual = hl_quantity_default (kind, self->number);
+  const HlComponent *owner = self->address.owner == HL_OWNER_COMPONENT ? hl_plant_find_component (plant, self->address.id) : NULL;
+  double usual = hl_component_default (owner, kind, self->number);
+  const char *source = hl_component_default_source (owner, kind);
   const HlValue *value = hl_quantity_row_value (self);
   HlAddress carrier = hl_quantity_row_carrier (self);
   GString *text = g_string_new (NULL);
@@ -44,10 +46,10 @@ hl_quantity_row_help (HlQuantityRow *self, const char *line_break)
       g_autofree char *tie = hl_tie_format (plant, &carrier, value);
       append_line (text, line_break, g_strdup_printf (_("Tied: = %s"), tie));
     }
-  if (isfinite (usual) && kind->default_source != NULL && *kind->default_source != '\0')
+  if (isfinite (usual) && source != NULL && *source != '\0')
     {
       g_autofree char *number = hl_quantity_format (kind, usual, hl_plant_units (plant));
-      append_line (text, line_break, g_strdup_printf (_("Default %s: %s"), number, _(kind->default_source)));
+      append_line (text, line_break, g_strdup_printf (_("Default %s: %s"), number, _(source)));
     }
   append_range (self, text, line_break);
   g_autofree char *address = hl_address_to_text (&self->address);

@@ -16,7 +16,9 @@ origin_now (HlQuantityRow *self)
 static gboolean
 number_to_assume (HlQuantityRow *self, double *si)
 {
-  *si = hl_quantity_default (self->kind, self->number);
+  const HlPlant *plant = hl_session_plant (self->session);
+  const HlComponent *owner = self->address.owner == HL_OWNER_COMPONENT ? hl_plant_find_component (plant, self->address.id) : NULL;
+  *si = hl_component_default (owner, self->kind, self->number);
   if (isfinite (*si))
     return TRUE;
   return hl_quantity_row_number (self, si);

@@ -30,6 +30,16 @@ print_cell (const char *text)
   printf (*text != '\0' ? " " : "");
 }
 
+/* The choice that something needs to exist. */
+static char *
+choice_text (const HlKind *kind, const char *option, int choice)
+{
+  const char *const *choices = kind->options[hl_kind_find_option (kind, option)].choices;
+  if (choice < 0)
+    return g_strdup_printf (_("unless `%s` = %s"), option, choices[HL_UNLESS (choice)]);
+  return g_strdup_printf (_("with `%s` = %s"), option, choices[choice]);
+}
+
 static void
 print_ports (const HlKind *kind)
 {
@@ -43,8 +53,7 @@ print_ports (const HlKind *kind)
       if (port->repeat != NULL)
         exists = g_strdup_printf (_("N = 1 to `%s`"), port->repeat);
       else if (port->when_option != NULL)
-        exists = g_strdup_printf (_("with `%s` = %s"), port->when_option,
-                                  kind->options[hl_kind_find_option (kind, port->when_option)].choices[port->when_choice]);
+        exists = choice_text (kind, port->when_option, port->when_choice);
       g_autofree char *cell = g_strjoin (exists != NULL && port->is_optional ? ", " : "", exists != NULL ? exists : "",
                                          port->is_optional ? _("may stay open") : "", NULL);
       print_key (port->key);
@@ -76,9 +85,31 @@ print_options (const HlKind *kind)
     }
 }
 
+/* Defaults that follow an option: one after the other, each with its choice. */
 static char *
-default_text (const HlQuantityKind *quantity)
+choice_defaults_text (const HlKind *kind, const HlQuantityKind *quantity)
 {
+  const HlOptionKind *option = &kind->options[hl_kind_find_option (kind, quantity->default_option)];
+  GString *text = g_string_new (NULL);
+  for (int k = 0; k <= option->most; k++)
+    {
+      const HlChoiceDefault *chosen = &quantity->choice_defaults[k];
+      if (chosen->source == NULL)
+        continue;
+      g_autofree char *value = hl_quantity_format (quantity, chosen->value, HL_UNITS_METRIC);
+      g_string_append_printf (text, "; %s: %s (%s)", option->choices[k], value, _(chosen->source));
+    }
+  return g_string_free (text, FALSE);
+}
+
+static char *
+default_text (const HlKind *kind, const HlQuantityKind *quantity)
+{
+  if (kind != NULL && quantity->default_option != NULL)
+    {
+      g_autofree char *first = default_text (NULL, quantity), *others = choice_defaults_text (kind, quantity);
+      return g_strconcat (first, others, NULL);
+    }
   if (!isfinite (quantity->default_value))
     return g_strdup ("");
   g_autofree char *value = hl_quantity_format (quantity, quantity->default_value, HL_UNITS_METRIC);
@@ -122,8 +153,7 @@ meaning_text (const HlKind *kind, const HlQuantityKind *quantity)
   else if (quantity->repeat != NULL)
     exists = g_strdup_printf (_("N = 1 to `%s`"), quantity->repeat);
   else if (quantity->when_option != NULL)
-    exists = g_strdup_printf (_("with `%s` = %s"), quantity->when_option,
-                              kind->options[hl_kind_find_option (kind, quantity->when_option)].choices[quantity->when_choice]);
+    exists = choice_text (kind, quantity->when_option, quantity->when_choice);
   const char *help = quantity->help != NULL && *quantity->help != '\0' ? _(quantity->help) : "";
   return g_strjoin (exists != NULL && *help != '\0' ? ": " : "", exists != NULL ? exists : "", help, NULL);
 }
@@ -138,7 +168,7 @@ print_quantities (const HlKind *kind, const HlQuantityKind *quantities, guint n)
   for (guint i = 0; i < n; i++)
     {
       const HlQuantityKind *quantity = &quantities[i];
-      g_autofree char *role = role_text (quantity), *initial = default_text (quantity);
+      g_autofree char *role = role_text (quantity), *initial = default_text (kind, quantity);
       g_autofree char *range = range_text (quantity), *meaning = meaning_text (kind, quantity);
       print_key (quantity->key);
       print_cell (_(quantity->name));

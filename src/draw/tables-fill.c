@@ -151,8 +151,10 @@ number_of (const HlPlant *plant, const HlAddress *address)
 static char *
 source_of (const HlPlant *plant, const Held *held, const HlQuantityKind *kind, HlUnitSet units)
 {
-  double usual = hl_quantity_default (kind, number_of (plant, &held->address));
-  gboolean has_source = kind->default_source != NULL && *kind->default_source != '\0';
+  const HlComponent *owner = held->address.owner == HL_OWNER_COMPONENT ? hl_plant_find_component (plant, held->address.id) : NULL;
+  double usual = hl_component_default (owner, kind, number_of (plant, &held->address));
+  const char *source = hl_component_default_source (owner, kind);
+  gboolean has_source = source != NULL && *source != '\0';
   g_autofree char *usual_text = NULL, *tie = NULL;
   switch (held->value.origin)
     {
@@ -169,9 +171,9 @@ source_of (const HlPlant *plant, const Held *held, const HlQuantityKind *kind, H
   if (!has_source)
     return g_strdup (_("assumed, no source"));
   if (!isfinite (usual) || fabs (held->value.value - usual) <= 1e-9 * fabs (usual))
-    return g_strdup (_(kind->default_source));
+    return g_strdup (_(source));
   usual_text = hl_quantity_format (kind, usual, units);
-  return g_strdup_printf (_("assumed for this plant; usual is %s: %s"), usual_text, _(kind->default_source));
+  return g_strdup_printf (_("assumed for this plant; usual is %s: %s"), usual_text, _(source));
 }
 
 HlTable *

@@ -388,7 +388,8 @@ consider (Missing *missing, HlAddress address, const HlQuantityKind *kind, int n
   int root = would_settle (missing, &address);
   if (root < 0)
     return;
-  Candidate c = { address, root, missing->group_of[root], bonus, hl_quantity_default (kind, number) };
+  const HlComponent *owner = address.owner == HL_OWNER_COMPONENT ? hl_plant_find_component (missing->model->plant, address.id) : NULL;
+  Candidate c = { address, root, missing->group_of[root], bonus, hl_component_default (owner, kind, number) };
   if (kind->flags & HL_QUANTITY_USUAL)
     c.score += 100.0;
   if (kind->flags & HL_QUANTITY_ASSUMED)

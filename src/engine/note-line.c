@@ -61,8 +61,10 @@ hl_note_origin (const HlSolution *solution, int root, HlOrigin *origin)
           return g_strdup_printf (_("tied: =%s"), tie);
         }
       const HlQuantityKind *kind = hl_plant_quantity_kind (solution->plant, &spec->address);
-      if (spec->origin == HL_ORIGIN_ASSUMED && kind != NULL && kind->default_source != NULL)
-        return g_strdup_printf (_("assumed; %s"), _(kind->default_source));
+      const HlComponent *owner = spec->address.owner == HL_OWNER_COMPONENT ? hl_plant_find_component (solution->plant, spec->address.id) : NULL;
+      const char *source = kind != NULL ? hl_component_default_source (owner, kind) : NULL;
+      if (spec->origin == HL_ORIGIN_ASSUMED && source != NULL)
+        return g_strdup_printf (_("assumed; %s"), _(source));
       return g_strdup (hl_origin_name (spec->origin));
     }
   *origin = HL_ORIGIN_FOUND;

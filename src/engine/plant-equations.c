@@ -86,13 +86,9 @@ fuel_heat_hhv (HlEmit *emit)
   g_autoptr (GArray) parts = g_array_new (FALSE, FALSE, sizeof (int));
   for (int c = 0; c < n_components; c++)
     {
-      int heat = hl_model_own_var (model, c, "fuel_heat"), ratio = hl_model_own_var (model, c, "fuel_hhv_ratio");
-      if (heat < 0 || ratio < 0)
-        continue;
-      HlEmit boiler = { emit->model, emit->system, hl_plant_component (model->plant, (guint) c), c };
-      int part = hl_emit_hidden (&boiler, "fuel_heat_hhv", HL_VAR_POWER);
-      hl_emit_done (emit, hl_add_product (emit->system, heat, ratio, part), NULL, 2);
-      g_array_append_val (parts, part);
+      int part = hl_model_own_var (model, c, "fuel_heat_hhv");
+      if (part >= 0)
+        g_array_append_val (parts, part);
     }
   if (parts->len == 0)
     return -1;
@@ -132,6 +128,8 @@ hl_emit_plant (HlModel *model)
   int heat = total (emit, "heat_input", HL_VAR_POWER, HL_SUM_HEAT_INPUT);
   int fuel = total (emit, "fuel_heat", HL_VAR_POWER, HL_SUM_FUEL_HEAT);
   total (emit, "fuel_flow", HL_VAR_FLOW, HL_SUM_FUEL_FLOW);
+  int co2 = total (emit, "co2_flow", HL_VAR_FLOW, HL_SUM_CO2);
+  total (emit, "biogenic_co2_flow", HL_VAR_FLOW, HL_SUM_BIOGENIC_CO2);
   int delivered = total (emit, "heat_delivered", HL_VAR_POWER, HL_SUM_DELIVERED);
   total (emit, "heat_rejected", HL_VAR_POWER, HL_SUM_REJECTED);
   int basis = fuel >= 0 ? fuel : heat;
@@ -158,6 +156,7 @@ hl_emit_plant (HlModel *model)
   quotient (emit, "net_efficiency_hhv", HL_VAR_RATIO, net, fuel_heat_hhv (emit));
   if (net >= 0 && basis >= 0 && delivered >= 0)
     quotient (emit, "utilisation", HL_VAR_RATIO, sum_of_two (emit, "useful", FALSE, net, delivered), basis);
+  quotient (emit, "specific_co2", HL_VAR_STEAM_RATE, co2, net);
   quotient (emit, "heat_rate", HL_VAR_HEAT_RATE, heat, gross);
   if (gross >= 0 && model->sums[HL_SUM_LIVE_STEAM]->len > 0)
     quotient (emit, "steam_rate", HL_VAR_STEAM_RATE, total (emit, "live_steam", HL_VAR_FLOW, HL_SUM_LIVE_STEAM), gross);

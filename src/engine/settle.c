@@ -280,7 +280,7 @@ bring_back_one (Settle *settle)
         {
           HlQuantity quantity = hl_component_quantity (component, k);
           consider (settle, candidates, hl_address_component (component->id, quantity.key), quantity.kind,
-                    hl_quantity_default (quantity.kind, quantity.number), edited, distance);
+                    hl_component_default (component, quantity.kind, quantity.number), edited, distance);
         }
     }
   const HlQuantityKind *kinds = hl_plant_quantities (&n);

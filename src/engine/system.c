@@ -268,6 +268,7 @@ hl_var_kind_of (HlDimension dimension)
     case HL_DIMENSION_POWER: return HL_VAR_POWER;
     case HL_DIMENSION_CONDUCTANCE: return HL_VAR_CONDUCTANCE;
     case HL_DIMENSION_HEAT_RATE: return HL_VAR_HEAT_RATE;
+    case HL_DIMENSION_EMISSION:
     case HL_DIMENSION_STEAM_RATE: return HL_VAR_STEAM_RATE;
     default: return HL_VAR_RATIO;
     }

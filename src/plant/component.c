@@ -79,10 +79,37 @@ hl_component_new_bare (const HlKind *kind, const char *id, int x, int y)
   return component;
 }
 
+static const HlChoiceDefault *
+chosen_default (const HlComponent *component, const HlQuantityKind *quantity)
+{
+  if (component == NULL || quantity->default_option == NULL)
+    return NULL;
+  const HlChoiceDefault *chosen = &quantity->choice_defaults[hl_component_option (component, quantity->default_option)];
+  return chosen->source != NULL ? chosen : NULL;
+}
+
+double
+hl_component_default (const HlComponent *component, const HlQuantityKind *quantity, int number)
+{
+  const HlChoiceDefault *chosen;
+  g_return_val_if_fail (quantity != NULL, NAN);
+  chosen = chosen_default (component, quantity);
+  return chosen != NULL ? chosen->value : hl_quantity_default (quantity, number);
+}
+
+const char *
+hl_component_default_source (const HlComponent *component, const HlQuantityKind *quantity)
+{
+  const HlChoiceDefault *chosen;
+  g_return_val_if_fail (quantity != NULL, NULL);
+  chosen = chosen_default (component, quantity);
+  return chosen != NULL ? chosen->source : quantity->default_source;
+}
+
 static void
 assume_default (HlComponent *component, const HlQuantity *quantity)
 {
-  HlValue value = { .origin = HL_ORIGIN_ASSUMED, .value = hl_quantity_default (quantity->kind, quantity->number) };
+  HlValue value = { .origin = HL_ORIGIN_ASSUMED, .value = hl_component_default (component, quantity->kind, quantity->number) };
   if ((quantity->kind->flags & HL_QUANTITY_ASSUMED) && !isnan (value.value))
     hl_values_set (&component->values, quantity->key, &value);
 }
@@ -159,12 +186,13 @@ hl_component_set_option (HlComponent *component, const char *key, int value)
 {
   g_autoptr (GHashTable) before = NULL;
   gboolean had_values;
-  int index;
+  int index, old_value;
   g_return_if_fail (component != NULL && key != NULL);
   index = hl_kind_find_option (component->kind, key);
   g_return_if_fail (index >= 0);
   had_values = component->values.n > 0;
   before = existing_keys (component);
+  old_value = component->options[index];
   component->options[index] = CLAMP (value, component->kind->options[index].least, component->kind->options[index].most);
   for (guint i = component->values.n; i-- > 0;)
     if (hl_component_quantity_kind (component, component->values.entries[i].key) == NULL)
@@ -172,7 +200,18 @@ hl_component_set_option (HlComponent *component, const char *key, int value)
   for (guint i = 0; had_values && i < hl_component_n_quantities (component); i++)
     {
       HlQuantity quantity = hl_component_quantity (component, i);
-      if (!g_hash_table_contains (before, quantity.key))
+      if (quantity.kind->found_option != NULL && g_str_equal (quantity.kind->found_option, key))
+        {
+          gboolean is_found = value == quantity.kind->found_choice;
+          if (is_found)
+            hl_values_set (&component->values, quantity.key, NULL);
+          else if (old_value == quantity.kind->found_choice && hl_values_find (&component->values, quantity.key) == NULL)
+            assume_default (component, &quantity);
+        }
+      const HlValue *now = hl_values_find (&component->values, quantity.key);
+      gboolean follows = quantity.kind->default_option != NULL && g_str_equal (quantity.kind->default_option, key)
+                         && now != NULL && now->origin == HL_ORIGIN_ASSUMED;
+      if (!g_hash_table_contains (before, quantity.key) || follows)
         assume_default (component, &quantity);
     }
 }
@@ -198,8 +237,12 @@ hl_component_option (const HlComponent *component, const char *key)
 static int
 occurrences (const HlComponent *component, const char *repeat, int extra, const char *when_option, int when_choice)
 {
-  if (when_option != NULL && hl_component_option (component, when_option) != when_choice)
-    return 0;
+  if (when_option != NULL)
+    {
+      int choice = hl_component_option (component, when_option);
+      if (when_choice >= 0 ? choice != when_choice : choice == HL_UNLESS (when_choice))
+        return 0;
+    }
   return repeat != NULL ? hl_component_option (component, repeat) + extra : 1;
 }
 

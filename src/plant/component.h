@@ -47,9 +47,13 @@ HL_PUBLIC HlComponent *hl_component_ref   (HlComponent *component);
 HL_PUBLIC void         hl_component_unref (HlComponent *component);
 HL_PUBLIC void         hl_component_set_name   (HlComponent *component, const char *name);
 HL_PUBLIC void         hl_component_set_option (HlComponent *component, const char *key, int value);  /* clamps; drops values of vanished keys; keys
-                                                                     that appear get their assumed default, unless the component has no value at all */
+                                                                     that appear, and assumed values whose default follows the option, get
+                                                                     their assumed default, unless the component has no value at all */
 HL_PUBLIC void         hl_component_set_value  (HlComponent *component, const char *key, const HlValue *value);  /* NULL: let it be found */
 HL_PUBLIC int          hl_component_option     (const HlComponent *component, const char *key);       /* 0 when it has none */
+/* Default of a quantity [SI] and where it comes from, with the choices of the component put in; a @component of NULL has none. */
+HL_PUBLIC double       hl_component_default        (const HlComponent *component, const HlQuantityKind *quantity, int number);
+HL_PUBLIC const char  *hl_component_default_source (const HlComponent *component, const HlQuantityKind *quantity);   /* untranslated; NULL */
 
 /* Ports and quantities with the counts of this component put in. */
 typedef struct {

@@ -31,7 +31,7 @@ typedef struct {
   gboolean         is_optional;        /* may stay unconnected */
   const char      *repeat;             /* key of the count option, or NULL */
   const char      *when_option;        /* the port exists only when this choice option ... */
-  int              when_choice;        /* ... has this value; when_option NULL: always */
+  int              when_choice;        /* ... has this value, or HL_UNLESS (value); when_option NULL: always */
   HlAnchor         anchor;             /* edges move with the width, see widen_option */
   int              step_x;             /* of a repeated port: each number lies this much further right */
   const HlPortPlace *places;           /* of a repeated port: place of each number from 1, instead of x, y, side; or NULL */
@@ -43,6 +43,9 @@ typedef enum {
   HL_QUANTITY_RESULT  = 1 << 2,        /* shown as a result; may still be given */
   HL_QUANTITY_PERCENT = 1 << 3,        /* a ratio that people read in percent: see hl_quantity_format() */
 } HlQuantityFlags;
+
+/* A default that depends on a choice: a fuel's heating value.  Source NULL: the row's own default holds. */
+typedef struct { double value; const char *source; } HlChoiceDefault;
 
 typedef struct {
   const char      *key;                /* "isentropic_efficiency", "exhaust.p", "extraction#.p", "group_efficiency#" */
@@ -60,9 +63,16 @@ typedef struct {
   const char      *repeat;             /* key of the count option, or NULL */
   int              repeat_extra;       /* repeated count + this many times (groups = extractions + 1) */
   const char      *when_option;        /* exists only when this choice option ... */
-  int              when_choice;        /* ... has this value */
+  int              when_choice;        /* ... has this value, or HL_UNLESS (value) */
   const double    *numbered_defaults;  /* of a repeated quantity: defaults of numbers 1 to most [SI], instead of default_value; or NULL */
+  const char      *default_option;     /* the default follows this choice option; or NULL */
+  const HlChoiceDefault *choice_defaults;  /* by choice of default_option */
+  const char      *found_option;       /* a choice that lets it follow from others: taking it drops the value; or NULL */
+  int              found_choice;
 } HlQuantityKind;
+
+/* In when_choice: every choice but this one. */
+#define HL_UNLESS(choice) (-1 - (choice))
 
 /* Lower limit of a quantity that may be zero but not negative: the limit itself is excluded. */
 #define HL_FROM_ZERO (-G_MINDOUBLE)

@@ -102,6 +102,8 @@ static const HlUnit units[] = {
 
   PLAIN ("kg/kWh", STEAM_RATE, 1.0 / KWH), PLAIN ("lb/kWh", STEAM_RATE, LB / KWH), PLAIN ("t/MWh", STEAM_RATE, 1.0 / KWH),
   PLAIN ("kg/J", STEAM_RATE, 1.0), PLAIN ("kg/MWh", STEAM_RATE, 1e-3 / KWH), PLAIN ("kg/MJ", STEAM_RATE, 1e-6),
+  PLAIN ("kg/GJ", STEAM_RATE, 1e-9), PLAIN ("g/kWh", STEAM_RATE, 1e-3 / KWH), PLAIN ("lb/MMBtu", STEAM_RATE, LB / (1e6 * BTU)),
+  PLAIN ("lb/MWh", STEAM_RATE, LB / (1e3 * KWH)), PLAIN ("t/TJ", STEAM_RATE, 1e-9),
 
   PLAIN ("m3/h", VOLUME_FLOW, 1.0 / HOUR), PLAIN ("m3/s", VOLUME_FLOW, 1.0), PLAIN ("ft3/min", VOLUME_FLOW, FT * FT * FT / 60.0),
   PLAIN ("ft3/s", VOLUME_FLOW, FT * FT * FT), PLAIN ("gpm", VOLUME_FLOW, GALLON / 60.0), PLAIN ("l/s", VOLUME_FLOW, 1e-3),
@@ -256,6 +258,8 @@ hl_unit_dimension (HlDimension dimension)
       return HL_DIMENSION_PRESSURE;
     case HL_DIMENSION_TEMPERATURE_DIFFERENCE:
       return HL_DIMENSION_TEMPERATURE;
+    case HL_DIMENSION_EMISSION:
+      return HL_DIMENSION_STEAM_RATE;
     default:
       return dimension;
     }

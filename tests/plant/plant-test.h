@@ -10,7 +10,7 @@
   "{\"heatloom\": 1, \"title\": \"Loop “A”\", \"units\": \"metric\", \"formulation\": \"if97\",\n" \
   " \"site\": {\"altitude\": 60, \"ambient_T\": 288.15, \"wet_bulb_T\": 285.15, \"dead_T\": 298.15, \"dead_p\": 101325, \"wind\": \"west\"},\n" \
   " \"components\": [\n" \
-  "  {\"id\": \"B1\", \"kind\": \"boiler\", \"name\": \"boiler\", \"at\": [8, 12], \"reheats\": 0, \"given\": {\"steam.T\": 758.15}, \"assumed\": {\"efficiency\": 0.9}},\n" \
+  "  {\"id\": \"B1\", \"kind\": \"boiler\", \"name\": \"boiler\", \"at\": [8, 12], \"reheats\": 0, \"fuel\": \"not named\", \"efficiency_by\": \"given\", \"blowdown\": \"none\", \"given\": {\"steam.T\": 758.15}, \"assumed\": {\"efficiency\": 0.9}},\n" \
   "  {\"id\": \"T1\", \"kind\": \"turbine\", \"at\": [20, 8], \"turn\": 1, \"mirror\": true, \"extractions\": 1, \"expansion\": \"straight line\", \"wetness\": \"none\", \"leaving_loss\": \"none\", \"given\": {\"exhaust.p\": 7000, \"inlet.p\": 6500000}, \"assumed\": {\"isentropic_efficiency\": 0.83}, \"tied\": {\"extraction1.p\": \"0.05*B1.steam.p+20000\"}, \"maker\": {\"name\": \"unknown\", \"years\": [1, 2.5]}},\n" \
   "  {\"id\": \"G1\", \"kind\": \"generator\", \"at\": [26, 8]},\n" \
   "  {\"id\": \"C1\", \"kind\": \"condenser\", \"at\": [24, 18], \"cooling\": \"none\"},\n" \

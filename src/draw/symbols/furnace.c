@@ -39,6 +39,12 @@ hl_symbol_draw_furnace (const HlPen *pen, void (*draw_source) (const HlPen *pen)
   hl_pen_box (pen, -HALF_WIDTH, -HALF_HEIGHT, 2 * HALF_WIDTH, 2 * HALF_HEIGHT, 0.25);
   hl_pen_body (pen);
   draw_main_coil (pen, n_reheats);
+  if (hl_component_option (pen->component, "blowdown") != 0)
+    {
+      static const double blowdown[][2] = { { -HALF_WIDTH, 2.0 }, { -0.95, 2.0 } };
+      hl_pen_path (pen, blowdown, G_N_ELEMENTS (blowdown));
+      hl_pen_stroke (pen, &pen->theme->ink, 0.5);
+    }
   if (n_reheats >= 1)
     draw_reheater (pen, 1.0);
   if (n_reheats >= 2)

@@ -21,12 +21,37 @@ heated_pass (HlEmit *emit, const char *in_key, const char *out_key, const char *
   return heat;
 }
 
+/* Feed to steam and, a part of it, to saturated water at the pressure of the drum, which is let off. */
+static int
+pass_with_blowdown (HlEmit *emit)
+{
+  HlSystem *system = emit->system;
+  int feed = hl_emit_port (emit, "feed"), steam = hl_emit_port (emit, "steam"), water = hl_emit_port (emit, "blowdown");
+  int loss = hl_emit_own (emit, "pressure_loss", HL_VAR_RATIO), drum_loss = hl_emit_own (emit, "economiser_pressure_loss", HL_VAR_RATIO);
+  int share = hl_emit_own (emit, "blowdown_fraction", HL_VAR_RATIO), heat = hl_emit_own (emit, "main_heat", HL_VAR_POWER);
+  int none = hl_emit_constant (emit, HL_VAR_TEMPERATURE_DIFFERENCE, 0.0);
+  hl_emit_guess (emit, steam, 3.3e6);
+  const HlNode *f = NODE (emit, feed), *s = NODE (emit, steam);
+  HlNode *b = NODE (emit, water);
+  b->subcooling = none;
+  hl_emit_balance (emit, &f->m, 1, (const int[]) { s->m, b->m }, 2);
+  hl_emit_done (emit, hl_add_product (system, f->m, share, b->m), NULL, 2);
+  hl_emit_done (emit, hl_add_pressure_loss (system, f->p, s->p, loss), NULL, -1);
+  hl_emit_done (emit, hl_add_pressure_loss (system, f->p, b->p, drum_loss), NULL, -1);
+  hl_emit_done (emit, hl_add_liquid (system, b->fluid, b->p, none, b->h), N_("{2} = h′({0})"), -1);
+  const int pairs[] = { s->m, s->h, b->m, b->h, f->m, f->h };
+  hl_emit_done (emit, hl_add_energy (system, HL_VAR_POWER, pairs, (const double[]) { 1.0, 1.0, -1.0 }, 3, &heat, (const double[]) { -1.0 }, 1),
+                N_("{6} = {0} × {1} + {2} × {3} − {4} × {5}"), 6);
+  return heat;
+}
+
 int
 hl_heat_source_emit (HlEmit *emit)
 {
   int n_reheats = hl_component_option (emit->component, "reheats"), vars[16], n = 0;
   double factors[16];
-  vars[n] = heated_pass (emit, "feed", "steam", "pressure_loss", "main_heat");
+  vars[n] = hl_component_option (emit->component, "blowdown") != 0 ? pass_with_blowdown (emit)
+                                                                   : heated_pass (emit, "feed", "steam", "pressure_loss", "main_heat");
   factors[n++] = 1.0;
   for (int k = 1; k <= n_reheats && n < 15; k++)
     {
@@ -125,7 +150,18 @@ hl_heat_source_check (HlChecker *checker)
 void
 hl_heat_source_processes (HlProcessSink *sink)
 {
-  hl_process_add (sink, HL_PROCESS_HEATING, hl_process_node (sink, "feed"), hl_process_node (sink, "steam"));
+  int feed = hl_process_node (sink, "feed"), steam = hl_process_node (sink, "steam"), water = hl_process_node (sink, "blowdown");
+  hl_process_add (sink, HL_PROCESS_HEATING, feed, steam);
+  if (water >= 0 && steam >= 0 && sink->states[feed].has_state)
+    {
+      /* The way of the steam carries the steam alone, that of the blowdown what is let off. */
+      guint n = sink->out->len;
+      if (n > 0)
+        g_array_index (sink->out, HlProcess, n - 1).m = sink->states[steam].m;
+      hl_process_add (sink, HL_PROCESS_HEATING, feed, water);
+      if (sink->out->len > n)
+        g_array_index (sink->out, HlProcess, n).m = sink->states[water].m;
+    }
   for (int k = 1; k <= hl_component_option (sink->component, "reheats"); k++)
     hl_process_add (sink, HL_PROCESS_HEATING, hl_process_node (sink, hl_key ("cold_reheat", k)), hl_process_node (sink, hl_key ("hot_reheat", k)));
 }

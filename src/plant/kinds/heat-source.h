@@ -9,14 +9,13 @@
 static const HlPortPlace cold_reheat_places[] = { { 3, 1, HL_SIDE_RIGHT }, { -3, 1, HL_SIDE_LEFT } };
 static const HlPortPlace hot_reheat_places[] = { { 3, -1, HL_SIDE_RIGHT }, { -3, -1, HL_SIDE_LEFT } };
 
-static const HlPortKind heat_source_ports[] = {
-  { .key = "feed", .name = N_("feed inlet"), .direction = HL_PORT_IN, .side = HL_SIDE_DOWN, .x = 0, .y = 3 },
-  { .key = "steam", .name = N_("steam outlet"), .direction = HL_PORT_OUT, .side = HL_SIDE_UP, .x = 0, .y = -3 },
-  { .key = "cold_reheat#", .name = N_("cold reheat inlet"), .direction = HL_PORT_IN, .side = HL_SIDE_RIGHT, .x = 3, .y = 1,
-    .side_circuit = 1, .repeat = "reheats", .places = cold_reheat_places },
-  { .key = "hot_reheat#", .name = N_("hot reheat outlet"), .direction = HL_PORT_OUT, .side = HL_SIDE_RIGHT, .x = 3, .y = -1,
-    .side_circuit = 1, .repeat = "reheats", .places = hot_reheat_places },
-};
+#define HEAT_SOURCE_PORTS \
+  { .key = "feed", .name = N_("feed inlet"), .direction = HL_PORT_IN, .side = HL_SIDE_DOWN, .x = 0, .y = 3 }, \
+  { .key = "steam", .name = N_("steam outlet"), .direction = HL_PORT_OUT, .side = HL_SIDE_UP, .x = 0, .y = -3 }, \
+  { .key = "cold_reheat#", .name = N_("cold reheat inlet"), .direction = HL_PORT_IN, .side = HL_SIDE_RIGHT, .x = 3, .y = 1, \
+    .side_circuit = 1, .repeat = "reheats", .places = cold_reheat_places }, \
+  { .key = "hot_reheat#", .name = N_("hot reheat outlet"), .direction = HL_PORT_OUT, .side = HL_SIDE_RIGHT, .x = 3, .y = -1, \
+    .side_circuit = 1, .repeat = "reheats", .places = hot_reheat_places }
 
 #define STEAM_ROWS \
   { .key = "steam.T", .sign = "T", .name = N_("Steam temperature"), .group = N_("Steam"), \

@@ -2,6 +2,8 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "plant/kinds/heat-source.h"
 
+static const HlPortKind ports[] = { HEAT_SOURCE_PORTS };
+
 static const HlOptionKind options[] = { REHEAT_OPTION };
 
 static const HlQuantityKind quantities[] = {
@@ -19,5 +21,5 @@ const HlKind hl_kind_heat_input = {
   .id = "heat_input", .letter = "Q", .name = N_("Heat input"), .shelf_name = N_("heat input"), .shelf_group = N_("Heat"),
   .help = N_("Heats the working fluid to a given outlet temperature, or by a given amount of heat, without saying what the heat comes from."),
   .half_width = 3, .half_height = 3,
-  .ports = ROWS (heat_source_ports), .options = ROWS (options), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .options = ROWS (options), .quantities = ROWS (quantities),
 };
