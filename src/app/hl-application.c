@@ -55,6 +55,7 @@ hl_application_activate (GApplication *application)
     {
       g_autoptr (HlSession) session = demo_session ();
       present = GTK_WINDOW (hl_window_new (GTK_APPLICATION (application), session));
+      hl_window_show_demo_hint (HL_WINDOW (present));
       gtk_window_present (present);
       hl_window_offer_recovery (HL_WINDOW (present));
     }

@@ -58,25 +58,38 @@ drop_motion_cb (GtkDropTarget *target, double vx, double vy, HlCanvas *self)
 }
 
 static void
-drop_leave_cb (GtkDropTarget *target, HlCanvas *self)
+forget_drop (HlCanvas *self)
 {
   self->drop_kind = NULL;
   self->drop_stream = -1;
   gtk_widget_queue_draw (GTK_WIDGET (self));
 }
 
+static void
+drop_leave_cb (GtkDropTarget *target, HlCanvas *self)
+{
+  forget_drop (self);
+}
+
 static gboolean
 drop_cb (GtkDropTarget *target, const GValue *value, double vx, double vy, HlCanvas *self)
 {
   const HlKind *kind = dropped_kind (value);
-  int gx, gy, stream;
   if (kind == NULL)
     return FALSE;
+  hl_canvas_put (self, kind, vx, vy);
+  return TRUE;
+}
+
+void
+hl_canvas_put (HlCanvas *self, const HlKind *kind, double vx, double vy)
+{
+  int gx, gy, stream;
   aim_drop (self, kind, vx, vy);
   stream = self->drop_stream;
   gx = self->drop_x;
   gy = self->drop_y;
-  drop_leave_cb (target, self);
+  forget_drop (self);
   self->is_fitted = FALSE;     /* the view stays where the hand is */
   gtk_widget_grab_focus (GTK_WIDGET (self));
   if (stream >= 0)
@@ -84,7 +97,57 @@ drop_cb (GtkDropTarget *target, const GValue *value, double vx, double vy, HlCan
                                 hl_plant_stream (hl_canvas_plant (self), (guint) stream)->id, gx, gy, self->drop_turn);
   else
     gtk_widget_activate_action (GTK_WIDGET (self), "win.add-component-at", "(sii)", kind->id, gx, gy);
-  return TRUE;
+}
+
+/* --- through what lies over the canvas ------------------------------------------------- */
+
+static gboolean
+place_below (GtkDropTarget *target, double x, double y, HlCanvas *self, graphene_point_t *place)
+{
+  GtkWidget *cover = gtk_event_controller_get_widget (GTK_EVENT_CONTROLLER (target));
+  return gtk_widget_compute_point (cover, GTK_WIDGET (self), &GRAPHENE_POINT_INIT ((float) x, (float) y), place);
+}
+
+static void
+set_clear (GtkDropTarget *target, gboolean is_clear)
+{
+  gtk_widget_set_opacity (gtk_event_controller_get_widget (GTK_EVENT_CONTROLLER (target)), is_clear ? 0.2 : 1.0);
+}
+
+static GdkDragAction
+motion_through_cb (GtkDropTarget *target, double x, double y, HlCanvas *self)
+{
+  graphene_point_t place;
+  if (!place_below (target, x, y, self, &place))
+    return 0;
+  set_clear (target, TRUE);
+  return drop_motion_cb (target, place.x, place.y, self);
+}
+
+static void
+leave_through_cb (GtkDropTarget *target, HlCanvas *self)
+{
+  set_clear (target, FALSE);
+  forget_drop (self);
+}
+
+static gboolean
+drop_through_cb (GtkDropTarget *target, const GValue *value, double x, double y, HlCanvas *self)
+{
+  graphene_point_t place;
+  set_clear (target, FALSE);
+  return place_below (target, x, y, self, &place) && drop_cb (target, value, place.x, place.y, self);
+}
+
+void
+hl_canvas_drop_through (HlCanvas *self, GtkWidget *cover)
+{
+  GtkDropTarget *target = gtk_drop_target_new (G_TYPE_STRING, GDK_ACTION_COPY);
+  gtk_drop_target_set_preload (target, TRUE);
+  g_signal_connect (target, "motion", G_CALLBACK (motion_through_cb), self);
+  g_signal_connect (target, "leave", G_CALLBACK (leave_through_cb), self);
+  g_signal_connect (target, "drop", G_CALLBACK (drop_through_cb), self);
+  gtk_widget_add_controller (cover, GTK_EVENT_CONTROLLER (target));
 }
 
 void

@@ -461,6 +461,7 @@ hl_canvas_add_gestures (HlCanvas *self)
   add_drags (self);
   hl_canvas_add_drop_target (self);
   hl_canvas_add_menu (self);
+  hl_canvas_add_quick_add (self);
   g_signal_connect (scroll, "scroll", G_CALLBACK (scroll_cb), self);
   gtk_widget_add_controller (GTK_WIDGET (self), scroll);
   g_signal_connect (motion, "motion", G_CALLBACK (motion_cb), self);

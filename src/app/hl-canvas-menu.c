@@ -52,6 +52,7 @@ context_menu (HlCanvas *self)
   g_menu_append_section (menu, NULL, G_MENU_MODEL (section));
   g_object_unref (section);
   section = g_menu_new ();
+  g_menu_append (section, _("Add a component …"), "win.quick-add");
   g_menu_append (section, _("Paste"), "win.paste");
   g_menu_append (section, _("Select everything"), "win.select-all");
   g_menu_append (section, _("Show the whole plant"), "win.zoom-fit");

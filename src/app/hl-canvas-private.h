@@ -91,7 +91,9 @@ int      hl_canvas_label_at     (HlCanvas *self, double vx, double vy);         
 
 /* hl-canvas-drop.c, hl-canvas-menu.c */
 void     hl_canvas_add_drop_target (HlCanvas *self);
+void     hl_canvas_put          (HlCanvas *self, const HlKind *kind, double vx, double vy);   /* a new component there, into a line where one runs */
 void     hl_canvas_add_menu     (HlCanvas *self);
+void     hl_canvas_add_quick_add (HlCanvas *self);                                            /* hl-canvas-quick-add.c */
 
 int      hl_canvas_stream_at   (HlCanvas *self, double vx, double vy);                        /* line or label; -1: none */
 int      hl_canvas_snap_to_line (const HlStreamPlace *place, int *gx, int *gy);               /* onto its nearest segment; which way that runs: 0 right, 1 down ... */

@@ -14,6 +14,8 @@ void       hl_canvas_fit            (HlCanvas *self);                         /*
 void       hl_canvas_middle         (HlCanvas *self, int *x, int *y);         /* of the view, in grid units */
 void       hl_canvas_reveal         (HlCanvas *self, const char *id);         /* scrolls so far that the component is seen */
 void       hl_canvas_ask_connection (HlCanvas *self, const char *id);         /* list of ports to connect, by keyboard */
+void       hl_canvas_quick_add      (HlCanvas *self);                         /* asks for a kind by its name, for the place under the pointer */
+void       hl_canvas_drop_through   (HlCanvas *self, GtkWidget *cover);       /* what is dropped on @cover, which lies over the canvas, lands on it */
 gboolean   hl_canvas_cancel         (HlCanvas *self);                         /* ends a gesture in progress; FALSE: there was none */
 /* Where a component or one of its ports lies in the widget, for tests that point there. */
 gboolean   hl_canvas_locate         (HlCanvas *self, const char *id, const char *port, double *x, double *y);

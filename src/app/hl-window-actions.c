@@ -133,6 +133,12 @@ insert_component_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
     }
 }
 
+static void
+quick_add_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  hl_canvas_quick_add (HL_WINDOW (data)->canvas);
+}
+
 static guint
 n_selected_components (HlWindow *self)
 {
@@ -521,6 +527,7 @@ static const GActionEntry entries[] = {
   { "distribute", distribute_cb, "s" },
   { "undo", undo_cb },
   { "redo", redo_cb },
+  { "quick-add", quick_add_cb },
   { "add-component", add_component_cb, "s" },
   { "add-component-at", add_component_at_cb, "(sii)" },
   { "insert-component", insert_component_cb, "(ssiii)" },

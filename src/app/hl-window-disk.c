@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-window-private.h"
 #include "app/hl-notice.h"
+#include "app/hl-settings.h"
 #include "plant/i18n.h"
 #include <glib/gstdio.h>
 
@@ -92,6 +93,22 @@ file_changed_cb (HlWindow *self)
   hl_window_know_file (self);
 }
 
+/* --- the first hint --------------------------------------------------------------------- */
+
+static void
+no_demo_hint_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  hl_settings_set_bool ("demo-hint", FALSE);
+}
+
+void
+hl_window_show_demo_hint (HlWindow *self)
+{
+  const HlNoticeButton buttons[] = { { _("New plant"), "win.new" }, { _("Do not say this again"), "win.no-demo-hint" }, { NULL, NULL } };
+  if (hl_settings_get_bool ("demo-hint", TRUE))
+    hl_notice_show (self->notice_bin, _("A demo plant: change any value at the right, and everything follows. Your own work begins with a new plant."), buttons);
+}
+
 /* --- back to the file --------------------------------------------------------------- */
 
 static void
@@ -162,7 +179,7 @@ hl_window_recent_paths (guint most)
 void
 hl_window_watch_disk (HlWindow *self)
 {
-  static const GActionEntry entries[] = { { "revert", revert_cb } };
+  static const GActionEntry entries[] = { { "revert", revert_cb }, { "no-demo-hint", no_demo_hint_cb } };
   GtkDropTarget *target = gtk_drop_target_new (GDK_TYPE_FILE_LIST, GDK_ACTION_COPY);
   g_signal_connect (target, "drop", G_CALLBACK (drop_cb), self);
   gtk_widget_add_controller (GTK_WIDGET (self), GTK_EVENT_CONTROLLER (target));

@@ -5,6 +5,7 @@
 #include "app/hl-confirm.h"
 #include "app/hl-settings.h"
 #include "plant/i18n.h"
+#include "plant/template.h"
 
 typedef void (*Then) (HlWindow *self, gpointer data);
 
@@ -247,6 +248,26 @@ new_now (HlWindow *self, gpointer data)
   hl_canvas_fit (self->canvas);
 }
 
+/* On an empty sheet, as a step that can be undone. */
+static void
+start_template_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  const HlTemplate *template;
+  const char *id;
+  int heaters;
+  g_variant_get (parameter, "(&si)", &id, &heaters);
+  template = hl_template_lookup (id);
+  if (template != NULL && hl_plant_n_components (hl_session_plant (self->session)) == 0)
+    {
+      g_autoptr (HlPlant) plant = hl_template_build (template, heaters);
+      g_autofree char *name = g_strdup_printf (_("Start from “%s”"), _(template->name));
+      hl_session_apply (self->session, name, hl_plant_with_units (plant, hl_plant_units (hl_session_plant (self->session))), NULL, FALSE);
+      hl_canvas_fit (self->canvas);
+      gtk_widget_grab_focus (GTK_WIDGET (self->canvas));
+    }
+}
+
 static void
 open_chosen_cb (const char *path, gpointer data)
 {
@@ -319,6 +340,7 @@ hl_window_add_file_actions (HlWindow *self)
     { "open-path", open_path_cb, "s" },
     { "open-demo", open_demo_cb, "s" },
     { "new", new_cb },
+    { "start-template", start_template_cb, "(si)" },
     { "save", save_cb },
     { "save-as", save_as_cb },
     { "save-to", save_to_cb, "s" },

@@ -1,7 +1,7 @@
 /* Menus of the header bar, and the window of shortcuts.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-window-private.h"
-#include "app/hl-settings.h"
+#include "app/hl-demos.h"
 #include "plant/i18n.h"
 
 static void
@@ -28,34 +28,15 @@ append_section (GMenu *menu, const char *heading)
   return section;
 }
 
-static int
-compare_names (gconstpointer a, gconstpointer b)
-{
-  return g_strcmp0 (*(char *const *) a, *(char *const *) b);
-}
-
 /* Every plant in the examples folder, by its title. */
 static void
 append_demos (GMenu *menu)
 {
-  g_autofree char *folder = g_build_filename (hl_data_folder (), "examples", NULL);
-  g_autoptr (GPtrArray) names = g_ptr_array_new_with_free_func (g_free);
-  GDir *dir = g_dir_open (folder, 0, NULL);
-  const char *name;
-  if (dir == NULL)
-    return;
-  while ((name = g_dir_read_name (dir)) != NULL)
-    if (g_str_has_suffix (name, ".heatloom"))
-      g_ptr_array_add (names, g_strdup (name));
-  g_dir_close (dir);
-  g_ptr_array_sort (names, compare_names);
-  for (guint n = 0; n < names->len; n++)
+  g_autoptr (GPtrArray) demos = hl_demos_list ();
+  for (guint n = 0; n < demos->len; n++)
     {
-      const char *file = g_ptr_array_index (names, n);
-      g_autofree char *path = g_build_filename (folder, file, NULL);
-      g_autoptr (HlPlant) plant = hl_plant_load (path, NULL);
-      if (plant != NULL)
-        append_choice (menu, *hl_plant_title (plant) != '\0' ? hl_plant_title (plant) : file, "win.open-demo", file);
+      const HlDemo *demo = g_ptr_array_index (demos, n);
+      append_choice (menu, demo->title, "win.open-demo", demo->file);
     }
 }
 
@@ -123,6 +104,7 @@ main_menu (void)
 
 typedef struct { const char *title, *keys; } Shortcut;    /* keys: accelerators parted by spaces */
 static const Shortcut canvas_keys[] = {
+  { N_("Add a component by its name"), "slash Insert" },
   { N_("Connect the selected component"), "c" },
   { N_("Turn a quarter"), "r" },
   { N_("Mirror"), "m" },
@@ -160,6 +142,7 @@ static const char *const mouse_words[][2] = {
   { N_("Pan"), N_("middle button, or space and drag") },
   { N_("Zoom"), N_("Ctrl and wheel") },
   { N_("Add to the selection"), N_("Shift and click") },
+  { N_("Add a component by its name"), N_("double click on the sheet or a line") },
 };
 
 static GtkWidget *

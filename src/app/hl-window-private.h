@@ -14,6 +14,7 @@ struct _HlWindow {
   HlAutosave *autosave;
   HlFileWatch *watch;
   char      *known_path;       /* whose content the watch knows */
+  GtkWidget *start;            /* over an empty sheet; made when one is first shown */
   gboolean   may_close;        /* the question about unsaved work has been answered */
   gboolean   is_wide;          /* there is room for the glance card */
   guint      fold_source;      /* idle that shows or hides it */
@@ -28,7 +29,6 @@ struct _HlWindow {
   GtkWidget     *dirty_dot;
   GtkPaned      *outer, *work;
   GtkWidget     *shelf_bin, *canvas_bin, *strip_bin, *nameplate_bin;
-  GtkWidget     *empty_hint;
   GtkBox        *notice_bin;
   GtkLabel      *zoom_label;
   GtkBox        *diagram_area;

@@ -11,6 +11,7 @@
 #include "app/hl-quantity-row.h"
 #include "app/hl-settings.h"
 #include "app/hl-shelf.h"
+#include "app/hl-start.h"
 #include "app/hl-status-strip.h"
 #include "app/hl-trace.h"
 #include "plant/i18n.h"
@@ -96,10 +97,23 @@ file_changed_cb (HlWindow *self)
 }
 
 static void
-changed_cb (HlWindow *self)
+update_start (HlWindow *self)
 {
   gboolean is_empty = hl_plant_n_components (hl_session_plant (self->session)) == 0;
-  gtk_widget_set_visible (self->empty_hint, is_empty);
+  if (is_empty && self->start == NULL)
+    {
+      self->start = hl_start_new ();
+      hl_canvas_drop_through (self->canvas, self->start);
+      gtk_overlay_add_overlay (GTK_OVERLAY (self->canvas_bin), self->start);
+    }
+  if (self->start != NULL)
+    gtk_widget_set_visible (self->start, is_empty);
+}
+
+static void
+changed_cb (HlWindow *self)
+{
+  update_start (self);
   hl_window_update_actions (self);
   trace_later (self);
 }
@@ -428,7 +442,7 @@ hl_window_class_init (HlWindowClass *class)
 #define CHILD(field) { #field, G_STRUCT_OFFSET (HlWindow, field) }
     CHILD (open_button), CHILD (menu_button), CHILD (undo_button), CHILD (redo_button), CHILD (export_button),
     CHILD (title_label), CHILD (subtitle_label), CHILD (dirty_dot), CHILD (outer), CHILD (work), CHILD (shelf_bin),
-    CHILD (canvas_bin), CHILD (strip_bin), CHILD (nameplate_bin), CHILD (empty_hint), CHILD (notice_bin), CHILD (zoom_label),
+    CHILD (canvas_bin), CHILD (strip_bin), CHILD (nameplate_bin), CHILD (notice_bin), CHILD (zoom_label),
     CHILD (diagram_area), CHILD (stack), CHILD (glance_bin),
 #undef CHILD
   };

@@ -14,6 +14,8 @@ gboolean   hl_window_open_path (HlWindow *self, const char *path);
 gboolean   hl_window_open_demo (HlWindow *self, const char *path);
 /* An empty plant in the unit set that was chosen last. */
 HlPlant   *hl_window_new_plant (void);
+/* Says over a demo plant what to do with it, until told not to. */
+void       hl_window_show_demo_hint (HlWindow *self);
 /* Asks whether to take up work on this plant that a crash has left behind, if there is any. */
 void       hl_window_offer_recovery (HlWindow *self);
 G_END_DECLS

@@ -98,10 +98,17 @@ draw_loop (HlWindow *window)
   act (window, "join-shaft", "(ss)", "T1", "G1");
 }
 
+static inline const char *
+words_of (GtkWidget *button)
+{
+  GtkWidget *child = gtk_button_get_child (GTK_BUTTON (button));
+  return GTK_IS_LABEL (child) ? gtk_label_get_text (GTK_LABEL (child)) : NULL;
+}
+
 static inline GtkWidget *
 find_button (GtkWidget *root, const char *label)
 {
-  if (GTK_IS_BUTTON (root) && g_strcmp0 (gtk_button_get_label (GTK_BUTTON (root)), label) == 0)
+  if (GTK_IS_BUTTON (root) && g_strcmp0 (words_of (root), label) == 0)
     return root;
   for (GtkWidget *child = gtk_widget_get_first_child (root); child != NULL; child = gtk_widget_get_next_sibling (child))
     {

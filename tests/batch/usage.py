@@ -2,7 +2,7 @@
 # SPDX-License-Identifier: GPL-3.0-or-later
 from tap import batch, main, refused
 
-COMMANDS = ("solve", "check", "note", "state", "kinds", "fluids")
+COMMANDS = ("solve", "check", "note", "state", "kinds", "fluids", "template")
 
 
 def test_help_names_the_commands_and_the_caution():
@@ -62,6 +62,18 @@ def test_values_of_options():
     refused("solve", "x", "--diagram", "pv", "a.svg", status=2, says=["pv", "ts, hs and ph"])
     refused("solve", "x", "--heat", "C1", "a.jpeg", status=2, says=["a.jpeg", "svg"])
     refused("solve", "x", "--drawing", "a.jpeg", status=2, says=["a.jpeg", "svg"])
+
+
+def test_templates_are_files_that_solve():
+    out, _ = batch("template")
+    assert "back-pressure" in out and "Heaters: 1 to 8." in out, out
+    plant, err = batch("template", "reheat", "--heaters", "5")
+    assert err == "" and plant.count('"kind": "closed_heater"') == 4
+    solved, _ = batch("solve", "-", stdin=plant)
+    assert "Net power" in solved, solved
+    refused("template", "nothing", status=2, says="no template")
+    refused("template", "reheat", "--heaters", "9", status=2, says="from 1 to 8")
+    refused("template", "simple", "--heaters", "2", status=2, says="no choice")
 
 
 def test_options_may_carry_their_value():
