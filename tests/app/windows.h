@@ -140,6 +140,35 @@ answer (HlWindow *window, const char *label)
   g_error ("no dialog with a button “%s”", label);
 }
 
+static inline GtkEventController *
+primary_drag (HlCanvas *canvas)
+{
+  g_autoptr (GListModel) controllers = gtk_widget_observe_controllers (GTK_WIDGET (canvas));
+  for (guint n = 0; n < g_list_model_get_n_items (controllers); n++)
+    {
+      g_autoptr (GtkEventController) controller = g_list_model_get_item (controllers, n);
+      if (g_strcmp0 (gtk_event_controller_get_name (controller), "primary-drag") == 0)
+        return controller;
+    }
+  g_assert_not_reached ();
+}
+
+static inline void
+drag (HlCanvas *canvas, double x, double y, double to_x, double to_y)
+{
+  GtkEventController *gesture = primary_drag (canvas);
+  g_signal_emit_by_name (gesture, "drag-begin", x, y);
+  for (int n = 1; n <= 10; n++)
+    g_signal_emit_by_name (gesture, "drag-update", (to_x - x) * n / 10, (to_y - y) * n / 10);
+  g_signal_emit_by_name (gesture, "drag-end", to_x - x, to_y - y);
+}
+
+static inline void
+locate (HlCanvas *canvas, const char *id, const char *port, double *x, double *y)
+{
+  g_assert_true (hl_canvas_locate (canvas, id, port, x, y));
+}
+
 /* Begins a test program, or ends it at once where there is no display. */
 static inline gboolean
 windows_init (int *argc, char ***argv)
