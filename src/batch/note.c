@@ -64,9 +64,10 @@ static HlExit
 run_note (const HlArguments *arguments)
 {
   g_autoptr (GError) error = NULL;
-  g_autoptr (HlPlant) plant = hl_input_plant (hl_arguments_word (arguments, 0), &error);
+  HlExit failure;
+  g_autoptr (HlPlant) plant = hl_input_plant (arguments, &failure, &error);
   if (plant == NULL)
-    return hl_complain (HL_EXIT_FILE, g_steal_pointer (&error));
+    return hl_complain (failure, g_steal_pointer (&error));
   g_autoptr (GArray) yielded = g_array_new (FALSE, FALSE, sizeof (HlYield));
   if (!hl_input_values (&plant, arguments, yielded, &error))
     return hl_complain (HL_EXIT_USAGE, g_steal_pointer (&error));
@@ -81,6 +82,7 @@ run_note (const HlArguments *arguments)
 }
 
 static const HlBatchOption note_options[] = {
+  { "variant", N_("NAME"), FALSE, N_("take this variant of the plant instead of its base") },
   { "set", N_("ADDRESS=VALUE"), TRUE, N_("give a value, as 'T1.inlet.p=80 bar'; may be repeated") },
   { "json", N_("FILE"), FALSE, N_("write the note as JSON instead of text, in SI") },
 };

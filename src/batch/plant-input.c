@@ -7,11 +7,11 @@
 
 #define LONGEST_INPUT (17u << 20)
 
-HlPlant *
-hl_input_plant (const char *path, GError **error)
+HlDocument *
+hl_input_document (const char *path, GError **error)
 {
   if (strcmp (path, "-") != 0)
-    return hl_plant_load (path, error);
+    return hl_document_load (path, error);
 
   g_autoptr(GString) text = g_string_new (NULL);
   char block[65536];
@@ -24,7 +24,49 @@ hl_input_plant (const char *path, GError **error)
       g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_CONTENT, _("standard input could not be read to the end"));
       return NULL;
     }
-  return hl_plant_from_json (text->str, (gssize) text->len, _("standard input"), error);
+  return hl_document_from_json (text->str, (gssize) text->len, _("standard input"), error);
+}
+
+gboolean
+hl_input_variant (const HlDocument *document, const HlArguments *arguments, const char *option, int *variant, GError **error)
+{
+  const char *name = hl_arguments_value (arguments, option);
+  g_autoptr(GString) names = g_string_new (NULL);
+  *variant = HL_DOCUMENT_BASE;
+  if (name == NULL)
+    return TRUE;
+  *variant = hl_document_find_variant (document, name);
+  if (*variant != HL_DOCUMENT_BASE)
+    return TRUE;
+  for (guint i = 0; i < hl_document_n_variants (document); i++)
+    g_string_append_printf (names, "%s“%s”", i > 0 ? ", " : "", hl_document_variant_name (document, (int) i));
+  if (names->len > 0)
+    g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("--%s: this plant has no variant “%s”; it has %s"), option, name, names->str);
+  else
+    g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("--%s: this plant has no variants, so none is called “%s”"), option, name);
+  return FALSE;
+}
+
+HlPlant *
+hl_input_plant (const HlArguments *arguments, HlExit *failure, GError **error)
+{
+  g_autoptr(HlDocument) document = hl_input_document (hl_arguments_word (arguments, 0), error);
+  int variant;
+  *failure = HL_EXIT_FILE;
+  if (document == NULL)
+    return NULL;
+  *failure = HL_EXIT_USAGE;
+  if (!hl_input_variant (document, arguments, "variant", &variant, error))
+    return NULL;
+  const GPtrArray *unapplied = hl_document_unapplied (document, variant);
+  for (guint i = 0; i < unapplied->len; i++)
+    {
+      const HlUnapplied *left_out = unapplied->pdata[i];
+      g_autofree char *text = g_strdup_printf (_("%s: the change of %s does not apply: %s"), hl_document_variant_name (document, variant),
+                                               hl_change_where (left_out->change), left_out->why);
+      fprintf (stderr, "heatloom-batch: %s\n", text);
+    }
+  return hl_plant_ref (hl_document_plant (document, variant));
 }
 
 /* One --set, as if typed in the window: the value is given, and an assumed one may yield to it. */

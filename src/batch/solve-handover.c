@@ -37,6 +37,8 @@ read_fields (const HlArguments *arguments, HlSheetFields *fields, GPtrArray *tex
       *field = g_strdup (equals + 1);
       g_ptr_array_add (texts, (char *) *field);
     }
+  if (fields->variant == NULL)
+    fields->variant = hl_arguments_value (arguments, "variant");
   return TRUE;
 }
 

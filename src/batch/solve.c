@@ -62,9 +62,10 @@ run_solve (const HlArguments *arguments)
   g_autoptr(GError) error = NULL;
   if (!check_usage (arguments, &error))
     return hl_complain (HL_EXIT_USAGE, g_steal_pointer (&error));
-  g_autoptr(HlPlant) plant = hl_input_plant (hl_arguments_word (arguments, 0), &error);
+  HlExit failure;
+  g_autoptr(HlPlant) plant = hl_input_plant (arguments, &failure, &error);
   if (plant == NULL)
-    return hl_complain (HL_EXIT_FILE, g_steal_pointer (&error));
+    return hl_complain (failure, g_steal_pointer (&error));
   g_autoptr(GArray) yielded = g_array_new (FALSE, FALSE, sizeof (HlYield));
   if (!hl_check_pictures (plant, arguments, &error) || !hl_input_values (&plant, arguments, yielded, &error))
     return hl_complain (HL_EXIT_USAGE, g_steal_pointer (&error));
@@ -98,9 +99,10 @@ static HlExit
 run_check (const HlArguments *arguments)
 {
   g_autoptr(GError) error = NULL;
-  g_autoptr(HlPlant) plant = hl_input_plant (hl_arguments_word (arguments, 0), &error);
+  HlExit failure;
+  g_autoptr(HlPlant) plant = hl_input_plant (arguments, &failure, &error);
   if (plant == NULL)
-    return hl_complain (HL_EXIT_FILE, g_steal_pointer (&error));
+    return hl_complain (failure, g_steal_pointer (&error));
   g_autoptr(HlSolution) solution = hl_solve (plant, NULL);
   hl_print_findings (stdout, solution, HL_GRADE_HINT);
   if (hl_solution_n_findings (solution) == 0)
@@ -112,6 +114,7 @@ run_check (const HlArguments *arguments)
 
 static const HlBatchOption solve_options[] = {
   { "sensitivity", N_("ADDRESS"), FALSE, N_("print how this result moves with 1 % more of each value put in") },
+  { "variant", N_("NAME"), FALSE, N_("take this variant of the plant instead of its base") },
   { "set", N_("ADDRESS=VALUE"), TRUE, N_("give a value, as 'T1.inlet.p=80 bar'; may be repeated") },
   { "json", N_("FILE"), FALSE, N_("write results, streams and findings as JSON, in SI") },
   { "csv", N_("FILE"), FALSE, N_("write the ledger of all streams as CSV, in the plant's units") },
@@ -142,12 +145,13 @@ const HlBatchCommand hl_command_solve = {
 };
 
 static const HlBatchOption check_options[] = {
+  { "variant", N_("NAME"), FALSE, N_("take this variant of the plant instead of its base") },
   { "strict", NULL, FALSE, N_("a warning counts as an error") },
 };
 
 const HlBatchCommand hl_command_check = {
   .name = "check",
-  .usage = N_("PLANT [--strict]"),
+  .usage = N_("PLANT [options]"),
   .summary = N_("print what is missing, contradictory or against good practice"),
   .details = N_("The exit status is 1 where a finding is an error.\n"),
   .least = 1, .most = 1,

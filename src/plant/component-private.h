@@ -17,6 +17,7 @@ gboolean hl_key_matches        (const char *pattern, int most, const char *key, 
 void     hl_values_set         (HlValues *values, const char *key, const HlValue *value);   /* NULL: removes */
 void     hl_values_copy        (HlValues *to, const HlValues *from);
 void     hl_values_clear       (HlValues *values);
+gboolean hl_value_equal         (const HlValue *a, const HlValue *b);
 gboolean hl_values_equal       (const HlValues *a, const HlValues *b);
 
 HlShaft *hl_shaft_copy_without (const HlShaft *shaft, const char *id);

@@ -33,6 +33,15 @@ gboolean    hl_reader_boolean     (HlReader *reader, JsonObject *object, const c
 gboolean    hl_reader_point       (HlReader *reader, JsonObject *object, const char *key, HlGridPoint *point);
 gboolean    hl_reader_node_to_point (JsonNode *node, HlGridPoint *point);
 
+/* plant-json-read.c */
+typedef gboolean (*HlReadMore) (HlReader *reader, JsonObject *top, gpointer data);     /* FALSE: refused, with the error set */
+HlPlant    *hl_plant_read           (const char *text, gssize length, const char *name, HlReadMore more, gpointer data, GError **error);
+GByteArray *hl_plant_load_text      (const char *path, char **name, GError **error);   /* with a 0 behind its end */
+HlPlant    *hl_plant_with_json_item (const HlPlant *plant, JsonObject *object, GError **error);   /* a component, stream or shaft */
+gboolean    hl_reader_option        (HlReader *reader, JsonObject *object, HlComponent *component, guint n);
+gboolean    hl_reader_route         (HlReader *reader, JsonObject *object, HlStream *stream);      /* no bends where none are told */
+gboolean    hl_reader_label         (HlReader *reader, JsonObject *object, HlStream *stream);
+
 /* What is not in @known, nor an option of @kind (nullable), to be written back; NULL: nothing. */
 JsonObject *hl_reader_unknown     (JsonObject *object, const char *const *known, const HlKind *kind);
 G_END_DECLS

@@ -288,7 +288,7 @@ read_array (Reader *reader, JsonNode **node, const char *top_key)
       {
         JsonNode *item = NULL;
         skip_space (reader);
-        if (top_key != NULL)
+        if (top_key != NULL && reader->places != NULL)
           note_line (reader, top_key);
         if (!read_value (reader, &item, NULL))
           return FALSE;
@@ -382,7 +382,7 @@ hl_json_parse (const char *text, gsize length, const char *name, HlJsonPlaces *p
 guint
 hl_json_line (const HlJsonPlaces *places, const char *list, guint item)
 {
-  const GArray *lines = g_hash_table_lookup (places->lines, list);
+  const GArray *lines = places->lines != NULL ? g_hash_table_lookup (places->lines, list) : NULL;
   return lines != NULL && item < lines->len ? g_array_index (lines, guint, item) : 0;
 }
 

@@ -366,7 +366,7 @@ hl_plant_free_id (const HlPlant *plant, const char *letter)
   for (guint n = 1;; n++)
     {
       g_autofree char *id = g_strdup_printf ("%s%u", letter, n);
-      if (!id_is_taken (plant, id))
+      if (!id_is_taken (plant, id) && (plant->reserved == NULL || !g_hash_table_contains (plant->reserved, g_intern_string (id))))
         return g_steal_pointer (&id);
     }
 }

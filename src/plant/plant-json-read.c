@@ -35,8 +35,8 @@ read_id (HlReader *reader, JsonObject *object, gboolean is_stream, GHashTable *i
   return TRUE;
 }
 
-static gboolean
-read_option (HlReader *reader, JsonObject *object, HlComponent *component, guint n)
+gboolean
+hl_reader_option (HlReader *reader, JsonObject *object, HlComponent *component, guint n)
 {
   const HlOptionKind *option = &component->kind->options[n];
   const char *word = NULL;
@@ -95,7 +95,7 @@ read_component (HlReader *reader, JsonObject *object, GHashTable *ids)
   component->x = at.x;
   component->y = at.y;
   for (guint i = 0; i < kind->n_options; i++)
-    if (!read_option (reader, object, component, i))
+    if (!hl_reader_option (reader, object, component, i))
       return FALSE;
   component->extra = hl_reader_unknown (object, known, kind);
   g_ptr_array_add (reader->plant->components, g_steal_pointer (&component));
@@ -133,23 +133,28 @@ take_port (HlReader *reader, const char *key, GHashTable *taken, const char *id,
   return TRUE;
 }
 
-static gboolean
-read_route (HlReader *reader, JsonObject *object, HlStream *stream)
+gboolean
+hl_reader_route (HlReader *reader, JsonObject *object, HlStream *stream)
 {
   JsonArray *points = NULL;
-  HlGridPoint label;
   if (!hl_reader_list (reader, object, "route", MAX_ROUTE, &points))
     return FALSE;
+  g_free (stream->route);
   stream->n_route = points != NULL ? json_array_get_length (points) : 0;
   stream->route = g_new0 (HlGridPoint, stream->n_route);
   for (guint i = 0; i < stream->n_route; i++)
     if (!hl_reader_node_to_point (json_array_get_element (points, i), &stream->route[i]))
       return hl_reader_refuse (reader, "route", _("must be a list of bends, each [x, y] in grid units"));
-  stream->has_label_place = json_object_has_member (object, "label");
-  if (!stream->has_label_place)
-    return TRUE;
+  return TRUE;
+}
+
+gboolean
+hl_reader_label (HlReader *reader, JsonObject *object, HlStream *stream)
+{
+  HlGridPoint label = { stream->label_x, stream->label_y };
   if (!hl_reader_point (reader, object, "label", &label))
     return FALSE;
+  stream->has_label_place = json_object_has_member (object, "label");
   stream->label_x = label.x;
   stream->label_y = label.y;
   return TRUE;
@@ -175,7 +180,7 @@ read_stream (HlReader *reader, JsonObject *object, GHashTable *ids, GHashTable *
     return hl_reader_refuse (reader, "medium", _("“%s” is not a medium known here; heatloom-batch fluids lists them"), medium);
   stream = hl_stream_new (reader->id, from_id, from_port, to_id, to_port);
   stream->medium = g_intern_string (medium);
-  if (!read_route (reader, object, stream))
+  if (!hl_reader_route (reader, object, stream) || !hl_reader_label (reader, object, stream))
     return FALSE;
   stream->extra = hl_reader_unknown (object, known, NULL);
   g_ptr_array_add (reader->plant->streams, g_steal_pointer (&stream));
@@ -416,12 +421,11 @@ read_site (HlReader *reader, JsonObject *top)
   if (object == NULL)
     return TRUE;
   reader->plant->site_extra = hl_reader_unknown (object, known, NULL);
-  /* ISO 2533's troposphere ends at 11 km; the other limits keep to the surface of the Earth. */
-  return read_site_number (reader, object, "altitude", -1000.0, 11000.0, &site->altitude)
-         && read_site_number (reader, object, "ambient_T", 173.15, 373.15, &site->ambient_T)
-         && read_site_number (reader, object, "wet_bulb_T", 173.15, 373.15, &site->wet_bulb_T)
-         && read_site_number (reader, object, "dead_T", 173.15, 373.15, &site->dead_T)
-         && read_site_number (reader, object, "dead_p", 1e3, 1e7, &site->dead_p);
+  return read_site_number (reader, object, "altitude", HL_SITE_LEAST_ALTITUDE, HL_SITE_MOST_ALTITUDE, &site->altitude)
+         && read_site_number (reader, object, "ambient_T", HL_SITE_LEAST_T, HL_SITE_MOST_T, &site->ambient_T)
+         && read_site_number (reader, object, "wet_bulb_T", HL_SITE_LEAST_T, HL_SITE_MOST_T, &site->wet_bulb_T)
+         && read_site_number (reader, object, "dead_T", HL_SITE_LEAST_T, HL_SITE_MOST_T, &site->dead_T)
+         && read_site_number (reader, object, "dead_p", HL_SITE_LEAST_P, HL_SITE_MOST_P, &site->dead_p);
 }
 
 static gboolean
@@ -476,7 +480,7 @@ read_top (HlReader *reader, JsonObject *top)
 }
 
 HlPlant *
-hl_plant_from_json (const char *text, gssize length, const char *name, GError **error)
+hl_plant_read (const char *text, gssize length, const char *name, HlReadMore more, gpointer data, GError **error)
 {
   g_autoptr (HlPlant) plant = NULL;
   g_autoptr (GHashTable) lines = NULL;
@@ -505,9 +509,67 @@ hl_plant_from_json (const char *text, gssize length, const char *name, GError **
       hl_reader_refuse_as (&reader, HL_PLANT_ERROR_FOREIGN, NULL, _("this is JSON, but no Heatloom plant: it must be an object in { }"));
       return NULL;
     }
-  if (!read_top (&reader, json_node_get_object (root)))
+  if (!read_top (&reader, json_node_get_object (root)) || (more != NULL && !more (&reader, json_node_get_object (root), data)))
     return NULL;
   return g_steal_pointer (&plant);
+}
+
+HlPlant *
+hl_plant_from_json (const char *text, gssize length, const char *name, GError **error)
+{
+  return hl_plant_read (text, length, name, NULL, NULL, error);
+}
+
+/* Every id of the plant with the list it stands in, as read_id() keeps them. */
+static GHashTable *
+ids_of (const HlPlant *plant)
+{
+  GHashTable *ids = g_hash_table_new (g_str_hash, g_str_equal);
+  for (guint i = 0; i < plant->components->len; i++)
+    g_hash_table_insert (ids, (gpointer) hl_plant_component (plant, i)->id, (gpointer) "components");
+  for (guint i = 0; i < plant->streams->len; i++)
+    g_hash_table_insert (ids, (gpointer) hl_plant_stream (plant, i)->id, (gpointer) "streams");
+  for (guint i = 0; i < plant->shafts->len; i++)
+    g_hash_table_insert (ids, (gpointer) hl_plant_shaft (plant, i)->id, (gpointer) "shafts");
+  return ids;
+}
+
+/* One item more, as it would stand in its list; the reader works on a copy that is thrown away where it refuses. */
+HlPlant *
+hl_plant_with_json_item (const HlPlant *plant, JsonObject *object, GError **error)
+{
+  g_autoptr (HlPlant) edited = hl_plant_share (plant);
+  g_autoptr (GHashTable) ids = ids_of (plant), taken = g_hash_table_new_full (g_str_hash, g_str_equal, NULL, NULL);
+  HlReader reader = { .plant = edited, .places = { .name = json_object_get_string_member_with_default (object, "id", "add") }, .error = error };
+  Target target = { 0 };
+  if (json_object_has_member (object, "joins"))
+    {
+      hl_plant_own_shafts (edited);
+      for (guint i = 0; i < edited->shafts->len; i++)
+        for (guint j = 0; j < hl_plant_shaft (edited, i)->n_joins; j++)
+          g_hash_table_insert (taken, (gpointer) hl_plant_shaft (edited, i)->joins[j], (gpointer) hl_plant_shaft (edited, i)->id);
+      if (!read_shaft (&reader, object, ids, taken))
+        return NULL;
+      hl_plant_index (edited);
+      return g_steal_pointer (&edited);
+    }
+  if (json_object_has_member (object, "from"))
+    {
+      g_autoptr (GHashTable) ports = g_hash_table_new_full (g_str_hash, g_str_equal, g_free, NULL);
+      hl_plant_own_streams (edited);
+      if (!read_stream (&reader, object, ids, ports))
+        return NULL;
+      target = (Target) { HL_OWNER_STREAM, reader.id, &((HlStream *) edited->streams->pdata[edited->streams->len - 1])->values };
+    }
+  else
+    {
+      hl_plant_own_components (edited);
+      if (!read_component (&reader, object, ids))
+        return NULL;
+      target = (Target) { HL_OWNER_COMPONENT, reader.id, &((HlComponent *) edited->components->pdata[edited->components->len - 1])->values };
+    }
+  hl_plant_index (edited);
+  return read_values (&reader, object, "", &target) ? g_steal_pointer (&edited) : NULL;
 }
 
 /* A size of 0 may be a device or a pipe without an end: what is read stays within bounds all the same. */
@@ -530,15 +592,15 @@ read_within_bounds (GFile *file, GError **error)
   return g_steal_pointer (&bytes);
 }
 
-HlPlant *
-hl_plant_load (const char *path, GError **error)
+/* The bytes of a plant file; @name: (out) what messages call it. */
+GByteArray *
+hl_plant_load_text (const char *path, char **name_out, GError **error)
 {
   g_autofree char *name = NULL;
   g_autoptr (GByteArray) text = NULL;
   g_autoptr (GError) local = NULL;
   g_autoptr (GFile) file = NULL;
   g_autoptr (GFileInfo) info = NULL;
-  g_return_val_if_fail (path != NULL, NULL);
   name = g_path_get_basename (path);
   file = g_file_new_for_path (path);
   info = g_file_query_info (file, G_FILE_ATTRIBUTE_STANDARD_SIZE "," G_FILE_ATTRIBUTE_STANDARD_TYPE, G_FILE_QUERY_INFO_NONE, NULL, &local);
@@ -557,5 +619,17 @@ hl_plant_load (const char *path, GError **error)
       g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_FILE, _("%s could not be read: %s"), path, local->message);
       return NULL;
     }
-  return hl_plant_from_json (text->len > 0 ? (const char *) text->data : "", text->len, name, error);
+  g_byte_array_append (text, (const guint8 *) "", 1);
+  *name_out = g_steal_pointer (&name);
+  return g_steal_pointer (&text);
+}
+
+HlPlant *
+hl_plant_load (const char *path, GError **error)
+{
+  g_autofree char *name = NULL;
+  g_autoptr (GByteArray) text = NULL;
+  g_return_val_if_fail (path != NULL, NULL);
+  text = hl_plant_load_text (path, &name, error);
+  return text != NULL ? hl_plant_from_json ((const char *) text->data, text->len - 1, name, error) : NULL;
 }

@@ -85,8 +85,8 @@ extra_members (GString *out, JsonObject *extra)
     }
 }
 
-static void
-write_component (GString *out, const HlComponent *component)
+void
+hl_json_append_component (GString *out, const HlComponent *component)
 {
   g_string_append_c (out, '{');
   string_member (out, "id", component->id);
@@ -121,8 +121,8 @@ write_component (GString *out, const HlComponent *component)
   g_string_append_c (out, '}');
 }
 
-static void
-write_stream (GString *out, const HlStream *stream)
+void
+hl_json_append_stream (GString *out, const HlStream *stream)
 {
   g_autofree char *from = g_strdup_printf ("%s.%s", stream->from_id, stream->from_port);
   g_autofree char *to = g_strdup_printf ("%s.%s", stream->to_id, stream->to_port);
@@ -149,8 +149,8 @@ write_stream (GString *out, const HlStream *stream)
   g_string_append_c (out, '}');
 }
 
-static void
-write_shaft (GString *out, const HlShaft *shaft)
+void
+hl_json_append_shaft (GString *out, const HlShaft *shaft)
 {
   g_string_append_c (out, '{');
   string_member (out, "id", shaft->id);
@@ -228,41 +228,46 @@ write_top_extra (GString *out, JsonObject *extra)
     }
 }
 
-char *
-hl_plant_to_json (const HlPlant *plant)
+void
+hl_json_append_plant (GString *out, const HlPlant *plant)
 {
-  GString *out;
-  g_return_val_if_fail (plant != NULL, NULL);
-  out = g_string_new ("{\"heatloom\": 1");
+  g_string_append (out, "{\"heatloom\": 1");
   string_member (out, "title", plant->title);
   string_member (out, "units", hl_unit_set_id (plant->units));
   string_member (out, "formulation", plant->formulation);
   write_site (out, plant);
-  write_list (out, "components", plant->components, (WriteItem) write_component);
-  write_list (out, "streams", plant->streams, (WriteItem) write_stream);
-  write_list (out, "shafts", plant->shafts, (WriteItem) write_shaft);
+  write_list (out, "components", plant->components, (WriteItem) hl_json_append_component);
+  write_list (out, "streams", plant->streams, (WriteItem) hl_json_append_stream);
+  write_list (out, "shafts", plant->shafts, (WriteItem) hl_json_append_shaft);
   g_string_append (out, ",\n \"plant\": {");
   values_members (out, &plant->values);
   extra_members (out, plant->plant_extra);
   g_string_append_c (out, '}');
   write_top_extra (out, plant->extra);
+}
+
+char *
+hl_plant_to_json (const HlPlant *plant)
+{
+  GString *out;
+  g_return_val_if_fail (plant != NULL, NULL);
+  out = g_string_new (NULL);
+  hl_json_append_plant (out, plant);
   g_string_append (out, "}\n");
   return g_string_free (out, FALSE);
 }
 
 gboolean
-hl_plant_save (const HlPlant *plant, const char *path, GError **error)
+hl_json_save (const char *text, const char *path, GError **error)
 {
-  g_autofree char *text = NULL, *target = NULL;
+  g_autofree char *target = NULL;
   g_autoptr (GError) local = NULL;
   struct stat old;
   gboolean existed;
-  g_return_val_if_fail (plant != NULL && path != NULL, FALSE);
   target = realpath (path, NULL);   /* the file behind a link is replaced, not the link */
   if (target == NULL)
     target = g_strdup (path);
   existed = stat (target, &old) == 0;
-  text = hl_plant_to_json (plant);
   if (!g_file_set_contents_full (target, text, -1, G_FILE_SET_CONTENTS_CONSISTENT | G_FILE_SET_CONTENTS_DURABLE,
                                  existed ? (int) (old.st_mode & 0777) : 0666, &local))
     {
@@ -273,4 +278,13 @@ hl_plant_save (const HlPlant *plant, const char *path, GError **error)
   if (existed && chmod (target, old.st_mode & 0777) != 0)
     g_debug ("permissions of %s not kept: %s", target, g_strerror (errno));
   return TRUE;
+}
+
+gboolean
+hl_plant_save (const HlPlant *plant, const char *path, GError **error)
+{
+  g_autofree char *text = NULL;
+  g_return_val_if_fail (plant != NULL && path != NULL, FALSE);
+  text = hl_plant_to_json (plant);
+  return hl_json_save (text, path, error);
 }

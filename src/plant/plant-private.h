@@ -26,12 +26,14 @@ struct _HlPlant {
   HlPlantIndex  *index;
   HlValues       values;
   JsonObject    *extra, *site_extra, *plant_extra;   /* unknown keys of the file; or NULL */
+  GHashTable    *reserved;                     /* interned ids that hl_plant_free_id() must not give out, as variants use them; or NULL */
 };
 
 /* A plant under construction: fill in, then hl_plant_index(). */
 HlPlant *hl_plant_alloc      (void);
 HlPlant *hl_plant_share      (const HlPlant *plant);      /* same content, everything shared, to be changed */
 void     hl_plant_index      (HlPlant *plant);            /* builds the index from the lists */
+HlPlant *hl_plant_with_reserved (const HlPlant *plant, GHashTable *reserved);   /* set of interned ids, never changed from now on */
 /* Replace a shared list by a copy of one's own, its items still shared. */
 void     hl_plant_own_components (HlPlant *plant);
 void     hl_plant_own_streams    (HlPlant *plant);
@@ -42,6 +44,14 @@ const HlStream *hl_plant_stream_of_address (const HlPlant *plant, const HlAddres
 /* The @n-th of the three addresses of a stream's state: 0 the stream, 1 its outlet port, 2 its inlet port. */
 HlAddress       hl_stream_alias            (const HlStream *stream, const char *key, guint n);
 gboolean        hl_addresses_same          (const HlPlant *plant, const HlAddress *a, const HlAddress *b);
+
+/* Limits of the site [m], [K], [Pa]: ISO 2533's troposphere ends at 11 km; the others keep to the surface of the Earth. */
+#define HL_SITE_LEAST_ALTITUDE (-1000.0)
+#define HL_SITE_MOST_ALTITUDE 11000.0
+#define HL_SITE_LEAST_T 173.15
+#define HL_SITE_MOST_T 373.15
+#define HL_SITE_LEAST_P 1e3
+#define HL_SITE_MOST_P 1e7
 
 /* plant-check.c */
 gboolean hl_quantity_check        (const HlQuantityKind *kind, const char *where, double value, HlUnitSet set, GError **error);
@@ -62,4 +72,11 @@ JsonNode *hl_json_parse     (const char *text, gsize length, const char *name, H
 guint     hl_json_line      (const HlJsonPlaces *places, const char *list, guint item);   /* 0: not known */
 void      hl_json_append_string (GString *out, const char *text);
 void      hl_json_append_node   (GString *out, JsonNode *node);
+
+/* plant-json-write.c */
+void      hl_json_append_component (GString *out, const HlComponent *component);
+void      hl_json_append_stream    (GString *out, const HlStream *stream);
+void      hl_json_append_shaft     (GString *out, const HlShaft *shaft);
+void      hl_json_append_plant     (GString *out, const HlPlant *plant);      /* without the last brace */
+gboolean  hl_json_save             (const char *text, const char *path, GError **error);   /* temporary file, sync, rename */
 G_END_DECLS

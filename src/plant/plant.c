@@ -131,7 +131,18 @@ hl_plant_share (const HlPlant *plant)
   share_extra (copy->extra);
   share_extra (copy->site_extra);
   share_extra (copy->plant_extra);
+  if (copy->reserved != NULL)
+    g_hash_table_ref (copy->reserved);
   return copy;
+}
+
+HlPlant *
+hl_plant_with_reserved (const HlPlant *plant, GHashTable *reserved)
+{
+  HlPlant *edited = hl_plant_share (plant);
+  g_clear_pointer (&edited->reserved, g_hash_table_unref);
+  edited->reserved = reserved != NULL ? g_hash_table_ref (reserved) : NULL;
+  return edited;
 }
 
 static gpointer
@@ -198,6 +209,7 @@ hl_plant_unref (HlPlant *plant)
   g_clear_pointer (&plant->extra, json_object_unref);
   g_clear_pointer (&plant->site_extra, json_object_unref);
   g_clear_pointer (&plant->plant_extra, json_object_unref);
+  g_clear_pointer (&plant->reserved, g_hash_table_unref);
   g_free (plant);
 }
 

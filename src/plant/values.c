@@ -86,8 +86,8 @@ hl_values_clear (HlValues *values)
   values->n = 0;
 }
 
-static gboolean
-value_equal (const HlValue *a, const HlValue *b)
+gboolean
+hl_value_equal (const HlValue *a, const HlValue *b)
 {
   if (a->origin != b->origin)
     return FALSE;
@@ -104,7 +104,7 @@ hl_values_equal (const HlValues *a, const HlValues *b)
   if (a->n != b->n)
     return FALSE;
   for (guint i = 0; i < a->n; i++)
-    if (a->entries[i].key != b->entries[i].key || !value_equal (&a->entries[i].value, &b->entries[i].value))
+    if (a->entries[i].key != b->entries[i].key || !hl_value_equal (&a->entries[i].value, &b->entries[i].value))
       return FALSE;
   return TRUE;
 }

@@ -34,7 +34,7 @@ def test_no_command_is_an_error():
 
 
 def test_unknown_commands_are_refused_with_the_list():
-    refused("frobnicate", status=2, says=["frobnicate", "solve, check, note, state, kinds, fluids"])
+    refused("frobnicate", status=2, says=["frobnicate", "solve, check, note, variants, state, kinds, fluids"])
     refused("sweep", "x.heatloom", status=2, says="sweep")
 
 

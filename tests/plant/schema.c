@@ -128,10 +128,21 @@ static const char head[] =
   "  \"plant\": {\"type\": \"object\", \"properties\": {\n"
   "    \"given\": {\"$ref\": \"#/$defs/values_of_the_plant\"},\n"
   "    \"assumed\": {\"$ref\": \"#/$defs/values_of_the_plant\"},\n"
-  "    \"tied\": {\"$ref\": \"#/$defs/tied\"}}}},\n"
+  "    \"tied\": {\"$ref\": \"#/$defs/tied\"}}},\n"
+  "  \"variants\": {\"description\": \"what-ifs, each the ordered differences from the plant above\", \"type\": \"array\", \"maxItems\": 200, \"items\": {\n"
+  "    \"type\": \"object\", \"required\": [\"name\"], \"properties\": {\n"
+  "    \"name\": {\"type\": \"string\", \"minLength\": 1, \"maxLength\": 200, \"pattern\": \"^[^\\\\s](.*[^\\\\s])?$\"},\n"
+  "    \"changes\": {\"type\": \"array\", \"maxItems\": 20000, \"items\": {\"$ref\": \"#/$defs/change\"}}}}}},\n"
   " \"$defs\": {\n";
 
 static const char middle[] =
+  "  \"change\": {\"type\": \"object\", \"oneOf\": [\n"
+  "    {\"required\": [\"set\", \"to\"], \"properties\": {\n"
+  "     \"set\": {\"description\": \"address of a quantity, or an option, place or name: T1.inlet.p, T1.extractions, T1.at, stream:1.medium, plant.site.ambient_T\", \"type\": \"string\", \"minLength\": 1, \"maxLength\": 256},\n"
+  "     \"to\": {\"description\": \"a number in SI, a tie or word, a place, or null where the quantity shall be found\", \"type\": [\"number\", \"string\", \"boolean\", \"array\", \"null\"]},\n"
+  "     \"origin\": {\"enum\": [\"given\", \"assumed\"]}}},\n"
+  "    {\"required\": [\"remove\"], \"properties\": {\"remove\": {\"description\": \"id of a component, stream or shaft\", \"$ref\": \"#/$defs/id\"}}},\n"
+  "    {\"required\": [\"add\"], \"properties\": {\"add\": {\"description\": \"a component, stream or shaft as it stands in its list\", \"type\": \"object\", \"required\": [\"id\"], \"properties\": {\"id\": {\"$ref\": \"#/$defs/id\"}}}}}]},\n"
   "  \"id\": {\"type\": \"string\", \"minLength\": 1, \"maxLength\": 32, \"pattern\": \"^[^\\\\s.:*/+()-]+$\"},\n"
   "  \"place\": {\"description\": \"x to the right, y downwards, in grid units\", \"type\": \"array\", \"items\": {\"type\": \"integer\"}, \"minItems\": 2, \"maxItems\": 2},\n"
   "  \"tied\": {\"description\": \"factor*address+offset in SI, for instance 0.23*B1.steam.p\", \"type\": \"object\", \"additionalProperties\": {\"type\": \"string\"}},\n"

@@ -54,6 +54,8 @@ for path, value in [(['heatloom'], None), (['heatloom'], 2), (['units'], 'imperi
                     (['components', 1, 'given', 'isentropic_efficiency'], 1.4), (['components', 1, 'given', 'inlet.p'], 0),
                     (['components', 1, 'given', 'inlet.p'], '65 bar'), (['streams', 0, 'from'], 'B1'), (['streams', 0, 'given'], {'q': 1}),
                     (['components', 0, 'at'], [1]), (['components', 0, 'turn'], 4), (['shafts', 0, 'joins'], []),
+                    (['variants', 0, 'name'], ''), (['variants', 0, 'changes'], [{}]), (['variants', 0, 'changes'], [{'set': 'T1.p'}]),
+                    (['variants', 0, 'changes'], [{'remove': 'T1', 'add': {'id': 'T1'}}]), (['variants', 0, 'changes'], [{'add': 'T1'}]),
                     (['plant', 'given', 'net_glory'], 1.0), (['streams', 3, 'tied', 'm'], 0.9), (['site', 'altitude'], 60000)]:
     if not errors(spoil(path, value)):
         print(f'not refused: {path} = {value}')
