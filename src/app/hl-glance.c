@@ -30,7 +30,7 @@ shown_solution (HlGlance *self, gboolean *is_stale)
 
 /* What a review asks first; the other results follow in their own order. */
 static const char *const first_keys[] = {
-  "net_power", "gross_power", "heat_delivered", "net_efficiency_lhv", "cycle_efficiency", "utilisation",
+  "net_power", "gross_power", "heat_delivered", "net_efficiency_lhv", "cycle_efficiency", "utilisation", "exergy_efficiency",
   "fuel_heat", "heat_input", "heat_rejected", "heat_rate", "steam_rate", "exhaust_moisture", "own_consumption",
 };
 

@@ -67,6 +67,14 @@ put_options (HlNameplateBody *body, HlSession *session, const HlComponent *compo
     }
 }
 
+/* A result that is read from the solution is shown where it has a value. */
+static gboolean
+is_absent (HlSession *session, const HlQuantityKind *kind, const HlAddress *address)
+{
+  double si;
+  return (kind->flags & HL_QUANTITY_DERIVED) && !hl_solution_value (hl_session_solution (session), address, &si);
+}
+
 /* Groups in the order in which the kind first names them. */
 static void
 put_quantities (HlNameplateBody *body, HlSession *session, const HlComponent *component)
@@ -89,6 +97,8 @@ put_quantities (HlNameplateBody *body, HlSession *session, const HlComponent *co
           continue;
         HlAddress address = hl_address_component (component->id, quantity.key);
         g_autofree char *name = hl_component_quantity_name (component, n);
+        if (is_absent (session, quantity.kind, &address))
+          continue;
         hl_nameplate_put_quantity (body, session, _(group), &address, name);
       }
 }
@@ -165,6 +175,8 @@ hl_nameplate_fill_stream (HlNameplateBody *body, HlSession *session, const HlStr
     {
       HlAddress address = hl_address_stream (stream->id, quantities[n].key);
       const char *group = quantities[n].group;
+      if (is_absent (session, &quantities[n], &address))
+        continue;
       hl_nameplate_put_quantity (body, session, group != NULL ? _(group) : _("State"), &address, _(quantities[n].name));
     }
   for (guint n = 0; n < G_N_ELEMENTS (ends); n++)
@@ -261,6 +273,8 @@ put_shared (HlNameplateBody *body, HlSession *session, const char *const *ids, g
       HlQuantity quantity = hl_component_quantity (first, n);
       g_autofree char *key = g_strdup_printf ("shared %s", quantity.key), *name = hl_component_quantity_name (first, n);
       GtkWidget *row = hl_nameplate_body_find (body, key);
+      if (quantity.kind->flags & HL_QUANTITY_DERIVED)
+        continue;
       if (!have_quantity (plant, components, n_components, quantity.kind, quantity.key))
         continue;
       if (row == NULL)

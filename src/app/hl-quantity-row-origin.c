@@ -95,6 +95,12 @@ create_menu_cb (GtkMenuButton *button, gpointer data)
   g_autofree char *given = NULL, *assumed = NULL, *now = NULL;
   double si;
 
+  if (self->kind->flags & HL_QUANTITY_DERIVED)
+    {
+      g_menu_append (menu, _("Explain this value"), "row.explain");
+      gtk_menu_button_set_popover (button, gtk_popover_menu_new_from_model (G_MENU_MODEL (menu)));
+      return;
+    }
   if (hl_quantity_row_number (self, &si))
     {
       now = hl_quantity_format (self->kind, si, units);

@@ -395,6 +395,8 @@ build (HlQuantityRow *self)
   gtk_widget_set_parent (self->line, GTK_WIDGET (self));
   build_name (self);
   build_entry (self);
+  /* What is only read from the solution takes no other value. */
+  gtk_editable_set_editable (GTK_EDITABLE (self->entry), !(self->kind->flags & HL_QUANTITY_DERIVED));
   hl_quantity_row_add_origin (self);
   g_signal_connect (click, "pressed", G_CALLBACK (line_pressed_cb), self);
   gtk_widget_add_controller (self->line, GTK_EVENT_CONTROLLER (click));

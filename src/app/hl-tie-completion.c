@@ -89,7 +89,7 @@ consider (Search *search, const HlAddress *address)
   const HlQuantityKind *kind = hl_plant_quantity_kind (search->plant, address);
   double si;
 
-  if (kind == NULL || kind->dimension != search->dimension || is_itself (search, address))
+  if (kind == NULL || (kind->flags & HL_QUANTITY_DERIVED) || kind->dimension != search->dimension || is_itself (search, address))
     return;
   g_autofree char *text = hl_address_to_text (address);
   if (!g_hash_table_add (search->seen, g_strdup (text)))

@@ -204,9 +204,13 @@ run_kinds (const HlArguments *arguments G_GNUC_UNUSED)
             "range brings a hint.\n"));
   for (guint i = 0; i < hl_kind_count (); i++)
     print_kind (hl_kind_nth (i));
+  printf ("\n## %s\n\n", _("Every component"));
+  printf ("%s\n", _("Beside its own quantities each component has these, where what they count from is known. They are read from the finished solution and cannot be put in."));
+  const HlQuantityKind *quantities = hl_common_quantities (&n);
+  print_quantities (NULL, quantities, n);
   printf ("\n## %s\n\n", _("The plant as a whole"));
   printf ("%s\n", _("Addresses begin with `plant.`"));
-  const HlQuantityKind *quantities = hl_plant_quantities (&n);
+  quantities = hl_plant_quantities (&n);
   print_quantities (NULL, quantities, n);
   printf ("\n## %s\n\n", _("Streams"));
   printf ("%s\n", _("Addresses are the stream's id and the key; a bare number is written `m:1` or `stream:1.m`."));

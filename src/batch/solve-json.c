@@ -41,6 +41,7 @@ write_streams (HlJsonText *json, const HlSolution *solution)
       hl_json_text_number (json, "T_K", state != NULL ? state->T : NAN);
       hl_json_text_number (json, "h_J_kg", state != NULL ? state->h : NAN);
       hl_json_text_number (json, "s_J_kgK", state != NULL ? state->s : NAN);
+      hl_json_text_number (json, "e_J_kg", result.e);
       hl_json_text_number (json, "x", state != NULL ? state->x : NAN);
       hl_json_text_end (json);
     }
@@ -65,6 +66,28 @@ write_components (HlJsonText *json, const HlSolution *solution)
           if (hl_solution_value (solution, &address, &value) && isfinite (value))
             write_quantity (json, quantity.key, quantity.kind->dimension, value);
         }
+      hl_json_text_end (json);
+    }
+  hl_json_text_end (json);
+}
+
+/* What comes in, what is made, lost and destroyed, by words that stay the same. */
+static void
+write_exergy (HlJsonText *json, const HlSolution *solution)
+{
+  static const char *const words[] = {
+    [HL_EXERGY_FUEL] = "fuel", [HL_EXERGY_HEAT] = "heat", [HL_EXERGY_STREAM_IN] = "stream_in", [HL_EXERGY_COLD] = "cold",
+    [HL_EXERGY_ELECTRICITY] = "electricity", [HL_EXERGY_DESTRUCTION] = "destruction", [HL_EXERGY_LOSS] = "loss",
+    [HL_EXERGY_STREAM_OUT] = "stream_out", [HL_EXERGY_OTHER] = "other", [HL_EXERGY_DELIVERED] = "delivered", [HL_EXERGY_NET] = "net",
+  };
+  hl_json_text_begin (json, "exergy", '[', FALSE);
+  for (guint i = 0; i < hl_solution_n_exergy_flows (solution); i++)
+    {
+      const HlExergyFlow *flow = hl_solution_exergy_flow (solution, i);
+      hl_json_text_begin (json, NULL, '{', TRUE);
+      hl_json_text_string (json, "what", words[flow->kind]);
+      hl_json_text_string (json, "at", flow->component >= 0 ? hl_plant_component (hl_solution_plant (solution), (guint) flow->component)->id : "plant");
+      hl_json_text_number (json, "power_W", flow->power);
       hl_json_text_end (json);
     }
   hl_json_text_end (json);
@@ -129,6 +152,7 @@ hl_solution_json (const HlSolution *solution, const GArray *yielded)
   write_plant (json, solution);
   write_streams (json, solution);
   write_components (json, solution);
+  write_exergy (json, solution);
   write_findings (json, solution);
   write_yielded (json, yielded);
   hl_json_text_end (json);

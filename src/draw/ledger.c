@@ -110,6 +110,7 @@ static double value_x (const Row *row) { return of_state (row, row->result.state
 static double value_h (const Row *row) { return of_state (row, row->result.state.h); }
 static double value_s (const Row *row) { return of_state (row, row->result.state.s); }
 static double value_v (const Row *row) { return of_state (row, row->result.state.v); }
+static double value_e (const Row *row) { return row->result.e; }
 static double value_volume_flow (const Row *row) { return value_m (row) * value_v (row); }
 
 typedef struct {
@@ -133,6 +134,7 @@ static const Column columns[] = {
   NUMBER ("x", N_("Quality"), RATIO, value_x),
   NUMBER ("h", N_("Enthalpy"), ENTHALPY, value_h),
   NUMBER ("s", N_("Entropy"), ENTROPY, value_s),
+  NUMBER ("e", N_("Exergy"), ENTHALPY, value_e),
   NUMBER ("v", N_("Specific volume"), VOLUME, value_v),
   NUMBER ("volume_flow", N_("Volume flow"), VOLUME_FLOW, value_volume_flow),
   TEXT ("origin", N_("Origin"), text_origin),

@@ -5,7 +5,7 @@
 G_BEGIN_DECLS
 
 typedef struct {
-  const char  *key;         /* "m", "p", "T", "x", "h", "s", "v", "id", "from", "to", "medium", "phase", "volume_flow", "origin" */
+  const char  *key;         /* "m", "p", "T", "x", "h", "s", "e", "v", "id", "from", "to", "medium", "phase", "volume_flow", "origin" */
   const char  *name;        /* N_("Flow") */
   HlDimension  dimension;
   gboolean     is_text;

@@ -59,19 +59,17 @@ hl_check_offer (HlChecker *checker, HlFinding *finding, const char *key)
   hl_finding_mend (finding, HL_MEND_EDIT, address, NAN, g_strdup_printf (_("Change %s"), name));
 }
 
-/* Entropy out minus entropy in over all connected ports; nothing here exchanges heat with the surroundings. */
+/* By the same balance that exergy is counted with: flows and heat with their entropy, friction left out. */
 void
 hl_check_entropy (HlChecker *checker)
 {
   const HlModel *model = checker->model;
-  double produced = 0.0, flow = 0.0;
+  double produced = checker->exergy->results[checker->index].produced, flow = 0.0;
   for (int k = model->first_port[checker->index]; k < model->first_port[checker->index + 1]; k++)
     {
-      const HlPortNode *port = &g_array_index (model->ports, HlPortNode, k);
-      const HlNodeResult *node = &checker->states[port->node];
+      const HlNodeResult *node = &checker->states[g_array_index (model->ports, HlPortNode, k).node];
       if (!node->has_flow || !node->has_state || node->m < 0.0)
         return;
-      produced += (port->is_out ? 1.0 : -1.0) * node->m * node->st.s;
       flow = fmax (flow, node->m);
     }
   if (!(produced < -1e-3 * flow && flow > 1e-6 * model->system->flow_scale))
@@ -203,6 +201,7 @@ hl_check_all (HlChecker *checker)
       const HlComponentModel *model = hl_component_model (checker->component->kind);
       if (model != NULL && model->check != NULL)
         model->check (checker);
+      hl_check_entropy (checker);
       check_losses (checker);
       check_credible (checker);
     }

@@ -1,6 +1,7 @@
 /* What is wrong with a solution, or unwise about it: laws first, then practice.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #pragma once
+#include "engine/exergy.h"
 #include "engine/finding-private.h"
 #include "engine/processes.h"
 G_BEGIN_DECLS
@@ -13,6 +14,7 @@ typedef struct {
   const HlComponent  *component;
   int                 index;
   HlFindings         *findings;
+  const HlExergy     *exergy;      /* whose entropy balances the second law is checked by */
 } HlChecker;
 
 /* Checks every component and then the plant. */
@@ -28,7 +30,7 @@ char               *hl_check_text  (const HlChecker *checker, HlDimension dimens
 HlFinding          *hl_check_add   (HlChecker *checker, HlGrade grade, const char *code, const char *key, char *text);
 /* Offers to go to a quantity of the component. */
 void                hl_check_offer (HlChecker *checker, HlFinding *finding, const char *key);
-/* Entropy may not vanish in a component that exchanges no heat with its surroundings. */
+/* Entropy may not vanish in a component. */
 void                hl_check_entropy (HlChecker *checker);
 /* Pressure may not rise from the port "inlet" to "outlet". */
 void                hl_check_pressure_falls (HlChecker *checker);

@@ -28,8 +28,8 @@ hl_note_line_free (HlNoteLine *line)
   g_free (line);
 }
 
-static HlNoteLine *
-line_new (HlNoteKind kind, guint n_terms, guint result)
+HlNoteLine *
+hl_note_line_new (HlNoteKind kind, guint n_terms, guint result)
 {
   HlNoteLine *line = g_new0 (HlNoteLine, 1);
   line->kind = kind;
@@ -86,8 +86,8 @@ hl_note_term_of_var (const HlSolution *solution, int var)
   return term;
 }
 
-static HlNoteTerm
-term_of_address (const HlSolution *solution, const HlAddress *address, double value)
+HlNoteTerm
+hl_note_term_of_address (const HlSolution *solution, const HlAddress *address, double value)
 {
   const HlQuantityKind *kind = hl_plant_quantity_kind (solution->plant, address);
   HlNoteTerm term = { .address = *address, .value = value, .origin = HL_ORIGIN_FOUND };
@@ -100,8 +100,8 @@ term_of_address (const HlSolution *solution, const HlAddress *address, double va
 }
 
 /* {k} stands for term k. */
-static char *
-fill_in (const HlNoteLine *line, const char *pattern, gboolean with_numbers)
+char *
+hl_note_fill_in (const HlNoteLine *line, const char *pattern, gboolean with_numbers)
 {
   GString *out = g_string_new (NULL);
   for (const char *at = pattern; *at != '\0'; at++)
@@ -194,7 +194,7 @@ hl_note_line_of_equation (const HlSolution *solution, int equation, int root)
   const HlModel *model = solution->model;
   const HlEquation *e = hl_system_equation (model->system, equation);
   const int *vars = hl_equation_vars (model->system, e);
-  HlNoteLine *line = line_new (HL_NOTE_EQUATION, (guint) e->n, 0);
+  HlNoteLine *line = hl_note_line_new (HL_NOTE_EQUATION, (guint) e->n, 0);
   for (int k = e->n - 1; k >= 0; k--)
     {
       line->terms[k] = hl_note_term_of_var (solution, g_array_index (model->system->raw, int, e->first + k));
@@ -205,8 +205,8 @@ hl_note_line_of_equation (const HlSolution *solution, int equation, int root)
     line->result = (guint) e->output;
   g_autofree char *pattern = hl_name_template (model, equation, FALSE);
   line->formula = hl_name_template (model, equation, TRUE);
-  line->words = fill_in (line, pattern, FALSE);
-  line->numbers = fill_in (line, pattern, TRUE);
+  line->words = hl_note_fill_in (line, pattern, FALSE);
+  line->numbers = hl_note_fill_in (line, pattern, TRUE);
   line->source = _(hl_equation_source (e));
   line->fluid = e->fluid;
   line->other_fluid = e->other_fluid != NULL ? e->other_fluid : e->fluid;
@@ -254,13 +254,13 @@ hl_note_line_of_state (const HlSolution *solution, int node, char letter, const 
   double value;
   if (!solution->states[node].has_state || strchr ("Tsvx", letter) == NULL || !hl_solution_value (solution, address, &value))
     return NULL;
-  HlNoteLine *line = line_new (HL_NOTE_STATE, 3, 0);
-  line->terms[0] = term_of_address (solution, address, value);
+  HlNoteLine *line = hl_note_line_new (HL_NOTE_STATE, 3, 0);
+  line->terms[0] = hl_note_term_of_address (solution, address, value);
   line->terms[1] = hl_note_term_of_var (solution, n->p);
   line->terms[2] = hl_note_term_of_var (solution, n->h);
   line->formula = letter == 'x' ? g_strdup ("{0} = ({2} − h′({1})) ÷ (h″({1}) − h′({1}))") : g_strdup_printf ("{0} = %c({1}, {2})", letter);
-  line->words = fill_in (line, line->formula, FALSE);
-  line->numbers = fill_in (line, line->formula, TRUE);
+  line->words = hl_note_fill_in (line, line->formula, FALSE);
+  line->numbers = hl_note_fill_in (line, line->formula, TRUE);
   line->source = _("property of the medium");
   line->fluid = line->other_fluid = n->fluid;
   line->properties = hl_fluid_formulation (n->fluid);
@@ -273,8 +273,8 @@ line_of_carnot (const HlSolution *solution, const HlAddress *address, double val
   int ends[2];
   if (!hl_results_extremes (solution, &ends[0], &ends[1]))
     return NULL;
-  HlNoteLine *line = line_new (HL_NOTE_RESULT, 3, 0);
-  line->terms[0] = term_of_address (solution, address, value);
+  HlNoteLine *line = hl_note_line_new (HL_NOTE_RESULT, 3, 0);
+  line->terms[0] = hl_note_term_of_address (solution, address, value);
   for (int k = 0; k < 2; k++)
     {
       const HlNode *node = hl_model_node (solution->model, ends[k]);
@@ -287,7 +287,7 @@ line_of_carnot (const HlSolution *solution, const HlAddress *address, double val
       g_autofree char *key = g_strdup (T.key);
       key[strlen (key) - 1] = 'T';
       T.key = g_intern_string (key);
-      line->terms[1 + k] = term_of_address (solution, &T, solution->states[ends[k]].st.T);
+      line->terms[1 + k] = hl_note_term_of_address (solution, &T, solution->states[ends[k]].st.T);
     }
   /* A quotient of temperatures is one of absolute ones. */
   for (int k = 1; k <= 2; k++)
@@ -311,9 +311,9 @@ line_of_moisture (const HlSolution *solution, const HlAddress *address, double v
       if (var >= 0 && solution->numbers.is_known[model->system->root[var]])
         g_array_append_val (vars, var);
     }
-  HlNoteLine *line = line_new (HL_NOTE_RESULT, vars->len + 1, 0);
+  HlNoteLine *line = hl_note_line_new (HL_NOTE_RESULT, vars->len + 1, 0);
   GString *formula = g_string_new ("{0} = max(");
-  line->terms[0] = term_of_address (solution, address, value);
+  line->terms[0] = hl_note_term_of_address (solution, address, value);
   for (guint k = 1; k <= vars->len; k++)
     {
       line->terms[k] = hl_note_term_of_var (solution, g_array_index (vars, int, k - 1));
@@ -337,8 +337,8 @@ line_of_result (const HlSolution *solution, const HlAddress *address)
     line = line_of_moisture (solution, address, value);
   if (line == NULL)
     return NULL;
-  line->words = fill_in (line, line->formula, FALSE);
-  line->numbers = fill_in (line, line->formula, TRUE);
+  line->words = hl_note_fill_in (line, line->formula, FALSE);
+  line->numbers = hl_note_fill_in (line, line->formula, TRUE);
   return line;
 }
 
@@ -355,7 +355,11 @@ hl_note_line_at (const HlSolution *solution, const HlAddress *address)
       if (solution->numbers.is_known[root])
         return line_of_var (solution, root);
     }
+  if (is_state && letter == 'e')
+    return hl_note_line_of_stream_exergy (solution, node, address);
   if (is_state)
     return hl_note_line_of_state (solution, node, letter, address);
+  if (g_str_has_prefix (address->key, "exergy_"))
+    return hl_note_line_of_exergy (solution, address);
   return address->owner == HL_OWNER_PLANT ? line_of_result (solution, address) : NULL;
 }

@@ -81,17 +81,24 @@ add_read (HlNote *note)
   guint step = (guint) (solution->structure->n_blocks + solution->structure->n_last), n;
   for (guint i = 0; i < hl_plant_n_streams (solution->plant); i++)
     {
-      static const char *const letters[] = { "T", "s", "v", "x" };
+      static const char *const letters[] = { "T", "s", "v", "x", "e" };
       const HlNode *node = hl_model_node (solution->model, (int) i);
-      const int vars[] = { node->T, node->s, node->v, node->x };
+      const int vars[] = { node->T, node->s, node->v, node->x, -1 };
       for (guint k = 0; k < G_N_ELEMENTS (letters); k++)
         {
           HlAddress address = hl_address_stream (hl_plant_stream (solution->plant, i)->id, g_intern_static_string (letters[k]));
           if (vars[k] < 0)
-            add_line (note, hl_note_line_of_state (solution, (int) i, letters[k][0], &address), &step);
+            add_line (note, hl_note_line_at (solution, &address), &step);
         }
     }
-  const HlQuantityKind *kinds = hl_plant_quantities (&n);
+  const HlQuantityKind *kinds = hl_common_quantities (&n);
+  for (guint c = 0; c < hl_plant_n_components (solution->plant); c++)
+    for (guint k = 0; k < n; k++)
+      {
+        HlAddress address = hl_address_component (hl_plant_component (solution->plant, c)->id, kinds[k].key);
+        add_line (note, hl_note_line_at (solution, &address), &step);
+      }
+  kinds = hl_plant_quantities (&n);
   for (guint k = 0; k < n; k++)
     {
       HlAddress address = hl_address_plant (g_intern_string (kinds[k].key));

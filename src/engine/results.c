@@ -118,7 +118,8 @@ hl_results_plant (HlSolution *solution)
             add_result (solution, &kinds[k], hl_system_value (model->system, var));
         }
       else if (g_str_equal (kinds[k].key, "carnot_efficiency") ? carnot (solution, &value)
-               : g_str_equal (kinds[k].key, "exhaust_moisture") && worst_moisture (solution, &value))
+               : g_str_equal (kinds[k].key, "exhaust_moisture") ? worst_moisture (solution, &value)
+               : hl_exergy_value (solution, -1, kinds[k].key, &value))
         add_result (solution, &kinds[k], value);
     }
 }

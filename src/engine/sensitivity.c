@@ -38,6 +38,7 @@ seed_state (Adjoint *a, int n, char letter, double factor)
     case 'T': to_p = st.T_p; to_h = st.T_h; break;
     case 's': to_p = st.s_p; to_h = st.s_h; break;
     case 'v': to_p = st.v_p; to_h = st.v_h; break;
+    case 'e': to_p = -a->solution->exergy->T0 * st.s_p; to_h = 1.0 - a->solution->exergy->T0 * st.s_h; break;
     case 'x':
       if (isnan (at->st.x) || hl_fluid_saturation_p (node->fluid, at->p, &sat) != HL_OK)
         return FALSE;
@@ -51,6 +52,12 @@ seed_state (Adjoint *a, int n, char letter, double factor)
   return TRUE;
 }
 
+static void
+seed_exergy (gpointer data, int var, double slope)
+{
+  seed (data, var, slope);
+}
+
 /* Results that are read over all states. */
 static gboolean
 seed_plant (Adjoint *a, const char *key)
@@ -58,6 +65,8 @@ seed_plant (Adjoint *a, const char *key)
   const HlSolution *solution = a->solution;
   const HlModel *model = solution->model;
   int low, high, wettest = -1;
+  if (g_str_has_prefix (key, "exergy_"))
+    return hl_exergy_slopes (solution, -1, key, seed_exergy, a);
   if (g_str_equal (key, "carnot_efficiency") && hl_results_extremes (solution, &low, &high))
     {
       double T_low = solution->states[low].st.T, T_high = solution->states[high].st.T;
@@ -87,7 +96,10 @@ seed_result (Adjoint *a, const HlAddress *result)
     }
   if (hl_model_find_state (a->solution->model, result, &node, &letter))
     return seed_state (a, node, letter, 1.0);
-  return result->owner == HL_OWNER_PLANT && seed_plant (a, result->key);
+  if (result->owner == HL_OWNER_PLANT)
+    return seed_plant (a, result->key);
+  int component = result->owner == HL_OWNER_COMPONENT ? hl_plant_component_index (a->solution->plant, result->id) : -1;
+  return component >= 0 && hl_exergy_slopes (a->solution, component, result->key, seed_exergy, a);
 }
 
 /* Back through one block: its matrix transposed takes the slopes of its variables to those of its equations, and they pass on
@@ -156,11 +168,13 @@ run (Adjoint *a)
   return TRUE;
 }
 
-/* Variables that some equation holds: of others no derivative is known. */
+/* Variables that some equation holds, or the result itself: of others no derivative is known. */
 static gboolean *
-find_used (const HlSystem *system)
+find_used (const HlSystem *system, const double *slope)
 {
   gboolean *is_used = g_new0 (gboolean, system->vars->len + 1);
+  for (guint k = 0; k < system->vars->len; k++)
+    is_used[k] = fabs (slope[k]) > 0.0;
   for (guint k = 0; k < system->index->len; k++)
     is_used[g_array_index (system->index, int, k)] = TRUE;
   return is_used;
@@ -174,10 +188,10 @@ hl_solution_sensitivities (const HlSolution *solution, const HlAddress *result)
     return NULL;
   HlSystem *system = solution->model->system;
   g_autofree double *slope = g_new0 (double, system->vars->len + 1);
-  g_autofree gboolean *is_used = find_used (system);
   Adjoint a = { solution, system, slope };
   if (!seed_result (&a, result) || !run (&a))
     return NULL;
+  g_autofree gboolean *is_used = find_used (system, slope);
   GArray *list = g_array_new (FALSE, FALSE, sizeof (HlSensitivity));
   for (guint k = 0; k < system->specs->len; k++)
     {

@@ -1,6 +1,7 @@
 /* The inside of a solution.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #pragma once
+#include "engine/exergy.h"
 #include "engine/finding-private.h"
 #include "engine/model.h"
 #include "engine/numbers.h"
@@ -20,6 +21,7 @@ struct _HlSolution {
   int           *circuits;          /* [n nodes] */
   GArray        *processes;         /* HlProcess */
   GArray        *results;           /* HlPlantResult */
+  HlExergy      *exergy;
   HlFindings     findings;
   gboolean       is_complete;       /* every unknown has its value */
   double         seconds;

@@ -25,6 +25,7 @@ hl_solution_unref (HlSolution *solution)
   g_free (solution->circuits);
   g_array_unref (solution->processes);
   g_array_unref (solution->results);
+  hl_exergy_free (solution->exergy);
   hl_findings_clear (&solution->findings);
   hl_plant_unref (solution->plant);
   g_free (solution);
@@ -56,12 +57,15 @@ hl_solution_stream (const HlSolution *solution, guint stream, HlStreamResult *re
   memset (result, 0, sizeof *result);
   g_return_if_fail (solution != NULL && stream < hl_plant_n_streams (solution->plant));
   const HlNodeResult *node = &solution->states[stream];
-  *result = (HlStreamResult) { node->has_flow, node->has_state, node->m, node->st, hl_model_node (solution->model, (int) stream)->fluid };
+  *result = (HlStreamResult) { node->has_flow, node->has_state, node->m, node->st, hl_model_node (solution->model, (int) stream)->fluid, NAN };
+  if (node->has_state && !hl_exergy_of_state (solution, result->fluid, &node->st, &result->e))
+    result->e = NAN;
 }
 
 static gboolean
-state_value (const HlNodeResult *node, char letter, double *value)
+state_value (const HlSolution *solution, int n, char letter, double *value)
 {
+  const HlNodeResult *node = &solution->states[n];
   switch (letter)
     {
     case 'm': *value = node->m; return node->has_flow;
@@ -71,6 +75,7 @@ state_value (const HlNodeResult *node, char letter, double *value)
     case 's': *value = node->st.s; return node->has_state;
     case 'v': *value = node->st.v; return node->has_state;
     case 'x': *value = node->st.x; return node->has_state && !isnan (node->st.x);
+    case 'e': return node->has_state && hl_exergy_of_state (solution, hl_model_node (solution->model, n)->fluid, &node->st, value);
     default: return FALSE;
     }
 }
@@ -84,7 +89,7 @@ hl_solution_value (const HlSolution *solution, const HlAddress *address, double 
   g_return_val_if_fail (solution != NULL && address != NULL && value != NULL, FALSE);
   if (hl_model_find_state (solution->model, address, &node, &letter))
     {
-      if (!state_value (&solution->states[node], letter, &found))
+      if (!state_value (solution, node, letter, &found))
         return FALSE;
       *value = found;
       return TRUE;
@@ -105,6 +110,11 @@ hl_solution_value (const HlSolution *solution, const HlAddress *address, double 
           *value = result->value;
           return TRUE;
         }
+    }
+  if (address->owner == HL_OWNER_COMPONENT && g_str_has_prefix (address->key, "exergy_"))
+    {
+      int component = hl_plant_component_index (solution->plant, address->id);
+      return component >= 0 && hl_exergy_value (solution, component, address->key, value);
     }
   /* What nothing is calculated from, such as an efficiency that the groups override, is as it was put in. */
   const HlValue *typed = hl_plant_value (solution->plant, address);
@@ -160,6 +170,31 @@ gboolean
 hl_solution_has_grade (const HlSolution *solution, HlGrade at_least)
 {
   return hl_findings_have (&solution->findings, at_least);
+}
+
+gboolean
+hl_solution_exergy (const HlSolution *solution, guint component, HlExergyBalance *balance)
+{
+  g_return_val_if_fail (solution != NULL && component < hl_plant_n_components (solution->plant) && balance != NULL, FALSE);
+  const HlExergyResult *result = &solution->exergy->results[component];
+  if (!result->is_known)
+    return FALSE;
+  *balance = (HlExergyBalance) { result->fuel, result->product, result->loss, result->destruction, result->efficiency,
+                                 result->words != NULL ? _(result->words) : "" };
+  return TRUE;
+}
+
+guint
+hl_solution_n_exergy_flows (const HlSolution *solution)
+{
+  return solution->exergy->flows->len;
+}
+
+const HlExergyFlow *
+hl_solution_exergy_flow (const HlSolution *solution, guint n)
+{
+  g_return_val_if_fail (n < solution->exergy->flows->len, NULL);
+  return &g_array_index (solution->exergy->flows, HlExergyFlow, n);
 }
 
 void

@@ -20,6 +20,7 @@ typedef struct {
   double   m;             /* [kg/s] */
   HlState  state;
   const HlFluid *fluid;
+  double   e;             /* specific flow exergy [J/kg], physical, from the site's dead state; NaN unknown */
 } HlStreamResult;
 HL_PUBLIC void     hl_solution_stream (const HlSolution *solution, guint stream, HlStreamResult *result);
 
@@ -60,6 +61,34 @@ HL_PUBLIC gboolean         hl_solution_has_grade   (const HlSolution *solution, 
 
 /* One line on how things stand: "Solved · 12.00 MW net · 31.2 % · 3 values assumed", or "One value is missing: ...".  g_free(). */
 HL_PUBLIC char *hl_solution_summary (const HlSolution *solution);
+
+/* Second law of one component: product = what it is there for, fuel = what that costs.  fuel = product + loss + destruction. */
+typedef struct {
+  double      fuel, product;    /* [W] */
+  double      loss;             /* leaves for the surroundings, or with cooling water, unused [W] */
+  double      destruction;      /* dead state temperature times the entropy produced [W] */
+  double      efficiency;       /* product over fuel; NaN where nothing is made, as in a valve or a condenser */
+  const char *words;            /* translated: what counts as fuel and as product; "" where it only passes on */
+} HlExergyBalance;
+HL_PUBLIC gboolean hl_solution_exergy (const HlSolution *solution, guint component, HlExergyBalance *balance);
+
+/* Second law of the whole plant: what comes in is made, lost or destroyed.  In this order, components within a kind in the plant's. */
+typedef enum {
+  HL_EXERGY_FUEL,           /* in: chemical exergy of fuel */
+  HL_EXERGY_HEAT,           /* in: heat at the temperature at which it passes */
+  HL_EXERGY_STREAM_IN,      /* in: streams from outside */
+  HL_EXERGY_COLD,           /* in: heat left to surroundings colder than the dead state */
+  HL_EXERGY_ELECTRICITY,    /* in: where the plant takes more than it makes */
+  HL_EXERGY_DESTRUCTION,    /* gone: in each component */
+  HL_EXERGY_LOSS,           /* out: with heat to the surroundings, cooling water, water lost */
+  HL_EXERGY_STREAM_OUT,     /* out: streams that leave */
+  HL_EXERGY_OTHER,          /* out: consumers of electricity that are not drawn */
+  HL_EXERGY_DELIVERED,      /* made: with heat delivered */
+  HL_EXERGY_NET,            /* made: net power */
+} HlExergyFlowKind;
+typedef struct _HlExergyFlow { HlExergyFlowKind kind; int component; double power; } HlExergyFlow;    /* component -1: the plant; [W] */
+HL_PUBLIC guint               hl_solution_n_exergy_flows (const HlSolution *solution);   /* 0 where something is not known */
+HL_PUBLIC const HlExergyFlow *hl_solution_exergy_flow    (const HlSolution *solution, guint n);
 
 /* How a found value came about: the equation in words and numbers, its inputs and their origin; several lines. NULL where unknown.  g_free(). */
 HL_PUBLIC char *hl_solution_explain (const HlSolution *solution, const HlAddress *address);

@@ -50,7 +50,8 @@ static void
 check (HlSolution *solution)
 {
   HlChecker checker = { .model = solution->model, .states = solution->states, .is_known = solution->numbers.is_known,
-                        .is_complete = solution->is_complete, .findings = &solution->findings };
+                        .is_complete = solution->is_complete, .findings = &solution->findings,
+                        .exergy = solution->exergy };
   hl_check_all (&checker);
 }
 
@@ -165,6 +166,7 @@ finish (HlSolution *solution)
 {
   gint64 phase = g_get_monotonic_time ();
   hl_results_states (solution);
+  hl_exergy_solve (solution);
   hl_results_plant (solution);
   hl_results_processes (solution);
   guint before = solution->findings.list->len;

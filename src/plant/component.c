@@ -324,17 +324,21 @@ hl_component_port_name (const HlComponent *component, guint n)
 guint
 hl_component_n_quantities (const HlComponent *component)
 {
+  guint n_common;
   int n = 0;
   g_return_val_if_fail (component != NULL, 0);
   for (guint i = 0; i < component->kind->n_quantities; i++)
     n += quantity_occurrences (component, &component->kind->quantities[i]);
-  return (guint) n;
+  hl_common_quantities (&n_common);
+  return (guint) n + n_common;
 }
 
 HlQuantity
 hl_component_quantity (const HlComponent *component, guint n)
 {
   int left = (int) n;
+  guint n_common;
+  const HlQuantityKind *common = hl_common_quantities (&n_common);
   g_return_val_if_fail (component != NULL, ((HlQuantity) { NULL }));
   for (guint i = 0; i < component->kind->n_quantities; i++)
     {
@@ -347,6 +351,8 @@ hl_component_quantity (const HlComponent *component, guint n)
         }
       left -= count;
     }
+  if (left < (int) n_common)
+    return (HlQuantity) { &common[left], g_intern_static_string (common[left].key), 0 };
   g_return_val_if_reached (((HlQuantity) { NULL }));
 }
 
@@ -362,6 +368,8 @@ const HlQuantityKind *
 hl_component_quantity_kind (const HlComponent *component, const char *key)
 {
   const char *dot;
+  guint n_common;
+  const HlQuantityKind *common = hl_common_quantities (&n_common);
   g_return_val_if_fail (component != NULL && key != NULL, NULL);
   for (guint i = 0; i < component->kind->n_quantities; i++)
     {
@@ -371,6 +379,9 @@ hl_component_quantity_kind (const HlComponent *component, const char *key)
           && quantity_occurrences (component, quantity) > 0)
         return quantity;
     }
+  for (guint i = 0; i < n_common; i++)
+    if (strcmp (common[i].key, key) == 0)
+      return &common[i];
   dot = strrchr (key, '.');
   if (dot != NULL && dot - key < 64)
     {

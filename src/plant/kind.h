@@ -42,6 +42,7 @@ typedef enum {
   HL_QUANTITY_USUAL   = 1 << 1,        /* the engineer usually gives it: ranks mends, comes back when a value is let go */
   HL_QUANTITY_RESULT  = 1 << 2,        /* shown as a result; may still be given */
   HL_QUANTITY_PERCENT = 1 << 3,        /* a ratio that people read in percent: see hl_quantity_format() */
+  HL_QUANTITY_DERIVED = 1 << 8,        /* read from a solution: no value can be put in, nothing tied to it */
 } HlQuantityFlags;
 
 /* A default that depends on a choice: a fuel's heating value.  Source NULL: the row's own default holds. */
@@ -100,6 +101,9 @@ typedef struct {
   const HlOptionKind   *options;       guint n_options;
   const HlQuantityKind *quantities;    guint n_quantities;
 } HlKind;
+
+/* What every component has beside the rows of its kind: results of the second law. */
+HL_PUBLIC const HlQuantityKind *hl_common_quantities (guint *n);
 
 HL_PUBLIC guint         hl_kind_count  (void);
 HL_PUBLIC const HlKind *hl_kind_nth    (guint n);               /* in shelf order */

@@ -20,9 +20,21 @@ limits_in_words (const HlQuantityKind *kind, HlUnitSet set)
 }
 
 gboolean
+hl_quantity_may_be_put_in (const HlQuantityKind *kind, const char *where, GError **error)
+{
+  if (!(kind->flags & HL_QUANTITY_DERIVED))
+    return TRUE;
+  g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_CONTENT,
+               _("%s is read from the finished solution and cannot be put in; give a quantity that it follows from"), where);
+  return FALSE;
+}
+
+gboolean
 hl_quantity_check (const HlQuantityKind *kind, const char *where, double value, HlUnitSet set, GError **error)
 {
   g_autofree char *shown = NULL, *limits = NULL;
+  if (!hl_quantity_may_be_put_in (kind, where, error))
+    return FALSE;
   if (value > kind->above && value <= kind->at_most)
     return TRUE;
   if (!isfinite (value))
@@ -66,10 +78,14 @@ hl_plant_check_tie (const HlPlant *plant, const HlAddress *address, const HlValu
   const HlQuantityKind *kind = hl_plant_quantity_kind (plant, address);
   const HlQuantityKind *source = hl_plant_quantity_kind (plant, &value->tie_of);
   g_autofree char *to = hl_address_to_text (address), *of = hl_address_to_text (&value->tie_of);
+  if (!hl_quantity_may_be_put_in (kind, to, error))
+    return FALSE;
   if (source == NULL)
     g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_ADDRESS, _("%s cannot be tied to %s: there is no such quantity"), to, of);
   else if (hl_addresses_same (plant, address, &value->tie_of))
     g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_ADDRESS, _("%s cannot be tied to %s: that is the same quantity; tie it to another one"), to, of);
+  else if (source->flags & HL_QUANTITY_DERIVED)
+    g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_CONTENT, _("%s cannot be tied to %s, which is read from the finished solution; tie it to a quantity of the equations"), to, of);
   else if (!hl_dimensions_may_tie (kind->dimension, source->dimension))
     g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_CONTENT, _("%s cannot be tied to %s: one is a %s, the other a %s; tie like to like"),
                  to, of, hl_dimension_name (kind->dimension), hl_dimension_name (source->dimension));

@@ -54,6 +54,7 @@ gboolean        hl_addresses_same          (const HlPlant *plant, const HlAddres
 #define HL_SITE_MOST_P 1e7
 
 /* plant-check.c */
+gboolean hl_quantity_may_be_put_in (const HlQuantityKind *kind, const char *where, GError **error);
 gboolean hl_quantity_check        (const HlQuantityKind *kind, const char *where, double value, HlUnitSet set, GError **error);
 gboolean hl_dimensions_may_tie    (HlDimension a, HlDimension b);
 gboolean hl_plant_check_tie       (const HlPlant *plant, const HlAddress *address, const HlValue *value, GError **error);

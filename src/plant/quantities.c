@@ -24,6 +24,9 @@ static const HlQuantityKind stream_quantities[] = {
   { .key = "v", .sign = "v", .name = N_("Specific volume"), .group = N_("State"), .dimension = HL_DIMENSION_VOLUME,
     .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS (0.0, 1e6),
     .yield_rank = 20, .help = N_("Volume of a kilogram.") },
+  { .key = "e", .sign = "e", .name = N_("Exergy"), .group = N_("State"), .dimension = HL_DIMENSION_ENTHALPY,
+    .flags = HL_QUANTITY_RESULT | HL_QUANTITY_DERIVED, NO_DEFAULT, NO_RANGE, LIMITS (-1e8, 1e8),
+    .yield_rank = 20, .help = N_("Specific flow exergy, physical: the work that a kilogram could give on its way to the site's dead state.") },
 };
 
 #define RESULT_POWER(the_key, the_sign, the_name, the_group, the_help) \
@@ -32,6 +35,22 @@ static const HlQuantityKind stream_quantities[] = {
 #define RESULT_EFFICIENCY(the_key, the_name, most, the_help) \
   { .key = the_key, .sign = "η", .name = the_name, .group = N_("Efficiency"), .dimension = HL_DIMENSION_RATIO, \
     .flags = HL_QUANTITY_RESULT | HL_QUANTITY_PERCENT, NO_DEFAULT, NO_RANGE, LIMITS (0.0, most), .yield_rank = 20, .help = the_help }
+
+#define SECOND_LAW(the_key, the_sign, the_name, the_help) \
+  { .key = the_key, .sign = the_sign, .name = the_name, .group = N_("Second law"), .dimension = HL_DIMENSION_POWER, \
+    .flags = HL_QUANTITY_RESULT | HL_QUANTITY_DERIVED, NO_DEFAULT, NO_RANGE, LIMITS (-1e12, 1e12), .yield_rank = 20, .help = the_help }
+#define SECOND_LAW_EFFICIENCY(the_help) \
+  { .key = "exergy_efficiency", .sign = "ε", .name = N_("Exergy efficiency"), .group = N_("Second law"), \
+    .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_RESULT | HL_QUANTITY_PERCENT | HL_QUANTITY_DERIVED, NO_DEFAULT, NO_RANGE, \
+    LIMITS (-1e6, 1e6), .yield_rank = 20, .help = the_help }
+
+static const HlQuantityKind common_quantities[] = {
+  SECOND_LAW ("exergy_fuel", "E_F", N_("Exergy spent"), N_("What the product of this component costs, in exergy: its fuel.")),
+  SECOND_LAW ("exergy_product", "E_P", N_("Exergy made"), N_("What this component is there for, in exergy: its product.")),
+  SECOND_LAW ("exergy_loss", "E_L", N_("Exergy lost"), N_("Exergy that leaves this component for the surroundings unused.")),
+  SECOND_LAW ("exergy_destruction", "E_D", N_("Exergy destroyed"), N_("Dead state temperature times the entropy that this component produces.")),
+  SECOND_LAW_EFFICIENCY (N_("Exergy made over exergy spent.")),
+};
 
 static const HlQuantityKind plant_quantities[] = {
   { .key = "net_power", .sign = "P_net", .name = N_("Net power"), .group = N_("Power"), .dimension = HL_DIMENSION_POWER,
@@ -82,11 +101,20 @@ static const HlQuantityKind plant_quantities[] = {
   { .key = "back_work_ratio", .sign = "P/P", .name = N_("Back work ratio"), .group = N_("Efficiency"), .dimension = HL_DIMENSION_RATIO,
     .flags = HL_QUANTITY_RESULT | HL_QUANTITY_PERCENT, NO_DEFAULT, NO_RANGE, LIMITS_FRACTION, .yield_rank = 20,
     .help = N_("Shaft power of the pumps over that of the turbines.") },
-  RESULT_EFFICIENCY ("carnot_efficiency", N_("Carnot efficiency"), 1.0,
-                     N_("1 - lowest over highest temperature of the working fluid: no cycle between them does better.")),
+  { .key = "carnot_efficiency", .sign = "η", .name = N_("Carnot efficiency"), .group = N_("Efficiency"),
+    .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_RESULT | HL_QUANTITY_PERCENT | HL_QUANTITY_DERIVED, NO_DEFAULT, NO_RANGE,
+    LIMITS (0.0, 1.0), .yield_rank = 20,
+    .help = N_("1 - lowest over highest temperature of the working fluid: no cycle between them does better.") },
   { .key = "exhaust_moisture", .sign = "y", .name = N_("Exhaust moisture"), .group = N_("Limits"), .dimension = HL_DIMENSION_RATIO,
     .flags = HL_QUANTITY_RESULT | HL_QUANTITY_PERCENT, NO_DEFAULT, RANGE (0.0, 0.12), LIMITS_FRACTION, .yield_rank = 20,
     .help = N_("Liquid mass fraction at the wettest turbine exhaust.") },
+  SECOND_LAW ("exergy_input", "E_in", N_("Exergy input"),
+              N_("Exergy of all that comes in: fuel, heat at the temperature at which it passes, streams, electricity.")),
+  SECOND_LAW ("exergy_product", "E_P", N_("Exergy made"), N_("Net power, and the exergy of the heat delivered.")),
+  SECOND_LAW ("exergy_loss", "E_L", N_("Exergy lost"),
+              N_("Exergy that leaves unused: with cooling water, heat losses, water lost, streams that leave, consumers not drawn.")),
+  SECOND_LAW ("exergy_destruction", "E_D", N_("Exergy destroyed"), N_("Dead state temperature times the entropy that all components produce.")),
+  SECOND_LAW_EFFICIENCY (N_("Exergy made over exergy input.")),
 };
 
 static const HlQuantityKind *
@@ -96,6 +124,13 @@ lookup (const HlQuantityKind *kinds, guint n, const char *key)
     if (g_str_equal (kinds[i].key, key))
       return &kinds[i];
   return NULL;
+}
+
+const HlQuantityKind *
+hl_common_quantities (guint *n)
+{
+  *n = G_N_ELEMENTS (common_quantities);
+  return common_quantities;
 }
 
 const HlQuantityKind *

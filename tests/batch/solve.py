@@ -9,7 +9,7 @@ import xml.etree.ElementTree as ElementTree
 
 from tap import SOURCE, batch, main, plant, refused
 
-STREAM_KEYS = ["m_kg_s", "p_Pa", "T_K", "h_J_kg", "s_J_kgK", "x"]
+STREAM_KEYS = ["m_kg_s", "p_Pa", "T_K", "h_J_kg", "s_J_kgK", "e_J_kg", "x"]
 
 
 def solved(*options, name="loop.heatloom", status=0):
@@ -49,7 +49,7 @@ def test_sensitivity_of_what_is_not_there():
 
 def test_json_has_the_members_of_the_contract():
     found = solved()
-    assert list(found) == ["solved", "plant", "streams", "components", "findings", "yielded"], list(found)
+    assert list(found) == ["solved", "plant", "streams", "components", "exergy", "findings", "yielded"], list(found)
     assert found["solved"] is True and found["yielded"] == []
     assert list(found["streams"]) == ["1", "2", "3", "4"] and list(found["components"]) == ["B1", "T1", "C1", "P1"]
     for stream in found["streams"].values():
@@ -57,6 +57,23 @@ def test_json_has_the_members_of_the_contract():
     for finding in found["findings"]:
         assert set(finding) == {"grade", "code", "text", "at", "mends"}, finding
         assert finding["grade"] in ("hint", "caution", "warning") and isinstance(finding["mends"], list)
+
+
+def test_exergy_comes_in_and_is_made_lost_or_destroyed():
+    found = solved()
+    incoming = ("fuel", "heat", "stream_in", "cold", "electricity")
+    assert {flow["what"] for flow in found["exergy"]} >= {"heat", "destruction", "net"}, found["exergy"]
+    came = sum(flow["power_W"] for flow in found["exergy"] if flow["what"] in incoming)
+    went = sum(flow["power_W"] for flow in found["exergy"] if flow["what"] not in incoming)
+    close(came, went)
+    close(found["plant"]["exergy_input_W"], came)
+    destroyed = {flow["at"]: flow["power_W"] for flow in found["exergy"] if flow["what"] == "destruction"}
+    close(destroyed["T1"], found["components"]["T1"]["exergy_destruction_W"])
+    close(found["plant"]["exergy_efficiency"], found["plant"]["exergy_product_W"] / came)
+    live, exhaust = (found["streams"][id] for id in "12")
+    turbine = found["components"]["T1"]
+    close(turbine["exergy_fuel_W"], live["m_kg_s"] * (live["e_J_kg"] - exhaust["e_J_kg"]))
+    close(turbine["exergy_product_W"], turbine["power_W"])
 
 
 def test_json_numbers_are_those_of_the_plant():

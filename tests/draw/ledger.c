@@ -50,14 +50,14 @@ assert_cell (const Fixture *fixture, guint stream, const char *key, const char *
 static void
 test_headings_name_the_units (Fixture *fixture, gconstpointer data)
 {
-  static const char *const keys[] = { "id", "from", "to", "medium", "phase", "m", "p", "T", "x", "h", "s", "v", "volume_flow", "origin" };
+  static const char *const keys[] = { "id", "from", "to", "medium", "phase", "m", "p", "T", "x", "h", "s", "e", "v", "volume_flow", "origin" };
   static const char *const metric[] = {
     "Stream", "From", "To", "Medium", "Phase", "Flow [kg/s]", "Pressure [bar]", "Temperature [°C]", "Quality", "Enthalpy [kJ/kg]",
-    "Entropy [kJ/(kg K)]", "Specific volume [m³/kg]", "Volume flow [m³/h]", "Origin",
+    "Entropy [kJ/(kg K)]", "Exergy [kJ/kg]", "Specific volume [m³/kg]", "Volume flow [m³/h]", "Origin",
   };
   static const char *const us[] = {
     "Stream", "From", "To", "Medium", "Phase", "Flow [klb/h]", "Pressure [psia]", "Temperature [°F]", "Quality", "Enthalpy [Btu/lb]",
-    "Entropy [Btu/(lb °F)]", "Specific volume [ft³/lb]", "Volume flow [ft³/min]", "Origin",
+    "Entropy [Btu/(lb °F)]", "Exergy [Btu/lb]", "Specific volume [ft³/lb]", "Volume flow [ft³/min]", "Origin",
   };
   (void) fixture;
   (void) data;
@@ -81,7 +81,7 @@ test_cells_say_what_the_solution_holds (Fixture *fixture, gconstpointer data)
       hl_solution_stream (fixture->solution, stream, &result);
       const struct { const char *key; double value; } cells[] = {
         { "m", result.m }, { "p", result.state.p }, { "T", result.state.T }, { "x", result.state.x }, { "h", result.state.h },
-        { "s", result.state.s }, { "v", result.state.v }, { "volume_flow", result.m * result.state.v },
+        { "s", result.state.s }, { "e", result.e }, { "v", result.state.v }, { "volume_flow", result.m * result.state.v },
       };
       for (guint i = 0; i < G_N_ELEMENTS (cells); i++)
         for (int units = 0; units < HL_N_UNIT_SETS; units++)

@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "plants.h"
 #include <math.h>
+#include <string.h>
 
 static HlAddress
 address (const HlSolution *s, const char *text)
@@ -29,9 +30,10 @@ moved (const HlSolution *s, const HlAddress *result, const HlSensitivity *given,
   return found;
 }
 
-/* Central differences of a ten-thousandth: the solver's last digits count 1e-7 of the result then, the curvature less. */
+/* Central differences of a part of the value: of a ten-thousandth the solver's last digits count 1e-7 of the result, the curvature
+ * less.  @scale: what the result is a difference of, where its last digits are those of larger numbers; 0: its own. */
 static guint
-compare (const char *text, const char *result_text)
+compare_by (const char *text, const char *result_text, double part, double scale)
 {
   guint n = 0;
   g_autoptr (HlPlant) plant = test_plant (text);
@@ -44,13 +46,13 @@ compare (const char *text, const char *result_text)
   for (guint k = 0; k < list->len; k++)
     {
       const HlSensitivity *one = &g_array_index (list, HlSensitivity, k);
-      double step = 1e-4 * fabs (one->value), alone;
+      double step = part * fabs (one->value), alone;
       g_assert_true (hl_solution_sensitivity (s, &result, &one->given, &alone));
       g_assert_cmpfloat (alone, ==, one->derivative);
       if (!(step > 0.0))
         continue;               /* zero is an end of the range: no two-sided difference */
       double difference = (moved (s, &result, one, one->value + step) - moved (s, &result, one, one->value - step)) / (2.0 * step);
-      double tolerance = 1e-5 * fabs (difference) + 1e-6 * fabs (value / one->value);
+      double tolerance = 1e-5 * fabs (difference) + 1e-6 * fmax (fabs (value), scale) / fabs (one->value);
       if (!(fabs (difference - one->derivative) <= tolerance))
         {
           g_autofree char *name = hl_address_to_text (&one->given);
@@ -59,6 +61,25 @@ compare (const char *text, const char *result_text)
       n++;
     }
   return n;
+}
+
+static guint
+compare (const char *text, const char *result)
+{
+  return compare_by (text, result, 1e-4, 0.0);
+}
+
+/* What is destroyed is a small difference of flows of entropy times the dead state's temperature, each as large as the heat; property
+ * calls whose derivatives hold to 1e-6 leave that much of the heat. */
+static guint
+compare_exergy (const char *text, const char *result)
+{
+  g_autoptr (HlPlant) plant = test_plant (text);
+  g_autoptr (HlSolution) s = hl_solve (plant, NULL);
+  if (strstr (result, "stream:") != NULL)
+    return compare (text, result);
+  /* An efficiency is a quotient of two such. */
+  return compare_by (text, result, 5e-4, strstr (result, "exergy_efficiency") != NULL ? 2.0 : test_value (s, "plant.heat_input"));
 }
 
 static void
@@ -77,6 +98,21 @@ test_states_of_streams (void)
   const char *const results[] = { "stream:2.h", "stream:2.s", "stream:2.v", "stream:2.x", "stream:4.T", "stream:1.m", "stream:3.p" };
   for (guint k = 0; k < G_N_ELEMENTS (results); k++)
     g_assert_cmpuint (compare (test_simple_loop, results[k]), >, 8);
+}
+
+/* Second law: streams, components of every sort, and the plant. */
+static void
+test_exergy (void)
+{
+  const char *const loop[] = { "stream:2.e", "T1.exergy_destruction", "T1.exergy_efficiency", "C1.exergy_destruction", "C1.exergy_fuel", "plant.exergy_efficiency",
+                               "plant.exergy_destruction" };
+  const char *const industrial[] = { "B1.exergy_efficiency", "D1.exergy_efficiency", "U1.exergy_product", "U1.exergy_loss", "P1.exergy_product", "plant.exergy_input",
+                                     "plant.exergy_efficiency", "plant.exergy_loss" };
+  for (guint k = 0; k < G_N_ELEMENTS (loop); k++)
+    g_assert_cmpuint (compare_exergy (test_simple_loop, loop[k]), >, 5);
+  for (guint k = 0; k < G_N_ELEMENTS (industrial); k++)
+    g_assert_cmpuint (compare_exergy (test_industrial_plant, industrial[k]), >, 15);
+  g_assert_cmpuint (compare_exergy (test_reheat_plant, "H1.exergy_efficiency") + compare_exergy (test_reheat_plant, "plant.exergy_efficiency"), >, 30);
 }
 
 /* By hand: the shaft power is the internal power times the mechanical efficiency, the internal power follows from net power
@@ -113,6 +149,7 @@ main (int argc, char **argv)
   g_test_init (&argc, &argv, NULL);
   g_test_add_func ("/engine/sensitivity/differences", test_against_differences);
   g_test_add_func ("/engine/sensitivity/states", test_states_of_streams);
+  g_test_add_func ("/engine/sensitivity/exergy", test_exergy);
   g_test_add_func ("/engine/sensitivity/by-hand", test_by_hand);
   g_test_add_func ("/engine/sensitivity/none", test_what_has_none);
   return g_test_run ();

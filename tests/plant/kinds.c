@@ -44,7 +44,7 @@ test_rows_are_complete (void)
 {
   guint n;
   const HlQuantityKind *quantities = hl_stream_quantities (&n);
-  g_assert_cmpuint (n, ==, 7);
+  g_assert_cmpuint (n, ==, 8);
   for (guint i = 0; i < n; i++)
     check_quantity ("stream", &quantities[i]);
   quantities = hl_plant_quantities (&n);
@@ -52,6 +52,12 @@ test_rows_are_complete (void)
     {
       check_quantity ("plant", &quantities[i]);
       g_assert_true (hl_plant_quantity_lookup (quantities[i].key) == &quantities[i]);
+    }
+  quantities = hl_common_quantities (&n);
+  for (guint i = 0; i < n; i++)
+    {
+      check_quantity ("component", &quantities[i]);
+      g_assert_true (quantities[i].flags & HL_QUANTITY_DERIVED);
     }
   for (guint k = 0; k < hl_kind_count (); k++)
     {

@@ -70,6 +70,8 @@ append_kind (GString *out, const HlKind *kind)
   states = hl_stream_quantities (&n_states);
   for (guint i = 0; i < n_states && ports->len > 0; i++)
     {
+      if (states[i].flags & HL_QUANTITY_DERIVED)
+        continue;
       g_autofree char *pattern = g_strdup_printf ("^(%s)\\\\.%s$", ports->str, states[i].key);
       g_string_append (out, between);
       append_quantity (out, pattern, &states[i]);
@@ -93,13 +95,18 @@ append_kind (GString *out, const HlKind *kind)
 static void
 append_values (GString *out, const char *name, const HlQuantityKind *quantities, guint n)
 {
+  const char *between = "";
   g_string_append_printf (out, "  \"%s\": {\"type\": \"object\", \"additionalProperties\": false, \"patternProperties\": {\n", name);
   for (guint i = 0; i < n; i++)
     {
       g_autofree char *pattern = g_strdup_printf ("^%s$", quantities[i].key);
+      if (quantities[i].flags & HL_QUANTITY_DERIVED)
+        continue;
+      g_string_append (out, between);
       append_quantity (out, pattern, &quantities[i]);
-      g_string_append (out, i + 1 < n ? ",\n" : "}},\n");
+      between = ",\n";
     }
+  g_string_append (out, "}},\n");
 }
 
 static const char head[] =
@@ -233,6 +240,8 @@ plant_of_everything (void)
           {
             HlQuantity quantity = hl_component_quantity (component, i);
             HlValue value = { .origin = HL_ORIGIN_GIVEN, .value = some_value (quantity.kind, quantity.number) };
+            if (quantity.kind->flags & HL_QUANTITY_DERIVED)
+              continue;
             hl_component_set_value (component, quantity.key, &value);
           }
         next = hl_plant_with_component (plant, component);

@@ -93,6 +93,8 @@ emit_boiler (HlEmit *emit)
   int efficiency = hl_emit_own (emit, "efficiency", HL_VAR_RATIO), fuel_heat = hl_emit_own (emit, "fuel_heat", HL_VAR_POWER);
   int lhv = hl_emit_own (emit, "fuel_lhv", HL_VAR_ENTHALPY), flow = hl_emit_own (emit, "fuel_flow", HL_VAR_FLOW);
   int loss = hl_emit_own (emit, "flue_loss", HL_VAR_POWER), ratio = hl_emit_own (emit, "fuel_hhv_ratio", HL_VAR_RATIO);
+  if (hl_emit_has_value (emit, "fuel_exergy_ratio"))
+    hl_emit_own (emit, "fuel_exergy_ratio", HL_VAR_RATIO);
   hl_emit_done (emit, hl_add_quotient (emit->system, fuel_heat, heat, efficiency), NULL, 0);
   hl_emit_done (emit, hl_add_quotient (emit->system, flow, fuel_heat, lhv), NULL, 0);
   hl_emit_done (emit, hl_add_linear (emit->system, HL_VAR_POWER, (const int[]) { loss, fuel_heat, heat },

@@ -30,9 +30,9 @@ static void
 use_own (HlEmit *emit, Water *water)
 {
   const HlFluid *fluid = water->fluid = emit->model->water;
-  water->p_out = hl_emit_hidden (emit, "water_outlet_p", HL_VAR_PRESSURE);
-  water->h_in = hl_emit_hidden (emit, "water_inlet_h", HL_VAR_ENTHALPY);
-  water->h_out = hl_emit_hidden (emit, "water_outlet_h", HL_VAR_ENTHALPY);
+  water->p_out = hl_emit_own (emit, "water_outlet_p", HL_VAR_PRESSURE);
+  water->h_in = hl_emit_own (emit, "water_inlet_h", HL_VAR_ENTHALPY);
+  water->h_out = hl_emit_own (emit, "water_outlet_h", HL_VAR_ENTHALPY);
   hl_system_var (emit->system, water->h_in)->start = 2e5;
   hl_system_var (emit->system, water->h_out)->start = 4e5;
   hl_emit_done (emit, hl_add_enthalpy_at_temperature (emit->system, fluid, water->p_in, water->T_in, water->h_in), NULL, -1);

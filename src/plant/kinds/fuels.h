@@ -31,6 +31,9 @@ static const char *const fuel_names[] = {
 #define SIEGERT_OURS    N_("calculated for an example of an analysis: dry flue gas of 1.33 kJ/(m3 K), its water vapour of 1.5 kJ/(m3 K)")
 #define EN_RADIATION    N_("EN 12952-15, from memory, to be checked: 0.0113 oil and gas, 0.0220 hard coal, 0.0315 lignite and fluidised bed")
 
+#define EXERGY_RATIOS   N_("natural gas 1.04, fuel oil 1.06, hard coal 1.06-1.10, lignite 1.17, wood 1.15-1.30: from memory of Kotas 1985 and Szargut")
+#define EXERGY_AS_WOOD  N_("no source: taken as that of wood")
+
 static const HlChoiceDefault fuel_lhv[N_FUELS] = {
   [FUEL_NATURAL_GAS] = { 48.0e6, IPCC }, [FUEL_DIESEL_OIL] = { 43.0e6, IPCC_MEMORY }, [FUEL_RESIDUAL_OIL] = { 40.4e6, IPCC },
   [FUEL_ANTHRACITE] = { 26.7e6, IPCC_MEMORY }, [FUEL_BITUMINOUS_COAL] = { 25.8e6, IPCC_MEMORY },
@@ -89,4 +92,9 @@ static const HlChoiceDefault fuel_radiation[N_FUELS] = {
   [FUEL_ANTHRACITE] = { 0.0220, EN_RADIATION }, [FUEL_BITUMINOUS_COAL] = { 0.0220, EN_RADIATION },
   [FUEL_SUB_BITUMINOUS_COAL] = { 0.0220, EN_RADIATION }, [FUEL_LIGNITE] = { 0.0315, EN_RADIATION }, [FUEL_WOOD] = { 0.0315, EN_RADIATION },
   [FUEL_WASTE] = { 0.0315, EN_RADIATION },
+};
+static const HlChoiceDefault fuel_exergy[N_FUELS] = {
+  [FUEL_NATURAL_GAS] = { 1.04, EXERGY_RATIOS }, [FUEL_DIESEL_OIL] = { 1.06, EXERGY_RATIOS }, [FUEL_RESIDUAL_OIL] = { 1.06, EXERGY_RATIOS },
+  [FUEL_ANTHRACITE] = { 1.06, EXERGY_RATIOS }, [FUEL_BITUMINOUS_COAL] = { 1.08, EXERGY_RATIOS }, [FUEL_SUB_BITUMINOUS_COAL] = { 1.10, EXERGY_RATIOS },
+  [FUEL_LIGNITE] = { 1.17, EXERGY_RATIOS }, [FUEL_WOOD] = { 1.20, EXERGY_RATIOS }, [FUEL_WASTE] = { 1.20, EXERGY_AS_WOOD },
 };

@@ -15,6 +15,9 @@ static const HlQuantityKind quantities[] = {
     .help = N_("Pressure lost from feed inlet to steam outlet as a part of the feed pressure.") },
   REHEAT_LOSS_ROW,
   HEAT_ROWS,
+  { .key = "source_T", .sign = "T", .name = N_("Temperature of the source"), .group = N_("Heat"),
+    .dimension = HL_DIMENSION_TEMPERATURE, .flags = 0, NO_DEFAULT, NO_RANGE, LIMITS_TEMPERATURE, .yield_rank = 97,
+    .help = N_("Mean temperature at which the heat is offered; only results of the second law need it. Without it the heat counts at the temperature of the fluid.") },
 };
 
 const HlKind hl_kind_heat_input = {
