@@ -2,8 +2,8 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "windows.h"
 
-#define ROUNDS 10
-#define ACTIONS 300      /* a round; each makes a step at most, and the history holds more */
+#define ROUNDS 4
+#define ACTIONS 500      /* a round; each makes a step at most, and the history holds more */
 
 static int
 any (GRand *rand, guint n)
