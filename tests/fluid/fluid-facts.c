@@ -3,6 +3,7 @@
 #include "fluid/fluid-facts.h"
 
 #include "media.h"
+#include "validation.h"
 
 /* Kinds computed before with other code from the same equations (sign of ds/dT of
  * saturated vapour at 0.60 to 0.88 of the critical temperature); they agree with what
@@ -74,8 +75,8 @@ test_boiling_points_are_those_of_handbooks (void)
     {
       HlFluidFacts facts;
       hl_fluid_facts (hl_fluid_lookup (rows[i].id), &facts);
-      if (!(fabs (facts.T_boiling - 273.15 - rows[i].T_celsius) <= rows[i].within))
-        g_error ("%s boils at %.3f degC, handbooks say %g", rows[i].id, facts.T_boiling - 273.15, rows[i].T_celsius);
+      validate ("Media: boiling points at 1 atm", rows[i].id, "CRC Handbook of Chemistry and Physics and makers' tables, from memory", "boiling point", "°C",
+                rows[i].T_celsius, facts.T_boiling - 273.15, rows[i].within, 5);
     }
   HlFluidFacts facts;
   hl_fluid_facts (hl_fluid_lookup ("carbon-dioxide"), &facts);

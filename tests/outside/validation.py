@@ -31,11 +31,20 @@ def rows_of(programs):
     return rows
 
 
-def difference(published, ours):
+def plain(number):
+    """A number without an exponent."""
+    return f"{float(number):.0f}" if "e+" in number else number
+
+
+def difference(published, ours, unit):
+    if unit in ("°C", "K"):
+        return f"{float(ours) - float(published):+.2g} K"
     return f"{(float(ours) - float(published)) / abs(float(published)) * 100:+.2g} %" if float(published) != 0.0 else f"{float(ours):+.2g}"
 
 
-def allowed(published, tolerance):
+def allowed(published, tolerance, unit):
+    if unit in ("°C", "K"):
+        return f"{float(tolerance):.2g} K"
     return f"{float(tolerance) / abs(float(published)) * 100:.2g} %" if float(published) != 0.0 else f"{float(tolerance):.2g}"
 
 
@@ -51,7 +60,7 @@ def page_of(rows):
             text.append(f"\n{source_now}:\n\n| | quantity | published | ours | difference | allowed |\n|---|---|---|---|---|---|\n")
             source = source_now
         unit_text = "" if unit == "1" else f" {unit}"
-        text.append(f"| {subject} | {quantity} | {published}{unit_text} | {ours}{unit_text} | {difference(published, ours)} | {allowed(published, tolerance)} |\n")
+        text.append(f"| {subject} | {quantity} | {plain(published)}{unit_text} | {plain(ours)}{unit_text} | {difference(published, ours, unit)} | {allowed(published, tolerance, unit)} |\n")
         count += 1
     text.append(f"\n{count} values.\n")
     return "".join(text)
@@ -62,7 +71,8 @@ def grouped(rows):
     sections = {}
     for row in rows:
         sections.setdefault(row[0], {}).setdefault(row[2], []).append(row)
-    return [row for sources in sections.values() for same in sources.values() for row in same]
+    in_order = sorted(sections, key=lambda section: section.startswith("Media"))      # plants first; the order is kept otherwise
+    return [row for section in in_order for same in sections[section].values() for row in same]
 
 
 def main(arguments):
