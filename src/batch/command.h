@@ -30,7 +30,7 @@ typedef struct {
   HlExit             (*run) (const HlArguments *arguments);
 } HlBatchCommand;
 
-extern const HlBatchCommand hl_command_solve, hl_command_check, hl_command_note, hl_command_variants, hl_command_state, hl_command_kinds, hl_command_fluids, hl_command_template;
+extern const HlBatchCommand hl_command_solve, hl_command_check, hl_command_note, hl_command_variants, hl_command_state, hl_command_kinds, hl_command_fluids, hl_command_fuel, hl_command_template;
 
 /* Reads what follows the command's name; complains in full sentences. */
 HlArguments *hl_arguments_parse   (const HlBatchCommand *command, int argc, char **argv, GError **error);

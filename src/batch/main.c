@@ -7,7 +7,7 @@
 #include "plant/i18n.h"
 
 static const HlBatchCommand *const commands[] = {
-  &hl_command_solve, &hl_command_check, &hl_command_note, &hl_command_variants, &hl_command_state, &hl_command_kinds, &hl_command_fluids, &hl_command_template,
+  &hl_command_solve, &hl_command_check, &hl_command_note, &hl_command_variants, &hl_command_state, &hl_command_kinds, &hl_command_fluids, &hl_command_fuel, &hl_command_template,
 };
 
 static const char caution[] = N_(

@@ -69,6 +69,7 @@ typedef enum {
   HL_FLUID_ERROR_FILE,      /* a coefficient file is not right */
   HL_FLUID_ERROR_ID,        /* no medium has this id */
   HL_FLUID_ERROR_GAS,       /* a composition that is none */
+  HL_FLUID_ERROR_FUEL,      /* a fuel that is none, or does not burn */
 } HlFluidError;
 
 /* Fluids live as long as the program and are immutable: every call may run in any thread.

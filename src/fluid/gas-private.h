@@ -10,6 +10,7 @@ G_BEGIN_DECLS
 #define HL_GAS_P_MAX 10e6             /* beyond it the ideal gas is too far from the truth [Pa] */
 #define HL_GAS_T_BREAK 1000.0         /* where the two stretches of every polynomial meet [K] */
 #define HL_GAS_T_ICE 273.15           /* below it water freezes out [K] */
+#define HL_GAS_H_LIQUID_WATER -285.830e3      /* enthalpy of formation at 298.15 K [J/mol], CODATA 1989 */
 #define HL_GAS_MAX_WATER 0.95         /* mole fraction of water above which the medium is steam */
 
 typedef enum { HL_ATOM_H, HL_ATOM_C, HL_ATOM_N, HL_ATOM_O, HL_ATOM_S, HL_ATOM_CL, HL_ATOM_AR, HL_ATOM_HE, HL_N_ATOMS } HlAtom;

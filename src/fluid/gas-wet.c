@@ -11,7 +11,6 @@
  * the zeros of the gas at 298.15 K: enthalpy of formation of the liquid -285.830
  * kJ/mol (CODATA key values, J. D. Cox, D. D. Wagman, V. A. Medvedev 1989), and the
  * entropy for which liquid and vapour at 298.15 K are in equilibrium. */
-#define H_FORMATION_LIQUID -285.830e3
 
 typedef struct {
   double M;                           /* [kg/mol] */
@@ -33,8 +32,8 @@ liquid_zero (void)
       double h_vapour = data->R * hl_gas_h (&water->molar, T);
       double s_vapour = data->R * (hl_gas_s (&water->molar, T, log (T)) - log (p / HL_GAS_P0));
       zero.M = water->M;
-      zero.add_h = H_FORMATION_LIQUID / water->M - liquid.h;
-      zero.add_s = (s_vapour - (h_vapour - H_FORMATION_LIQUID) / T) / water->M - liquid.s;
+      zero.add_h = HL_GAS_H_LIQUID_WATER / water->M - liquid.h;
+      zero.add_s = (s_vapour - (h_vapour - HL_GAS_H_LIQUID_WATER) / T) / water->M - liquid.s;
       g_once_init_leave (&once, 1);
     }
   return &zero;

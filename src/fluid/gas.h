@@ -27,5 +27,8 @@ HL_PUBLIC void           hl_gas_mass           (const HlFluid *gas, double fract
 HL_PUBLIC double         hl_gas_zero_enthalpy  (const HlFluid *gas);      /* of the gas at 298.15 K, all water as vapour [J/kg] */
 
 HL_PUBLIC double         hl_gas_water_dew_point (const HlFluid *gas, double p);     /* [K]; NaN without water, or where ice forms first */
+/* Where sulphuric acid begins to condense [K]; @so3_share of the SO2 has become SO3.  NaN without sulphur or water. */
+HL_PUBLIC double         hl_gas_acid_dew_point  (const HlFluid *gas, double p, double so3_share);
+HL_PUBLIC double         hl_acid_dew_point      (double p_water, double p_so3);     /* from partial pressures [Pa] */
 
 G_END_DECLS

@@ -2,7 +2,7 @@
 # SPDX-License-Identifier: GPL-3.0-or-later
 from tap import batch, main, refused
 
-COMMANDS = ("solve", "check", "note", "state", "kinds", "fluids", "template")
+COMMANDS = ("solve", "check", "note", "state", "kinds", "fluids", "fuel", "template")
 
 
 def test_help_names_the_commands_and_the_caution():
@@ -34,7 +34,7 @@ def test_no_command_is_an_error():
 
 
 def test_unknown_commands_are_refused_with_the_list():
-    refused("frobnicate", status=2, says=["frobnicate", "solve, check, note, variants, state, kinds, fluids"])
+    refused("frobnicate", status=2, says=["frobnicate", "solve, check, note, variants, state, kinds, fluids, fuel"])
     refused("sweep", "x.heatloom", status=2, says="sweep")
 
 
