@@ -254,48 +254,6 @@ hl_add_straight_line (HlSystem *system, const HlFluid *fluid, int p_in, int h_in
 /* --- states -------------------------------------------------------------- */
 
 static HlStatus
-enthalpy_at_temperature (const HlEquation *e, G_GNUC_UNUSED const double *a, const double *x, double *r, double *dr)
-{
-  HlState st;
-  double p = exp (x[0]);
-  HlStatus status = hl_fluid_state_pT (e->fluid, p, x[1], &st);
-  if (status != HL_OK)
-    return status;
-  *r = x[2] - st.h;
-  dr[0] = st.T_p / st.T_h * p;
-  dr[1] = -1.0 / st.T_h;
-  dr[2] = 1.0;
-  return HL_OK;
-}
-
-HlEquation *
-hl_add_enthalpy_at_temperature (HlSystem *system, const HlFluid *fluid, int p, int T, int h)
-{
-  return with (ADD (enthalpy_at_temperature, HL_VAR_ENTHALPY, 4, p, T, h), fluid, N_("{2} = h({0}, {1})"), -1);
-}
-
-static HlStatus
-temperature (const HlEquation *e, G_GNUC_UNUSED const double *a, const double *x, double *r, double *dr)
-{
-  HlState st;
-  double p = exp (x[0]);
-  HlStatus status = hl_fluid_state_ph (e->fluid, p, x[1], &st);
-  if (status != HL_OK)
-    return status;
-  *r = x[2] - st.T;
-  dr[0] = -st.T_p * p;
-  dr[1] = -st.T_h;
-  dr[2] = 1.0;
-  return HL_OK;
-}
-
-HlEquation *
-hl_add_temperature (HlSystem *system, const HlFluid *fluid, int p, int h, int T)
-{
-  return with (ADD (temperature, HL_VAR_TEMPERATURE, 4, p, h, T), fluid, N_("{2} = T({0}, {1})"), 2);
-}
-
-static HlStatus
 enthalpy_at_entropy (const HlEquation *e, G_GNUC_UNUSED const double *a, const double *x, double *r, double *dr)
 {
   HlState st;

@@ -24,6 +24,8 @@ HlEquation *hl_add_straight_line (HlSystem *system, const HlFluid *fluid, int p_
 
 /* State conditions.  "enthalpy at" is the form for a value that drives the state; the other one computes it. */
 HlEquation *hl_add_enthalpy_at_temperature (HlSystem *system, const HlFluid *fluid, int p, int T, int h);
+/* The same where the pressure may be what the temperature sets. */
+HlEquation *hl_add_enthalpy_condition      (HlSystem *system, const HlFluid *fluid, int p, int T, int h);
 HlEquation *hl_add_temperature             (HlSystem *system, const HlFluid *fluid, int p, int h, int T);
 HlEquation *hl_add_enthalpy_at_entropy     (HlSystem *system, const HlFluid *fluid, int p, int s, int h);
 HlEquation *hl_add_entropy                 (HlSystem *system, const HlFluid *fluid, int p, int h, int s);

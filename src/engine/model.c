@@ -40,11 +40,27 @@ state_address (const HlModel *model, const HlNode *node, const char *letter)
   return (HlAddress) { HL_OWNER_COMPONENT, hl_plant_component (model->plant, (guint) node->component)->id, g_intern_string (key) };
 }
 
+/* Side streams carry a part of the main flow, cooling water much more: near enough to begin with. */
+static double
+part_of_flow (const HlNode *node)
+{
+  static const struct { const char *port; double part; } rows[] = {
+    { "extraction", 0.06 }, { "drain", 0.06 }, { "spray", 0.02 }, { "cooling_", 40.0 }, { "water_", 20.0 },
+  };
+  for (guint k = 0; k < G_N_ELEMENTS (rows); k++)
+    {
+      gsize length = strlen (rows[k].port);
+      if (strncmp (node->port, rows[k].port, length) == 0 || (node->to_port != NULL && strncmp (node->to_port, rows[k].port, length) == 0))
+        return rows[k].part;
+    }
+  return NAN;
+}
+
 static void
 add_node (HlModel *model, HlNode node)
 {
   node.T = node.s = node.x = node.v = node.subcooling = -1;
-  node.m = hl_system_add_var (model->system, HL_VAR_FLOW, state_address (model, &node, "m"), NAN);
+  node.m = hl_system_add_var (model->system, HL_VAR_FLOW, state_address (model, &node, "m"), part_of_flow (&node));
   node.p = hl_system_add_var (model->system, HL_VAR_PRESSURE, state_address (model, &node, "p"), NAN);
   node.h = hl_system_add_var (model->system, HL_VAR_ENTHALPY, state_address (model, &node, "h"), NAN);
   hl_system_var (model->system, node.p)->scale = hl_system_var (model->system, node.h)->scale = hl_fluid_scale (node.fluid);
@@ -534,6 +550,8 @@ add_temperatures (HlModel *model, const gboolean *other, guint n_other)
         e = hl_add_temperature (model->system, node->fluid, node->p, node->h, node->T);
       else if (node->T_is_saturation)
         e = hl_add_saturation (model->system, node->fluid, node->p, node->T);
+      else if (node->T_is_free)
+        e = hl_add_enthalpy_condition (model->system, node->fluid, node->p, node->T, node->h);
       else
         e = hl_add_enthalpy_at_temperature (model->system, node->fluid, node->p, node->T, node->h);
       e->component = node->component;

@@ -21,6 +21,7 @@ struct _HlBlockWork {
   const int *equations, *vars;
   int      *column_of;            /* [n vars] column in the present block; -1 */
   double   *x, *x_try, *f, *f_try, *step, *unit;
+  const double *offset;           /* [n] scaled, added to the residuals; NULL: none */
   double   *dense;
   int      *pivot;
   /* KLU */
@@ -30,6 +31,9 @@ struct _HlBlockWork {
   int      *ap, *ai, *slot, n_slots;
   double   *ax;
   int       n_lifted;
+  int       n_bold;               /* steps at the beginning that may make things worse */
+  gboolean  keeps_flows;          /* none turns round on the way */
+  double    condition;            /* of the last matrix that solved a block */
 };
 
 HlBlockWork *
@@ -42,6 +46,24 @@ hl_block_work_new (HlSystem *system)
     w->column_of[i] = -1;
   klu_defaults (&w->common);
   return w;
+}
+
+HlSystem *
+hl_block_system (HlBlockWork *w)
+{
+  return w->system;
+}
+
+void
+hl_block_keep_flows (HlBlockWork *w, gboolean keeps)
+{
+  w->keeps_flows = keeps;
+}
+
+void
+hl_block_set_bold (HlBlockWork *w, int n_steps)
+{
+  w->n_bold = n_steps;
 }
 
 static void
@@ -192,7 +214,7 @@ evaluate (HlBlockWork *w, const double *x, gboolean derivatives, double *f, HlNu
           numbers->worst = w->equations[i];
           return FALSE;
         }
-      f[i] *= scale;
+      f[i] = f[i] * scale + (w->offset != NULL ? w->offset[i] : 0.0);
       if (!derivatives)
         continue;
       for (int k = 0; k < e->n; k++)
@@ -283,7 +305,7 @@ enthalpy_step (const HlFluidScale *scale)
 }
 
 /* How much of the step may be taken: pressures by a factor of two, enthalpies by a fifth of the heat of evaporation (400 kJ/kg of
- * water), temperatures by 100 K. */
+ * water), temperatures by 100 K; flows not to zero, where that is wanted. */
 static double
 step_cap (const HlBlockWork *w)
 {
@@ -297,6 +319,11 @@ step_cap (const HlBlockWork *w)
         case HL_VAR_ENTHALPY: cap = 0.4 * enthalpy_step (hl_system_var (w->system, w->vars[i])->scale); break;
         case HL_VAR_TEMPERATURE: cap = 0.33; break;
         case HL_VAR_RATIO: cap = 1.0; break;
+        case HL_VAR_FLOW:
+          if (!w->keeps_flows || !(w->x[i] > 0.0 && w->step[i] < 0.0))
+            continue;
+          cap = 0.9 * w->x[i] / w->unit[i];
+          break;
         default: continue;
         }
       if (fabs (w->step[i]) * t > cap)
@@ -333,7 +360,7 @@ iterate (HlBlockWork *w, HlNumbers *numbers)
               w->x_try[i] = w->x[i] + t * w->step[i] * w->unit[i];
               moved = fmax (moved, t * fabs (w->step[i]));
             }
-          accepted = evaluate (w, w->x_try, TRUE, w->f_try, numbers) && merit_of (w->f_try, n) < merit * (1.0 - 1e-4 * t);
+          accepted = evaluate (w, w->x_try, TRUE, w->f_try, numbers) && (step < w->n_bold || merit_of (w->f_try, n) < merit * (1.0 - 1e-4 * t));
         }
       if (!accepted && largest > GOOD_ENOUGH)
         return w->n_lifted > 0 ? HL_FAILED_SINGULAR : HL_FAILED_STEPS;
@@ -419,40 +446,74 @@ other_start (HlBlockWork *w, int number)
     }
 }
 
+/* From where the unknowns stand, with what is wanted of the equations shifted by @offset; ends at the best point found. */
 HlFailed
-hl_block_solve (HlBlockWork *w, const int *equations, const int *vars, int n, HlNumbers *numbers)
+hl_block_newton (HlBlockWork *w, const int *equations, const int *vars, int n, const double *offset, HlNumbers *numbers)
 {
   begin (w, equations, vars, n);
-  HlFailed failed = iterate (w, numbers), first_failed = failed;
-  g_autofree double *first_x = NULL;
-  int first_worst = numbers->worst;
-  double first_residual = numbers->residual;
-  for (int start = 1; failed != HL_FAILED_NOT && start < N_STARTS; start++)
-    {
-      if (first_x == NULL)
-        first_x = g_memdup2 (w->x, sizeof (double) * (gsize) n);
-      other_start (w, start);
-      failed = iterate (w, numbers);
-    }
-  if (failed != HL_FAILED_NOT)
-    {
-      memcpy (w->x, first_x, sizeof (double) * (gsize) n);
-      failed = first_failed;
-      numbers->worst = first_worst;
-      numbers->residual = first_residual;
-    }
+  w->offset = offset;
+  HlFailed failed = iterate (w, numbers);
   for (int i = 0; i < n; i++)
     w->system->x[vars[i]] = w->x[i];
   if (failed == HL_FAILED_NOT)
     {
-      double condition = condition_of (w);
-      numbers->condition = fmax (numbers->condition, condition);
-      if (!(condition <= SINGULAR_ABOVE))
+      w->condition = condition_of (w);
+      if (!(w->condition <= SINGULAR_ABOVE))
         failed = HL_FAILED_SINGULAR;
     }
-  if (failed == HL_FAILED_SINGULAR)
-    name_null (w, numbers);
+  w->offset = NULL;
   end (w);
+  return failed;
+}
+
+static HlFailed
+start_otherwise (HlBlockWork *w, const int *equations, const int *vars, int n, int number, HlNumbers *numbers)
+{
+  begin (w, equations, vars, n);
+  other_start (w, number);
+  for (int i = 0; i < n; i++)
+    w->system->x[vars[i]] = w->x[i];
+  end (w);
+  return hl_block_newton (w, equations, vars, n, NULL, numbers);
+}
+
+/* Where the start at hand leads nowhere: what the block would be with usual values, and from there on; then other starts. */
+HlFailed
+hl_block_solve (HlBlockWork *w, const int *equations, const int *vars, int n, const HlUsual *usual, HlNumbers *numbers)
+{
+  HlSystem *system = w->system;
+  gboolean usual_first = usual != NULL && usual->first;
+  w->keeps_flows = usual_first;
+  HlFailed failed = usual_first ? hl_block_relax (w, equations, vars, n, usual, numbers) : hl_block_newton (w, equations, vars, n, NULL, numbers);
+  if (failed != HL_FAILED_NOT)
+    {
+      HlFailed first_failed = failed;
+      int first_worst = numbers->worst;
+      double first_residual = numbers->residual;
+      g_autofree double *first_x = g_new (double, n);
+      for (int i = 0; i < n; i++)
+        first_x[i] = system->x[vars[i]];
+      if (usual != NULL && !usual_first)
+        failed = hl_block_relax (w, equations, vars, n, usual, numbers);
+      for (int start = 1; failed != HL_FAILED_NOT && start < N_STARTS; start++)
+        failed = start_otherwise (w, equations, vars, n, start, numbers);
+      if (failed != HL_FAILED_NOT)
+        {
+          failed = first_failed;
+          numbers->worst = first_worst;
+          numbers->residual = first_residual;
+          for (int i = 0; i < n; i++)
+            system->x[vars[i]] = first_x[i];
+        }
+    }
+  if (failed == HL_FAILED_NOT)
+    numbers->condition = fmax (numbers->condition, w->condition);
+  if (failed == HL_FAILED_SINGULAR)
+    {
+      begin (w, equations, vars, n);
+      name_null (w, numbers);
+      end (w);
+    }
   return failed;
 }
 

@@ -26,6 +26,14 @@ bounds (HlVarKind kind, const HlFluidScale *scale, double *low, double *high)
     }
 }
 
+gboolean
+hl_numbers_inside (const HlVar *var, double x)
+{
+  double low, high;
+  bounds (var->kind, var->scale != NULL ? var->scale : hl_fluid_scale (hl_fluid_water ()), &low, &high);
+  return x >= low && x <= high;
+}
+
 /* --- one unknown ---------------------------------------------------------- */
 
 typedef struct {
@@ -184,8 +192,8 @@ count_calls (HlNumbers *numbers, const HlEquation *equation, guint64 n)
   numbers->n_property_calls += n * (guint64) hl_equation_property_calls (equation);
 }
 
-static HlFailed
-solve_scalar (HlSystem *system, int equation, int var, HlNumbers *numbers)
+HlFailed
+hl_scalar_solve (HlSystem *system, int equation, int var, HlNumbers *numbers)
 {
   Scalar s;
   double r, d, low, high, a, b, least_at = NAN;
@@ -273,7 +281,7 @@ compute_last (HlSystem *system, const HlStructure *structure, HlNumbers *numbers
 }
 
 void
-hl_numbers_solve (HlSystem *system, const HlStructure *structure, HlNumbers *numbers)
+hl_numbers_solve (HlSystem *system, const HlStructure *structure, const HlUsual *usual, HlNumbers *numbers)
 {
   memset (numbers, 0, sizeof *numbers);
   numbers->block = -1;
@@ -287,8 +295,8 @@ hl_numbers_solve (HlSystem *system, const HlStructure *structure, HlNumbers *num
     {
       int first = structure->start[k], n = structure->start[k + 1] - first;
       HlFailed failed = n == 1
-        ? solve_scalar (system, structure->equations[first], structure->vars[first], numbers)
-        : hl_block_solve (work, structure->equations + first, structure->vars + first, n, numbers);
+        ? hl_scalar_solve (system, structure->equations[first], structure->vars[first], numbers)
+        : hl_block_solve (work, structure->equations + first, structure->vars + first, n, usual, numbers);
       if (failed != HL_FAILED_NOT)
         {
           numbers->failed = failed;

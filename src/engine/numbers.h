@@ -24,6 +24,17 @@ typedef struct {
   gboolean *is_known;                 /* [n vars] of roots; g_free() */
 } HlNumbers;
 
-void hl_numbers_solve (HlSystem *system, const HlStructure *structure, HlNumbers *numbers);
+/* What is usual, asked only where a block cannot be solved from its start. */
+typedef struct {
+  gpointer data;
+  /* @usual: [n vars] a usual value of a root, as carried, or NaN; @is_unusual: [n vars] is a fixed root one that is seldom put in?
+   * Both come set to NaN and FALSE. */
+  gboolean first;              /* blocks begin with usual values, whatever the start */
+  int      variant;            /* 0: as they are; else each a little off, in a way of its own */
+  void   (*tell) (gpointer data, const gboolean *is_known, double *usual, gboolean *is_unusual);
+} HlUsual;
+
+/* @usual: or NULL. */
+void hl_numbers_solve (HlSystem *system, const HlStructure *structure, const HlUsual *usual, HlNumbers *numbers);
 void hl_numbers_skip  (HlSystem *system, HlNumbers *numbers);   /* only what was put in is known */
 G_END_DECLS

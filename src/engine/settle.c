@@ -21,8 +21,7 @@ typedef struct {
 static void
 analyse (Settle *settle)
 {
-  settle->model = hl_model_new (settle->plant);
-  settle->structure = hl_structure_new (settle->model->system);
+  hl_solve_prepare (settle->plant, NULL, 0, &settle->model, &settle->structure);
   settle->circuits = NULL;
 }
 
@@ -198,7 +197,7 @@ outcome_with (HlPlant *plant, const HlAddress *address, const HlValue *value)
   g_autoptr (HlPlant) changed = hl_plant_with_value (plant, address, value, NULL);
   if (changed == NULL)
     return FAILED;
-  g_autoptr (HlSolution) solution = hl_solve (changed, NULL);
+  g_autoptr (HlSolution) solution = hl_solve_once (changed, NULL, HL_PATIENCE_NONE);
   if (hl_solution_is_solved (solution) || solution->structure->n_surplus > 0 || solution->structure->n_missing > 0)
     return CLEAN;
   return solution->is_complete ? SOLVED_WITH_ERRORS : FAILED;

@@ -28,6 +28,14 @@ struct _HlSolution {
   HlSolveEffort  effort;
 };
 
+/* Unknowns, equations and their structure.  @other: [n_other nodes] see hl_model_new_other(); or NULL. */
+void hl_solve_prepare (HlPlant *plant, const gboolean *other, guint n_other, HlModel **model, HlStructure **structure);
+
+/* How far a solve goes where blocks cannot be solved from their start: not further; to usual values, see numbers-relax.c; to these
+ * from the beginning; and, counting on from there, to values near them. */
+typedef enum { HL_PATIENCE_NONE, HL_PATIENCE_USUAL, HL_PATIENCE_USUAL_FIRST } HlPatience;
+HlSolution *hl_solve_once (HlPlant *plant, const HlSolution *start, HlPatience patience);
+
 /* results.c: what follows from the solved unknowns. */
 void hl_results_states    (HlSolution *solution);
 void hl_results_plant     (HlSolution *solution);

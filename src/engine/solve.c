@@ -4,6 +4,9 @@
 #include "engine/checks.h"
 #include "engine/diagnose.h"
 #include "engine/solution-private.h"
+#include "engine/usual.h"
+
+#define N_VARIANTS 3        /* starts from usual values, each a little different */
 
 /* Takes over the values of an earlier solution where an unknown has the same address. */
 static void
@@ -65,16 +68,51 @@ fill_effort (HlSolution *solution)
   solution->effort.n_iterations = (guint) solution->numbers.n_iterations;
 }
 
+/* A temperature taken to set a pressure says too much where the pressure follows from something else: then it sets the
+ * enthalpy. */
+static void
+reconsider_saturation (HlPlant *plant, HlModel **model, HlStructure **structure)
+{
+  guint n = (*model)->nodes->len;
+  g_autofree gboolean *other = g_new0 (gboolean, n + 1);
+  gboolean any = FALSE;
+  for (guint k = 0; k < n; k++)
+    any |= other[k] = hl_model_node (*model, (int) k)->T_is_saturation && hl_model_node (*model, (int) k)->is_exhaust;
+  if (!any)
+    return;
+  HlModel *second = hl_model_new_other (plant, other, n);
+  HlStructure *of_second = hl_structure_new (second->system);
+  if (of_second->n_over < (*structure)->n_over)
+    {
+      HlModel *first = *model;
+      HlStructure *of_first = *structure;
+      *model = second;
+      *structure = of_second;
+      second = first;
+      of_second = of_first;
+    }
+  hl_model_free (second);
+  hl_structure_free (of_second);
+}
+
+void
+hl_solve_prepare (HlPlant *plant, const gboolean *other, guint n_other, HlModel **model, HlStructure **structure)
+{
+  *model = hl_model_new_other (plant, other, n_other);
+  *structure = hl_structure_new ((*model)->system);
+  if ((*structure)->n_over > 0 && other == NULL)
+    reconsider_saturation (plant, model, structure);
+}
+
 /* Plant to unknowns, and numbers for them. */
 static void
-try_solve (HlSolution *solution, const HlSolution *start, const gboolean *other, guint n_other)
+try_solve (HlSolution *solution, const HlSolution *start, HlPatience patience, const gboolean *other, guint n_other)
 {
   gint64 phase = g_get_monotonic_time ();
-  solution->model = hl_model_new_other (solution->plant, other, n_other);
+  hl_solve_prepare (solution->plant, other, n_other, &solution->model, &solution->structure);
   solution->effort.seconds_build += seconds_since (phase);
 
   phase = g_get_monotonic_time ();
-  solution->structure = hl_structure_new (solution->model->system);
   hl_findings_init (&solution->findings);
   gboolean may_try = hl_diagnose_structure (solution->model, solution->structure, &solution->findings);
   solution->effort.seconds_structure += seconds_since (phase);
@@ -82,7 +120,13 @@ try_solve (HlSolution *solution, const HlSolution *start, const gboolean *other,
   phase = g_get_monotonic_time ();
   start_from (solution->model->system, start);
   if (may_try)
-    hl_numbers_solve (solution->model->system, solution->structure, &solution->numbers);
+    {
+      HlUsualSource source = { solution->model, solution->structure };
+      HlUsual usual = hl_usual (&source);
+      usual.first = patience >= HL_PATIENCE_USUAL_FIRST;
+      usual.variant = MAX ((int) patience - (int) HL_PATIENCE_USUAL_FIRST, 0);
+      hl_numbers_solve (solution->model->system, solution->structure, patience == HL_PATIENCE_NONE ? NULL : &usual, &solution->numbers);
+    }
   else
     hl_numbers_skip (solution->model->system, &solution->numbers);
   solution->is_complete = may_try && solution->numbers.failed == HL_FAILED_NOT && solution->structure->n_missing == 0;
@@ -141,7 +185,7 @@ look_at_forms (const HlSolution *solution, gboolean *other)
 
 /* Tries the other form where a temperature may have been taken for the wrong one. */
 static void
-reconsider (HlSolution *solution, const HlSolution *start)
+reconsider (HlSolution *solution, const HlSolution *start, HlPatience patience)
 {
   guint n = solution->model->nodes->len;
   g_autofree gboolean *other = g_new0 (gboolean, n + 1), *again = g_new0 (gboolean, n + 1);
@@ -149,7 +193,7 @@ reconsider (HlSolution *solution, const HlSolution *start)
   if (forms == FORMS_HOLD)
     return;
   HlSolution second = *solution;
-  try_solve (&second, start, other, n);
+  try_solve (&second, start, patience, other, n);
   gboolean is_good = second.is_complete && look_at_forms (&second, again) == FORMS_HOLD;
   if (is_good || forms == FORMS_ARE_WRONG)
     {
@@ -183,17 +227,48 @@ finish (HlSolution *solution)
 }
 
 HlSolution *
-hl_solve (HlPlant *plant, const HlSolution *start)
+hl_solve_once (HlPlant *plant, const HlSolution *start, HlPatience patience)
 {
-  g_return_val_if_fail (plant != NULL, NULL);
   HlSolution *solution = g_new0 (HlSolution, 1);
   gint64 begin = g_get_monotonic_time ();
   g_atomic_ref_count_init (&solution->ref_count);
   solution->plant = hl_plant_ref (plant);
-  try_solve (solution, start, NULL, 0);
+  try_solve (solution, start, patience, NULL, 0);
   if (solution->structure->n_over == 0)
-    reconsider (solution, start);
+    reconsider (solution, start, patience);
   finish (solution);
   solution->seconds = seconds_since (begin);
+  return solution;
+}
+
+/* Several unknowns at once may have more than one answer: another start may lead to a better one, or to one at all. */
+static gboolean
+may_have_another (const HlSolution *solution)
+{
+  const HlStructure *s = solution->structure;
+  return !hl_solution_is_solved (solution) && s->n_over == 0 && s->n_missing == 0 && s->largest > 1 && solution->model->open_ports->len == 0;
+}
+
+/* Takes the better of the two, at equal merit the first; the other goes. */
+static HlSolution *
+better (HlSolution *first, HlSolution *second)
+{
+  gboolean take = hl_solution_is_solved (second) || (second->is_complete && !first->is_complete);
+  double seconds = first->seconds + second->seconds;
+  HlSolution *taken = take ? second : first;
+  hl_solution_unref (take ? first : second);
+  taken->seconds = seconds;
+  return taken;
+}
+
+HlSolution *
+hl_solve (HlPlant *plant, const HlSolution *start)
+{
+  g_return_val_if_fail (plant != NULL, NULL);
+  HlSolution *solution = hl_solve_once (plant, start, HL_PATIENCE_USUAL);
+  if (start != NULL && may_have_another (solution))
+    solution = better (solution, hl_solve_once (plant, NULL, HL_PATIENCE_USUAL));
+  for (int variant = 0; variant < N_VARIANTS && may_have_another (solution); variant++)
+    solution = better (solution, hl_solve_once (plant, NULL, HL_PATIENCE_USUAL_FIRST + variant));
   return solution;
 }

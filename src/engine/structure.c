@@ -210,9 +210,21 @@ pattern_clear (Pattern *pattern)
   g_free (pattern->var_of);
 }
 
+/* The form of an equation that goes with what is sought of it. */
+static void
+choose_form (HlSystem *system, int equation, int var, int block_size)
+{
+  HlEquation *e = hl_system_equation (system, equation);
+  if (e->in_block == NULL || (block_size == 1 && hl_equation_vars (system, e)[e->plain_for] == var))
+    return;
+  e->residual = e->in_block;
+  e->in_block = NULL;
+  e->linear = 0;
+}
+
 /* The fine blocks of the square part; they come upper triangular, so the last one is solved first. */
 static void
-take_blocks (HlStructure *s, const Pattern *pattern, const csd *dm)
+take_blocks (HlStructure *s, HlSystem *system, const Pattern *pattern, const csd *dm)
 {
   s->start = g_new (int, dm->nb + 1);
   s->equations = g_new (int, pattern->n_rows + 1);
@@ -226,7 +238,9 @@ take_blocks (HlStructure *s, const Pattern *pattern, const csd *dm)
       for (int i = 0; i < r1 - r0; i++)
         {
           s->equations[s->n_solved] = pattern->equation_of[dm->p[r0 + i]];
-          s->vars[s->n_solved++] = pattern->var_of[dm->q[c0 + i]];
+          s->vars[s->n_solved] = pattern->var_of[dm->q[c0 + i]];
+          choose_form (system, s->equations[s->n_solved], s->vars[s->n_solved], r1 - r0);
+          s->n_solved++;
         }
       s->largest = MAX (s->largest, r1 - r0);
       s->start[++s->n_blocks] = s->n_solved;
@@ -281,7 +295,7 @@ hl_structure_new (HlSystem *system)
   pattern_init (&pattern, system, &peel);
   csd *dm = cs_dmperm (pattern.pattern, 0);
   g_assert (dm != NULL);
-  take_blocks (s, &pattern, dm);
+  take_blocks (s, system, &pattern, dm);
   take_misfits (s, system, &pattern, dm);
   take_last (s, system, &peel);
   cs_dfree (dm);

@@ -130,23 +130,31 @@ fix_classes (HlSystem *system)
       }
 }
 
-/* The largest flow that is typed; else the one that a typed power suggests, at 1 MJ/kg. */
+/* What the typed flows and powers suggest, these at 1 MJ/kg.  A flow may be one of many, of cooling water or of a drain, so the
+ * power of the plant keeps it within bounds; a power may be a pump's, so it says little where it is not the plant's. */
 static double
 guess_flow_scale (const HlSystem *system)
 {
-  double flow = 0.0, power = 0.0;
+  double flow = 0.0, power = 0.0, of_plant = 0.0;
   for (guint k = 0; k < system->specs->len; k++)
     {
       const HlSpec *spec = hl_system_spec (system, k);
       HlVarKind kind = hl_system_var (system, spec->var)->kind;
       if (spec->origin == HL_ORIGIN_TIED)
         continue;
+      double part = hl_system_var (system, system->root[spec->var])->start;
       if (kind == HL_VAR_FLOW)
-        flow = fmax (flow, fabs (spec->value));
+        flow = fmax (flow, fabs (spec->value) / (isnan (part) ? 1.0 : part));
       if (kind == HL_VAR_POWER)
-        power = fmax (power, fabs (spec->value));
+        power = fmax (power, fabs (spec->value) / 1e6);
+      if (kind == HL_VAR_POWER && spec->address.owner == HL_OWNER_PLANT)
+        of_plant = fmax (of_plant, fabs (spec->value) / 1e6);
     }
-  return flow > 0.0 ? flow : power > 0.0 ? power / 1e6 : 1.0;
+  if (of_plant > 0.0)
+    return flow > 0.0 ? fmax (of_plant, fmin (flow, 3.0 * of_plant)) : of_plant;
+  if (flow > 0.0)
+    return power > 0.0 ? fmax (power, fmin (flow, 30.0 * power)) : flow;
+  return power > 0.0 ? power : 1.0;
 }
 
 void
@@ -156,14 +164,14 @@ hl_system_close (HlSystem *system)
   system->root = g_new (int, MAX (n, 1));
   system->fixed_by = g_new (int, MAX (n, 1));
   system->x = g_new (double, MAX (n, 1));
-  system->flow_scale = guess_flow_scale (system);
   for (guint i = 0; i < n; i++)
     {
-      const HlVar *var = hl_system_var (system, i);
       system->root[i] = hl_system_find (system, (int) i);
       system->fixed_by[i] = -1;
-      system->x[i] = hl_system_start (var, system->flow_scale);
     }
+  system->flow_scale = guess_flow_scale (system);
+  for (guint i = 0; i < n; i++)
+    system->x[i] = hl_system_start (hl_system_var (system, i), system->flow_scale);
   fix_classes (system);
   g_array_append_vals (system->raw, system->index->data, system->index->len);
   for (guint i = 0; i < system->index->len; i++)
@@ -192,7 +200,7 @@ double
 hl_system_start (const HlVar *var, double flow_scale)
 {
   if (!isnan (var->start))
-    return var->start;
+    return var->kind == HL_VAR_FLOW ? var->start * flow_scale : var->start;
   if (var->scale != NULL)
     switch (var->kind)
       {

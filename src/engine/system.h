@@ -27,7 +27,7 @@ typedef struct {
   HlAddress address;
   HlVarKind kind;
   int       parent;       /* towards the root of its class; the root names itself */
-  double    start;        /* cold start of the iteration; NaN: the usual one of its kind */
+  double    start;        /* cold start of the iteration, of a flow as a part of the plant's; NaN: the usual one of its kind */
   const HlFluidScale *scale;   /* of the medium whose state it is; NULL: of none */
 } HlVar;
 
@@ -39,6 +39,8 @@ typedef HlStatus (*HlResidual) (const HlEquation *equation, const double *a, con
 
 struct _HlEquation {
   HlResidual     residual;
+  HlResidual     in_block;         /* form of the same where another variable than number plain_for is sought, or several at once; NULL: no other */
+  int            plain_for;
   const HlFluid *fluid, *other_fluid;   /* the other one: of an exchanger whose sides carry two media */
   int            n, first;         /* its variables in HlSystem.index */
   int            first_constant;   /* its constants in HlSystem.constants */

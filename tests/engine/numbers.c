@@ -14,7 +14,7 @@ run (Solved *s)
 {
   hl_system_close (s->system);
   s->structure = hl_structure_new (s->system);
-  hl_numbers_solve (s->system, s->structure, &s->numbers);
+  hl_numbers_solve (s->system, s->structure, NULL, &s->numbers);
 }
 
 static void

@@ -83,7 +83,7 @@ const char *const test_industrial_plant =
 
 typedef struct {
   HlPlant *plant;
-  int n_streams;
+  int n_streams, n_shafts;
 } Builder;
 
 static void
@@ -98,6 +98,11 @@ static void
 set_word (HlComponent *component, const char *word)
 {
   const char *colon = strchr (word, ':'), *equals = strchr (word, '=');
+  if (*word == '-')
+    {
+      hl_component_set_value (component, g_intern_string (word + 1), NULL);
+      return;
+    }
   if (colon != NULL && equals == NULL)
     {
       g_autofree char *key = g_strndup (word, (gsize) (colon - word));
@@ -140,8 +145,8 @@ add_stream (Builder *b, const char *from, const char *to)
   g_autoptr (GError) error = NULL;
   if (!hl_plant_can_connect (b->plant, g_intern_string (a[0]), g_intern_string (a[1]), g_intern_string (c[0]), g_intern_string (c[1]), &error))
     g_error ("%s > %s: %s", from, to, error->message);
-  take (b, hl_plant_with_stream (b->plant, hl_stream_new (g_intern_string (id), g_intern_string (a[0]), g_intern_string (a[1]),
-                                                           g_intern_string (c[0]), g_intern_string (c[1]))));
+  HlStream *stream = hl_stream_new (g_intern_string (id), g_intern_string (a[0]), g_intern_string (a[1]), g_intern_string (c[0]), g_intern_string (c[1]));
+  take (b, hl_plant_with_stream (b->plant, stream));
 }
 
 HlPlant *
@@ -185,11 +190,12 @@ read_line (Builder *b, const char *line)
     {
       for (char **word = words + 1; *word != NULL; word++)
         {
-          const char *id = g_intern_string (*word);
+          const char *name = g_intern_string (*word);
           g_free (*word);
-          *word = g_strdup (id);
+          *word = g_strdup (name);
         }
-      take (b, hl_plant_with_shaft (b->plant, hl_shaft_new (g_intern_static_string ("S1"), (const char *const *) words + 1, g_strv_length (words) - 1)));
+      g_autofree char *id = g_strdup_printf ("S%d", ++b->n_shafts);
+      take (b, hl_plant_with_shaft (b->plant, hl_shaft_new (g_intern_string (id), (const char *const *) words + 1, g_strv_length (words) - 1)));
     }
   else if (g_str_equal (words[0], "medium"))
     {
@@ -207,6 +213,11 @@ read_line (Builder *b, const char *line)
         g_autofree char *address = g_strdup_printf ("plant.%.*s", (int) (equals - *word), *word);
         b->plant = test_plant_set (b->plant, address, g_ascii_strtod (equals + 1, NULL));
       }
+  else if (g_str_equal (words[0], "set"))
+    {
+      g_auto (GStrv) parts = g_strsplit (words[1], "=", 2);
+      b->plant = test_plant_set (b->plant, parts[0], g_ascii_strtod (parts[1], NULL));
+    }
   else if (g_str_equal (words[0], "new"))
     add_component (b, words + 1, TRUE);
   else
@@ -216,7 +227,7 @@ read_line (Builder *b, const char *line)
 HlPlant *
 test_plant (const char *text)
 {
-  Builder b = { hl_plant_new (), 0 };
+  Builder b = { hl_plant_new (), 0, 0 };
   b.plant = test_plant_let_go (b.plant, "plant.net_power");
   g_auto (GStrv) lines = g_strsplit (text, "\n", -1);
   for (char **line = lines; *line != NULL; line++)
@@ -306,7 +317,7 @@ HlPlant *
 test_plant_copies (const char *text, int n, double flow)
 {
   g_autoptr (HlPlant) plant = test_plant (text);
-  Builder b = { hl_plant_new (), 0 };
+  Builder b = { hl_plant_new (), 0, 0 };
   b.plant = test_plant_let_go (b.plant, "plant.net_power");
   for (int k = 1; k <= n; k++)
     add_copy (&b, plant, k, flow);

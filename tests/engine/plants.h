@@ -6,12 +6,13 @@ G_BEGIN_DECLS
 
 /* One item a line:
  *   turbine T1 extractions:1 inlet.p=65e5 ~isentropic_efficiency=0.83     component; option:count, given=, ~assumed=
- *   new condenser C1 steam.p=7000                                         with all its assumed values
+ *   new condenser C1 steam.p=7000 -cooling_p                              with all its assumed values, less those after -
  *   T1.exhaust > C1.steam                                                 stream, numbered from 1 in order
  *   medium 1 isopentane                                                   the circuit of stream 1 (below its streams)
  *   formulation iapws95
  *   shaft T1 G1
  *   plant net_power=12e6
+ *   set T1.exhaust.x=0.9
  * Values in SI.  Ends the test where something is wrong. */
 HlPlant *test_plant       (const char *text);
 HlPlant *test_plant_set   (HlPlant *plant, const char *address, double value);     /* given; takes @plant */
