@@ -21,7 +21,8 @@ typedef struct {
 static void
 analyse (Settle *settle)
 {
-  hl_solve_prepare (settle->plant, NULL, 0, &settle->model, &settle->structure);
+  HlSolveEffort effort = { 0 };
+  hl_solve_prepare (settle->plant, NULL, 0, &settle->model, &settle->structure, &effort);
   settle->circuits = NULL;
 }
 

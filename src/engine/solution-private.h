@@ -28,8 +28,8 @@ struct _HlSolution {
   HlSolveEffort  effort;
 };
 
-/* Unknowns, equations and their structure.  @other: [n_other nodes] see hl_model_new_other(); or NULL. */
-void hl_solve_prepare (HlPlant *plant, const gboolean *other, guint n_other, HlModel **model, HlStructure **structure);
+/* Unknowns, equations and their structure.  @other: [n_other nodes] see hl_model_new_other(); or NULL.  @effort grows. */
+void hl_solve_prepare (HlPlant *plant, const gboolean *other, guint n_other, HlModel **model, HlStructure **structure, HlSolveEffort *effort);
 
 /* How far a solve goes where blocks cannot be solved from their start: not further; to usual values, see numbers-relax.c; to these
  * from the beginning; and, counting on from there, to values near them. */

@@ -96,10 +96,14 @@ reconsider_saturation (HlPlant *plant, HlModel **model, HlStructure **structure)
 }
 
 void
-hl_solve_prepare (HlPlant *plant, const gboolean *other, guint n_other, HlModel **model, HlStructure **structure)
+hl_solve_prepare (HlPlant *plant, const gboolean *other, guint n_other, HlModel **model, HlStructure **structure, HlSolveEffort *effort)
 {
+  gint64 phase = g_get_monotonic_time ();
   *model = hl_model_new_other (plant, other, n_other);
+  effort->seconds_build += seconds_since (phase);
+  phase = g_get_monotonic_time ();
   *structure = hl_structure_new ((*model)->system);
+  effort->seconds_structure += seconds_since (phase);
   if ((*structure)->n_over > 0 && other == NULL)
     reconsider_saturation (plant, model, structure);
 }
@@ -108,11 +112,8 @@ hl_solve_prepare (HlPlant *plant, const gboolean *other, guint n_other, HlModel 
 static void
 try_solve (HlSolution *solution, const HlSolution *start, HlPatience patience, const gboolean *other, guint n_other)
 {
+  hl_solve_prepare (solution->plant, other, n_other, &solution->model, &solution->structure, &solution->effort);
   gint64 phase = g_get_monotonic_time ();
-  hl_solve_prepare (solution->plant, other, n_other, &solution->model, &solution->structure);
-  solution->effort.seconds_build += seconds_since (phase);
-
-  phase = g_get_monotonic_time ();
   hl_findings_init (&solution->findings);
   gboolean may_try = hl_diagnose_structure (solution->model, solution->structure, &solution->findings);
   solution->effort.seconds_structure += seconds_since (phase);
