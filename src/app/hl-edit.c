@@ -204,8 +204,30 @@ copy_streams (HlPlant **plant, const HlPlant *from, int dx, int dy, GHashTable *
         }
       copy->label_x += dx;
       copy->label_y += dy;
+      g_hash_table_insert (copies, (gpointer) stream->id, (gpointer) copy->id);
       advance (plant, hl_plant_with_stream (*plant, copy));
     }
+}
+
+static void
+address_of_copy (HlAddress *address, gpointer data)
+{
+  if (address->owner != HL_OWNER_PLANT && copy_of (data, address->id) != NULL)
+    address->id = copy_of (data, address->id);
+}
+
+/* Ties among what was copied join the copies; those to something else stay, as far as the plant has it. */
+static void
+map_ties (HlPlant **plant, GHashTable *copies)
+{
+  g_autoptr (GPtrArray) ids = g_ptr_array_new ();
+  GHashTableIter iter;
+  gpointer id;
+  g_hash_table_iter_init (&iter, copies);
+  while (g_hash_table_iter_next (&iter, NULL, &id))
+    g_ptr_array_add (ids, id);
+  g_ptr_array_add (ids, NULL);
+  advance (plant, hl_plant_with_ties_mapped (*plant, (const char *const *) ids->pdata, address_of_copy, copies));
 }
 
 static void
@@ -235,6 +257,7 @@ hl_edit_duplicate (const HlPlant *plant, const char *const *ids, guint n, int dx
   copy_components (&result, plant, ids, n, dx, dy, copies, list);
   copy_streams (&result, plant, dx, dy, copies);
   copy_shafts (&result, plant, copies);
+  map_ties (&result, copies);
   return result;
 }
 
@@ -250,6 +273,7 @@ hl_edit_merge (const HlPlant *plant, const HlPlant *other, int dx, int dy, GPtrA
   copy_components (&result, other, ids, n, dx, dy, copies, list);
   copy_streams (&result, other, dx, dy, copies);
   copy_shafts (&result, other, copies);
+  map_ties (&result, copies);
   return result;
 }
 

@@ -45,11 +45,11 @@ hl_tie_word (const char *text, int cursor, int *start, int *end)
   *end = (int) last;
   if (last > first)
     return !g_unichar_isdigit (chars[first]) && chars[first] != '.';    /* "0.23" is a factor */
-  /* Where nothing is typed yet an address may begin after "=" and "*"; after a sign an offset is as likely. */
+  /* Where nothing is typed yet an address may begin after "=", a bracket and what multiplies; after a sign a number is as likely. */
   glong before = first - 1;
   while (before > 0 && g_unichar_isspace (chars[before]))
     before--;
-  return chars[before] == '=' || chars[before] == '*';
+  return chars[before] < 0x80 && strchr ("=*/(;", (int) chars[before]) != NULL;
 }
 
 /* --- what matches --- */
@@ -71,6 +71,7 @@ typedef struct {
   char             *word;           /* folded */
   GHashTable       *seen;           /* texts */
   GPtrArray        *first, *rest;   /* begin with the word; hold it elsewhere */
+  GPtrArray        *others;         /* begin with it, but are of another dimension: a tie may multiply and divide */
 } Search;
 
 /* Another name of the quantity itself: port and stream name one state. */
@@ -89,7 +90,8 @@ consider (Search *search, const HlAddress *address)
   const HlQuantityKind *kind = hl_plant_quantity_kind (search->plant, address);
   double si;
 
-  if (kind == NULL || (kind->flags & HL_QUANTITY_DERIVED) || kind->dimension != search->dimension || is_itself (search, address))
+  if (kind == NULL || (kind->flags & HL_QUANTITY_DERIVED) || is_itself (search, address)
+      || (kind->dimension != search->dimension && *search->word == '\0'))
     return;
   g_autofree char *text = hl_address_to_text (address);
   if (!g_hash_table_add (search->seen, g_strdup (text)))
@@ -97,13 +99,14 @@ consider (Search *search, const HlAddress *address)
   g_autofree char *folded = g_utf8_casefold (text, -1), *described = hl_plant_describe (search->plant, address);
   g_autofree char *folded_words = g_utf8_casefold (described, -1);
   gboolean begins = g_str_has_prefix (folded, search->word);
-  if (!begins && strstr (folded, search->word) == NULL && strstr (folded_words, search->word) == NULL)
+  gboolean is_like = kind->dimension == search->dimension;
+  if (!begins && (!is_like || (strstr (folded, search->word) == NULL && strstr (folded_words, search->word) == NULL)))
     return;
   HlTieMatch *match = g_new0 (HlTieMatch, 1);
   match->address = *address;
   match->text = g_steal_pointer (&text);
   match->value = hl_solution_value (search->solution, address, &si) ? hl_quantity_format (kind, si, hl_plant_units (search->plant)) : g_strdup ("");
-  g_ptr_array_add (begins ? search->first : search->rest, match);
+  g_ptr_array_add (!is_like ? search->others : begins ? search->first : search->rest, match);
 }
 
 /* What the kind names, and the states at the ports that lines lead to. */
@@ -144,6 +147,7 @@ hl_tie_matches (const HlSolution *solution, const HlAddress *own, const char *wo
   search.word = g_utf8_casefold (word, -1);
   search.seen = g_hash_table_new_full (g_str_hash, g_str_equal, g_free, NULL);
   search.rest = g_ptr_array_new ();
+  search.others = g_ptr_array_new ();
   for (guint n = 0; n < hl_plant_n_components (plant); n++)
     consider_component (&search, hl_plant_component (plant, n));
   for (guint n = 0; n < hl_plant_n_streams (plant); n++)
@@ -158,6 +162,7 @@ hl_tie_matches (const HlSolution *solution, const HlAddress *own, const char *wo
       consider (&search, &address);
     }
   g_ptr_array_extend_and_steal (search.first, search.rest);
+  g_ptr_array_extend_and_steal (search.first, search.others);
   g_hash_table_unref (search.seen);
   g_free (search.word);
   return search.first;

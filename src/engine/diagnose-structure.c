@@ -589,7 +589,7 @@ hl_diagnose_structure (const HlModel *model, const HlStructure *structure, HlFin
   find_open_ports (model, findings);
   if (hl_diagnose_media (model, findings))
     return FALSE;
-  if (find_leaks (model, findings))
+  if (!hl_diagnose_ties (model, findings) || find_leaks (model, findings))
     return FALSE;
   if (structure->n_over > 0)
     find_surplus (model, structure, findings);

@@ -8,6 +8,8 @@ G_BEGIN_DECLS
 
 /* Returns whether numbers may be tried. */
 gboolean hl_diagnose_structure (const HlModel *model, const HlStructure *structure, HlFindings *findings);
+/* Ties to what is gone, and in circles; FALSE where they run in a circle. */
+gboolean hl_diagnose_ties      (const HlModel *model, HlFindings *findings);
 void     hl_diagnose_numbers   (const HlModel *model, const HlStructure *structure, const HlNumbers *numbers, HlFindings *findings);
 
 /* Two media in one circuit: a finding for each such circuit.  Returns whether there is one. */

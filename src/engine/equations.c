@@ -554,33 +554,40 @@ hl_add_log_mean (HlSystem *system, int mean, int rise, int least)
 
 /* --- ties ----------------------------------------------------------------- */
 
-/* a: factor, offset, is the target a pressure, is the source one. */
+/* a: for each variable, the target first, whether it is a pressure. */
 static HlStatus
-tie (G_GNUC_UNUSED const HlEquation *e, const double *a, const double *x, double *r, double *dr)
+tie (const HlEquation *e, const double *a, const double *x, double *r, double *dr)
 {
-  double src = a[3] > 0.0 ? exp (x[1]) : x[1], slope = a[3] > 0.0 ? src : 1.0;
-  double value = a[0] * src + a[1];
+  double of[HL_EQUATION_MOST], value;
+  for (int k = 1; k < e->n; k++)
+    of[k - 1] = a[k] > 0.0 ? exp (x[k]) : x[k];
+  if (!hl_tie_evaluate (e->tie, of, &value, dr + 1) || (a[0] > 0.0 && !(value > 0.0)))
+    return HL_OUTSIDE_RANGE;
+  *r = x[0] - (a[0] > 0.0 ? log (value) : value);
   dr[0] = 1.0;
-  if (a[2] > 0.0)
-    {
-      if (!(value > 0.0))
-        return HL_OUTSIDE_RANGE;
-      *r = x[0] - log (value);
-      dr[1] = -a[0] * slope / value;
-      return HL_OK;
-    }
-  *r = x[0] - value;
-  dr[1] = -a[0] * slope;
+  for (int k = 1; k < e->n; k++)
+    dr[k] *= -(a[k] > 0.0 ? of[k - 1] : 1.0) / (a[0] > 0.0 ? value : 1.0);
   return HL_OK;
 }
 
 HlEquation *
-hl_add_tie (HlSystem *system, int dst, int src, double factor, double offset)
+hl_add_tie (HlSystem *system, int dst, const HlTie *of_quantities, const int *of)
 {
-  HlVarKind dst_kind = hl_system_var (system, dst)->kind, src_kind = hl_system_var (system, src)->kind;
-  const double a[] = { factor, offset, dst_kind == HL_VAR_PRESSURE, src_kind == HL_VAR_PRESSURE };
-  guint32 linear_in = src_kind == HL_VAR_PRESSURE || dst_kind == HL_VAR_PRESSURE ? 1 : 3;
-  return hl_system_add_equation (system, tie, dst_kind, linear_in, (const int[]) { dst, src }, 2, a, 4);
+  int vars[HL_EQUATION_MOST], n = (int) hl_tie_n_of (of_quantities) + 1;
+  double a[HL_EQUATION_MOST];
+  HlVarKind kind = hl_system_var (system, dst)->kind;
+  gboolean has_pressure = FALSE;
+  g_assert (n <= HL_EQUATION_MOST);
+  for (int k = 0; k < n; k++)
+    {
+      vars[k] = k == 0 ? dst : of[k - 1];
+      a[k] = hl_system_var (system, vars[k])->kind == HL_VAR_PRESSURE ? 1.0 : 0.0;
+      has_pressure |= a[k] > 0.0;
+    }
+  guint32 linear_in = hl_tie_is_linear (of_quantities) && !has_pressure ? HL_ALL_LINEAR : 1;
+  HlEquation *e = hl_system_add_equation (system, tie, kind, linear_in, vars, n, a, n);
+  e->tie = of_quantities;
+  return e;
 }
 
 gboolean hl_equation_is_tie (const HlEquation *e) { return e->residual == tie; }

@@ -42,8 +42,8 @@ HlEquation *hl_add_subcooled_temperature   (HlSystem *system, const HlFluid *flu
 HlEquation *hl_add_cooling_heat (HlSystem *system, const HlFluid *fluid, int heat, int flow, int T_in, int rise, int p);
 /* Logarithmic mean of (rise + least) and least. */
 HlEquation *hl_add_log_mean     (HlSystem *system, int mean, int rise, int least);
-/* dst = factor src + offset in SI. */
-HlEquation *hl_add_tie          (HlSystem *system, int dst, int src, double factor, double offset);
+/* dst = what the tie says of @of, in SI.  @of: variables of hl_tie_of(). */
+HlEquation *hl_add_tie          (HlSystem *system, int dst, const HlTie *tie, const int *of);
 
 /* Logarithmic mean of two temperature differences, with a monotone extension below zero, and its derivatives. */
 double hl_log_mean (double d1, double d2, double *to_d1, double *to_d2);

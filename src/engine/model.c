@@ -19,6 +19,7 @@ hl_model_free (HlModel *model)
   g_array_unref (model->ports);
   g_array_unref (model->own);
   g_array_unref (model->open_ports);
+  g_array_unref (model->broken_ties);
   for (int k = 0; k < HL_N_SUMS; k++)
     g_array_unref (model->sums[k]);
   g_free (model->first_port);
@@ -485,10 +486,14 @@ add_value (HlModel *model, HlAddress address, int component, int stream, const H
         hl_system_add_spec (system, var, address, value->origin, x);
       return;
     }
-  int source = want_var (model, &value->tie_of, FALSE);
-  if (source < 0)
-    return;
-  hl_add_tie (system, var, source, value->tie_factor, value->tie_offset);
+  int of[HL_EQUATION_MOST];
+  for (guint k = 0; k < hl_tie_n_of (value->tie); k++)
+    if (k >= HL_EQUATION_MOST - 1 || (of[k] = want_var (model, hl_tie_of (value->tie, k), FALSE)) < 0)
+      {
+        g_array_append_val (model->broken_ties, address);
+        return;
+      }
+  hl_add_tie (system, var, value->tie, of);
   int equation = (int) system->equations->len - 1;
   if (address.owner == HL_OWNER_COMPONENT)
     hl_system_equation (system, equation)->component = hl_plant_component_index (model->plant, address.id);
@@ -656,6 +661,7 @@ hl_model_new_other (HlPlant *plant, const gboolean *other, guint n_other)
   model->ports = g_array_sized_new (FALSE, FALSE, sizeof (HlPortNode), 128);
   model->own = g_array_sized_new (FALSE, FALSE, sizeof (HlOwn), 256);
   model->open_ports = g_array_new (FALSE, FALSE, sizeof (HlAddress));
+  model->broken_ties = g_array_new (FALSE, FALSE, sizeof (HlAddress));
   for (int k = 0; k < HL_N_SUMS; k++)
     model->sums[k] = g_array_new (FALSE, FALSE, sizeof (int));
   add_streams (model);

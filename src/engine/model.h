@@ -49,6 +49,7 @@ typedef struct _HlModel {
   int      *first_own;            /* [n components + 2] */
   GArray   *sums[HL_N_SUMS];      /* int */
   GArray   *open_ports;           /* HlAddress: required ports that no line reaches */
+  GArray   *broken_ties;          /* HlAddress: tied to something that the plant does not have */
   gboolean *is_on_shaft;          /* [n components] on a shaft that carries its power on */
 } HlModel;
 

@@ -173,24 +173,6 @@ template_of_terms (const HlModel *model, const HlEquation *e)
   return text;
 }
 
-/* target = factor × source + offset; an offset of a temperature or pressure is a difference of such. */
-static char *
-template_of_tie (const HlModel *model, const HlEquation *e, gboolean in_si)
-{
-  const double *a = &g_array_index (model->system->constants, double, e->first_constant);
-  HlDimension dimension = hl_name_dimension (e->kind);
-  if (dimension == HL_DIMENSION_TEMPERATURE)
-    dimension = HL_DIMENSION_TEMPERATURE_DIFFERENCE;
-  if (dimension == HL_DIMENSION_PRESSURE)
-    dimension = HL_DIMENSION_PRESSURE_DIFFERENCE;
-  if (!(fabs (a[1]) > 0.0))
-    return g_strdup_printf (in_si ? "{0} = %.17g × {1}" : "{0} = %.6g × {1}", a[0]);
-  if (in_si)
-    return g_strdup_printf ("{0} = %.17g × {1} %s %.17g", a[0], a[1] < 0.0 ? "−" : "+", fabs (a[1]));
-  g_autofree char *offset = hl_units_format (fabs (a[1]), dimension, hl_plant_units (model->plant));
-  return g_strdup_printf ("{0} = %.6g × {1} %s %s", a[0], a[1] < 0.0 ? "−" : "+", offset);
-}
-
 char *
 hl_name_template (const HlModel *model, int equation, gboolean in_si)
 {
@@ -198,7 +180,10 @@ hl_name_template (const HlModel *model, int equation, gboolean in_si)
   if (e->says != NULL)
     return g_strdup (in_si ? e->says : _(e->says));
   if (hl_equation_is_tie (e))
-    return template_of_tie (model, e, in_si);
+    {
+      g_autofree char *formula = hl_tie_formula (e->tie, in_si, hl_plant_units (model->plant));
+      return g_strdup_printf ("{0} = %s", formula);
+    }
   if (hl_equation_is_energy (e) || hl_equation_is_linear (e))
     return template_of_terms (model, e);
   double value = hl_var_to_si (e->kind, g_array_index (model->system->constants, double, e->first_constant));

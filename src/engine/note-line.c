@@ -188,6 +188,16 @@ hl_note_pair (HlSystem *system, const int *equations, const int *vars, int n)
   return found_by;
 }
 
+/* Factors and quotients hold for absolute temperatures only. */
+static void
+show_in_kelvin (HlNoteTerm *term)
+{
+  if (term->dimension != HL_DIMENSION_TEMPERATURE)
+    return;
+  g_free (term->shown);
+  term->shown = g_strdup_printf ("%.2f K", term->value);
+}
+
 HlNoteLine *
 hl_note_line_of_equation (const HlSolution *solution, int equation, int root)
 {
@@ -203,6 +213,9 @@ hl_note_line_of_equation (const HlSolution *solution, int equation, int root)
     }
   if (e->output >= 0 && vars[e->output] == root)
     line->result = (guint) e->output;
+  if (hl_equation_is_tie (e) && !hl_tie_is_level_free (e->tie))
+    for (guint k = 0; k < line->n_terms; k++)
+      show_in_kelvin (&line->terms[k]);
   g_autofree char *pattern = hl_name_template (model, equation, FALSE);
   line->formula = hl_name_template (model, equation, TRUE);
   line->words = hl_note_fill_in (line, pattern, FALSE);
@@ -289,12 +302,8 @@ line_of_carnot (const HlSolution *solution, const HlAddress *address, double val
       T.key = g_intern_string (key);
       line->terms[1 + k] = hl_note_term_of_address (solution, &T, solution->states[ends[k]].st.T);
     }
-  /* A quotient of temperatures is one of absolute ones. */
   for (int k = 1; k <= 2; k++)
-    {
-      g_free (line->terms[k].shown);
-      line->terms[k].shown = g_strdup_printf ("%.2f K", line->terms[k].value);
-    }
+    show_in_kelvin (&line->terms[k]);
   line->formula = g_strdup ("{0} = 1 − {1} ÷ {2}");
   line->source = _("Carnot: lowest and highest temperature of the working fluid");
   return line;

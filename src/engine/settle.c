@@ -311,7 +311,7 @@ hl_settle (HlPlant *plant, const HlAddress *edited, GArray **yielded)
       gboolean changed = FALSE;
       if (settle.structure->n_over > 0)
         changed = yield_one (&settle);
-      else if (settle.structure->n_missing > 0 && edited != NULL && settle.model->open_ports->len == 0
+      else if (settle.structure->n_missing > 0 && edited != NULL && settle.model->open_ports->len == 0 && settle.model->broken_ties->len == 0
                && hl_plant_value (settle.plant, edited) == NULL)
         changed = bring_back_one (&settle);
       forget (&settle);

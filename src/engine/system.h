@@ -51,6 +51,7 @@ struct _HlEquation {
   gboolean       is_balance;       /* a mass balance: constants are the signs of the flows */
   gboolean       is_dropped;       /* dependent on the others */
   const char    *says;             /* N_() words with {k} for variable k; NULL: written from its terms */
+  const HlTie   *tie;              /* of a tie: its variables are the target and what the tie names, in order */
   const char    *source;           /* N_() where the equation comes from; NULL: by its form, see hl_equation_source() */
 };
 

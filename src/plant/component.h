@@ -10,16 +10,31 @@ typedef enum {
   HL_ORIGIN_FOUND,      /* solved; such a quantity has no HlValue */
   HL_ORIGIN_GIVEN,      /* typed by the engineer */
   HL_ORIGIN_ASSUMED,    /* a sourced default nobody has confirmed yet */
-  HL_ORIGIN_TIED,       /* factor times another quantity plus an offset */
+  HL_ORIGIN_TIED,       /* an expression of other quantities */
 } HlOrigin;
 HL_PUBLIC const char *hl_origin_id   (HlOrigin origin);   /* "given" */
 HL_PUBLIC const char *hl_origin_name (HlOrigin origin);   /* translated */
 
+/* A quantity as an expression of others, in SI.  Interned: compare and copy as pointers, never free. */
+typedef struct _HlTie HlTie;
+HL_PUBLIC guint            hl_tie_n_of      (const HlTie *tie);            /* quantities that it names, each once */
+HL_PUBLIC const HlAddress *hl_tie_of        (const HlTie *tie, guint n);
+/* @of: [n_of] values of the quantities; @derivatives: (out) [n_of] exact, or NULL.  FALSE where the result is no finite number. */
+HL_PUBLIC gboolean         hl_tie_evaluate  (const HlTie *tie, const double *of, double *value, double *derivatives);
+HL_PUBLIC gboolean         hl_tie_is_linear (const HlTie *tie);
+/* Its right side with {1} for the first quantity: in SI "0.5 × ({1} + 2000000)", or with the units of a set, "0.5 × ({1} + 20 bar)".  g_free() */
+HL_PUBLIC char            *hl_tie_formula   (const HlTie *tie, gboolean in_si, HlUnitSet units);
+/* Whether it holds for temperatures in °C and °F too, or only in K, as 0.9*T1.inlet.T does. */
+HL_PUBLIC gboolean         hl_tie_is_level_free (const HlTie *tie);
+HL_PUBLIC const HlTie     *hl_tie_linear    (const HlAddress *of, double factor, double offset);   /* factor * of + offset */
+/* The same with each address as @map leaves it, for copies and new ids. */
+typedef void (*HlTieMap) (HlAddress *address, gpointer data);
+HL_PUBLIC const HlTie     *hl_tie_mapped    (const HlTie *tie, HlTieMap map, gpointer data);
+
 typedef struct {
-  HlOrigin  origin;     /* GIVEN, ASSUMED or TIED */
-  double    value;      /* SI; of a tie: unused */
-  HlAddress tie_of;     /* of a tie: value = factor * tie_of + offset [SI] */
-  double    tie_factor, tie_offset;
+  HlOrigin     origin;  /* GIVEN, ASSUMED or TIED */
+  double       value;   /* SI; of a tie: unused */
+  const HlTie *tie;     /* of a tie */
 } HlValue;
 
 /* Values by interned key, kept sorted by key text. */

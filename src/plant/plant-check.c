@@ -49,51 +49,26 @@ hl_quantity_check (const HlQuantityKind *kind, const char *where, double value, 
   return FALSE;
 }
 
-static HlDimension
-base_dimension (HlDimension dimension)
-{
-  switch (dimension)
-    {
-    case HL_DIMENSION_PRESSURE_DIFFERENCE:
-      return HL_DIMENSION_PRESSURE;
-    case HL_DIMENSION_TEMPERATURE_DIFFERENCE:
-      return HL_DIMENSION_TEMPERATURE;
-    case HL_DIMENSION_COUNT:
-    case HL_DIMENSION_HEAT_RATE:
-      return HL_DIMENSION_RATIO;
-    default:
-      return dimension;
-    }
-}
-
 gboolean
-hl_dimensions_may_tie (HlDimension a, HlDimension b)
-{
-  return base_dimension (a) == base_dimension (b);
-}
-
-gboolean
-hl_plant_check_tie (const HlPlant *plant, const HlAddress *address, const HlValue *value, GError **error)
+hl_plant_check_tie (const HlPlant *plant, const HlAddress *address, const HlTie *tie, GError **error)
 {
   const HlQuantityKind *kind = hl_plant_quantity_kind (plant, address);
-  const HlQuantityKind *source = hl_plant_quantity_kind (plant, &value->tie_of);
-  g_autofree char *to = hl_address_to_text (address), *of = hl_address_to_text (&value->tie_of);
+  g_autofree char *to = hl_address_to_text (address);
   if (!hl_quantity_may_be_put_in (kind, to, error))
     return FALSE;
-  if (source == NULL)
-    g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_ADDRESS, _("%s cannot be tied to %s: there is no such quantity"), to, of);
-  else if (hl_addresses_same (plant, address, &value->tie_of))
-    g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_ADDRESS, _("%s cannot be tied to %s: that is the same quantity; tie it to another one"), to, of);
-  else if (source->flags & HL_QUANTITY_DERIVED)
-    g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_CONTENT, _("%s cannot be tied to %s, which is read from the finished solution; tie it to a quantity of the equations"), to, of);
-  else if (!hl_dimensions_may_tie (kind->dimension, source->dimension))
-    g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_CONTENT, _("%s cannot be tied to %s: one is a %s, the other a %s; tie like to like"),
-                 to, of, hl_dimension_name (kind->dimension), hl_dimension_name (source->dimension));
-  else if (!isfinite (value->tie_factor) || !isfinite (value->tie_offset) || fabs (value->tie_factor) < G_MINDOUBLE)
-    g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_OUT_OF_RANGE, _("The tie of %s needs a finite factor other than 0 and a finite offset"), to);
-  else
-    return TRUE;
-  return FALSE;
+  for (guint k = 0; k < hl_tie_n_of (tie); k++)
+    {
+      const HlQuantityKind *source = hl_plant_quantity_kind (plant, hl_tie_of (tie, k));
+      g_autofree char *of = hl_address_to_text (hl_tie_of (tie, k));
+      if (hl_addresses_same (plant, address, hl_tie_of (tie, k)))
+        g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_ADDRESS, _("%s cannot be tied to %s: that is the same quantity; tie it to another one"), to, of);
+      else if (source != NULL && (source->flags & HL_QUANTITY_DERIVED))
+        g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_CONTENT, _("%s cannot be tied to %s, which is read from the finished solution; tie it to a quantity of the equations"), to, of);
+      else
+        continue;
+      return FALSE;
+    }
+  return TRUE;
 }
 
 static gboolean

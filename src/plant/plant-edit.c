@@ -79,58 +79,6 @@ drop_loose_streams (HlPlant *plant)
 }
 
 static gboolean
-is_dead_tie (const HlPlant *plant, const HlValue *value)
-{
-  return value->origin == HL_ORIGIN_TIED && hl_plant_quantity_kind (plant, &value->tie_of) == NULL;
-}
-
-static gboolean
-has_dead_tie (const HlPlant *plant, const HlValues *values)
-{
-  for (guint i = 0; i < values->n; i++)
-    if (is_dead_tie (plant, &values->entries[i].value))
-      return TRUE;
-  return FALSE;
-}
-
-static void
-drop_from (const HlPlant *plant, HlValues *values)
-{
-  for (guint i = values->n; i-- > 0;)
-    if (is_dead_tie (plant, &values->entries[i].value))
-      hl_values_set (values, values->entries[i].key, NULL);
-}
-
-/* Values tied to what is gone become found. */
-static void
-drop_dead_ties (HlPlant *plant)
-{
-  gboolean owned = FALSE;
-  drop_from (plant, &plant->values);
-  for (guint i = 0; i < plant->components->len; i++)
-    if (has_dead_tie (plant, &((HlComponent *) plant->components->pdata[i])->values))
-      {
-        HlComponent *copy = hl_component_copy (plant->components->pdata[i]);
-        drop_from (plant, &copy->values);
-        if (!owned)
-          hl_plant_own_components (plant);
-        owned = TRUE;
-        replace_component (plant, i, copy);
-      }
-  owned = FALSE;
-  for (guint i = 0; i < plant->streams->len; i++)
-    if (has_dead_tie (plant, &((HlStream *) plant->streams->pdata[i])->values))
-      {
-        HlStream *copy = hl_stream_copy (plant->streams->pdata[i]);
-        drop_from (plant, &copy->values);
-        if (!owned)
-          hl_plant_own_streams (plant);
-        owned = TRUE;
-        replace_stream (plant, i, copy);
-      }
-}
-
-static gboolean
 id_is_taken (const HlPlant *plant, const char *id)
 {
   return g_hash_table_contains (plant->index->components, id) || g_hash_table_contains (plant->index->streams, id)
@@ -169,10 +117,7 @@ hl_plant_with_component (const HlPlant *plant, HlComponent *component)
   keeps_shape = same_shape (edited->components->pdata[n], component);
   replace_component (edited, (guint) n, component);
   if (!keeps_shape)
-    {
-      drop_loose_streams (edited);
-      drop_dead_ties (edited);
-    }
+    drop_loose_streams (edited);
   return edited;
 }
 
@@ -204,7 +149,6 @@ hl_plant_with_stream (const HlPlant *plant, HlStream *stream)
   if (!placed)
     g_ptr_array_add (edited->streams, stream);
   hl_plant_index (edited);
-  drop_dead_ties (edited);
   return edited;
 }
 
@@ -290,12 +234,30 @@ hl_plant_without (const HlPlant *plant, const char *const *ids)
     }
   hl_plant_index (edited);
   drop_loose_streams (edited);
-  drop_dead_ties (edited);
   return edited;
 }
 
+/* All that it names is there, and the dimensions agree.  @tie: (inout) comes out as a file of this plant would give it. */
 static gboolean
-check_value (const HlPlant *plant, const HlAddress *address, const HlValue *value, GError **error)
+check_tie (const HlPlant *plant, const HlAddress *address, const char *where, const HlTie **tie, GError **error)
+{
+  HlValue whole = { .origin = HL_ORIGIN_TIED, .tie = *tie }, read;
+  g_autofree char *text = hl_tie_to_text (&whole);
+  for (guint k = 0; k < hl_tie_n_of (*tie); k++)
+    if (hl_plant_quantity_kind (plant, hl_tie_of (*tie, k)) == NULL)
+      {
+        g_autofree char *of = hl_address_to_text (hl_tie_of (*tie, k));
+        g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_ADDRESS, _("%s cannot be tied to %s: there is no such quantity"), where, of);
+        return FALSE;
+      }
+  if (!hl_tie_read (plant, address, text, TRUE, &read, error))
+    return FALSE;
+  *tie = read.tie;
+  return TRUE;
+}
+
+static gboolean
+check_value (const HlPlant *plant, const HlAddress *address, HlValue *value, GError **error)
 {
   const HlQuantityKind *kind = hl_plant_quantity_kind (plant, address);
   g_autofree char *where = hl_address_to_text (address);
@@ -307,7 +269,7 @@ check_value (const HlPlant *plant, const HlAddress *address, const HlValue *valu
   if (value == NULL)
     return TRUE;
   if (value->origin == HL_ORIGIN_TIED)
-    return hl_plant_check_tie (plant, address, value, error);
+    return check_tie (plant, address, where, &value->tie, error);
   g_return_val_if_fail (value->origin == HL_ORIGIN_GIVEN || value->origin == HL_ORIGIN_ASSUMED, FALSE);
   return hl_quantity_check (kind, where, value->value, plant->units, error);
 }
@@ -344,8 +306,12 @@ hl_plant_with_value (const HlPlant *plant, const HlAddress *address, const HlVal
   HlPlant *edited;
   const HlStream *stream;
   const char *key = NULL;
+  HlValue kept;
   g_return_val_if_fail (plant != NULL && address != NULL, NULL);
-  if (!check_value (plant, address, value, error))
+  if (value != NULL)
+    kept = *value;
+  value = value != NULL ? &kept : NULL;
+  if (!check_value (plant, address, value != NULL ? &kept : NULL, error))
     return NULL;
   edited = hl_plant_share (plant);
   stream = hl_plant_stream_of_address (plant, address, &key);

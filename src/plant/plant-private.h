@@ -56,12 +56,12 @@ gboolean        hl_addresses_same          (const HlPlant *plant, const HlAddres
 /* plant-check.c */
 gboolean hl_quantity_may_be_put_in (const HlQuantityKind *kind, const char *where, GError **error);
 gboolean hl_quantity_check        (const HlQuantityKind *kind, const char *where, double value, HlUnitSet set, GError **error);
-gboolean hl_dimensions_may_tie    (HlDimension a, HlDimension b);
-gboolean hl_plant_check_tie       (const HlPlant *plant, const HlAddress *address, const HlValue *value, GError **error);
+gboolean hl_plant_check_tie       (const HlPlant *plant, const HlAddress *address, const HlTie *tie, GError **error);
 
-/* tie.c */
-/* What stands behind "="; @bare_is_si: as in a file.  GIVEN or TIED; checked against limits and for its source. */
-gboolean hl_tie_read    (const HlPlant *plant, const HlAddress *address, const char *text, gboolean bare_is_si, HlValue *value, GError **error);
+/* tie-read.c */
+/* What stands behind "=".  GIVEN or TIED; checked against limits and for what it names.  @is_file: bare numbers are SI, and a
+ * quantity that has vanished is taken as it stands. */
+gboolean hl_tie_read    (const HlPlant *plant, const HlAddress *address, const char *text, gboolean is_file, HlValue *value, GError **error);
 char    *hl_tie_to_text (const HlValue *value);           /* as in a file: "2*C1.steam.p+10000" */
 
 /* json-text.c: JSON text to nodes, strictly and within bounds */

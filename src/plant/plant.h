@@ -60,13 +60,17 @@ HL_PUBLIC const HlValue     *hl_plant_value_wherever (const HlPlant *plant, cons
 HL_PUBLIC HlPlant *hl_plant_with_title     (const HlPlant *plant, const char *title);
 HL_PUBLIC HlPlant *hl_plant_with_units     (const HlPlant *plant, HlUnitSet units);
 HL_PUBLIC HlPlant *hl_plant_with_site      (const HlPlant *plant, const HlSite *site);
-HL_PUBLIC HlPlant *hl_plant_with_component (const HlPlant *plant, HlComponent *component);  /* (transfer full) adds, or replaces the one of that id; streams on vanished ports go */
+HL_PUBLIC HlPlant *hl_plant_with_component (const HlPlant *plant, HlComponent *component);  /* (transfer full) adds, or replaces the one of that id; streams on vanished ports go, ties to vanished quantities stay and become a finding */
 HL_PUBLIC HlPlant *hl_plant_with_stream    (const HlPlant *plant, HlStream *stream);        /* (transfer full) adds or replaces; another line at one of its ports goes */
 HL_PUBLIC HlPlant *hl_plant_with_shaft     (const HlPlant *plant, HlShaft *shaft);          /* (transfer full); a component is on one shaft at most: joining takes it off its former one */
-HL_PUBLIC HlPlant *hl_plant_without        (const HlPlant *plant, const char *const *ids);  /* NULL-terminated ids of components, streams, shafts; attached streams, ties to them, shafts left with less than two go too */
-/* NULL value: let it be found.  A state has one value: another name of the same state (port or stream) loses its own.  Checks the hard limits and that a tie's source exists and is not the quantity itself. */
+HL_PUBLIC HlPlant *hl_plant_without        (const HlPlant *plant, const char *const *ids);  /* NULL-terminated ids of components, streams, shafts; attached streams and shafts left with less than two go too; ties to them stay and become a finding */
+/* NULL value: let it be found.  A state has one value: another name of the same state (port or stream) loses its own.  Checks the hard limits, and that what a tie names exists, is not the quantity itself and has the dimensions. */
 HL_PUBLIC HlPlant *hl_plant_with_value     (const HlPlant *plant, const HlAddress *address, const HlValue *value, GError **error);
 
+/* The ties of these components and streams with each address as @map leaves it; one that then names what is not there, or does not fit, goes. */
+HL_PUBLIC HlPlant *hl_plant_with_ties_mapped (const HlPlant *plant, const char *const *ids, HlTieMap map, gpointer data);
+/* The component, stream or shaft @id under another id; lines, shafts and ties follow. */
+HL_PUBLIC HlPlant *hl_plant_with_id        (const HlPlant *plant, const char *id, const char *new_id, GError **error);
 HL_PUBLIC char    *hl_plant_free_id        (const HlPlant *plant, const char *letter);      /* "T2"; "" gives the next stream number "7"; g_free() */
 /* Why a line from one port to another cannot be, or NULL (outlet to inlet, both free, not the same component's same side ...). */
 HL_PUBLIC gboolean hl_plant_can_connect    (const HlPlant *plant, const char *from_id, const char *from_port,
@@ -79,7 +83,8 @@ HL_PUBLIC char    *hl_plant_to_json   (const HlPlant *plant);                   
 HL_PUBLIC HlPlant *hl_plant_load      (const char *path, GError **error);
 HL_PUBLIC gboolean hl_plant_save      (const HlPlant *plant, const char *path, GError **error);   /* temporary file, sync, rename */
 
-/* "0.23*B1.steam.p", "T2.exhaust.T - 5 K", "2*C1.steam.p + 0.1 bar": the text after "=" of a tie of the quantity @address. */
+/* "0.23*B1.steam.p", "T2.exhaust.T - 5 K", "(B1.steam.p + 20 bar)/2", "max(H1.heat; H2.heat)": the text after "=" of a tie
+ * of the quantity @address. */
 HL_PUBLIC gboolean hl_tie_parse  (const HlPlant *plant, const HlAddress *address, const char *text, HlValue *value, GError **error);
 HL_PUBLIC char    *hl_tie_format (const HlPlant *plant, const HlAddress *address, const HlValue *value);   /* without "="; g_free() */
 /* What a person may type for a quantity: "80 bar", or "=tie". Given, or tied. */

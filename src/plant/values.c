@@ -92,9 +92,7 @@ hl_value_equal (const HlValue *a, const HlValue *b)
   if (a->origin != b->origin)
     return FALSE;
   if (a->origin == HL_ORIGIN_TIED)
-    return hl_address_equal (&a->tie_of, &b->tie_of)
-           && memcmp (&a->tie_factor, &b->tie_factor, sizeof (double)) == 0
-           && memcmp (&a->tie_offset, &b->tie_offset, sizeof (double)) == 0;
+    return a->tie == b->tie;
   return memcmp (&a->value, &b->value, sizeof (double)) == 0;
 }
 

@@ -171,6 +171,52 @@ test_duplicates_keep_the_lines_and_the_shaft_among_them (void)
   g_assert_true (hl_plant_shaft_of (doubled, "T2") != hl_plant_shaft_of (doubled, "T1"));
 }
 
+static HlPlant *
+with_tie (HlPlant *plant, HlAddress at, const char *text)
+{
+  HlValue value;
+  GError *error = NULL;
+  hl_value_parse (plant, &at, text, &value, &error);
+  g_assert_no_error (error);
+  HlPlant *tied = hl_plant_with_value (plant, &at, &value, &error);
+  g_assert_no_error (error);
+  hl_plant_unref (plant);
+  return tied;
+}
+
+static char *
+tie_of (const HlPlant *plant, HlAddress at)
+{
+  const HlValue *value = hl_plant_value (plant, &at);
+  return value != NULL && value->origin == HL_ORIGIN_TIED ? hl_tie_format (plant, &at, value) : NULL;
+}
+
+/* Among the copies ties join the copies; one to what was not copied stays, and is found where a pasted plant lacks that. */
+static void
+test_copies_keep_their_ties (void)
+{
+  static const char *const two[] = { "T1", "C1" };
+  HlAddress T1 = hl_address_component ("T1", "inlet.p"), T2 = hl_address_component ("T2", "inlet.p"), P1 = hl_address_component ("P1", "outlet.p");
+  HlAddress C1 = hl_address_component ("C1", "subcooling"), C2 = hl_address_component ("C2", "subcooling");
+  g_autoptr (HlPlant) plant = with_tie (with_tie (small_plant (), T1, "=900*C1.steam.p + 0.1*P1.outlet.p"), C1, "=C1.steam.T - T1.exhaust.T");
+  g_autoptr (GPtrArray) copies = g_ptr_array_new (), pasted_ids = g_ptr_array_new (), moved_ids = g_ptr_array_new ();
+  g_autoptr (HlPlant) doubled = hl_edit_duplicate (plant, two, 2, 4, 4, copies);
+  g_autofree char *first = tie_of (doubled, T2), *second = tie_of (doubled, C2), *old = tie_of (doubled, T1);
+  g_assert_cmpstr (first, ==, "900*C2.steam.p + 0.1*P1.outlet.p");
+  g_assert_cmpstr (second, ==, "C2.steam.T - T2.exhaust.T");
+  g_assert_cmpstr (old, ==, "900*C1.steam.p + 0.1*P1.outlet.p");
+  g_assert_nonnull (hl_plant_quantity_kind (doubled, &P1));
+
+  g_autoptr (HlPlant) clip = hl_edit_extract (plant, two, 2);
+  g_autoptr (HlPlant) pasted = hl_edit_merge (plant, clip, 4, 4, pasted_ids);
+  g_autofree char *same = tie_of (pasted, T2);
+  g_assert_cmpstr (same, ==, "900*C2.steam.p + 0.1*P1.outlet.p");
+  g_autoptr (HlPlant) empty = hl_plant_new (), moved = hl_edit_merge (empty, clip, 0, 0, moved_ids);
+  g_assert_null (hl_plant_value (moved, &T1));
+  g_autofree char *kept = tie_of (moved, C1);
+  g_assert_cmpstr (kept, ==, "C1.steam.T - T1.exhaust.T");
+}
+
 static void
 test_shafts_merge_and_part (void)
 {
@@ -293,6 +339,7 @@ main (int argc, char **argv)
   g_test_add_func ("/app/edit/labels-move", test_labels_move_with_both_ends);
   g_test_add_func ("/app/edit/turns-and-mirrors", test_four_turns_and_two_mirrors_are_none);
   g_test_add_func ("/app/edit/mirror-turned", test_mirroring_a_turned_pump_swaps_left_and_right);
+  g_test_add_func ("/app/edit/copies-keep-their-ties", test_copies_keep_their_ties);
   g_test_add_func ("/app/edit/duplicate", test_duplicates_keep_the_lines_and_the_shaft_among_them);
   g_test_add_func ("/app/edit/shafts", test_shafts_merge_and_part);
   g_test_add_func ("/app/edit/insert", test_a_valve_is_inserted_into_a_line);

@@ -132,7 +132,9 @@ test_tie_and_text_of_a_tie (Fixture *f, gconstpointer data)
   const HlValue *value = value_of (f, "T1.exhaust.p");
   g_assert_nonnull (value);
   g_assert_cmpint (value->origin, ==, HL_ORIGIN_TIED);
-  g_assert_cmpfloat_with_epsilon (value->tie_factor, 0.001, 1e-12);
+  double factor, one = 1.0;
+  g_assert_true (hl_tie_evaluate (value->tie, &one, &factor, NULL));
+  g_assert_cmpfloat_with_epsilon (factor, 0.001, 1e-12);
   g_assert_true (hl_solution_is_solved (hl_session_solution (f->session)));
   /* With the focus the expression can be edited; without it the number is shown. */
   g_assert_true (g_str_has_prefix (text_of (f, "T1.exhaust.p"), "="));
@@ -518,6 +520,8 @@ test_word_of_a_tie (void)
     { "=", 1, TRUE, 1, 1 }, { "=B1", 3, TRUE, 1, 3 }, { "=0.23*B1.st", 11, TRUE, 6, 11 }, { "=0.23*", 6, TRUE, 6, 6 },
     { "=0.23", 5, FALSE, 0, 0 }, { "=T1.inlet.p - ", 14, FALSE, 0, 0 }, { "80 bar", 6, FALSE, 0, 0 }, { "=B1.steam.p", 3, TRUE, 1, 11 },
     { "", 0, FALSE, 0, 0 }, { "=B1", 0, FALSE, 0, 0 },
+    { "=B1.steam.p + T1", 16, TRUE, 14, 16 }, { "=max(", 5, TRUE, 5, 5 }, { "=max(T1.p; C", 12, TRUE, 11, 12 }, { "=(B1.heat-C1.h)/2", 14, TRUE, 10, 14 },
+    { "=1/", 3, TRUE, 3, 3 }, { "=(B1.heat + 2", 13, FALSE, 0, 0 },
   };
   for (guint n = 0; n < G_N_ELEMENTS (rows); n++)
     {
@@ -577,6 +581,14 @@ test_matches_have_the_dimension_and_their_value (Fixture *f, gconstpointer data)
   g_assert_cmpuint (boiler->len, >, 0);
   g_assert_cmpstr (((HlTieMatch *) g_ptr_array_index (boiler, 0))->text, ==, "B1.steam.p");
   g_assert_cmpuint (boiler->len, <, all->len);
+  /* A tie may multiply what is of another kind: that comes last. */
+  g_autoptr (GPtrArray) flow = hl_tie_matches (hl_session_solution (f->session), &own, "t1.inlet.");
+  g_assert_cmpuint (flow->len, >, 2);
+  g_assert_cmpstr (((HlTieMatch *) g_ptr_array_index (flow, 0))->text, ==, "T1.inlet.p");
+  gboolean has_flow = FALSE;
+  for (guint n = 1; n < flow->len; n++)
+    has_flow |= g_str_equal (((HlTieMatch *) g_ptr_array_index (flow, n))->text, "T1.inlet.m");
+  g_assert_true (has_flow);
 }
 
 static void

@@ -117,6 +117,10 @@ def test_set_takes_units_and_changes_the_result():
 
 
 def test_set_takes_a_tie():
+    several = solved("--set", "C1.steam.p==max(0.001*(T1.inlet.p + 5 bar)/2; 0.05 bar)")
+    assert abs(several["streams"]["2"]["p_Pa"] - 5000.0) < 1e-6, several["streams"]["2"]
+    _, err = batch("solve", plant("loop.heatloom"), "--set", "C1.steam.p==T1.inlet.p*T1.inlet.h", status=2)
+    assert "that comes out as a number in" in err and "but a pressure is wanted" in err, err
     found = solved("--set", "C1.steam.p==0.001*T1.inlet.p")
     close(found["streams"]["2"]["p_Pa"], 8000.0)
 

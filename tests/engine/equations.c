@@ -118,10 +118,11 @@ test_ties (void)
   HlAddress none = hl_address_plant (g_intern_static_string (""));
   int p = hl_system_add_var (system, HL_VAR_PRESSURE, none, log (4e5)), q = hl_system_add_var (system, HL_VAR_PRESSURE, none, log (1e5));
   int T = hl_system_add_var (system, HL_VAR_TEMPERATURE, none, 400.0), U = hl_system_add_var (system, HL_VAR_TEMPERATURE, none, 500.0);
-  hl_add_tie (system, p, q, 3.0, 1e5);
-  hl_add_tie (system, T, U, 1.0, -100.0);
-  hl_add_tie (system, T, p, 1e-3, 0.0);
-  hl_add_tie (system, q, T, 250.0, 0.0);
+  HlAddress of = hl_address_plant ("net_power");
+  hl_add_tie (system, p, hl_tie_linear (&of, 3.0, 1e5), &q);
+  hl_add_tie (system, T, hl_tie_linear (&of, 1.0, -100.0), &U);
+  hl_add_tie (system, T, hl_tie_linear (&of, 1e-3, 0.0), &p);
+  hl_add_tie (system, q, hl_tie_linear (&of, 250.0, 0.0), &T);
   hl_system_close (system);
   for (int k = 0; k < 4; k++)
     {
@@ -129,6 +130,41 @@ test_ties (void)
       g_assert_cmpint (hl_system_evaluate (system, k, &r, dr), ==, HL_OK);
       g_assert_cmpfloat (fabs (r), <, 1e-9);
       test_check_equation (system, k);
+    }
+}
+
+/* Several quantities, pressures among them, which are carried as logarithms. */
+static void
+test_ties_of_several (void)
+{
+  static const struct { const char *target, *text; } rows[] = {
+    { "D1.steam.p", "=sqrt(B1.steam.p*C1.steam.p) + 0.1 bar" },
+    { "D1.steam.p", "=max(0.1*B1.steam.p; 3*C1.steam.p)" },
+    { "P1.power", "=P1.inlet.m*(P1.outlet.h - P1.inlet.h) + 0.001*B1.steam.m*B1.steam.h" },
+    { "C1.cooling_rise", "=(B1.steam.T - C1.steam.T)/50 - 1 K" },
+    { "T1.isentropic_efficiency", "=0.9 - 0.1*C1.steam.p/B1.steam.p" },
+  };
+  for (gsize i = 0; i < G_N_ELEMENTS (rows); i++)
+    {
+      g_autoptr (HlPlant) plant = test_plant (test_reheat_plant);
+      HlAddress target;
+      HlValue value;
+      g_autoptr (GError) error = NULL;
+      hl_address_parse (rows[i].target, plant, &target, &error);
+      g_assert_no_error (error);
+      hl_value_parse (plant, &target, rows[i].text, &value, &error);
+      g_assert_no_error (error);
+      g_autoptr (HlPlant) tied = hl_plant_with_value (plant, &target, &value, &error);
+      g_assert_no_error (error);
+      g_autoptr (HlModel) model = hl_model_new (tied);
+      guint found = 0;
+      for (guint k = 0; k < model->system->equations->len; k++)
+        if (hl_equation_is_tie (hl_system_equation (model->system, k)))
+          {
+            test_check_equation (model->system, (int) k);
+            found++;
+          }
+      g_assert_cmpuint (found, ==, 1);
     }
 }
 
@@ -143,5 +179,6 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/equations/log-mean", test_log_mean);
   g_test_add_func ("/engine/equations/liquid-is-continuous", test_liquid_is_continuous);
   g_test_add_func ("/engine/equations/ties", test_ties);
+  g_test_add_func ("/engine/equations/ties-of-several", test_ties_of_several);
   return g_test_run ();
 }

@@ -91,7 +91,8 @@ test_ties_are_written_out (void)
 {
   HlPlant *plant = test_plant_let_go (test_plant (test_simple_loop), "C1.cooling_rise");
   HlAddress rise = parse (plant, "C1.cooling_rise");
-  HlValue tie = { .origin = HL_ORIGIN_TIED, .tie_factor = 2.0, .tie_of = parse (plant, "C1.subcooling"), .tie_offset = 8.0 };
+  HlAddress subcooling = parse (plant, "C1.subcooling");
+  HlValue tie = { .origin = HL_ORIGIN_TIED, .tie = hl_tie_linear (&subcooling, 2.0, 8.0) };
   g_autoptr (HlPlant) tied = hl_plant_with_value (plant, &rise, &tie, NULL);
   hl_plant_unref (plant);
   g_autoptr (HlSolution) s = hl_solve (tied, NULL);
@@ -99,7 +100,7 @@ test_ties_are_written_out (void)
   test_assert_near (test_value (s, "C1.cooling_rise"), 8.0, 1e-12);
   g_autofree char *text = hl_solution_explain (s, &rise);
   g_assert_nonnull (text);
-  g_assert_true (g_str_has_prefix (text, "cooling water rise of C1 = 8.0 K\ncooling water rise of C1 = 2 × condensate subcooling of C1 + 8.0 K\n8.0 K = 2 × 0.0 K + 8.0 K"));
+  g_assert_true (g_str_has_prefix (text, "cooling water rise of C1 = 8.0 K\ncooling water rise of C1 = 2 × condensate subcooling of C1 + 8 K\n8.0 K = 2 × 0.0 K + 8 K"));
 }
 
 int

@@ -61,7 +61,7 @@ state_ph (const Calculator *c, const Number *a)
 static gboolean
 call (Calculator *c, Number *out)
 {
-  static const char *const names[] = { "T_sat(", "h′(", "h″(", "h(", "s(", "T(", "v(", "ln(", "max(" };
+  static const char *const names[] = { "T_sat(", "h′(", "h″(", "h(", "s(", "T(", "v(", "ln(", "max(", "min(", "sqrt(" };
   Number a[40];
   guint which = 0, n;
   HlState st;
@@ -100,9 +100,11 @@ call (Calculator *c, Number *out)
     }
   else if (which == 7)
     out->v = log (a[0].v);
+  else if (which == 10)
+    out->v = sqrt (a[0].v);
   else
     for (guint k = 0; k < n; k++)
-      out->v = k == 0 ? a[k].v : fmax (out->v, a[k].v);
+      out->v = k == 0 ? a[k].v : which == 8 ? fmax (out->v, a[k].v) : fmin (out->v, a[k].v);
   return TRUE;
 }
 
@@ -113,6 +115,12 @@ primary (Calculator *c)
   char *end;
   if (call (c, &number))
     return number;
+  if (take (c, "−"))
+    {
+      number = primary (c);
+      number.v = -number.v;
+      return number;
+    }
   if (take (c, "("))
     {
       number = sum (c);
@@ -471,24 +479,46 @@ test_replay_of_an_exchanger (void)
     }
 }
 
+/* Ties of one quantity and of several; the words and numbers of each. */
 static void
-test_replay_of_a_tie (void)
+test_replay_of_ties (void)
 {
-  g_autoptr (HlPlant) plant = test_plant (test_simple_loop);
-  HlAddress address;
-  HlValue value;
-  g_autoptr (GError) error = NULL;
-  g_assert_true (hl_address_parse ("T1.exhaust.p", plant, &address, NULL));
-  g_assert_true (hl_value_parse (plant, &address, "=0.001*T1.inlet.p + 0.01 bar", &value, &error));
-  g_autoptr (HlPlant) tied = hl_plant_with_value (plant, &address, &value, &error);
-  g_assert_no_error (error);
-  replay_all (tied);
-  g_autoptr (HlSolution) s = hl_solve (tied, NULL);
-  g_autoptr (HlNote) note = hl_note_new (s);
-  gboolean found = FALSE;
-  for (guint k = 0; k < hl_note_n_lines (note); k++)
-    found |= g_str_equal (hl_note_line (note, k)->source, "tie that was put in");
-  g_assert_true (found);
+  static const struct { const char *plant, *address, *tie, *words, *numbers; } rows[] = {
+    { "simple", "T1.exhaust.p", "=0.001*T1.inlet.p + 0.01 bar", "exhaust pressure of T1 = 0.001 × inlet pressure of T1 + 0.01 bar", "0.07500 bar = 0.001 × 65.00 bar + 0.01 bar" },
+    { "reheat", "T2.extraction1.p", "=sqrt(T1.exhaust.p*T2.exhaust.p)", "extraction pressure 1 of T2 = sqrt(exhaust pressure of T1 × exhaust pressure of T2)",
+      "1.428 bar = sqrt(34.00 bar × 0.06000 bar)" },
+    { "reheat", "T2.extraction1.p", "=-(2*T2.exhaust.p - T1.exhaust.p/4)", "extraction pressure 1 of T2 = −(2 × exhaust pressure of T2 − exhaust pressure of T1 ÷ 4)",
+      "8.380 bar = −(2 × 0.06000 bar − 34.00 bar ÷ 4)" },
+    { "reheat", "T2.extraction1.p", "=min(max(T2.exhaust.p; 0.3*T1.exhaust.p); 5 bar)", "extraction pressure 1 of T2 = min(max(exhaust pressure of T2, 0.3 × exhaust pressure of T1), 5 bar)",
+      "5.000 bar = min(max(0.06000 bar, 0.3 × 34.00 bar), 5 bar)" },
+    { "reheat", "B1.hot_reheat1.T", "=B1.steam.T - 10 K", "reheat temperature 1 of B1 = steam temperature of B1 − 10 K", "530.0 °C = 540.0 °C − 10 K" },
+    /* A factor holds for absolute temperatures only. */
+    { "reheat", "B1.hot_reheat1.T", "=0.98*B1.steam.T", "reheat temperature 1 of B1 = 0.98 × steam temperature of B1", "796.89 K = 0.98 × 813.15 K" },
+    { "simple", "plant.net_power", "=0.25*(Q1.heat + C1.heat) - 5 MW", "net power of the plant = 0.25 × (heat to working fluid of Q1 + heat rejected of C1) − 5 MW", NULL },
+  };
+  for (guint n = 0; n < G_N_ELEMENTS (rows); n++)
+    {
+      g_autoptr (HlPlant) plant = test_plant (g_str_equal (rows[n].plant, "simple") ? test_simple_loop : test_reheat_plant);
+      HlAddress address;
+      HlValue value;
+      g_autoptr (GError) error = NULL;
+      g_assert_true (hl_address_parse (rows[n].address, plant, &address, NULL));
+      hl_value_parse (plant, &address, rows[n].tie, &value, &error);
+      g_assert_no_error (error);
+      g_autoptr (HlPlant) tied = hl_plant_with_value (plant, &address, &value, &error);
+      g_assert_no_error (error);
+      replay_all (tied);
+      g_autoptr (HlSolution) s = hl_solve (tied, NULL);
+      g_autoptr (HlNote) note = hl_note_new (s);
+      const HlNoteLine *found = NULL;
+      for (guint k = 0; k < hl_note_n_lines (note); k++)
+        if (g_str_equal (hl_note_line (note, k)->source, "tie that was put in"))
+          found = hl_note_line (note, k);
+      g_assert_nonnull (found);
+      g_assert_cmpstr (found->words, ==, rows[n].words);
+      if (rows[n].numbers != NULL)
+        g_assert_cmpstr (found->numbers, ==, rows[n].numbers);
+    }
 }
 
 /* Steps run in solving order: what a line uses was put in, or found in the same step or before. */
@@ -553,7 +583,7 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/note/replay", test_replay_of_the_test_plants);
   g_test_add_func ("/engine/note/replay-special-forms", test_replay_of_special_forms);
   g_test_add_func ("/engine/note/replay-exchanger", test_replay_of_an_exchanger);
-  g_test_add_func ("/engine/note/replay-tie", test_replay_of_a_tie);
+  g_test_add_func ("/engine/note/replay-ties", test_replay_of_ties);
   g_test_add_func ("/engine/note/order", test_order);
   g_test_add_func ("/engine/note/text", test_text);
   g_test_add_func ("/engine/note/incomplete", test_an_incomplete_plant);

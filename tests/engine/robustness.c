@@ -59,9 +59,8 @@ any_edit (HlPlant *plant, const HlSolution *s, GRand *rand, HlAddress *address)
   if (what == 0)
     {
       value.origin = HL_ORIGIN_TIED;
-      value.tie_of = any_address (plant, rand);
-      value.tie_factor = g_rand_double_range (rand, 0.5, 1.5);
-      value.tie_offset = 0.0;
+      HlAddress of = any_address (plant, rand);
+      value.tie = hl_tie_linear (&of, g_rand_double_range (rand, 0.5, 1.5), 0.0);
     }
   return hl_plant_with_value (plant, address, what == 1 ? NULL : &value, NULL);
 }

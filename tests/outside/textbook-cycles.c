@@ -157,7 +157,8 @@ test_reheat_closed_and_open_heater (void)
     "H1.feed_outlet > M1.inlet1\nH1.drain > P3.inlet\nP3.outlet > M1.inlet2\nM1.outlet > Q1.feed\n"
     "plant other_consumption_fraction=0\n");
   HlAddress target = hl_address_component (g_intern_static_string ("H1"), g_intern_static_string ("feed_outlet.T"));
-  HlValue tie = { .origin = HL_ORIGIN_TIED, .tie_factor = 1.0, .tie_of = hl_address_component (g_intern_static_string ("P3"), g_intern_static_string ("outlet.T")) };
+  HlAddress of = hl_address_component ("P3", "outlet.T");
+  HlValue tie = { .origin = HL_ORIGIN_TIED, .tie = hl_tie_linear (&of, 1.0, 0.0) };
   g_autoptr (GError) error = NULL;
   g_autoptr (HlPlant) tied = hl_plant_with_value (plant, &target, &tie, &error);
   g_assert_no_error (error);

@@ -1,5 +1,6 @@
 /* Edits: what they change, what they take with them, and that the old plant stays.
  * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "plant/plant-private.h"
 #include "plant-test.h"
 
 /* Runs an edit and asserts that the old plant still reads as before and shares what the edit left alone. */
@@ -109,7 +110,8 @@ test_component_edit_drops_what_lost_its_end (void)
   HlComponent *turbine = hl_component_copy (hl_plant_find_component (plant, "T1"));
   HlComponent *moved = hl_component_copy (hl_plant_find_component (plant, "C1"));
   HlAddress flow = address (plant, "m:4");
-  HlValue tie = { .origin = HL_ORIGIN_TIED, .tie_of = address (plant, "T1.extraction1.m"), .tie_factor = 2.0 };
+  HlAddress of = address (plant, "T1.extraction1.m");
+  HlValue tie = { .origin = HL_ORIGIN_TIED, .tie = hl_tie_linear (&of, 2.0, 0.0) };
   GError *error = NULL;
   EDIT (tied, plant, hl_plant_with_value (plant, &flow, &tie, &error));
   moved->x += 3;
@@ -117,10 +119,10 @@ test_component_edit_drops_what_lost_its_end (void)
   {
     EDIT (shorter, tied, hl_plant_with_component (tied, turbine));
     EDIT (shifted, tied, hl_plant_with_component (tied, moved));
-    /* The extraction line goes, and the tie to its flow; a mere move takes nothing. */
+    /* The extraction line goes; a mere move takes nothing.  The tie to its flow stays, to be named in a finding. */
     g_assert_null (hl_plant_find_stream (shorter, "5"));
     g_assert_cmpuint (hl_plant_n_streams (shorter), ==, 6);
-    g_assert_null (hl_plant_value (shorter, &flow));
+    g_assert_nonnull (hl_plant_value (shorter, &flow));
     g_assert_null (hl_plant_stream_at (shorter, "D1", "steam"));
     g_assert_cmpuint (hl_plant_n_streams (shifted), ==, 7);
     g_assert_nonnull (hl_plant_value (shifted, &flow));
@@ -159,11 +161,108 @@ test_removal_takes_attached_things_along (void)
   g_assert_null (hl_plant_find_component (without, "T1"));
   g_assert_cmpuint (hl_plant_n_streams (without), ==, 4);
   g_assert_cmpuint (hl_plant_n_shafts (without), ==, 0);   /* one alone needs no shaft */
-  g_assert_null (hl_plant_value (without, &flow));         /* was tied to the exhaust's flow */
+  g_assert_nonnull (hl_plant_value (without, &flow));      /* tied to the exhaust's flow, and says so */
   g_assert_cmpuint (hl_plant_n_shafts (less), ==, 0);
   g_assert_cmpuint (hl_plant_n_streams (less), ==, 6);
-  g_assert_null (hl_plant_value (less, &flow));
+  g_assert_nonnull (hl_plant_value (less, &flow));
   g_assert_cmpuint (hl_plant_n_components (less), ==, 7);
+}
+
+static char *
+tie_at (const HlPlant *plant, const char *text)
+{
+  HlAddress at = address (plant, text);
+  const HlValue *value = hl_plant_value (plant, &at);
+  return value != NULL && value->origin == HL_ORIGIN_TIED ? hl_tie_to_text (value) : NULL;
+}
+
+static HlPlant *
+with_tie (const HlPlant *plant, const char *text, const char *tie)
+{
+  HlAddress at = address (plant, text);
+  HlValue value;
+  GError *error = NULL;
+  hl_value_parse (plant, &at, tie, &value, &error);
+  g_assert_no_error (error);
+  HlPlant *tied = hl_plant_with_value (plant, &at, &value, &error);
+  g_assert_no_error (error);
+  return tied;
+}
+
+#define assert_tie(plant, at, expected) \
+  G_STMT_START { g_autofree char *tie_text = tie_at (plant, at); g_assert_cmpstr (tie_text, ==, expected); } G_STMT_END
+
+static void
+test_a_tie_keeps_what_was_typed (void)
+{
+  g_autoptr (HlPlant) plant = loop_plant ();
+  HlAddress of = address (plant, "C1.steam.p"), two = address (plant, "m:2"), gone = hl_address_component ("Z9", "power"), p = address (plant, "P1.outlet.p");
+  HlValue value = { .origin = HL_ORIGIN_TIED, .tie = hl_tie_linear (&of, 2.0, 1e4) };
+  GError *error = NULL;
+  EDIT (tied, plant, hl_plant_with_value (plant, &p, &value, &error));
+  g_autofree char *shown = hl_tie_format (tied, &p, hl_plant_value (tied, &p));
+  g_assert_cmpstr (shown, ==, "2*C1.steam.p + 0.1 bar");
+  value.tie = hl_tie_linear (&two, 1.0, 0.0);
+  g_assert_null (hl_plant_with_value (plant, &p, &value, &error));
+  assert_message (&error, "comes out as a mass flow, but a pressure is wanted");
+  value.tie = hl_tie_linear (&gone, 1.0, 0.0);
+  g_assert_null (hl_plant_with_value (plant, &p, &value, &error));
+  assert_message (&error, "P1.outlet.p cannot be tied to Z9.power: there is no such quantity");
+}
+
+/* Lines, shaft and ties follow a new id. */
+static void
+test_a_new_id (void)
+{
+  g_autoptr (HlPlant) plant = loop_plant ();
+  g_autoptr (HlPlant) one = with_tie (plant, "P1.outlet.p", "=max(0.1*T1.inlet.p; C1.steam.p) + T1.exhaust.p");
+  g_autoptr (HlPlant) two = with_tie (one, "plant.gross_power", "=T1.power - P2.power");
+  GError *error = NULL;
+  g_autoptr (HlPlant) renamed = hl_plant_with_id (two, "T1", "HP", &error);
+  g_assert_no_error (error);
+  g_assert_null (hl_plant_find_component (renamed, "T1"));
+  g_assert_cmpint (hl_plant_component_index (renamed, "HP"), ==, hl_plant_component_index (plant, "T1"));
+  g_assert_cmpstr (hl_plant_stream_at (renamed, "HP", "inlet")->id, ==, "live");
+  g_assert_cmpstr (hl_plant_stream_at (renamed, "HP", "exhaust")->from_id, ==, "HP");
+  g_assert_cmpstr (hl_plant_shaft_of (renamed, "HP")->id, ==, "S1");
+  assert_tie (renamed, "P1.outlet.p", "max(0.1*HP.inlet.p;C1.steam.p)+HP.exhaust.p");
+  assert_tie (renamed, "plant.gross_power", "HP.power-P2.power");
+  g_autoptr (HlPlant) stream = hl_plant_with_id (renamed, "2", "wet", &error);
+  g_assert_no_error (error);
+  assert_tie (stream, "m:4", "0.9*wet.m");
+  g_autoptr (HlPlant) back = hl_plant_with_id (stream, "wet", "2", NULL), again = hl_plant_with_id (back, "HP", "T1", NULL);
+  g_assert_true (hl_plant_equal (again, two));
+  g_assert_null (hl_plant_with_id (two, "T1", "C1", &error));
+  assert_message (&error, "“C1” is the id of something else already");
+  g_assert_null (hl_plant_with_id (two, "T1", "high pressure", &error));
+  assert_message (&error, "“high pressure” is no id");
+  g_assert_null (hl_plant_with_id (two, "T1", "1", &error));
+  assert_message (&error, "“1” is no id");
+  g_assert_null (hl_plant_with_id (two, "Z9", "Y9", &error));
+  assert_message (&error, "there is no “Z9”");
+}
+
+static void
+swap_pumps (HlAddress *at, gpointer data)
+{
+  if (g_str_equal (at->id, "P1"))
+    at->id = g_intern_static_string (data);
+}
+
+static void
+test_ties_are_mapped (void)
+{
+  const char *ids[] = { "C1", NULL };
+  g_autoptr (HlPlant) plant = loop_plant ();
+  g_autoptr (HlPlant) one = with_tie (plant, "C1.steam.p", "=0.01*P1.outlet.p + 0.01*D1.steam.p");
+  g_autoptr (HlPlant) two = with_tie (one, "T1.extraction1.p", "=0.5*P1.outlet.p");
+  g_autoptr (HlPlant) mapped = hl_plant_with_ties_mapped (two, ids, swap_pumps, (gpointer) "P2");
+  assert_tie (mapped, "C1.steam.p", "0.01*P2.outlet.p+0.01*D1.steam.p");
+  assert_tie (mapped, "T1.extraction1.p", "0.5*P1.outlet.p");
+  /* What is not there, or has no such pressure, cannot be followed. */
+  g_autoptr (HlPlant) lost = hl_plant_with_ties_mapped (two, ids, swap_pumps, (gpointer) "Z9");
+  assert_tie (lost, "C1.steam.p", NULL);
+  assert_tie (lost, "T1.extraction1.p", "0.5*P1.outlet.p");
 }
 
 static void
@@ -331,6 +430,9 @@ main (int argc, char **argv)
   g_test_add_func ("/plant-edit/adding-components-and-streams", test_adding_components_and_streams);
   g_test_add_func ("/plant-edit/removal-takes-attached-things-along", test_removal_takes_attached_things_along);
   g_test_add_func ("/plant-edit/a-component-is-on-one-shaft", test_a_component_is_on_one_shaft);
+  g_test_add_func ("/plant-edit/a-tie-keeps-what-was-typed", test_a_tie_keeps_what_was_typed);
+  g_test_add_func ("/plant-edit/a-new-id", test_a_new_id);
+  g_test_add_func ("/plant-edit/ties-are-mapped", test_ties_are_mapped);
   g_test_add_func ("/plant-edit/free-ids", test_free_ids);
   g_test_add_func ("/plant-edit/connections", test_connections);
   g_test_add_func ("/plant-edit/history-of-random-edits", test_history_of_random_edits);

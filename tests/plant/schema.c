@@ -152,7 +152,7 @@ static const char middle[] =
   "    {\"required\": [\"add\"], \"properties\": {\"add\": {\"description\": \"a component, stream or shaft as it stands in its list\", \"type\": \"object\", \"required\": [\"id\"], \"properties\": {\"id\": {\"$ref\": \"#/$defs/id\"}}}}}]},\n"
   "  \"id\": {\"type\": \"string\", \"minLength\": 1, \"maxLength\": 32, \"pattern\": \"^[^\\\\s.:*/+()-]+$\"},\n"
   "  \"place\": {\"description\": \"x to the right, y downwards, in grid units\", \"type\": \"array\", \"items\": {\"type\": \"integer\"}, \"minItems\": 2, \"maxItems\": 2},\n"
-  "  \"tied\": {\"description\": \"factor*address+offset in SI, for instance 0.23*B1.steam.p\", \"type\": \"object\", \"additionalProperties\": {\"type\": \"string\"}},\n"
+  "  \"tied\": {\"description\": \"an expression of other quantities in SI, for instance 0.23*B1.steam.p or (H1.heat+H2.heat)/2\", \"type\": \"object\", \"additionalProperties\": {\"type\": \"string\"}},\n"
   "  \"end\": {\"description\": \"component.port\", \"type\": \"string\", \"pattern\": \"^[^.]+\\\\.[^.]+$\"},\n"
   "  \"stream\": {\"type\": \"object\", \"required\": [\"id\", \"from\", \"to\"], \"properties\": {\n"
   "    \"id\": {\"$ref\": \"#/$defs/id\"},\n"

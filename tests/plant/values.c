@@ -34,15 +34,16 @@ test_values_stay_sorted_and_unique (void)
 static void
 test_equality_sees_every_part (void)
 {
-  HlValue base = { .origin = HL_ORIGIN_TIED, .tie_of = hl_address_stream ("1", "m"), .tie_factor = 2, .tie_offset = 3 };
+  HlAddress of = hl_address_stream ("1", "m"), other = hl_address_stream ("2", "m");
+  HlValue base = { .origin = HL_ORIGIN_TIED, .tie = hl_tie_linear (&of, 2, 3) };
   HlValue others[4];
   HlValues a = { 0 };
   for (int i = 0; i < 4; i++)
     others[i] = base;
   others[0].origin = HL_ORIGIN_GIVEN;
-  others[1].tie_factor = 2.5;
-  others[2].tie_offset = 4;
-  others[3].tie_of = hl_address_stream ("2", "m");
+  others[1].tie = hl_tie_linear (&of, 2.5, 3);
+  others[2].tie = hl_tie_linear (&of, 2, 4);
+  others[3].tie = hl_tie_linear (&other, 2, 3);
   hl_values_set (&a, "m", &base);
   for (int i = 0; i < 4; i++)
     {
