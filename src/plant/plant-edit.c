@@ -237,19 +237,12 @@ hl_plant_without (const HlPlant *plant, const char *const *ids)
   return edited;
 }
 
-/* All that it names is there, and the dimensions agree.  @tie: (inout) comes out as a file of this plant would give it. */
+/* The dimensions agree, as far as what it names is there.  @tie: (inout) comes out as a file of this plant would give it. */
 static gboolean
-check_tie (const HlPlant *plant, const HlAddress *address, const char *where, const HlTie **tie, GError **error)
+check_tie (const HlPlant *plant, const HlAddress *address, const HlTie **tie, GError **error)
 {
   HlValue whole = { .origin = HL_ORIGIN_TIED, .tie = *tie }, read;
   g_autofree char *text = hl_tie_to_text (&whole);
-  for (guint k = 0; k < hl_tie_n_of (*tie); k++)
-    if (hl_plant_quantity_kind (plant, hl_tie_of (*tie, k)) == NULL)
-      {
-        g_autofree char *of = hl_address_to_text (hl_tie_of (*tie, k));
-        g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_ADDRESS, _("%s cannot be tied to %s: there is no such quantity"), where, of);
-        return FALSE;
-      }
   if (!hl_tie_read (plant, address, text, TRUE, &read, error))
     return FALSE;
   *tie = read.tie;
@@ -269,7 +262,7 @@ check_value (const HlPlant *plant, const HlAddress *address, HlValue *value, GEr
   if (value == NULL)
     return TRUE;
   if (value->origin == HL_ORIGIN_TIED)
-    return check_tie (plant, address, where, &value->tie, error);
+    return check_tie (plant, address, &value->tie, error);
   g_return_val_if_fail (value->origin == HL_ORIGIN_GIVEN || value->origin == HL_ORIGIN_ASSUMED, FALSE);
   return hl_quantity_check (kind, where, value->value, plant->units, error);
 }

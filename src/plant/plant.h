@@ -64,7 +64,7 @@ HL_PUBLIC HlPlant *hl_plant_with_component (const HlPlant *plant, HlComponent *c
 HL_PUBLIC HlPlant *hl_plant_with_stream    (const HlPlant *plant, HlStream *stream);        /* (transfer full) adds or replaces; another line at one of its ports goes */
 HL_PUBLIC HlPlant *hl_plant_with_shaft     (const HlPlant *plant, HlShaft *shaft);          /* (transfer full); a component is on one shaft at most: joining takes it off its former one */
 HL_PUBLIC HlPlant *hl_plant_without        (const HlPlant *plant, const char *const *ids);  /* NULL-terminated ids of components, streams, shafts; attached streams and shafts left with less than two go too; ties to them stay and become a finding */
-/* NULL value: let it be found.  A state has one value: another name of the same state (port or stream) loses its own.  Checks the hard limits, and that what a tie names exists, is not the quantity itself and has the dimensions. */
+/* NULL value: let it be found.  A state has one value: another name of the same state (port or stream) loses its own.  Checks the hard limits, and that what a tie names is not the quantity itself and has the dimensions; what is not there may be named, as in a file. */
 HL_PUBLIC HlPlant *hl_plant_with_value     (const HlPlant *plant, const HlAddress *address, const HlValue *value, GError **error);
 
 /* The ties of these components and streams with each address as @map leaves it; one that then names what is not there, or does not fit, goes. */

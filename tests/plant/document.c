@@ -413,7 +413,7 @@ test_reasons_why_changes_do_not_apply (void)
     { "{\"set\": \"nothing\", \"to\": 1}", "names no quantity" },
     { "{\"set\": \"T1.isentropic_efficiency\", \"to\": 1.4}", "must lie above 0 and be at most 1" },
     { "{\"set\": \"T1.isentropic_efficiency\", \"to\": true}", "not true or false" },
-    { "{\"set\": \"T1.isentropic_efficiency\", \"to\": \"2*Q1.x\"}", "Q1" },
+    { "{\"set\": \"T1.isentropic_efficiency\", \"to\": \"2*Q1\"}", "“Q1” names no quantity" },
     { "{\"set\": \"T1.extractions\", \"to\": 99}", "must be a whole number from 0 to" },
     { "{\"set\": \"T1.expansion\", \"to\": \"crooked\"}", "“crooked” is none of" },
     { "{\"set\": \"T1.at\", \"to\": [1]}", "must be two whole numbers" },

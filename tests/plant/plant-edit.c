@@ -206,8 +206,8 @@ test_a_tie_keeps_what_was_typed (void)
   g_assert_null (hl_plant_with_value (plant, &p, &value, &error));
   assert_message (&error, "comes out as a mass flow, but a pressure is wanted");
   value.tie = hl_tie_linear (&gone, 1.0, 0.0);
-  g_assert_null (hl_plant_with_value (plant, &p, &value, &error));
-  assert_message (&error, "P1.outlet.p cannot be tied to Z9.power: there is no such quantity");
+  EDIT (broken, plant, hl_plant_with_value (plant, &p, &value, &error));
+  assert_tie (broken, "P1.outlet.p", "Z9.power");      /* a finding will say so */
 }
 
 /* Lines, shaft and ties follow a new id. */
