@@ -52,7 +52,10 @@ text_medium (const Row *row)
 
 /* The fluid's own words have no translations of theirs; these lines offer them to the translators. */
 G_GNUC_UNUSED static const char *const words_of_fluids[] = { N_("Water and steam"), N_("liquid"), N_("vapour"), N_("supercritical"),
-                                                                  N_("gas"), N_("Air"), N_("Flue gas"), N_("Gas mixture") };
+                                                                  N_("gas"), N_("Air"), N_("Flue gas"), N_("Gas mixture"),
+                                                                  N_("Mineral oil"), N_("Engine oil, unused"), N_("Diphenyl and diphenyl oxide, eutectic"),
+                                                                  N_("Ethylene glycol brine, 30 %"), N_("Propylene glycol brine, 40 %"),
+                                                                  N_("Calcium chloride brine, 20 %") };
 
 static char *
 text_phase (const Row *row)

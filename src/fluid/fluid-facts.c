@@ -7,6 +7,7 @@
 
 #include "fluid/gas-private.h"
 #include "fluid/helmholtz-private.h"
+#include "fluid/liquid-private.h"
 
 /* The stretch of the saturation line that power cycles use. */
 #define SHARE_LOW 0.60
@@ -49,12 +50,13 @@ hazards_of (HlFluidFacts *facts)
     }
 }
 
-/* Nothing is said of a gas's hazards: what it brings depends on where it comes from. */
+/* Nothing is said of the hazards of a gas or an oil: they depend on where it comes from. */
 static void
-facts_of_gas (HlFluidFacts *facts)
+facts_without_dome (const HlFluid *fluid, HlFluidFacts *facts)
 {
   *facts = (HlFluidFacts) {
-    .source = hl_gas_data ()->source, .expansion = HL_EXPANSION_NONE, .T_boiling = NAN,
+    .source = hl_gas_is_mixture (fluid) ? hl_gas_data ()->source : hl_liquid_of (fluid)->source,
+    .note = hl_gas_is_mixture (fluid) ? NULL : hl_liquid_of (fluid)->note, .expansion = HL_EXPANSION_NONE, .T_boiling = NAN,
     .is_flammable = HL_HAZARD_UNKNOWN, .is_toxic = HL_HAZARD_UNKNOWN, .gwp100 = NAN, .T_stable = NAN,
   };
 }
@@ -70,9 +72,9 @@ facts_of_gas (HlFluidFacts *facts)
 void
 hl_fluid_facts (const HlFluid *fluid, HlFluidFacts *facts)
 {
-  if (hl_gas_is_mixture (fluid))
+  if (!hl_fluid_has_dome (fluid))
     {
-      facts_of_gas (facts);
+      facts_without_dome (fluid, facts);
       return;
     }
   const HlFluid *described = fluid == hl_fluid_water () ? hl_fluid_lookup ("water-95") : fluid;

@@ -9,7 +9,7 @@ typedef enum {
   HL_EXPANSION_WET,         /* into the wet region: ds''/dT is negative throughout */
   HL_EXPANSION_ISENTROPIC,  /* the sign of ds''/dT changes: nearly along the line */
   HL_EXPANSION_DRY,         /* into superheated vapour: ds''/dT is positive throughout */
-  HL_EXPANSION_NONE,        /* a gas without saturation line */
+  HL_EXPANSION_NONE,        /* a gas or liquid without saturation line */
 } HlExpansionType;
 
 typedef enum { HL_HAZARD_NO, HL_HAZARD_YES, HL_HAZARD_UNKNOWN } HlHazard;

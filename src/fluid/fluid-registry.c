@@ -5,6 +5,7 @@
 #include <string.h>
 
 #include "fluid/gas-private.h"
+#include "fluid/liquid-private.h"
 #include "hl-fluid-data.h"
 
 #define RESOURCES "/local/heatloom/fluids/"
@@ -125,9 +126,27 @@ hl_fluid_with_reference (const HlFluid *fluid, HlReference reference)
   return NULL;
 }
 
+static gboolean
+is_of_the_program (const char *id)
+{
+  g_autoptr (GBytes) ours = carried (id);
+  return ours != NULL || strcmp (id, hl_water_if97.id) == 0 || hl_gas_lookup (id, NULL) != NULL;
+}
+
+static const HlFluid *
+load_liquid (const char *text, gssize length, const char *where, GError **error)
+{
+  HlLiquid *liquid = hl_liquid_read (text, length, where, error);
+  if (liquid == NULL || !is_of_the_program (liquid->fluid.id))
+    return liquid != NULL ? hl_liquid_keep (liquid, where, error) : NULL;
+  g_set_error (error, HL_FLUID_ERROR, HL_FLUID_ERROR_FILE, "%s: id \"%s\" belongs to a medium of the program; choose another id", where, liquid->fluid.id);
+  hl_liquid_free (liquid);
+  return NULL;
+}
+
 /**
  * hl_fluid_load_file:
- * @path: a coefficient file as in data/fluids/, UTF-8 JSON
+ * @path: a coefficient file as in data/fluids/ or data/liquids/, UTF-8 JSON
  * @error: says what is wrong, where, and how to mend it
  *
  * Adds the user's own fluid under the id in its file, for the rest of the
@@ -143,11 +162,12 @@ hl_fluid_load_file (const char *path, GError **error)
   g_return_val_if_fail (path != NULL, NULL);
   if (!g_file_get_contents (path, &text, &length, error))
     return NULL;
+  if (hl_liquid_is_file (text, (gssize) length))
+    return load_liquid (text, (gssize) length, where, error);
   HlHelmholtz *eq = read_fluid (text, (gssize) length, where, error);
   if (eq == NULL)
     return NULL;
-  g_autoptr (GBytes) ours = carried (eq->fluid.id);
-  if (ours != NULL || strcmp (eq->fluid.id, hl_water_if97.id) == 0 || hl_gas_lookup (eq->fluid.id, NULL) != NULL)
+  if (is_of_the_program (eq->fluid.id) || hl_liquid_lookup (eq->fluid.id) != NULL)
     {
       g_set_error (error, HL_FLUID_ERROR, HL_FLUID_ERROR_FILE, "%s: id \"%s\" belongs to a medium of the program; choose another id", where, eq->fluid.id);
       hl_helmholtz_free (eq);
@@ -173,7 +193,7 @@ compare_ids (gconstpointer a, gconstpointer b)
 /**
  * hl_fluid_list:
  *
- * Returns: (transfer full): ids of all media, water first, then by name of id, gases last; free with g_strfreev()
+ * Returns: (transfer full): ids of all media, water first, then by name of id, then liquids without vapour, gases last; free with g_strfreev()
  */
 char **
 hl_fluid_list (void)
@@ -198,6 +218,7 @@ hl_fluid_list (void)
   g_mutex_unlock (&lock);
   g_ptr_array_sort (ids, compare_ids);
   g_ptr_array_insert (ids, 0, g_strdup (hl_water_if97.id));
+  hl_liquid_list (ids);
   hl_gas_list (ids);
   g_ptr_array_add (ids, NULL);
   return (char **) g_ptr_array_free (ids, FALSE);

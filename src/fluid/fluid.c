@@ -6,6 +6,7 @@
 #include <string.h>
 
 #include "fluid/gas-private.h"
+#include "fluid/liquid-private.h"
 
 static const HlFluid *const fluids[] = { &hl_water_if97 };
 
@@ -42,6 +43,8 @@ hl_fluid_find (const char *id, GError **error)
     if (strcmp (id, fluids[i]->id) == 0)
       return fluids[i];
   const HlFluid *fluid = hl_gas_lookup (id, &why);
+  if (fluid == NULL && why == NULL)
+    fluid = hl_liquid_lookup (id);
   if (fluid == NULL && why == NULL)
     fluid = hl_registry_lookup (id);
   if (fluid == NULL && why != NULL)
@@ -114,8 +117,9 @@ hl_fluid_limits (const HlFluid *fluid, HlFluidLimits *limits)
  * hl_fluid_has_dome:
  * @fluid: a fluid
  *
- * Returns: whether it has a saturation line that ends at a critical point; where
- *   not, the critical data of its limits are NaN and saturation calls fail
+ * Returns: whether it has a saturation line that ends at a critical point; ideal
+ *   gases and liquids by polynomials have none: the critical data of their limits
+ *   are NaN and saturation calls fail
  */
 gboolean
 hl_fluid_has_dome (const HlFluid *fluid)

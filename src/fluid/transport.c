@@ -6,6 +6,7 @@
 #include <string.h>
 
 #include "fluid/helmholtz-private.h"
+#include "fluid/liquid-private.h"
 #include "fluid/transport-private.h"
 
 #define T_CRITICAL 647.096
@@ -22,12 +23,22 @@ is_water_95 (const HlFluid *fluid)
  * hl_fluid_has_transport:
  * @fluid: a fluid
  *
- * Returns: whether viscosity, conductivity and surface tension are known for it
+ * Returns: whether viscosity, conductivity and surface tension are known for it; of
+ *   liquids by polynomials the first two are known, too
  */
 gboolean
 hl_fluid_has_transport (const HlFluid *fluid)
 {
   return fluid == hl_fluid_water () || is_water_95 (fluid);
+}
+
+static HlStatus
+transport_of_liquid (const HlFluid *fluid, const HlState *state, double (*value_at) (const HlLiquid *, double), double *value)
+{
+  if (!(state->T >= fluid->limits.T_min && state->T <= fluid->limits.T_max))
+    return HL_OUTSIDE_RANGE;
+  *value = value_at (hl_liquid_of (fluid), state->T);
+  return HL_OK;
 }
 
 /* d(density)/dp at 1.5 times the critical temperature.  IAPWS R15-11(2011), Eq. 25
@@ -93,6 +104,8 @@ HlStatus
 hl_fluid_viscosity (const HlFluid *fluid, const HlState *state, double *viscosity)
 {
   /* R12-08(2008), section 2.2, from memory of the release. */
+  if (hl_fluid_is_liquid (fluid))
+    return transport_of_liquid (fluid, state, hl_liquid_viscosity, viscosity);
   static const Limit limits[] = { { 300e6, 1173.15 }, { 350e6, 873.15 }, { 500e6, 433.15 }, { 1000e6, 373.15 } };
   if (!hl_fluid_has_transport (fluid) || !is_within (state, limits, G_N_ELEMENTS (limits)))
     return HL_OUTSIDE_RANGE;
@@ -135,6 +148,8 @@ hl_fluid_conductivity (const HlFluid *fluid, const HlState *state, double *condu
   /* R15-11(2011), section 2.2, from memory of the release. */
   static const Limit limits[] = { { 100e6, 1173.15 }, { 250e6, 874.0 }, { 687e6, 573.0 }, { 785e6, 403.0 }, { 1000e6, 348.0 } };
   double viscosity;
+  if (hl_fluid_is_liquid (fluid))
+    return transport_of_liquid (fluid, state, hl_liquid_conductivity, conductivity);
   if (!hl_fluid_has_transport (fluid) || !is_within (state, limits, G_N_ELEMENTS (limits))
       || hl_fluid_viscosity (fluid, state, &viscosity) != HL_OK)
     return HL_OUTSIDE_RANGE;

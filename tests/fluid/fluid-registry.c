@@ -7,7 +7,7 @@ static void
 test_media_are_found (void)
 {
   g_auto (GStrv) ids = hl_fluid_list ();
-  g_assert_cmpuint (g_strv_length (ids), ==, 40);
+  g_assert_cmpuint (g_strv_length (ids), ==, 46);
   for (guint i = 0; ids[i] != NULL; i++)
     {
       const HlFluid *fluid = hl_fluid_lookup (ids[i]);
