@@ -65,7 +65,7 @@ run_note (const HlArguments *arguments)
 {
   g_autoptr (GError) error = NULL;
   HlExit failure;
-  g_autoptr (HlPlant) plant = hl_input_plant (arguments, &failure, &error);
+  g_autoptr (HlPlant) plant = hl_input_plant (arguments, NULL, NULL, &failure, &error);
   if (plant == NULL)
     return hl_complain (failure, g_steal_pointer (&error));
   g_autoptr (GArray) yielded = g_array_new (FALSE, FALSE, sizeof (HlYield));

@@ -48,7 +48,7 @@ hl_input_variant (const HlDocument *document, const HlArguments *arguments, cons
 }
 
 HlPlant *
-hl_input_plant (const HlArguments *arguments, HlExit *failure, GError **error)
+hl_input_plant (const HlArguments *arguments, HlDocument **document_out, int *variant_out, HlExit *failure, GError **error)
 {
   g_autoptr(HlDocument) document = hl_input_document (hl_arguments_word (arguments, 0), error);
   int variant;
@@ -66,7 +66,12 @@ hl_input_plant (const HlArguments *arguments, HlExit *failure, GError **error)
                                                hl_change_where (left_out->change), left_out->why);
       fprintf (stderr, "heatloom-batch: %s\n", text);
     }
-  return hl_plant_ref (hl_document_plant (document, variant));
+  HlPlant *plant = hl_plant_ref (hl_document_plant (document, variant));
+  if (variant_out != NULL)
+    *variant_out = variant;
+  if (document_out != NULL)
+    *document_out = g_steal_pointer (&document);
+  return plant;
 }
 
 /* One --set, as if typed in the window: the value is given, and an assumed one may yield to it. */

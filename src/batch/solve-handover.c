@@ -84,9 +84,9 @@ write_summary (const HlSolution *solution, const char *path, GError **error)
 }
 
 static gboolean
-write_workbook (const HlSolution *solution, const char *path, GError **error)
+write_workbook (const HlSolution *solution, const HlComparison *comparison, const char *path, GError **error)
 {
-  g_autoptr (GBytes) bytes = hl_export_workbook (solution, hl_plant_units (hl_solution_plant (solution)), error);
+  g_autoptr (GBytes) bytes = hl_export_workbook_with (solution, comparison, hl_plant_units (hl_solution_plant (solution)), error);
   return bytes != NULL && hl_export_bytes_file (bytes, path, error);
 }
 
@@ -121,16 +121,20 @@ write_report (const HlSolution *solution, const HlArguments *arguments, const Hl
 }
 
 gboolean
-hl_write_handover (const HlSolution *solution, const HlArguments *arguments, GError **error)
+hl_write_handover (const HlSolution *solution, HlDocument *document, const HlArguments *arguments, GError **error)
 {
   g_autoptr (GPtrArray) texts = g_ptr_array_new_with_free_func (g_free);
   const char *summary = hl_arguments_value (arguments, "summary"), *workbook = hl_arguments_value (arguments, "xlsx");
   const char *drawing = hl_arguments_value (arguments, "paper") != NULL ? hl_arguments_value (arguments, "drawing") : NULL;
   const char *report = hl_arguments_value (arguments, "report");
+  gboolean has_variants = hl_document_n_variants (document) > 0 && (workbook != NULL || report != NULL);
+  g_autoptr (HlComparison) comparison = has_variants ? hl_comparison_new (document, HL_DOCUMENT_BASE, FALSE, NULL) : NULL;
   HlSheetFields fields;
-  return read_fields (arguments, &fields, texts, error)
-         && (summary == NULL || write_summary (solution, summary, error))
-         && (workbook == NULL || write_workbook (solution, workbook, error))
+  if (!read_fields (arguments, &fields, texts, error))
+    return FALSE;
+  fields.comparison = comparison;
+  return (summary == NULL || write_summary (solution, summary, error))
+         && (workbook == NULL || write_workbook (solution, comparison, workbook, error))
          && (drawing == NULL || write_sheet (solution, arguments, &fields, drawing, error))
          && (report == NULL || write_report (solution, arguments, &fields, report, error));
 }

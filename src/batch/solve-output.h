@@ -5,6 +5,7 @@
 #include "batch/command.h"
 #include "draw/export.h"
 #include "engine/engine.h"
+#include "plant/document.h"
 G_BEGIN_DECLS
 
 /* @yielded: of HlYield, in order. */
@@ -14,7 +15,7 @@ void  hl_print_solution     (FILE *out, const HlSolution *solution, const GArray
 void  hl_print_findings     (FILE *out, const HlSolution *solution, HlGrade at_least);
 /* Summary, workbook, drawing on paper: mistakes of the command line first, then the files. */
 gboolean hl_check_handover  (const HlArguments *arguments, GError **error);
-gboolean hl_write_handover  (const HlSolution *solution, const HlArguments *arguments, GError **error);
+gboolean hl_write_handover  (const HlSolution *solution, HlDocument *document, const HlArguments *arguments, GError **error);   /* @document: its variants go into tables */
 /* State diagrams, heat diagrams: mistakes of the command line first, those in @plant too where it is known; then the files. */
 gboolean hl_check_pictures  (const HlPlant *plant, const HlArguments *arguments, GError **error);
 gboolean hl_write_pictures  (const HlSolution *solution, const HlArguments *arguments, GError **error);

@@ -29,7 +29,7 @@ check_usage (const HlArguments *arguments, GError **error)
 }
 
 static gboolean
-write_outputs (const HlSolution *solution, const GArray *yielded, const HlArguments *arguments, GError **error)
+write_outputs (const HlSolution *solution, HlDocument *document, const GArray *yielded, const HlArguments *arguments, GError **error)
 {
   const char *json_path = hl_arguments_value (arguments, "json"), *csv_path = hl_arguments_value (arguments, "csv");
   const char *ledger_path = hl_arguments_value (arguments, "ledger"), *drawing = hl_arguments_value (arguments, "drawing");
@@ -51,7 +51,7 @@ write_outputs (const HlSolution *solution, const GArray *yielded, const HlArgume
       if (!hl_export_text_file (text, ledger_path, error))
         return FALSE;
     }
-  return hl_write_handover (solution, arguments, error)
+  return hl_write_handover (solution, document, arguments, error)
          && (drawing == NULL || hl_arguments_value (arguments, "paper") != NULL || hl_write_picture (solution, HL_PICTURE_DRAWING, -1, drawing, error))
          && hl_write_pictures (solution, arguments, error);
 }
@@ -63,7 +63,9 @@ run_solve (const HlArguments *arguments)
   if (!check_usage (arguments, &error))
     return hl_complain (HL_EXIT_USAGE, g_steal_pointer (&error));
   HlExit failure;
-  g_autoptr(HlPlant) plant = hl_input_plant (arguments, &failure, &error);
+  g_autoptr(HlDocument) document = NULL;
+  int variant;
+  g_autoptr(HlPlant) plant = hl_input_plant (arguments, &document, &variant, &failure, &error);
   if (plant == NULL)
     return hl_complain (failure, g_steal_pointer (&error));
   g_autoptr(GArray) yielded = g_array_new (FALSE, FALSE, sizeof (HlYield));
@@ -77,8 +79,10 @@ run_solve (const HlArguments *arguments)
       return hl_complain (HL_EXIT_USAGE, g_steal_pointer (&error));
     }
 
+  /* What --set changes shows beside the other variants too. */
+  g_autoptr(HlDocument) with_values = hl_document_with_plant (document, variant, plant);
   g_autoptr(HlSolution) solution = hl_solve (plant, NULL);
-  if (!write_outputs (solution, yielded, arguments, &error))
+  if (!write_outputs (solution, with_values, yielded, arguments, &error))
     {
       HlExit status = g_error_matches (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE) ? HL_EXIT_USAGE : HL_EXIT_FILE;
       return hl_complain (status, g_steal_pointer (&error));
@@ -100,7 +104,7 @@ run_check (const HlArguments *arguments)
 {
   g_autoptr(GError) error = NULL;
   HlExit failure;
-  g_autoptr(HlPlant) plant = hl_input_plant (arguments, &failure, &error);
+  g_autoptr(HlPlant) plant = hl_input_plant (arguments, NULL, NULL, &failure, &error);
   if (plant == NULL)
     return hl_complain (failure, g_steal_pointer (&error));
   g_autoptr(HlSolution) solution = hl_solve (plant, NULL);

@@ -226,6 +226,48 @@ write_performance (HlReport *report)
     hl_report_table (report, summary, NULL, (const int[]) { 0, 1, 2, 3, 4, -1 }, HL_REPORT_SMALL, NULL);
 }
 
+/* So many side by side, with the reference; further ones follow in a table of their own. */
+#define VARIANTS_A_TABLE 6
+
+static void
+write_variants (HlReport *report)
+{
+  const HlComparison *comparison = report->fields->comparison;
+  g_autoptr (HlTable) all = NULL, table = NULL;
+  g_autofree guint *rows = NULL;
+  g_autofree char *from = NULL;
+  guint n, n_rows, reference;
+  if (comparison == NULL)
+    return;
+  all = hl_table_variants (comparison);
+  n = hl_comparison_n_columns (comparison);
+  n_rows = hl_comparison_n_rows (comparison);
+  reference = hl_comparison_reference (comparison);
+  rows = g_new (guint, n_rows + 1);
+  for (guint i = 0; i < n_rows; i++)
+    rows[i] = i;
+  table = hl_table_pick (all, rows, n_rows);
+  hl_report_page (report, TRUE);
+  hl_report_section (report, _("Variants"));
+  from = g_strdup_printf (_("What each variant changes, and what comes of it. The first column of numbers is “%s”."), hl_comparison_name (comparison, reference));
+  hl_report_paragraph (report, from, HL_REPORT_BODY, FALSE, FALSE);
+  for (guint first = 0; first < n;)
+    {
+      int columns[4 + VARIANTS_A_TABLE], k = 0;
+      columns[k++] = 0;
+      columns[k++] = 1;
+      columns[k++] = 2;
+      columns[k++] = 3 + (int) reference;
+      for (; first < n && k < 3 + VARIANTS_A_TABLE; first++)
+        if (first != reference)
+          columns[k++] = 3 + (int) first;
+      columns[k] = -1;
+      hl_report_table (report, table, NULL, columns, HL_REPORT_SMALL, NULL);
+    }
+  for (guint i = 0; i < hl_comparison_n_notes (comparison); i++)
+    hl_report_paragraph (report, hl_comparison_note (comparison, i), HL_REPORT_SMALL, FALSE, FALSE);
+}
+
 /* Component by component, a table each. */
 static void
 write_equipment (HlReport *report)
@@ -353,6 +395,7 @@ hl_report_write (HlReport *report)
   write_diagram (report, HL_STATE_DIAGRAM_HS);
   write_streams (report);
   write_performance (report);
+  write_variants (report);
   write_equipment (report);
   write_findings (report);
   write_assumed (report);

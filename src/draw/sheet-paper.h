@@ -3,6 +3,7 @@
 #pragma once
 #include "draw/export.h"
 #include "draw/canvas-picture.h"
+#include "draw/variants.h"
 G_BEGIN_DECLS
 
 typedef enum { HL_PAPER_A4, HL_PAPER_A3, HL_PAPER_A2, HL_PAPER_A1, HL_PAPER_LETTER, HL_PAPER_TABLOID, HL_N_PAPERS } HlPaper;
@@ -13,6 +14,7 @@ void        hl_paper_size    (HlPaper paper, double *width, double *height);    
 /* What only the person who hands it over knows; NULL or "" leaves the field open.  No date: the same plant gives the same bytes. */
 typedef struct {
   const char *variant, *case_name, *date, *revision, *drawn, *checked, *approved;
+  HlComparison *comparison;      /* variants side by side, for the report; NULL: none */
 } HlSheetFields;
 /* The fields by word: "date"; NULL past the last. */
 const char  *hl_sheet_field_id (guint n);

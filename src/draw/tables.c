@@ -186,6 +186,21 @@ hl_table_csv (const HlTable *table)
   return g_string_free (csv, FALSE);
 }
 
+char *
+hl_table_tabbed (const HlTable *table)
+{
+  GString *text = g_string_new (NULL);
+  g_return_val_if_fail (table != NULL, NULL);
+  for (guint line = 0; line <= table->n_rows; line++)
+    {
+      for (guint column = 0; column < table->n_columns; column++)
+        g_string_append_printf (text, "%s%s", column > 0 ? "\t" : "",
+                                line == 0 ? table->columns[column].heading : hl_table_cell (table, line - 1, column)->text);
+      g_string_append_c (text, '\n');
+    }
+  return g_string_free (text, FALSE);
+}
+
 static void
 append_cell (GString *text, const char *content, glong width, gboolean is_number, gsize *last)
 {

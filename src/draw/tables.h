@@ -53,6 +53,7 @@ HlTable           *hl_table_pick       (const HlTable *table, const guint *rows,
 void               hl_table_free       (HlTable *table);
 const HlTableCell *hl_table_cell       (const HlTable *table, guint row, guint column);
 char              *hl_table_csv        (const HlTable *table);    /* RFC 4180, ten digits, decimal points; g_free() */
+char              *hl_table_tabbed      (const HlTable *table);    /* tabs between the columns, rounded, for the clipboard; g_free() */
 char              *hl_table_text       (const HlTable *table);    /* aligned columns, rounded; g_free() */
 G_DEFINE_AUTOPTR_CLEANUP_FUNC (HlTable, hl_table_free)
 G_END_DECLS

@@ -88,8 +88,8 @@ add_set (HlComparison *comparison, guint by, const HlChange *change)
   HlComparisonRow *row;
   HlAddress address;
   const HlQuantityKind *kind = NULL;
-  if (hl_change_is_look (change) || has_row (comparison, hl_change_where (change)))
-    return;
+  if (hl_change_is_look (change) || g_str_has_suffix (hl_change_where (change), ".name") || has_row (comparison, hl_change_where (change)))
+    return;                      /* neither a place nor a name changes the plant */
   name = hl_change_describe (change, hl_column_plant (comparison, 0), plant);
   row = add_row (comparison, HL_ROW_CHANGE, name, hl_change_where (change));
   if (hl_change_address (change, plant, &address))

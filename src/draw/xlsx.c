@@ -113,21 +113,22 @@ add_sheet (const Book *book, const HlTable *table, const char *plant, GError **e
 }
 
 static gboolean
-fill_book (const Book *book, const HlSolution *solution, HlUnitSet units, GError **error)
+fill_book (const Book *book, const HlSolution *solution, const HlComparison *comparison, HlUnitSet units, GError **error)
 {
   const HlPlant *plant = hl_solution_plant (solution);
   const char *title = *hl_plant_title (plant) != '\0' ? hl_plant_title (plant) : _("Plant without a title");
   g_autoptr (HlTable) summary = hl_table_summary (solution, units), streams = hl_table_streams (solution, units);
   g_autoptr (HlTable) components = hl_table_components (solution, units), values = hl_table_values (solution, units, FALSE);
-  g_autoptr (HlTable) findings = hl_table_findings (solution);
+  g_autoptr (HlTable) findings = hl_table_findings (solution), variants = comparison != NULL ? hl_table_variants (comparison) : NULL;
   lxw_doc_properties properties = { .title = (char *) title, .comments = (char *) "Heatloom " HL_VERSION, .created = FIXED_DATE };
   workbook_set_properties (book->book, &properties);
   return add_sheet (book, summary, title, error) && add_sheet (book, streams, title, error) && add_sheet (book, components, title, error)
-         && add_sheet (book, values, title, error) && add_sheet (book, findings, title, error);
+         && add_sheet (book, values, title, error) && add_sheet (book, findings, title, error)
+         && (variants == NULL || add_sheet (book, variants, title, error));
 }
 
 static gboolean
-write_book (const char *path, const HlSolution *solution, HlUnitSet units, GError **error)
+write_book (const char *path, const HlSolution *solution, const HlComparison *comparison, HlUnitSet units, GError **error)
 {
   Book book = { .book = workbook_new (path) };
   lxw_error status;
@@ -138,7 +139,7 @@ write_book (const char *path, const HlSolution *solution, HlUnitSet units, GErro
       return FALSE;
     }
   make_formats (&book);
-  is_filled = fill_book (&book, solution, units, error);
+  is_filled = fill_book (&book, solution, comparison, units, error);
   status = workbook_close (book.book);
   if (is_filled && status != LXW_NO_ERROR)
     g_set_error (error, G_IO_ERROR, G_IO_ERROR_FAILED, _("the workbook could not be made: %s"), lxw_strerror (status));
@@ -147,6 +148,12 @@ write_book (const char *path, const HlSolution *solution, HlUnitSet units, GErro
 
 GBytes *
 hl_export_workbook (const HlSolution *solution, HlUnitSet units, GError **error)
+{
+  return hl_export_workbook_with (solution, NULL, units, error);
+}
+
+GBytes *
+hl_export_workbook_with (const HlSolution *solution, const HlComparison *comparison, HlUnitSet units, GError **error)
 {
   g_autofree char *path = NULL, *content = NULL;
   gsize length = 0;
@@ -161,7 +168,7 @@ hl_export_workbook (const HlSolution *solution, HlUnitSet units, GError **error)
   /* Numbers in the file have points, whatever this program's locale. */
   points = newlocale (LC_NUMERIC_MASK, "C", (locale_t) 0);
   before = uselocale (points);
-  is_done = write_book (path, solution, units, error);
+  is_done = write_book (path, solution, comparison, units, error);
   uselocale (before);
   freelocale (points);
   is_done = is_done && g_file_get_contents (path, &content, &length, error);

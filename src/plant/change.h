@@ -41,5 +41,8 @@ HL_PUBLIC GPtrArray *hl_unapplied_list (void);                         /* empty 
  * does not know belong to the document and make no change. */
 HL_PUBLIC GPtrArray *hl_changes_between (const HlPlant *base, const HlPlant *plant);
 
+/* Whether what stands at @address differs: another value, origin, or none.  FALSE where one of the plants has no such quantity. */
+HL_PUBLIC gboolean   hl_plant_differs_at (const HlPlant *a, const HlPlant *b, const HlAddress *address);
+
 G_DEFINE_AUTOPTR_CLEANUP_FUNC (HlChange, hl_change_unref)
 G_END_DECLS

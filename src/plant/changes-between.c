@@ -341,3 +341,15 @@ hl_changes_between (const HlPlant *base, const HlPlant *plant)
   hl_plant_unref (walk.now);
   return walk.changes;
 }
+
+gboolean
+hl_plant_differs_at (const HlPlant *a, const HlPlant *b, const HlAddress *address)
+{
+  const HlValue *first, *second;
+  g_return_val_if_fail (a != NULL && b != NULL && address != NULL, FALSE);
+  if (hl_plant_quantity_kind (a, address) == NULL || hl_plant_quantity_kind (b, address) == NULL)
+    return FALSE;
+  first = hl_plant_value_wherever (a, address, NULL);
+  second = hl_plant_value_wherever (b, address, NULL);
+  return (first == NULL) != (second == NULL) || (first != NULL && !hl_value_equal (first, second));
+}

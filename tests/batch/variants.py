@@ -3,8 +3,11 @@
 import csv
 import json
 import os
+import shutil
+import subprocess
+import zipfile
 
-from tap import SOURCE, batch, main, refused
+from tap import SOURCE, Skip, batch, main, refused
 
 TALLOW = os.path.join(SOURCE, "data", "examples", "tallow-fen.heatloom")
 ADDED = [{"set": "B1.steam.m", "to": 20.0}, {"set": "U1.steam.m", "to": None}, {"set": "U1.heat", "to": 9e6}]
@@ -98,6 +101,20 @@ def test_other_commands_take_a_variant():
     _, _ = batch("check", TALLOW, "--variant", "river cooling", "--strict", status=1)
     river = solved(TALLOW, "--variant", "river cooling", "--set", "Y1.outlet.T=20 °C")
     assert abs(river["streams"]["19"]["T_K"] - 293.15) < 1e-6
+
+
+def test_workbook_and_report_hold_the_variants():
+    batch("solve", TALLOW, "--xlsx", "tables.xlsx", "--report", "report.pdf")
+    with zipfile.ZipFile("tables.xlsx") as book:
+        assert 'name="Variants"' in book.read("xl/workbook.xml").decode()
+        assert "river cooling – Base" in book.read("xl/sharedStrings.xml").decode()
+    if shutil.which("pdftotext") is None:
+        raise Skip("there is no pdftotext")
+    text = subprocess.run(["pdftotext", "-layout", "report.pdf", "-"], capture_output=True, text=True, check=True).stdout
+    assert "What each variant changes" in text and "exhaust pressure of T1" in text
+    batch("solve", os.path.join(SOURCE, "tests", "batch", "plants", "loop.heatloom"), "--xlsx", "plain.xlsx")
+    with zipfile.ZipFile("plain.xlsx") as book:
+        assert "Variants" not in book.read("xl/workbook.xml").decode()
 
 
 def test_a_plant_without_variants_is_a_table_of_one():
