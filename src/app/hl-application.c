@@ -23,6 +23,9 @@ static const struct { const char *action; const char *keys[4]; } shortcuts[] = {
   { "win.save", { "<Control>s" } },
   { "win.save-as", { "<Control><Shift>s" } },
   { "win.export", { "<Control>e" } },
+  { "win.variant-menu", { "F4" } },
+  { "win.variant-next", { "<Control>Page_Down" } },
+  { "win.variant-previous", { "<Control>Page_Up" } },
   { "win.undo", { "<Control>z" } },
   { "win.redo", { "<Control><Shift>z", "<Control>y" } },
   { "win.zoom-in", { "<Control>plus", "<Control>equal", "<Control>KP_Add" } },
@@ -41,9 +44,9 @@ demo_session (void)
 {
   g_autofree char *path = g_build_filename (hl_data_folder (), "examples", DEMO_PLANT, NULL);
   HlSession *session = hl_session_new ();
-  HlPlant *plant = hl_plant_load (path, NULL);
-  if (plant != NULL)
-    hl_session_reset (session, plant, NULL);
+  HlDocument *document = hl_document_load (path, NULL);
+  if (document != NULL)
+    hl_session_reset_document (session, document, NULL);
   return session;
 }
 

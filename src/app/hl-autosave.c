@@ -25,7 +25,7 @@ struct _HlAutosave {
   guint      source;
   Keep      *keep;        /* atomic box; NULL while nothing is unsaved */
   char      *for_path;    /* the session's path that @keep was made for */
-  HlPlant   *written;     /* what @keep holds or is about to */
+  HlDocument *written;    /* what @keep holds or is about to */
 };
 
 /* Where */
@@ -99,13 +99,13 @@ keep_end (Keep *keep)
 }
 
 static void
-keep_write (Keep *keep, HlPlant *plant)
+keep_write (Keep *keep, HlDocument *document)
 {
   g_autoptr (GError) error = NULL;
   g_mutex_lock (&keep->lock);
   if (keep->is_over)
     ;
-  else if (hl_plant_save (plant, keep->path, &error))
+  else if (hl_document_save (document, keep->path, &error))
     hl_trace ("kept %s", keep->path);
   else
     g_info ("unsaved work could not be kept: %s", error->message);
@@ -113,39 +113,39 @@ keep_write (Keep *keep, HlPlant *plant)
 }
 
 static void
-write_thread (GTask *task, gpointer source, gpointer plant, GCancellable *cancellable)
+write_thread (GTask *task, gpointer source, gpointer document, GCancellable *cancellable)
 {
-  keep_write (g_object_get_data (G_OBJECT (task), "keep"), plant);
+  keep_write (g_object_get_data (G_OBJECT (task), "keep"), document);
   g_task_return_boolean (task, TRUE);
 }
 
 /* What is to be written now, or NULL. */
-static HlPlant *
-plant_to_write (HlAutosave *self)
+static HlDocument *
+document_to_write (HlAutosave *self)
 {
-  HlPlant *plant = hl_session_base (self->session);
-  if (!hl_session_is_dirty (self->session) || plant == self->written)
+  HlDocument *document = hl_session_document (self->session);
+  if (!hl_session_is_dirty (self->session) || document == self->written)
     return NULL;
   if (self->keep == NULL)
     {
       self->keep = keep_new (hl_session_path (self->session));
       self->for_path = g_strdup (hl_session_path (self->session));
     }
-  g_clear_pointer (&self->written, hl_plant_unref);
-  self->written = hl_plant_ref (plant);
-  return plant;
+  g_clear_pointer (&self->written, hl_document_unref);
+  self->written = hl_document_ref (document);
+  return document;
 }
 
 static gboolean
 due_cb (gpointer data)
 {
   HlAutosave *self = data;
-  HlPlant *plant = plant_to_write (self);
+  HlDocument *document = document_to_write (self);
   self->source = 0;
-  if (plant != NULL)
+  if (document != NULL)
     {
       g_autoptr (GTask) task = g_task_new (NULL, NULL, NULL, NULL);
-      g_task_set_task_data (task, hl_plant_ref (plant), (GDestroyNotify) hl_plant_unref);
+      g_task_set_task_data (task, hl_document_ref (document), (GDestroyNotify) hl_document_unref);
       g_object_set_data_full (G_OBJECT (task), "keep", g_atomic_rc_box_acquire (self->keep), keep_unref);
       g_task_run_in_thread (task, write_thread);
     }
@@ -155,9 +155,9 @@ due_cb (gpointer data)
 void
 hl_autosave_now (HlAutosave *self)
 {
-  HlPlant *plant = plant_to_write (self);
-  if (plant != NULL)
-    keep_write (self->keep, plant);
+  HlDocument *document = document_to_write (self);
+  if (document != NULL)
+    keep_write (self->keep, document);
 }
 
 static void
@@ -166,7 +166,7 @@ end (HlAutosave *self)
   g_clear_handle_id (&self->source, g_source_remove);
   g_clear_pointer (&self->keep, keep_end);
   g_clear_pointer (&self->for_path, g_free);
-  g_clear_pointer (&self->written, hl_plant_unref);
+  g_clear_pointer (&self->written, hl_document_unref);
 }
 
 static void

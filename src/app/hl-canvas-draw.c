@@ -501,6 +501,7 @@ hl_canvas_draw (HlCanvas *self, GtkSnapshot *snapshot)
 {
   GtkWidget *widget = GTK_WIDGET (self);
   draw_ground (self, snapshot, gtk_widget_get_width (widget), gtk_widget_get_height (widget));
+  hl_canvas_draw_ghosts (self, snapshot);
   append_kept (self, snapshot, self->shafts);
   append_kept (self, snapshot, self->lines);
   for (GtkWidget *child = gtk_widget_get_first_child (widget); child != NULL; child = gtk_widget_get_next_sibling (child))
@@ -508,5 +509,6 @@ hl_canvas_draw (HlCanvas *self, GtkSnapshot *snapshot)
       gtk_widget_snapshot_child (widget, child, snapshot);
   append_kept (self, snapshot, self->titles);
   append_kept (self, snapshot, self->labels);
+  hl_canvas_draw_badges (self, snapshot);
   draw_marks (self, snapshot);
 }

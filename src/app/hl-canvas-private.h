@@ -4,6 +4,7 @@
 #include "app/hl-canvas.h"
 #include "app/hl-component-item.h"
 #include "draw/canvas-picture.h"
+#include "draw/marks.h"
 G_BEGIN_DECLS
 
 typedef enum {
@@ -42,6 +43,10 @@ struct _HlCanvas {
   GHashTable *items;                 /* id -> HlComponentItem */
   GArray     *lines, *labels, *titles, *shafts;   /* HlKeptNode, in plant order */
   HlKeptNode  dots;                  /* the dotted ground */
+  HlMarks    *marks;                 /* of what differs from the reference; NULL: there is none */
+  HlPlant    *marked_reference, *marked_plant;
+  gboolean    has_ghosts;            /* a comparison: what is gone is shown too */
+  HlLayout   *ghosts;                /* of the reference, for what is gone; or NULL */
 
   /* gesture in progress */
   HlCanvasMode mode;
@@ -84,6 +89,13 @@ void     hl_canvas_say         (HlCanvas *self, const char *text);              
 void     hl_kept_node_clear    (gpointer kept);
 void     hl_canvas_renew_nodes (HlCanvas *self);
 void     hl_canvas_draw        (HlCanvas *self, GtkSnapshot *snapshot);
+
+/* hl-canvas-marks.c */
+void     hl_canvas_update_marks (HlCanvas *self);
+void     hl_canvas_forget_marks (HlCanvas *self);
+void     hl_canvas_draw_ghosts  (HlCanvas *self, GtkSnapshot *snapshot);
+void     hl_canvas_draw_badges  (HlCanvas *self, GtkSnapshot *snapshot);
+const char *hl_canvas_mark_words (HlCanvas *self, const char *id);                            /* "changed"; NULL: no mark */
 
 /* hl-canvas-gestures.c */
 void     hl_canvas_add_gestures (HlCanvas *self);

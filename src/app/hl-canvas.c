@@ -153,6 +153,16 @@ add_item (HlCanvas *self, const HlComponent *component)
   return HL_COMPONENT_ITEM (item);
 }
 
+/* Figures, and how it differs from what it is marked against. */
+static char *
+describe (HlCanvas *self, const HlComponent *component, const char *figures)
+{
+  const char *mark = hl_canvas_mark_words (self, component->id);
+  if (mark == NULL)
+    return g_strdup (figures);
+  return figures != NULL ? g_strdup_printf ("%s, %s", figures, mark) : g_strdup (mark);
+}
+
 static void
 sync_items (HlCanvas *self)
 {
@@ -168,8 +178,8 @@ sync_items (HlCanvas *self)
       HlComponentItem *item = hl_canvas_item (self, component->id);
       if (item == NULL)
         item = add_item (self, component);
-      hl_component_item_show (item, component, hl_layout_component (self->layout, n)->title_lines[1],
-                              hl_session_is_selected (self->session, component->id));
+      g_autofree char *description = describe (self, component, hl_layout_component (self->layout, n)->title_lines[1]);
+      hl_component_item_show (item, component, description, hl_session_is_selected (self->session, component->id));
     }
   /* A deleted item takes the focus with it; the keys of the canvas must go on working. */
   if (had_focus && gtk_root_get_focus (root) != focus)
@@ -262,6 +272,7 @@ changed_cb (HlCanvas *self)
     self->hovered = NULL;
   self->hot.id = NULL;
   choose_shown_solution (self);
+  hl_canvas_update_marks (self);
   lay_out (self);
 }
 
@@ -492,6 +503,7 @@ hl_canvas_dispose (GObject *object)
   if (self->session != NULL)
     g_signal_handlers_disconnect_by_data (self->session, self);
   g_hash_table_remove_all (self->items);
+  hl_canvas_forget_marks (self);
   G_OBJECT_CLASS (hl_canvas_parent_class)->dispose (object);
 }
 

@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-diagram-view.h"
 #include "app/hl-appearance.h"
+#include "app/hl-diagram-ghost.h"
 #include "app/hl-lever.h"
 #include "app/hl-pane.h"
 #include "app/hl-trace.h"
@@ -31,6 +32,8 @@ struct _HlDiagramView {
   int             grabbed;          /* stream whose state is pressed on, or -1 */
   HlLeverDrag    *drag;
   HlStateDiagram *ghost;            /* before the drag; the present one stays on its axes */
+  HlDiagramGhost *other;            /* another variant beneath */
+  HlStateDiagram *beneath;          /* its diagram, on the axes of the present one; NULL: to be made, or none */
   gboolean        is_drag_over;     /* given up, though the button is still down */
 };
 
@@ -90,6 +93,7 @@ static void
 forget_diagram (HlDiagramView *self)
 {
   g_clear_pointer (&self->diagram, hl_state_diagram_free);
+  g_clear_pointer (&self->beneath, hl_state_diagram_free);
   forget_drawing (self);
 }
 
@@ -254,6 +258,8 @@ make_diagram (HlDiagramView *self)
     self->diagram = hl_state_diagram_new_on (self->shown, self->ghost);
   else
     self->diagram = hl_state_diagram_new_of_kind (self->shown, self->kind, hl_plant_units (shown_plant (self)), width, height);
+  if (hl_diagram_ghost_solution (self->other) != NULL)
+    self->beneath = hl_state_diagram_new_on (hl_diagram_ghost_solution (self->other), self->diagram);
   trace_places (self);
 }
 
@@ -271,7 +277,7 @@ draw_diagram (HlDiagramView *self)
   self->selected = selected;
   self->node = gsk_cairo_node_new (&GRAPHENE_RECT_INIT (0, 0, self->width, self->height));
   cairo_t *cr = gsk_cairo_node_get_draw_context (self->node);
-  hl_state_diagram_draw_over (self->diagram, self->ghost, cr, theme, is_stale (self), selected);
+  hl_state_diagram_draw_over (self->diagram, self->ghost != NULL ? self->ghost : self->beneath, cr, theme, is_stale (self), selected);
   cairo_destroy (cr);
 }
 
@@ -308,10 +314,21 @@ hl_diagram_view_snapshot (GtkWidget *widget, GtkSnapshot *snapshot)
 
 /* --- changes --- */
 
+/* Another ghost, or none. */
+static void
+ghost_cb (gpointer data)
+{
+  HlDiagramView *self = data;
+  forget_diagram (self);
+  gtk_widget_queue_allocate (GTK_WIDGET (self));
+  gtk_widget_queue_draw (GTK_WIDGET (self));
+}
+
 static void
 changed_cb (HlDiagramView *self)
 {
   HlSolution *solution = solution_to_show (self);
+  hl_diagram_ghost_update (self->other);
 
   if (solution != self->shown)
     {
@@ -445,6 +462,8 @@ leave_cb (GtkEventControllerMotion *controller, HlDiagramView *self)
 static void
 pressed_cb (GtkGestureClick *gesture, int n_press, double x, double y, HlDiagramView *self)
 {
+  if (gtk_widget_pick (GTK_WIDGET (self), x, y, GTK_PICK_DEFAULT) != GTK_WIDGET (self))
+    return;                           /* on a chooser */
   gtk_widget_grab_focus (GTK_WIDGET (self));
   if (self->diagram == NULL)
     return;
@@ -514,6 +533,12 @@ hl_diagram_view_allocate (GtkWidget *widget, int width, int height, int baseline
   gtk_widget_get_preferred_size (self->chooser, NULL, &size);
   place (self->chooser, 56, 8);
   left += size.width + 8;
+  if (gtk_widget_should_layout (hl_diagram_ghost_chooser (self->other)))
+    {
+      gtk_widget_get_preferred_size (hl_diagram_ghost_chooser (self->other), NULL, &size);
+      place (hl_diagram_ghost_chooser (self->other), left, 8);
+      left += size.width + 8;
+    }
   gtk_widget_get_preferred_size (self->readout, NULL, &size);
   place_readout (self, MIN (left, MAX (0, width - size.width)), &size, height);
   gtk_widget_get_preferred_size (self->empty, NULL, &size);
@@ -531,6 +556,7 @@ hl_diagram_view_dispose (GObject *object)
   while ((child = gtk_widget_get_first_child (GTK_WIDGET (self))) != NULL)
     gtk_widget_unparent (child);
   forget_diagram (self);
+  g_clear_pointer (&self->other, hl_diagram_ghost_free);
   forget_levers (self);
   if (self->drag != NULL)
     hl_lever_drag_cancel (g_steal_pointer (&self->drag));
@@ -623,10 +649,19 @@ hl_diagram_view_new (HlSession *session)
   HlDiagramView *self = g_object_new (HL_TYPE_DIAGRAM_VIEW, NULL);
 
   self->session = g_object_ref (session);
+  self->other = hl_diagram_ghost_new (session, ghost_cb, self);
+  gtk_widget_set_parent (hl_diagram_ghost_chooser (self->other), GTK_WIDGET (self));
   g_signal_connect_swapped (session, "changed", G_CALLBACK (changed_cb), self);
   g_signal_connect_swapped (session, "selection-changed", G_CALLBACK (gtk_widget_queue_draw), self);
   changed_cb (self);
   return GTK_WIDGET (self);
+}
+
+void
+hl_diagram_view_set_ghost (HlDiagramView *self, const char *variant)
+{
+  g_return_if_fail (HL_IS_DIAGRAM_VIEW (self));
+  hl_diagram_ghost_choose (self->other, variant);
 }
 
 void

@@ -11,4 +11,6 @@ G_DECLARE_FINAL_TYPE (HlDiagramView, hl_diagram_view, HL, DIAGRAM_VIEW, GtkWidge
 GtkWidget *hl_diagram_view_new      (HlSession *session);
 /* T-s, h-s or p-h, as the chooser in the corner does. */
 void       hl_diagram_view_set_kind (HlDiagramView *self, HlStateDiagramKind kind);
+/* A variant drawn pale beneath the present plant: its name, "" the base, NULL none. */
+void       hl_diagram_view_set_ghost (HlDiagramView *self, const char *variant);
 G_END_DECLS

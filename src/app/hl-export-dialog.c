@@ -153,20 +153,24 @@ static gboolean
 write_bytes (HlExportDialog *self, const char *path, GError **error)
 {
   const HlSolution *solution = hl_session_solution (self->session);
+  HlDocument *document = hl_session_document (self->session);
+  int variant = hl_session_variant (self->session);
+  g_autoptr (HlComparison) comparison = hl_document_n_variants (document) > 0 ? hl_comparison_new (document, HL_DOCUMENT_BASE, FALSE, NULL) : NULL;
+  const HlSheetFields fields = { .variant = variant != HL_DOCUMENT_BASE ? hl_document_variant_name (document, variant) : NULL, .comparison = comparison };
   g_autoptr (GBytes) bytes = NULL;
   HlFormat format;
 
   switch (chosen_what (self))
     {
     case HL_HAND_OVER_REPORT:
-      bytes = check_ending (self, path, error) ? hl_export_report (solution, HL_PAPER_A3, NULL, error) : NULL;
+      bytes = check_ending (self, path, error) ? hl_export_report (solution, HL_PAPER_A3, &fields, error) : NULL;
       break;
     case HL_HAND_OVER_WORKBOOK:
-      bytes = check_ending (self, path, error) ? hl_export_workbook (solution, hl_pane_units (self->session), error) : NULL;
+      bytes = check_ending (self, path, error) ? hl_export_workbook_with (solution, comparison, hl_pane_units (self->session), error) : NULL;
       break;
     case HL_HAND_OVER_SHEET:
     default:
-      bytes = hl_format_from_path (path, &format, error) ? hl_export_sheet (solution, HL_PAPER_A3, NULL, 0.0, format, error) : NULL;
+      bytes = hl_format_from_path (path, &format, error) ? hl_export_sheet (solution, HL_PAPER_A3, &fields, 0.0, format, error) : NULL;
     }
   return bytes != NULL && hl_export_bytes_file (bytes, path, error);
 }

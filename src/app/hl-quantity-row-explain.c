@@ -38,7 +38,10 @@ hl_quantity_row_help (HlQuantityRow *self, const char *line_break)
   const HlValue *value = hl_quantity_row_value (self);
   HlAddress carrier = hl_quantity_row_carrier (self);
   GString *text = g_string_new (NULL);
+  char *difference = hl_quantity_row_difference (self);
 
+  if (difference != NULL)
+    append_line (text, line_break, difference);
   if (kind->help != NULL && *kind->help != '\0')
     append_line (text, line_break, g_strdup (_(kind->help)));
   if (value != NULL && value->origin == HL_ORIGIN_TIED)

@@ -116,6 +116,7 @@ create_menu_cb (GtkMenuButton *button, gpointer data)
   add_item (origins, _("Tied to another quantity…"), HL_ORIGIN_TIED);
   add_item (origins, _("Found by solving"), HL_ORIGIN_FOUND);
   g_menu_append_section (menu, NULL, G_MENU_MODEL (origins));
+  hl_quantity_row_append_way_back (self, more);
   g_menu_append (more, _("Explain this value"), "row.explain");
   g_menu_append_section (menu, NULL, G_MENU_MODEL (more));
 
@@ -157,6 +158,7 @@ hl_quantity_row_add_origin (HlQuantityRow *self)
   g_autoptr (GSimpleAction) explain = g_simple_action_new ("explain", NULL);
   g_signal_connect (explain, "activate", G_CALLBACK (explain_cb), self);
   g_action_map_add_action (G_ACTION_MAP (self->actions), G_ACTION (explain));
+  hl_quantity_row_add_variant_action (self);
   gtk_widget_insert_action_group (GTK_WIDGET (self), "row", G_ACTION_GROUP (self->actions));
 
   self->pill = gtk_label_new ("");
@@ -185,7 +187,8 @@ set_origin_class (GtkWidget *widget, HlOrigin origin)
 static void
 describe (HlQuantityRow *self, const char *value, const char *origin)
 {
-  g_autofree char *description = g_strdup_printf ("%s, %s", value, origin), *label = NULL;
+  g_autofree char *difference = hl_quantity_row_difference (self), *label = NULL;
+  g_autofree char *description = difference != NULL ? g_strdup_printf ("%s, %s; %s", value, origin, difference) : g_strdup_printf ("%s, %s", value, origin);
 
   if (g_strcmp0 (description, self->described) == 0)
     return;

@@ -49,6 +49,11 @@ gboolean       hl_quantity_row_can_scrub    (HlQuantityRow *self);
 /* hl-quantity-row-origin.c */
 void           hl_quantity_row_add_origin    (HlQuantityRow *self);
 void           hl_quantity_row_update_origin (HlQuantityRow *self);
+/* hl-quantity-row-variant.c */
+void           hl_quantity_row_add_variant_action (HlQuantityRow *self);
+void           hl_quantity_row_update_variant     (HlQuantityRow *self);
+void           hl_quantity_row_append_way_back    (HlQuantityRow *self, GMenu *menu);
+char          *hl_quantity_row_difference         (HlQuantityRow *self);     /* "Base: 0.07 bar, given"; NULL: none.  g_free() */
 /* hl-quantity-row-explain.c */
 void           hl_quantity_row_add_explanation    (HlQuantityRow *self);
 void           hl_quantity_row_update_explanation (HlQuantityRow *self);

@@ -519,6 +519,7 @@ hl_quantity_row_update (HlQuantityRow *self)
   /* While a quantity goes (undo, another option), the row has nothing to show until it is removed. */
   if (self->is_retired || hl_plant_quantity_kind (plant, &self->address) == NULL)
     return;
+  hl_quantity_row_update_variant (self);
   hl_quantity_row_update_origin (self);
   hl_quantity_row_update_scrub (self);
   if (!hl_quantity_row_is_typing (self))

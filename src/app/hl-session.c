@@ -7,24 +7,28 @@
 #define LONGEST_HISTORY 500
 #define CLOSE_STEPS (1 * G_USEC_PER_SEC)     /* between presses of a key that make one step together */
 
-/* A state of the plant, and the step that led to it from the one before. */
+/* A state of the document, and the step that led to it from the one before. */
 typedef struct {
-  HlPlant *plant;
-  char    *name;
+  HlDocument *document;
+  char       *name;
+  int         before, after;   /* variant in view when the step was made, in the document before, and then in this one */
 } Step;
 
 struct _HlSession {
   GObject     parent_instance;
   GPtrArray  *steps;         /* Step; never empty */
   guint       now;           /* index of the committed state */
+  int         variant;       /* in view, of the committed document */
   gint64      again_time;    /* when hl_session_apply_again() made the last step; 0: something else did */
   HlPlant    *preview;       /* of a gesture in progress, or NULL */
   gboolean    has_solved_preview;
   HlSolution *solution;
   HlSolution *last_good;
-  HlPlant    *saved;         /* the state that the file holds, or NULL */
+  HlDocument *saved;         /* the state that the file holds, or NULL */
   char       *path;
   GPtrArray  *selection;     /* interned ids */
+  char       *compared;      /* name of the variant that is compared with ("": the base), or of the plant below; NULL: none */
+  HlPlant    *compared_plant;
 };
 
 enum { CHANGED, PREVIEWED, SELECTION_CHANGED, FILE_CHANGED, MESSAGE, GO_TO, N_SIGNALS };
@@ -33,11 +37,10 @@ static guint signals[N_SIGNALS];
 G_DEFINE_FINAL_TYPE (HlSession, hl_session, G_TYPE_OBJECT)
 
 static Step *
-step_new (HlPlant *plant, const char *name)
+step_new (HlDocument *document, const char *name, int before, int after)
 {
   Step *step = g_new (Step, 1);
-  step->plant = plant;
-  step->name = g_strdup (name);
+  *step = (Step) { document, g_strdup (name), before, after };
   return step;
 }
 
@@ -45,7 +48,7 @@ static void
 step_free (gpointer data)
 {
   Step *step = data;
-  hl_plant_unref (step->plant);
+  hl_document_unref (step->document);
   g_free (step->name);
   g_free (step);
 }
@@ -56,10 +59,16 @@ step_at (HlSession *self, guint n)
   return g_ptr_array_index (self->steps, n);
 }
 
+static HlDocument *
+document (HlSession *self)
+{
+  return step_at (self, self->now)->document;
+}
+
 static HlPlant *
 committed (HlSession *self)
 {
-  return step_at (self, self->now)->plant;
+  return hl_document_plant (document (self), self->variant);
 }
 
 static gboolean
@@ -112,14 +121,25 @@ forget_redo (HlSession *self)
     g_ptr_array_remove_range (self->steps, self->now + 1, self->steps->len - self->now - 1);
 }
 
+/* Takes @next; @after: the variant in view from now on. */
 static void
-push_step (HlSession *self, HlPlant *plant, const char *name)
+push_step (HlSession *self, HlDocument *next, const char *name, int after)
 {
   forget_redo (self);
-  g_ptr_array_add (self->steps, step_new (plant, name));
+  g_ptr_array_add (self->steps, step_new (next, name, self->variant, after));
   if (self->steps->len > LONGEST_HISTORY)
     g_ptr_array_remove_index (self->steps, 0);
   self->now = self->steps->len - 1;
+  self->variant = after;
+}
+
+/* Another variant's last good solution is no stand-in for this one's. */
+static void
+look_at (HlSession *self, int variant)
+{
+  if (variant != self->variant)
+    g_clear_pointer (&self->last_good, hl_solution_unref);
+  self->variant = variant;
 }
 
 static void
@@ -138,8 +158,9 @@ hl_session_init (HlSession *self)
 {
   self->steps = g_ptr_array_new_with_free_func (step_free);
   self->selection = g_ptr_array_new ();
-  g_ptr_array_add (self->steps, step_new (hl_plant_new (), NULL));
-  self->saved = hl_plant_ref (committed (self));
+  self->variant = HL_DOCUMENT_BASE;
+  g_ptr_array_add (self->steps, step_new (hl_document_new (hl_plant_new ()), NULL, HL_DOCUMENT_BASE, HL_DOCUMENT_BASE));
+  self->saved = hl_document_ref (document (self));
   solve (self);
 }
 
@@ -152,8 +173,10 @@ hl_session_finalize (GObject *object)
   g_clear_pointer (&self->preview, hl_plant_unref);
   g_clear_pointer (&self->solution, hl_solution_unref);
   g_clear_pointer (&self->last_good, hl_solution_unref);
-  g_clear_pointer (&self->saved, hl_plant_unref);
+  g_clear_pointer (&self->saved, hl_document_unref);
   g_clear_pointer (&self->path, g_free);
+  g_clear_pointer (&self->compared, g_free);
+  g_clear_pointer (&self->compared_plant, hl_plant_unref);
   G_OBJECT_CLASS (hl_session_parent_class)->finalize (object);
 }
 
@@ -190,6 +213,18 @@ hl_session_base (HlSession *self)
   return committed (self);
 }
 
+HlDocument *
+hl_session_document (HlSession *self)
+{
+  return document (self);
+}
+
+int
+hl_session_variant (HlSession *self)
+{
+  return self->variant;
+}
+
 HlSolution *
 hl_session_solution (HlSession *self)
 {
@@ -204,6 +239,22 @@ hl_session_last_good (HlSession *self)
 
 /* Edits */
 
+/* Takes @next, the document after the step. */
+static void
+commit (HlSession *self, HlDocument *next, const char *name, int variant)
+{
+  int before = self->variant;
+  g_clear_pointer (&self->preview, hl_plant_unref);
+  self->has_solved_preview = FALSE;
+  self->again_time = 0;
+  push_step (self, next, name, variant);
+  if (before != variant)
+    g_clear_pointer (&self->last_good, hl_solution_unref);
+  hl_trace ("step %s", name);
+  plant_has_changed (self);
+  g_signal_emit (self, signals[FILE_CHANGED], 0);
+}
+
 void
 hl_session_apply (HlSession *self, const char *name, HlPlant *plant, const HlAddress *edited, gboolean settle)
 {
@@ -216,14 +267,32 @@ hl_session_apply (HlSession *self, const char *name, HlPlant *plant, const HlAdd
       hl_plant_unref (plant);
       plant = settled;
     }
+  commit (self, hl_document_with_plant (document (self), self->variant, plant), name, self->variant);
+  hl_plant_unref (plant);
+  say_yielded (self, yielded);
+}
+
+void
+hl_session_apply_document (HlSession *self, const char *name, HlDocument *next, int variant)
+{
+  g_return_if_fail (next != NULL && variant >= HL_DOCUMENT_BASE && variant < (int) hl_document_n_variants (next));
+  commit (self, next, name, variant);
+  g_signal_emit (self, signals[MESSAGE], 0, "");
+}
+
+void
+hl_session_show_variant (HlSession *self, int variant)
+{
+  g_return_if_fail (variant >= HL_DOCUMENT_BASE && variant < (int) hl_document_n_variants (document (self)));
+  if (variant == self->variant)
+    return;
   g_clear_pointer (&self->preview, hl_plant_unref);
   self->has_solved_preview = FALSE;
   self->again_time = 0;
-  push_step (self, plant, name);
-  hl_trace ("step %s", name);
+  look_at (self, variant);
+  hl_trace ("variant %s", hl_document_variant_name (document (self), variant));
   plant_has_changed (self);
-  g_signal_emit (self, signals[FILE_CHANGED], 0);
-  say_yielded (self, yielded);
+  g_signal_emit (self, signals[MESSAGE], 0, "");
 }
 
 void
@@ -232,13 +301,15 @@ hl_session_apply_again (HlSession *self, const char *name, HlPlant *plant)
   gint64 now = g_get_monotonic_time ();
   Step *last = step_at (self, self->now);
   gboolean is_again = self->again_time != 0 && now - self->again_time < CLOSE_STEPS && self->now > 0
-                      && g_strcmp0 (last->name, name) == 0 && last->plant != self->saved;
+                      && g_strcmp0 (last->name, name) == 0 && last->document != self->saved && last->after == self->variant;
 
   if (is_again)
     {
+      HlDocument *next = hl_document_with_plant (last->document, self->variant, plant);
       forget_redo (self);
-      hl_plant_unref (last->plant);
-      last->plant = plant;
+      hl_document_unref (last->document);
+      last->document = next;
+      hl_plant_unref (plant);
       plant_has_changed (self);
       g_signal_emit (self, signals[FILE_CHANGED], 0);
     }
@@ -315,6 +386,62 @@ hl_session_mend (HlSession *self, const HlMend *mend, GError **error)
   return TRUE;
 }
 
+/* Comparing */
+
+HlPlant *
+hl_session_reference (HlSession *self, const char **name)
+{
+  int variant = HL_DOCUMENT_BASE;
+  if (self->compared_plant != NULL)
+    {
+      if (name != NULL)
+        *name = self->compared;
+      return self->compared_plant;
+    }
+  if (self->compared != NULL && *self->compared != '\0')
+    variant = hl_document_find_variant (document (self), self->compared);
+  if (variant == self->variant)
+    return NULL;
+  if (name != NULL)
+    *name = variant == HL_DOCUMENT_BASE ? C_("variant", "Base") : hl_document_variant_name (document (self), variant);
+  return hl_document_plant (document (self), variant);
+}
+
+static void
+compare (HlSession *self, HlPlant *plant, const char *name)
+{
+  char *own = g_strdup (name);
+  g_clear_pointer (&self->compared_plant, hl_plant_unref);
+  self->compared_plant = plant;
+  g_free (self->compared);
+  self->compared = own;
+  g_signal_emit (self, signals[CHANGED], 0);
+}
+
+void
+hl_session_compare_variant (HlSession *self, int variant)
+{
+  compare (self, NULL, hl_document_variant_name (document (self), variant));
+}
+
+void
+hl_session_compare_plant (HlSession *self, HlPlant *plant, const char *name)
+{
+  compare (self, plant, name);
+}
+
+void
+hl_session_compare_end (HlSession *self)
+{
+  compare (self, NULL, NULL);
+}
+
+gboolean
+hl_session_is_comparing (HlSession *self)
+{
+  return self->compared != NULL;
+}
+
 /* History */
 
 gboolean
@@ -341,12 +468,15 @@ hl_session_redo_name (HlSession *self)
   return hl_session_can_redo (self) ? step_at (self, self->now + 1)->name : NULL;
 }
 
+/* What was done in a variant is undone in that variant, so that it is seen. */
 static void
 go_to_step (HlSession *self, guint n)
 {
+  int variant = n < self->now ? step_at (self, self->now)->before : step_at (self, n)->after;
   g_clear_pointer (&self->preview, hl_plant_unref);
   self->again_time = 0;
   self->now = n;
+  look_at (self, variant);
   plant_has_changed (self);
   g_signal_emit (self, signals[FILE_CHANGED], 0);
   g_signal_emit (self, signals[MESSAGE], 0, "");
@@ -432,17 +562,26 @@ hl_session_go_to (HlSession *self, const HlAddress *address)
 void
 hl_session_reset (HlSession *self, HlPlant *plant, const char *path)
 {
+  hl_session_reset_document (self, hl_document_new (plant), path);
+}
+
+void
+hl_session_reset_document (HlSession *self, HlDocument *next, const char *path)
+{
   char *own_path = g_strdup (path);    /* @path may be ours */
   gboolean had_selection = self->selection->len > 0;
   g_clear_pointer (&self->preview, hl_plant_unref);
   g_clear_pointer (&self->last_good, hl_solution_unref);
-  g_clear_pointer (&self->saved, hl_plant_unref);
+  g_clear_pointer (&self->saved, hl_document_unref);
+  g_clear_pointer (&self->compared, g_free);
+  g_clear_pointer (&self->compared_plant, hl_plant_unref);
   g_free (self->path);
   self->path = own_path;
   g_ptr_array_set_size (self->steps, 0);
-  g_ptr_array_add (self->steps, step_new (plant, NULL));
+  g_ptr_array_add (self->steps, step_new (next, NULL, HL_DOCUMENT_BASE, HL_DOCUMENT_BASE));
   self->now = 0;
-  self->saved = hl_plant_ref (plant);
+  self->variant = HL_DOCUMENT_BASE;
+  self->saved = hl_document_ref (next);
   g_ptr_array_set_size (self->selection, 0);
   g_clear_pointer (&self->solution, hl_solution_unref);    /* of another plant: no start for this one */
   plant_has_changed (self);
@@ -455,28 +594,28 @@ hl_session_reset (HlSession *self, HlPlant *plant, const char *path)
 gboolean
 hl_session_open (HlSession *self, const char *path, GError **error)
 {
-  HlPlant *plant = hl_plant_load (path, error);
-  if (plant == NULL)
+  HlDocument *next = hl_document_load (path, error);
+  if (next == NULL)
     return FALSE;
-  hl_session_reset (self, plant, path);
+  hl_session_reset_document (self, next, path);
   return TRUE;
 }
 
 gboolean
 hl_session_revert (HlSession *self, GError **error)
 {
-  HlPlant *plant;
+  HlDocument *next;
   if (self->path == NULL)
     {
       g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_FILE, _("This plant has no file yet; choose one with Save as"));
       return FALSE;
     }
-  plant = hl_plant_load (self->path, error);
-  if (plant == NULL)
+  next = hl_document_load (self->path, error);
+  if (next == NULL)
     return FALSE;
-  g_clear_pointer (&self->saved, hl_plant_unref);
-  self->saved = hl_plant_ref (plant);
-  hl_session_apply (self, _("Revert to the file"), plant, NULL, FALSE);
+  g_clear_pointer (&self->saved, hl_document_unref);
+  self->saved = hl_document_ref (next);
+  hl_session_apply_document (self, _("Revert to the file"), next, hl_document_find_variant (next, hl_document_variant_name (document (self), self->variant)));
   return TRUE;
 }
 
@@ -489,10 +628,10 @@ hl_session_save (HlSession *self, const char *path, GError **error)
       g_set_error (error, HL_PLANT_ERROR, HL_PLANT_ERROR_FILE, _("This plant has no file yet; choose one with Save as"));
       return FALSE;
     }
-  if (!hl_plant_save (committed (self), target, error))
+  if (!hl_document_save (document (self), target, error))
     return FALSE;
-  g_clear_pointer (&self->saved, hl_plant_unref);
-  self->saved = hl_plant_ref (committed (self));
+  g_clear_pointer (&self->saved, hl_document_unref);
+  self->saved = hl_document_ref (document (self));
   g_free (self->path);
   self->path = g_steal_pointer (&target);
   hl_trace ("saved %s", self->path);
@@ -509,7 +648,7 @@ hl_session_path (HlSession *self)
 gboolean
 hl_session_is_dirty (HlSession *self)
 {
-  return committed (self) != self->saved && !hl_plant_equal (committed (self), self->saved);
+  return document (self) != self->saved && !hl_document_equal (document (self), self->saved);
 }
 
 char *

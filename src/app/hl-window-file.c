@@ -218,13 +218,13 @@ gboolean
 hl_window_open_demo (HlWindow *self, const char *path)
 {
   g_autoptr (GError) error = NULL;
-  HlPlant *plant = hl_plant_load (path, &error);
-  if (plant == NULL)
+  HlDocument *document = hl_document_load (path, &error);
+  if (document == NULL)
     {
       hl_window_show_error (self, _("The demo plant could not be opened"), error);
       return FALSE;
     }
-  hl_session_reset (self->session, plant, NULL);
+  hl_session_reset_document (self->session, document, NULL);
   hl_canvas_fit (self->canvas);
   return TRUE;
 }

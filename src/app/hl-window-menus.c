@@ -132,6 +132,8 @@ static const Shortcut general_keys[] = {
   { N_("Save"), "<Control>s" },
   { N_("Save as"), "<Control><Shift>s" },
   { N_("Hand over"), "<Control>e" },
+  { N_("Variants"), "F4" },
+  { N_("Next, previous variant"), "<Control>Page_Down <Control>Page_Up" },
   { N_("Undo"), "<Control>z" },
   { N_("Redo"), "<Control><Shift>z" },
   { N_("These shortcuts"), "F1" },

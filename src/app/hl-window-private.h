@@ -34,6 +34,9 @@ struct _HlWindow {
   GtkBox        *diagram_area;
   GtkStack      *stack;
   GtkWidget     *glance_bin;
+  GtkMenuButton *variant_button;
+  GtkLabel      *variant_label;
+  GtkWidget     *legend;       /* of the marks on the canvas, over it */
 };
 
 void hl_window_add_actions    (HlWindow *self);     /* hl-window-actions.c */
@@ -46,6 +49,10 @@ void hl_window_know_file      (HlWindow *self);     /* what the disk has now is 
 gboolean    hl_window_is_read_only (HlWindow *self);
 HlFileState hl_window_file_state   (HlWindow *self);
 char      **hl_window_recent_paths (guint most);    /* that still exist, the latest first; g_strfreev() */
+void hl_window_add_variant_actions (HlWindow *self);    /* hl-window-variants.c */
+void hl_window_update_variants (HlWindow *self);
+void hl_window_add_compare_actions (HlWindow *self);    /* hl-window-compare.c */
+void hl_window_update_legend   (HlWindow *self);
 void hl_window_fill_menus     (HlWindow *self);     /* hl-window-menus.c */
 void hl_window_place_diagram  (HlWindow *self, gboolean is_beside);
 gboolean hl_window_diagram_is_beside (HlWindow *self);

@@ -16,12 +16,12 @@ typedef struct {
 gboolean
 hl_window_recover (HlWindow *self, const char *kept, GError **error)
 {
-  HlPlant *plant = hl_plant_load (kept, error);
-  if (plant == NULL)
+  HlDocument *document = hl_document_load (kept, error);
+  if (document == NULL)
     return FALSE;
   if (hl_session_path (self->session) == NULL)
     hl_session_reset (self->session, hl_plant_new (), NULL);
-  hl_session_apply (self->session, _("Recover unsaved work"), plant, NULL, FALSE);
+  hl_session_apply_document (self->session, _("Recover unsaved work"), document, HL_DOCUMENT_BASE);
   hl_autosave_now (self->autosave);
   hl_autosave_discard (kept);
   hl_canvas_fit (self->canvas);

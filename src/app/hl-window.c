@@ -14,6 +14,7 @@
 #include "app/hl-start.h"
 #include "app/hl-status-strip.h"
 #include "app/hl-trace.h"
+#include "app/hl-variants-view.h"
 #include "plant/i18n.h"
 
 #define AUTOSAVE_DELAY 2000       /* milliseconds after an edit */
@@ -115,6 +116,8 @@ changed_cb (HlWindow *self)
 {
   update_start (self);
   hl_window_update_actions (self);
+  hl_window_update_variants (self);
+  hl_window_update_legend (self);
   trace_later (self);
 }
 
@@ -139,6 +142,7 @@ static const struct { const char *name, *title; GtkWidget *(*build) (HlSession *
   { "heat", N_("Heat"), hl_heat_view_new },
   { "bands", N_("Bands"), hl_bands_view_new },
   { "ledger", N_("Ledger"), hl_ledger_view_new },
+  { "variants", N_("Variants"), hl_variants_view_new },
   { "findings", N_("Findings"), hl_findings_new },
 };
 
@@ -384,6 +388,8 @@ hl_window_constructed (GObject *object)
   hl_window_add_actions (self);
   hl_window_add_view_actions (self);
   hl_window_add_file_actions (self);
+  hl_window_add_variant_actions (self);
+  hl_window_add_compare_actions (self);
   hl_window_watch_disk (self);
   hl_window_fill_menus (self);
   g_signal_connect_object (self->session, "changed", G_CALLBACK (changed_cb), self, G_CONNECT_SWAPPED);
@@ -443,7 +449,7 @@ hl_window_class_init (HlWindowClass *class)
     CHILD (open_button), CHILD (menu_button), CHILD (undo_button), CHILD (redo_button), CHILD (export_button),
     CHILD (title_label), CHILD (subtitle_label), CHILD (dirty_dot), CHILD (outer), CHILD (work), CHILD (shelf_bin),
     CHILD (canvas_bin), CHILD (strip_bin), CHILD (nameplate_bin), CHILD (notice_bin), CHILD (zoom_label),
-    CHILD (diagram_area), CHILD (stack), CHILD (glance_bin),
+    CHILD (diagram_area), CHILD (stack), CHILD (glance_bin), CHILD (variant_button), CHILD (variant_label),
 #undef CHILD
   };
   for (guint n = 0; n < G_N_ELEMENTS (children); n++)
