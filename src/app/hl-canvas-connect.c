@@ -115,10 +115,17 @@ hl_canvas_shaft_end_at (HlCanvas *self, double vx, double vy, const char **id)
 
 /* The line in progress */
 
+/* While an end is moved to another port, the line itself occupies neither. */
+static HlPlant *
+plant_to_connect (HlCanvas *self)
+{
+  return self->replugged != NULL ? self->base : hl_canvas_plant (self);
+}
+
 static void
 collect_targets (HlCanvas *self)
 {
-  HlPlant *plant = hl_canvas_plant (self);
+  HlPlant *plant = plant_to_connect (self);
   g_array_set_size (self->targets, 0);
   for (guint n = 0; n < hl_plant_n_components (plant); n++)
     {
@@ -151,6 +158,15 @@ hl_canvas_begin_line (HlCanvas *self, const HlPortRef *from)
   self->target = (HlPortRef) { 0 };
   self->mode = from->port != NULL ? MODE_CONNECT : MODE_SHAFT;
   collect_targets (self);
+}
+
+void
+hl_canvas_begin_replug (HlCanvas *self, const char *stream, const HlPortRef *stays)
+{
+  const char *const ids[] = { stream, NULL };
+  self->replugged = stream;
+  self->base = hl_plant_without (hl_canvas_plant (self), ids);
+  hl_canvas_begin_line (self, stays);
 }
 
 /* The nearest target: within reach, or any of the component that the pointer is on. */
@@ -221,7 +237,7 @@ say_why_not (HlCanvas *self, double vx, double vy)
   if (self->mode == MODE_SHAFT)
     hl_edit_can_join (hl_canvas_plant (self), self->from.id, under, &error);
   else if (port != NULL)
-    hl_edit_can_connect (hl_canvas_plant (self), self->from.id, self->from.port, under, port, &error);
+    hl_edit_can_connect (plant_to_connect (self), self->from.id, self->from.port, under, port, &error);
   hl_canvas_say (self, error != NULL ? error->message : "");
 }
 
@@ -230,7 +246,7 @@ static gboolean
 find_branch (HlCanvas *self, double vx, double vy)
 {
   const HlStream *stream;
-  self->branch = self->mode == MODE_CONNECT && hl_canvas_component_at (self, vx, vy) == NULL ? hl_canvas_stream_at (self, vx, vy) : -1;
+  self->branch = self->mode == MODE_CONNECT && self->replugged == NULL && hl_canvas_component_at (self, vx, vy) == NULL ? hl_canvas_stream_at (self, vx, vy) : -1;
   if (self->branch < 0)
     return FALSE;
   stream = hl_plant_stream (hl_canvas_plant (self), (guint) self->branch);
@@ -272,6 +288,8 @@ hl_canvas_drop_line (HlCanvas *self)
   gpointer item;
   self->from = self->target = (HlPortRef) { 0 };
   self->branch = -1;
+  self->replugged = NULL;
+  g_clear_pointer (&self->base, hl_plant_unref);
   if (self->targets != NULL)
     g_array_set_size (self->targets, 0);
   if (self->items == NULL)
@@ -287,6 +305,7 @@ hl_canvas_end_line (HlCanvas *self)
   HlPortRef from = self->from, target = self->target;
   HlCanvasMode mode = self->mode;
   int branch = self->branch;
+  const char *replugged = self->replugged;
 
   hl_canvas_drop_line (self);
   self->mode = MODE_NONE;
@@ -296,7 +315,9 @@ hl_canvas_end_line (HlCanvas *self)
                                 hl_plant_stream (hl_canvas_plant (self), (guint) branch)->id, self->branch_x, self->branch_y, self->branch_turn);
   if (target.id == NULL)
     return;
-  if (mode == MODE_CONNECT)
+  if (replugged != NULL)
+    gtk_widget_activate_action (GTK_WIDGET (self), "win.replug", "(sss)", replugged, target.id, target.port);
+  else if (mode == MODE_CONNECT)
     gtk_widget_activate_action (GTK_WIDGET (self), "win.connect", "(ssss)", from.id, from.port, target.id, target.port);
   else
     gtk_widget_activate_action (GTK_WIDGET (self), "win.join-shaft", "(ss)", from.id, target.id);

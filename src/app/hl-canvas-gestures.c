@@ -165,6 +165,21 @@ update_label (HlCanvas *self, double dx, double dy)
   hl_session_preview (self->session, hl_edit_place_label (self->base, self->grabbed, TRUE, gx, gy), FALSE);
 }
 
+/* At one of its ends a line is taken off the port, elsewhere its segment is moved aside. */
+static void
+begin_line_drag (HlCanvas *self)
+{
+  HlPortRef stays;
+  const char *stream;
+  if (hl_canvas_line_end_at (self, self->start_x, self->start_y, &stream, &stays))
+    hl_canvas_begin_replug (self, stream, &stays);
+  else
+    {
+      hl_canvas_begin_bend (self);
+      set_cursor (self, "grabbing");
+    }
+}
+
 static void
 cross_threshold (HlCanvas *self, GtkGesture *gesture)
 {
@@ -174,6 +189,8 @@ cross_threshold (HlCanvas *self, GtkGesture *gesture)
     begin_move (self);
   else if (self->mode == MODE_PRESS_LABEL)
     begin_label (self);
+  else if (self->mode == MODE_PRESS_STREAM)
+    begin_line_drag (self);
   else if (self->mode == MODE_PRESS_GROUND)
     self->mode = MODE_RUBBER;
 }
@@ -189,6 +206,8 @@ drag_update_cb (GtkGestureDrag *drag, double dx, double dy, HlCanvas *self)
     update_move (self, dx, dy);
   else if (self->mode == MODE_LABEL)
     update_label (self, dx, dy);
+  else if (self->mode == MODE_BEND)
+    hl_canvas_update_bend (self, dx, dy);
   else if (self->mode == MODE_PAN)
     hl_canvas_pan_to (self, self->start_ox + dx, self->start_oy + dy);
   else if (self->mode == MODE_CONNECT || self->mode == MODE_SHAFT)
@@ -249,7 +268,8 @@ drag_end_cb (GtkGestureDrag *drag, double dx, double dy, HlCanvas *self)
 
   self->last_x = self->start_x + dx;
   self->last_y = self->start_y + dy;
-  g_clear_pointer (&self->base, hl_plant_unref);
+  if (mode != MODE_CONNECT)
+    g_clear_pointer (&self->base, hl_plant_unref);
   if (mode == MODE_CONNECT || mode == MODE_SHAFT)
     {
       hl_canvas_end_line (self);
@@ -261,6 +281,8 @@ drag_end_cb (GtkGestureDrag *drag, double dx, double dy, HlCanvas *self)
     gtk_widget_activate_action (GTK_WIDGET (self), "win.move", "(ii)", self->grid_dx, self->grid_dy);
   else if (mode == MODE_LABEL)
     end_label (self, dx, dy);
+  else if (mode == MODE_BEND)
+    hl_canvas_end_bend (self, dx, dy);
   else if (mode == MODE_RUBBER)
     select_in_rubber (self, extends_selection (gesture));
   else if (mode == MODE_PRESS_GROUND && !extends_selection (gesture))
@@ -388,12 +410,26 @@ leave_cb (GtkEventControllerMotion *motion, HlCanvas *self)
 
 /* What a port or a stream is, in words, where the pointer rests. */
 static gboolean
+query_stream_tooltip (HlCanvas *self, int vx, int vy, GtkTooltip *tooltip)
+{
+  int stream = hl_canvas_component_at (self, vx, vy) == NULL ? hl_canvas_stream_at (self, vx, vy) : -1;
+  g_autofree char *text = NULL;
+  if (stream < 0)
+    return FALSE;
+  text = hl_canvas_describe_stream (self, (guint) stream);
+  gtk_tooltip_set_text (tooltip, text);
+  return TRUE;
+}
+
+static gboolean
 query_tooltip_cb (GtkWidget *widget, int vx, int vy, gboolean is_keyboard, GtkTooltip *tooltip, HlCanvas *self)
 {
   const HlComponent *component = self->hot.id != NULL ? hl_plant_find_component (hl_canvas_plant (self), self->hot.id) : NULL;
   guint n;
-  if (self->mode != MODE_NONE || component == NULL || !hl_component_find_port (component, self->hot.port, &n))
+  if (self->mode != MODE_NONE)
     return FALSE;
+  if (component == NULL || self->hot.port == NULL || !hl_component_find_port (component, self->hot.port, &n))
+    return query_stream_tooltip (self, vx, vy, tooltip);
   {
     g_autofree char *name = hl_component_port_name (component, n);
     g_autofree char *text = g_strdup_printf (_("%s: %s, open. Drag to connect."), component->id, name);

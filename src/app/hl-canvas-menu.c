@@ -36,7 +36,10 @@ context_menu (HlCanvas *self)
       g_menu_append_submenu (section, _("Line up"), order);
     }
   if (n == 1 && hl_plant_find_stream (hl_canvas_plant (self), ids[0]) != NULL)
-    g_menu_append (section, _("Let the label find its place"), "win.reset-label");
+    {
+      g_menu_append (section, _("Let the line find its way"), "win.straighten");
+      g_menu_append (section, _("Let the label find its place"), "win.reset-label");
+    }
   g_menu_append_section (menu, NULL, G_MENU_MODEL (section));
   g_object_unref (section);
   section = g_menu_new ();

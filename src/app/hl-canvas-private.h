@@ -16,6 +16,7 @@ typedef enum {
   MODE_PRESS_GROUND,
   MODE_RUBBER,
   MODE_PRESS_STREAM,
+  MODE_BEND,
   MODE_CONNECT,
   MODE_SHAFT,
   MODE_PAN,
@@ -57,6 +58,9 @@ struct _HlCanvas {
   const char *grabbed;               /* component or stream under the press */
   gboolean    was_selected;
   int         grid_dx, grid_dy;
+  GArray     *bend_way;              /* HlPoint: the line before a bend */
+  guint       bend_segment;
+  const char *replugged;             /* stream whose end is being moved to another port, or NULL */
   HlPortRef   from;                  /* of a line or (port NULL) a shaft being drawn */
   GArray     *targets;               /* HlPortRef that the line may end at */
   HlPortRef   target;                /* the one under the pointer */
@@ -110,12 +114,20 @@ void     hl_canvas_add_quick_add (HlCanvas *self);                              
 int      hl_canvas_stream_at   (HlCanvas *self, double vx, double vy);                        /* line or label; -1: none */
 int      hl_canvas_snap_to_line (const HlStreamPlace *place, int *gx, int *gy);               /* onto its nearest segment; which way that runs: 0 right, 1 down ... */
 
+/* hl-canvas-stream.c */
+void     hl_canvas_begin_bend  (HlCanvas *self);                                              /* of the line grabbed */
+void     hl_canvas_update_bend (HlCanvas *self, double dx, double dy);
+void     hl_canvas_end_bend    (HlCanvas *self, double dx, double dy);
+gboolean hl_canvas_line_end_at (HlCanvas *self, double vx, double vy, const char **stream, HlPortRef *other);  /* @other: the port that stays */
+char    *hl_canvas_describe_stream (HlCanvas *self, guint stream);                            /* all that is known of it, in lines; g_free() */
+
 /* hl-canvas-connect.c */
 gboolean hl_canvas_port_at     (HlCanvas *self, double vx, double vy, HlPortRef *port);       /* a free port */
 gboolean hl_canvas_shaft_end_at (HlCanvas *self, double vx, double vy, const char **id);
 gboolean hl_canvas_shaft_end   (const HlPlant *plant, const HlComponent *component, int end, double *x, double *y);  /* canvas; FALSE: not to be grabbed */
 gboolean hl_canvas_port_point  (HlCanvas *self, const HlPortRef *port, double *x, double *y); /* canvas */
 void     hl_canvas_begin_line  (HlCanvas *self, const HlPortRef *from);
+void     hl_canvas_begin_replug (HlCanvas *self, const char *stream, const HlPortRef *stays);
 void     hl_canvas_update_line (HlCanvas *self, double vx, double vy);
 void     hl_canvas_end_line    (HlCanvas *self);                                              /* connects where a target is under the pointer */
 void     hl_canvas_drop_line   (HlCanvas *self);                                              /* forgets it */

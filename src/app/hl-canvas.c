@@ -521,6 +521,7 @@ hl_canvas_finalize (GObject *object)
   g_clear_pointer (&self->titles, g_array_unref);
   g_clear_pointer (&self->shafts, g_array_unref);
   g_clear_pointer (&self->targets, g_array_unref);
+  g_clear_pointer (&self->bend_way, g_array_unref);
   hl_kept_node_clear (&self->dots);
   G_OBJECT_CLASS (hl_canvas_parent_class)->finalize (object);
 }

@@ -26,6 +26,10 @@ HlPlant *hl_edit_insert      (const HlPlant *plant, const char *stream, const Hl
 /* A line from a port to the middle of a line: a splitter where the port is an inlet, a mixer where it is an outlet. */
 HlPlant *hl_edit_branch      (const HlPlant *plant, const char *a_id, const char *a_port, const char *stream, int x, int y, int turn,
                               const char **id, GError **error);
+/* Bends of a line in their order from its outlet; none: it finds its way. */
+HlPlant *hl_edit_route       (const HlPlant *plant, const char *stream, const HlGridPoint *bends, guint n);
+/* The end of a line that is an outlet or inlet as @port is, to that port; the line keeps its number and values. */
+HlPlant *hl_edit_replug      (const HlPlant *plant, const char *stream, const char *id, const char *port, GError **error);
 HlPlant *hl_edit_place_label (const HlPlant *plant, const char *stream, gboolean has_place, int x, int y);
 
 /* Components lined up at an edge or the middle of the box around them: left, centre, right move them across, the others down. */

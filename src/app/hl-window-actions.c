@@ -332,6 +332,55 @@ branch_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
 }
 
 static void
+replug_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  const char *stream, *id, *port;
+  g_autoptr (GError) error = NULL;
+  HlPlant *plant;
+  g_variant_get (parameter, "(&s&s&s)", &stream, &id, &port);
+  plant = hl_edit_replug (plant_of (self), stream, id, port, &error);
+  if (plant == NULL)
+    say_error (self, error);
+  else if (hl_plant_equal (plant, plant_of (self)))
+    hl_plant_unref (plant);
+  else
+    {
+      g_autofree char *name = g_strdup_printf (_("Move the end of stream %s to %s"), stream, id);
+      hl_session_apply (self->session, name, plant, NULL, TRUE);
+    }
+}
+
+static void
+bend_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  g_autoptr (GVariantIter) points = NULL;
+  g_autoptr (GArray) bends = g_array_new (FALSE, FALSE, sizeof (HlGridPoint));
+  const char *stream;
+  HlGridPoint bend;
+  g_variant_get (parameter, "(&sa(ii))", &stream, &points);
+  while (g_variant_iter_next (points, "(ii)", &bend.x, &bend.y))
+    g_array_append_val (bends, bend);
+  if (hl_plant_find_stream (hl_session_base (self->session), stream) != NULL)
+    {
+      g_autofree char *name = g_strdup_printf (_("Bend stream %s"), stream);
+      hl_session_apply (self->session, name,
+                        hl_edit_route (hl_session_base (self->session), stream, (const HlGridPoint *) bends->data, bends->len), NULL, FALSE);
+    }
+}
+
+static void
+straighten_cb (GSimpleAction *action, GVariant *parameter, gpointer data)
+{
+  HlWindow *self = HL_WINDOW (data);
+  guint n;
+  const char *const *ids = hl_session_selection (self->session, &n);
+  if (n == 1)
+    apply_to_selection (self, _("Let stream %s find its way"), hl_edit_route (plant_of (self), ids[0], NULL, 0), FALSE);
+}
+
+static void
 apply_shaft (HlWindow *self, HlPlant *plant, const GError *error, char *name)
 {
   if (plant == NULL)
@@ -542,6 +591,9 @@ static const GActionEntry entries[] = {
   { "paste", paste_cb },
   { "connect", connect_cb, "(ssss)" },
   { "branch", branch_cb, "(sssiii)" },
+  { "replug", replug_cb, "(sss)" },
+  { "bend", bend_cb, "(sa(ii))" },
+  { "straighten", straighten_cb },
   { "connect-menu", connect_menu_cb },
   { "join-shaft", join_shaft_cb, "(ss)" },
   { "join-selection", join_selection_cb },
@@ -592,6 +644,7 @@ hl_window_update_actions (HlWindow *self)
   enable (self, "connect-menu", single != NULL);
   enable (self, "join-selection", can_join_selection (self));
   enable (self, "leave-shaft", single != NULL && hl_plant_shaft_of (plant, single->id) != NULL);
+  enable (self, "straighten", stream != NULL && stream->n_route > 0);
   enable (self, "reset-label", stream != NULL && stream->has_label_place);
   enable (self, "select-all", has_components);
   enable (self, "zoom-fit", has_components);
