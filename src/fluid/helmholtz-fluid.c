@@ -33,6 +33,9 @@ hl_helmholtz_free (HlHelmholtz *eq)
   g_free (eq->gaussian);
   g_free (eq->gao);
   g_free (eq->non_analytic);
+  if (eq->grid != NULL)
+    g_free (*eq->grid);
+  g_free (eq->grid);
   g_free (eq->start_liquid.terms);
   g_free (eq->start_vapour.terms);
   g_free (eq);
@@ -97,6 +100,7 @@ fill_fluid (HlHelmholtz *eq)
 {
   HlFluid *fluid = &eq->fluid;
   fluid->data = eq;
+  eq->grid = g_new0 (HlStartGrid *, 1);
   fluid->limits.p_min = 0.0;
   fluid->limits.p_max = eq->p_max;
   fluid->limits.T_min = eq->T_min;
@@ -201,6 +205,7 @@ hl_helmholtz_with_reference (const HlHelmholtz *eq, HlReference reference, const
         moved->start.h[level][i] += add_h;
         moved->start.s[level][i] += add_s;
       }
+  moved->grid = g_new0 (HlStartGrid *, 1);
   moved->fluid.id = g_strdup (id);
   moved->zero = g_strdup (strchr (id, '@') + 1);
   moved->fluid.data = moved;

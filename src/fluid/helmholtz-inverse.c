@@ -146,37 +146,42 @@ solve_safe (const Search *search, HlState *state, HlSide *side)
   return HL_NOT_CONVERGED;
 }
 
-/* Cell of the table of isobars; FALSE below its first one. */
+static double
+across_levels (const double (*columns)[HL_START_STEPS + 1], guint level, guint step, const double w[4])
+{
+  return w[0] * columns[level][step] + w[1] * columns[level + 1][step] + w[2] * columns[level + 2][step] + w[3] * columns[level + 3][step];
+}
+
+/* From the table of isobars, cubic in both directions; FALSE below its first one. */
 static gboolean
 start_from_isobars (const Search *search, double *T, double *v)
 {
   const HlStartTable *table = &search->eq->start;
   const double (*columns)[HL_START_STEPS + 1] = search->held == HL_HELD_H ? table->h : table->s;
-  double ln_p = fmax (log (search->p), table->ln_p[0]);
+  double ln_p = fmax (log (search->p), table->ln_p[0]), levels[4], w[4], x[4];
   guint level = 0, low = 0, high = HL_START_STEPS;
-  if (table->n_levels < 2 || search->p < START_TABLE_FROM * search->eq->pc)
+  if (table->n_levels < 4 || search->p < START_TABLE_FROM * search->eq->pc)
     return FALSE;
-  while (level + 2 < table->n_levels && ln_p > table->ln_p[level + 1])
+  while (level + 4 < table->n_levels && ln_p > table->ln_p[level + 2])
     level++;
-  double w = (ln_p - table->ln_p[level]) / (table->ln_p[level + 1] - table->ln_p[level]);
-  const double *a = columns[level], *b = columns[level + 1];
+  hl_lagrange_weights (table->ln_p + level, ln_p, levels);
   while (high - low > 1)
     {
       guint middle = (low + high) / 2;
-      if (a[middle] + w * (b[middle] - a[middle]) <= search->value)
-        low = middle;
-      else
-        high = middle;
+      *(across_levels (columns, level, middle, levels) <= search->value ? &low : &high) = middle;
     }
-  double left = a[low] + w * (b[low] - a[low]), right = a[high] + w * (b[high] - a[high]);
-  double u = CLAMP ((search->value - left) / (right - left), -1.0, 2.0);
-  double T_a = table->T[level][low] + u * (table->T[level][high] - table->T[level][low]);
-  double T_b = table->T[level + 1][low] + u * (table->T[level + 1][high] - table->T[level + 1][low]);
-  double v_a = table->v[level][low] + u * (table->v[level][high] - table->v[level][low]);
-  double v_b = table->v[level + 1][low] + u * (table->v[level + 1][high] - table->v[level + 1][low]);
-  *T = T_a + w * (T_b - T_a);
-  *v = v_a + w * (v_b - v_a);
-  return *T > 0.0 && *v > 0.0;
+  guint first = low == 0 ? 0 : MIN (low - 1, HL_START_STEPS - 3);
+  for (guint i = 0; i < 4; i++)
+    x[i] = across_levels (columns, level, first + i, levels);
+  hl_lagrange_weights (x, search->value, w);
+  *T = *v = 0.0;
+  for (guint i = 0; i < 4; i++)
+    {
+      *T += w[i] * across_levels (table->T, level, first + i, levels);
+      *v += w[i] * across_levels (table->v, level, first + i, levels);
+    }
+  /* Beyond the ends of an isobar a cubic runs away. */
+  return *T > 0.9 * search->T_low && *T < 1.1 * search->T_high && *v > 0.0;
 }
 
 static HlStatus
@@ -216,24 +221,27 @@ static HlStatus
 beside_dome (Search *search, double zeta, gboolean is_liquid, HlState *state, HlSide *side)
 {
   const HlHelmholtz *eq = search->eq;
-  double T_sat = hl_helmholtz_T_of_zeta (eq, zeta);
+  double T_sat = hl_helmholtz_T_of_zeta (eq, zeta), T, v;
   search->branch = is_liquid ? HL_BRANCH_LIQUID : HL_BRANCH_VAPOUR;
   search->T_low = is_liquid ? eq->T_min : T_sat;
   search->T_high = is_liquid ? T_sat : eq->T_max;
+  if (hl_helmholtz_grid_start (eq, search->p, zeta, search->held, search->value, is_liquid, &T, &v) && solve_fast (search, T, v, state))
+    {
+      state->phase = is_liquid ? HL_PHASE_LIQUID : HL_PHASE_VAPOUR;
+      return HL_OK;
+    }
   return solve_phase (search, T_sat, exp (-hl_helmholtz_table (eq, is_liquid ? HL_SAT_LN_D_LIQUID : HL_SAT_LN_D_VAPOUR, zeta)), state, side);
 }
 
 /* Close to the line or inside: its exact ends decide. */
 static HlStatus
-at_dome (Search *search, HlState *state, HlSide *side)
+at_dome (Search *search, double zeta, HlState *state, HlSide *side)
 {
   const HlHelmholtz *eq = search->eq;
-  HlSaturatedPair pair;
   HlSaturation sat;
-  HlStatus status = hl_helmholtz_saturate_p (eq, search->p, &pair);
+  HlStatus status = hl_helmholtz_saturation_at (eq, search->p, zeta, &sat);
   if (status != HL_OK)
     return status;
-  hl_helmholtz_saturation_from_pair (eq, &pair, &sat);
   double liquid = search->held == HL_HELD_H ? sat.h_liquid : sat.s_liquid;
   double vapour = search->held == HL_HELD_H ? sat.h_vapour : sat.s_vapour;
   if (search->value >= liquid && search->value <= vapour && vapour > liquid)
@@ -247,21 +255,21 @@ at_dome (Search *search, HlState *state, HlSide *side)
     }
   gboolean is_liquid = search->value < liquid;
   search->branch = is_liquid ? HL_BRANCH_LIQUID : HL_BRANCH_VAPOUR;
-  search->T_low = is_liquid ? eq->T_min : pair.T;
-  search->T_high = is_liquid ? pair.T : eq->T_max;
+  search->T_low = is_liquid ? eq->T_min : sat.T;
+  search->T_high = is_liquid ? sat.T : eq->T_max;
   /* As good as at the critical point: the temperature hardly tells the sides apart, v and T together still do. */
-  if (hl_helmholtz_zeta_of_T (eq, pair.T) < ZETA_CRITICAL)
+  if (hl_helmholtz_zeta_of_T (eq, sat.T) < ZETA_CRITICAL)
     {
       search->branch = HL_BRANCH_ABOVE;
       search->T_low = eq->T_min;
       search->T_high = eq->T_max;
     }
-  if (solve_fast (search, pair.T, is_liquid ? sat.v_liquid : sat.v_vapour, state))
+  if (solve_fast (search, sat.T, is_liquid ? sat.v_liquid : sat.v_vapour, state))
     {
       state->phase = is_liquid ? HL_PHASE_LIQUID : HL_PHASE_VAPOUR;
       return HL_OK;
     }
-  return solve_phase (search, pair.T, is_liquid ? sat.v_liquid : sat.v_vapour, state, side);
+  return solve_phase (search, sat.T, is_liquid ? sat.v_liquid : sat.v_vapour, state, side);
 }
 
 /**
@@ -296,7 +304,7 @@ hl_helmholtz_from_p (const HlHelmholtz *eq, double p, HlHeld held, double value,
       if (value < liquid - margin || value > vapour + margin)
         status = beside_dome (&search, zeta, value < liquid, &found, side);
       else
-        status = at_dome (&search, &found, side);
+        status = at_dome (&search, zeta, &found, side);
     }
   if (status == HL_OK)
     *state = found;

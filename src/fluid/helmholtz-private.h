@@ -80,6 +80,9 @@ typedef struct {
   double T[HL_START_LEVELS][HL_START_STEPS + 1], v[HL_START_LEVELS][HL_START_STEPS + 1];
 } HlStartTable;
 
+/* Isobars below the critical pressure, helmholtz-grid.c. */
+typedef struct _HlStartGrid HlStartGrid;
+
 typedef struct {
   HlFluid fluid;                         /* its data points back to this record */
   char   *source, *formula, *cas, *note, *safety_class, *safety_source, *zero, *gwp_source, *hazard, *stable_source;
@@ -108,6 +111,7 @@ typedef struct {
   HlDensityStart    start_liquid, start_vapour;
   HlSaturationTable sat;
   HlStartTable      start;
+  HlStartGrid     **grid;                /* of its own; NULL inside until first needed */
 } HlHelmholtz;
 
 /* Both saturated densities at one temperature. */
@@ -136,6 +140,7 @@ void hl_helmholtz_ideal    (const HlHelmholtz *eq, double tau, HlAlpha *alpha); 
 
 /* helmholtz-state.c */
 void hl_helmholtz_state    (const HlHelmholtz *eq, double density, double T, HlState *state);   /* one phase; phase is not set */
+void hl_helmholtz_state_with (const HlHelmholtz *eq, double density, double T, const HlAlpha *ideal_part, HlState *state);      /* the ideal part at T is known */
 void hl_helmholtz_pressure (const HlHelmholtz *eq, double density, double T, double *p, double *p_d);
 HlPhase hl_helmholtz_phase (const HlHelmholtz *eq, double p, double T, gboolean is_liquid);
 
@@ -156,6 +161,7 @@ HlStatus hl_helmholtz_saturate_T (const HlHelmholtz *eq, double T, HlSaturatedPa
 HlStatus hl_helmholtz_saturate_p (const HlHelmholtz *eq, double p, HlSaturatedPair *pair);
 gboolean hl_helmholtz_polish_T   (const HlHelmholtz *eq, HlSaturatedPair *pair, guint max_steps);  /* equal p and g at pair->T from its densities */
 void     hl_helmholtz_saturation_from_pair (const HlHelmholtz *eq, const HlSaturatedPair *pair, HlSaturation *saturation);
+HlStatus hl_helmholtz_saturation_at (const HlHelmholtz *eq, double p, double zeta, HlSaturation *saturation);
 void     hl_helmholtz_mix (const HlSaturation *saturation, double x, HlState *state);
 HlStatus hl_helmholtz_saturation_p (const HlFluid *fluid, double p, HlSaturation *saturation);
 HlStatus hl_helmholtz_saturation_T (const HlFluid *fluid, double T, HlSaturation *saturation);
@@ -167,6 +173,22 @@ HlStatus hl_helmholtz_from_p (const HlHelmholtz *eq, double p, HlHeld held, doub
 HlStatus hl_helmholtz_state_ph (const HlFluid *fluid, double p, double h, HlState *state);
 HlStatus hl_helmholtz_state_ps (const HlFluid *fluid, double p, double s, HlState *state);
 void     hl_helmholtz_build_starts (HlHelmholtz *eq);
+
+/* Weights of Lagrange's cubic at y through nodes at x[0] to x[3]. */
+static inline void
+hl_lagrange_weights (const double x[4], double y, double w[4])
+{
+  for (guint i = 0; i < 4; i++)
+    {
+      w[i] = 1.0;
+      for (guint k = 0; k < 4; k++)
+        if (k != i)
+          w[i] *= (y - x[k]) / (x[i] - x[k]);
+    }
+}
+
+/* helmholtz-grid.c */
+gboolean hl_helmholtz_grid_start (const HlHelmholtz *eq, double p, double zeta, HlHeld held, double value, gboolean is_liquid, double *T, double *v);
 
 /* helmholtz-hs.c */
 HlStatus hl_helmholtz_state_hs (const HlFluid *fluid, double h, double s, HlState *state);

@@ -10,6 +10,8 @@
 #define ZETA_TABLE 3e-4
 #define LARGEST_STEP 0.2        /* relative to the density */
 #define STEP_DONE 3e-8          /* relative; what is left is its square */
+#define ZETA_ONE_STEP 0.05      /* below this (0.25 % of Tc) the curvature of p(d) counts too much for one step */
+#define ONE_STEP_DONE 1e-7      /* relative to the volume */
 
 typedef struct {
   double p, p_d, p_T, a, s;     /* a and s without the ideal part that both phases share, divided by R T and R */
@@ -159,26 +161,99 @@ hl_helmholtz_saturate_p (const HlHelmholtz *eq, double p, HlSaturatedPair *pair)
 
 /* Slopes along the line by Clausius and Clapeyron; at the critical point, where
  * both phases are one, the slope is that of its isochore. */
+static void
+saturation_from_ends (const HlState *liquid, const HlState *vapour, HlSaturation *saturation)
+{
+  double T_p;
+  if (vapour->s > liquid->s && vapour->v > liquid->v)
+    T_p = (vapour->v - liquid->v) / (vapour->s - liquid->s);
+  else
+    T_p = liquid->T_p - liquid->T_h * liquid->v_p / liquid->v_h;    /* dT/dp at constant volume */
+  double h_liquid_p = (T_p - liquid->T_p) / liquid->T_h, h_vapour_p = (T_p - vapour->T_p) / vapour->T_h;
+  *saturation = (HlSaturation) {
+    .p = liquid->p, .T = liquid->T, .T_p = T_p,
+    .h_liquid = liquid->h, .s_liquid = liquid->s, .v_liquid = liquid->v,
+    .h_vapour = vapour->h, .s_vapour = vapour->s, .v_vapour = vapour->v,
+    .h_liquid_p = h_liquid_p, .h_vapour_p = h_vapour_p,
+    .s_liquid_p = (h_liquid_p - liquid->v) / liquid->T, .s_vapour_p = (h_vapour_p - vapour->v) / liquid->T,
+    .v_liquid_p = liquid->v_p + liquid->v_h * h_liquid_p, .v_vapour_p = vapour->v_p + vapour->v_h * h_vapour_p,
+  };
+}
+
+static void
+ends_at (const HlHelmholtz *eq, double T, double d_liquid, double d_vapour, HlState *liquid, HlState *vapour)
+{
+  HlAlpha ideal;
+  hl_helmholtz_ideal (eq, eq->T_reducing / T, &ideal);
+  hl_helmholtz_state_with (eq, d_liquid, T, &ideal, liquid);
+  hl_helmholtz_state_with (eq, d_vapour, T, &ideal, vapour);
+}
+
 void
 hl_helmholtz_saturation_from_pair (const HlHelmholtz *eq, const HlSaturatedPair *pair, HlSaturation *saturation)
 {
   HlState liquid, vapour;
-  hl_helmholtz_state (eq, pair->d_liquid, pair->T, &liquid);
-  hl_helmholtz_state (eq, pair->d_vapour, pair->T, &vapour);
-  double T_p;
-  if (vapour.s > liquid.s && vapour.v > liquid.v)
-    T_p = (vapour.v - liquid.v) / (vapour.s - liquid.s);
-  else
-    T_p = liquid.T_p - liquid.T_h * liquid.v_p / liquid.v_h;    /* dT/dp at constant volume */
-  double h_liquid_p = (T_p - liquid.T_p) / liquid.T_h, h_vapour_p = (T_p - vapour.T_p) / vapour.T_h;
-  *saturation = (HlSaturation) {
-    .p = pair->p, .T = pair->T, .T_p = T_p,
-    .h_liquid = liquid.h, .s_liquid = liquid.s, .v_liquid = liquid.v,
-    .h_vapour = vapour.h, .s_vapour = vapour.s, .v_vapour = vapour.v,
-    .h_liquid_p = h_liquid_p, .h_vapour_p = h_vapour_p,
-    .s_liquid_p = (h_liquid_p - liquid.v) / pair->T, .s_vapour_p = (h_vapour_p - vapour.v) / pair->T,
-    .v_liquid_p = liquid.v_p + liquid.v_h * h_liquid_p, .v_vapour_p = vapour.v_p + vapour.v_h * h_vapour_p,
-  };
+  ends_at (eq, pair->T, pair->d_liquid, pair->d_vapour, &liquid, &vapour);
+  liquid.p = vapour.p = pair->p;
+  saturation_from_ends (&liquid, &vapour, saturation);
+}
+
+/* Moves a state to first order to where its pressure is p and its temperature T; how far, relative. */
+static double
+move_end (double p, double T, HlState *end)
+{
+  double dp = p - end->p, dh = (T - end->T - end->T_p * dp) / end->T_h, dv = end->v_p * dp + end->v_h * dh;
+  end->s += (dh - end->v * dp) / end->T;
+  end->h += dh;
+  end->v += dv;
+  end->p = p;
+  end->T = T;
+  return fabs (dv) / end->v;
+}
+
+/* From the table's densities, which lie within some 1e-8, one step of Newton's method
+ * leads to the line to all digits: along each phase dg = -s dT + v dp.  The slopes stay
+ * those of the table's point, as good as the step.  FALSE where the step is not small. */
+static gboolean
+saturation_by_one_step (const HlHelmholtz *eq, double p, double zeta, HlSaturation *saturation)
+{
+  HlState liquid, vapour;
+  HlSaturatedPair pair;
+  double T = hl_helmholtz_T_of_zeta (eq, zeta);
+  pair_from_table (eq, zeta, &pair);
+  ends_at (eq, T, pair.d_liquid, pair.d_vapour, &liquid, &vapour);
+  if (!(liquid.T_h > 0.0) || !(vapour.T_h > 0.0))
+    return FALSE;
+  double g_difference = (liquid.h - vapour.h) - T * (liquid.s - vapour.s) + liquid.v * (p - liquid.p) - vapour.v * (p - vapour.p);
+  double T_step = g_difference / (liquid.s - vapour.s);
+  if (!(fabs (T_step) < STEP_DONE * T))
+    return FALSE;
+  double liquid_step = move_end (p, T + T_step, &liquid), vapour_step = move_end (p, T + T_step, &vapour);
+  if (!(fmax (liquid_step, vapour_step) < ONE_STEP_DONE))
+    return FALSE;
+  saturation_from_ends (&liquid, &vapour, saturation);
+  return TRUE;
+}
+
+/**
+ * hl_helmholtz_saturation_at:
+ * @eq: an equation
+ * @p: pressure on the line [Pa]
+ * @zeta: hl_helmholtz_zeta_of_p() of it
+ * @saturation: (out): both ends; untouched on failure
+ *
+ * Returns: HL_OK or HL_NOT_CONVERGED
+ */
+HlStatus
+hl_helmholtz_saturation_at (const HlHelmholtz *eq, double p, double zeta, HlSaturation *saturation)
+{
+  HlSaturatedPair pair;
+  if (zeta > ZETA_ONE_STEP && saturation_by_one_step (eq, p, zeta, saturation))
+    return HL_OK;
+  HlStatus status = hl_helmholtz_saturate_p (eq, p, &pair);
+  if (status == HL_OK)
+    hl_helmholtz_saturation_from_pair (eq, &pair, saturation);
+  return status;
 }
 
 /* Equilibrium mixture.  The line is exactly consistent here, so s_h = 1/T and s_p = -v/T hold as in one phase. */
@@ -232,13 +307,9 @@ HlStatus
 hl_helmholtz_saturation_p (const HlFluid *fluid, double p, HlSaturation *saturation)
 {
   const HlHelmholtz *eq = hl_helmholtz_of (fluid);
-  HlSaturatedPair pair;
   if (!has_saturation_p (eq, p))
     return HL_OUTSIDE_RANGE;
-  HlStatus status = hl_helmholtz_saturate_p (eq, p, &pair);
-  if (status == HL_OK)
-    hl_helmholtz_saturation_from_pair (eq, &pair, saturation);
-  return status;
+  return hl_helmholtz_saturation_at (eq, p, hl_helmholtz_zeta_of_p (eq, p), saturation);
 }
 
 HlStatus

@@ -11,10 +11,17 @@
 void
 hl_helmholtz_state (const HlHelmholtz *eq, double density, double T, HlState *state)
 {
-  HlAlpha ideal, residual;
+  HlAlpha ideal;
+  hl_helmholtz_ideal (eq, eq->T_reducing / T, &ideal);
+  hl_helmholtz_state_with (eq, density, T, &ideal, state);
+}
+
+void
+hl_helmholtz_state_with (const HlHelmholtz *eq, double density, double T, const HlAlpha *ideal_part, HlState *state)
+{
+  HlAlpha ideal = *ideal_part, residual;
   double delta = density / eq->d_reducing, tau = eq->T_reducing / T, RT = eq->R * T;
   hl_helmholtz_residual (eq, delta, tau, &residual);
-  hl_helmholtz_ideal (eq, tau, &ideal);
 
   double v = 1.0 / density;
   double u = RT * (ideal.t + residual.t);

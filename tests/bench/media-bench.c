@@ -93,6 +93,31 @@ time_pair (const Sample *sample, const char *pair)
   return best;
 }
 
+/* Gases and liquids have no dome to place states around. */
+static void
+time_without_dome (void)
+{
+  static const char *const ids[] = { "air", "gas:N2=0.7,CO2=0.1,H2O=0.15,O2=0.05", "mineral-oil" }, *const pairs[] = { "pT", "ph", "ps", "hs" };
+  static Sample sample;
+  printf ("\n%-40s        pT        ph        ps        hs\n", "without dome, 1 to 10 bar");
+  for (gsize i = 0; i < G_N_ELEMENTS (ids); i++)
+    for (int is_wet = 0; is_wet <= (i == 1); is_wet++)
+      {
+        g_autoptr (GRand) rand = g_rand_new_with_seed (4711);
+        sample.fluid = hl_fluid_lookup (ids[i]);
+        for (gsize k = 0; k < N_STATES; k++)
+          {
+            HlStatus status = hl_fluid_state_pT (sample.fluid, g_rand_double_range (rand, 1e5, 10e5),
+                                                 is_wet ? g_rand_double_range (rand, 280.0, 320.0) : g_rand_double_range (rand, 400.0, 590.0), &sample.states[k]);
+            g_assert_cmpint (status, ==, HL_OK);
+          }
+        printf ("%-40s", is_wet ? "the same, below the dew point" : ids[i]);
+        for (gsize c = 0; c < G_N_ELEMENTS (pairs); c++)
+          printf (" %9.0f", time_pair (&sample, pairs[c]));
+        printf ("\n");
+      }
+}
+
 int
 main (void)
 {
@@ -121,5 +146,6 @@ main (void)
         }
       printf (" first look-up %.2f ms\n", load);
     }
+  time_without_dome ();
   return 0;
 }
