@@ -4,6 +4,7 @@
 #include "app/hl-appearance.h"
 #include "app/hl-nameplate-private.h"
 #include "app/hl-pane.h"
+#include "app/hl-trace.h"
 #include "plant/i18n.h"
 
 #include <math.h>
@@ -114,6 +115,7 @@ hl_option_row_new (HlSession *session, const char *id, const HlOptionKind *optio
       gtk_editable_set_alignment (GTK_EDITABLE (row->control), 1.0f);
       g_signal_connect (row->control, "value-changed", G_CALLBACK (count_changed_cb), row);
     }
+  g_object_set_data_full (G_OBJECT (row->control), HL_OPTION_NAME, g_strdup_printf ("%s.%s", id, option->key), g_free);
   gtk_widget_add_css_class (row->control, "option");
   gtk_widget_set_valign (row->control, GTK_ALIGN_CENTER);
   hl_pane_set_accessible (row->control, _(option->name), id);

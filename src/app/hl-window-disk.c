@@ -105,7 +105,7 @@ void
 hl_window_show_demo_hint (HlWindow *self)
 {
   const HlNoticeButton buttons[] = { { _("New plant"), "win.new" }, { _("Do not say this again"), "win.no-demo-hint" }, { NULL, NULL } };
-  if (hl_settings_get_bool ("demo-hint", TRUE))
+  if (hl_settings_get_bool ("demo-hint", TRUE) && hl_plant_n_components (hl_session_plant (self->session)) > 0)
     hl_notice_show (self->notice_bin, _("A demo plant: change any value at the right, and everything follows. Your own work begins with a new plant."), buttons);
 }
 

@@ -37,6 +37,8 @@ trace_rows (GtkWidget *widget)
         g_autofree char *address = hl_address_to_text (hl_quantity_row_address (HL_QUANTITY_ROW (child)));
         hl_trace_place ("row", address, child, gtk_widget_get_width (child) * 0.62, 17);
       }
+    else if (g_object_get_data (G_OBJECT (child), HL_OPTION_NAME) != NULL && gtk_widget_get_mapped (child))
+      hl_trace_place ("option", g_object_get_data (G_OBJECT (child), HL_OPTION_NAME), child, 16, gtk_widget_get_height (child) / 2.0);
     else
       trace_rows (child);
 }

@@ -49,6 +49,9 @@ test_the_demo_hint_can_be_silenced (void)
 {
   HlWindow *window = new_window ();
   hl_window_show_demo_hint (window);
+  g_assert_null (find_button (GTK_WIDGET (window), "Do not say this again"));      /* nothing to say about an empty sheet */
+  act (window, "start-template", "(si)", "simple", 0);
+  hl_window_show_demo_hint (window);
   spin (30);
   g_signal_emit_by_name (find_button (GTK_WIDGET (window), "Do not say this again"), "clicked");
   g_assert_false (offers (window, "Do not say this again"));
