@@ -415,6 +415,8 @@ hl_canvas_say (HlCanvas *self, const char *text)
 void
 hl_canvas_set_popover (HlCanvas *self, GtkWidget *popover, double vx, double vy)
 {
+  if (self->popover != NULL)
+    gtk_popover_popdown (GTK_POPOVER (self->popover));     /* the pointer leaves it before its surface goes */
   g_clear_pointer (&self->popover, gtk_widget_unparent);
   self->popover = popover;
   gtk_widget_set_parent (popover, GTK_WIDGET (self));
