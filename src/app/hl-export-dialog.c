@@ -21,11 +21,11 @@ struct _HlExportDialog {
 G_DEFINE_FINAL_TYPE (HlExportDialog, hl_export_dialog, GTK_TYPE_WINDOW)
 
 static const char *const what_names[] = { N_("Drawing"), N_("State diagram"), N_("h-s diagram"), N_("p-h diagram"),
-                                         N_("Composite curves"), N_("Energy bands"), N_("Ledger"),
+                                         N_("Composite curves"), N_("Energy bands"), N_("Exergy bands"), N_("Exergy destroyed, bars"), N_("Ledger"),
                                          N_("Heat balance drawing, A3"), N_("Report, PDF"), N_("Workbook, all tables"), NULL };
-static const char *const what_suffixes[] = { "drawing", "states", "hs", "ph", "heat", "bands", "ledger", "sheet", "report", "tables" };
+static const char *const what_suffixes[] = { "drawing", "states", "hs", "ph", "heat", "bands", "exergy-bands", "exergy-bars", "ledger", "sheet", "report", "tables" };
 static const HlPicture what_pictures[] = { HL_PICTURE_DRAWING, HL_PICTURE_STATE_DIAGRAM, HL_PICTURE_HS_DIAGRAM, HL_PICTURE_PH_DIAGRAM,
-                                           HL_PICTURE_HEAT, HL_PICTURE_BANDS };
+                                           HL_PICTURE_HEAT, HL_PICTURE_BANDS, HL_PICTURE_EXERGY_BANDS, HL_PICTURE_EXERGY_BARS };
 static const struct { const char *name, *filter, *pattern, *ending; } formats[] = {
   [HL_FORMAT_SVG] = { N_("SVG, scales to any size"), N_("SVG pictures"), "*.svg", "svg" },
   [HL_FORMAT_PDF] = { N_("PDF, for print and papers"), N_("PDF documents"), "*.pdf", "pdf" },

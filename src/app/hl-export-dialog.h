@@ -12,6 +12,8 @@ typedef enum {
   HL_HAND_OVER_PH_DIAGRAM,
   HL_HAND_OVER_HEAT,
   HL_HAND_OVER_BANDS,
+  HL_HAND_OVER_EXERGY_BANDS,
+  HL_HAND_OVER_EXERGY_BARS,
   HL_HAND_OVER_LEDGER,            /* before it the pictures of hl_export_picture() */
   HL_HAND_OVER_SHEET,             /* the drawing on A3 with title block */
   HL_HAND_OVER_REPORT,

@@ -4,14 +4,17 @@
 #include "app/hl-appearance.h"
 #include "app/hl-pane.h"
 #include "draw/bands.h"
+#include "draw/exergy-bars.h"
 #include "draw/heat-diagram.h"
 #include "plant/i18n.h"
 
 struct _HlPictureView {
   GtkWidget  parent_instance;
   HlSession *session;
-  gboolean   shows_bands;
+  GtkWidget *chooser;        /* of the bands page; NULL: heat */
 };
+
+#define CHOOSER_MARGIN 8
 
 G_DEFINE_FINAL_TYPE (HlPictureView, hl_picture_view, GTK_TYPE_WIDGET)
 
@@ -38,6 +41,32 @@ hl_picture_view_component (HlPictureView *self)
   return curve != NULL ? component : HL_HEAT_ALL;
 }
 
+static HlBandsPage
+chosen_page (HlPictureView *self)
+{
+  return (HlBandsPage) gtk_drop_down_get_selected (GTK_DROP_DOWN (self->chooser));
+}
+
+/* The chooser stands at the right of the title. */
+static void
+draw_bands (HlPictureView *self, cairo_t *cr, HlSolution *solution, gboolean is_stale, int width, int height)
+{
+  HlUnitSet units = hl_plant_units (hl_solution_plant (solution));
+  double clear = gtk_widget_get_width (self->chooser) + 2.0 * CHOOSER_MARGIN;
+
+  if (chosen_page (self) == HL_BANDS_PAGE_BARS)
+    {
+      g_autoptr (HlExergyBars) bars = hl_exergy_bars_new (solution, units, width, height);
+      hl_exergy_bars_keep_clear (bars, clear);
+      hl_exergy_bars_draw (bars, cr, hl_appearance_theme (), is_stale);
+      return;
+    }
+  g_autoptr (HlBandsPicture) picture = hl_bands_picture_new_of (solution, chosen_page (self) == HL_BANDS_PAGE_EXERGY ? HL_BANDS_EXERGY : HL_BANDS_ENERGY,
+                                                                units, width, height);
+  hl_bands_picture_keep_clear (picture, clear);
+  hl_bands_picture_draw (picture, cr, hl_appearance_theme (), is_stale);
+}
+
 static void
 draw (HlPictureView *self, cairo_t *cr, int width, int height)
 {
@@ -45,11 +74,8 @@ draw (HlPictureView *self, cairo_t *cr, int width, int height)
   HlSolution *solution = solution_to_show (self, &is_stale);
   HlUnitSet units = hl_plant_units (hl_solution_plant (solution));
 
-  if (self->shows_bands)
-    {
-      g_autoptr (HlBandsPicture) picture = hl_bands_picture_new (solution, units, width, height);
-      hl_bands_picture_draw (picture, cr, hl_appearance_theme (), is_stale);
-    }
+  if (self->chooser != NULL)
+    draw_bands (self, cr, solution, is_stale, width, height);
   else
     {
       g_autoptr (HlHeatDiagram) diagram = hl_heat_diagram_new (solution, hl_picture_view_component (self), units, width, height);
@@ -67,6 +93,20 @@ hl_picture_view_snapshot (GtkWidget *widget, GtkSnapshot *snapshot)
   cairo_t *cr = gtk_snapshot_append_cairo (snapshot, &GRAPHENE_RECT_INIT (0, 0, width, height));
   draw (HL_PICTURE_VIEW (widget), cr, width, height);
   cairo_destroy (cr);
+  if (HL_PICTURE_VIEW (widget)->chooser != NULL)
+    gtk_widget_snapshot_child (widget, HL_PICTURE_VIEW (widget)->chooser, snapshot);
+}
+
+static void
+hl_picture_view_size_allocate (GtkWidget *widget, int width, G_GNUC_UNUSED int height, G_GNUC_UNUSED int baseline)
+{
+  HlPictureView *self = HL_PICTURE_VIEW (widget);
+  GtkRequisition size;
+
+  if (self->chooser == NULL)
+    return;
+  gtk_widget_get_preferred_size (self->chooser, NULL, &size);
+  gtk_widget_size_allocate (self->chooser, &(GtkAllocation) { MAX (0, width - size.width - CHOOSER_MARGIN), CHOOSER_MARGIN, size.width, size.height }, -1);
 }
 
 static void
@@ -91,6 +131,7 @@ hl_picture_view_dispose (GObject *object)
   if (self->session != NULL)
     g_signal_handlers_disconnect_by_data (self->session, self);
   g_clear_object (&self->session);
+  g_clear_pointer (&self->chooser, gtk_widget_unparent);
   G_OBJECT_CLASS (hl_picture_view_parent_class)->dispose (object);
 }
 
@@ -102,6 +143,7 @@ hl_picture_view_class_init (HlPictureViewClass *klass)
   G_OBJECT_CLASS (klass)->dispose = hl_picture_view_dispose;
   widget_class->snapshot = hl_picture_view_snapshot;
   widget_class->measure = hl_picture_view_measure;
+  widget_class->size_allocate = hl_picture_view_size_allocate;
   widget_class->css_changed = hl_picture_view_css_changed;
   gtk_widget_class_set_css_name (widget_class, "pictureview");
   gtk_widget_class_set_accessible_role (widget_class, GTK_ACCESSIBLE_ROLE_IMG);
@@ -114,12 +156,11 @@ hl_picture_view_init (HlPictureView *self)
 }
 
 static GtkWidget *
-view_new (HlSession *session, gboolean shows_bands, const char *label)
+view_new (HlSession *session, const char *label)
 {
   HlPictureView *self = g_object_new (HL_TYPE_PICTURE_VIEW, NULL);
 
   self->session = g_object_ref (session);
-  self->shows_bands = shows_bands;
   hl_pane_set_accessible (GTK_WIDGET (self), label, NULL);
   g_signal_connect_swapped (session, "changed", G_CALLBACK (gtk_widget_queue_draw), self);
   g_signal_connect_swapped (session, "selection-changed", G_CALLBACK (gtk_widget_queue_draw), self);
@@ -129,11 +170,27 @@ view_new (HlSession *session, gboolean shows_bands, const char *label)
 GtkWidget *
 hl_heat_view_new (HlSession *session)
 {
-  return view_new (session, FALSE, _("Temperature over heat of the selected exchanger, or of all"));
+  return view_new (session, _("Temperature over heat of the selected exchanger, or of all"));
 }
 
 GtkWidget *
 hl_bands_view_new (HlSession *session)
 {
-  return view_new (session, TRUE, _("Energy bands"));
+  const char *const pages[] = { _("Energy"), _("Exergy"), _("Exergy, bars"), NULL };
+  GtkWidget *view = view_new (session, _("Energy and exergy of the plant"));
+  HlPictureView *self = HL_PICTURE_VIEW (view);
+
+  self->chooser = gtk_drop_down_new_from_strings (pages);
+  hl_pane_set_accessible (self->chooser, _("What the picture shows"), NULL);
+  gtk_widget_set_tooltip_text (self->chooser, _("What the picture shows"));
+  gtk_widget_set_parent (self->chooser, view);
+  g_signal_connect_swapped (self->chooser, "notify::selected", G_CALLBACK (gtk_widget_queue_draw), view);
+  return view;
+}
+
+void
+hl_bands_view_show (HlPictureView *self, HlBandsPage page)
+{
+  g_return_if_fail (HL_IS_PICTURE_VIEW (self) && self->chooser != NULL);
+  gtk_drop_down_set_selected (GTK_DROP_DOWN (self->chooser), page);
 }

@@ -4,6 +4,8 @@
 
 #include <math.h>
 #include "batch/json-text.h"
+#include "draw/tables.h"
+#include "engine/heat-curve.h"
 
 static void
 write_quantity (HlJsonText *json, const char *key, HlDimension dimension, double value)
@@ -94,6 +96,78 @@ write_exergy (HlJsonText *json, const HlSolution *solution)
 }
 
 static void
+write_performance (HlJsonText *json, const HlSolution *solution)
+{
+  g_autoptr (HlSummary) summary = hl_summary_new (solution);
+  hl_json_text_begin (json, "performance", '{', FALSE);
+  for (guint n = 0; n < hl_summary_n_lines (summary); n++)
+    {
+      const HlSummaryLine *line = hl_summary_line (summary, n);
+      write_quantity (json, line->key, line->dimension, line->value);
+    }
+  hl_json_text_end (json);
+}
+
+static void
+write_curve (HlJsonText *json, const char *name, const GArray *side)
+{
+  hl_json_text_begin (json, name, '[', TRUE);
+  for (guint i = 0; i < side->len; i++)
+    {
+      const HlHeatPoint *point = &g_array_index (side, HlHeatPoint, i);
+      hl_json_text_begin (json, NULL, '[', TRUE);
+      hl_json_text_number (json, NULL, point->heat);
+      hl_json_text_number (json, NULL, point->T);
+      hl_json_text_end (json);
+    }
+  hl_json_text_end (json);
+}
+
+static void
+write_zones (HlJsonText *json, const GArray *zones)
+{
+  hl_json_text_begin (json, "zones", '[', FALSE);
+  for (guint k = 0; k < zones->len; k++)
+    {
+      const HlHeatZone *zone = &g_array_index (zones, HlHeatZone, k);
+      hl_json_text_begin (json, NULL, '{', TRUE);
+      hl_json_text_number (json, "heat_W", zone->heat);
+      hl_json_text_number (json, "hot_in_K", zone->hot_in);
+      hl_json_text_number (json, "hot_out_K", zone->hot_out);
+      hl_json_text_number (json, "cold_in_K", zone->cold_in);
+      hl_json_text_number (json, "cold_out_K", zone->cold_out);
+      hl_json_text_number (json, "mean_difference_K", zone->mean_difference);
+      hl_json_text_number (json, "UA_W_K", zone->conductance);
+      hl_json_text_end (json);
+    }
+  hl_json_text_end (json);
+}
+
+/* Zones, pinch and both curves, heat [W] and temperature [K] from the cold end on. */
+static void
+write_exchangers (HlJsonText *json, const HlSolution *solution)
+{
+  g_autoptr (GArray) components = hl_heat_exchangers (solution);
+  hl_json_text_begin (json, "exchangers", '{', FALSE);
+  for (guint k = 0; k < components->len; k++)
+    {
+      guint component = g_array_index (components, guint, k);
+      g_autoptr (HlHeatCurve) curve = hl_heat_curve_new (solution, (int) component);
+      if (curve->zones->len == 0)
+        continue;
+      hl_json_text_begin (json, hl_plant_component (hl_solution_plant (solution), component)->id, '{', FALSE);
+      hl_json_text_number (json, "heat_W", curve->duty);
+      hl_json_text_number (json, "pinch_K", curve->has_pinch ? curve->pinch : NAN);
+      hl_json_text_number (json, "pinch_at_W", curve->has_pinch ? curve->pinch_heat : NAN);
+      write_zones (json, curve->zones);
+      write_curve (json, "hot", curve->hot);
+      write_curve (json, "cold", curve->cold);
+      hl_json_text_end (json);
+    }
+  hl_json_text_end (json);
+}
+
+static void
 write_address (HlJsonText *json, const char *name, const HlAddress *address)
 {
   /* A finding about a whole component or the plant carries no key. */
@@ -152,6 +226,8 @@ hl_solution_json (const HlSolution *solution, const GArray *yielded)
   write_plant (json, solution);
   write_streams (json, solution);
   write_components (json, solution);
+  write_performance (json, solution);
+  write_exchangers (json, solution);
   write_exergy (json, solution);
   write_findings (json, solution);
   write_yielded (json, yielded);

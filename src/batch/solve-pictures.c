@@ -34,18 +34,28 @@ check_heat (const HlPlant *plant, char *const *heat, GError **error)
   return FALSE;
 }
 
+/* Pictures of the whole plant that have an option of their own. */
+static const struct { const char *option; HlPicture picture; } whole[] = {
+  { "bands", HL_PICTURE_BANDS }, { "exergy-bands", HL_PICTURE_EXERGY_BANDS }, { "exergy-bars", HL_PICTURE_EXERGY_BARS },
+};
+
 gboolean
 hl_check_pictures (const HlPlant *plant, const HlArguments *arguments, GError **error)
 {
   char *const *values;
-  const char *bands;
   for (guint n = 0; (values = hl_arguments_option (arguments, "diagram", n)) != NULL; n++)
     if (!check_diagram (values, error))
       return FALSE;
   for (guint n = 0; (values = hl_arguments_option (arguments, "heat", n)) != NULL; n++)
     if (!check_heat (plant, values, error))
       return FALSE;
-  return (bands = hl_arguments_value (arguments, "bands")) == NULL || check_path (bands, error);
+  for (guint k = 0; k < G_N_ELEMENTS (whole); k++)
+    {
+      const char *path = hl_arguments_value (arguments, whole[k].option);
+      if (path != NULL && !check_path (path, error))
+        return FALSE;
+    }
+  return TRUE;
 }
 
 gboolean
@@ -91,7 +101,13 @@ write_heats (const HlSolution *solution, const HlArguments *arguments, GError **
 gboolean
 hl_write_pictures (const HlSolution *solution, const HlArguments *arguments, GError **error)
 {
-  const char *bands = hl_arguments_value (arguments, "bands");
-  return write_diagrams (solution, arguments, error) && write_heats (solution, arguments, error)
-         && (bands == NULL || hl_write_picture (solution, HL_PICTURE_BANDS, -1, bands, error));
+  if (!write_diagrams (solution, arguments, error) || !write_heats (solution, arguments, error))
+    return FALSE;
+  for (guint k = 0; k < G_N_ELEMENTS (whole); k++)
+    {
+      const char *path = hl_arguments_value (arguments, whole[k].option);
+      if (path != NULL && !hl_write_picture (solution, whole[k].picture, -1, path, error))
+        return FALSE;
+    }
+  return TRUE;
 }

@@ -9,7 +9,7 @@
 #include "plant/i18n.h"
 
 /* The options that take a file name, which may be "-". */
-static const char *const file_options[] = { "json", "csv", "summary", "ledger", "xlsx", "report", "drawing", "diagram", "heat", "bands", NULL };
+static const char *const file_options[] = { "json", "csv", "summary", "ledger", "xlsx", "report", "drawing", "diagram", "heat", "bands", "exergy-bands", "exergy-bars", NULL };
 
 /* Mistakes of the command line show before anything is read or written. */
 static gboolean
@@ -133,6 +133,8 @@ static const HlBatchOption solve_options[] = {
   { "diagram", N_("ts|hs|ph FILE"), TRUE, N_("write a state diagram: temperature-entropy, enthalpy-entropy, pressure-enthalpy; may be repeated") },
   { "heat", N_("COMPONENT FILE"), TRUE, N_("write temperature over heat of an exchanger, or of all together (all); may be repeated") },
   { "bands", N_("FILE"), FALSE, N_("write where the energy of the plant comes from and goes, as bands to scale") },
+  { "exergy-bands", N_("FILE"), FALSE, N_("write where its exergy comes from, is destroyed, lost and made, as bands to scale") },
+  { "exergy-bars", N_("FILE"), FALSE, N_("write the exergy that each component destroys and loses, as bars") },
 };
 
 const HlBatchCommand hl_command_solve = {

@@ -144,7 +144,7 @@ draw_label (const HlStrip *strip, cairo_t *cr, const HlTheme *theme, gboolean is
 static void
 draw_line (const HlBandsPicture *picture, cairo_t *cr, const HlTheme *theme, const char *text, double y, double size, gboolean is_bold)
 {
-  double room = picture->width - 2.0 * picture->text_size, width = hl_text_width (theme, text, size, is_bold);
+  double room = picture->width - picture->clear - 2.6 * picture->text_size, width = hl_text_width (theme, text, size, is_bold);
   if (width > room)
     size *= MAX (0.98 * room / width, 0.3);
   hl_text_show (cr, theme, text, 1.3 * picture->text_size, y, -1, size, is_bold);
@@ -153,7 +153,8 @@ draw_line (const HlBandsPicture *picture, cairo_t *cr, const HlTheme *theme, con
 static void
 draw_empty (const HlBandsPicture *picture, cairo_t *cr, const HlTheme *theme)
 {
-  const char *text = _("Bands appear here as soon as the energy of the whole plant is known.");
+  const char *text = picture->of == HL_BANDS_EXERGY ? _("Bands appear here as soon as the exergy of the whole plant is known.")
+                                                    : _("Bands appear here as soon as the energy of the whole plant is known.");
   double size = picture->text_size, width = hl_text_width (theme, text, size, FALSE);
   if (width > 0.95 * picture->width)
     size *= 0.93 * picture->width / width;

@@ -57,6 +57,16 @@ add_strips (HlBandsPicture *picture)
     }
 }
 
+static const char *
+name_together (const HlBandsPicture *picture, HlBandKind kind)
+{
+  if (kind == HL_BAND_SHAFT_LOSS)
+    return _("shaft, generator");
+  if (kind == HL_BAND_DESTROYED)
+    return _("destroyed elsewhere");
+  return kind == HL_BAND_REJECTED && picture->of == HL_BANDS_EXERGY ? _("lost") : _("others");
+}
+
 /* Neighbours of one kind, the smallest first, become one. */
 static gboolean
 merge_smallest (HlBandsPicture *picture)
@@ -70,7 +80,7 @@ merge_smallest (HlBandsPicture *picture)
     return FALSE;
   nth (picture, (guint) best - 1)->power += nth (picture, (guint) best)->power;
   g_free (nth (picture, (guint) best - 1)->lines[0]);
-  nth (picture, (guint) best - 1)->lines[0] = g_strdup (nth (picture, (guint) best)->kind == HL_BAND_SHAFT_LOSS ? _("shaft, generator") : _("others"));
+  nth (picture, (guint) best - 1)->lines[0] = g_strdup (name_together (picture, nth (picture, (guint) best)->kind));
   g_array_remove_index (picture->strips, (guint) best);
   return TRUE;
 }
@@ -313,17 +323,39 @@ lay_out (HlBandsPicture *picture)
   set_labels (picture);
 }
 
+/* "exergy, widths to scale; counted from 15.0 °C and 1.013 bar" */
+static char *
+exergy_remark (const HlSolution *solution, HlUnitSet units)
+{
+  const HlSite *site = hl_plant_site (hl_solution_plant (solution));
+  g_autofree char *T = hl_units_format (site->dead_T, HL_DIMENSION_TEMPERATURE, units), *p = hl_units_format (site->dead_p, HL_DIMENSION_PRESSURE, units);
+  return g_strdup_printf (_("exergy, widths to scale; counted from %s and %s"), T, p);
+}
+
 HlBandsPicture *
 hl_bands_picture_new (const HlSolution *solution, HlUnitSet units, double width, double height)
+{
+  return hl_bands_picture_new_of (solution, HL_BANDS_ENERGY, units, width, height);
+}
+
+void
+hl_bands_picture_keep_clear (HlBandsPicture *picture, double right)
+{
+  picture->clear = right;
+}
+
+HlBandsPicture *
+hl_bands_picture_new_of (const HlSolution *solution, HlBandsOf of, HlUnitSet units, double width, double height)
 {
   HlBandsPicture *picture = g_new0 (HlBandsPicture, 1);
   const char *title = hl_plant_title (hl_solution_plant (solution));
   picture->width = MAX (width, 60.0);
   picture->height = MAX (height, 60.0);
   picture->text_size = 10.5 * CLAMP (sqrt (picture->width * picture->height / (960.0 * 600.0)), 0.85, 1.3);
-  picture->bands = hl_bands_new (solution);
-  picture->title = g_strdup (title != NULL && title[0] != '\0' ? title : _("Energy of the plant"));
-  picture->remark = g_strdup ("");
+  picture->of = of;
+  picture->bands = of == HL_BANDS_EXERGY ? hl_bands_new_exergy (solution) : hl_bands_new (solution);
+  picture->title = g_strdup (title != NULL && title[0] != '\0' ? title : of == HL_BANDS_EXERGY ? _("Exergy of the plant") : _("Energy of the plant"));
+  picture->remark = of == HL_BANDS_EXERGY ? exergy_remark (solution, units) : g_strdup ("");
   picture->strips = g_array_new (FALSE, TRUE, sizeof (HlStrip));
   g_array_set_clear_func (picture->strips, clear_strip);
   if (!picture->bands->is_complete)

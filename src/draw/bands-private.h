@@ -21,7 +21,8 @@ typedef struct {
 } HlStrip;
 
 struct _HlBandsPicture {
-  double      width, height, text_size;
+  double      width, height, text_size, clear;
+  HlBandsOf   of;
   HlBands    *bands;
   char       *title, *remark;
   double      scale;            /* pixels a watt */
@@ -33,6 +34,10 @@ struct _HlBandsPicture {
   gboolean    has_loop;         /* pumps' power comes back */
   double      loop_from, loop_to, loop_width, loop_level, loop_edge;
 };
+/* "T1 turbine"; g_free(). */
+char *hl_bands_label (const HlComponent *component);
+/* Drops what is rounding only, sorts by kind, and says whether what is left can be drawn. */
+void  hl_bands_clean (HlBands *bands);
 /* Upper and lower edge of the main band just right of @x. */
 void hl_bands_picture_edges (const HlBandsPicture *picture, double x, double *top, double *bottom);
 G_END_DECLS

@@ -1,6 +1,6 @@
 /* From a solution to the energy that comes in, comes back and goes out.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "draw/bands.h"
+#include "draw/bands-private.h"
 #include "plant/i18n.h"
 #include <math.h>
 #include <string.h>
@@ -54,8 +54,8 @@ of_plant (Books *books, const char *key)
   return 0.0;
 }
 
-static char *
-label_of (const HlComponent *component)
+char *
+hl_bands_label (const HlComponent *component)
 {
   return component->name != NULL && component->name[0] != '\0' ? g_strdup_printf ("%s %s", component->id, component->name)
                                                                : g_strdup_printf ("%s %s", component->id, _(component->kind->shelf_name));
@@ -131,7 +131,7 @@ collect_water (Books *books, const HlComponent *component, GArray *waters)
       if (!(water.m > 0.0))
         continue;
       {
-        g_autofree char *label = label_of (component);
+        g_autofree char *label = hl_bands_label (component);
         water.name = is_user ? g_strdup_printf (_("water lost in %s"), component->id) : g_steal_pointer (&label);
       }
       g_array_append_val (waters, water);
@@ -173,7 +173,7 @@ static void
 add_component (Books *books, guint n)
 {
   const HlComponent *component = hl_plant_component (books->plant, n);
-  g_autofree char *label = label_of (component);
+  g_autofree char *label = hl_bands_label (component);
   double value;
   if (is_kind (component, "boiler"))
     {
@@ -252,8 +252,8 @@ compare_kinds (gconstpointer a, gconstpointer b)
 }
 
 /* Nothing thinner than rounding is a band; one that runs the wrong way cannot be drawn. */
-static void
-clean (HlBands *bands)
+void
+hl_bands_clean (HlBands *bands)
 {
   for (guint i = bands->bands->len; i-- > 0;)
     {
@@ -285,7 +285,7 @@ hl_bands_new (const HlSolution *solution)
   bands->input = hl_bands_sum (bands, HL_BAND_FUEL) + hl_bands_sum (bands, HL_BAND_HEAT);
   add (&books, HL_BAND_REST, _("not accounted for"), balance (bands));
   bands->is_complete = bands->is_complete && bands->input > 0.0;
-  clean (bands);
+  hl_bands_clean (bands);
   g_free (books.is_service);
   return bands;
 }

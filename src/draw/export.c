@@ -7,6 +7,7 @@
 #include <stdio.h>
 #include <string.h>
 #include "draw/bands.h"
+#include "draw/exergy-bars.h"
 #include "draw/heat-diagram.h"
 #include "draw/sheet.h"
 #include "draw/state-diagram.h"
@@ -47,10 +48,17 @@ draw_state_diagram (cairo_t *cr, const HlTheme *theme, const HlSolution *solutio
 }
 
 static void
-draw_bands (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, double width, double height)
+draw_bands (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, HlBandsOf of, double width, double height)
 {
-  g_autoptr (HlBandsPicture) picture = hl_bands_picture_new (solution, hl_plant_units (hl_solution_plant (solution)), width, height);
+  g_autoptr (HlBandsPicture) picture = hl_bands_picture_new_of (solution, of, hl_plant_units (hl_solution_plant (solution)), width, height);
   hl_bands_picture_draw (picture, cr, theme, !hl_solution_is_solved (solution));
+}
+
+static void
+draw_exergy_bars (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, double width, double height)
+{
+  g_autoptr (HlExergyBars) bars = hl_exergy_bars_new (solution, hl_plant_units (hl_solution_plant (solution)), width, height);
+  hl_exergy_bars_draw (bars, cr, theme, !hl_solution_is_solved (solution));
 }
 
 static void
@@ -77,7 +85,13 @@ draw_picture (cairo_t *cr, const HlTheme *theme, const HlSolution *solution, HlP
       draw_state_diagram (cr, theme, solution, HL_STATE_DIAGRAM_PH, width, height);
       break;
     case HL_PICTURE_BANDS:
-      draw_bands (cr, theme, solution, width, height);
+      draw_bands (cr, theme, solution, HL_BANDS_ENERGY, width, height);
+      break;
+    case HL_PICTURE_EXERGY_BANDS:
+      draw_bands (cr, theme, solution, HL_BANDS_EXERGY, width, height);
+      break;
+    case HL_PICTURE_EXERGY_BARS:
+      draw_exergy_bars (cr, theme, solution, width, height);
       break;
     case HL_PICTURE_HEAT:
       draw_heat (cr, theme, solution, component, width, height);

@@ -12,6 +12,8 @@ typedef enum {
   HL_PICTURE_PH_DIAGRAM,
   HL_PICTURE_BANDS,               /* energy of the plant, widths to scale */
   HL_PICTURE_HEAT,                /* of one component, or composite curves of all exchangers */
+  HL_PICTURE_EXERGY_BANDS,
+  HL_PICTURE_EXERGY_BARS,         /* destroyed and lost, component by component */
 } HlPicture;
 typedef enum { HL_FORMAT_SVG, HL_FORMAT_PDF, HL_FORMAT_PNG } HlFormat;
 gboolean hl_format_from_path (const char *path, HlFormat *format, GError **error);   /* by its ending; says which endings do */

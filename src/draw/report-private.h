@@ -44,5 +44,9 @@ void hl_report_gap        (HlReport *report, double height);
 /* Columns of a table, -1 last, as wide as those of @like (nullable) need to be; @last_heading (nullable) adds an empty box to tick at the end of each row. */
 void hl_report_table      (HlReport *report, const HlTable *table, const HlTable *like, const int *columns, double size, const char *last_heading);
 
+/* report-second-law.c: nothing where nothing is known. */
+void hl_report_exchangers (HlReport *report);
+void hl_report_exergy     (HlReport *report);
+
 void hl_report_write      (HlReport *report);       /* the content */
 G_END_DECLS

@@ -211,7 +211,7 @@ write_streams (HlReport *report)
   g_autoptr (HlTable) streams = hl_table_streams (report->solution, units (report));
   hl_report_page (report, TRUE);
   hl_report_section (report, _("Streams"));
-  hl_report_table (report, streams, NULL, (const int[]) { 0, 1, 2, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, -1 }, HL_REPORT_SMALL - 0.6, NULL);
+  hl_report_table (report, streams, NULL, (const int[]) { 0, 1, 2, 4, 5, 6, 7, 8, 9, 10, 11, 12, 13, 14, -1 }, HL_REPORT_SMALL - 0.6, NULL);
 }
 
 static void
@@ -284,7 +284,9 @@ write_equipment (HlReport *report)
       const char *id = hl_table_cell (all, row, 0)->text, *name = hl_table_cell (all, row, 1)->text, *kind = hl_table_cell (all, row, 2)->text;
       heading = g_str_equal (name, kind) ? g_strdup_printf ("%s  %s", id, name) : g_strdup_printf ("%s  %s (%s)", id, name, kind);
       for (; row < all->n_rows && g_str_equal (hl_table_cell (all, row, 0)->text, id); row++)
-        g_array_append_val (rows, row);
+        /* The second law has a section of its own. */
+        if (strstr (hl_table_cell (all, row, 7)->text, ".exergy_") == NULL)
+          g_array_append_val (rows, row);
       own = hl_table_pick (all, (const guint *) (const void *) rows->data, rows->len);
       /* A short table is not torn apart. */
       hl_report_room (report, MIN (rows->len, 14) * 1.8 * HL_REPORT_SMALL + 5.0 * HL_REPORT_BODY);
@@ -397,6 +399,8 @@ hl_report_write (HlReport *report)
   write_performance (report);
   write_variants (report);
   write_equipment (report);
+  hl_report_exchangers (report);
+  hl_report_exergy (report);
   write_findings (report);
   write_assumed (report);
   write_origins (report);

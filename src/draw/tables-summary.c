@@ -47,11 +47,34 @@ of_component (const HlSolution *solution, const HlComponent *component, const ch
   return hl_component_quantity_kind (component, key) != NULL && hl_solution_value (solution, &address, &value) ? value : NAN;
 }
 
+/* Electrical over shaft power: generators, gearboxes; 1 where none is drawn. */
+static double
+result_of_generators (const HlSolution *solution)
+{
+  const HlPlant *plant = hl_solution_plant (solution);
+  double electrical = 0.0, mechanical = 0.0;
+  for (guint i = 0; i < hl_plant_n_components (plant); i++)
+    {
+      const HlComponent *component = hl_plant_component (plant, i);
+      if (component->kind->shaft != HL_SHAFT_GENERATOR)
+        continue;
+      electrical += of_component (solution, component, "power");
+      mechanical += of_component (solution, component, "shaft_power");
+    }
+  return mechanical > 0.0 ? electrical / mechanical : 1.0;
+}
+
 typedef gboolean (*IsMeant) (const HlComponent *component);
 static gboolean is_generator (const HlComponent *component) { return component->kind->shaft == HL_SHAFT_GENERATOR; }
 static gboolean has_motor (const HlComponent *component) { return hl_component_quantity_kind (component, "motor_power") != NULL; }
 static gboolean is_condenser (const HlComponent *component) { return g_str_equal (component->kind->id, "condenser"); }
 static gboolean is_user (const HlComponent *component) { return g_str_equal (component->kind->id, "steam_user"); }
+static gboolean has_fans (const HlComponent *component) { return hl_component_quantity_kind (component, "fan_power") != NULL; }
+static gboolean is_cooled_by_air (const HlComponent *component) { return g_str_equal (component->kind->id, "air_condenser"); }
+static gboolean is_district (const HlComponent *component) { return g_str_equal (component->kind->id, "district_heater"); }
+static gboolean is_tower (const HlComponent *component) { return g_str_equal (component->kind->id, "cooling_tower"); }
+static gboolean is_heater (const HlComponent *component) { return is_user (component) || is_district (component); }
+static gboolean is_rejecting (const HlComponent *component) { return is_condenser (component) || is_cooled_by_air (component); }
 static gboolean is_make_up (const HlComponent *component) { return g_str_equal (component->kind->id, "make_up"); }
 
 /* A line for each component that has a share of a sum, where the sum has several or @always. */
@@ -103,6 +126,7 @@ add_power (HlSummary *summary, const HlSolution *solution)
   add_parts (summary, solution, group, "gross_power", is_generator, "power", FALSE);
   add (summary, group, "own_consumption", _("Own consumption"), "", HL_DIMENSION_POWER, result (solution, "own_consumption"));
   add_parts (summary, solution, group, "own_consumption", has_motor, "motor_power", TRUE);
+  add_parts (summary, solution, group, "own_consumption", has_fans, "fan_power", TRUE);
   if (other > 0.0)
     {
       add (summary, group, "other_consumption", _("Other consumption"), _("not drawn"), HL_DIMENSION_POWER, other);
@@ -121,14 +145,57 @@ add_heat (HlSummary *summary, const HlSolution *solution, double fuel_hhv)
   add (summary, group, "fuel_flow", _("Fuel flow"), "", HL_DIMENSION_MASS_FLOW, result (solution, "fuel_flow"));
   add (summary, group, "heat_delivered", _("Heat delivered"), _("to process steam users and heat customers"), HL_DIMENSION_POWER,
        result (solution, "heat_delivered"));
-  add_parts (summary, solution, group, "heat_delivered", is_user, "heat", FALSE);
+  add_parts (summary, solution, group, "heat_delivered", is_heater, "heat", FALSE);
   add (summary, group, "cooling_duty", _("Cooling duty"), _("heat given to the surroundings by condensers"), HL_DIMENSION_POWER,
        result (solution, "heat_rejected"));
-  add_parts (summary, solution, group, "cooling_duty", is_condenser, "heat", FALSE);
+  add_parts (summary, solution, group, "cooling_duty", is_rejecting, "heat", FALSE);
+}
+
+/* Figures of the trade that mean one expansion from live steam to exhaust: NaN where several sections share it. */
+typedef struct { double theoretical_steam_rate, engine_efficiency; } Turbine;
+
+static gboolean
+state_at (const HlSolution *solution, const HlComponent *component, const char *port, HlState *state)
+{
+  const HlPlant *plant = hl_solution_plant (solution);
+  const HlStream *stream = hl_plant_stream_at (plant, component->id, port);
+  HlStreamResult result;
+  if (stream == NULL)
+    return FALSE;
+  hl_solution_stream (solution, (guint) hl_plant_stream_index (plant, stream->id), &result);
+  *state = result.state;
+  return result.has_state;
+}
+
+static Turbine
+read_turbine (const HlSolution *solution)
+{
+  const HlPlant *plant = hl_solution_plant (solution);
+  const HlComponent *only = NULL;
+  Turbine turbine = { NAN, NAN };
+  HlState in, out, ideal;
+  for (guint i = 0; i < hl_plant_n_components (plant); i++)
+    if (hl_plant_component (plant, i)->kind->shaft == HL_SHAFT_DRIVES)
+      {
+        if (only != NULL)
+          return turbine;
+        only = hl_plant_component (plant, i);
+      }
+  if (only == NULL || !state_at (solution, only, "inlet", &in) || !state_at (solution, only, "exhaust", &out))
+    return turbine;
+  const HlStream *stream = hl_plant_stream_at (plant, only->id, "inlet");
+  HlStreamResult result;
+  hl_solution_stream (solution, (guint) hl_plant_stream_index (plant, stream->id), &result);
+  if (hl_fluid_state_ps (result.fluid, out.p, in.s, &ideal) != HL_OK || !(in.h > ideal.h))
+    return turbine;
+  double generator = result_of_generators (solution);
+  turbine.theoretical_steam_rate = 1.0 / (in.h - ideal.h);
+  turbine.engine_efficiency = (in.h - out.h) * of_component (solution, only, "mechanical_efficiency") * generator / (in.h - ideal.h);
+  return turbine;
 }
 
 static void
-add_efficiencies (HlSummary *summary, const HlSolution *solution, gboolean has_fuel, double fuel_hhv)
+add_efficiencies (HlSummary *summary, const HlSolution *solution, gboolean has_fuel, double fuel_hhv, const Turbine *turbine)
 {
   const char *group = _("Efficiency"), *lhv = has_fuel ? _("fuel heat, LHV") : _("heat input"), *hhv = _("fuel heat, HHV");
   double gross = result (solution, "gross_power");
@@ -140,10 +207,16 @@ add_efficiencies (HlSummary *summary, const HlSolution *solution, gboolean has_f
   add (summary, group, "net_efficiency_hhv", _("Net efficiency"), hhv, HL_DIMENSION_RATIO, result (solution, "net_efficiency_hhv"));
   add (summary, group, "utilisation", _("Utilisation"), has_fuel ? _("net power and heat delivered, over fuel heat, LHV")
        : _("net power and heat delivered, over heat input"), HL_DIMENSION_RATIO, result (solution, "utilisation"));
+  add (summary, group, "engine_efficiency", _("Engine efficiency"), _("drop of the section times mechanical and generator efficiency, over its drop at constant entropy"),
+       HL_DIMENSION_RATIO, turbine->engine_efficiency);
+  add (summary, group, "exergy_efficiency", _("Exergy efficiency"), _("net power and exergy of heat delivered, over exergy input"), HL_DIMENSION_RATIO,
+       result (solution, "exergy_efficiency"));
+  add (summary, group, "carnot_efficiency", _("Carnot efficiency"), _("lowest and highest temperature of the working fluid"), HL_DIMENSION_RATIO,
+       result (solution, "carnot_efficiency"));
 }
 
 static void
-add_rates (HlSummary *summary, const HlSolution *solution, double fuel, double fuel_hhv)
+add_rates (HlSummary *summary, const HlSolution *solution, double fuel, double fuel_hhv, const Turbine *turbine)
 {
   const char *group = _("Rates");
   double gross = result (solution, "gross_power"), net = result (solution, "net_power"), heat = result (solution, "heat_input");
@@ -164,6 +237,8 @@ add_rates (HlSummary *summary, const HlSolution *solution, double fuel, double f
       add (summary, group, "plant_heat_rate_net_hhv", _("Net plant heat rate"), _("fuel heat, HHV"), HL_DIMENSION_HEAT_RATE, fuel_hhv / net);
     }
   add (summary, group, "steam_rate", _("Steam rate"), _("live steam over gross power"), HL_DIMENSION_STEAM_RATE, result (solution, "steam_rate"));
+  add (summary, group, "steam_rate_theoretical", _("Theoretical steam rate"), _("one over the section's drop at constant entropy"), HL_DIMENSION_STEAM_RATE,
+       turbine->theoretical_steam_rate);
 }
 
 static void
@@ -173,9 +248,21 @@ add_flows (HlSummary *summary, const HlSolution *solution)
   add (summary, group, "live_steam", _("Live steam"), "", HL_DIMENSION_MASS_FLOW,
        result (solution, "steam_rate") * result (solution, "gross_power"));
   add (summary, group, "make_up", _("Make-up water"), "", HL_DIMENSION_MASS_FLOW, sum_over (solution, is_make_up, "outlet.m"));
+  add (summary, group, "tower_make_up", _("Make-up of cooling towers"), "", HL_DIMENSION_MASS_FLOW, sum_over (solution, is_tower, "make_up_flow"));
   add (summary, group, "cooling_water", _("Cooling water"), "", HL_DIMENSION_MASS_FLOW, sum_over (solution, is_condenser, "cooling_flow"));
   add (summary, group, "exhaust_moisture", _("Exhaust moisture"), _("wettest turbine exhaust"), HL_DIMENSION_RATIO,
        result (solution, "exhaust_moisture"));
+}
+
+static void
+add_exergy (HlSummary *summary, const HlSolution *solution)
+{
+  const char *group = _("Second law");
+  add (summary, group, "exergy_input", _("Exergy input"), _("fuel, heat, streams and electricity that come in"), HL_DIMENSION_POWER, result (solution, "exergy_input"));
+  add (summary, group, "exergy_product", _("Exergy made"), _("net power and exergy of heat delivered"), HL_DIMENSION_POWER, result (solution, "exergy_product"));
+  add (summary, group, "exergy_loss", _("Exergy lost"), _("leaves unused"), HL_DIMENSION_POWER, result (solution, "exergy_loss"));
+  add (summary, group, "exergy_destruction", _("Exergy destroyed"), _("dead state temperature times entropy produced"), HL_DIMENSION_POWER,
+       result (solution, "exergy_destruction"));
 }
 
 HlSummary *
@@ -191,9 +278,11 @@ hl_summary_new (const HlSolution *solution)
       double fuel = result (solution, "fuel_heat"), fuel_hhv = result (solution, "net_power") / result (solution, "net_efficiency_hhv");
       add_power (summary, solution);
       add_heat (summary, solution, fuel_hhv);
-      add_efficiencies (summary, solution, fuel > 0.0, fuel_hhv);
-      add_rates (summary, solution, fuel, fuel_hhv);
+      Turbine turbine = read_turbine (solution);
+      add_efficiencies (summary, solution, fuel > 0.0, fuel_hhv, &turbine);
+      add_rates (summary, solution, fuel, fuel_hhv, &turbine);
       add_flows (summary, solution);
+      add_exergy (summary, solution);
     }
   return summary;
 }

@@ -48,6 +48,8 @@ HlTable           *hl_table_streams    (const HlSolution *solution, HlUnitSet un
 HlTable           *hl_table_components (const HlSolution *solution, HlUnitSet units);   /* every known quantity of each component */
 /* Values that the plant file carries, with their sources; only the assumed ones where @assumed_only. */
 HlTable           *hl_table_values     (const HlSolution *solution, HlUnitSet units, gboolean assumed_only);
+HlTable           *hl_table_exergy      (const HlSolution *solution, HlUnitSet units);   /* spent, made, lost, destroyed by component, the plant last */
+HlTable           *hl_table_exchangers  (const HlSolution *solution, HlUnitSet units);   /* zones of every exchanger with UA and mean difference */
 HlTable           *hl_table_findings   (const HlSolution *solution);
 HlTable           *hl_table_pick       (const HlTable *table, const guint *rows, guint n);    /* these rows only */
 void               hl_table_free       (HlTable *table);

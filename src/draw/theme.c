@@ -68,29 +68,6 @@ static const struct {
   [HL_LOOK_GAS]     = { G_STRUCT_OFFSET (HlTheme, gas),     2.0, { 7.0, 4.0 },  N_("gas") },
 };
 
-HlLook
-hl_stream_look (const HlStreamResult *result)
-{
-  if (result == NULL || !result->has_state)
-    return HL_LOOK_UNKNOWN;
-  switch (result->state.phase)
-    {
-    case HL_PHASE_LIQUID:
-      return HL_LOOK_WATER;
-    case HL_PHASE_TWO_PHASE:
-      /* The ends of the saturation line belong to their one-phase neighbours: a drain is water, drum steam is steam. */
-      if (result->state.x < 1e-6)
-        return HL_LOOK_WATER;
-      return result->state.x > 1.0 - 1e-6 ? HL_LOOK_STEAM : HL_LOOK_WET;
-    case HL_PHASE_GAS:
-      return HL_LOOK_GAS;
-    case HL_PHASE_VAPOUR:
-    case HL_PHASE_SUPERCRITICAL:
-    default:
-      return HL_LOOK_STEAM;
-    }
-}
-
 const char *
 hl_look_name (HlLook look)
 {

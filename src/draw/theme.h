@@ -3,6 +3,7 @@
 #pragma once
 #include <cairo.h>
 #include "engine/engine.h"
+#include "engine/heat-curve.h"
 G_BEGIN_DECLS
 
 typedef struct { double r, g, b, a; } HlColour;
@@ -18,17 +19,7 @@ typedef struct {
 const HlTheme *hl_theme (HlThemeId id);
 void           hl_set_colour (cairo_t *cr, const HlColour *colour);
 
-/* How a line looks: medium and state together. */
-typedef enum {
-  HL_LOOK_UNKNOWN,       /* state not known */
-  HL_LOOK_STEAM,
-  HL_LOOK_WET,
-  HL_LOOK_WATER,
-  HL_LOOK_COOLING,       /* water that carries heat away: only the plant tells, not the state */
-  HL_LOOK_GAS,
-  HL_N_LOOKS
-} HlLook;
-HlLook          hl_stream_look (const HlStreamResult *result);            /* from the state alone: never COOLING; NULL: UNKNOWN */
+/* How a line looks: medium and state together, HlLook. */
 const char     *hl_look_name   (HlLook look);                             /* translated, for legends */
 const HlColour *hl_look_colour (const HlTheme *theme, HlLook look, gboolean is_stale);
 void            hl_set_look_pen (cairo_t *cr, const HlTheme *theme, HlLook look, gboolean is_stale);

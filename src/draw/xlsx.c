@@ -120,9 +120,11 @@ fill_book (const Book *book, const HlSolution *solution, const HlComparison *com
   g_autoptr (HlTable) summary = hl_table_summary (solution, units), streams = hl_table_streams (solution, units);
   g_autoptr (HlTable) components = hl_table_components (solution, units), values = hl_table_values (solution, units, FALSE);
   g_autoptr (HlTable) findings = hl_table_findings (solution), variants = comparison != NULL ? hl_table_variants (comparison) : NULL;
+  g_autoptr (HlTable) exergy = hl_table_exergy (solution, units), exchangers = hl_table_exchangers (solution, units);
   lxw_doc_properties properties = { .title = (char *) title, .comments = (char *) "Heatloom " HL_VERSION, .created = FIXED_DATE };
   workbook_set_properties (book->book, &properties);
   return add_sheet (book, summary, title, error) && add_sheet (book, streams, title, error) && add_sheet (book, components, title, error)
+         && add_sheet (book, exchangers, title, error) && add_sheet (book, exergy, title, error)
          && add_sheet (book, values, title, error) && add_sheet (book, findings, title, error)
          && (variants == NULL || add_sheet (book, variants, title, error));
 }

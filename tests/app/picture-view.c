@@ -22,6 +22,20 @@ test_heat_follows_the_selection (void)
 }
 
 static void
+test_bands_show_energy_exergy_and_bars (void)
+{
+  HlSession *session = loop_session ();
+  GtkWidget *view = hl_bands_view_new (session), *window = window_with (view);
+
+  for (HlBandsPage page = HL_BANDS_PAGE_ENERGY; page <= HL_BANDS_PAGE_BARS; page++)
+    {
+      hl_bands_view_show (HL_PICTURE_VIEW (view), page);
+      gtk_test_widget_wait_for_draw (window);
+    }
+  close_window (window, session);
+}
+
+static void
 test_bands_draw_an_empty_sheet_too (void)
 {
   HlSession *session = loop_session ();
@@ -38,6 +52,7 @@ main (int argc, char **argv)
   if (!test_init (&argc, &argv))
     return 0;
   g_test_add_func ("/app/picture-view/heat follows the selection", test_heat_follows_the_selection);
+  g_test_add_func ("/app/picture-view/bands show energy, exergy and bars", test_bands_show_energy_exergy_and_bars);
   g_test_add_func ("/app/picture-view/bands draw an empty sheet too", test_bands_draw_an_empty_sheet_too);
   return g_test_run ();
 }

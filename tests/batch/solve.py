@@ -49,7 +49,7 @@ def test_sensitivity_of_what_is_not_there():
 
 def test_json_has_the_members_of_the_contract():
     found = solved()
-    assert list(found) == ["solved", "plant", "streams", "components", "exergy", "findings", "yielded"], list(found)
+    assert list(found) == ["solved", "plant", "streams", "components", "performance", "exchangers", "exergy", "findings", "yielded"], list(found)
     assert found["solved"] is True and found["yielded"] == []
     assert list(found["streams"]) == ["1", "2", "3", "4"] and list(found["components"]) == ["B1", "T1", "C1", "P1"]
     for stream in found["streams"].values():
@@ -74,6 +74,22 @@ def test_exergy_comes_in_and_is_made_lost_or_destroyed():
     turbine = found["components"]["T1"]
     close(turbine["exergy_fuel_W"], live["m_kg_s"] * (live["e_J_kg"] - exhaust["e_J_kg"]))
     close(turbine["exergy_product_W"], turbine["power_W"])
+
+
+def test_performance_and_exchangers_are_in_the_json():
+    found = solved()
+    performance = found["performance"]
+    close(performance["net_power_W"], found["plant"]["net_power_W"])
+    live, exhaust, condensate, _ = (found["streams"][id] for id in "1234")
+    # One section: the engine efficiency is that of the section, as far as shaft and generator lose nothing beside.
+    drop = live["h_J_kg"] - exhaust["h_J_kg"]
+    close(performance["engine_efficiency"] / (drop * performance["steam_rate_theoretical_kg_J"]), found["components"]["T1"]["mechanical_efficiency"])
+    for exchanger in found["exchangers"].values():
+        close(sum(zone["heat_W"] for zone in exchanger["zones"]), exchanger["heat_W"])
+        for zone in exchanger["zones"]:
+            close(zone["UA_W_K"] * zone["mean_difference_K"], zone["heat_W"])
+        assert exchanger["hot"][0][0] == 0 and exchanger["cold"][0][0] == 0
+        assert all(after[0] >= before[0] for before, after in zip(exchanger["hot"], exchanger["hot"][1:]))
 
 
 def test_json_numbers_are_those_of_the_plant():
@@ -201,7 +217,7 @@ def test_every_output_goes_to_files():
 
 
 def test_pictures_have_the_format_of_their_ending():
-    for kind in (["--drawing"], ["--diagram", "ts"], ["--diagram", "hs"], ["--diagram", "ph"], ["--heat", "C1"], ["--heat", "all"], ["--bands"]):
+    for kind in (["--drawing"], ["--diagram", "ts"], ["--diagram", "hs"], ["--diagram", "ph"], ["--heat", "C1"], ["--heat", "all"], ["--bands"], ["--exergy-bands"], ["--exergy-bars"]):
         for ending, start in (("svg", b"<?xml"), ("pdf", b"%PDF-"), ("png", b"\x89PNG\r\n\x1a\n")):
             batch("solve", plant("loop.heatloom"), *kind, f"x.{ending}")
             with open(f"x.{ending}", "rb") as file:

@@ -1,11 +1,35 @@
 /* From the processes of a component to its curves of temperature over duty.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "draw/heat-diagram.h"
+#include "engine/heat-curve.h"
+#include "engine/equations.h"
 #include <math.h>
 #include <string.h>
 
 #define N_PIECES 48        /* of a process, before phase changes are located */
 #define FLAT     1e-5      /* K: less is a jump of heat at one temperature */
+
+HlLook
+hl_stream_look (const HlStreamResult *result)
+{
+  if (result == NULL || !result->has_state)
+    return HL_LOOK_UNKNOWN;
+  switch (result->state.phase)
+    {
+    case HL_PHASE_LIQUID:
+      return HL_LOOK_WATER;
+    case HL_PHASE_TWO_PHASE:
+      /* The ends of the saturation line belong to their one-phase neighbours: a drain is water, drum steam is steam. */
+      if (result->state.x < 1e-6)
+        return HL_LOOK_WATER;
+      return result->state.x > 1.0 - 1e-6 ? HL_LOOK_STEAM : HL_LOOK_WET;
+    case HL_PHASE_GAS:
+      return HL_LOOK_GAS;
+    case HL_PHASE_VAPOUR:
+    case HL_PHASE_SUPERCRITICAL:
+    default:
+      return HL_LOOK_STEAM;
+    }
+}
 
 /* A stretch of a process: heat between two temperatures. */
 typedef struct { double T_low, T_high, heat; HlLook look; } Stretch;
@@ -335,6 +359,72 @@ add_borders (HlHeatCurve *curve, const GArray *side)
   g_array_sort (curve->borders, compare_doubles);
 }
 
+/* --- zones ---------------------------------------------------------------------------- */
+
+/* A curve just before and just behind a heat, where it may step. */
+static double
+temperature_near (const GArray *side, double heat, double slack)
+{
+  return hl_heat_curve_at (side, MAX (heat + slack, 0.0));
+}
+
+static HlLook
+look_within (const GArray *side, double middle)
+{
+  for (guint i = 1; i < side->len; i++)
+    if (g_array_index (side, HlHeatPoint, i).heat >= middle)
+      return g_array_index (side, HlHeatPoint, i).look;
+  return HL_LOOK_UNKNOWN;
+}
+
+/* Heat over logarithmic mean difference, piece by piece between the points of both curves. */
+static double
+conductance_between (const HlHeatCurve *curve, double from, double to, double slack)
+{
+  g_autoptr (GArray) cuts = g_array_new (FALSE, FALSE, sizeof (double));
+  const GArray *sides[] = { curve->hot, curve->cold };
+  double sum = 0.0;
+  g_array_append_val (cuts, from);
+  g_array_append_val (cuts, to);
+  for (guint s = 0; s < 2; s++)
+    for (guint i = 0; i < sides[s]->len; i++)
+      {
+        double heat = g_array_index (sides[s], HlHeatPoint, i).heat;
+        if (heat > from + slack && heat < to - slack)
+          g_array_append_val (cuts, heat);
+      }
+  g_array_sort (cuts, compare_doubles);
+  for (guint i = 1; i < cuts->len; i++)
+    {
+      double a = g_array_index (cuts, double, i - 1), b = g_array_index (cuts, double, i), unused[2];
+      if (!(b > a + slack))
+        continue;
+      double d_a = temperature_near (curve->hot, a, slack) - temperature_near (curve->cold, a, slack);
+      double d_b = temperature_near (curve->hot, b, -slack) - temperature_near (curve->cold, b, -slack);
+      if (!(d_a > 0.0 && d_b > 0.0))
+        return NAN;
+      sum += (b - a) / hl_log_mean (d_a, d_b, &unused[0], &unused[1]);
+    }
+  return sum;
+}
+
+static void
+find_zones (HlHeatCurve *curve)
+{
+  double from = 0.0, slack = 1e-9 * curve->duty;
+  for (guint k = 0; k <= curve->borders->len; k++)
+    {
+      double to = k < curve->borders->len ? g_array_index (curve->borders, double, k) : curve->duty;
+      HlHeatZone zone = { .heat = to - from, .hot_out = temperature_near (curve->hot, from, slack), .hot_in = temperature_near (curve->hot, to, -slack),
+                          .cold_in = temperature_near (curve->cold, from, slack), .cold_out = temperature_near (curve->cold, to, -slack),
+                          .hot = look_within (curve->hot, (from + to) / 2.0), .cold = look_within (curve->cold, (from + to) / 2.0) };
+      zone.conductance = conductance_between (curve, from, to, slack);
+      zone.mean_difference = zone.heat / zone.conductance;
+      g_array_append_val (curve->zones, zone);
+      from = to;
+    }
+}
+
 HlHeatCurve *
 hl_heat_curve_new (const HlSolution *solution, int component)
 {
@@ -351,6 +441,7 @@ hl_heat_curve_new (const HlSolution *solution, int component)
   curve->hot = g_array_new (FALSE, FALSE, sizeof (HlHeatPoint));
   curve->cold = g_array_new (FALSE, FALSE, sizeof (HlHeatPoint));
   curve->borders = g_array_new (FALSE, FALSE, sizeof (double));
+  curve->zones = g_array_new (FALSE, FALSE, sizeof (HlHeatZone));
   curve->duty = MAX (heat_of (&hot), heat_of (&cold));
   if (hot.n_processes > 0)
     make_curve (&hot, curve->hot);
@@ -370,6 +461,8 @@ hl_heat_curve_new (const HlSolution *solution, int component)
     {
       add_borders (curve, curve->hot);
       add_borders (curve, curve->cold);
+      if (curve->hot->len > 1 && curve->cold->len > 1)
+        find_zones (curve);
     }
   return curve;
 }
@@ -382,6 +475,7 @@ hl_heat_curve_free (HlHeatCurve *curve)
   g_array_unref (curve->hot);
   g_array_unref (curve->cold);
   g_array_unref (curve->borders);
+  g_array_unref (curve->zones);
   g_free (curve);
 }
 
