@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "app/hl-diagram-view.h"
 #include "app/hl-appearance.h"
+#include "app/hl-diagram-extras.h"
 #include "app/hl-diagram-ghost.h"
 #include "app/hl-lever.h"
 #include "app/hl-pane.h"
@@ -17,7 +18,7 @@
 struct _HlDiagramView {
   GtkWidget       parent_instance;
   HlSession      *session;
-  GtkWidget      *readout, *empty, *chooser;
+  GtkWidget      *readout, *empty, *chooser, *extras;
   HlStateDiagramKind kind;
   HlStateDiagram *diagram;          /* of shown, at the size below; NULL: to be made */
   HlSolution     *shown;
@@ -257,7 +258,8 @@ make_diagram (HlDiagramView *self)
   if (self->ghost != NULL)
     self->diagram = hl_state_diagram_new_on (self->shown, self->ghost);
   else
-    self->diagram = hl_state_diagram_new_of_kind (self->shown, self->kind, hl_plant_units (shown_plant (self)), width, height);
+    self->diagram = hl_state_diagram_new_with (self->shown, self->kind, hl_diagram_extras_button_flags (self->extras), hl_plant_units (shown_plant (self)),
+                                               width, height);
   if (hl_diagram_ghost_solution (self->other) != NULL)
     self->beneath = hl_state_diagram_new_on (hl_diagram_ghost_solution (self->other), self->diagram);
   trace_places (self);
@@ -533,6 +535,9 @@ hl_diagram_view_allocate (GtkWidget *widget, int width, int height, int baseline
   gtk_widget_get_preferred_size (self->chooser, NULL, &size);
   place (self->chooser, 56, 8);
   left += size.width + 8;
+  gtk_widget_get_preferred_size (self->extras, NULL, &size);
+  place (self->extras, left, 8);
+  left += size.width + 8;
   if (gtk_widget_should_layout (hl_diagram_ghost_chooser (self->other)))
     {
       gtk_widget_get_preferred_size (hl_diagram_ghost_chooser (self->other), NULL, &size);
@@ -591,6 +596,14 @@ chosen_cb (HlDiagramView *self)
   gtk_widget_queue_draw (GTK_WIDGET (self));
 }
 
+static void
+extras_changed_cb (gpointer data)
+{
+  HlDiagramView *self = data;
+  forget_diagram (self);
+  gtk_widget_queue_draw (GTK_WIDGET (self));
+}
+
 static GtkWidget *
 build_chooser (HlDiagramView *self)
 {
@@ -625,6 +638,8 @@ hl_diagram_view_init (HlDiagramView *self)
   gtk_widget_set_parent (self->readout, GTK_WIDGET (self));
   self->chooser = build_chooser (self);
   gtk_widget_set_parent (self->chooser, GTK_WIDGET (self));
+  self->extras = hl_diagram_extras_button_new (extras_changed_cb, self);
+  gtk_widget_set_parent (self->extras, GTK_WIDGET (self));
   self->empty = hl_pane_label (_("States appear here as soon as the plant solves."), "quiet");
   gtk_widget_set_parent (self->empty, GTK_WIDGET (self));
   g_signal_connect (motion, "enter", G_CALLBACK (motion_cb), self);

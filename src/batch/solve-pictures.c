@@ -43,6 +43,13 @@ gboolean
 hl_check_pictures (const HlPlant *plant, const HlArguments *arguments, GError **error)
 {
   char *const *values;
+  const char *shown = hl_arguments_value (arguments, "diagram-shows");
+  guint extras;
+  if (shown != NULL && !hl_diagram_extras_parse (shown, &extras))
+    {
+      g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("--diagram-shows: “%s” holds something else than areas, sources, table and isobars, parted by commas"), shown);
+      return FALSE;
+    }
   for (guint n = 0; (values = hl_arguments_option (arguments, "diagram", n)) != NULL; n++)
     if (!check_diagram (values, error))
       return FALSE;
@@ -71,14 +78,20 @@ hl_write_picture (const HlSolution *solution, HlPicture picture, int component, 
 static gboolean
 write_diagrams (const HlSolution *solution, const HlArguments *arguments, GError **error)
 {
-  static const HlPicture pictures[HL_N_STATE_DIAGRAMS] = {
-    [HL_STATE_DIAGRAM_TS] = HL_PICTURE_STATE_DIAGRAM, [HL_STATE_DIAGRAM_HS] = HL_PICTURE_HS_DIAGRAM, [HL_STATE_DIAGRAM_PH] = HL_PICTURE_PH_DIAGRAM,
-  };
+  const char *shown = hl_arguments_value (arguments, "diagram-shows");
   char *const *diagram;
+  guint extras = 0;
+  if (shown != NULL)
+    hl_diagram_extras_parse (shown, &extras);
   for (guint n = 0; (diagram = hl_arguments_option (arguments, "diagram", n)) != NULL; n++)
     {
       HlStateDiagramKind kind;
-      if (hl_state_diagram_kind_from_id (diagram[0], &kind) && !hl_write_picture (solution, pictures[kind], -1, diagram[1], error))
+      HlFormat format = HL_FORMAT_SVG;
+      if (!hl_state_diagram_kind_from_id (diagram[0], &kind))
+        continue;
+      if (strcmp (diagram[1], "-") != 0 && !hl_format_from_path (diagram[1], &format, error))
+        return FALSE;
+      if (!hl_export_diagram_file (solution, kind, extras, format, HL_THEME_PAPER, diagram[1], error))
         return FALSE;
     }
   return TRUE;

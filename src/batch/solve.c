@@ -131,6 +131,7 @@ static const HlBatchOption solve_options[] = {
   { "scale", N_("NUMBER"), FALSE, N_("scale of the drawing on its sheet; as large as fits when it is not given") },
   { "field", N_("NAME=TEXT"), TRUE, N_("fill a field of the sheet: variant, case, date, revision, drawn, checked, approved; may be repeated") },
   { "diagram", N_("ts|hs|ph FILE"), TRUE, N_("write a state diagram: temperature-entropy, enthalpy-entropy, pressure-enthalpy; may be repeated") },
+  { "diagram-shows", N_("LIST"), FALSE, N_("show beside the cycle: areas, sources, table, isobars; parted by commas") },
   { "heat", N_("COMPONENT FILE"), TRUE, N_("write temperature over heat of an exchanger, or of all together (all); may be repeated") },
   { "bands", N_("FILE"), FALSE, N_("write where the energy of the plant comes from and goes, as bands to scale") },
   { "exergy-bands", N_("FILE"), FALSE, N_("write where its exergy comes from, is destroyed, lost and made, as bands to scale") },

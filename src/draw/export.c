@@ -295,6 +295,27 @@ hl_export_component_file (const HlSolution *solution, HlPicture picture, int com
   return bytes != NULL && hl_export_bytes_file (bytes, path, error);
 }
 
+typedef struct { HlTheme theme; HlStateDiagram *diagram; gboolean is_stale; } Diagram;
+
+static void
+draw_diagram_cb (cairo_t *cr, gpointer data)
+{
+  const Diagram *what = data;
+  hl_state_diagram_draw (what->diagram, cr, &what->theme, what->is_stale, -1);
+}
+
+gboolean
+hl_export_diagram_file (const HlSolution *solution, HlStateDiagramKind kind, guint extras, HlFormat format, HlThemeId theme, const char *path, GError **error)
+{
+  const HlPlant *plant = hl_solution_plant (solution);
+  g_autoptr (HlStateDiagram) diagram = hl_state_diagram_new_with (solution, kind, extras, hl_plant_units (plant), DIAGRAM_WIDTH, DIAGRAM_HEIGHT);
+  Diagram what = { *hl_theme (theme), diagram, !hl_solution_is_solved (solution) };
+  what.theme.font = HL_EXPORT_FONT;
+  g_autoptr (GBytes) bytes = hl_export_drawn (format, hl_plant_title (plant), DIAGRAM_WIDTH, DIAGRAM_HEIGHT, format == HL_FORMAT_PNG ? 2.0 : 1.0,
+                                              draw_diagram_cb, &what, error);
+  return bytes != NULL && hl_export_bytes_file (bytes, path, error);
+}
+
 gboolean
 hl_export_bytes_file (GBytes *bytes, const char *path, GError **error)
 {

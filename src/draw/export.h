@@ -2,7 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #pragma once
 #include <gio/gio.h>
-#include "draw/theme.h"
+#include "draw/state-diagram.h"
 G_BEGIN_DECLS
 
 typedef enum {
@@ -24,6 +24,8 @@ GBytes  *hl_export_picture      (const HlSolution *solution, HlPicture picture, 
 /* The same of one component, an index of the plant; -1: of all. */
 GBytes  *hl_export_component    (const HlSolution *solution, HlPicture picture, int component, HlFormat format, HlThemeId theme, double width, double height, double scale, GError **error);
 gboolean hl_export_component_file (const HlSolution *solution, HlPicture picture, int component, HlFormat format, HlThemeId theme, const char *path, GError **error);
+/* A state diagram with HlDiagramExtras. */
+gboolean hl_export_diagram_file (const HlSolution *solution, HlStateDiagramKind kind, guint extras, HlFormat format, HlThemeId theme, const char *path, GError **error);
 /* To a file (temporary file, then renamed); path "-" is standard output. */
 gboolean hl_export_picture_file (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, const char *path, GError **error);
 /* Any drawing of @width x @height pixels, drawn once by @draw. */

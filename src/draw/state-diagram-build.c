@@ -35,6 +35,9 @@ cycle_ranges (const HlCycle *cycle, Range *s, Range *T)
       if (process->has_isentropic)
         range_take (T, process->isentropic.T);
     }
+  for (guint i = 0; i < cycle->sources->len; i++)
+    for (guint k = 0; k < hl_plot_series_n (cycle->sources->pdata[i]); k++)
+      range_take (T, hl_plot_series_point (cycle->sources->pdata[i], k)->y);
 }
 
 /* Shows the cycle, the dome from somewhat below the coldest state to its top, and air above the hottest state. */
@@ -144,7 +147,7 @@ void
 hl_state_diagram_set_axes (HlStateDiagram *diagram, const HlCycle *cycle)
 {
   double size = diagram->text_size, left = hl_plot_axis_room_left (size), below = hl_plot_axis_room_below (size);
-  double right = 1.3 * size, above = 0.8 * size, text_share = MIN (2.4 * size / MAX (diagram->height - above - below, 1.0), 0.2);
+  double right = 1.3 * size + diagram->panel, above = 0.8 * size, text_share = MIN (2.4 * size / MAX (diagram->height - above - below, 1.0), 0.2);
   double spacing_across, spacing_up, bottom;
   HlDimension across, up;
   Range x, y;
@@ -302,6 +305,14 @@ void
 hl_state_diagram_add_paths (HlStateDiagram *diagram, const HlCycle *cycle)
 {
   double largest = largest_flow (cycle);
+  for (guint i = 0; i < cycle->sources->len; i++)
+    {
+      const HlPlotSeries *from = cycle->sources->pdata[i];
+      HlPlotSeries *series = hl_plot_series_new (from->colour, from->dash, from->width);
+      for (guint k = 0; k < hl_plot_series_n (from); k++)
+        hl_plot_series_add (series, hl_plot_series_point (from, k)->x, hl_plot_series_point (from, k)->y);
+      hl_plot_layer_add (diagram->paths, series);
+    }
   for (guint i = 0; i < cycle->processes->len; i++)
     add_ideal_drop (diagram, &g_array_index (cycle->processes, HlProcess, i));
   /* Side flows first, so that the main flow lies on top. */
@@ -363,12 +374,17 @@ hl_state_diagram_from_cycle_on (const HlCycle *cycle, const HlStateDiagram *othe
   diagram->texts = g_array_new (FALSE, TRUE, sizeof (HlDiagramText));
   g_array_set_clear_func (diagram->texts, clear_text);
   diagram->gaps = g_array_new (FALSE, TRUE, sizeof (HlBox));
+  diagram->extras = cycle->extras;
+  diagram->areas = g_ptr_array_new_with_free_func ((GDestroyNotify) hl_plot_series_free);
+  diagram->panel = hl_state_table_set (&diagram->table, cycle, diagram->width, diagram->height, diagram->text_size);
   hl_state_diagram_set_axes (diagram, cycle);
   if (other != NULL)
     {
       diagram->x_axis = other->x_axis;
       diagram->y_axis = other->y_axis;
+      diagram->frame = other->frame;
     }
+  hl_state_diagram_add_areas (diagram, cycle);
   hl_state_diagram_add_dome (diagram);
   hl_state_diagram_add_paths (diagram, cycle);
   add_marks_and_texts (diagram, cycle);

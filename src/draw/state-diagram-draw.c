@@ -185,6 +185,7 @@ hl_state_diagram_draw_over (const HlStateDiagram *diagram, const HlStateDiagram 
   cairo_save (cr);
   draw_ground (diagram, cr, theme);
   fill_dome (diagram, cr, theme);
+  hl_state_diagram_draw_areas (diagram, cr, theme, is_stale);
   hl_plot_axes_draw_grid (cr, theme, &diagram->x_axis, &diagram->y_axis);
   hl_plot_layer_draw (diagram->background, cr, theme, &diagram->x_axis, &diagram->y_axis,
                       (const HlBox *) (gpointer) diagram->gaps->data, diagram->gaps->len, is_stale);
@@ -208,5 +209,6 @@ hl_state_diagram_draw_over (const HlStateDiagram *diagram, const HlStateDiagram 
         draw_dot (mark, cr, theme, is_stale, is_selected);
         draw_number (diagram, mark, cr, theme, is_stale, is_selected);
       }
+  hl_state_diagram_draw_table (diagram, cr, theme);
   cairo_restore (cr);
 }

@@ -358,6 +358,23 @@ cut_series (const HlStateDiagram *diagram, HlPlotSeries *series, double end)
     }
 }
 
+/* Round pressures beside the cycle's own, where they do not crowd each other. */
+static void
+add_round_isobars (const HlStateDiagram *diagram, const HlCycle *cycle, GArray *isobars)
+{
+  g_autoptr (GArray) round = usual_isobars (diagram, cycle);
+  guint n = isobars->len;
+  for (guint i = 0; i < round->len; i++)
+    {
+      Isobar isobar = g_array_index (round, Isobar, i);
+      gboolean is_free = TRUE;
+      for (guint k = 0; k < n; k++)
+        is_free = is_free && fabs (log (g_array_index (isobars, Isobar, k).p / isobar.p)) > 0.5;
+      if (is_free)
+        g_array_append_val (isobars, isobar);
+    }
+}
+
 static void
 add_isobars (HlStateDiagram *diagram, const HlCycle *cycle, GArray *lines)
 {
@@ -367,6 +384,8 @@ add_isobars (HlStateDiagram *diagram, const HlCycle *cycle, GArray *lines)
       g_array_unref (isobars);
       isobars = usual_isobars (diagram, cycle);
     }
+  else if (cycle->extras & HL_DIAGRAM_ISOBARS)
+    add_round_isobars (diagram, cycle, isobars);
   for (guint i = 0; i < isobars->len; i++)
     {
       Line line = make_isobar (diagram, cycle, &g_array_index (isobars, Isobar, i));

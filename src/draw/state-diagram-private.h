@@ -19,7 +19,10 @@ typedef struct {
   HlStateDiagramKind kind;      /* T-s unless set */
   GArray        *points;        /* of HlCyclePoint */
   GArray        *processes;     /* of HlProcess; none of a service circuit */
+  guint          extras;        /* HlDiagramExtras */
+  GPtrArray     *sources;       /* of HlPlotSeries: entropy and temperature of heat sources and sinks */
 } HlCycle;
+void            hl_cycle_add_sources   (HlCycle *cycle, const HlSolution *solution);
 HlCycle        *hl_cycle_new           (const HlFluid *fluid, HlUnitSet units);
 HlCycle        *hl_cycle_from_solution (const HlSolution *solution, HlUnitSet units);
 void            hl_cycle_free          (HlCycle *cycle);
@@ -87,7 +90,22 @@ typedef struct {
   HlBox      box;
 } HlDiagramText;
 
+/* The states in figures. */
+typedef struct {
+  guint    n_rows, n_columns;
+  char   **cells;               /* [n_rows n_columns] */
+  double   widths[8], width, row, size;
+  gboolean is_cut;              /* more states than room */
+} HlStateTable;
+/* Returns the width that it takes from the diagram; 0 where there is none. */
+double hl_state_table_set   (HlStateTable *table, const HlCycle *cycle, double width, double height, double text_size);
+void   hl_state_table_clear (HlStateTable *table);
+
 struct _HlStateDiagram {
+  guint          extras;
+  GPtrArray     *areas;                    /* of HlPlotSeries: upper edges, down to the axis */
+  HlStateTable   table;
+  double         panel;                    /* width at the right that the table takes */
   HlStateDiagramKind kind;
   double         width, height;
   double         text_size, number_size;   /* pixels */
@@ -106,6 +124,9 @@ HlStateDiagram *hl_state_diagram_from_cycle (const HlCycle *cycle, double width,
 /* On the axes of @other, or on its own where that is NULL. */
 HlStateDiagram *hl_state_diagram_from_cycle_on (const HlCycle *cycle, const HlStateDiagram *other, double width, double height);
 /* Steps of the above, in this order. */
+void            hl_state_diagram_add_areas  (HlStateDiagram *diagram, const HlCycle *cycle);
+void            hl_state_diagram_draw_areas (const HlStateDiagram *diagram, cairo_t *cr, const HlTheme *theme, gboolean is_stale);
+void            hl_state_diagram_draw_table (const HlStateDiagram *diagram, cairo_t *cr, const HlTheme *theme);
 void            hl_state_diagram_set_axes   (HlStateDiagram *diagram, const HlCycle *cycle);
 void            hl_state_diagram_add_dome   (HlStateDiagram *diagram);
 void            hl_state_diagram_add_paths  (HlStateDiagram *diagram, const HlCycle *cycle);

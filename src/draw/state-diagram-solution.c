@@ -62,10 +62,18 @@ hl_state_diagram_new (const HlSolution *solution, HlUnitSet units, double width,
 HlStateDiagram *
 hl_state_diagram_new_of_kind (const HlSolution *solution, HlStateDiagramKind kind, HlUnitSet units, double width, double height)
 {
+  return hl_state_diagram_new_with (solution, kind, 0, units, width, height);
+}
+
+HlStateDiagram *
+hl_state_diagram_new_with (const HlSolution *solution, HlStateDiagramKind kind, guint extras, HlUnitSet units, double width, double height)
+{
   g_autoptr (HlCycle) cycle = NULL;
   g_return_val_if_fail (solution != NULL && kind < HL_N_STATE_DIAGRAMS, NULL);
   cycle = hl_cycle_from_solution (solution, units);
   cycle->kind = kind;
+  cycle->extras = extras;
+  hl_cycle_add_sources (cycle, solution);
   return hl_state_diagram_from_cycle (cycle, width, height);
 }
 
@@ -76,5 +84,7 @@ hl_state_diagram_new_on (const HlSolution *solution, const HlStateDiagram *other
   g_return_val_if_fail (solution != NULL && other != NULL, NULL);
   cycle = hl_cycle_from_solution (solution, other->x_axis.units);
   cycle->kind = other->kind;
+  cycle->extras = other->extras;
+  hl_cycle_add_sources (cycle, solution);
   return hl_state_diagram_from_cycle_on (cycle, other, other->width, other->height);
 }

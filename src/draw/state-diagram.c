@@ -56,6 +56,7 @@ hl_cycle_new (const HlFluid *fluid, HlUnitSet units)
   cycle->units = units;
   cycle->points = g_array_new (FALSE, TRUE, sizeof (HlCyclePoint));
   cycle->processes = g_array_new (FALSE, TRUE, sizeof (HlProcess));
+  cycle->sources = g_ptr_array_new_with_free_func ((GDestroyNotify) hl_plot_series_free);
   return cycle;
 }
 
@@ -66,6 +67,7 @@ hl_cycle_free (HlCycle *cycle)
     return;
   g_array_unref (cycle->points);
   g_array_unref (cycle->processes);
+  g_ptr_array_unref (cycle->sources);
   g_free (cycle);
 }
 
@@ -75,6 +77,8 @@ hl_state_diagram_free (HlStateDiagram *diagram)
   if (diagram == NULL)
     return;
   hl_state_diagram_clear_marks (diagram);
+  g_ptr_array_unref (diagram->areas);
+  hl_state_table_clear (&diagram->table);
   g_array_unref (diagram->marks);
   g_array_unref (diagram->texts);
   g_array_unref (diagram->gaps);

@@ -18,9 +18,22 @@ const char     *hl_state_diagram_id    (HlStateDiagramKind kind);
 const char     *hl_state_diagram_title (HlStateDiagramKind kind);
 gboolean        hl_state_diagram_kind_from_id (const char *id, HlStateDiagramKind *kind);
 
+/* What it may show beside the cycle; flags. */
+typedef enum {
+  HL_DIAGRAM_AREAS   = 1 << 0,  /* T-s: below the ways on which heat comes from outside or leaves, down to the axis */
+  HL_DIAGRAM_SOURCES = 1 << 1,  /* T-s: temperature of the other side of those ways, where it is known */
+  HL_DIAGRAM_TABLE   = 1 << 2,  /* the states in figures, at the right, where there is room */
+  HL_DIAGRAM_ISOBARS = 1 << 3,  /* T-s, h-s: at round pressures too, not only at the cycle's own */
+} HlDiagramExtras;
+#define HL_N_DIAGRAM_EXTRAS 4
+const char     *hl_diagram_extra_id     (guint n);     /* "areas" */
+const char     *hl_diagram_extra_name   (guint n);     /* translated */
+gboolean        hl_diagram_extras_parse (const char *text, guint *flags);     /* "areas,table"; FALSE where a word is none */
+
 HlStateDiagram *hl_state_diagram_new   (const HlSolution *solution, HlUnitSet units, double width, double height);   /* T-s; pixels */
 HlStateDiagram *hl_state_diagram_new_of_kind (const HlSolution *solution, HlStateDiagramKind kind, HlUnitSet units, double width, double height);
-/* Of the same kind, size and axes as @other, so that both can be drawn over each other; a state may then lie outside. */
+HlStateDiagram *hl_state_diagram_new_with (const HlSolution *solution, HlStateDiagramKind kind, guint extras, HlUnitSet units, double width, double height);
+/* Of the same kind, extras, size and axes as @other, so that both can be drawn over each other; a state may then lie outside. */
 HlStateDiagram *hl_state_diagram_new_on (const HlSolution *solution, const HlStateDiagram *other);
 void            hl_state_diagram_free  (HlStateDiagram *diagram);
 /* @stale: drawn grey (last solve failed). @selected_stream: index ringed, or -1. */

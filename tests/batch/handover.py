@@ -65,7 +65,7 @@ def test_the_workbook_holds_every_table_in_real_numbers():
     for name in DEMOS:
         batch("solve", demo(name), "--xlsx", "x.xlsx", "--csv", "x.csv", "--summary", "s.csv")
         sheets, sources = read_workbook("x.xlsx")
-        assert list(sheets) == ["Performance", "Streams", "Components", "Given and assumed values", "Findings"], list(sheets)
+        assert list(sheets) == ["Performance", "Streams", "Components", "Heat exchange", "Exergy", "Given and assumed values", "Findings"], list(sheets)
         for root in sources.values():
             pane = root.find("s:sheetViews/s:sheetView/s:pane", SHEET)
             assert pane is not None and pane.get("state") == "frozen" and pane.get("ySplit") == "4"

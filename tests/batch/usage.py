@@ -20,7 +20,7 @@ def test_every_command_has_its_help():
         assert out.startswith(f"Usage: heatloom-batch {command}"), out
         assert "Caution" in out
     out, _ = batch("solve", "--help")
-    for option in ("--set ADDRESS=VALUE", "--json FILE", "--csv FILE", "--summary FILE", "--ledger FILE", "--xlsx FILE", "--report FILE", "--drawing FILE", "--paper SIZE", "--field NAME=TEXT", "--diagram ts|hs|ph FILE", "--heat COMPONENT FILE", "--bands FILE", "--exergy-bands FILE", "--exergy-bars FILE"):
+    for option in ("--set ADDRESS=VALUE", "--json FILE", "--csv FILE", "--summary FILE", "--ledger FILE", "--xlsx FILE", "--report FILE", "--drawing FILE", "--paper SIZE", "--field NAME=TEXT", "--diagram ts|hs|ph FILE", "--heat COMPONENT FILE", "--bands FILE", "--exergy-bands FILE", "--exergy-bars FILE", "--diagram-shows LIST"):
         assert option in out, option
 
 
