@@ -72,59 +72,49 @@ badge_stream (HlCanvas *self, GtkSnapshot *snapshot, const HlStreamPlace *place,
 
 /* What is gone: its symbol pale, its line dashed, in the colour of what is taken away. */
 static void
-draw_ghost_streams (HlCanvas *self, GtkSnapshot *snapshot)
+draw_ghost_streams (HlCanvas *self, cairo_t *cr)
 {
   const GArray *streams = hl_marks_removed_streams (self->marks);
   const HlColour *colour = hl_mark_colour (hl_appearance_theme (), HL_MARK_REMOVED);
+  cairo_set_source_rgba (cr, colour->r, colour->g, colour->b, 0.75);
+  cairo_set_line_width (cr, 1.5);
+  cairo_set_dash (cr, (double[]) { 6, 4 }, 2, 0);
   for (guint i = 0; i < streams->len; i++)
     {
       const HlStreamPlace *place = hl_layout_stream (self->ghosts, g_array_index (streams, guint, i));
-      HlBox box;
-      cairo_t *cr;
-      hl_stream_line_bounds (place, &box);
-      if (!(box.width > 0))
-        continue;
-      cr = gtk_snapshot_append_cairo (snapshot, &GRAPHENE_RECT_INIT ((float) box.x, (float) box.y, (float) box.width, (float) box.height));
       hl_draw_polyline (cr, place->points, place->n_points);
-      cairo_set_source_rgba (cr, colour->r, colour->g, colour->b, 0.75);
-      cairo_set_line_width (cr, 1.5);
-      cairo_set_dash (cr, (double[]) { 6, 4 }, 2, 0);
       cairo_stroke (cr);
-      cairo_destroy (cr);
     }
 }
 
 static void
-draw_ghost_component (GtkSnapshot *snapshot, const HlComponent *component)
+draw_ghost_component (cairo_t *cr, const HlComponent *component)
 {
-  int hw, hh;
-  double w, h, x = component->x * HL_UNIT, y = component->y * HL_UNIT;
-  cairo_t *cr;
-  hl_component_half_size (component, &hw, &hh);
-  w = hw * HL_UNIT + 4;
-  h = hh * HL_UNIT + 4;
-  gtk_snapshot_push_opacity (snapshot, 0.35);
-  cr = gtk_snapshot_append_cairo (snapshot, &GRAPHENE_RECT_INIT ((float) (x - w), (float) (y - h), (float) (2 * w), (float) (2 * h)));
-  cairo_translate (cr, x, y);
+  cairo_save (cr);
+  cairo_translate (cr, component->x * HL_UNIT, component->y * HL_UNIT);
+  cairo_push_group (cr);
   hl_draw_symbol (cr, hl_appearance_theme (), component);
-  cairo_destroy (cr);
-  gtk_snapshot_pop (snapshot);
+  cairo_pop_group_to_source (cr);
+  cairo_paint_with_alpha (cr, 0.4);
+  cairo_restore (cr);
 }
 
 void
 hl_canvas_draw_ghosts (HlCanvas *self, GtkSnapshot *snapshot)
 {
   const GArray *components;
+  cairo_t *cr;
   if (self->marks == NULL || self->ghosts == NULL)
     return;
   components = hl_marks_removed_components (self->marks);
-  gtk_snapshot_save (snapshot);
-  gtk_snapshot_translate (snapshot, &GRAPHENE_POINT_INIT ((float) self->ox, (float) self->oy));
-  gtk_snapshot_scale (snapshot, (float) self->zoom, (float) self->zoom);
-  draw_ghost_streams (self, snapshot);
+  cr = gtk_snapshot_append_cairo (snapshot, &GRAPHENE_RECT_INIT (0, 0, (float) gtk_widget_get_width (GTK_WIDGET (self)),
+                                                                 (float) gtk_widget_get_height (GTK_WIDGET (self))));
+  cairo_translate (cr, self->ox, self->oy);
+  cairo_scale (cr, self->zoom, self->zoom);
+  draw_ghost_streams (self, cr);
   for (guint i = 0; i < components->len; i++)
-    draw_ghost_component (snapshot, hl_plant_component (self->marked_reference, g_array_index (components, guint, i)));
-  gtk_snapshot_restore (snapshot);
+    draw_ghost_component (cr, hl_plant_component (self->marked_reference, g_array_index (components, guint, i)));
+  cairo_destroy (cr);
 }
 
 void

@@ -57,7 +57,39 @@ new_row (HlSession *session, const char *name, Row **row, GtkWidget **line)
   return box;
 }
 
+/* A bar at the side where the row differs from what the plant is marked against, and the words for it on hover; takes @there. */
+static void
+mark_difference (GtkWidget *box, const char *reference, char *there)
+{
+  g_autofree char *tip = there != NULL ? g_strdup_printf (_("%s: %s"), reference, there) : NULL;
+
+  if (there != NULL)
+    gtk_widget_add_css_class (box, "differs");
+  else
+    gtk_widget_remove_css_class (box, "differs");
+  hl_compat_set_tip (box, tip);
+  g_free (there);
+}
+
 /* --- options --- */
+
+static char *
+option_words (const HlOptionKind *option, int value)
+{
+  return option->choices != NULL ? g_strdup (_(option->choice_names[value])) : g_strdup_printf ("%d", value);
+}
+
+static void
+mark_option (GtkWidget *box, Row *row, const HlComponent *component)
+{
+  const char *name = NULL;
+  const HlPlant *reference = hl_session_reference (row->session, &name);
+  const HlComponent *other = reference != NULL ? hl_plant_find_component (reference, row->id) : NULL;
+  gboolean differs = other != NULL && other->kind == component->kind
+                     && hl_component_option (other, row->option->key) != hl_component_option (component, row->option->key);
+
+  mark_difference (box, name, differs ? option_words (row->option, hl_component_option (other, row->option->key)) : NULL);
+}
 
 static void
 set_option (Row *row, int value)
@@ -139,6 +171,7 @@ hl_option_row_update (GtkWidget *widget)
   else
     gtk_spin_button_set_value (GTK_SPIN_BUTTON (row->control), value);
   row->is_updating = FALSE;
+  mark_option (widget, row, component);
 }
 
 /* --- the site --- */
@@ -266,9 +299,22 @@ hl_site_row_new (HlSession *session, HlSiteNumber which)
   gtk_label_set_wrap (GTK_LABEL (row->note), TRUE);
   gtk_widget_set_visible (row->note, FALSE);
   gtk_box_append (GTK_BOX (box), row->note);
-  hl_compat_set_tip (line, _(site_numbers[which].help));
   hl_site_row_update (box);
   return box;
+}
+
+static void
+mark_site (GtkWidget *box, Row *row)
+{
+  const char *name = NULL;
+  const HlPlant *plant = hl_session_plant (row->session), *reference = hl_session_reference (row->session, &name);
+  HlSite here = *hl_plant_site (plant), there = reference != NULL ? *hl_plant_site (reference) : here;
+  double number = *site_number (&there, row->site);
+  gboolean differs = memcmp (&number, site_number (&here, row->site), sizeof number) != 0;
+
+  mark_difference (box, name, differs ? hl_units_format (number, site_numbers[row->site].dimension, hl_plant_units (plant)) : NULL);
+  if (!differs)
+    hl_compat_set_tip (box, _(site_numbers[row->site].help));
 }
 
 void
@@ -280,6 +326,7 @@ hl_site_row_update (GtkWidget *box)
   HlDimension dimension = site_numbers[row->site].dimension;
 
   gtk_label_set_text (GTK_LABEL (row->unit), hl_units_label (dimension, hl_plant_units (plant)));
+  mark_site (box, row);
   if (g_strcmp0 (gtk_editable_get_text (GTK_EDITABLE (row->control)), row->shown) != 0)
     return;                                        /* being typed */
   g_free (row->shown);

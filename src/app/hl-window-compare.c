@@ -139,7 +139,7 @@ hl_window_add_compare_actions (HlWindow *self)
   self->legend = gtk_box_new (GTK_ORIENTATION_HORIZONTAL, 6);
   gtk_widget_add_css_class (self->legend, "marks-legend");
   gtk_widget_set_halign (self->legend, GTK_ALIGN_START);
-  gtk_widget_set_valign (self->legend, GTK_ALIGN_START);
+  gtk_widget_set_valign (self->legend, GTK_ALIGN_END);
   gtk_widget_set_visible (self->legend, FALSE);
   gtk_overlay_add_overlay (GTK_OVERLAY (self->canvas_bin), self->legend);
 }

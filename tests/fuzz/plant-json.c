@@ -1,6 +1,7 @@
 /* Damaged plant files: always an error or a plant that can be written and read again, never a crash.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "../plant/plant-test.h"
+#include "plant/document.h"
 
 static guint n_plants, n_errors;
 
@@ -8,9 +9,9 @@ static void
 try (const char *text, gsize length)
 {
   GError *error = NULL;
-  g_autoptr (HlPlant) plant = hl_plant_from_json (text, (gssize) length, "fuzz", &error), again = NULL;
+  g_autoptr (HlDocument) document = hl_document_from_json (text, (gssize) length, "fuzz", &error), again = NULL;
   g_autofree char *written = NULL;
-  if (plant == NULL)
+  if (document == NULL)
     {
       n_errors++;
       g_assert_nonnull (error);
@@ -22,10 +23,17 @@ try (const char *text, gsize length)
     }
   n_plants++;
   g_assert_no_error (error);
-  written = hl_plant_to_json (plant);
-  again = hl_plant_from_json (written, -1, "again", &error);
+  written = hl_document_to_json (document);
+  again = hl_document_from_json (written, -1, "again", &error);
   g_assert_no_error (error);
-  g_assert_true (hl_plant_equal (plant, again));
+  g_assert_true (hl_document_equal (document, again));
+  for (int variant = 0; variant < (int) hl_document_n_variants (document); variant++)     /* whatever its changes say, there is a plant */
+    {
+      g_autoptr (GPtrArray) changes = hl_changes_between (hl_document_plant (document, HL_DOCUMENT_BASE), hl_document_plant (document, variant));
+      g_autoptr (HlPlant) plant = hl_changes_apply (changes, hl_document_plant (document, HL_DOCUMENT_BASE), NULL);
+      g_autoptr (GPtrArray) none = hl_changes_between (plant, hl_document_plant (document, variant));
+      g_assert_cmpuint (none->len, ==, 0);
+    }
 }
 
 static void
