@@ -496,13 +496,24 @@ hl_edit_can_join (const HlPlant *plant, const char *a_id, const char *b_id, GErr
   return TRUE;
 }
 
+static void
+reverse_joins (const char **joins, guint n)
+{
+  for (guint k = 0; k < n / 2; k++)
+    {
+      const char *keep = joins[k];
+      joins[k] = joins[n - 1 - k];
+      joins[n - 1 - k] = keep;
+    }
+}
+
 HlPlant *
 hl_edit_join_shaft (const HlPlant *plant, const char *a_id, const char *b_id, GError **error)
 {
   const HlShaft *a_shaft, *b_shaft;
   g_autofree const char **joins = NULL;
   g_autofree char *id = NULL;
-  guint n;
+  guint n, n_b;
   HlPlant *result;
 
   if (!hl_edit_can_join (plant, a_id, b_id, error))
@@ -511,7 +522,13 @@ hl_edit_join_shaft (const HlPlant *plant, const char *a_id, const char *b_id, GE
   b_shaft = hl_plant_shaft_of (plant, b_id);
   joins = g_new0 (const char *, count_joins (plant, a_id) + count_joins (plant, b_id));
   n = collect_joins (plant, a_id, joins);
-  n += collect_joins (plant, b_id, joins + n);
+  /* A shaft is a line: where the ends allow, the two that are joined come to lie side by side. */
+  if (joins[n - 1] != g_intern_string (a_id) && joins[0] == g_intern_string (a_id))
+    reverse_joins (joins, n);
+  n_b = collect_joins (plant, b_id, joins + n);
+  if (joins[n] != g_intern_string (b_id) && joins[n + n_b - 1] == g_intern_string (b_id))
+    reverse_joins (joins + n, n_b);
+  n += n_b;
   id = a_shaft != NULL ? g_strdup (a_shaft->id) : b_shaft != NULL ? g_strdup (b_shaft->id) : hl_plant_free_id (plant, "S");
   result = hl_plant_ref ((HlPlant *) plant);
   if (a_shaft != NULL && b_shaft != NULL)

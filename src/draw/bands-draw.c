@@ -24,6 +24,7 @@ colour_of (HlBandKind kind, const HlTheme *theme, gboolean is_stale)
     case HL_BAND_HEAT_LOSS:
     case HL_BAND_HEAT:
       return &theme->steam;
+    case HL_BAND_POWER:
     case HL_BAND_SHAFT_LOSS:
     case HL_BAND_OWN:
     case HL_BAND_NET:

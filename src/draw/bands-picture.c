@@ -14,6 +14,7 @@ way_of (const HlBand *band)
     {
     case HL_BAND_FUEL:
     case HL_BAND_HEAT:
+    case HL_BAND_POWER:
     case HL_BAND_WATER_IN:
       return HL_STRIP_IN;
     case HL_BAND_DELIVERED:

@@ -12,7 +12,11 @@ typedef struct {
   const HlPlant    *plant;
   HlBands          *bands;
   gboolean         *is_service;      /* by stream: cooling water and the like */
-  double            internal, turbines, shaft_pumps;      /* powers [W] */
+  double            internal, turbines;      /* what steam gives to rotors, and they to shafts [W] */
+  double            shaft_driven;            /* taken by machines on shafts */
+  double            shaft_motors;            /* given by motors on shafts */
+  double            gearboxes;               /* lost in them */
+  double            motors;                  /* electricity of all motors */
 } Books;
 
 static void
@@ -183,6 +187,13 @@ add_component (Books *books, guint n)
     }
   else if (is_kind (component, "heat_input"))
     add (books, HL_BAND_HEAT, label, needed (books, component, "heat"));
+  else if (is_kind (component, "motor"))
+    {
+      books->shaft_motors += needed (books, component, "power");
+      books->motors += needed (books, component, "motor_power");
+    }
+  else if (component->kind->shaft == HL_SHAFT_LOSS)
+    books->gearboxes += needed (books, component, "loss");
   else if (component->kind->shaft == HL_SHAFT_DRIVES)
     {
       books->internal += needed (books, component, "internal_power");
@@ -192,9 +203,11 @@ add_component (Books *books, guint n)
     {
       double power = needed (books, component, "power");
       g_autofree char *name = g_strdup_printf (_("power of %s"), component->id);
-      /* On a shaft it takes nothing from the motors. */
-      if (own (books, component, "motor_power", &value) && !(value > 0.0))
-        books->shaft_pumps += power;
+      /* On a shaft it has no motor of its own. */
+      if (own (books, component, "motor_power", &value) && value > 0.0)
+        books->motors += value;
+      else
+        books->shaft_driven += power;
       add (books, pumps_service (books, n) ? HL_BAND_OWN : HL_BAND_PUMPS, name, power);
     }
   else if (is_kind (component, "steam_user"))
@@ -215,19 +228,23 @@ add_totals (Books *books)
   double gross = of_plant (books, "gross_power"), own_consumption = of_plant (books, "own_consumption");
   double delivered = of_plant (books, "heat_delivered") - hl_bands_sum (books->bands, HL_BAND_DELIVERED);
   double rejected = of_plant (books, "heat_rejected") - hl_bands_sum (books->bands, HL_BAND_REJECTED);
-  double pumps = hl_bands_sum (books->bands, HL_BAND_PUMPS) + hl_bands_sum (books->bands, HL_BAND_OWN) - books->shaft_pumps;
+  double driven = hl_bands_sum (books->bands, HL_BAND_PUMPS) + hl_bands_sum (books->bands, HL_BAND_OWN);
+  double by_motors = driven - books->shaft_driven + books->shaft_motors;
   add (books, HL_BAND_DELIVERED, _("other heat delivered"), MAX (delivered, 0.0));
   add (books, HL_BAND_REJECTED, _("other heat rejected"), MAX (rejected, 0.0));
   add (books, HL_BAND_SHAFT_LOSS, _("mechanical losses"), books->internal - books->turbines);
-  add (books, HL_BAND_SHAFT_LOSS, _("generator losses"), books->turbines - books->shaft_pumps - gross);
-  add (books, HL_BAND_OWN, _("motors and other consumers"), own_consumption - pumps);
-  add (books, HL_BAND_NET, _("net power"), gross - own_consumption);
+  add (books, HL_BAND_SHAFT_LOSS, _("gearbox losses"), books->gearboxes);
+  add (books, HL_BAND_SHAFT_LOSS, _("generator losses"), books->turbines + books->shaft_motors - books->shaft_driven - books->gearboxes - gross);
+  add (books, HL_BAND_OWN, _("motor losses"), books->motors - by_motors);
+  add (books, HL_BAND_OWN, _("other consumers"), own_consumption - books->motors);
+  add (books, HL_BAND_NET, _("net power"), MAX (gross - own_consumption, 0.0));
+  add (books, HL_BAND_POWER, _("power from outside"), MAX (own_consumption - gross, 0.0));
 }
 
 static gboolean
 comes_in (HlBandKind kind)
 {
-  return kind == HL_BAND_FUEL || kind == HL_BAND_HEAT || kind == HL_BAND_WATER_IN;
+  return kind == HL_BAND_FUEL || kind == HL_BAND_HEAT || kind == HL_BAND_POWER || kind == HL_BAND_WATER_IN;
 }
 
 /* In less out: pumps come back and count on neither side. */
@@ -282,7 +299,7 @@ hl_bands_new (const HlSolution *solution)
     add_component (&books, n);
   add_waters (&books);
   add_totals (&books);
-  bands->input = hl_bands_sum (bands, HL_BAND_FUEL) + hl_bands_sum (bands, HL_BAND_HEAT);
+  bands->input = hl_bands_sum (bands, HL_BAND_FUEL) + hl_bands_sum (bands, HL_BAND_HEAT) + hl_bands_sum (bands, HL_BAND_POWER);
   add (&books, HL_BAND_REST, _("not accounted for"), balance (bands));
   bands->is_complete = bands->is_complete && bands->input > 0.0;
   hl_bands_clean (bands);

@@ -9,6 +9,7 @@ typedef enum {
   HL_BAND_FUEL,          /* in: fuel, by lower heating value */
   HL_BAND_FIRING_LOSS,   /* out: flue gas and other losses of a boiler */
   HL_BAND_HEAT,          /* in: heat from elsewhere */
+  HL_BAND_POWER,         /* in: electricity from outside, where the plant needs more than it gives */
   HL_BAND_WATER_IN,      /* in: make-up and what comes in at boundaries */
   HL_BAND_PUMPS,         /* comes back: power that pumps give to the water */
   HL_BAND_HEAT_LOSS,     /* out: of pipes */
@@ -17,7 +18,7 @@ typedef enum {
   HL_BAND_WATER_OUT,     /* out: water lost, and what leaves at boundaries */
   HL_BAND_REJECTED,      /* out: to the surroundings */
   HL_BAND_SHAFT_LOSS,    /* out: bearings, gears, generators */
-  HL_BAND_OWN,           /* out: motors' losses and other consumers */
+  HL_BAND_OWN,           /* out: losses of motors, and other consumers */
   HL_BAND_NET,           /* out: net power */
   HL_BAND_REST,          /* what no component accounts for; above 0 out, below 0 in */
 } HlBandKind;
@@ -25,7 +26,7 @@ typedef struct { HlBandKind kind; char *name; double power; } HlBand;   /* [W] *
 
 typedef struct {
   GArray  *bands;        /* of HlBand, by kind */
-  double   input;        /* fuel and heat [W]: what percentages refer to */
+  double   input;        /* fuel, heat and power from outside [W]: what percentages refer to */
   gboolean is_complete;  /* every value was known, and the bands can be drawn */
 } HlBands;
 HlBands *hl_bands_new  (const HlSolution *solution);

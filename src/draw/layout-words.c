@@ -17,6 +17,8 @@ static const struct {
   { "boiler",        { { "heat", NULL }, { "efficiency", "η" } } },
   { "turbine",       { { "power", NULL }, { "isentropic_efficiency", "η" } } },
   { "generator",     { { "power", NULL } } },
+  { "feed_pump_turbine", { { "power", NULL }, { "isentropic_efficiency", "η" } } },
+  { "gearbox",       { { "efficiency", "η" } } },
   { "condenser",     { { "heat", NULL } } },
   { "pump",          { { "power", NULL } } },
   { "pipe",          { { "pressure_loss", "Δp", PER_CENT } } },

@@ -175,12 +175,14 @@ lay_shaft (HlLayout *layout, const HlShaft *shaft)
 {
   g_autoptr (GPtrArray) joined = g_ptr_array_new ();
   int left = G_MAXINT, right = -G_MAXINT, top = G_MAXINT, bottom = -G_MAXINT;
+  gboolean has_gearbox = FALSE;
   for (guint i = 0; i < shaft->n_joins; i++)
     {
       const HlComponent *c = hl_plant_find_component (layout->plant, shaft->joins[i]);
       if (c == NULL)
         continue;
       g_ptr_array_add (joined, (gpointer) c);
+      has_gearbox |= c->kind->shaft == HL_SHAFT_LOSS;
       left = MIN (left, c->x);
       right = MAX (right, c->x);
       top = MIN (top, c->y);
@@ -188,7 +190,9 @@ lay_shaft (HlLayout *layout, const HlShaft *shaft)
     }
   if (joined->len < 2)
     return;
-  g_ptr_array_sort_with_data (joined, compare_along, GINT_TO_POINTER (bottom - top > right - left));
+  /* What a gearbox stands between matters, so its shaft is drawn in its order; any other along the way that it lies. */
+  if (!has_gearbox)
+    g_ptr_array_sort_with_data (joined, compare_along, GINT_TO_POINTER (bottom - top > right - left));
   for (guint i = 0; i + 1 < joined->len; i++)
     add_shaft_link (layout, joined->pdata[i], joined->pdata[i + 1]);
 }

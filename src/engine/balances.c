@@ -32,12 +32,13 @@ book_doors (const HlSolution *solution, int c, Balance *mass, Balance *energy)
 {
   const HlModel *model = solution->model;
   const char *kind = hl_plant_component (solution->plant, (guint) c)->kind->id;
+  HlShaftRole role = hl_plant_component (solution->plant, (guint) c)->kind->shaft;
   gboolean is_cooled = hl_model_port_node (model, c, "cooling_inlet") >= 0;
   if (g_str_equal (kind, "heat_input") || g_str_equal (kind, "boiler"))
     book (energy, own (solution, c, "heat"));
-  else if (g_str_equal (kind, "turbine"))
+  else if (role == HL_SHAFT_DRIVES)
     book (energy, -own (solution, c, "internal_power"));
-  else if (g_str_equal (kind, "pump") || g_str_equal (kind, "compressor"))
+  else if (role == HL_SHAFT_DRIVEN)
     book (energy, own (solution, c, "power"));
   else if (g_str_equal (kind, "pipe"))
     book (energy, -own (solution, c, "heat_loss"));

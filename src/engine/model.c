@@ -3,6 +3,7 @@
 #include "engine/model.h"
 #include "engine/components/components.h"
 #include "plant/circuit.h"
+#include "engine/shafts.h"
 #include "plant/i18n.h"
 #include <math.h>
 #include <string.h>
@@ -565,91 +566,6 @@ add_temperatures (HlModel *model, const gboolean *other, guint n_other)
 
 /* --- building ------------------------------------------------------------------- */
 
-/* A shaft carries power on where a generator or a driven machine takes it. */
-static void
-look_at_shafts (HlModel *model)
-{
-  HlPlant *plant = model->plant;
-  model->is_on_shaft = g_new0 (gboolean, N_COMPONENTS (model) + 1);
-  for (guint i = 0; i < hl_plant_n_shafts (plant); i++)
-    {
-      const HlShaft *shaft = hl_plant_shaft (plant, i);
-      gboolean gives = FALSE, takes = FALSE;
-      for (guint k = 0; k < shaft->n_joins; k++)
-        {
-          const HlComponent *component = hl_plant_find_component (plant, shaft->joins[k]);
-          if (component != NULL)
-            {
-              gives |= component->kind->shaft == HL_SHAFT_DRIVES;
-              takes |= component->kind->shaft == HL_SHAFT_DRIVEN || component->kind->shaft == HL_SHAFT_GENERATOR;
-            }
-        }
-      for (guint k = 0; gives && takes && k < shaft->n_joins; k++)
-        {
-          int c = hl_plant_component_index (plant, shaft->joins[k]);
-          if (c >= 0)
-            model->is_on_shaft[c] = TRUE;
-        }
-    }
-}
-
-static const char *
-shaft_key (HlShaftRole role)
-{
-  return role == HL_SHAFT_GENERATOR ? "shaft_power" : role == HL_SHAFT_LOSS ? "loss" : "power";
-}
-
-/* What a gearbox takes its loss from: the power of all drivers of its shaft. */
-static void
-add_gearbox_input (HlModel *model, int gearbox, const int *vars, const double *signs, int n)
-{
-  int drivers[HL_EQUATION_MOST], n_drivers = 0;
-  double factors[HL_EQUATION_MOST];
-  for (int k = 0; k < n && n_drivers < HL_EQUATION_MOST - 1; k++)
-    if (signs[k] > 0.0)
-      {
-        drivers[n_drivers] = vars[k];
-        factors[n_drivers++] = 1.0;
-      }
-  drivers[n_drivers] = hl_model_own_var (model, gearbox, "input_power");
-  factors[n_drivers] = -1.0;
-  HlEquation *e = hl_add_linear (model->system, HL_VAR_POWER, drivers, factors, n_drivers + 1, 0.0);
-  e->component = gearbox;
-}
-
-static void
-add_shafts (HlModel *model)
-{
-  HlPlant *plant = model->plant;
-  for (guint i = 0; i < hl_plant_n_shafts (plant); i++)
-    {
-      const HlShaft *shaft = hl_plant_shaft (plant, i);
-      int vars[HL_EQUATION_MOST], n = 0;
-      double signs[HL_EQUATION_MOST];
-      for (guint k = 0; k < shaft->n_joins && n < HL_EQUATION_MOST; k++)
-        {
-          int c = hl_plant_component_index (plant, shaft->joins[k]);
-          if (c < 0 || !model->is_on_shaft[c])
-            continue;
-          HlShaftRole role = hl_plant_component (plant, (guint) c)->kind->shaft;
-          int var = hl_model_own_var (model, c, shaft_key (role));
-          if (var < 0)
-            continue;
-          vars[n] = var;
-          signs[n++] = role == HL_SHAFT_DRIVES ? 1.0 : -1.0;
-        }
-      if (n == 0)
-        continue;
-      hl_add_linear (model->system, HL_VAR_POWER, vars, signs, n, 0.0);
-      for (guint k = 0; k < shaft->n_joins; k++)
-        {
-          int c = hl_plant_component_index (plant, shaft->joins[k]);
-          if (c >= 0 && model->is_on_shaft[c] && hl_plant_component (plant, (guint) c)->kind->shaft == HL_SHAFT_LOSS)
-            add_gearbox_input (model, c, vars, signs, n);
-        }
-    }
-}
-
 HlModel *
 hl_model_new_other (HlPlant *plant, const gboolean *other, guint n_other)
 {
@@ -665,7 +581,7 @@ hl_model_new_other (HlPlant *plant, const gboolean *other, guint n_other)
   for (int k = 0; k < HL_N_SUMS; k++)
     model->sums[k] = g_array_new (FALSE, FALSE, sizeof (int));
   add_streams (model);
-  look_at_shafts (model);
+  hl_shafts_look (model);
   int n = N_COMPONENTS (model);
   model->first_own = g_new0 (int, n + 2);
   for (int c = 0; c < n; c++)
@@ -677,7 +593,7 @@ hl_model_new_other (HlPlant *plant, const gboolean *other, guint n_other)
         component_model->emit (&emit);
     }
   model->first_own[n] = model->first_own[n + 1] = (int) model->own->len;
-  add_shafts (model);
+  hl_shafts_add (model);
   hl_emit_plant (model);
   model->first_own[n + 1] = (int) model->own->len;
   add_values (model);

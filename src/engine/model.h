@@ -51,6 +51,7 @@ typedef struct _HlModel {
   GArray   *open_ports;           /* HlAddress: required ports that no line reaches */
   GArray   *broken_ties;          /* HlAddress: tied to something that the plant does not have */
   gboolean *is_on_shaft;          /* [n components] on a shaft that carries its power on */
+  gboolean  has_gross;            /* something gives electricity */
 } HlModel;
 
 HlModel *hl_model_new  (HlPlant *plant);

@@ -97,7 +97,7 @@ fuel_heat_hhv (HlEmit *emit)
   return sum;
 }
 
-/* Fans take a part of gross power; where there is none, nothing. */
+/* Fans take a part of gross power. */
 static void
 emit_fans (HlEmit *emit, int gross)
 {
@@ -107,9 +107,7 @@ emit_fans (HlEmit *emit, int gross)
       int fraction = hl_model_own_var (model, c, "fan_fraction"), power = hl_model_own_var (model, c, "fan_power");
       if (fraction < 0 || power < 0)
         continue;
-      HlEquation *e = gross >= 0 ? hl_add_product (emit->system, gross, fraction, power)
-                                 : hl_add_linear (emit->system, HL_VAR_POWER, &power, (const double[]) { 1.0 }, 1, 0.0);
-      e->output = gross >= 0 ? 2 : 0;
+      HlEquation *e = hl_add_product (emit->system, gross, fraction, power);
       e->component = c;
     }
 }
@@ -124,7 +122,8 @@ hl_emit_plant (HlModel *model)
   if (model->sums[HL_SUM_PUMP_POWER]->len > 0)
     pumps = total (emit, "pump_power", HL_VAR_POWER, HL_SUM_PUMP_POWER);
   int gross = total (emit, "gross_power", HL_VAR_POWER, HL_SUM_GROSS);
-  emit_fans (emit, gross);
+  if (gross >= 0)
+    emit_fans (emit, gross);
   int heat = total (emit, "heat_input", HL_VAR_POWER, HL_SUM_HEAT_INPUT);
   int fuel = total (emit, "fuel_heat", HL_VAR_POWER, HL_SUM_FUEL_HEAT);
   total (emit, "fuel_flow", HL_VAR_FLOW, HL_SUM_FUEL_FLOW);
@@ -149,6 +148,8 @@ hl_emit_plant (HlModel *model)
       hl_emit_done (emit, hl_add_linear (emit->system, HL_VAR_POWER, (const int[]) { net, gross, own }, (const double[]) { 1.0, -1.0, 1.0 }, 3, 0.0),
                     N_("{0} = {1} − {2}"), 0);
     }
+  else if (motors >= 0)
+    hl_system_merge (emit->system, motors, hl_emit_own (emit, "own_consumption", HL_VAR_POWER));
   if (turbines >= 0)
     quotient (emit, "cycle_efficiency", HL_VAR_RATIO, pumps >= 0 ? difference (emit, "shaft_power_net", turbines, pumps) : turbines, heat);
   quotient (emit, "gross_efficiency", HL_VAR_RATIO, gross, basis);

@@ -82,7 +82,7 @@ typedef enum {
   HL_SHAFT_NONE,
   HL_SHAFT_DRIVES,                     /* turbine: gives power to the shaft */
   HL_SHAFT_DRIVEN,                     /* pump: may take power from a shaft instead of its motor */
-  HL_SHAFT_LOSS,                       /* gearbox: loses a part of what the others give */
+  HL_SHAFT_LOSS,                       /* gearbox: loses a part of what passes through it */
   HL_SHAFT_GENERATOR,                  /* takes what the others leave */
 } HlShaftRole;
 
@@ -94,6 +94,7 @@ typedef struct {
   const char           *shelf_group;   /* N_("Expand") */
   const char           *help;          /* N_("one sentence") */
   HlShaftRole           shaft;
+  gboolean              only_drives;   /* gives its power to machines: without one drawn it is no electricity */
   int                   half_width, half_height;    /* half the symbol's box [grid units], option counts at least */
   int                   widen_per;     /* half the box's width grows to at least (count + 1) * this, count of widen_option */
   const char           *widen_option;

@@ -217,6 +217,25 @@ test_copies_keep_their_ties (void)
   g_assert_cmpstr (kept, ==, "C1.steam.T - T1.exhaust.T");
 }
 
+/* A shaft is a line: what is joined to its first machine comes before it. */
+static void
+test_joined_side_by_side (void)
+{
+  g_autoptr (HlPlant) plant = add (add (small_plant (), "turbine", 10, 10, NULL), "gearbox", 14, 10, NULL);
+  g_autoptr (HlPlant) geared = NULL, whole = NULL;
+  GError *error = NULL;
+  const char *const order[] = { "T2", "GB1", "T1", "G1" };
+
+  geared = hl_edit_join_shaft (plant, "T2", "GB1", &error);
+  g_assert_no_error (error);
+  whole = hl_edit_join_shaft (geared, "T1", "GB1", &error);
+  g_assert_no_error (error);
+  const HlShaft *shaft = hl_plant_shaft_of (whole, "T1");
+  g_assert_cmpuint (shaft->n_joins, ==, G_N_ELEMENTS (order));
+  for (guint k = 0; k < shaft->n_joins; k++)
+    g_assert_cmpstr (shaft->joins[k], ==, order[shaft->joins[0] == g_intern_string ("T2") ? k : shaft->n_joins - 1 - k]);
+}
+
 static void
 test_shafts_merge_and_part (void)
 {
@@ -341,6 +360,7 @@ main (int argc, char **argv)
   g_test_add_func ("/app/edit/mirror-turned", test_mirroring_a_turned_pump_swaps_left_and_right);
   g_test_add_func ("/app/edit/copies-keep-their-ties", test_copies_keep_their_ties);
   g_test_add_func ("/app/edit/duplicate", test_duplicates_keep_the_lines_and_the_shaft_among_them);
+  g_test_add_func ("/app/edit/joined-side-by-side", test_joined_side_by_side);
   g_test_add_func ("/app/edit/shafts", test_shafts_merge_and_part);
   g_test_add_func ("/app/edit/insert", test_a_valve_is_inserted_into_a_line);
   g_test_add_func ("/app/edit/branch", test_a_line_may_end_in_another_one);

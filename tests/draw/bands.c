@@ -55,6 +55,62 @@ test_energy_balances (void)
     }
 }
 
+/* Machines on shafts: pump behind a gearbox, feed pump turbine, motor as a component of its own; a heat pump buys its power. */
+static const char *const shaft_plants[] = {
+  "heat_input Q1 pressure_loss=0 steam.T=750\nturbine T1 inlet.p=60e5 inlet.m=10 exhaust.p=1e4 isentropic_efficiency=0.78 mechanical_efficiency=0.98\n"
+  "gearbox GB1 efficiency=0.97\ngearbox GB2 efficiency=0.985\ngenerator G1 efficiency=0.96\ncondenser C1 cooling:1 subcooling=0\npump P1 isentropic_efficiency=0.7\n"
+  "Q1.steam > T1.inlet\nT1.exhaust > C1.steam\nC1.condensate > P1.inlet\nP1.outlet > Q1.feed\nshaft P1 GB2 T1 GB1 G1\nplant other_consumption_fraction=0.03\n",
+  "heat_input Q1 pressure_loss=0 steam.T=700\nturbine T1 extractions:1 inlet.p=40e5 extraction1.p=6e5 exhaust.p=1e4 isentropic_efficiency=0.8 mechanical_efficiency=0.98\n"
+  "feed_pump_turbine FT1 isentropic_efficiency=0.76 mechanical_efficiency=0.97\ncondenser C1 cooling:1 subcooling=0\nmixer M1 inlets:2\npump P1 isentropic_efficiency=0.7\n"
+  "Q1.steam > T1.inlet\nT1.extraction1 > FT1.inlet\nT1.exhaust > M1.inlet1\nFT1.exhaust > M1.inlet2\nM1.outlet > C1.steam\n"
+  "C1.condensate > P1.inlet\nP1.outlet > Q1.feed\nshaft FT1 P1\nplant net_power=5e6 other_consumption_fraction=0\n",
+  "heat_input Q1 pressure_loss=0 steam.p=1e5 steam.x=1\ncompressor K1 isentropic_efficiency=0.75\nmotor EM1 efficiency=0.95\n"
+  "district_heater DH1 heat=1e6 drain_subcooling=0 terminal_difference=5 return_T=370 flow_T=400 water_p=8e5 water_pressure_loss=0\nvalve V1\n"
+  "Q1.steam > K1.inlet\nK1.outlet > DH1.steam\nDH1.drain > V1.inlet\nV1.outlet > Q1.feed\nshaft EM1 K1\n",
+  "heat_input Q1 pressure_loss=0 steam.p=1e5 steam.x=1\ncompressor K1 isentropic_efficiency=0.75 motor_efficiency=0.95\n"
+  "district_heater DH1 heat=1e6 drain_subcooling=0 terminal_difference=5 return_T=370 flow_T=400 water_p=8e5 water_pressure_loss=0\nvalve V1\n"
+  "Q1.steam > K1.inlet\nK1.outlet > DH1.steam\nDH1.drain > V1.inlet\nV1.outlet > Q1.feed\n",
+};
+
+static double
+of_band (const HlBands *bands, HlBandKind kind, const char *name)
+{
+  for (guint i = 0; i < bands->bands->len; i++)
+    {
+      const HlBand *band = &g_array_index (bands->bands, HlBand, i);
+      if (band->kind == kind && g_str_equal (band->name, name))
+        return band->power;
+    }
+  return 0.0;
+}
+
+static void
+test_shafts_add_up (void)
+{
+  for (guint n = 0; n < G_N_ELEMENTS (shaft_plants); n++)
+    {
+      g_autoptr (HlPlant) plant = test_plant (shaft_plants[n]);
+      g_autoptr (HlSolution) solution = hl_solve (plant, NULL);
+      g_autoptr (HlBands) bands = hl_bands_new (solution);
+      test_assert_solved (solution);
+      g_assert_true (bands->is_complete);
+      g_assert_cmpfloat (hl_bands_sum (bands, HL_BAND_REST), ==, 0.0);
+      if (n == 0)
+        {
+          test_assert_near (of_band (bands, HL_BAND_SHAFT_LOSS, "gearbox losses"), test_value (solution, "GB1.loss") + test_value (solution, "GB2.loss"), 1e-9);
+          test_assert_near (of_band (bands, HL_BAND_SHAFT_LOSS, "generator losses"), 0.04 * test_value (solution, "G1.shaft_power"), 1e-9);
+          g_assert_cmpfloat (of_band (bands, HL_BAND_OWN, "motor losses"), ==, 0.0);
+        }
+      if (n >= 2)
+        {
+          double power = test_value (solution, "K1.power");
+          test_assert_near (of_band (bands, HL_BAND_OWN, "motor losses"), power / 0.95 - power, 1e-8);
+          test_assert_near (of_band (bands, HL_BAND_POWER, "power from outside"), power / 0.95, 1e-9);
+          test_assert_near (hl_bands_sum (bands, HL_BAND_DELIVERED), 1e6, 1e-9);
+        }
+    }
+}
+
 /* Each band is the quantity that the plant itself states. */
 static void
 test_bands_are_the_plants_results (void)
@@ -158,6 +214,7 @@ main (int argc, char **argv)
 {
   g_test_init (&argc, &argv, NULL);
   g_test_add_func ("/draw/bands/energy-balances", test_energy_balances);
+  g_test_add_func ("/draw/bands/shafts-add-up", test_shafts_add_up);
   g_test_add_func ("/draw/bands/bands-are-the-plants-results", test_bands_are_the_plants_results);
   g_test_add_func ("/draw/bands/widths-are-to-scale", test_widths_are_to_scale);
   g_test_add_func ("/draw/bands/words-stand-clear", test_words_stand_clear);

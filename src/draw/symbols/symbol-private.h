@@ -27,7 +27,8 @@ extern const HlSymbol hl_symbol_heat_input, hl_symbol_boiler, hl_symbol_turbine,
   hl_symbol_pump, hl_symbol_pipe, hl_symbol_valve, hl_symbol_open_heater, hl_symbol_closed_heater, hl_symbol_splitter,
   hl_symbol_mixer, hl_symbol_steam_user, hl_symbol_make_up, hl_symbol_boundary, hl_symbol_exchanger, hl_symbol_recuperator,
   hl_symbol_district_heater, hl_symbol_air_condenser, hl_symbol_cooling_tower, hl_symbol_flash_vessel,
-  hl_symbol_moisture_separator, hl_symbol_desuperheater, hl_symbol_compressor, hl_symbol_gearbox, hl_symbol_motor;
+  hl_symbol_moisture_separator, hl_symbol_desuperheater, hl_symbol_compressor, hl_symbol_gearbox, hl_symbol_motor,
+  hl_symbol_feed_pump_turbine;
 
 void hl_pen_body    (const HlPen *pen);                                             /* fills the path with the card, strokes it with ink */
 void hl_pen_stroke  (const HlPen *pen, const HlColour *colour, double weight);      /* strokes the path; @weight relative to outlines */

@@ -1,15 +1,15 @@
-/* Turbine section: a trapezium that widens with the flow, extractions at its long side.
+/* Turbine section and feed pump turbine: a trapezium that widens with the flow, extractions at its long side.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "draw/symbols/symbol-private.h"
 
 #define NARROW 1.0
-#define WIDE 3.0
 
+/* As wide as its box is high. */
 static void
 draw (const HlPen *pen)
 {
-  double w = pen->half_width / U;
-  const double outline[][2] = { { -w, -NARROW }, { w, -WIDE }, { w, WIDE }, { -w, NARROW } };
+  double w = pen->half_width / U, wide = pen->half_height / U;
+  const double outline[][2] = { { -w, -NARROW }, { w, -wide }, { w, wide }, { -w, NARROW } };
   hl_pen_path (pen, outline, G_N_ELEMENTS (outline));
   cairo_close_path (pen->cr);
   hl_pen_body (pen);
@@ -19,11 +19,11 @@ draw (const HlPen *pen)
 static double
 lead (const HlComponent *component, double x, double y, HlSide side, double half_width)
 {
-  double edge = (NARROW + (WIDE - NARROW) * (x + half_width) / (2.0 * half_width)) * U;
-  (void) component;
+  double wide = component->kind->half_height, edge = (NARROW + (wide - NARROW) * (x + half_width) / (2.0 * half_width)) * U;
   if (side == HL_SIDE_DOWN)
     return y - edge;
   return side == HL_SIDE_UP ? -y - edge : 0.0;
 }
 
 const HlSymbol hl_symbol_turbine = { "turbine", draw, lead };
+const HlSymbol hl_symbol_feed_pump_turbine = { "feed_pump_turbine", draw, lead };

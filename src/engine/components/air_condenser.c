@@ -18,9 +18,12 @@ emit_air_condenser (HlEmit *emit)
   hl_emit_done (emit, hl_add_saturation (emit->system, NODE (emit, steam)->fluid, NODE (emit, steam)->p, T_sat), NULL, 1);
   hl_emit_done (emit, hl_add_linear (emit->system, HL_VAR_TEMPERATURE, (const int[]) { T_sat, air, difference }, (const double[]) { 1.0, -1.0, -1.0 }, 3, 0.0),
                 N_("{0} = {1} + {2}"), -1);
-  /* The share of gross power becomes the fans' power where the plant's results are put together. */
-  hl_emit_own (emit, "fan_fraction", HL_VAR_RATIO);
-  hl_emit_sum (emit, HL_SUM_MOTOR_POWER, hl_emit_own (emit, "fan_power", HL_VAR_POWER));
+  /* The share of gross power becomes the fans' power where the plant's results are put together; without gross power it says
+   * nothing, and only a power put in counts. */
+  if (emit->model->has_gross)
+    hl_emit_own (emit, "fan_fraction", HL_VAR_RATIO);
+  if (emit->model->has_gross || hl_emit_has_value (emit, "fan_power"))
+    hl_emit_sum (emit, HL_SUM_MOTOR_POWER, hl_emit_own (emit, "fan_power", HL_VAR_POWER));
   hl_emit_sum (emit, HL_SUM_REJECTED, heat);
 }
 
@@ -30,6 +33,13 @@ check (HlChecker *checker)
   const HlNodeResult *steam = hl_check_port (checker, "steam");
   double difference;
   hl_shell_check (checker, "drain", "condensate");
+  if (!checker->model->has_gross && hl_model_own_var (checker->model, checker->index, "fan_power") < 0)
+    {
+      HlFinding *none = hl_check_add (checker, HL_GRADE_CAUTION, "fans-not-counted", "fan_power",
+        g_strdup_printf (_("Fans of %s are to take a part of gross power, and this plant has none: they are not counted. Give their power itself."),
+                         checker->component->id));
+      hl_check_offer (checker, none, "fan_power");
+    }
   if (steam == NULL || !steam->has_pressure || !hl_check_own (checker, "initial_difference", &difference) || difference >= 2.0)
     return;
   g_autofree char *d = hl_check_text (checker, HL_DIMENSION_TEMPERATURE_DIFFERENCE, fabs (difference));

@@ -1,6 +1,6 @@
 /* Compressor for vapour, with its motor or driven by a shaft.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "engine/components/components.h"
+#include "engine/components/drive.h"
 #include "plant/i18n.h"
 #include <math.h>
 
@@ -20,9 +20,8 @@ emit_compressor (HlEmit *emit)
 {
   const int in_node = hl_emit_port (emit, "inlet"), out_node = hl_emit_port (emit, "outlet");
   const HlNode *in = hl_model_node (emit->model, in_node), *out = hl_model_node (emit->model, out_node);
-  int efficiency = hl_emit_own (emit, "isentropic_efficiency", HL_VAR_RATIO), motor = hl_emit_own (emit, "motor_efficiency", HL_VAR_RATIO);
+  int efficiency = hl_emit_own (emit, "isentropic_efficiency", HL_VAR_RATIO);
   int ratio = hl_emit_own (emit, "pressure_ratio", HL_VAR_RATIO), power = hl_emit_own (emit, "power", HL_VAR_POWER);
-  int motor_power = hl_emit_own (emit, "motor_power", HL_VAR_POWER);
   hl_emit_guess (emit, in_node, 2.7e6);
   hl_emit_guess (emit, out_node, 3e6);
   hl_system_merge (emit->system, in->m, out->m);
@@ -32,14 +31,7 @@ emit_compressor (HlEmit *emit)
   const int pairs[] = { in->m, out->h, in->m, in->h };
   hl_emit_done (emit, hl_add_energy (emit->system, HL_VAR_POWER, pairs, (const double[]) { 1.0, -1.0 }, 2, &power, (const double[]) { -1.0 }, 1),
                 N_("{4} = {0} × ({1} − {3})"), 4);
-  hl_emit_sum (emit, HL_SUM_PUMP_POWER, power);
-  if (emit->model->is_on_shaft[emit->index])
-    {
-      hl_emit_done (emit, hl_add_linear (emit->system, HL_VAR_POWER, &motor_power, (const double[]) { 1.0 }, 1, 0.0), N_("{0} = 0: driven by its shaft"), 0);
-      return;
-    }
-  hl_emit_done (emit, hl_add_quotient (emit->system, motor_power, power, motor), NULL, 0);
-  hl_emit_sum (emit, HL_SUM_MOTOR_POWER, motor_power);
+  hl_drive_emit (emit, power);
 }
 
 static void

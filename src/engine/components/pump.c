@@ -1,6 +1,6 @@
 /* Pump with its motor, or driven by a shaft.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "engine/components/components.h"
+#include "engine/components/drive.h"
 #include "plant/i18n.h"
 #include <math.h>
 
@@ -9,23 +9,15 @@ emit_pump (HlEmit *emit)
 {
   const int in_node = hl_emit_port (emit, "inlet"), out_node = hl_emit_port (emit, "outlet");
   const HlNode *in = hl_model_node (emit->model, in_node), *out = hl_model_node (emit->model, out_node);
-  int efficiency = hl_emit_own (emit, "isentropic_efficiency", HL_VAR_RATIO), motor = hl_emit_own (emit, "motor_efficiency", HL_VAR_RATIO);
+  int efficiency = hl_emit_own (emit, "isentropic_efficiency", HL_VAR_RATIO);
   int rise = hl_emit_own (emit, "pressure_rise", HL_VAR_PRESSURE_DIFFERENCE), power = hl_emit_own (emit, "power", HL_VAR_POWER);
-  int motor_power = hl_emit_own (emit, "motor_power", HL_VAR_POWER);
   hl_system_merge (emit->system, in->m, out->m);
   hl_emit_done (emit, hl_add_compression (emit->system, in->fluid, in->p, in->h, out->p, efficiency, out->h), NULL, -1);
   hl_emit_done (emit, hl_add_pressure_rise (emit->system, in->p, out->p, rise), NULL, 2);
   const int pairs[] = { in->m, out->h, in->m, in->h };
   hl_emit_done (emit, hl_add_energy (emit->system, HL_VAR_POWER, pairs, (const double[]) { 1.0, -1.0 }, 2, &power, (const double[]) { -1.0 }, 1),
                 N_("{4} = {0} × ({1} − {3})"), 4);
-  hl_emit_sum (emit, HL_SUM_PUMP_POWER, power);
-  if (emit->model->is_on_shaft[emit->index])
-    {
-      hl_emit_done (emit, hl_add_linear (emit->system, HL_VAR_POWER, &motor_power, (const double[]) { 1.0 }, 1, 0.0), N_("{0} = 0: driven by its shaft"), 0);
-      return;
-    }
-  hl_emit_done (emit, hl_add_quotient (emit->system, motor_power, power, motor), NULL, 0);
-  hl_emit_sum (emit, HL_SUM_MOTOR_POWER, motor_power);
+  hl_drive_emit (emit, power);
 }
 
 static void

@@ -1,6 +1,6 @@
 /* Turbine section: groups between extractions, each with its efficiency, or one straight line in h and s.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "engine/components/components.h"
+#include "engine/components/turbine.h"
 #include "engine/wet-expansion.h"
 #include "plant/i18n.h"
 #include <math.h>
@@ -116,8 +116,8 @@ emit_expansion (HlEmit *emit, const int *nodes, int n_groups, int section)
     hl_emit_done (emit, hl_add_moisture (emit->system, line.fluid, line.p[n_groups], line.h[n_groups], y), NULL, 2);
 }
 
-static void
-emit_turbine (HlEmit *emit)
+void
+hl_turbine_emit (HlEmit *emit)
 {
   int n_extractions = MIN (hl_component_option (emit->component, "extractions"), MOST_OUTLETS - 2), n_groups = n_extractions + 1;
   int nodes[MOST_OUTLETS], flows[MOST_OUTLETS], pairs[2 * MOST_OUTLETS];
@@ -145,7 +145,7 @@ emit_turbine (HlEmit *emit)
                 2 * (n_groups + 1));
   hl_emit_done (emit, hl_add_product (emit->system, internal, mechanical, power), NULL, 2);
   hl_emit_sum (emit, HL_SUM_TURBINE_POWER, power);
-  if (!emit->model->is_on_shaft[emit->index])
+  if (!emit->model->is_on_shaft[emit->index] && !emit->component->kind->only_drives)
     hl_emit_sum (emit, HL_SUM_GROSS, power);
 }
 
@@ -176,8 +176,8 @@ check_outlet (HlChecker *checker, const char *above, const char *outlet, const H
   *last = out;
 }
 
-static void
-check (HlChecker *checker)
+void
+hl_turbine_check (HlChecker *checker)
 {
   int n_extractions = hl_component_option (checker->component, "extractions");
   const HlNodeResult *last = hl_check_port (checker, "inlet"), *exhaust = hl_check_port (checker, "exhaust");
@@ -219,8 +219,8 @@ find_end (const HlProcessSink *sink, int exhaust, HlState *end)
          && hl_fluid_state_ph (hl_model_node (sink->model, exhaust)->fluid, sink->states[exhaust].p, h, end) == HL_OK;
 }
 
-static void
-processes (HlProcessSink *sink)
+void
+hl_turbine_processes (HlProcessSink *sink)
 {
   int n_extractions = hl_component_option (sink->component, "extractions"), from = hl_process_node (sink, "inlet");
   for (int k = 1; k <= n_extractions + 1; k++)
@@ -239,4 +239,4 @@ processes (HlProcessSink *sink)
     }
 }
 
-const HlComponentModel hl_turbine_model = { "turbine", emit_turbine, check, processes };
+const HlComponentModel hl_turbine_model = { "turbine", hl_turbine_emit, hl_turbine_check, hl_turbine_processes };

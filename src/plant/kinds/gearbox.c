@@ -9,12 +9,12 @@ static const HlQuantityKind quantities[] = {
     .help = N_("Power that goes on over power that comes in.") },
   { .key = "input_power", .sign = "P", .name = N_("Power in"), .group = N_("Power"),
     .dimension = HL_DIMENSION_POWER, .flags = HL_QUANTITY_RESULT,
-    NO_DEFAULT, NO_RANGE, LIMITS_POWER,
-    .help = N_("Power of all drivers of the shaft.") },
+    NO_DEFAULT, NO_RANGE, LIMITS (-1e12, 1e12),
+    .help = N_("Power that comes to it along the shaft; less than nothing where it runs back.") },
   { .key = "output_power", .sign = "P", .name = N_("Power out"), .group = N_("Power"),
     .dimension = HL_DIMENSION_POWER, .flags = HL_QUANTITY_RESULT,
-    NO_DEFAULT, NO_RANGE, LIMITS_POWER,
-    .help = N_("Power that goes on to what is driven.") },
+    NO_DEFAULT, NO_RANGE, LIMITS (-1e12, 1e12),
+    .help = N_("Power that goes on along the shaft.") },
   { .key = "loss", .sign = "P", .name = N_("Gearbox loss"), .group = N_("Power"),
     .dimension = HL_DIMENSION_POWER, .flags = HL_QUANTITY_RESULT,
     NO_DEFAULT, NO_RANGE, LIMITS_POWER,
@@ -23,7 +23,7 @@ static const HlQuantityKind quantities[] = {
 
 const HlKind hl_kind_gearbox = {
   .id = "gearbox", .letter = "GB", .name = N_("Gearbox"), .shelf_name = N_("gearbox"), .shelf_group = N_("Expand"),
-  .help = N_("Takes its loss from all that the turbines and motors of its shaft give."),
+  .help = N_("Joins two parts of a shaft and loses a part of the power that passes from one to the other."),
   .shaft = HL_SHAFT_LOSS, .half_width = 2, .half_height = 2,
   .quantities = ROWS (quantities),
 };

@@ -1,0 +1,9 @@
+/* The motor of a driven machine.
+ * SPDX-License-Identifier: GPL-3.0-or-later */
+#pragma once
+#include "engine/components/components.h"
+G_BEGIN_DECLS
+
+/* Adds motor_power, and motor_efficiency unless a shaft drives the machine; @power: its shaft power. */
+void hl_drive_emit (HlEmit *emit, int power);
+G_END_DECLS
