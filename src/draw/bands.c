@@ -112,11 +112,18 @@ is_kind (const HlComponent *component, const char *id)
 
 typedef struct { HlBandKind kind; double m, h; char *name; } Water;
 
-/* Water through the doors of the plant: make-up, boundaries, what users lose. */
+/* Water through the doors of the plant: make-up, boundaries, what users lose, what vents let off. */
 static void
 collect_water (Books *books, const HlComponent *component, GArray *waters)
 {
   gboolean is_user = is_kind (component, "steam_user");
+  Water vent = { .kind = HL_BAND_WATER_OUT };
+  if (own (books, component, "vent_flow", &vent.m) && vent.m > 0.0)
+    {
+      vent.h = needed (books, component, "vent_h");
+      vent.name = g_strdup_printf (_("steam let off at %s"), component->id);
+      g_array_append_val (waters, vent);
+    }
   if (!is_kind (component, "make_up") && !is_kind (component, "boundary") && !is_user)
     return;
   for (guint i = 0; i < hl_component_n_ports (component); i++)

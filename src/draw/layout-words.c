@@ -19,6 +19,9 @@ static const struct {
   { "generator",     { { "power", NULL } } },
   { "feed_pump_turbine", { { "power", NULL }, { "isentropic_efficiency", "η" } } },
   { "gearbox",       { { "efficiency", "η" } } },
+  { "control_stage", { { "power", NULL }, { "isentropic_efficiency", "η" } } },
+  { "drain_pump",    { { "power", NULL } } },
+  { "gland_seal",    { { "leak_fraction", "m", PER_CENT } } },
   { "condenser",     { { "heat", NULL } } },
   { "pump",          { { "power", NULL } } },
   { "pipe",          { { "pressure_loss", "Δp", PER_CENT } } },
@@ -191,7 +194,7 @@ hl_layout_set_words (HlLayout *layout, const HlSolution *solution, const HlTheme
 static gboolean
 passes_cooling_on (const HlKind *kind)
 {
-  static const char *const ids[] = { "pump", "pipe", "valve", "splitter", "mixer", NULL };
+  static const char *const ids[] = { "pump", "drain_pump", "pipe", "valve", "splitter", "mixer", NULL };
   return g_strv_contains (ids, kind->id);
 }
 

@@ -53,6 +53,11 @@ book_doors (const HlSolution *solution, int c, Balance *mass, Balance *energy)
       if (out >= 0)
         book (energy, -own (solution, c, "lost_flow") * solution->states[out].st.h);
     }
+  else if (g_str_equal (kind, "open_heater"))
+    {
+      book (mass, -own (solution, c, "vent_flow"));
+      book (energy, -own (solution, c, "vent_flow") * own (solution, c, "vent_h"));
+    }
   else if (g_str_equal (kind, "make_up") || g_str_equal (kind, "boundary"))
     for (int k = model->first_port[c]; k < model->first_port[c + 1]; k++)
       {
@@ -86,7 +91,7 @@ hl_solution_balances (const HlSolution *solution, double *mass, double *energy)
           const HlPortNode *port = &g_array_index (model->ports, HlPortNode, k);
           sum += (port->is_out ? -1.0 : 1.0) * solution->states[port->node].m;
         }
-      sum -= g_str_equal (kind, "steam_user") ? own (solution, (int) c, "lost_flow") : 0.0;
+      sum -= own (solution, (int) c, "lost_flow") + own (solution, (int) c, "vent_flow");
       if (largest > 0.0 && fabs (sum) / largest > fabs (worst))
         worst = sum / largest;
     }

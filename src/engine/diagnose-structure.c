@@ -36,64 +36,6 @@ find_open_ports (const HlModel *model, HlFindings *findings)
     }
 }
 
-/* --- circuits that lose water --------------------------------------------------------- */
-
-/* Steam is lost somewhere, and nothing flows in: the balances would force every flow to nothing. */
-static gboolean
-find_leaks (const HlModel *model, HlFindings *findings)
-{
-  HlSystem *system = model->system;
-  guint n = system->vars->len;
-  g_autofree int *sum = g_new0 (int, n + 1), *group = g_new (int, n + 1), *parent = g_new (int, n + 1);
-  g_autofree gboolean *gains = g_new0 (gboolean, n + 1), *loses = g_new0 (gboolean, n + 1);
-  gboolean found = FALSE;
-  for (guint i = 0; i < n; i++)
-    parent[i] = (int) i;
-  for (guint k = 0; k < system->equations->len; k++)
-    {
-      const HlEquation *e = hl_system_equation (system, k);
-      const int *vars = hl_equation_vars (system, e);
-      const double *sign = &g_array_index (system->constants, double, e->first_constant);
-      if (!e->is_balance)
-        continue;
-      for (int i = 0; i < e->n; i++)
-        {
-          sum[vars[i]] += (int) sign[i];
-          int a = vars[i], b = vars[0];
-          while (parent[a] != a)
-            a = parent[a];
-          while (parent[b] != b)
-            b = parent[b];
-          parent[a] = b;
-        }
-    }
-  for (guint i = 0; i < n; i++)
-    {
-      int root = (int) i;
-      while (parent[root] != root)
-        root = parent[root];
-      group[i] = root;
-      gains[root] |= sum[i] > 0;
-      loses[root] |= sum[i] < 0;
-    }
-  for (guint c = 0; c < hl_plant_n_components (model->plant); c++)
-    {
-      int lost = hl_model_own_var (model, (int) c, "lost_flow");
-      if (lost < 0 || sum[system->root[lost]] == 0)
-        continue;
-      int g = group[system->root[lost]];
-      if (gains[g] || !loses[g])
-        continue;
-      const HlComponent *component = hl_plant_component (model->plant, c);
-      HlAddress at = hl_address_component (component->id, g_intern_static_string ("return_fraction"));
-      HlFinding *finding = hl_findings_add (findings, HL_GRADE_ERROR, "no-make-up", at,
-        g_strdup_printf (_("%s does not return all its steam, and its circuit has no make-up water. Add a make-up, or return all of it."), component->id));
-      hl_finding_mend (finding, HL_MEND_GIVE, at, 1.0, g_strdup_printf (_("Return all of it from %s"), component->id));
-      found = TRUE;
-    }
-  return found;
-}
-
 /* --- too many values ------------------------------------------------------------------- */
 
 GArray *
@@ -169,6 +111,21 @@ spec_with_value (const HlModel *model, const HlSpec *spec)
   return g_strdup_printf ("%s (%s)", name, value);
 }
 
+/* Does what flows in there fall to the pressure behind by itself?  A valve before it would change nothing. */
+static gboolean
+throttles_itself (const HlModel *model, const HlStream *stream)
+{
+  static const struct { const char *kind, *port; } inlets[] = {
+    { "flash_vessel", "inlet" }, { "valve", "inlet" }, { "bypass_station", "steam" }, { "bypass_station", "spray" }, { "desuperheater", "spray" },
+    { "closed_heater", "drain_inlet" }, { "condenser", "drain" }, { "air_condenser", "drain" }, { "district_heater", "drain_inlet" },
+  };
+  const HlComponent *to = hl_plant_find_component (model->plant, stream->to_id);
+  for (guint k = 0; to != NULL && k < G_N_ELEMENTS (inlets); k++)
+    if (g_str_equal (to->kind->id, inlets[k].kind) && g_str_equal (stream->to_port, inlets[k].port))
+      return TRUE;
+  return FALSE;
+}
+
 /* A stream on the way between the owners of two pressures, for a valve. */
 static int
 stream_between (const HlModel *model, const HlSpec *a, const HlSpec *b)
@@ -178,7 +135,7 @@ stream_between (const HlModel *model, const HlSpec *a, const HlSpec *b)
     {
       const HlStream *stream = hl_plant_stream (model->plant, i);
       const HlNode *node = hl_model_node (model, (int) i);
-      if (model->system->root[node->p] != root)
+      if (model->system->root[node->p] != root || throttles_itself (model, stream))
         continue;
       if ((stream->from_id == a->address.id && stream->to_id == b->address.id) || (stream->from_id == b->address.id && stream->to_id == a->address.id))
         return (int) i;
@@ -187,7 +144,7 @@ stream_between (const HlModel *model, const HlSpec *a, const HlSpec *b)
     {
       const HlStream *stream = hl_plant_stream (model->plant, i);
       const HlNode *node = hl_model_node (model, (int) i);
-      if (model->system->root[node->p] == root
+      if (model->system->root[node->p] == root && !throttles_itself (model, stream)
           && (stream->from_id == a->address.id || stream->to_id == a->address.id || stream->from_id == b->address.id || stream->to_id == b->address.id))
         return (int) i;
     }
@@ -218,9 +175,11 @@ find_meeting_pressures (const HlModel *model, const GArray *specs, HlFindings *f
             || hl_system_var (system, a->var)->kind != HL_VAR_PRESSURE)
           continue;
         g_autofree char *first = spec_with_value (model, a), *second = spec_with_value (model, b);
-        HlFinding *finding = hl_findings_add (findings, HL_GRADE_ERROR, "pressures-meet", a->address,
-          g_strdup_printf (_("Two pressures meet: %s and %s are one and the same. Let one of them be found, or insert a throttle valve between them."), first, second));
         int stream = stream_between (model, a, b);
+        HlFinding *finding = hl_findings_add (findings, HL_GRADE_ERROR, "pressures-meet", a->address,
+          stream >= 0
+            ? g_strdup_printf (_("Two pressures meet: %s and %s are one and the same. Let one of them be found, or insert a throttle valve between them."), first, second)
+            : g_strdup_printf (_("Two pressures meet: %s and %s are one and the same. Let one of them be found."), first, second));
         if (stream >= 0)
           {
             const char *id = hl_plant_stream (model->plant, (guint) stream)->id;
@@ -589,7 +548,7 @@ hl_diagnose_structure (const HlModel *model, const HlStructure *structure, HlFin
   find_open_ports (model, findings);
   if (hl_diagnose_media (model, findings))
     return FALSE;
-  if (!hl_diagnose_ties (model, findings) || find_leaks (model, findings))
+  if (!hl_diagnose_ties (model, findings) || hl_diagnose_leaks (model, findings))
     return FALSE;
   if (structure->n_over > 0)
     find_surplus (model, structure, findings);

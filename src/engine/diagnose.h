@@ -18,4 +18,6 @@ gboolean hl_diagnose_media     (const HlModel *model, HlFindings *findings);
 /* Values that somebody put in and that take part in the equations of the over-determined part: indices of specs.
  * Returns (transfer full), element-type int. */
 GArray  *hl_diagnose_surplus   (const HlModel *model, const int *equations, int n);
+/* Circuits that lose water and get none. */
+gboolean hl_diagnose_leaks (const HlModel *model, HlFindings *findings);
 G_END_DECLS

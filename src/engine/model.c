@@ -3,6 +3,7 @@
 #include "engine/model.h"
 #include "engine/components/components.h"
 #include "plant/circuit.h"
+#include "engine/heads.h"
 #include "engine/shafts.h"
 #include "plant/i18n.h"
 #include <math.h>
@@ -591,9 +592,11 @@ hl_model_new_other (HlPlant *plant, const gboolean *other, guint n_other)
       model->first_own[c] = (int) model->own->len;
       if (component_model != NULL)
         component_model->emit (&emit);
+      hl_heads_emit_elevation (&emit);
     }
   model->first_own[n] = model->first_own[n + 1] = (int) model->own->len;
   hl_shafts_add (model);
+  hl_heads_add (model);
   hl_emit_plant (model);
   model->first_own[n + 1] = (int) model->own->len;
   add_values (model);

@@ -22,6 +22,7 @@ static const struct { const char *key, *name; } hidden[] = {
   { "water_outlet_p", N_("outlet pressure of the water") },
   { "water_inlet_h", N_("inlet enthalpy of the water") },
   { "water_outlet_h", N_("outlet enthalpy of the water") },
+  { "vent_h", N_("enthalpy of the vent steam") },
   { "saturation_T", N_("saturation temperature") },
 };
 
@@ -93,6 +94,7 @@ hl_name_dimension (HlVarKind kind)
     case HL_VAR_PRESSURE_DIFFERENCE: return HL_DIMENSION_PRESSURE_DIFFERENCE;
     case HL_VAR_HEAT_RATE: return HL_DIMENSION_HEAT_RATE;
     case HL_VAR_STEAM_RATE: return HL_DIMENSION_STEAM_RATE;
+    case HL_VAR_LENGTH: return HL_DIMENSION_LENGTH;
     }
   return HL_DIMENSION_RATIO;
 }

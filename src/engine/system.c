@@ -192,6 +192,7 @@ hl_system_scale (const HlSystem *system, HlVarKind kind)
     case HL_VAR_CONDUCTANCE: return system->flow_scale * 1e5;
     case HL_VAR_PRESSURE_DIFFERENCE: return 1e6;
     case HL_VAR_STEAM_RATE: return 1e-6;
+    case HL_VAR_LENGTH: return 10.0;
     default: return 1.0;
     }
 }
@@ -224,6 +225,7 @@ hl_system_start (const HlVar *var, double flow_scale)
     case HL_VAR_PRESSURE_DIFFERENCE: return 1e6;
     case HL_VAR_HEAT_RATE: return 2.5;
     case HL_VAR_STEAM_RATE: return 1e-6;
+    case HL_VAR_LENGTH: return 5.0;
     }
   return 1.0;
 }
@@ -278,6 +280,7 @@ hl_var_kind_of (HlDimension dimension)
     case HL_DIMENSION_HEAT_RATE: return HL_VAR_HEAT_RATE;
     case HL_DIMENSION_EMISSION:
     case HL_DIMENSION_STEAM_RATE: return HL_VAR_STEAM_RATE;
+    case HL_DIMENSION_LENGTH: return HL_VAR_LENGTH;
     default: return HL_VAR_RATIO;
     }
 }

@@ -20,6 +20,7 @@ typedef enum {
   HL_VAR_PRESSURE_DIFFERENCE,
   HL_VAR_HEAT_RATE,
   HL_VAR_STEAM_RATE,
+  HL_VAR_LENGTH,
 } HlVarKind;
 
 /* Variables which are equal by structure form a class; its root stands for all of them. */

@@ -90,5 +90,9 @@ void
 hl_component_shaft_place (const HlComponent *component, int end, int *x, int *y)
 {
   g_return_if_fail (component != NULL && x != NULL && y != NULL);
-  place (component, end == 0 ? -half_width (component) : half_width (component), 0, x, y);
+  /* What a shaft drives is flown through from side to side: its shaft comes from below or above. */
+  if (component->kind->shaft == HL_SHAFT_DRIVEN)
+    place (component, 0, end == 0 ? -component->kind->half_height : component->kind->half_height, x, y);
+  else
+    place (component, end == 0 ? -half_width (component) : half_width (component), 0, x, y);
 }

@@ -94,7 +94,7 @@ HL_PUBLIC const HlQuantityKind *hl_component_quantity_kind (const HlComponent *c
 /* Geometry with turn and mirror put in, in grid units of the canvas. */
 HL_PUBLIC void   hl_component_half_size  (const HlComponent *component, int *half_width, int *half_height);  /* turned */
 HL_PUBLIC void   hl_component_port_place (const HlComponent *component, guint n, int *x, int *y, HlSide *side);
-/* Where a shaft line ends: @end 0 the left, 1 the right end of the unturned symbol. */
+/* Where a shaft line ends: @end 0 the left, 1 the right end of the unturned symbol; of a driven machine above and below. */
 HL_PUBLIC void   hl_component_shaft_place (const HlComponent *component, int end, int *x, int *y);
 
 typedef struct { int x, y; } HlGridPoint;

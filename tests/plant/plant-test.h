@@ -14,9 +14,9 @@
   "  {\"id\": \"T1\", \"kind\": \"turbine\", \"at\": [20, 8], \"turn\": 1, \"mirror\": true, \"extractions\": 1, \"expansion\": \"straight line\", \"wetness\": \"none\", \"leaving_loss\": \"none\", \"given\": {\"exhaust.p\": 7000, \"inlet.p\": 6500000}, \"assumed\": {\"isentropic_efficiency\": 0.83}, \"tied\": {\"extraction1.p\": \"0.05*B1.steam.p+20000\"}, \"maker\": {\"name\": \"unknown\", \"years\": [1, 2.5]}},\n" \
   "  {\"id\": \"G1\", \"kind\": \"generator\", \"at\": [26, 8]},\n" \
   "  {\"id\": \"C1\", \"kind\": \"condenser\", \"at\": [24, 18], \"cooling\": \"none\"},\n" \
-  "  {\"id\": \"P1\", \"kind\": \"pump\", \"at\": [14, 22], \"assumed\": {\"isentropic_efficiency\": 0.75}},\n" \
-  "  {\"id\": \"D1\", \"kind\": \"open_heater\", \"at\": [12, 22], \"inlets\": 1},\n" \
-  "  {\"id\": \"P2\", \"kind\": \"pump\", \"at\": [6, 22]}],\n" \
+  "  {\"id\": \"P1\", \"kind\": \"pump\", \"at\": [14, 22], \"suction\": \"not checked\", \"assumed\": {\"isentropic_efficiency\": 0.75}},\n" \
+  "  {\"id\": \"D1\", \"kind\": \"open_heater\", \"at\": [12, 22], \"inlets\": 1, \"vent\": \"none\"},\n" \
+  "  {\"id\": \"P2\", \"kind\": \"pump\", \"at\": [6, 22], \"suction\": \"not checked\"}],\n" \
   " \"streams\": [\n" \
   "  {\"id\": \"live\", \"from\": \"B1.steam\", \"to\": \"T1.inlet\", \"medium\": \"water\", \"route\": [[10, 8], [11, 8]], \"label\": [12, 6]},\n" \
   "  {\"id\": \"2\", \"from\": \"T1.exhaust\", \"to\": \"C1.steam\", \"medium\": \"water\"},\n" \

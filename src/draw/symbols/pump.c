@@ -23,3 +23,4 @@ lead (const HlComponent *component, double x, double y, HlSide side, double half
 }
 
 const HlSymbol hl_symbol_pump = { "pump", draw, lead };
+const HlSymbol hl_symbol_drain_pump = { "drain_pump", draw, lead };

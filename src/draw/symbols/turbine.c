@@ -15,6 +15,16 @@ draw (const HlPen *pen)
   hl_pen_body (pen);
 }
 
+/* The wheel of the control stage. */
+static void
+draw_stage (const HlPen *pen)
+{
+  static const double wheel[][2] = { { 0.0, -1.5 }, { 0.0, 1.5 } };
+  draw (pen);
+  hl_pen_path (pen, wheel, 2);
+  hl_pen_stroke (pen, &pen->theme->ink, 0.7);
+}
+
 /* Extractions leave below the box; the slanted side lies above their ports. */
 static double
 lead (const HlComponent *component, double x, double y, HlSide side, double half_width)
@@ -26,4 +36,5 @@ lead (const HlComponent *component, double x, double y, HlSide side, double half
 }
 
 const HlSymbol hl_symbol_turbine = { "turbine", draw, lead };
+const HlSymbol hl_symbol_control_stage = { "control_stage", draw_stage, lead };
 const HlSymbol hl_symbol_feed_pump_turbine = { "feed_pump_turbine", draw, lead };

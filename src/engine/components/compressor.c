@@ -4,17 +4,6 @@
 #include "plant/i18n.h"
 #include <math.h>
 
-static HlStatus
-ratio_of (G_GNUC_UNUSED const HlEquation *e, G_GNUC_UNUSED const double *a, const double *x, double *r, double *dr)
-{
-  double ratio = exp (x[1] - x[0]);
-  *r = x[2] - ratio;
-  dr[0] = ratio;
-  dr[1] = -ratio;
-  dr[2] = 1.0;
-  return HL_OK;
-}
-
 static void
 emit_compressor (HlEmit *emit)
 {
@@ -26,8 +15,7 @@ emit_compressor (HlEmit *emit)
   hl_emit_guess (emit, out_node, 3e6);
   hl_system_merge (emit->system, in->m, out->m);
   hl_emit_done (emit, hl_add_compression (emit->system, in->fluid, in->p, in->h, out->p, efficiency, out->h), NULL, -1);
-  hl_emit_done (emit, hl_system_add_equation (emit->system, ratio_of, HL_VAR_RATIO, 4, (const int[]) { in->p, out->p, ratio }, 3, NULL, 0),
-                N_("{2} = {1} ÷ {0}"), 2);
+  hl_emit_done (emit, hl_drive_add_ratio (emit->system, in->p, out->p, ratio), NULL, 2);
   const int pairs[] = { in->m, out->h, in->m, in->h };
   hl_emit_done (emit, hl_add_energy (emit->system, HL_VAR_POWER, pairs, (const double[]) { 1.0, -1.0 }, 2, &power, (const double[]) { -1.0 }, 1),
                 N_("{4} = {0} × ({1} − {3})"), 4);

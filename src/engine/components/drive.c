@@ -1,7 +1,27 @@
-/* The motor of a driven machine, which it has no need of on a shaft.
+/* The motor of a driven machine, which it has no need of on a shaft; pressure ratios.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "engine/components/drive.h"
 #include "plant/i18n.h"
+#include <math.h>
+
+static HlStatus
+ratio_of (G_GNUC_UNUSED const HlEquation *e, G_GNUC_UNUSED const double *a, const double *x, double *r, double *dr)
+{
+  double ratio = exp (x[1] - x[0]);
+  *r = x[2] - ratio;
+  dr[0] = ratio;
+  dr[1] = -ratio;
+  dr[2] = 1.0;
+  return HL_OK;
+}
+
+HlEquation *
+hl_drive_add_ratio (HlSystem *system, int p_in, int p_out, int ratio)
+{
+  HlEquation *e = hl_system_add_equation (system, ratio_of, HL_VAR_RATIO, 4, (const int[]) { p_in, p_out, ratio }, 3, NULL, 0);
+  e->says = N_("{2} = {1} ÷ {0}");
+  return e;
+}
 
 void
 hl_drive_emit (HlEmit *emit, int power)

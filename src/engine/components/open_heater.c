@@ -6,6 +6,40 @@
 
 #define NODE(emit, n) hl_model_node ((emit)->model, n)
 
+/* Where nothing is let off, the circuit closes and its balances depend on each other: no flow of the vent in them. */
+static gboolean
+has_vent (HlEmit *emit)
+{
+  return hl_component_option (emit->component, "vent") != 0 && !hl_emit_is_fixed_at (emit, "vent_fraction", 0.0);
+}
+
+/* Saturated steam leaves at the vent, beside the water at the outlet, the last of the nodes. */
+static void
+emit_vented (HlEmit *emit, const int *nodes, int n, int vent)
+{
+  HlSystem *system = emit->system;
+  int flows[HL_MIXING_MOST + 1], pairs[2 * HL_MIXING_MOST + 2];
+  double signs[HL_MIXING_MOST + 1];
+  int share = hl_emit_own (emit, "vent_fraction", HL_VAR_RATIO), h = hl_emit_own (emit, "vent_h", HL_VAR_ENTHALPY);
+  int all = hl_emit_constant (emit, HL_VAR_RATIO, 1.0);
+  const HlNode *out = NODE (emit, nodes[n - 1]);
+  hl_system_var (system, h)->start = 2.7e6;
+  for (int k = 0; k < n; k++)
+    {
+      flows[k] = pairs[2 * k] = NODE (emit, nodes[k])->m;
+      pairs[2 * k + 1] = NODE (emit, nodes[k])->h;
+      signs[k] = k < n - 1 ? 1.0 : -1.0;
+    }
+  flows[n] = pairs[2 * n] = vent;
+  pairs[2 * n + 1] = h;
+  signs[n] = -1.0;
+  hl_mixing_merge_pressures (emit, nodes, n);
+  hl_emit_balance (emit, flows, n - 1, flows + n - 1, 2);
+  hl_emit_done (emit, hl_add_energy (system, HL_VAR_POWER, pairs, signs, n + 1, NULL, NULL, 0), NULL, -1);
+  hl_emit_done (emit, hl_add_product (system, out->m, share, vent), NULL, -1);
+  hl_emit_done (emit, hl_add_enthalpy_at_quality (system, out->fluid, out->p, all, h), N_("{2} = h″({0})"), 2);
+}
+
 static void
 emit_open_heater (HlEmit *emit)
 {
@@ -16,7 +50,18 @@ emit_open_heater (HlEmit *emit)
   for (int k = 1; k <= n_inlets; k++)
     nodes[n++] = hl_emit_port (emit, hl_key ("inlet", k));
   nodes[n++] = hl_emit_port (emit, "outlet");
-  hl_mixing_emit (emit, nodes, n);
+  if (has_vent (emit))
+    emit_vented (emit, nodes, n, hl_emit_own (emit, "vent_flow", HL_VAR_FLOW));
+  else
+    {
+      hl_mixing_emit (emit, nodes, n);
+      if (hl_component_option (emit->component, "vent") != 0)
+        {
+          int vent = hl_emit_own (emit, "vent_flow", HL_VAR_FLOW);
+          hl_emit_own (emit, "vent_fraction", HL_VAR_RATIO);
+          hl_emit_done (emit, hl_add_linear (emit->system, HL_VAR_FLOW, &vent, (const double[]) { 1.0 }, 1, 0.0), N_("{0} = 0: nothing is let off"), 0);
+        }
+    }
   const HlNode *steam = NODE (emit, nodes[0]);
   HlNode *out = NODE (emit, nodes[n - 1]);
   out->subcooling = subcooling;

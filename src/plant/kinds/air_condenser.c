@@ -36,6 +36,7 @@ static const HlQuantityKind quantities[] = {
   { .key = "heat", .sign = "Q", .name = N_("Heat rejected"), .group = N_("Result"),
     .dimension = HL_DIMENSION_POWER, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS_POWER,
     .help = N_("Heat that leaves the steam side.") },
+  ELEVATION
 };
 
 const HlKind hl_kind_air_condenser = {

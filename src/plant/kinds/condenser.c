@@ -77,6 +77,7 @@ static const HlQuantityKind quantities[] = {
   { .key = "clean_UA", .sign = "UA_c", .name = N_("Clean conductance"), .group = N_("Result"),
     .dimension = HL_DIMENSION_CONDUCTANCE, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS_CONDUCTANCE,
     .help = N_("Conductance of the same surface with clean tubes: what it must be bought for."), WITH_WATER },
+  ELEVATION
 };
 
 const HlKind hl_kind_condenser = {

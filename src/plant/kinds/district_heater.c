@@ -50,6 +50,7 @@ static const HlQuantityKind quantities[] = {
   { .key = "UA", .sign = "UA", .name = N_("Conductance"), .group = N_("Result"),
     .dimension = HL_DIMENSION_CONDUCTANCE, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS_CONDUCTANCE,
     .help = N_("Heat transfer coefficient times area, summed over desuperheating, condensing and drain cooling zones.") },
+  ELEVATION
 };
 
 const HlKind hl_kind_district_heater = {

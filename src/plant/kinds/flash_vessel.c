@@ -17,6 +17,7 @@ static const HlQuantityKind quantities[] = {
     .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_RESULT | HL_QUANTITY_PERCENT,
     NO_DEFAULT, NO_RANGE, LIMITS_FRACTION,
     .help = N_("Vapour over all that flows in.") },
+  ELEVATION
 };
 
 const HlKind hl_kind_flash_vessel = {

@@ -11,7 +11,8 @@ extern const HlKind hl_kind_heat_input, hl_kind_boiler, hl_kind_turbine, hl_kind
                     hl_kind_exchanger, hl_kind_recuperator, hl_kind_district_heater, hl_kind_air_condenser,
                     hl_kind_cooling_tower, hl_kind_flash_vessel, hl_kind_moisture_separator, hl_kind_desuperheater,
                     hl_kind_compressor, hl_kind_gearbox, hl_kind_motor,
-                    hl_kind_feed_pump_turbine;
+                    hl_kind_feed_pump_turbine, hl_kind_ejector, hl_kind_gland_seal, hl_kind_control_stage,
+                    hl_kind_hotwell, hl_kind_header, hl_kind_bypass_station, hl_kind_drain_pump;
 
 /* Words used by more than one table. */
 #define COMMON_PRACTICE N_("common practice, no source")
@@ -31,6 +32,12 @@ extern const HlKind hl_kind_heat_input, hl_kind_boiler, hl_kind_turbine, hl_kind
 #define LIMITS_FLOW        LIMITS (HL_FROM_ZERO, 1e6)
 #define LIMITS_DIFFERENCE  LIMITS (HL_FROM_ZERO, 1000.0)
 #define LIMITS_CONDUCTANCE LIMITS (HL_FROM_ZERO, 1e12)
+
+/* Where the level of a vessel, or the axis of a pump, lies: counts only for the NPSH of pumps. */
+#define ELEVATION \
+  { .key = "elevation", .sign = "z", .name = N_("Elevation"), .group = N_("Place"), \
+    .dimension = HL_DIMENSION_LENGTH, .flags = 0, NO_DEFAULT, RANGE (-20.0, 120.0), LIMITS (-1e4, 1e4), .yield_rank = 95, \
+    .help = N_("Height of its liquid level, or of a pump's axis, above the plant's floor; only the NPSH of pumps counts it.") },
 
 /* One row per argument. */
 #define ROWS(array) array, G_N_ELEMENTS (array)

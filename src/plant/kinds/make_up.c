@@ -2,6 +2,17 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "plant/kinds/kinds.h"
 
+enum { TREATMENT_NONE, TREATMENT_COUNTED };
+static const char *const treatment_words[] = { "none", "counted", NULL };
+static const char *const treatment_names[] = { N_("not counted"), N_("counted"), NULL };
+
+static const HlOptionKind options[] = {
+  { .key = "treatment", .name = N_("Loss of treatment"), .least = 0, .most = 1, .usual = TREATMENT_NONE,
+    .choices = treatment_words, .choice_names = treatment_names },
+};
+
+#define WITH_TREATMENT .when_option = "treatment", .when_choice = TREATMENT_COUNTED
+
 static const HlPortKind ports[] = {
   { .key = "outlet", .name = N_("outlet"), .direction = HL_PORT_OUT, .side = HL_SIDE_RIGHT, .x = 2, .y = 0 },
 };
@@ -17,11 +28,18 @@ static const HlQuantityKind quantities[] = {
   { .key = "outlet.m", .sign = "m", .name = N_("Make-up flow"), .group = N_("Water"),
     .dimension = HL_DIMENSION_MASS_FLOW, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS_FLOW, .yield_rank = 20,
     .help = N_("Flow that makes up for the water lost.") },
+  { .key = "treatment_loss", .sign = "m/m", .name = N_("Loss of raw water"), .group = N_("Treatment"),
+    .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_ASSUMED | HL_QUANTITY_PERCENT,
+    DEFAULT (0.10, N_("a first guess, no source: rinsing and rejects; the treatment plant's maker decides")), RANGE (0.02, 0.35), LIMITS_LOSS, .yield_rank = 60,
+    .help = N_("Raw water that the treatment rejects over all raw water taken in."), WITH_TREATMENT },
+  { .key = "raw_flow", .sign = "m", .name = N_("Raw water"), .group = N_("Treatment"),
+    .dimension = HL_DIMENSION_MASS_FLOW, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS_FLOW,
+    .help = N_("Raw water that the treatment takes in."), WITH_TREATMENT },
 };
 
 const HlKind hl_kind_make_up = {
   .id = "make_up", .letter = "W", .name = N_("Make-up water"), .shelf_name = N_("make-up"), .shelf_group = N_("Feed"),
   .help = N_("Supplies the water that the cycle loses."),
   .half_width = 2, .half_height = 1,
-  .ports = ROWS (ports), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .options = ROWS (options), .quantities = ROWS (quantities),
 };

@@ -1,41 +1,22 @@
 /* Pump with motor, or driven by a shaft.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "plant/kinds/kinds.h"
+#include "plant/kinds/pump-rows.h"
 
-static const HlPortKind ports[] = {
-  { .key = "inlet", .name = N_("inlet"), .direction = HL_PORT_IN, .side = HL_SIDE_LEFT, .x = -2, .y = 0 },
-  { .key = "outlet", .name = N_("outlet"), .direction = HL_PORT_OUT, .side = HL_SIDE_RIGHT, .x = 2, .y = 0 },
-};
+PUMP_SUCTION_WORDS
+
+static const HlOptionKind options[] = { PUMP_SUCTION_OPTION };
+
+static const HlPortKind ports[] = { PUMP_PORTS };
 
 static const HlQuantityKind quantities[] = {
-  { .key = "outlet.p", .sign = "p", .name = N_("Outlet pressure"), .group = N_("Delivery"),
-    .dimension = HL_DIMENSION_PRESSURE, .flags = HL_QUANTITY_USUAL,
-    NO_DEFAULT, RANGE (0.5e5, 400e5), LIMITS_PRESSURE, .yield_rank = 20,
-    .help = N_("Pressure at the outlet; mostly what lies behind the pump decides it.") },
-  { .key = "isentropic_efficiency", .sign = "η", .name = N_("Isentropic efficiency"), .group = N_("Delivery"),
-    .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_ASSUMED,
-    DEFAULT (0.75, N_("common practice, no source: condensate pumps 0.75, boiler feed pumps small 0.70, large 0.82")),
-    RANGE (0.40, 0.87), LIMITS_EFFICIENCY, .yield_rank = 52,
-    .help = N_("Enthalpy rise at constant entropy over the enthalpy rise.") },
-  { .key = "motor_efficiency", .sign = "η_m", .name = N_("Motor efficiency"), .group = N_("Power"),
-    .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_ASSUMED,
-    DEFAULT (0.95, N_("common practice, no source; motor classes: IEC 60034-30-1")),
-    RANGE (0.85, 0.97), LIMITS_EFFICIENCY, .yield_rank = 82,
-    .help = N_("Shaft power over electrical power; not used where a shaft drives the pump.") },
-  { .key = "pressure_rise", .sign = "Δp", .name = N_("Pressure rise"), .group = N_("Delivery"),
-    .dimension = HL_DIMENSION_PRESSURE_DIFFERENCE, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS (HL_FROM_ZERO, 1e9),
-    .help = N_("Outlet pressure minus inlet pressure.") },
-  { .key = "power", .sign = "P", .name = N_("Shaft power"), .group = N_("Power"),
-    .dimension = HL_DIMENSION_POWER, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS_POWER,
-    .help = N_("Power that the pump takes at its shaft.") },
-  { .key = "motor_power", .sign = "P_el", .name = N_("Motor power"), .group = N_("Power"),
-    .dimension = HL_DIMENSION_POWER, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS_POWER,
-    .help = N_("Electrical power of the motor; 0 where a shaft drives the pump.") },
+  PUMP_DELIVERY (0.75, N_("common practice, no source: condensate pumps 0.75, boiler feed pumps small 0.70, large 0.82"))
+  PUMP_SUCTION (3.0, N_("an example, no source: 2-4 m for condensate pumps, more for feed pumps; the maker decides"))
+  PUMP_POWER
 };
 
 const HlKind hl_kind_pump = {
   .id = "pump", .letter = "P", .name = N_("Pump"), .shelf_name = N_("pump"), .shelf_group = N_("Feed"),
   .help = N_("Raises the pressure of a liquid; driven by a motor unless it sits on a shaft."),
   .shaft = HL_SHAFT_DRIVEN, .half_width = 2, .half_height = 2,
-  .ports = ROWS (ports), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .options = ROWS (options), .quantities = ROWS (quantities),
 };
