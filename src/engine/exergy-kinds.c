@@ -200,6 +200,23 @@ book_open_heater (HlExergySink *sink)
     }
 }
 
+/* What leaves at the vent is a loss, and no part of the mixture. */
+static void
+book_vented_heater (HlExergySink *sink)
+{
+  int out = hl_exergy_node (sink, "outlet"), vent = hl_exergy_own (sink, "vent_flow"), h = hl_exergy_own (sink, "vent_h");
+  book_open_heater (sink);
+  if (out < 0 || vent < 0 || h < 0)
+    return;
+  hl_exergy_flow (sink, HL_ROLE_FUEL, 1.0, vent, out);
+  HlExergyTerm *term = hl_exergy_flow (sink, HL_ROLE_LOSS, -1.0, vent, -1);
+  term->form = HL_TERM_WATER;
+  term->fluid = hl_model_node (sink->model, out)->fluid;
+  term->p = hl_model_node (sink->model, out)->p;
+  term->h = h;
+  term->door = HL_DOOR_LOSS;
+}
+
 static void
 own_water (HlExergySink *sink, double sign, const HlFluid *fluid, const char *p, const char *h)
 {
@@ -262,10 +279,13 @@ static const HlExergyKind kinds[] = {
   { "boiler", book_boiler,
     N_("Fuel: chemical exergy of the fuel, its ratio times the heat on the lower heating value; product: what live steam, reheat and blowdown gain. What leaves with the flue gas is a loss where its temperature is known, else destroyed here.") },
   { "turbine", NULL, N_("Fuel: what the steam gives up from inlet to outlets; product: shaft power.") },
+  { "feed_pump_turbine", NULL, N_("Fuel: what the steam gives up from inlet to outlets; product: shaft power.") },
+  { "control_stage", NULL, N_("Fuel: what the steam gives up from inlet to outlets; product: shaft power.") },
   { "generator", book_generator, N_("Fuel: shaft power; product: electrical power.") },
   { "motor", book_motor, N_("Fuel: electrical power; product: shaft power.") },
   { "gearbox", book_gearbox, N_("Fuel: shaft power taken; product: shaft power passed on.") },
   { "pump", NULL, N_("Fuel: power of its motor, or of its shaft; product: what the fluid gains.") },
+  { "drain_pump", NULL, N_("Fuel: power of its motor, or of its shaft; product: what the fluid gains.") },
   { "compressor", NULL, N_("Fuel: power of its motor, or of its shaft; product: what the fluid gains.") },
   { "condenser", book_condenser,
     N_("It makes nothing: what the steam gives up is destroyed here, but for what the cooling water carries away, a loss.") },
@@ -273,8 +293,9 @@ static const HlExergyKind kinds[] = {
     N_("It makes nothing: what the steam gives up, and the power of the fans, is destroyed here, but for what the air carries away, a loss.") },
   { "cooling_tower", book_cooling_tower, N_("It makes nothing: the heat leaves at the temperature of the water, a loss.") },
   { "closed_heater", NULL, N_("Fuel: what steam and drains give up; product: what the feedwater gains.") },
-  { "open_heater", book_open_heater,
+  { "open_heater", book_vented_heater,
     N_("Fuel: what the richer inlets give up on becoming the mixture, each by its flow; product: what the poorer ones gain.") },
+  { "ejector", book_open_heater, N_("Fuel: what the motive steam gives up on becoming the mixture; product: what the flow drawn in gains.") },
   { "exchanger", NULL, TWO_SIDES },
   { "recuperator", NULL, TWO_SIDES },
   { "district_heater", book_district_heater, N_("Fuel: what steam and drains give up; product: what the district water gains.") },
@@ -284,6 +305,10 @@ static const HlExergyKind kinds[] = {
   { "valve", NULL, FALLS },
   { "mixer", NULL, FALLS },
   { "flash_vessel", NULL, FALLS },
+  { "gland_seal", NULL, FALLS },
+  { "hotwell", NULL, FALLS },
+  { "header", NULL, FALLS },
+  { "bypass_station", NULL, FALLS },
   { "moisture_separator", NULL, FALLS },
   { "desuperheater", NULL, FALLS },
   { "splitter", NULL, PASSES },

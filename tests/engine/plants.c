@@ -317,6 +317,12 @@ HlPlant *
 test_plant_copies (const char *text, int n, double flow)
 {
   g_autoptr (HlPlant) plant = test_plant (text);
+  return test_plant_copies_of (plant, n, flow);
+}
+
+HlPlant *
+test_plant_copies_of (HlPlant *plant, int n, double flow)
+{
   Builder b = { hl_plant_new (), 0, 0 };
   b.plant = test_plant_let_go (b.plant, "plant.net_power");
   for (int k = 1; k <= n; k++)

@@ -29,6 +29,7 @@ void     test_print       (const HlSolution *solution);
 
 /* @n copies of the plant side by side, ids with the copy's number; every copy with its own flow at T1's inlet. */
 HlPlant *test_plant_copies (const char *text, int n, double flow);
+HlPlant *test_plant_copies_of (HlPlant *plant, int n, double flow);
 
 extern const char *const test_simple_loop, *const test_reheat_plant, *const test_large_plant, *const test_industrial_plant;
 G_END_DECLS

@@ -61,6 +61,88 @@ test_industrial_demo (void)
   g_assert_cmpint (moisture->grade, ==, HL_GRADE_CAUTION);
 }
 
+/* Balance by hand with IAPWS-IF97, rounded: steam 64.8 t/h, gross 11.5 MW, feed pump 0.16 MW, air condenser 13.7 MW, waste 20.2 t/h, district
+ * water 131 kg/s, exhaust quality 0.901; utilisation 0.587 of gross power and heat, as motors and fans were not taken off. */
+static void
+test_waste_demo (void)
+{
+  g_autoptr (HlSolution) s = solve_demo ("marrow-quay.heatloom");
+  test_assert_near (test_value (s, "B1.steam.m") * 3.6, 64.8, 0.003);
+  test_assert_near (test_value (s, "plant.gross_power"), 11.5e6, 0.005);
+  test_assert_near (test_value (s, "P2.motor_power"), 0.16e6, 0.04);
+  test_assert_near (test_value (s, "AC1.heat"), 13.7e6, 0.005);
+  test_assert_near (test_value (s, "plant.fuel_flow") * 3.6, 20.2, 0.003);
+  test_assert_near (test_value (s, "DH1.water_flow"), 131.0, 0.004);
+  test_assert_near (test_value (s, "T1.exhaust.x"), 0.901, 0.0006);
+  test_assert_near ((test_value (s, "plant.gross_power") + 22e6) / test_value (s, "plant.fuel_heat"), 0.587, 0.002);
+  test_assert_near (test_value (s, "AC1.steam.p") / 1e5, 0.12, 1e-12);
+  test_assert_near (test_value (s, "AC1.condensate.T") - 273.15, 49.4, 0.001);
+  test_assert_near (test_value (s, "D1.outlet.T") - 273.15, 130.0, 0.001);
+  /* What the blowdown takes away the make-up brings back. */
+  test_assert_near (test_value (s, "W1.outlet.m"), 0.015 * test_value (s, "B1.feed.m"), 1e-9);
+}
+
+/* In summer the town takes 5 MW, and the air-cooled condenser stands at 0.20 bar. */
+static void
+test_waste_demo_in_summer (void)
+{
+  g_autoptr (HlSolution) winter = solve_demo ("marrow-quay.heatloom");
+  HlPlant *plant = hl_plant_ref (hl_solution_plant (winter));
+  plant = test_plant_set (test_plant_set (plant, "DH1.heat", 5e6), "AC1.steam.p", 0.20e5);
+  g_autoptr (HlSolution) s = hl_solve (plant, winter);
+  hl_plant_unref (plant);
+  test_assert_solved (s);
+  /* More steam goes all the way: more power, though from a worse vacuum. */
+  g_assert_cmpfloat (test_value (s, "plant.gross_power"), >, test_value (winter, "plant.gross_power"));
+  g_assert_cmpfloat (test_value (s, "plant.utilisation"), <, test_value (winter, "plant.utilisation"));
+}
+
+/* Balance by hand with IAPWS-IF97, rounded: live steam 247 kg/s, feed water 250.8 °C, heat 677 MW, gross turbine heat rate 8125 kJ/kWh (44.3 %), gross
+ * plant 39.9 %, feed pump 6.5 MW, exhaust moisture 9.1 %, condenser 372 MW; saturation in the heaters 250.8, 211.6, (175.9), 144.8, 118.1, 92.4, 64.9 °C. */
+static void
+test_large_demo (void)
+{
+  static const struct { const char *heater; double T; } saturation[] = {
+    { "H7.saturation_T", 250.8 }, { "H6.saturation_T", 211.6 }, { "D1.outlet.T", 175.9 }, { "H4.saturation_T", 144.8 },
+    { "H3.saturation_T", 118.1 }, { "H2.saturation_T", 92.4 }, { "H1.saturation_T", 64.9 } };
+  g_autoptr (HlSolution) s = solve_demo ("vesper-point.heatloom");
+  test_assert_near (test_value (s, "T1.inlet.m"), 247.0, 0.002);
+  test_assert_near (test_value (s, "B1.feed.T") - 273.15, 250.8, 0.0005);
+  test_assert_near (test_value (s, "plant.heat_input"), 677e6, 0.001);
+  test_assert_near (test_value (s, "plant.heat_rate") * 3600.0, 8125.0, 0.0003);
+  test_assert_near (1.0 / test_value (s, "plant.heat_rate"), 0.443, 0.001);
+  test_assert_near (test_value (s, "plant.gross_efficiency"), 0.399, 0.001);
+  test_assert_near (test_value (s, "P2.power"), 6.5e6, 0.008);
+  test_assert_near (test_value (s, "FT1.power"), test_value (s, "P2.power"), 1e-10);
+  test_assert_near (test_value (s, "T3.exhaust_moisture"), 0.091, 0.005);
+  test_assert_near (test_value (s, "C1.heat"), 372e6, 0.0015);
+  test_assert_near (test_value (s, "C1.steam.p") / 1e5, 0.055, 0.005);
+  for (guint k = 0; k < G_N_ELEMENTS (saturation); k++)
+    g_assert_cmpfloat_with_epsilon (test_value (s, saturation[k].heater) - 273.15, saturation[k].T, 0.06);
+  /* The deaerator stands high enough for the feed pump. */
+  g_assert_cmpfloat_with_epsilon (test_value (s, "P2.npsh_available"), 24.0 - 0.5 - 1.5, 0.05);
+  g_assert_null (test_finding (s, "npsh"));
+}
+
+/* River water of 12 °C, rise 9 and terminal difference 5 K: 0.0336 bar, gross 13.75 MW, but exhaust quality 0.866: the "better" vacuum. */
+static void
+test_industrial_demo_by_the_river (void)
+{
+  g_autoptr (HlSolution) tower = solve_demo ("tallow-fen.heatloom");
+  HlPlant *plant = hl_plant_ref (hl_solution_plant (tower));
+  plant = test_plant_set (plant, "T1.exhaust.p", 3360.0);
+  g_autoptr (HlSolution) s = hl_solve (plant, tower);
+  hl_plant_unref (plant);
+  test_assert_near (test_value (s, "plant.gross_power"), 13.75e6, 0.006);
+  test_assert_near (test_value (s, "T1.exhaust.x"), 0.866, 0.001);
+  HlSaturation sat;
+  g_assert_cmpint (hl_fluid_saturation_T (hl_fluid_water (), 273.15 + 12.0 + 9.0 + 5.0, &sat), ==, HL_OK);
+  test_assert_near (sat.p, 3360.0, 0.002);
+  const HlFinding *moisture = test_finding (s, "exhaust-moisture");
+  g_assert_nonnull (moisture);
+  g_assert_cmpint (moisture->grade, ==, HL_GRADE_WARNING);
+}
+
 int
 main (int argc, char **argv)
 {
@@ -68,5 +150,9 @@ main (int argc, char **argv)
   g_test_add_func ("/outside/demo-plants/simple-loop", test_simple_loop_demo);
   g_test_add_func ("/outside/demo-plants/reheat", test_reheat_demo);
   g_test_add_func ("/outside/demo-plants/industrial", test_industrial_demo);
+  g_test_add_func ("/outside/demo-plants/industrial-by-the-river", test_industrial_demo_by_the_river);
+  g_test_add_func ("/outside/demo-plants/waste", test_waste_demo);
+  g_test_add_func ("/outside/demo-plants/waste-in-summer", test_waste_demo_in_summer);
+  g_test_add_func ("/outside/demo-plants/large", test_large_demo);
   return g_test_run ();
 }
