@@ -181,6 +181,25 @@ print_quantities (const HlKind *kind, const HlQuantityKind *quantities, guint n)
     }
 }
 
+/* What keeps its value when the plant is rated at other conditions than it was designed for. */
+static void
+print_ratings (const HlKind *kind)
+{
+  if (kind->n_ratings == 0)
+    return;
+  printf ("\n| %s | %s |\n|---|---|\n", _("Frozen in rating"), _("Then found"));
+  for (guint i = 0; i < kind->n_ratings; i++)
+    {
+      const HlRating *rating = &kind->ratings[i];
+      g_autofree char *ahead = g_strdup_printf ("N+%d", rating->frozen_ahead);
+      g_auto (GStrv) frozen = g_strsplit (rating->frozen, "#", 2), found = g_strsplit (rating->found, "#", 2);
+      g_autofree char *frozen_key = g_strjoinv (rating->frozen_ahead > 0 ? ahead : "N", frozen), *found_key = g_strjoinv ("N", found);
+      print_key (frozen_key);
+      print_key (found_key);
+      printf ("|\n");
+    }
+}
+
 static void
 print_kind (const HlKind *kind)
 {
@@ -192,6 +211,7 @@ print_kind (const HlKind *kind)
   print_ports (kind);
   print_options (kind);
   print_quantities (kind, kind->quantities, kind->n_quantities);
+  print_ratings (kind);
 }
 
 static HlExit

@@ -485,7 +485,7 @@ add_value (HlModel *model, HlAddress address, int component, int stream, const H
     {
       double x = hl_var_from_si (hl_system_var (system, var)->kind, value->value);
       if (isfinite (x))
-        hl_system_add_spec (system, var, address, value->origin, x);
+        hl_system_add_spec (system, var, address, value->origin, x)->si = value->value;
       return;
     }
   int of[HL_EQUATION_MOST];

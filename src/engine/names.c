@@ -22,6 +22,7 @@ static const struct { const char *key, *name; } hidden[] = {
   { "water_outlet_p", N_("outlet pressure of the water") },
   { "water_inlet_h", N_("inlet enthalpy of the water") },
   { "water_outlet_h", N_("outlet enthalpy of the water") },
+  { "group_flow", N_("flow through group") },
   { "vent_h", N_("enthalpy of the vent steam") },
   { "saturation_T", N_("saturation temperature") },
 };
@@ -71,8 +72,14 @@ hl_name_var (const HlModel *model, int var)
   if (hl_plant_quantity_kind (model->plant, &address) != NULL)
     return hl_plant_describe (model->plant, &address);
   for (guint k = 0; k < G_N_ELEMENTS (hidden); k++)
-    if (g_str_equal (address.key, hidden[k].key))
-      return address.owner == HL_OWNER_PLANT ? g_strdup (_(hidden[k].name)) : g_strdup_printf (_("%s of %s"), _(hidden[k].name), address.id);
+    {
+      gsize length = strlen (hidden[k].key);
+      if (strncmp (address.key, hidden[k].key, length) != 0 || strspn (address.key + length, "0123456789") != strlen (address.key + length))
+        continue;
+      /* Of several alike each has its number. */
+      g_autofree char *name = address.key[length] != '\0' ? g_strdup_printf ("%s %s", _(hidden[k].name), address.key + length) : g_strdup (_(hidden[k].name));
+      return address.owner == HL_OWNER_PLANT ? g_steal_pointer (&name) : g_strdup_printf (_("%s of %s"), name, address.id);
+    }
   return hl_plant_describe (model->plant, &address);
 }
 
@@ -95,6 +102,7 @@ hl_name_dimension (HlVarKind kind)
     case HL_VAR_HEAT_RATE: return HL_DIMENSION_HEAT_RATE;
     case HL_VAR_STEAM_RATE: return HL_DIMENSION_STEAM_RATE;
     case HL_VAR_LENGTH: return HL_DIMENSION_LENGTH;
+    case HL_VAR_AREA: return HL_DIMENSION_AREA;
     }
   return HL_DIMENSION_RATIO;
 }

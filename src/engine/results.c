@@ -5,6 +5,17 @@
 #include "engine/components/components.h"
 #include <math.h>
 
+/* A state quantity that was put in reads back as it is, where the state that was found of it agrees to rounding. */
+static void
+put_in (const HlSystem *system, int var, double *value)
+{
+  if (var < 0 || system->fixed_by[system->root[var]] < 0)
+    return;
+  double given = hl_system_value (system, var);
+  if (fabs (*value - given) <= 1e-8 * fabs (given))
+    *value = given;
+}
+
 void
 hl_results_states (HlSolution *solution)
 {
@@ -33,6 +44,10 @@ hl_results_states (HlSolution *solution)
         result->has_state = hl_fluid_state_px (node->fluid, result->p, 0.0, &result->st) == HL_OK;
       else
         result->has_state = hl_fluid_state_ph (node->fluid, result->p, h, &result->st) == HL_OK;
+      put_in (system, node->T, &result->st.T);
+      put_in (system, node->s, &result->st.s);
+      put_in (system, node->v, &result->st.v);
+      put_in (system, node->x, &result->st.x);
     }
 }
 

@@ -93,7 +93,7 @@ hl_system_add_equation (HlSystem *system, HlResidual residual, HlVarKind kind, g
 HlSpec *
 hl_system_add_spec (HlSystem *system, int var, HlAddress address, HlOrigin origin, double value)
 {
-  HlSpec spec = { var, address, origin, value, -1 };
+  HlSpec spec = { var, address, origin, value, hl_var_to_si (hl_system_var (system, var)->kind, value), -1 };
   g_array_append_val (system->specs, spec);
   return hl_system_spec (system, system->specs->len - 1);
 }
@@ -193,6 +193,7 @@ hl_system_scale (const HlSystem *system, HlVarKind kind)
     case HL_VAR_PRESSURE_DIFFERENCE: return 1e6;
     case HL_VAR_STEAM_RATE: return 1e-6;
     case HL_VAR_LENGTH: return 10.0;
+    case HL_VAR_AREA: return system->flow_scale * 1e-3;
     default: return 1.0;
     }
 }
@@ -226,6 +227,7 @@ hl_system_start (const HlVar *var, double flow_scale)
     case HL_VAR_HEAT_RATE: return 2.5;
     case HL_VAR_STEAM_RATE: return 1e-6;
     case HL_VAR_LENGTH: return 5.0;
+    case HL_VAR_AREA: return flow_scale * 1e-3;
     }
   return 1.0;
 }
@@ -259,7 +261,12 @@ hl_var_from_si (HlVarKind kind, double value)
 double
 hl_system_value (const HlSystem *system, int var)
 {
-  return hl_var_to_si (hl_system_var (system, var)->kind, system->x[system->root[var]]);
+  int root = system->root[var];
+  /* What was put in reads back as it is, not as its logarithm gives it. */
+  const HlSpec *spec = system->fixed_by[root] >= 0 ? hl_system_spec (system, system->fixed_by[root]) : NULL;
+  if (spec != NULL && !(fabs (system->x[root] - spec->value) > 0.0))
+    return spec->si;
+  return hl_var_to_si (hl_system_var (system, var)->kind, system->x[root]);
 }
 
 HlVarKind
@@ -281,6 +288,7 @@ hl_var_kind_of (HlDimension dimension)
     case HL_DIMENSION_EMISSION:
     case HL_DIMENSION_STEAM_RATE: return HL_VAR_STEAM_RATE;
     case HL_DIMENSION_LENGTH: return HL_VAR_LENGTH;
+    case HL_DIMENSION_AREA: return HL_VAR_AREA;
     default: return HL_VAR_RATIO;
     }
 }

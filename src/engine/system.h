@@ -21,6 +21,7 @@ typedef enum {
   HL_VAR_HEAT_RATE,
   HL_VAR_STEAM_RATE,
   HL_VAR_LENGTH,
+  HL_VAR_AREA,
 } HlVarKind;
 
 /* Variables which are equal by structure form a class; its root stands for all of them. */
@@ -62,6 +63,7 @@ typedef struct {
   HlAddress address;               /* where it stands in the plant */
   HlOrigin  origin;
   double    value;                 /* as carried: a pressure's logarithm */
+  double    si;                    /* as it was put in; NaN: of a tie */
   int       equation;              /* of a tie, or of a second value of the same class; -1 */
 } HlSpec;
 

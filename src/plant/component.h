@@ -88,6 +88,10 @@ HL_PUBLIC char     *hl_component_port_name (const HlComponent *component, guint 
 HL_PUBLIC guint     hl_component_n_quantities (const HlComponent *component);
 HL_PUBLIC HlQuantity hl_component_quantity    (const HlComponent *component, guint n);
 HL_PUBLIC char     *hl_component_quantity_name (const HlComponent *component, guint n); /* translated, with its number; g_free() */
+/* Sizes that rating freezes, and what each then finds: interned keys of quantities. */
+typedef struct { const char *frozen, *found; } HlRatingPair;
+HL_PUBLIC guint        hl_component_n_ratings (const HlComponent *component);
+HL_PUBLIC HlRatingPair hl_component_rating    (const HlComponent *component, guint n);
 /* Kind of any key that may stand in an address: own quantities and <port>.<p|T|h|s|x|m|v>; NULL when there is none. */
 HL_PUBLIC const HlQuantityKind *hl_component_quantity_kind (const HlComponent *component, const char *key);
 

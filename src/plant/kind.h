@@ -75,6 +75,13 @@ typedef struct {
 /* In when_choice: every choice but this one. */
 #define HL_UNLESS(choice) (-1 - (choice))
 
+/* Design and rating: at other conditions than those of design the size @frozen keeps its value, and @found is what it finds. */
+typedef struct {
+  const char *frozen, *found;          /* keys of quantities; with '#' numbered, once for each */
+  const char *repeat;                  /* key of the count option, or NULL */
+  int         frozen_ahead;            /* the frozen one's number is this much larger */
+} HlRating;
+
 /* Lower limit of a quantity that may be zero but not negative: the limit itself is excluded. */
 #define HL_FROM_ZERO (-G_MINDOUBLE)
 
@@ -101,6 +108,7 @@ typedef struct {
   const HlPortKind     *ports;         guint n_ports;
   const HlOptionKind   *options;       guint n_options;
   const HlQuantityKind *quantities;    guint n_quantities;
+  const HlRating       *ratings;       guint n_ratings;
 } HlKind;
 
 /* What every component has beside the rows of its kind: results of the second law. */

@@ -96,6 +96,8 @@ static const HlUnit units[] = {
   PLAIN ("m", LENGTH, 1.0), PLAIN ("ft", LENGTH, FT), PLAIN ("mm", LENGTH, 1e-3), PLAIN ("cm", LENGTH, 1e-2), PLAIN ("km", LENGTH, 1e3),
   PLAIN ("in", LENGTH, FT / 12.0), PLAIN ("inch", LENGTH, FT / 12.0),
 
+  PLAIN ("cm2", AREA, 1e-4), PLAIN ("m2", AREA, 1.0), PLAIN ("mm2", AREA, 1e-6), PLAIN ("in2", AREA, FT / 12.0 * FT / 12.0), PLAIN ("ft2", AREA, FT * FT),
+
   PLAIN ("kJ/kWh", HEAT_RATE, 1e3 / KWH), PLAIN ("Btu/kWh", HEAT_RATE, BTU / KWH), PLAIN ("kcal/kWh", HEAT_RATE, KCAL / KWH),
   PLAIN ("J/J", HEAT_RATE, 1.0), PLAIN ("MJ/kWh", HEAT_RATE, 1e6 / KWH), PLAIN ("GJ/MWh", HEAT_RATE, 1e9 / (1e3 * KWH)),
   PLAIN ("kW/kW", HEAT_RATE, 1.0), PLAIN ("kJ/kJ", HEAT_RATE, 1.0),

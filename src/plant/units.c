@@ -32,6 +32,7 @@ static const Dimension dimensions[HL_N_DIMENSIONS] = {
   [HL_DIMENSION_STEAM_RATE] = { N_("steam rate"), "kg/J", "_kg_J", { "kg/kWh", "kg/kWh", "lb/kWh" }, { 2, 3 } },
   [HL_DIMENSION_VOLUME_FLOW] = { N_("volume flow"), "m3/s", "_m3_s", { "m³/h", "m³/s", "ft³/min" }, { 0, 4 } },
   [HL_DIMENSION_EMISSION] = { N_("emission"), "kg/J", "_kg_J", { "kg/MWh", "kg/MWh", "lb/MWh" }, { 1, 4 } },
+  [HL_DIMENSION_AREA] = { N_("area"), "m2", "_m2", { "cm²", "m²", "in²" }, { 0, 4 } },
   [HL_DIMENSION_COUNT] = { N_("number"), "", "", { "", "", "" }, { 0, 6 } },
 };
 

@@ -21,6 +21,7 @@ typedef enum {
   HL_DIMENSION_STEAM_RATE,               /* kg/J, shown as kg/kWh or lb/kWh */
   HL_DIMENSION_VOLUME_FLOW,
   HL_DIMENSION_EMISSION,                 /* kg/J, shown as kg/MWh or lb/MWh */
+  HL_DIMENSION_AREA,
   HL_DIMENSION_COUNT,                    /* a plain number */
   HL_N_DIMENSIONS
 } HlDimension;

@@ -145,16 +145,29 @@ primary (Calculator *c)
   return number;
 }
 
+/* With the root before it and the square behind it. */
+static Number
+power (Calculator *c)
+{
+  gboolean is_root = take (c, "√");
+  Number number = primary (c);
+  if (take (c, "²"))
+    number.v *= number.v;
+  if (is_root)
+    number.v = sqrt (number.v);
+  return number;
+}
+
 static Number
 product (Calculator *c)
 {
-  Number left = primary (c);
+  Number left = power (c);
   for (;;)
     {
       if (take (c, "×"))
-        left.v *= primary (c).v;
+        left.v *= power (c).v;
       else if (take (c, "÷"))
-        left.v /= primary (c).v;
+        left.v /= power (c).v;
       else
         return left;
     }

@@ -18,6 +18,8 @@ emit_air_condenser (HlEmit *emit)
   hl_emit_done (emit, hl_add_saturation (emit->system, NODE (emit, steam)->fluid, NODE (emit, steam)->p, T_sat), NULL, 1);
   hl_emit_done (emit, hl_add_linear (emit->system, HL_VAR_TEMPERATURE, (const int[]) { T_sat, air, difference }, (const double[]) { 1.0, -1.0, -1.0 }, 3, 0.0),
                 N_("{0} = {1} + {2}"), -1);
+  int size = hl_emit_own (emit, "conductance", HL_VAR_CONDUCTANCE);
+  hl_emit_done (emit, hl_add_quotient (emit->system, size, heat, difference), NULL, 0);
   /* The share of gross power becomes the fans' power where the plant's results are put together; without gross power it says
    * nothing, and only a power put in counts. */
   if (emit->model->has_gross)

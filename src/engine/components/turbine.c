@@ -1,6 +1,7 @@
 /* Turbine section: groups between extractions, each with its efficiency, or one straight line in h and s.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "engine/components/turbine.h"
+#include "engine/flow-constant.h"
 #include "engine/wet-expansion.h"
 #include "plant/i18n.h"
 #include <math.h>
@@ -116,6 +117,28 @@ emit_expansion (HlEmit *emit, const int *nodes, int n_groups, int section)
     hl_emit_done (emit, hl_add_moisture (emit->system, line.fluid, line.p[n_groups], line.h[n_groups], y), NULL, 2);
 }
 
+/* What flows through a group is what came in less what was extracted before it. */
+static void
+emit_sizes (HlEmit *emit, const int *nodes, int n_groups)
+{
+  int through = NODE (emit, nodes[0])->m;
+  for (int k = 1; k <= n_groups; k++)
+    {
+      const HlNode *from = NODE (emit, nodes[k - 1]), *to = NODE (emit, nodes[k]);
+      if (k > 1 && k == n_groups)
+        through = to->m;
+      else if (k > 1)
+        {
+          int rest = hl_emit_hidden (emit, hl_key ("group_flow", k), HL_VAR_FLOW);
+          hl_emit_done (emit, hl_add_linear (emit->system, HL_VAR_FLOW, (const int[]) { rest, through, from->m }, (const double[]) { 1.0, -1.0, 1.0 }, 3, 0.0),
+                        N_("{0} = {1} − {2}"), 0);
+          through = rest;
+        }
+      HlEquation *e = hl_add_flow_constant (emit->system, from->fluid, through, from->p, from->h, to->p, hl_emit_own (emit, hl_key ("flow_constant", k), HL_VAR_AREA));
+      hl_emit_done (emit, e, NULL, -1);
+    }
+}
+
 void
 hl_turbine_emit (HlEmit *emit)
 {
@@ -139,6 +162,7 @@ hl_turbine_emit (HlEmit *emit)
       signs[k] = k == 0 ? 1.0 : -1.0;
     }
   hl_emit_balance (emit, flows, 1, flows + 1, n_groups);
+  emit_sizes (emit, nodes, n_groups);
   int internal = hl_emit_own (emit, "internal_power", HL_VAR_POWER), power = hl_emit_own (emit, "power", HL_VAR_POWER);
   int mechanical = hl_emit_own (emit, "mechanical_efficiency", HL_VAR_RATIO);
   hl_emit_done (emit, hl_add_energy (emit->system, HL_VAR_POWER, pairs, signs, n_groups + 1, &internal, (const double[]) { -1.0 }, 1), NULL,

@@ -26,6 +26,9 @@ static const HlQuantityKind quantities[] = {
     .dimension = HL_DIMENSION_TEMPERATURE_DIFFERENCE, .flags = HL_QUANTITY_ASSUMED | HL_QUANTITY_USUAL,
     DEFAULT (25.0, N_("common practice, no source: steam 15-35 K, organic vapours 12-25 K")), RANGE (12.0, 35.0), LIMITS (-100.0, 500.0), .yield_rank = 10,
     .help = N_("Saturation temperature of the steam minus temperature of the air that comes in.") },
+  { .key = "conductance", .sign = "Q/ITD", .name = N_("Heat per initial difference"), .group = N_("Heat transfer"),
+    .dimension = HL_DIMENSION_CONDUCTANCE, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS_CONDUCTANCE, .yield_rank = 25,
+    .help = N_("Size of the condenser with its fans: heat over saturation temperature minus air temperature.") },
   { .key = "fan_fraction", .sign = "P/P", .name = N_("Fan power of gross"), .group = N_("Fans"),
     .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_ASSUMED | HL_QUANTITY_PERCENT,
     DEFAULT (0.015, N_("common practice, no source: steam 0.7-2.5 % of gross, binary plants 6-15 %")), RANGE (0.005, 0.15), LIMITS_FRACTION, .yield_rank = 85,
@@ -39,9 +42,11 @@ static const HlQuantityKind quantities[] = {
   ELEVATION
 };
 
+static const HlRating ratings[] = { { .frozen = "conductance", .found = "initial_difference" } };
+
 const HlKind hl_kind_air_condenser = {
   .id = "air_condenser", .letter = "AC", .name = N_("Air-cooled condenser"), .shelf_name = N_("air condenser"), .shelf_group = N_("Condense"),
   .help = N_("Condenses exhaust steam in finned tubes that fans blow air through."),
   .half_width = 3, .half_height = 3,
-  .ports = ROWS (ports), .options = ROWS (options), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .options = ROWS (options), .quantities = ROWS (quantities), .ratings = ROWS (ratings),
 };

@@ -44,9 +44,11 @@ static const HlQuantityKind quantities[] = {
   ELEVATION
 };
 
+static const HlRating ratings[] = { { .frozen = "UA", .found = "terminal_difference" } };
+
 const HlKind hl_kind_closed_heater = {
   .id = "closed_heater", .letter = "H", .name = N_("Closed heater"), .shelf_name = N_("closed heater"), .shelf_group = N_("Feed"),
   .help = N_("Heats feed water in tubes by condensing steam round them; the drain of a hotter heater may come in."),
   .half_width = 2, .half_height = 2,
-  .ports = ROWS (ports), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .quantities = ROWS (quantities), .ratings = ROWS (ratings),
 };

@@ -80,9 +80,11 @@ static const HlQuantityKind quantities[] = {
   ELEVATION
 };
 
+static const HlRating ratings[] = { { .frozen = "UA", .found = "terminal_difference" } };
+
 const HlKind hl_kind_condenser = {
   .id = "condenser", .letter = "C", .name = N_("Condenser"), .shelf_name = N_("condenser"), .shelf_group = N_("Condense"),
   .help = N_("Condenses exhaust steam; cooling water is counted inside or comes through its own lines."),
   .half_width = 2, .half_height = 2,
-  .ports = ROWS (ports), .options = ROWS (options), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .options = ROWS (options), .quantities = ROWS (quantities), .ratings = ROWS (ratings),
 };

@@ -26,6 +26,9 @@ static const HlQuantityKind quantities[] = {
     DEFAULT (0.65, N_("a first guess, no source: the maker decides")),
     RANGE (0.45, 0.82), LIMITS_EFFICIENCY, .yield_rank = 50,
     .help = N_("Enthalpy drop over the drop at constant entropy.") },
+  { .key = "flow_constant1", .sign = "K", .name = N_("Flow constant"), .group = N_("Size"),
+    .dimension = HL_DIMENSION_AREA, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS (0.0, 1e6), .yield_rank = 58,
+    .help = N_("Size by the ellipse law: flow over √((p1² - p2²)/(p1 v1)); given, it finds the pressure before it.") },
   { .key = "mechanical_efficiency", .sign = "η_m", .name = N_("Mechanical efficiency"), .group = N_("Power"),
     .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_ASSUMED,
     DEFAULT (0.985, N_("Dixon and Hall, quoted from a secondary text: 0.95 for a few kW to 0.99 for large sets")),
@@ -42,9 +45,11 @@ static const HlQuantityKind quantities[] = {
     .help = N_("Internal power times mechanical efficiency.") },
 };
 
+static const HlRating ratings[] = { { .frozen = "flow_constant1", .found = "pressure_ratio" } };
+
 const HlKind hl_kind_control_stage = {
   .id = "control_stage", .letter = "CS", .name = N_("Control stage"), .shelf_name = N_("control stage"), .shelf_group = N_("Expand"),
   .help = N_("The stage behind the control valves, by given pressure ratio and efficiency; the section behind it shares its shaft."),
   .shaft = HL_SHAFT_DRIVES, .half_width = 1, .half_height = 2,
-  .ports = ROWS (ports), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .quantities = ROWS (quantities), .ratings = ROWS (ratings),
 };

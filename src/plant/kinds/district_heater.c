@@ -53,9 +53,11 @@ static const HlQuantityKind quantities[] = {
   ELEVATION
 };
 
+static const HlRating ratings[] = { { .frozen = "UA", .found = "terminal_difference" } };
+
 const HlKind hl_kind_district_heater = {
   .id = "district_heater", .letter = "DH", .name = N_("District heater"), .shelf_name = N_("district heater"), .shelf_group = N_("Duty"),
   .help = N_("Warms the water of a heating network with condensing steam; the water is counted inside or comes through its own lines."),
   .half_width = 2, .half_height = 2,
-  .ports = ROWS (ports), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .quantities = ROWS (quantities), .ratings = ROWS (ratings),
 };

@@ -13,9 +13,11 @@ static const HlQuantityKind quantities[] = {
   EXCHANGE_ROWS,
 };
 
+static const HlRating ratings[] = { { .frozen = "UA", .found = "pinch" } };
+
 const HlKind hl_kind_exchanger = {
   .id = "exchanger", .letter = "E", .name = N_("Heat exchanger"), .shelf_name = N_("exchanger"), .shelf_group = N_("Heat"),
   .help = N_("Passes heat from a hot to a cold stream in counterflow; either may boil or condense on the way."),
   .half_width = 2, .half_height = 2,
-  .ports = ROWS (ports), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .quantities = ROWS (quantities), .ratings = ROWS (ratings),
 };

@@ -21,6 +21,9 @@ static const HlQuantityKind quantities[] = {
     DEFAULT (0.80, N_("common practice, no source: feed pump turbines 0.72-0.84")),
     RANGE (0.72, 0.84), LIMITS_EFFICIENCY, .yield_rank = 50,
     .help = N_("Enthalpy drop over the drop at constant entropy.") },
+  { .key = "flow_constant1", .sign = "K", .name = N_("Flow constant"), .group = N_("Size"),
+    .dimension = HL_DIMENSION_AREA, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS (0.0, 1e6), .yield_rank = 58,
+    .help = N_("Size by the ellipse law: flow over √((p1² - p2²)/(p1 v1)); given, it finds the pressure before it.") },
   { .key = "mechanical_efficiency", .sign = "η_m", .name = N_("Mechanical efficiency"), .group = N_("Power"),
     .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_ASSUMED,
     DEFAULT (0.985, N_("Dixon and Hall, quoted from a secondary text: 0.95 for a few kW to 0.99 for large sets")),
@@ -43,9 +46,11 @@ static const HlQuantityKind quantities[] = {
     .help = N_("Power that it gives to its shaft: what the pump takes.") },
 };
 
+static const HlRating ratings[] = { { .frozen = "flow_constant1", .found = "inlet.p" } };
+
 const HlKind hl_kind_feed_pump_turbine = {
   .id = "feed_pump_turbine", .letter = "FT", .name = N_("Feed pump turbine"), .shelf_name = N_("feed pump turbine"), .shelf_group = N_("Feed"),
   .help = N_("Drives a feed pump with steam, mostly from an extraction; as much flows in as the pump takes."),
   .shaft = HL_SHAFT_DRIVES, .only_drives = TRUE, .half_width = 2, .half_height = 2,
-  .ports = ROWS (ports), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .quantities = ROWS (quantities), .ratings = ROWS (ratings),
 };

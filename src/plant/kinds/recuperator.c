@@ -13,9 +13,11 @@ static const HlQuantityKind quantities[] = {
   EXCHANGE_ROWS,
 };
 
+static const HlRating ratings[] = { { .frozen = "UA", .found = "pinch" } };
+
 const HlKind hl_kind_recuperator = {
   .id = "recuperator", .letter = "R", .name = N_("Recuperator"), .shelf_name = N_("recuperator"), .shelf_group = N_("Heat"),
   .help = N_("Warms what goes to the heater with the exhaust vapour of the same cycle."),
   .half_width = 2, .half_height = 2,
-  .ports = ROWS (ports), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .quantities = ROWS (quantities), .ratings = ROWS (ratings),
 };

@@ -79,6 +79,10 @@ static const HlQuantityKind quantities[] = {
   { .key = "expansion_end_h", .sign = "h", .name = N_("Enthalpy at the end of the expansion"), .group = N_("Expansion"),
     .dimension = HL_DIMENSION_ENTHALPY, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS (-1e7, 1e7), .yield_rank = 57,
     .help = N_("Where the expansion line ends, before the exhaust loss."), WITH_LOSS },
+  { .key = "flow_constant#", .sign = "K", .name = N_("Flow constant of group"), .group = N_("Size"),
+    .dimension = HL_DIMENSION_AREA, .flags = HL_QUANTITY_RESULT, NO_DEFAULT, NO_RANGE, LIMITS (0.0, 1e6), .yield_rank = 58,
+    .help = N_("Size of the group by the ellipse law: flow over √((p1² - p2²)/(p1 v1)); given, it finds the pressure before the group."),
+    .repeat = "extractions", .repeat_extra = 1 },
   { .key = "mechanical_efficiency", .sign = "η_m", .name = N_("Mechanical efficiency"), .group = N_("Power"),
     .dimension = HL_DIMENSION_RATIO, .flags = HL_QUANTITY_ASSUMED,
     DEFAULT (0.985, N_("Dixon and Hall, quoted from a secondary text: 0.95 for a few kW to 0.99 for large sets")),
@@ -98,9 +102,14 @@ static const HlQuantityKind quantities[] = {
     .help = N_("Internal power times mechanical efficiency.") },
 };
 
+static const HlRating ratings[] = {
+  { .frozen = "flow_constant1", .found = "inlet.p" },
+  { .frozen = "flow_constant#", .found = "extraction#.p", .repeat = "extractions", .frozen_ahead = 1 },
+};
+
 const HlKind hl_kind_turbine = {
   .id = "turbine", .letter = "T", .name = N_("Turbine section"), .shelf_name = N_("turbine"), .shelf_group = N_("Expand"),
   .help = N_("Expands steam and drives a shaft; steam may be extracted on the way."),
   .shaft = HL_SHAFT_DRIVES, .half_width = 2, .half_height = 3, .widen_per = 1, .widen_option = "extractions",
-  .ports = ROWS (ports), .options = ROWS (options), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .options = ROWS (options), .quantities = ROWS (quantities), .ratings = ROWS (ratings),
 };
