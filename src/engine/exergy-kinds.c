@@ -124,8 +124,11 @@ book_motor (HlExergySink *sink)
 static void
 book_gearbox (HlExergySink *sink)
 {
-  hl_exergy_power (sink, HL_ROLE_FUEL, 1.0, "input_power");
-  hl_exergy_power (sink, HL_ROLE_PRODUCT, -1.0, "output_power");
+  int in = hl_exergy_own (sink, "input_power");
+  gboolean runs_back = in >= 0 && hl_system_value (sink->model->system, in) < 0.0;
+  /* Both are negative where power runs from the output to the input. */
+  hl_exergy_power (sink, HL_ROLE_FUEL, runs_back ? -1.0 : 1.0, runs_back ? "output_power" : "input_power");
+  hl_exergy_power (sink, HL_ROLE_PRODUCT, runs_back ? 1.0 : -1.0, runs_back ? "input_power" : "output_power");
   leak (sink, "input_power", "output_power");
 }
 

@@ -143,7 +143,6 @@ static const struct { const char *plant, *given, *yields; double factor; } edits
   { VESPER, "H4.feed_outlet.T", "terminal temperature difference of H4 is now found", 0.998 },
   { VESPER, "B1.feed.T", "terminal temperature difference of H7 is now found", 0.998 },
   { VESPER, "B1.fuel_flow", "gross power of the plant is now found", 1.1 },
-  { MARROW, "DH1.UA", "temperature at drain outlet of DH1 is now found", 1.01 },
   { TALLOW, "H1.UA", "terminal temperature difference of H1 is now found", 1.1 },
 };
 
