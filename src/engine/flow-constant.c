@@ -32,7 +32,7 @@ hl_add_flow_constant (HlSystem *system, const HlFluid *fluid, int flow, int p_in
   HlEquation *e = hl_system_add_equation (system, flow_constant, HL_VAR_FLOW, 1u << 0 | 1u << 4,
                                           (const int[]) { flow, p_in, h_in, p_out, constant }, 5, NULL, 0);
   e->fluid = fluid;
-  e->says = N_("{4} = {0} ÷ √(({1}² − {3}²) ÷ ({1} × v({1}, {2})))");
+  e->says = N_("{4} = {0} ÷ √((({1})² − ({3})²) ÷ ({1} × v({1}, {2})))");
   e->output = 4;
   e->source = N_("ellipse law of Stodola: Cooke, J. Eng. Gas Turbines Power 107 (1985) 596");
   return e;
