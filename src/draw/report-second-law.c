@@ -22,6 +22,7 @@ hl_report_exchangers (HlReport *report)
   hl_report_paragraph (report, _("Zones run from one change of phase to the next, in counterflow, the hot end first. UA is the sum of heat over logarithmic mean difference, part by part; the mean difference is heat over UA."),
                        HL_REPORT_SMALL, FALSE, TRUE);
   hl_report_table (report, table, NULL, (const int[]) { 0, 1, 2, 3, 4, 5, 6, 7, 8, 9, -1 }, HL_REPORT_SMALL - 0.6, NULL);
+  report->y = report->bottom;
 }
 
 static void
@@ -50,6 +51,8 @@ write_pictures (HlReport *report)
       hl_exergy_bars_draw (bars, report->cr, &report->theme, FALSE);
       cairo_restore (report->cr);
     }
+  /* What follows is text again. */
+  hl_report_page (report, FALSE);
 }
 
 void
