@@ -25,18 +25,15 @@ burnt (const HlFuel *fuel, const HlFluid *air, double excess)
   return combustion;
 }
 
-static const char *checked_kind;
-
-static void
-check_flame (const char *subject, const char *at, double value, double tolerance, const char *source)
+static double
+of_flame (const char *kind, const char *subject, const char *at)
 {
+  gboolean is_flame = strcmp (kind, "flame") == 0;
   HlFuel fuel = fuel_of (subject);
-  HlCombustion combustion = burnt (&fuel, gas_of ("air"), strcmp (checked_kind, "flame") == 0 ? g_ascii_strtod (at, NULL) : 0.0);
+  HlCombustion combustion = burnt (&fuel, gas_of ("air"), is_flame ? g_ascii_strtod (at, NULL) : 0.0);
   HlState flame;
   g_assert_cmpint (hl_combustion_flame (&fuel, gas_of ("air"), &combustion, 101325.0, 298.15, &flame), ==, HL_OK);
-  double ours = strcmp (checked_kind, "flame") == 0 ? flame.T : combustion.air_needed;
-  if (!(fabs (ours - value) <= tolerance))
-    g_error ("%s of %s at %s: got %.8g, %s says %.8g", checked_kind, subject, at, ours, source, value);
+  return is_flame ? flame.T : combustion.air_needed;
 }
 
 static void
@@ -44,10 +41,7 @@ test_flames_and_air_agree_with_textbooks (void)
 {
   static const char *const kinds[] = { "flame", "air_needed" };
   for (gsize i = 0; i < G_N_ELEMENTS (kinds); i++)
-    {
-      checked_kind = kinds[i];
-      check_published (kinds[i], check_flame);
-    }
+    check_published (kinds[i], of_flame);
 }
 
 /* By hand: CH4 + 2 O2, with 21 % of oxygen 9.524 moles of air; no oxygen left. */

@@ -28,22 +28,18 @@ molar_mass (const char *text)
   return NAN;
 }
 
-static const char *checked_kind;
-
-static void
-check_fuel (const char *subject, const char *at G_GNUC_UNUSED, double value, double tolerance, const char *source)
+static double
+of_fuel (const char *kind, const char *subject, const char *at G_GNUC_UNUSED)
 {
   HlFuel fuel = fuel_of (subject);
   const struct { const char *kind; double ours; } rows[] = {
     { "hhv_mole", fuel.hhv * molar_mass (subject) / 1e3 }, { "lhv", fuel.lhv / 1e6 }, { "hhv", fuel.hhv / 1e6 },
     { "co2_heat", fuel.co2 / fuel.lhv * 1e9 }, { "hhv_ratio", fuel.hhv / fuel.lhv },
   };
-  double ours = NAN;
   for (gsize i = 0; i < G_N_ELEMENTS (rows); i++)
-    if (strcmp (rows[i].kind, checked_kind) == 0)
-      ours = rows[i].ours;
-  if (!(fabs (ours - value) <= tolerance))
-    g_error ("%s of %s: got %.8g, %s says %.8g", checked_kind, subject, ours, source, value);
+    if (strcmp (rows[i].kind, kind) == 0)
+      return rows[i].ours;
+  return NAN;
 }
 
 static void
@@ -51,10 +47,7 @@ test_heating_values_agree_with_handbooks (void)
 {
   static const char *const kinds[] = { "hhv_mole", "lhv", "hhv", "co2_heat", "hhv_ratio" };
   for (gsize i = 0; i < G_N_ELEMENTS (kinds); i++)
-    {
-      checked_kind = kinds[i];
-      check_published (kinds[i], check_fuel);
-    }
+    check_published (kinds[i], of_fuel);
 }
 
 /* Definition: HHV - LHV = 2.442 (8.94 H + w) MJ/kg; every named fuel has parts of 1 kg. */

@@ -15,17 +15,12 @@ molar (const char *kind, const HlGasSpecies *species, double T)
   return strcmp (kind, "h_f") == 0 ? h : h - R * hl_gas_h (&species->molar, 298.15) / 1e3;
 }
 
-static const char *checked_kind;
-
-static void
-check_species (const char *subject, const char *at, double value, double tolerance, const char *source)
+static double
+of_species (const char *kind, const char *subject, const char *at)
 {
   int i = hl_gas_species_find (subject);
-  if (i < 0)
-    return;      /* air as a whole: gas-state */
-  double ours = molar (checked_kind, &hl_gas_data ()->species[i], g_ascii_strtod (at, NULL));
-  if (!(fabs (ours - value) <= tolerance))
-    g_error ("%s of %s at %s K: got %.8g, %s says %.8g", checked_kind, subject, at, ours, source, value);
+  g_assert_cmpint (i, >=, 0);
+  return molar (kind, &hl_gas_data ()->species[i], g_ascii_strtod (at, NULL));
 }
 
 static void
@@ -33,10 +28,7 @@ test_species_agree_with_published_tables (void)
 {
   static const char *const kinds[] = { "cp", "s", "h_f", "dh" };
   for (gsize i = 0; i < G_N_ELEMENTS (kinds); i++)
-    {
-      checked_kind = kinds[i];
-      g_assert_cmpuint (check_published (kinds[i], check_species), >=, 8);
-    }
+    g_assert_cmpuint (check_published (kinds[i], of_species), >=, 8);
 }
 
 /* The law h' = cp and s' = cp/T over the whole range, by differences. */

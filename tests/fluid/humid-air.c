@@ -4,13 +4,11 @@
 
 #include "gas-check.h"
 
-static const char *checked_kind;
-
-static void
-check_air (const char *subject G_GNUC_UNUSED, const char *at, double value, double tolerance, const char *source)
+static double
+of_air (const char *kind, const char *subject G_GNUC_UNUSED, const char *at)
 {
   g_auto (GStrv) temperatures = g_strsplit (at, "/", 2);
-  double T = g_ascii_strtod (temperatures[0], NULL), ours = NAN;
+  double T = g_ascii_strtod (temperatures[0], NULL);
   HlHumidAir air = { 0 };
   HlSaturatedAir saturated = { 0 };
   if (temperatures[1] != NULL)
@@ -22,10 +20,9 @@ check_air (const char *subject G_GNUC_UNUSED, const char *at, double value, doub
     { "humid_v", air.v }, { "saturated_w", 1e3 * saturated.humidity_ratio }, { "saturated_h", saturated.h / 1e3 },
   };
   for (gsize i = 0; i < G_N_ELEMENTS (rows); i++)
-    if (strcmp (rows[i].kind, checked_kind) == 0)
-      ours = rows[i].ours;
-  if (!(fabs (ours - value) <= tolerance))
-    g_error ("%s at %s: got %.8g, %s says %.8g", checked_kind, at, ours, source, value);
+    if (strcmp (rows[i].kind, kind) == 0)
+      return rows[i].ours;
+  return NAN;
 }
 
 static void
@@ -33,10 +30,7 @@ test_agrees_with_psychrometric_tables (void)
 {
   static const char *const kinds[] = { "humid_w", "humid_h", "humid_dew", "humid_phi", "humid_v", "saturated_w", "saturated_h" };
   for (gsize i = 0; i < G_N_ELEMENTS (kinds); i++)
-    {
-      checked_kind = kinds[i];
-      check_published (kinds[i], check_air);
-    }
+    check_published (kinds[i], of_air);
 }
 
 /* Law: one measure of moisture leads to the others and back. */
