@@ -18,7 +18,7 @@ gboolean hl_check_handover  (const HlArguments *arguments, GError **error);
 gboolean hl_write_handover  (const HlSolution *solution, HlDocument *document, const HlArguments *arguments, GError **error);   /* @document: its variants go into tables */
 /* State diagrams, heat diagrams: mistakes of the command line first, those in @plant too where it is known; then the files. */
 gboolean hl_check_pictures  (const HlPlant *plant, const HlArguments *arguments, GError **error);
-gboolean hl_write_pictures  (const HlSolution *solution, const HlArguments *arguments, GError **error);
+gboolean hl_write_pictures  (const HlSolution *solution, HlDocument *document, const HlArguments *arguments, GError **error);   /* @document: of --ghost */
 /* @component: an index, or -1. */
 gboolean hl_write_picture   (const HlSolution *solution, HlPicture picture, int component, const char *path, GError **error);
 /* How the result moves with 1 % more of each value put in, the largest effect first. */

@@ -1,6 +1,7 @@
 /* The diagrams that solve writes: what the command line asks for, and the files.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include <string.h>
+#include "batch/plant-input.h"
 #include "batch/solve-output.h"
 #include "draw/heat-diagram.h"
 #include "draw/state-diagram.h"
@@ -75,14 +76,31 @@ hl_write_picture (const HlSolution *solution, HlPicture picture, int component, 
   return hl_export_component_file (solution, picture, component, format, HL_THEME_PAPER, path, error);
 }
 
+/* The variant of --ghost; "base" is the base where no variant is called so.  FALSE: there is none of that name. */
 static gboolean
-write_diagrams (const HlSolution *solution, const HlArguments *arguments, GError **error)
+find_ghost (const HlDocument *document, const HlArguments *arguments, int *variant, GError **error)
 {
+  const char *name = hl_arguments_value (arguments, "ghost");
+  *variant = HL_DOCUMENT_BASE;
+  if (name == NULL || (strcmp (name, "base") == 0 && hl_document_find_variant (document, name) == HL_DOCUMENT_BASE))
+    return TRUE;
+  return hl_input_variant (document, arguments, "ghost", variant, error);
+}
+
+static gboolean
+write_diagrams (const HlSolution *solution, HlDocument *document, const HlArguments *arguments, GError **error)
+{
+  g_autoptr (HlSolution) ghost = NULL;
+  int variant;
   const char *shown = hl_arguments_value (arguments, "diagram-shows");
   char *const *diagram;
   guint extras = 0;
   if (shown != NULL)
     hl_diagram_extras_parse (shown, &extras);
+  if (!find_ghost (document, arguments, &variant, error))
+    return FALSE;
+  if (hl_arguments_value (arguments, "ghost") != NULL)
+    ghost = hl_solve (hl_document_plant (document, variant), solution);
   for (guint n = 0; (diagram = hl_arguments_option (arguments, "diagram", n)) != NULL; n++)
     {
       HlStateDiagramKind kind;
@@ -91,7 +109,7 @@ write_diagrams (const HlSolution *solution, const HlArguments *arguments, GError
         continue;
       if (strcmp (diagram[1], "-") != 0 && !hl_format_from_path (diagram[1], &format, error))
         return FALSE;
-      if (!hl_export_diagram_file (solution, kind, extras, format, HL_THEME_PAPER, diagram[1], error))
+      if (!hl_export_diagram_file (solution, ghost, hl_arguments_value (arguments, "ghost"), kind, extras, format, HL_THEME_PAPER, diagram[1], error))
         return FALSE;
     }
   return TRUE;
@@ -112,9 +130,9 @@ write_heats (const HlSolution *solution, const HlArguments *arguments, GError **
 }
 
 gboolean
-hl_write_pictures (const HlSolution *solution, const HlArguments *arguments, GError **error)
+hl_write_pictures (const HlSolution *solution, HlDocument *document, const HlArguments *arguments, GError **error)
 {
-  if (!write_diagrams (solution, arguments, error) || !write_heats (solution, arguments, error))
+  if (!write_diagrams (solution, document, arguments, error) || !write_heats (solution, arguments, error))
     return FALSE;
   for (guint k = 0; k < G_N_ELEMENTS (whole); k++)
     {

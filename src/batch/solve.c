@@ -53,7 +53,7 @@ write_outputs (const HlSolution *solution, HlDocument *document, const GArray *y
     }
   return hl_write_handover (solution, document, arguments, error)
          && (drawing == NULL || hl_arguments_value (arguments, "paper") != NULL || hl_write_picture (solution, HL_PICTURE_DRAWING, -1, drawing, error))
-         && hl_write_pictures (solution, arguments, error);
+         && hl_write_pictures (solution, document, arguments, error);
 }
 
 static HlExit
@@ -131,6 +131,7 @@ static const HlBatchOption solve_options[] = {
   { "scale", N_("NUMBER"), FALSE, N_("scale of the drawing on its sheet; as large as fits when it is not given") },
   { "field", N_("NAME=TEXT"), TRUE, N_("fill a field of the sheet: variant, case, date, revision, drawn, checked, approved; may be repeated") },
   { "diagram", N_("ts|hs|ph FILE"), TRUE, N_("write a state diagram: temperature-entropy, enthalpy-entropy, pressure-enthalpy; may be repeated") },
+  { "ghost", N_("NAME"), FALSE, N_("draw this variant, or the base, pale beneath the state diagrams") },
   { "diagram-shows", N_("LIST"), FALSE, N_("show beside the cycle: areas, sources, table, isobars; parted by commas") },
   { "heat", N_("COMPONENT FILE"), TRUE, N_("write temperature over heat of an exchanger, or of all together (all); may be repeated") },
   { "bands", N_("FILE"), FALSE, N_("write where the energy of the plant comes from and goes, as bands to scale") },

@@ -14,6 +14,7 @@
 #include "draw/text.h"
 #include "plant/i18n.h"
 
+#define GHOST_SIZE 11.0     /* of the words that name the ghost [px] */
 #define DIAGRAM_WIDTH  960.0
 #define DIAGRAM_HEIGHT 600.0
 #define POINTS_A_PIXEL 0.75       /* 72 points and 96 pixels an inch */
@@ -295,21 +296,33 @@ hl_export_component_file (const HlSolution *solution, HlPicture picture, int com
   return bytes != NULL && hl_export_bytes_file (bytes, path, error);
 }
 
-typedef struct { HlTheme theme; HlStateDiagram *diagram; gboolean is_stale; } Diagram;
+typedef struct {
+  HlTheme         theme;
+  HlStateDiagram *diagram, *ghost;     /* @ghost NULL: none */
+  const char     *ghost_name;
+  gboolean        is_stale;
+} Diagram;
 
 static void
 draw_diagram_cb (cairo_t *cr, gpointer data)
 {
   const Diagram *what = data;
-  hl_state_diagram_draw (what->diagram, cr, &what->theme, what->is_stale, -1);
+  g_autofree char *words = NULL;
+  hl_state_diagram_draw_over (what->diagram, what->ghost, cr, &what->theme, what->is_stale, -1);
+  if (what->ghost == NULL)
+    return;
+  words = g_strdup_printf (_("grey: %s"), what->ghost_name);
+  hl_set_colour (cr, &what->theme.quiet);
+  hl_text_show (cr, &what->theme, words, DIAGRAM_WIDTH - 10.0, DIAGRAM_HEIGHT - 8.0, 1, GHOST_SIZE, FALSE);
 }
 
 gboolean
-hl_export_diagram_file (const HlSolution *solution, HlStateDiagramKind kind, guint extras, HlFormat format, HlThemeId theme, const char *path, GError **error)
+hl_export_diagram_file (const HlSolution *solution, const HlSolution *ghost, const char *ghost_name, HlStateDiagramKind kind, guint extras, HlFormat format, HlThemeId theme, const char *path, GError **error)
 {
   const HlPlant *plant = hl_solution_plant (solution);
   g_autoptr (HlStateDiagram) diagram = hl_state_diagram_new_with (solution, kind, extras, hl_plant_units (plant), DIAGRAM_WIDTH, DIAGRAM_HEIGHT);
-  Diagram what = { *hl_theme (theme), diagram, !hl_solution_is_solved (solution) };
+  g_autoptr (HlStateDiagram) beneath = ghost != NULL ? hl_state_diagram_new_on (ghost, diagram) : NULL;
+  Diagram what = { *hl_theme (theme), diagram, beneath, ghost_name, !hl_solution_is_solved (solution) };
   what.theme.font = HL_EXPORT_FONT;
   g_autoptr (GBytes) bytes = hl_export_drawn (format, hl_plant_title (plant), DIAGRAM_WIDTH, DIAGRAM_HEIGHT, format == HL_FORMAT_PNG ? 2.0 : 1.0,
                                               draw_diagram_cb, &what, error);

@@ -25,7 +25,8 @@ GBytes  *hl_export_picture      (const HlSolution *solution, HlPicture picture, 
 GBytes  *hl_export_component    (const HlSolution *solution, HlPicture picture, int component, HlFormat format, HlThemeId theme, double width, double height, double scale, GError **error);
 gboolean hl_export_component_file (const HlSolution *solution, HlPicture picture, int component, HlFormat format, HlThemeId theme, const char *path, GError **error);
 /* A state diagram with HlDiagramExtras. */
-gboolean hl_export_diagram_file (const HlSolution *solution, HlStateDiagramKind kind, guint extras, HlFormat format, HlThemeId theme, const char *path, GError **error);
+/* @ghost (nullable): of another variant, drawn pale beneath and told by @ghost_name. */
+gboolean hl_export_diagram_file (const HlSolution *solution, const HlSolution *ghost, const char *ghost_name, HlStateDiagramKind kind, guint extras, HlFormat format, HlThemeId theme, const char *path, GError **error);
 /* To a file (temporary file, then renamed); path "-" is standard output. */
 gboolean hl_export_picture_file (const HlSolution *solution, HlPicture picture, HlFormat format, HlThemeId theme, const char *path, GError **error);
 /* Any drawing of @width x @height pixels, drawn once by @draw. */

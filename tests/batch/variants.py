@@ -117,6 +117,17 @@ def test_workbook_and_report_hold_the_variants():
         assert "Variants" not in book.read("xl/workbook.xml").decode()
 
 
+def test_a_ghost_lies_beneath_the_diagram():
+    batch("solve", TALLOW, "--variant", "river cooling", "--diagram", "ts", "plain.svg")
+    batch("solve", TALLOW, "--variant", "river cooling", "--diagram", "ts", "with.svg", "--ghost", "base")
+    batch("solve", TALLOW, "--variant", "river cooling", "--diagram", "ts", "again.svg", "--ghost", "base")
+    with open("plain.svg", "rb") as plain, open("with.svg", "rb") as ghost, open("again.svg", "rb") as again:
+        drawn = ghost.read()
+        assert len(drawn) > len(plain.read())        # processes and states of another cycle
+        assert drawn == again.read()
+    refused("solve", TALLOW, "--diagram", "ts", "x.svg", "--ghost", "lake", status=2, says=["--ghost", "no variant “lake”"])
+
+
 def test_a_plant_without_variants_is_a_table_of_one():
     heading, table = rows(os.path.join(SOURCE, "tests", "batch", "plants", "loop.heatloom"))
     assert heading == ["Group", "Quantity", "Unit", "Base"]
