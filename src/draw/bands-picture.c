@@ -68,12 +68,28 @@ name_together (const HlBandsPicture *picture, HlBandKind kind)
   return kind == HL_BAND_REJECTED && picture->of == HL_BANDS_EXERGY ? _("lost") : _("others");
 }
 
+/* Destroyed exergy comes largest first: what is too small stands together in the last of its strips, not here and there. */
+static int
+last_destroyed (const HlBandsPicture *picture)
+{
+  int last = -1;
+  guint n = 0;
+  for (guint i = 0; i < picture->strips->len; i++)
+    if (nth (picture, i)->kind == HL_BAND_DESTROYED)
+      {
+        last = (int) i;
+        n++;
+      }
+  return n > 3 ? last : -1;
+}
+
 /* Neighbours of one kind, the smallest first, become one. */
 static gboolean
 merge_smallest (HlBandsPicture *picture)
 {
-  int best = -1;
-  for (guint i = 1; i < picture->strips->len; i++)
+  int best = last_destroyed (picture);
+  gboolean is_chosen = best >= 0;
+  for (guint i = 1; !is_chosen && i < picture->strips->len; i++)
     if (nth (picture, i)->kind == nth (picture, i - 1)->kind && nth (picture, i)->way == nth (picture, i - 1)->way
         && (best < 0 || nth (picture, i)->power < nth (picture, (guint) best)->power))
       best = (int) i;

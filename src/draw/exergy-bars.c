@@ -85,7 +85,7 @@ merge_beyond (HlExergyBars *bars, guint most)
   for (guint k = most - 1; k < n; k++)
     rest += nth (bars, k)->power;
   g_array_set_size (bars->bars, most - 1);
-  HlExergyBar others = { .component = -1, .power = rest, .efficiency = NAN, .name = g_strdup_printf (_("%u others"), n - most + 1) };
+  HlExergyBar others = { .component = -1, .power = rest, .is_mixed = TRUE, .efficiency = NAN, .name = g_strdup_printf (_("%u others"), n - most + 1) };
   g_array_append_val (bars->bars, others);
 }
 
@@ -225,7 +225,7 @@ draw_line (const HlExergyBars *bars, cairo_t *cr, const HlTheme *theme, const ch
 static void
 draw_bar (const HlExergyBars *bars, const HlExergyBar *bar, cairo_t *cr, const HlTheme *theme, gboolean is_stale)
 {
-  const HlColour *colour = is_stale ? &theme->stale : bar->is_loss ? &theme->cooling : &theme->steam;
+  const HlColour *colour = is_stale ? &theme->stale : bar->is_mixed ? &theme->gas : bar->is_loss ? &theme->cooling : &theme->steam;
   double baseline = bar->name_box.y + 0.95 * bars->text_size, number_size = bar->number_box.height / 1.2;
   cairo_rectangle (cr, bar->bar.x, bar->bar.y, MAX (bar->bar.width, 0.8), bar->bar.height);
   cairo_set_source_rgba (cr, colour->r, colour->g, colour->b, 0.82 * colour->a);
@@ -245,7 +245,8 @@ draw_key (const HlExergyBars *bars, cairo_t *cr, const HlTheme *theme, gboolean 
   double size = 0.92 * bars->text_size, x = bars->from;
   gboolean is_used[2] = { FALSE, FALSE };
   for (guint k = 0; k < bars->bars->len; k++)
-    is_used[nth (bars, k)->is_loss] = TRUE;
+    if (!nth (bars, k)->is_mixed)
+      is_used[nth (bars, k)->is_loss] = TRUE;
   for (guint k = 0; k < 2; k++)
     {
       if (!is_used[k])

@@ -8,6 +8,7 @@ G_BEGIN_DECLS
 typedef struct {
   int      component;      /* index of the plant; -1: others together, or consumers that are not drawn */
   gboolean is_loss;        /* leaves unused; else destroyed inside */
+  gboolean is_mixed;       /* of those that stand together some do this, some that */
   double   power;          /* [W] */
   double   efficiency;     /* of the component; NaN none */
   char    *name, *number;

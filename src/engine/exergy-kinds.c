@@ -81,8 +81,8 @@ book_boiler (HlExergySink *sink)
       fuel->form = HL_TERM_FUEL;
       fuel->door = HL_DOOR_FUEL;
       fuel->ratio = hl_exergy_own (sink, key);
-      /* A file from before the ratio existed takes the usual one. */
-      fuel->ratio_value = kind != NULL ? kind->default_value : NAN;
+      /* A file from before the ratio existed takes the usual one of its fuel. */
+      fuel->ratio_value = kind != NULL ? hl_component_default (sink->component, kind, 0) : NAN;
     }
   int T = hl_exergy_own (sink, "flue_gas_T");
   if (T < 0)
@@ -98,7 +98,7 @@ book_boiler (HlExergySink *sink)
       unburned->form = HL_TERM_FUEL;
       unburned->door = HL_DOOR_LOSS;
       unburned->ratio = hl_exergy_own (sink, key);
-      unburned->ratio_value = hl_component_quantity_kind (sink->component, key)->default_value;
+      unburned->ratio_value = hl_component_default (sink->component, hl_component_quantity_kind (sink->component, key), 0);
     }
   hl_exergy_power (sink, HL_ROLE_LEAK, -1.0, "radiation_loss");
 }
