@@ -179,6 +179,15 @@ port_words (const HlPlant *plant, const char *id, const char *port)
   return g_strdup_printf ("%s %s", id, name);
 }
 
+/* Two phases are wet steam where the medium boils, gas with its condensate where it does not. */
+static const char *
+phase_words (const HlStreamResult *result)
+{
+  if (result->state.phase != HL_PHASE_TWO_PHASE)
+    return _(hl_phase_name (result->state.phase));
+  return result->fluid != NULL && !hl_fluid_has_dome (result->fluid) ? _("gas with condensate") : _("wet steam");
+}
+
 static void
 show_stream (HlNameplateHead *self, const HlStream *stream)
 {
@@ -194,7 +203,7 @@ show_stream (HlNameplateHead *self, const HlStream *stream)
 
   hl_solution_stream (hl_session_solution (self->session), (guint) hl_plant_stream_index (plant, stream->id), &result);
   if (result.has_state)
-    line = g_strdup_printf ("%s, %s", medium, result.state.phase == HL_PHASE_TWO_PHASE ? _("wet steam") : _(hl_phase_name (result.state.phase)));
+    line = g_strdup_printf ("%s, %s", medium, phase_words (&result));
   else
     line = g_strdup (medium);
   gtk_label_set_text (GTK_LABEL (self->id), title);

@@ -18,6 +18,8 @@ hl_stream_look (const HlStreamResult *result)
     case HL_PHASE_LIQUID:
       return HL_LOOK_WATER;
     case HL_PHASE_TWO_PHASE:
+      if (result->fluid != NULL && !hl_fluid_has_dome (result->fluid))
+        return HL_LOOK_GAS;      /* with its condensate */
       /* The ends of the saturation line belong to their one-phase neighbours: a drain is water, drum steam is steam. */
       if (result->state.x < 1e-6)
         return HL_LOOK_WATER;

@@ -107,6 +107,14 @@ test_look_follows_the_state (void)
   g_assert_cmpint (look_of (7000.0, 1.0), ==, HL_LOOK_STEAM);
   result.has_state = FALSE;
   g_assert_cmpint (hl_stream_look (&result), ==, HL_LOOK_UNKNOWN);
+
+  /* Flue gas is gas above and below its dew point, whatever condenses of it. */
+  HlStreamResult flue = { .has_state = TRUE, .fluid = hl_fluid_lookup ("flue-gas") };
+  g_assert_cmpint (hl_fluid_state_pT (flue.fluid, 1e5, 400.0, &flue.state), ==, HL_OK);
+  g_assert_cmpint (hl_stream_look (&flue), ==, HL_LOOK_GAS);
+  g_assert_cmpint (hl_fluid_state_pT (flue.fluid, 1e5, 310.0, &flue.state), ==, HL_OK);
+  g_assert_cmpint (flue.state.phase, ==, HL_PHASE_TWO_PHASE);
+  g_assert_cmpint (hl_stream_look (&flue), ==, HL_LOOK_GAS);
 }
 
 static void
