@@ -163,6 +163,8 @@ renew_stream (HlCanvas *self, guint n)
   /* A stream just drawn, in a preview, is not in the solution yet. */
   if (n < hl_plant_n_streams (hl_solution_plant (self->shown)))
     hl_solution_stream (self->shown, n, &result);
+  if (result.has_flow && result.has_state && hl_solution_is_partial (self->shown))
+    subject.is_stale = FALSE;
   add_flags (line_key, subject.is_stale, subject.is_selected);
   add_result (line_key, &result);
   add_bytes (line_key, &place->look, sizeof place->look);

@@ -91,7 +91,8 @@ hl_canvas_locate (HlCanvas *self, const char *id, const char *port, double *vx, 
 
 /* Following the session */
 
-/* While the present plant does not solve, the figures of the last good solution stay, greyed, where they still belong to it. */
+/* While the present plant does not solve, the figures of the last good solution stay, greyed, where they still belong to it; what the
+ * present one knows already while it is being drawn needs no such help. */
 static gboolean
 is_of_same_shape (const HlPlant *a, const HlPlant *b)
 {
@@ -112,7 +113,7 @@ choose_shown_solution (HlCanvas *self)
   HlSolution *present = hl_session_solution (self->session), *good = hl_session_last_good (self->session);
   HlSolution *shown = present;
   self->is_stale = !hl_solution_is_solved (present);
-  if (self->is_stale && good != NULL && is_of_same_shape (hl_canvas_plant (self), hl_solution_plant (good)))
+  if (self->is_stale && !hl_solution_is_partial (present) && good != NULL && is_of_same_shape (hl_canvas_plant (self), hl_solution_plant (good)))
     shown = good;
   shown = hl_solution_ref (shown);
   g_clear_pointer (&self->shown, hl_solution_unref);

@@ -45,7 +45,8 @@ G_DEFINE_FINAL_TYPE (HlDiagramView, hl_diagram_view, GTK_TYPE_WIDGET)
 static gboolean
 is_stale (HlDiagramView *self)
 {
-  return !hl_solution_is_solved (hl_session_solution (self->session));
+  HlSolution *present = hl_session_solution (self->session);
+  return !hl_solution_is_solved (present) && !hl_solution_is_partial (present);
 }
 
 /* The present solution; where it failed the last good one, or what was found of it, drawn grey. */

@@ -392,9 +392,22 @@ hl_emit_T (HlEmit *emit, int node, gboolean drives)
   return state_var (emit->model, node, 'T', drives);
 }
 
+/* Not drawn to its end: a required port of it has no line. */
+gboolean
+hl_model_is_unfinished (const HlModel *model, int component)
+{
+  for (guint k = 0; k < model->open_ports->len; k++)
+    if (g_array_index (model->open_ports, HlAddress, k).id == hl_plant_component (model->plant, (guint) component)->id)
+      return TRUE;
+  return FALSE;
+}
+
+/* What is still being drawn does not count: else its unknown part would leave the whole plant unknown. */
 void
 hl_emit_sum (HlEmit *emit, HlSum sum, int var)
 {
+  if (emit->index >= 0 && hl_model_is_unfinished (emit->model, emit->index))
+    return;
   g_array_append_val (emit->model->sums[sum], var);
 }
 

@@ -66,6 +66,8 @@ hl_model_node (const HlModel *model, int n)
   return &g_array_index (model->nodes, HlNode, n);
 }
 
+/* Not drawn to its end: a required port of it has no line.  Known once its equations are written. */
+gboolean hl_model_is_unfinished (const HlModel *model, int component);
 int hl_model_port_node (const HlModel *model, int component, const char *port);         /* -1 */
 int hl_model_own_var   (const HlModel *model, int component, const char *key);          /* component -1: the plant; -1 */
 /* Variable of an address that exists already; -1. */

@@ -29,7 +29,7 @@ hl_shafts_look (HlModel *model)
 {
   HlPlant *plant = model->plant;
   int n = (int) hl_plant_n_components (plant);
-  model->is_on_shaft = g_new0 (gboolean, n + 1);
+  model->is_on_shaft = g_atomic_rc_box_alloc0 (sizeof (gboolean) * (gsize) (n + 1));
   for (guint i = 0; i < hl_plant_n_shafts (plant); i++)
     {
       const HlShaft *shaft = hl_plant_shaft (plant, i);
@@ -118,16 +118,30 @@ pass_gearbox (HlModel *model, Part *part, const int *joins, int n, int at)
   add_term (part, forward ? out : in, forward ? 1.0 : -1.0);
 }
 
+static gboolean
+has_finished_driver (const HlModel *model, const HlShaft *shaft)
+{
+  for (guint k = 0; k < shaft->n_joins; k++)
+    {
+      int c = hl_plant_component_index (model->plant, shaft->joins[k]);
+      if (role_of (model, c) == HL_SHAFT_DRIVES && !hl_model_is_unfinished (model, c))
+        return TRUE;
+    }
+  return FALSE;
+}
+
+/* What is still being drawn waits beside the shaft while others drive it. */
 static void
 add_shaft (HlModel *model, const HlShaft *shaft)
 {
+  gboolean spares_unfinished = has_finished_driver (model, shaft);
   g_autofree int *joins = g_new (int, shaft->n_joins + 1);
   Part part = { .n = 0 };
   int n = 0;
   for (guint k = 0; k < shaft->n_joins; k++)
     {
       int c = hl_plant_component_index (model->plant, shaft->joins[k]);
-      if (c >= 0 && model->is_on_shaft[c])
+      if (c >= 0 && model->is_on_shaft[c] && !(spares_unfinished && hl_model_is_unfinished (model, c)))
         joins[n++] = c;
     }
   for (int k = 0; k < n; k++)

@@ -45,6 +45,31 @@ hl_solution_is_solved (const HlSolution *solution)
   return solution->is_complete && !hl_findings_have (&solution->findings, HL_GRADE_ERROR);
 }
 
+/* Findings that only say that the drawing is not done. */
+static gboolean
+is_unfinished (const HlFinding *finding)
+{
+  return g_str_equal (finding->code, "open-port") || g_str_equal (finding->code, "missing-value");
+}
+
+gboolean
+hl_solution_is_partial (const HlSolution *solution)
+{
+  g_return_val_if_fail (solution != NULL, FALSE);
+  if (solution->is_complete || solution->numbers.failed != HL_FAILED_NOT || solution->structure->n_over > 0)
+    return FALSE;
+  for (guint k = 0; k < solution->findings.list->len; k++)
+    {
+      const HlFinding *finding = &g_array_index (solution->findings.list, HlFinding, k);
+      if (finding->grade == HL_GRADE_ERROR && !is_unfinished (finding))
+        return FALSE;
+    }
+  for (guint n = 0; n < hl_plant_n_streams (solution->plant); n++)
+    if (solution->states[n].has_flow && solution->states[n].has_state)
+      return TRUE;
+  return FALSE;
+}
+
 double
 hl_solution_seconds (const HlSolution *solution)
 {

@@ -11,6 +11,8 @@ G_DEFINE_AUTOPTR_CLEANUP_FUNC (HlSolution, hl_solution_unref)
 
 HL_PUBLIC HlPlant *hl_solution_plant     (const HlSolution *solution);
 HL_PUBLIC gboolean hl_solution_is_solved (const HlSolution *solution);   /* converged, and no finding of grade error */
+/* Not solved as a whole, because something is still to be connected or given; what is known of it is settled all the same. */
+HL_PUBLIC gboolean hl_solution_is_partial (const HlSolution *solution);
 HL_PUBLIC double   hl_solution_seconds   (const HlSolution *solution);   /* time of the whole solve */
 
 /* A stream's state, by its index in the plant. */

@@ -82,12 +82,12 @@ matters (const HlSolution *s, const HlAddress *address)
   return FALSE;
 }
 
-/* A component takes it as a matter of form: without it others of its equations apply. */
+/* Without it others of the equations of its component apply, or only results beside the balances are lacking. */
 static gboolean
 is_a_form (const HlAddress *address)
 {
   return g_str_has_prefix (address->key, "group_efficiency") || g_str_equal (address->key, "return_fraction") || g_str_equal (address->key, "isentropic_efficiency")
-         || g_str_equal (address->key, "cleanliness") || g_str_equal (address->key, "heat_loss");
+         || g_str_equal (address->key, "cleanliness") || g_str_equal (address->key, "fuel_exergy_ratio") || g_str_equal (address->key, "heat_loss");
 }
 
 static void

@@ -258,6 +258,41 @@ test_what_is_known_of_an_unfinished_plant (void)
   g_assert_true (isnan (test_value (s, "plant.gross_power")));
 }
 
+/* Something new on the sheet, not yet connected, takes nothing from what stands: its findings apart, all is as before. */
+static void
+test_what_is_still_being_drawn (void)
+{
+  static const char *const added[] = { "new pump P9\n", "new turbine T9\nshaft T1 T9 G1\n", "new closed_heater H9\n", "new heat_input Q9\n", "new condenser C9\nnew pump P9\nC9.condensate > P9.inlet\n" };
+  g_autoptr (HlPlant) plant = test_plant (test_simple_loop);
+  g_autoptr (HlSolution) whole = hl_solve (plant, NULL);
+  g_assert_false (hl_solution_is_partial (whole));
+  for (guint k = 0; k < G_N_ELEMENTS (added); k++)
+    {
+      g_autofree char *text = g_strconcat (test_simple_loop, added[k], NULL);
+      g_autoptr (HlPlant) more = test_plant (text);
+      g_autoptr (HlSolution) s = hl_solve (more, NULL);
+      g_assert_false (hl_solution_is_solved (s));
+      g_assert_nonnull (test_finding (s, "open-port"));
+      if (!hl_solution_is_partial (s))
+        test_print (s);
+      g_assert_true (hl_solution_is_partial (s));
+      for (guint n = 0; n < hl_plant_n_streams (plant); n++)
+        {
+          HlStreamResult a, b;
+          hl_solution_stream (whole, n, &a);
+          hl_solution_stream (s, n, &b);
+          g_assert_true (b.has_flow && b.has_state);
+          test_assert_near (b.m, a.m, 1e-9);
+          test_assert_near (b.state.h, a.state.h, 1e-9);
+        }
+      test_assert_near (test_value (s, "plant.net_power"), 12e6, 1e-9);
+    }
+  /* A surplus value, or one that cannot be, leaves nothing to rely on. */
+  g_autoptr (HlPlant) surplus = test_plant_set (test_plant (test_simple_loop), "P1.outlet.p", 70e5);
+  g_autoptr (HlSolution) none = hl_solve (surplus, NULL);
+  g_assert_false (hl_solution_is_partial (none));
+}
+
 int
 main (int argc, char **argv)
 {
@@ -272,5 +307,6 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/solution/exhaust-by-temperature", test_exhaust_by_temperature);
   g_test_add_func ("/engine/solution/temperature-of-wet-or-dry-steam", test_temperature_of_wet_or_dry_steam);
   g_test_add_func ("/engine/solution/unfinished-plant", test_what_is_known_of_an_unfinished_plant);
+  g_test_add_func ("/engine/solution/still-being-drawn", test_what_is_still_being_drawn);
   return g_test_run ();
 }
