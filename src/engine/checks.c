@@ -191,6 +191,27 @@ check_credible (HlChecker *checker)
     }
 }
 
+/* Pressure and enthalpy may come out as numbers that are no state of the medium. */
+static void
+check_range (HlChecker *checker)
+{
+  const HlModel *model = checker->model;
+  for (guint i = 0; i < hl_plant_n_streams (model->plant); i++)
+    {
+      const HlNode *node = hl_model_node (model, (int) i);
+      const HlNodeResult *state = &checker->states[i];
+      if (state->has_state || !state->has_pressure || !checker->is_known[model->system->root[node->h]])
+        continue;
+      const HlStream *stream = hl_plant_stream (model->plant, i);
+      HlAddress at = hl_address_stream (stream->id, g_intern_static_string ("h"));
+      g_autofree char *why = hl_fluid_explain_failure (node->fluid, HL_OUTSIDE_RANGE, "ph", state->p, hl_system_value (model->system, node->h));
+      g_autofree char *name = hl_plant_describe (model->plant, &at);
+      hl_findings_add (checker->findings, HL_GRADE_ERROR, "outside-range", at,
+        g_strdup_printf (_("%s: a state lies outside the range of the property formulation: %s. Look at %s."), stream->from_id, why, name));
+      return;
+    }
+}
+
 void
 hl_check_all (HlChecker *checker)
 {
@@ -206,6 +227,8 @@ hl_check_all (HlChecker *checker)
       check_credible (checker);
     }
   checker->component = NULL;
+  if (checker->is_complete)
+    check_range (checker);
   /* Where something graver is known, flows run backwards because of it. */
   if (checker->is_complete && !hl_findings_have (checker->findings, HL_GRADE_ERROR))
     {

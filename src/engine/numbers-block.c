@@ -483,7 +483,7 @@ hl_block_solve (HlBlockWork *w, const int *equations, const int *vars, int n, co
 {
   HlSystem *system = w->system;
   gboolean usual_first = usual != NULL && usual->first;
-  w->keeps_flows = usual_first;
+  w->keeps_flows = usual_first && usual->variant % 2 == 0;
   HlFailed failed = usual_first ? hl_block_relax (w, equations, vars, n, usual, numbers) : hl_block_newton (w, equations, vars, n, NULL, numbers);
   if (failed != HL_FAILED_NOT)
     {

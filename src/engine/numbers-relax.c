@@ -347,7 +347,7 @@ relax_clear (Relax *r)
 HlFailed
 hl_block_relax (HlBlockWork *work, const int *equations, const int *vars, int n, const HlUsual *usual, HlNumbers *numbers)
 {
-  Relax r = { .work = work, .system = hl_block_system (work), .numbers = numbers, .equations = equations, .vars = vars, .n = n, .keeps_flows = usual->first };
+  Relax r = { .work = work, .system = hl_block_system (work), .numbers = numbers, .equations = equations, .vars = vars, .n = n, .keeps_flows = usual->first && usual->variant % 2 == 0 };
   relax_init (&r, usual);
   hl_block_set_bold (work, usual->variant % 2 == 1 ? 6 : 0);
   /* States with the flows as they are, then flows with the states as they are: twice, as each changes the other a little. */

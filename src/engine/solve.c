@@ -5,8 +5,9 @@
 #include "engine/diagnose.h"
 #include "engine/solution-private.h"
 #include "engine/usual.h"
+#include <math.h>
 
-#define N_VARIANTS 3        /* starts from usual values, each a little different */
+#define N_VARIANTS 4        /* starts from usual values, each a little different */
 
 /* Takes over the values of an earlier solution where an unknown has the same address. */
 static void
@@ -262,6 +263,39 @@ better (HlSolution *first, HlSolution *second)
   return taken;
 }
 
+/* The plant without heat losses, which tie all states of an expansion to its flow; NULL where it has none. */
+static HlPlant *
+without_losses (HlPlant *plant)
+{
+  const char *key = g_intern_static_string ("heat_loss");
+  HlPlant *easier = NULL;
+  for (guint n = 0; n < hl_plant_n_components (plant); n++)
+    {
+      const HlComponent *component = hl_plant_component (plant, n);
+      const HlValue *value = hl_values_find (&component->values, key);
+      if (value == NULL || value->origin == HL_ORIGIN_TIED || fabs (value->value) < G_MINDOUBLE)
+        continue;
+      HlAddress address = hl_address_component (component->id, key);
+      HlValue none = { .origin = value->origin, .value = 0.0 };
+      HlPlant *next = hl_plant_with_value (easier != NULL ? easier : plant, &address, &none, NULL);
+      if (next == NULL)
+        continue;
+      g_clear_pointer (&easier, hl_plant_unref);
+      easier = next;
+    }
+  return easier;
+}
+
+static HlSolution *
+solve_by_easier_plant (HlPlant *plant)
+{
+  g_autoptr (HlPlant) easier = without_losses (plant);
+  if (easier == NULL)
+    return NULL;
+  g_autoptr (HlSolution) first = hl_solve_once (easier, NULL, HL_PATIENCE_USUAL);
+  return first->is_complete ? hl_solve_once (plant, first, HL_PATIENCE_NONE) : NULL;
+}
+
 HlSolution *
 hl_solve (HlPlant *plant, const HlSolution *start)
 {
@@ -269,6 +303,9 @@ hl_solve (HlPlant *plant, const HlSolution *start)
   HlSolution *solution = hl_solve_once (plant, start, HL_PATIENCE_USUAL);
   if (start != NULL && may_have_another (solution))
     solution = better (solution, hl_solve_once (plant, NULL, HL_PATIENCE_USUAL));
+  HlSolution *led = may_have_another (solution) ? solve_by_easier_plant (plant) : NULL;
+  if (led != NULL)
+    solution = better (solution, led);
   for (int variant = 0; variant < N_VARIANTS && may_have_another (solution); variant++)
     solution = better (solution, hl_solve_once (plant, NULL, HL_PATIENCE_USUAL_FIRST + variant));
   return solution;

@@ -338,6 +338,11 @@ random_check (const HlSolution *solution)
         }
       look.flow = fmax (look.flow, fabs (r.m));
       look.power = fmax (look.power, fabs (r.m * r.state.h));
+    }
+  for (guint n = 0; n < hl_plant_n_streams (look.plant); n++)
+    {
+      HlStreamResult r;
+      hl_solution_stream (solution, n, &r);
       if (!(r.m >= -1e-9 * look.flow))
         {
           check.n_broken_laws++;

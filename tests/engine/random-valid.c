@@ -23,6 +23,7 @@ typedef struct {
   GString    *swaps;            /* what was exchanged */
   HlPlant    *plant;            /* the last that was solved */
   guint       n_swaps, n_unknowns, n_iterations, largest;
+  gboolean    differs;          /* in another order another answer, sound as well */
   gboolean    other_answer;     /* from cold another one than the one that the values came from */
   double      balance, order, warm, seconds;
 } Outcome;
@@ -147,7 +148,13 @@ try_other_ways (const HlSolution *cold, guint32 seed, Outcome *o)
   if (!hl_solution_is_solved (other))
     miss (o, other, "order", first_error (other));
   else if (!((o->order = random_compare (cold, other, where, sizeof where)) <= SAME))
-    fail (o, "order", "in another order off by %.3g: %s", o->order, where);
+    {
+      /* Exchanged values may have several answers, or hang on each other so closely that the last digits are open. */
+      RandomCheck check = random_check (other);
+      o->differs = o->n_swaps > 0 && check.n_broken_laws == 0 && check.energy <= BALANCE && check.given <= 2e-8;
+      if (!o->differs)
+        fail (o, "order", "in another order off by %.3g: %s", o->order, where);
+    }
   if (!hl_solution_is_solved (warm))
     fail (o, "warm", "warm: %s", first_error (warm));
   else if (!((o->warm = random_compare (cold, warm, where, sizeof where)) <= SAME))
@@ -225,7 +232,7 @@ report (const RandomDesign *design)
 /* --- the run ---------------------------------------------------------------------------- */
 
 typedef struct {
-  guint  n, n_solved, n_infeasible, n_missed, n_failed, n_swapped, n_swaps, n_other, by_sink[N_SINKS], by_reheats[3], most_components, least_components;
+  guint  n, n_solved, n_infeasible, n_missed, n_failed, n_swapped, n_swaps, n_other, n_differ, by_sink[N_SINKS], by_reheats[3], most_components, least_components;
   double components, unknowns, iterations, largest, balance, order, warm, seconds;
   guint  most_unknowns, most_largest, most_iterations;
 } Log;
@@ -248,6 +255,7 @@ add_to_log (Log *log, const RandomDesign *design, const Outcome *o)
   log->n_swapped += o->n_swaps > 0;
   log->n_swaps += o->n_swaps;
   log->n_other += o->other_answer;
+  log->n_differ += o->differs;
   log->by_sink[design->sink]++;
   log->by_reheats[design->reheats]++;
   log->unknowns += o->n_unknowns;
@@ -257,7 +265,7 @@ add_to_log (Log *log, const RandomDesign *design, const Outcome *o)
   log->most_largest = MAX (log->most_largest, o->largest);
   log->most_iterations = MAX (log->most_iterations, o->n_iterations);
   log->balance = fmax (log->balance, o->balance);
-  log->order = fmax (log->order, o->order);
+  log->order = fmax (log->order, o->differs ? 0.0 : o->order);
   log->warm = fmax (log->warm, o->warm);
 }
 
@@ -273,7 +281,8 @@ print_log (const Log *log)
   g_test_message ("reheats 0/1/2: %u/%u/%u; condenser with own water %u, lines %u, tower %u, air %u, plain %u; back-pressure process %u, district %u",
                   log->by_reheats[0], log->by_reheats[1], log->by_reheats[2], log->by_sink[0], log->by_sink[1], log->by_sink[2], log->by_sink[3], log->by_sink[4],
                   log->by_sink[5], log->by_sink[6]);
-  g_test_message ("%u plants with %u values exchanged for others, %u of them with another answer from cold", log->n_swapped, log->n_swaps, log->n_other);
+  g_test_message ("%u plants with %u values exchanged for others, %u of them with another answer from cold, %u with another one in another order", log->n_swapped, log->n_swaps,
+                  log->n_other, log->n_differ);
   g_test_message ("worst balance %.2e, other order %.2e, warm %.2e; longest solve %.3f s", log->balance, log->order, log->warm, log->seconds);
 }
 
@@ -302,6 +311,7 @@ test_random_plants (void)
   g_assert_cmpuint (log.n_failed, ==, 0);
   g_assert_cmpuint (log.n_infeasible, <=, log.n / 20);
   g_assert_cmpuint (log.n_missed, <=, log.n / 40);
+  g_assert_cmpuint (log.n_differ, <=, log.n / 200);
 }
 
 int
