@@ -263,7 +263,7 @@ hl_session_apply (HlSession *self, const char *name, HlPlant *plant, const HlAdd
 
   if (settle)
     {
-      HlPlant *settled = hl_settle (plant, edited, &yielded);
+      HlPlant *settled = hl_settle_from (plant, edited, hl_session_solution (self), &yielded);
       hl_plant_unref (plant);
       plant = settled;
     }

@@ -152,19 +152,23 @@ check_losses (HlChecker *checker)
       if (finding->at.id == component->id && g_str_equal (finding->code, "pressure-rises"))
         return;
     }
-  for (guint k = 0; k < hl_component_n_quantities (component); k++)
+  const HlModel *model = checker->model;
+  for (int k = model->first_own[checker->index]; k < model->first_own[checker->index + 1]; k++)
     {
-      HlQuantity quantity = hl_component_quantity (component, k);
+      const char *key = g_array_index (model->own, HlOwn, k).key;
       double loss;
-      if (strstr (quantity.key, "pressure_loss") == NULL || !hl_check_own (checker, quantity.key, &loss) || loss >= -1e-9)
+      if (strstr (key, "pressure_loss") == NULL || !hl_check_own (checker, key, &loss) || loss >= -1e-9)
         continue;
-      HlAddress address = hl_address_component (component->id, quantity.key);
+      const HlQuantityKind *kind = hl_component_quantity_kind (component, key);
+      if (kind == NULL)
+        continue;
+      HlAddress address = hl_address_component (component->id, g_intern_string (key));
       g_autofree char *name = hl_plant_describe (checker->model->plant, &address);
-      g_autofree char *text = hl_quantity_format (quantity.kind, loss, hl_plant_units (checker->model->plant));
-      HlFinding *finding = hl_check_add (checker, HL_GRADE_ERROR, "pressure-rises", quantity.key,
+      g_autofree char *text = hl_quantity_format (kind, loss, hl_plant_units (checker->model->plant));
+      HlFinding *finding = hl_check_add (checker, HL_GRADE_ERROR, "pressure-rises", key,
         g_strdup_printf (_("Pressure would rise through %s: %s comes out as %s. Lower the pressure behind it, or raise the one before it."),
                          component->id, name, text));
-      hl_check_offer (checker, finding, quantity.key);
+      hl_check_offer (checker, finding, key);
     }
 }
 

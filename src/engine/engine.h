@@ -16,4 +16,6 @@ HL_PUBLIC HlSolution *hl_solve (HlPlant *plant, const HlSolution *start);
  * Returns: (transfer full): the settled plant, possibly @plant itself. */
 typedef struct { HlAddress address; gboolean came_back; char text[160]; } HlYield;   /* text: "terminal temperature difference of C1 is now found" */
 HL_PUBLIC HlPlant *hl_settle (HlPlant *plant, const HlAddress *edited, GArray **yielded);
+/* The same next to the last solution: where only the size of values has changed since, there is nothing to settle.  @last: or NULL. */
+HL_PUBLIC HlPlant *hl_settle_from (HlPlant *plant, const HlAddress *edited, const HlSolution *last, GArray **yielded);
 G_END_DECLS

@@ -24,9 +24,10 @@ hl_model_free (HlModel *model)
   g_array_unref (model->broken_ties);
   for (int k = 0; k < HL_N_SUMS; k++)
     g_array_unref (model->sums[k]);
-  g_free (model->first_port);
-  g_free (model->first_own);
-  g_free (model->is_on_shaft);
+  g_array_unref (model->forms);
+  g_atomic_rc_box_release (model->first_port);
+  g_atomic_rc_box_release (model->first_own);
+  g_atomic_rc_box_release (model->is_on_shaft);
   hl_plant_unref (model->plant);
   g_free (model);
 }
@@ -95,7 +96,7 @@ add_streams (HlModel *model)
         if (ends[2 * i + end] >= 0)
           count[ends[2 * i + end]]++;
     }
-  model->first_port = g_new0 (int, n + 1);
+  model->first_port = g_atomic_rc_box_alloc0 (sizeof (int) * (gsize) (n + 1));
   for (int c = 0; c < n; c++)
     model->first_port[c + 1] = model->first_port[c] + count[c];
   g_array_set_size (model->ports, (guint) model->first_port[n]);
@@ -328,10 +329,17 @@ hl_emit_has_value (HlEmit *emit, const char *key)
 }
 
 gboolean
+hl_value_is_fixed_at (const HlValue *value, double at)
+{
+  return value != NULL && value->origin != HL_ORIGIN_TIED && fabs (value->value - at) < 1e-300;
+}
+
+gboolean
 hl_emit_is_fixed_at (HlEmit *emit, const char *key, double value)
 {
-  const HlValue *v = value_of (emit, key);
-  return v != NULL && v->origin != HL_ORIGIN_TIED && fabs (v->value - value) < 1e-300;
+  HlForm form = { emit->index, key, value, hl_value_is_fixed_at (value_of (emit, key), value) };
+  g_array_append_val (emit->model->forms, form);
+  return form.holds;
 }
 
 static int
@@ -591,13 +599,14 @@ hl_model_new_other (HlPlant *plant, const gboolean *other, guint n_other)
   model->ports = g_array_sized_new (FALSE, FALSE, sizeof (HlPortNode), 128);
   model->own = g_array_sized_new (FALSE, FALSE, sizeof (HlOwn), 256);
   model->open_ports = g_array_new (FALSE, FALSE, sizeof (HlAddress));
+  model->forms = g_array_new (FALSE, FALSE, sizeof (HlForm));
   model->broken_ties = g_array_new (FALSE, FALSE, sizeof (HlAddress));
   for (int k = 0; k < HL_N_SUMS; k++)
     model->sums[k] = g_array_new (FALSE, FALSE, sizeof (int));
   add_streams (model);
   hl_shafts_look (model);
   int n = N_COMPONENTS (model);
-  model->first_own = g_new0 (int, n + 2);
+  model->first_own = g_atomic_rc_box_alloc0 (sizeof (int) * (gsize) (n + 2));
   for (int c = 0; c < n; c++)
     {
       HlEmit emit = { model, model->system, hl_plant_component (plant, (guint) c), c };

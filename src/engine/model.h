@@ -38,6 +38,9 @@ typedef enum {
   HL_N_SUMS
 } HlSum;
 
+/* Equations that a component wrote for a value that is just @at, or is not: they hold only as long. */
+typedef struct { int component; const char *key; double at; gboolean holds; } HlForm;
+
 typedef struct _HlModel {
   HlPlant  *plant;
   const HlFluid *water;           /* by the plant's formulation: of water that is drawn nowhere, and of ports that no line reaches */
@@ -52,12 +55,19 @@ typedef struct _HlModel {
   GArray   *broken_ties;          /* HlAddress: tied to something that the plant does not have */
   gboolean *is_on_shaft;          /* [n components] on a shaft that carries its power on */
   gboolean  has_gross;            /* something gives electricity */
+  GArray   *forms;                /* HlForm */
+  /* first_port, first_own and is_on_shaft are shared between models: g_atomic_rc_box. */
 } HlModel;
 
 HlModel *hl_model_new  (HlPlant *plant);
 /* @other: [n nodes] where a free temperature is to set the other of pressure and enthalpy than the first guess says; or NULL. */
 HlModel *hl_model_new_other (HlPlant *plant, const gboolean *other, guint n_other);
 void     hl_model_free (HlModel *model);
+/* Does the plant differ from the model's in the size of values only?  Then it may take over what the model was made of, and where
+ * the unknowns stand. */
+gboolean hl_model_fits        (const HlModel *model, HlPlant *plant);
+HlModel *hl_model_with_values (const HlModel *model, HlPlant *plant);
+gboolean hl_value_is_fixed_at (const HlValue *value, double at);       /* given or assumed as exactly this; NULL: not */
 G_DEFINE_AUTOPTR_CLEANUP_FUNC (HlModel, hl_model_free)
 
 static inline HlNode *

@@ -298,6 +298,17 @@ bring_back_one (Settle *settle)
 }
 
 HlPlant *
+hl_settle_from (HlPlant *plant, const HlAddress *edited, const HlSolution *last, GArray **yielded)
+{
+  g_return_val_if_fail (plant != NULL, NULL);
+  if (!hl_solve_can_reuse (last, plant))
+    return hl_settle (plant, edited, yielded);
+  if (yielded != NULL)
+    *yielded = g_array_new (FALSE, FALSE, sizeof (HlYield));
+  return hl_plant_ref (plant);
+}
+
+HlPlant *
 hl_settle (HlPlant *plant, const HlAddress *edited, GArray **yielded)
 {
   g_return_val_if_fail (plant != NULL, NULL);

@@ -31,6 +31,9 @@ struct _HlSolution {
 /* Unknowns, equations and their structure.  @other: [n_other nodes] see hl_model_new_other(); or NULL.  @effort grows. */
 void hl_solve_prepare (HlPlant *plant, const gboolean *other, guint n_other, HlModel **model, HlStructure **structure, HlSolveEffort *effort);
 
+/* Does the plant differ from that of the solution in the size of values only, and had the structure nothing wrong? */
+gboolean hl_solve_can_reuse (const HlSolution *start, HlPlant *plant);
+
 /* How far a solve goes where blocks cannot be solved from their start: not further; to usual values, see numbers-relax.c; to these
  * from the beginning; and, counting on from there, to values near them. */
 typedef enum { HL_PATIENCE_NONE, HL_PATIENCE_USUAL, HL_PATIENCE_USUAL_FIRST } HlPatience;

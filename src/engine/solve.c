@@ -109,18 +109,38 @@ hl_solve_prepare (HlPlant *plant, const gboolean *other, guint n_other, HlModel 
     reconsider_saturation (plant, model, structure);
 }
 
+gboolean
+hl_solve_can_reuse (const HlSolution *start, HlPlant *plant)
+{
+  return start != NULL && start->is_complete && start->structure->is_sound && hl_model_fits (start->model, plant);
+}
+
 /* Plant to unknowns, and numbers for them. */
 static void
 try_solve (HlSolution *solution, const HlSolution *start, HlPatience patience, const gboolean *other, guint n_other)
 {
-  hl_solve_prepare (solution->plant, other, n_other, &solution->model, &solution->structure, &solution->effort);
   gint64 phase = g_get_monotonic_time ();
+  gboolean reuses = other == NULL && patience == HL_PATIENCE_USUAL && hl_solve_can_reuse (start, solution->plant), may_try = TRUE;
   hl_findings_init (&solution->findings);
-  gboolean may_try = hl_diagnose_structure (solution->model, solution->structure, &solution->findings);
+  if (reuses)
+    {
+      solution->model = hl_model_with_values (start->model, solution->plant);
+      solution->structure = hl_structure_ref (start->structure);
+      solution->effort.seconds_build += seconds_since (phase);
+    }
+  else
+    hl_solve_prepare (solution->plant, other, n_other, &solution->model, &solution->structure, &solution->effort);
+  phase = g_get_monotonic_time ();
+  if (!reuses)
+    {
+      may_try = hl_diagnose_structure (solution->model, solution->structure, &solution->findings);
+      solution->structure->is_sound = may_try && solution->findings.list->len == 0 && solution->structure->n_missing == 0;
+    }
   solution->effort.seconds_structure += seconds_since (phase);
 
   phase = g_get_monotonic_time ();
-  start_from (solution->model->system, start);
+  if (!reuses)
+    start_from (solution->model->system, start);
   if (may_try)
     {
       HlUsualSource source = { solution->model, solution->structure };

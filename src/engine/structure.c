@@ -287,6 +287,7 @@ HlStructure *
 hl_structure_new (HlSystem *system)
 {
   HlStructure *s = g_new0 (HlStructure, 1);
+  g_atomic_ref_count_init (&s->ref_count);
   Peel peel;
   Pattern pattern;
   drop_dependent_balances (system);
@@ -304,10 +305,17 @@ hl_structure_new (HlSystem *system)
   return s;
 }
 
+HlStructure *
+hl_structure_ref (HlStructure *s)
+{
+  g_atomic_ref_count_inc (&s->ref_count);
+  return s;
+}
+
 void
 hl_structure_free (HlStructure *s)
 {
-  if (s == NULL)
+  if (s == NULL || !g_atomic_ref_count_dec (&s->ref_count))
     return;
   g_free (s->start);
   g_free (s->equations);

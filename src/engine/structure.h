@@ -5,6 +5,8 @@
 G_BEGIN_DECLS
 
 typedef struct {
+  gatomicrefcount ref_count;
+  gboolean is_sound;                 /* nothing was found to say about it: set by who looks */
   /* Blocks in the order of solving: block k owns entries start[k] to start[k+1]-1 of equations[] and vars[]. */
   int  n_blocks, n_solved, largest;
   int *start, *equations, *vars;
@@ -19,6 +21,7 @@ typedef struct {
 } HlStructure;
 
 HlStructure *hl_structure_new  (HlSystem *system);
-void         hl_structure_free (HlStructure *structure);
+HlStructure *hl_structure_ref  (HlStructure *structure);
+void         hl_structure_free (HlStructure *structure);     /* lets go of one reference */
 G_DEFINE_AUTOPTR_CLEANUP_FUNC (HlStructure, hl_structure_free)
 G_END_DECLS

@@ -29,8 +29,8 @@ hl_system_free (HlSystem *system)
   g_array_unref (system->index);
   g_array_unref (system->raw);
   g_array_unref (system->constants);
-  g_free (system->root);
-  g_free (system->fixed_by);
+  g_clear_pointer (&system->root, g_atomic_rc_box_release);
+  g_clear_pointer (&system->fixed_by, g_atomic_rc_box_release);
   g_free (system->x);
   g_free (system);
 }
@@ -161,8 +161,8 @@ void
 hl_system_close (HlSystem *system)
 {
   guint n = system->vars->len;
-  system->root = g_new (int, MAX (n, 1));
-  system->fixed_by = g_new (int, MAX (n, 1));
+  system->root = g_atomic_rc_box_alloc (sizeof (int) * MAX (n, 1));
+  system->fixed_by = g_atomic_rc_box_alloc (sizeof (int) * MAX (n, 1));
   system->x = g_new (double, MAX (n, 1));
   for (guint i = 0; i < n; i++)
     {
@@ -176,6 +176,12 @@ hl_system_close (HlSystem *system)
   g_array_append_vals (system->raw, system->index->data, system->index->len);
   for (guint i = 0; i < system->index->len; i++)
     g_array_index (system->index, int, i) = system->root[g_array_index (system->index, int, i)];
+}
+
+void
+hl_system_rescale (HlSystem *system)
+{
+  system->flow_scale = guess_flow_scale (system);
 }
 
 double

@@ -74,7 +74,7 @@ typedef struct {
   GArray *index;                   /* int: variables of the equations; roots once closed */
   GArray *raw;                     /* int: the same before merging, for names */
   GArray *constants;               /* double */
-  int    *root;                    /* [n vars] once closed */
+  int    *root;                    /* [n vars] once closed; it and fixed_by are g_atomic_rc_boxes, shared where only values differ */
   int    *fixed_by;                /* [n vars] of a root: index of the spec that fixes it; -1: free */
   double *x;                       /* [n vars] of roots */
   double  flow_scale;              /* [kg/s] */
@@ -97,6 +97,8 @@ HlSpec     *hl_system_add_spec     (HlSystem *system, int var, HlAddress address
 /* Ends building: roots are settled, the first value of each class fixes it, further ones become equations. */
 void        hl_system_close        (HlSystem *system);
 
+/* After other values were put in: the reference flow that goes with them. */
+void        hl_system_rescale      (HlSystem *system);
 double      hl_system_scale        (const HlSystem *system, HlVarKind kind);
 double      hl_system_start        (const HlVar *var, double flow_scale);
 HlStatus    hl_system_evaluate     (const HlSystem *system, int equation, double *r, double *dr);

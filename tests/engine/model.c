@@ -1,6 +1,7 @@
 /* Model: from addresses to unknowns, circuits, names of unknowns and equations.
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "plants.h"
+#include "engine/solution-private.h"
 #include "engine/circuits.h"
 #include "engine/model.h"
 #include "engine/names.h"
@@ -103,6 +104,63 @@ test_ties_are_written_out (void)
   g_assert_true (g_str_has_prefix (text, "cooling water rise of C1 = 8.0 K\ncooling water rise of C1 = 2 × condensate subcooling of C1 + 8 K\n8.0 K = 2 × 0.0 K + 8 K"));
 }
 
+/* Another size of a value: the model is taken over, and the answer is that of a new one. */
+static void
+test_model_is_taken_over (void)
+{
+  static const struct { const char *address; double value; } edits[] = { { "T1.inlet.p", 150e5 }, { "H1.terminal_difference", 2.0 }, { "plant.net_power", 80e6 }, { "B1.steam.T", 800.0 } };
+  HlPlant *plant = test_plant (test_reheat_plant);
+  HlSolution *last = hl_solve (plant, NULL);
+  for (guint k = 0; k < G_N_ELEMENTS (edits); k++)
+    {
+      HlPlant *next = test_plant_set (hl_plant_ref (plant), edits[k].address, edits[k].value);
+      g_assert_true (hl_solve_can_reuse (last, next));
+      HlSolution *s = hl_solve (next, last);
+      g_autoptr (HlSolution) fresh = hl_solve (next, NULL);
+      test_assert_solved (s);
+      g_assert_true (s->structure == last->structure && fresh->structure != last->structure);
+      g_assert_true (hl_solution_plant (s) == next);
+      for (guint n = 0; n < hl_plant_n_streams (next); n++)
+        {
+          HlStreamResult a, b;
+          hl_solution_stream (s, n, &a);
+          hl_solution_stream (fresh, n, &b);
+          test_assert_near (a.m, b.m, 1e-9);
+          test_assert_near (a.state.p, b.state.p, 1e-9);
+          test_assert_near (a.state.h, b.state.h, 1e-9);
+        }
+      test_assert_near (test_value (s, edits[k].address), edits[k].value, 1e-9);
+      hl_plant_unref (plant);
+      hl_solution_unref (last);
+      plant = next;
+      last = s;
+    }
+  hl_solution_unref (last);
+  hl_plant_unref (plant);
+}
+
+/* What changes the equations does not pass for a change of size. */
+static void
+test_model_is_made_anew (void)
+{
+  static const char *const others[] = {
+    "pipe L1 pressure_loss=0.02 heat_loss=5e3\n", "pipe L1 pressure_loss=0.02 heat_loss=0\n", "pipe L1 ~pressure_loss=0.02 heat_loss=1e3\n",
+    "pipe L1 heat_loss=1e3\n", "valve L1 pressure_loss=0.02\n",
+  };
+  static const gboolean fits[] = { TRUE, FALSE, FALSE, FALSE, FALSE };
+  const char *rest = "boundary Y1 direction:0 outlet.p=40e5 outlet.T=700 outlet.m=5\nboundary Y2 direction:1\nY1.outlet > L1.inlet\nL1.outlet > Y2.inlet\n";
+  g_autofree char *text = g_strconcat ("pipe L1 pressure_loss=0.02 heat_loss=1e3\n", rest, NULL);
+  g_autoptr (HlPlant) plant = test_plant (text);
+  g_autoptr (HlSolution) s = hl_solve (plant, NULL);
+  test_assert_solved (s);
+  for (guint k = 0; k < G_N_ELEMENTS (others); k++)
+    {
+      g_autofree char *other = g_strconcat (others[k], rest, NULL);
+      g_autoptr (HlPlant) next = test_plant (other);
+      g_assert_cmpint (hl_solve_can_reuse (s, next), ==, fits[k]);
+    }
+}
+
 int
 main (int argc, char **argv)
 {
@@ -112,5 +170,7 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/model/circuits", test_circuits);
   g_test_add_func ("/engine/model/names", test_names);
   g_test_add_func ("/engine/model/ties-are-written-out", test_ties_are_written_out);
+  g_test_add_func ("/engine/model/taken-over", test_model_is_taken_over);
+  g_test_add_func ("/engine/model/made-anew", test_model_is_made_anew);
   return g_test_run ();
 }
