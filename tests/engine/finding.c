@@ -1,6 +1,6 @@
 /* Findings: each one provoked, with its exact words, where it points and what it offers.
  * SPDX-License-Identifier: GPL-3.0-or-later */
-#include "plants.h"
+#include "laws.h"
 #include <math.h>
 #include <string.h>
 
@@ -432,6 +432,25 @@ test_gravest_first (void)
   g_assert_cmpstr (hl_grade_name (HL_GRADE_ERROR), ==, "error");
 }
 
+/* Condenser pressure and terminal difference put in, and the water warmer than both allow. */
+static void
+test_cooling_water_would_cool_down (void)
+{
+  test_expect_finding ("heat_input Q1 steam.T=758.15 pressure_loss=0\nturbine T1 inlet.p=65e5 isentropic_efficiency=0.83 mechanical_efficiency=0.985\n"
+    "generator G1 efficiency=0.98\ncondenser C1 subcooling=0 steam.p=7000 cooling_inlet_T=308.15 terminal_difference=6 cooling_p=2e5\n"
+    "pump P1 isentropic_efficiency=0.75 motor_efficiency=0.95\n"
+    "Q1.steam > T1.inlet\nT1.exhaust > C1.steam\nC1.condensate > P1.inlet\nP1.outlet > Q1.feed\nshaft T1 G1\nplant net_power=12e6 other_consumption_fraction=0\n",
+    "heat-runs-backwards", HL_GRADE_ERROR, "Cooling water of C1 would leave 2.0 K colder than it comes in. Raise the condenser pressure or lower the cooling water temperature.");
+}
+
+/* A pump of hardly any efficiency heats its water beyond what the formulation covers; nothing else asks for that state. */
+static void
+test_state_beyond_the_formulation (void)
+{
+  test_expect_finding ("boundary Y1 direction:0 outlet.p=1e5 outlet.T=300 outlet.m=5\nboundary Y2 direction:1\npump P1 outlet.p=200e5 isentropic_efficiency=0.0005 motor_efficiency=0.95\n"
+    "Y1.outlet > P1.inlet\nP1.outlet > Y2.inlet\n", "outside-range", HL_GRADE_ERROR, "P1: a state lies outside the range of the property formulation");
+}
+
 int
 main (int argc, char **argv)
 {
@@ -461,5 +480,7 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/finding/close-to-the-critical-pressure", test_close_to_the_critical_pressure);
   g_test_add_func ("/engine/finding/mends-that-do-nothing", test_mends_that_do_nothing);
   g_test_add_func ("/engine/finding/gravest-first", test_gravest_first);
+  g_test_add_func ("/engine/finding/cooling-water-would-cool-down", test_cooling_water_would_cool_down);
+  g_test_add_func ("/engine/finding/state-beyond-the-formulation", test_state_beyond_the_formulation);
   return g_test_run ();
 }

@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "plants.h"
 #include <math.h>
+#include <time.h>
 
 static const char *const *const plants[] = { &test_simple_loop, &test_reheat_plant, &test_large_plant, &test_industrial_plant };
 
@@ -65,12 +66,26 @@ any_edit (HlPlant *plant, const HlSolution *s, GRand *rand, HlAddress *address)
   return hl_plant_with_value (plant, address, what == 1 ? NULL : &value, NULL);
 }
 
+/* Processor time of the last solve [s]: a busy machine is no hang. */
+static double last_seconds;
+
+static HlSolution *
+solve (HlPlant *plant, const HlSolution *start)
+{
+  struct timespec before, after;
+  clock_gettime (CLOCK_THREAD_CPUTIME_ID, &before);
+  HlSolution *s = hl_solve (plant, start);
+  clock_gettime (CLOCK_THREAD_CPUTIME_ID, &after);
+  last_seconds = (double) (after.tv_sec - before.tv_sec) + 1e-9 * (double) (after.tv_nsec - before.tv_nsec);
+  return s;
+}
+
 static void
 check (const HlSolution *s)
 {
   g_autofree char *summary = hl_solution_summary (s);
   g_assert_nonnull (summary);
-  g_assert_cmpfloat (hl_solution_seconds (s), <, 2.0);
+  g_assert_cmpfloat (last_seconds, <, 2.0);
   if (!hl_solution_is_solved (s))
     {
       g_assert_true (hl_solution_has_grade (s, HL_GRADE_ERROR));
@@ -101,7 +116,7 @@ test_random_edits (void)
           if (next == NULL)
             continue;
           HlPlant *settled = hl_settle (next, &address, NULL);
-          HlSolution *t = hl_solve (settled, s);
+          HlSolution *t = solve (settled, s);
           check (t);
           hl_solution_is_solved (t) ? n_solved++ : n_not++;
           hl_plant_unref (plant);
@@ -133,7 +148,7 @@ test_taking_apart (void)
           const char *ids[] = { stream ? hl_plant_stream (plant, (guint) g_rand_int_range (rand, 0, (gint32) hl_plant_n_streams (plant)))->id
                                        : hl_plant_component (plant, (guint) g_rand_int_range (rand, 0, (gint32) hl_plant_n_components (plant)))->id, NULL };
           HlPlant *next = hl_plant_without (plant, ids), *settled = hl_settle (next, NULL, NULL);
-          HlSolution *t = hl_solve (settled, s);
+          HlSolution *t = solve (settled, s);
           check (t);
           hl_plant_unref (plant);
           hl_plant_unref (next);
@@ -178,7 +193,7 @@ test_random_drawings (void)
           g_autofree char *id = hl_plant_free_id (plant, "");
           TAKE (hl_plant_with_stream (plant, hl_stream_new (g_intern_string (id), from->id, a.key, to->id, b.key)));
           TAKE (hl_settle (plant, NULL, NULL));
-          HlSolution *s = hl_solve (plant, last);
+          HlSolution *s = solve (plant, last);
           hl_solution_unref (last);
           last = s;
           check (s);

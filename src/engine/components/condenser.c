@@ -125,7 +125,17 @@ check (HlChecker *checker)
 {
   const HlNodeResult *steam = hl_check_port (checker, "steam"), *out = hl_check_port (checker, "condensate");
   const HlNodeResult *drain = hl_check_port (checker, "drain");
+  double rise;
   check_difference (checker);
+  if (hl_check_own (checker, "cooling_rise", &rise) && rise < 0.0)
+    {
+      g_autofree char *d = hl_check_text (checker, HL_DIMENSION_TEMPERATURE_DIFFERENCE, -rise);
+      HlFinding *finding = hl_check_add (checker, HL_GRADE_ERROR, "heat-runs-backwards", "cooling_rise",
+        g_strdup_printf (_("Cooling water of %s would leave %s colder than it comes in. Raise the condenser pressure or lower the cooling water temperature."),
+                         checker->component->id, d));
+      hl_check_offer (checker, finding, "cooling_rise");
+      hl_check_offer (checker, finding, "steam.p");
+    }
   if (steam != NULL && drain != NULL && steam->has_pressure && drain->has_pressure && drain->p < steam->p * (1.0 - 1e-9))
     {
       g_autofree char *p_drain = hl_check_text (checker, HL_DIMENSION_PRESSURE, drain->p);
