@@ -7,7 +7,7 @@
 struct _HlFindings {
   GtkWidget  parent_instance;
   HlSession *session;
-  GtkWidget *scroller, *list, *empty, *error;
+  GtkWidget *scroller, *list, *empty, *error, *show_dismissed;
   int        fit_width, fit_most;   /* height follows the list up to fit_most; 0: fills its place */
   char      *shown;            /* what stands in the list, to leave it alone while nothing changes */
 };
@@ -28,6 +28,37 @@ show_error (HlFindings *self, const char *text)
 {
   gtk_label_set_text (GTK_LABEL (self->error), text != NULL ? text : "");
   gtk_widget_set_visible (self->error, text != NULL);
+}
+
+static gboolean
+shows_dismissed (HlFindings *self)
+{
+  return gtk_check_button_get_active (GTK_CHECK_BUTTON (self->show_dismissed));
+}
+
+/* Row @n of the list; dismissed ones come last. */
+static const HlFinding *
+finding_of_row (const HlSolution *solution, guint n)
+{
+  guint open = hl_solution_n_findings (solution);
+  if (n < open)
+    return hl_solution_finding (solution, n);
+  return n - open < hl_solution_n_dismissed (solution) ? hl_solution_dismissed (solution, n - open) : NULL;
+}
+
+static void
+dismiss_clicked_cb (GtkButton *button, gpointer data)
+{
+  Press *press = data;
+  HlFindings *self = press->self;
+  g_autoptr (HlSolution) solution = hl_solution_ref (hl_session_solution (self->session));
+  const HlFinding *finding = finding_of_row (solution, press->finding);
+
+  if (finding == NULL)
+    return;
+  g_object_ref (self);
+  hl_session_dismiss (self->session, finding, press->finding < hl_solution_n_findings (solution));
+  g_object_unref (self);
 }
 
 /* The popover that shows the list closes when the mend leads elsewhere. */
@@ -67,9 +98,11 @@ row_activated_cb (GtkListBox *list, GtkListBoxRow *row, HlFindings *self)
   const HlSolution *solution = hl_session_solution (self->session);
   guint n = (guint) gtk_list_box_row_get_index (row);
 
-  if (n >= hl_solution_n_findings (solution))
+  const HlFinding *finding = finding_of_row (solution, n);
+
+  if (finding == NULL)
     return;
-  HlAddress at = hl_solution_finding (solution, n)->at;
+  HlAddress at = finding->at;
   close_popover (self);
   if (at.key != NULL && *at.key != '\0')
     hl_session_go_to (self->session, &at);
@@ -106,7 +139,22 @@ mend_buttons (HlFindings *self, const HlFinding *finding, guint n)
 }
 
 static GtkWidget *
-finding_row (HlFindings *self, const HlFinding *finding, guint n)
+dismiss_button (HlFindings *self, guint n, gboolean is_dismissed)
+{
+  GtkWidget *button = gtk_button_new_with_label (is_dismissed ? _("Restore") : _("Dismiss"));
+  Press *press = g_new (Press, 1);
+
+  *press = (Press) { self, n, 0 };
+  gtk_widget_add_css_class (button, "flat");
+  gtk_widget_add_css_class (button, "dismiss");
+  gtk_widget_set_valign (button, GTK_ALIGN_START);
+  gtk_widget_set_tooltip_text (button, is_dismissed ? _("List it among the findings again") : _("Accept it as it is: it is kept with the plant, and listed as dismissed"));
+  g_signal_connect_data (button, "clicked", G_CALLBACK (dismiss_clicked_cb), press, free_press, 0);
+  return button;
+}
+
+static GtkWidget *
+finding_row (HlFindings *self, const HlFinding *finding, guint n, gboolean is_dismissed)
 {
   GtkWidget *line = gtk_box_new (GTK_ORIENTATION_HORIZONTAL, 10), *words = gtk_box_new (GTK_ORIENTATION_VERTICAL, 4);
   GtkWidget *mark = hl_grade_mark_new (hl_grade_mark_of (finding->grade)), *grade = hl_pane_label (hl_grade_name (finding->grade), "grade");
@@ -120,11 +168,22 @@ finding_row (HlFindings *self, const HlFinding *finding, guint n)
   gtk_label_set_wrap_mode (GTK_LABEL (text), PANGO_WRAP_WORD_CHAR);
   gtk_widget_set_hexpand (words, TRUE);
   gtk_box_append (GTK_BOX (words), text);
-  if (finding->n_mends > 0)
+  if (finding->source != NULL)
+    {
+      g_autofree char *source = g_strdup_printf (_("Source: %s"), finding->source);
+      GtkWidget *label = hl_pane_label (source, "quiet");
+      gtk_label_set_wrap (GTK_LABEL (label), TRUE);
+      gtk_box_append (GTK_BOX (words), label);
+    }
+  if (finding->n_mends > 0 && !is_dismissed)
     gtk_box_append (GTK_BOX (words), mend_buttons (self, finding, n));
   gtk_box_append (GTK_BOX (line), mark);
   gtk_box_append (GTK_BOX (line), grade);
   gtk_box_append (GTK_BOX (line), words);
+  if (hl_finding_may_be_dismissed (finding))
+    gtk_box_append (GTK_BOX (line), dismiss_button (self, n, is_dismissed));
+  if (is_dismissed)
+    gtk_widget_add_css_class (row, "dismissed");
   gtk_list_box_row_set_child (GTK_LIST_BOX_ROW (row), line);
   hl_pane_set_accessible (row, hl_grade_name (finding->grade), finding->text);
   return row;
@@ -132,13 +191,15 @@ finding_row (HlFindings *self, const HlFinding *finding, guint n)
 
 /* Everything that the list shows as one text. */
 static char *
-fingerprint (const HlSolution *solution)
+fingerprint (const HlSolution *solution, gboolean with_dismissed)
 {
+  guint open = hl_solution_n_findings (solution), aside = hl_solution_n_dismissed (solution);
   GString *text = g_string_new (NULL);
 
-  for (guint n = 0; n < hl_solution_n_findings (solution); n++)
+  g_string_append_printf (text, "%u %u\n", open, aside);
+  for (guint n = 0; n < open + (with_dismissed ? aside : 0); n++)
     {
-      const HlFinding *finding = hl_solution_finding (solution, n);
+      const HlFinding *finding = finding_of_row (solution, n);
       g_string_append_printf (text, "%d %s\n", (int) finding->grade, finding->text);
       for (guint m = 0; m < finding->n_mends; m++)
         g_string_append_printf (text, "  %s\n", finding->mends[m].text);
@@ -163,8 +224,9 @@ static void
 update (HlFindings *self)
 {
   const HlSolution *solution = hl_session_solution (self->session);
-  guint n_findings = hl_solution_n_findings (solution);
-  char *now = fingerprint (solution);
+  guint n_findings = hl_solution_n_findings (solution), n_dismissed = hl_solution_n_dismissed (solution);
+  guint n_rows = n_findings + (shows_dismissed (self) ? n_dismissed : 0);
+  char *now = fingerprint (solution, shows_dismissed (self));
   GtkListBoxRow *row;
 
   if (g_strcmp0 (now, self->shown) == 0)
@@ -177,10 +239,13 @@ update (HlFindings *self)
   show_error (self, NULL);
   while ((row = gtk_list_box_get_row_at_index (GTK_LIST_BOX (self->list), 0)) != NULL)
     gtk_list_box_remove (GTK_LIST_BOX (self->list), GTK_WIDGET (row));
-  for (guint n = 0; n < n_findings; n++)
-    gtk_list_box_append (GTK_LIST_BOX (self->list), finding_row (self, hl_solution_finding (solution, n), n));
-  gtk_widget_set_visible (self->scroller, n_findings > 0);
+  for (guint n = 0; n < n_rows; n++)
+    gtk_list_box_append (GTK_LIST_BOX (self->list), finding_row (self, finding_of_row (solution, n), n, n >= n_findings));
+  gtk_widget_set_visible (self->scroller, n_rows > 0);
   gtk_widget_set_visible (self->empty, n_findings == 0);
+  g_autofree char *label = g_strdup_printf (ngettext_hl ("Show %u dismissed", "Show %u dismissed", n_dismissed), n_dismissed);
+  gtk_check_button_set_label (GTK_CHECK_BUTTON (self->show_dismissed), label);
+  gtk_widget_set_visible (self->show_dismissed, n_dismissed > 0);
   fit_height (self);
 }
 
@@ -243,6 +308,11 @@ hl_findings_init (HlFindings *self)
   gtk_box_append (GTK_BOX (self->empty), hl_grade_mark_new (HL_SHAPE_GOOD));
   gtk_box_append (GTK_BOX (self->empty), hl_pane_label (_("Nothing to remark."), "quiet"));
   gtk_widget_set_parent (self->empty, GTK_WIDGET (self));
+
+  self->show_dismissed = gtk_check_button_new ();
+  gtk_widget_add_css_class (self->show_dismissed, "show-dismissed");
+  gtk_widget_set_visible (self->show_dismissed, FALSE);
+  gtk_widget_set_parent (self->show_dismissed, GTK_WIDGET (self));
 }
 
 void
@@ -261,6 +331,7 @@ hl_findings_new (HlSession *session)
 
   self->session = g_object_ref (session);
   g_signal_connect_swapped (session, "changed", G_CALLBACK (update), self);
+  g_signal_connect_swapped (self->show_dismissed, "toggled", G_CALLBACK (update), self);
   update (self);
   return GTK_WIDGET (self);
 }

@@ -442,6 +442,16 @@ hl_session_is_comparing (HlSession *self)
   return self->compared != NULL;
 }
 
+/* Kept with the base, so that all variants have it. */
+void
+hl_session_dismiss (HlSession *self, const HlFinding *finding, gboolean is_dismissed)
+{
+  HlPlant *base = hl_document_plant (document (self), HL_DOCUMENT_BASE);
+  g_autoptr (HlPlant) plant = hl_plant_with_dismissed (base, finding->code, &finding->at, is_dismissed);
+  hl_session_apply_document (self, is_dismissed ? _("Dismiss a finding") : _("Restore a finding"),
+                             hl_document_with_plant (document (self), HL_DOCUMENT_BASE, plant), self->variant);
+}
+
 /* History */
 
 gboolean

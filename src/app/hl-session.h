@@ -49,6 +49,7 @@ void              hl_session_cancel_preview (HlSession *self);
 gboolean          hl_session_set_text     (HlSession *self, const HlAddress *address, const char *text, GError **error);
 gboolean          hl_session_set_value    (HlSession *self, const HlAddress *address, const HlValue *value, GError **error);   /* NULL value: let go */
 gboolean          hl_session_mend         (HlSession *self, const HlMend *mend, GError **error);
+void              hl_session_dismiss      (HlSession *self, const HlFinding *finding, gboolean is_dismissed);   /* or restores; one undoable step */
 
 gboolean          hl_session_can_undo     (HlSession *self);
 gboolean          hl_session_can_redo     (HlSession *self);

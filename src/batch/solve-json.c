@@ -181,23 +181,35 @@ write_address (HlJsonText *json, const char *name, const HlAddress *address)
 }
 
 static void
+write_finding (HlJsonText *json, const HlFinding *finding)
+{
+  hl_json_text_begin (json, NULL, '{', FALSE);
+  hl_json_text_string (json, "grade", hl_grade_id (finding->grade));
+  hl_json_text_string (json, "code", finding->code);
+  hl_json_text_string (json, "text", finding->text);
+  if (finding->source != NULL)
+    hl_json_text_string (json, "source", finding->source);
+  write_address (json, "at", &finding->at);
+  hl_json_text_begin (json, "mends", '[', FALSE);
+  for (guint k = 0; k < finding->n_mends; k++)
+    hl_json_text_string (json, NULL, finding->mends[k].text);
+  hl_json_text_end (json);
+  hl_json_text_end (json);
+}
+
+/* Those that are dismissed stand apart, where there are any. */
+static void
 write_findings (HlJsonText *json, const HlSolution *solution)
 {
   hl_json_text_begin (json, "findings", '[', FALSE);
   for (guint i = 0; i < hl_solution_n_findings (solution); i++)
-    {
-      const HlFinding *finding = hl_solution_finding (solution, i);
-      hl_json_text_begin (json, NULL, '{', FALSE);
-      hl_json_text_string (json, "grade", hl_grade_id (finding->grade));
-      hl_json_text_string (json, "code", finding->code);
-      hl_json_text_string (json, "text", finding->text);
-      write_address (json, "at", &finding->at);
-      hl_json_text_begin (json, "mends", '[', FALSE);
-      for (guint k = 0; k < finding->n_mends; k++)
-        hl_json_text_string (json, NULL, finding->mends[k].text);
-      hl_json_text_end (json);
-      hl_json_text_end (json);
-    }
+    write_finding (json, hl_solution_finding (solution, i));
+  hl_json_text_end (json);
+  if (hl_solution_n_dismissed (solution) == 0)
+    return;
+  hl_json_text_begin (json, "dismissed", '[', FALSE);
+  for (guint i = 0; i < hl_solution_n_dismissed (solution); i++)
+    write_finding (json, hl_solution_dismissed (solution, i));
   hl_json_text_end (json);
 }
 

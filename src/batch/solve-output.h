@@ -13,6 +13,8 @@ char *hl_solution_json      (const HlSolution *solution, const GArray *yielded);
 void  hl_print_solution     (FILE *out, const HlSolution *solution, const GArray *yielded);
 /* Findings of at least @grade, each with its place and mends. */
 void  hl_print_findings     (FILE *out, const HlSolution *solution, HlGrade at_least);
+/* Those that the plant says are dismissed. */
+void hl_print_dismissed (FILE *out, const HlSolution *solution);
 /* Summary, workbook, drawing on paper: mistakes of the command line first, then the files. */
 gboolean hl_check_handover  (const HlArguments *arguments, GError **error);
 gboolean hl_write_handover  (const HlSolution *solution, HlDocument *document, const HlArguments *arguments, GError **error);   /* @document: its variants go into tables */

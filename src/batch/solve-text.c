@@ -20,19 +20,33 @@ address_text (const HlAddress *address)
   return hl_address_to_text (address);
 }
 
+static void
+print_finding (FILE *out, const HlFinding *finding, gboolean is_dismissed)
+{
+  g_autofree char *at = address_text (&finding->at);
+  if (is_dismissed)
+    fprintf (out, _("%s, dismissed: %s: %s\n"), hl_grade_name (finding->grade), at, finding->text);
+  else
+    fprintf (out, "%s: %s: %s\n", hl_grade_name (finding->grade), at, finding->text);
+  if (finding->source != NULL)
+    fprintf (out, "    [%s]\n", finding->source);
+  for (guint k = 0; k < finding->n_mends && !is_dismissed; k++)
+    fprintf (out, "    → %s\n", finding->mends[k].text);
+}
+
 void
 hl_print_findings (FILE *out, const HlSolution *solution, HlGrade at_least)
 {
   for (guint i = 0; i < hl_solution_n_findings (solution); i++)
-    {
-      const HlFinding *finding = hl_solution_finding (solution, i);
-      if (finding->grade < at_least)
-        continue;
-      g_autofree char *at = address_text (&finding->at);
-      fprintf (out, "%s: %s: %s\n", hl_grade_name (finding->grade), at, finding->text);
-      for (guint k = 0; k < finding->n_mends; k++)
-        fprintf (out, "    → %s\n", finding->mends[k].text);
-    }
+    if (hl_solution_finding (solution, i)->grade >= at_least)
+      print_finding (out, hl_solution_finding (solution, i), FALSE);
+}
+
+void
+hl_print_dismissed (FILE *out, const HlSolution *solution)
+{
+  for (guint i = 0; i < hl_solution_n_dismissed (solution); i++)
+    print_finding (out, hl_solution_dismissed (solution, i), TRUE);
 }
 
 void

@@ -111,6 +111,8 @@ run_check (const HlArguments *arguments)
   hl_print_findings (stdout, solution, HL_GRADE_HINT);
   if (hl_solution_n_findings (solution) == 0)
     printf ("%s\n", _("nothing found"));
+  if (hl_arguments_option (arguments, "all", 0) != NULL)
+    hl_print_dismissed (stdout, solution);
   gboolean is_strict = hl_arguments_option (arguments, "strict", 0) != NULL;
   gboolean is_bad = !hl_solution_is_solved (solution) || hl_solution_has_grade (solution, is_strict ? HL_GRADE_WARNING : HL_GRADE_ERROR);
   return is_bad ? HL_EXIT_PLANT : HL_EXIT_DONE;
@@ -155,6 +157,7 @@ const HlBatchCommand hl_command_solve = {
 static const HlBatchOption check_options[] = {
   { "variant", N_("NAME"), FALSE, N_("take this variant of the plant instead of its base") },
   { "strict", NULL, FALSE, N_("a warning counts as an error") },
+  { "all", NULL, FALSE, N_("print the dismissed ones too") },
 };
 
 const HlBatchCommand hl_command_check = {

@@ -221,23 +221,26 @@ hl_table_findings (const HlSolution *solution)
   enum { GRADE, WHERE, TEXT, MENDS, N };
   HlTable *table;
   g_return_val_if_fail (solution != NULL, NULL);
-  table = hl_table_new (_("Findings"), N, hl_solution_n_findings (solution));
+  guint open = hl_solution_n_findings (solution);
+  table = hl_table_new (_("Findings"), N, open + hl_solution_n_dismissed (solution));
   hl_table_head (table, GRADE, _("Grade"), FALSE);
   hl_table_head (table, WHERE, _("Where"), FALSE);
   hl_table_head (table, TEXT, _("Finding"), FALSE);
   hl_table_head (table, MENDS, _("What would mend it"), FALSE);
   for (guint row = 0; row < table->n_rows; row++)
     {
-      const HlFinding *finding = hl_solution_finding (solution, row);
+      const HlFinding *finding = row < open ? hl_solution_finding (solution, row) : hl_solution_dismissed (solution, row - open);
+      g_autofree char *grade = row < open ? g_strdup (hl_grade_name (finding->grade)) : g_strdup_printf (_("%s, dismissed"), hl_grade_name (finding->grade));
+      g_autofree char *words = finding->source != NULL ? g_strdup_printf (_("%s Source: %s."), finding->text, finding->source) : g_strdup (finding->text);
       g_autoptr (GString) mends = g_string_new (NULL);
       gboolean has_key = finding->at.key != NULL && *finding->at.key != '\0';
       g_autofree char *where = has_key ? hl_address_to_text (&finding->at)
                                        : g_strdup (finding->at.owner == HL_OWNER_PLANT ? _("Plant") : finding->at.id);
       for (guint k = 0; k < finding->n_mends; k++)
         g_string_append_printf (mends, "%s%s", k > 0 ? "; " : "", finding->mends[k].text);
-      hl_table_set_text (table, row, GRADE, hl_grade_name (finding->grade));
+      hl_table_set_text (table, row, GRADE, grade);
       hl_table_set_text (table, row, WHERE, where);
-      hl_table_set_text (table, row, TEXT, finding->text);
+      hl_table_set_text (table, row, TEXT, words);
       hl_table_set_text (table, row, MENDS, mends->str);
     }
   return table;

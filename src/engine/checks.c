@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "engine/checks.h"
 #include "engine/components/components.h"
+#include "engine/practice.h"
 #include "plant/i18n.h"
 #include <math.h>
 #include <string.h>
@@ -172,26 +173,70 @@ check_losses (HlChecker *checker)
     }
 }
 
-/* A value outside the range of its kind's table is worth a hint. */
+/* Value of a quantity that nobody typed, known and not told about under another name; FALSE otherwise. */
+static gboolean
+found_value (const HlChecker *checker, const HlAddress *address, gboolean *said, double *value)
+{
+  const HlSystem *system = checker->model->system;
+  int var = checker->is_complete ? hl_model_find_var (checker->model, address) : -1;
+  if (var < 0 || !checker->is_known[system->root[var]] || said[system->root[var]])
+    return FALSE;
+  for (guint k = 0; k < checker->findings->list->len; k++)
+    if (hl_address_equal (&g_array_index (checker->findings->list, HlFinding, k).at, address))
+      return FALSE;
+  *value = hl_system_value (system, var);
+  return TRUE;
+}
+
+/* Usual pressures are those of water: of other media they say nothing. */
+static gboolean
+range_holds (const HlChecker *checker, const HlQuantity *quantity)
+{
+  const char *dot = strchr (quantity->key, '.');
+  if (dot == NULL || quantity->kind->dimension != HL_DIMENSION_PRESSURE)
+    return TRUE;
+  g_autofree char *port = g_strndup (quantity->key, (gsize) (dot - quantity->key));
+  return hl_model_port_node (checker->model, checker->index, port) < 0 || hl_check_is_water (checker, port);
+}
+
+/* A value outside the range of its kind's table is worth a hint, whether typed or found. */
 static void
-check_credible (HlChecker *checker)
+check_credible (HlChecker *checker, gboolean *said)
 {
   const HlComponent *component = checker->component;
   HlUnitSet units = hl_plant_units (checker->model->plant);
-  for (guint k = 0; k < component->values.n; k++)
+  for (guint k = 0; k < hl_component_n_quantities (component); k++)
     {
-      const HlValueEntry *entry = &component->values.entries[k];
-      double value = entry->value.value;
-      const HlQuantityKind *kind = entry->value.origin == HL_ORIGIN_GIVEN ? hl_component_quantity_kind (component, entry->key) : NULL;
-      if (kind == NULL || !(value < kind->credible_low || value > kind->credible_high))
+      HlQuantity quantity = hl_component_quantity (component, k);
+      const HlQuantityKind *kind = quantity.kind;
+      const HlValue *typed = hl_values_find (&component->values, quantity.key);
+      HlAddress address = hl_address_component (component->id, quantity.key);
+      gboolean is_given = typed != NULL && typed->origin == HL_ORIGIN_GIVEN;
+      double value = is_given ? typed->value : NAN;
+      if ((isnan (kind->credible_low) && isnan (kind->credible_high)) || !range_holds (checker, &quantity) || (typed != NULL && typed->origin == HL_ORIGIN_ASSUMED)
+          || (!is_given && !found_value (checker, &address, said, &value)) || !(value < kind->credible_low || value > kind->credible_high))
         continue;
-      HlAddress address = hl_address_component (component->id, entry->key);
+      int var = hl_model_find_var (checker->model, &address);
+      if (var >= 0)
+        said[checker->model->system->root[var]] = TRUE;
       g_autofree char *name = hl_plant_describe (checker->model->plant, &address);
       g_autofree char *text = hl_quantity_format (kind, value, units), *low = hl_quantity_format (kind, kind->credible_low, units);
       g_autofree char *high = hl_quantity_format (kind, kind->credible_high, units);
-      HlFinding *finding = hl_check_add (checker, HL_GRADE_HINT, "unusual-value", entry->key,
-        g_strdup_printf (_("Unusual value: %s is %s; common are %s to %s."), name, text, low, high));
-      hl_check_offer (checker, finding, entry->key);
+      HlFinding *finding = hl_check_add (checker, HL_GRADE_HINT, "unusual-value", quantity.key,
+        g_strdup_printf (is_given ? _("Unusual value: %s is %s; common are %s to %s.") : _("Unusual value: %s comes out as %s; common are %s to %s."), name, text, low, high));
+      hl_check_offer (checker, finding, quantity.key);
+    }
+}
+
+/* What is unwise is said with the source of the limit. */
+static void
+name_sources (HlChecker *checker)
+{
+  for (guint k = 0; k < checker->findings->list->len; k++)
+    {
+      HlFinding *finding = &g_array_index (checker->findings->list, HlFinding, k);
+      if (finding->grade != HL_GRADE_ERROR && finding->source == NULL)
+        finding->source = hl_practice_source (finding->code);
     }
 }
 
@@ -219,6 +264,7 @@ check_range (HlChecker *checker)
 void
 hl_check_all (HlChecker *checker)
 {
+  g_autofree gboolean *said = g_new0 (gboolean, checker->model->system->vars->len + 1);
   for (guint c = 0; c < hl_plant_n_components (checker->model->plant); c++)
     {
       checker->index = (int) c;
@@ -228,7 +274,7 @@ hl_check_all (HlChecker *checker)
         model->check (checker);
       hl_check_entropy (checker);
       check_losses (checker);
-      check_credible (checker);
+      check_credible (checker, said);
     }
   checker->component = NULL;
   if (checker->is_complete)
@@ -239,4 +285,8 @@ hl_check_all (HlChecker *checker)
       check_flows (checker);
       check_anything_flows (checker);
     }
+  if (checker->is_complete && !hl_findings_have (checker->findings, HL_GRADE_ERROR))
+    hl_check_practice (checker);
+  checker->component = NULL;
+  name_sources (checker);
 }

@@ -17,5 +17,7 @@ void       hl_finding_mend   (HlFinding *finding, HlMendKind kind, HlAddress add
 void       hl_finding_mend_medium (HlFinding *finding, HlAddress stream, const char *medium, char *text);
 /* Gravest first, otherwise as they came. */
 void       hl_findings_sort  (HlFindings *findings);
+/* Moves those that the plant says are dismissed to @dismissed, which becomes a list. */
+void       hl_findings_set_aside (HlFindings *findings, const HlPlant *plant, HlFindings *dismissed);
 gboolean   hl_findings_have  (const HlFindings *findings, HlGrade at_least);
 G_END_DECLS

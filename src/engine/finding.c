@@ -71,6 +71,30 @@ hl_finding_mend_medium (HlFinding *finding, HlAddress stream, const char *medium
   finding->mends[finding->n_mends - 1].medium = g_intern_string (medium);
 }
 
+gboolean
+hl_finding_may_be_dismissed (const HlFinding *finding)
+{
+  return finding->grade <= HL_GRADE_CAUTION;
+}
+
+void
+hl_findings_set_aside (HlFindings *findings, const HlPlant *plant, HlFindings *dismissed)
+{
+  hl_findings_init (dismissed);
+  if (hl_plant_n_dismissed (plant) == 0)
+    return;
+  GArray *all = findings->list;
+  hl_findings_init (findings);
+  g_array_set_clear_func (all, NULL);
+  for (guint k = 0; k < all->len; k++)
+    {
+      HlFinding *finding = &g_array_index (all, HlFinding, k);
+      gboolean is_aside = hl_finding_may_be_dismissed (finding) && hl_plant_is_dismissed (plant, finding->code, &finding->at);
+      g_array_append_vals (is_aside ? dismissed->list : findings->list, finding, 1);
+    }
+  g_array_unref (all);
+}
+
 /* Insertion keeps the order of equals; there are never many. */
 void
 hl_findings_sort (HlFindings *findings)

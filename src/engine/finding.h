@@ -29,10 +29,14 @@ typedef struct {
   HlGrade   grade;
   const char *code;        /* static, stable: "missing-value", "surplus-value", "open-port", "temperature-cross", "exhaust-moisture" ... */
   char     *text;          /* translated sentence: what, where, how much */
+  const char *source;      /* translated: where a limit of practice comes from; NULL for laws and structure */
   HlAddress at;            /* what it is about; key "" for the whole component or plant */
   guint     n_mends;
   HlMend   *mends;
 } HlFinding;
+
+/* Hints and cautions may be put aside (hl_plant_with_dismissed()); what is wrong may not. */
+HL_PUBLIC gboolean hl_finding_may_be_dismissed (const HlFinding *finding);
 
 /* What the window does when a mend button is pressed.  NULL with error where it cannot; EDIT and CONNECT return the plant itself. */
 HL_PUBLIC HlPlant *hl_mend_apply (const HlMend *mend, HlPlant *plant, GError **error);

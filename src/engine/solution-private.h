@@ -22,7 +22,7 @@ struct _HlSolution {
   GArray        *processes;         /* HlProcess */
   GArray        *results;           /* HlPlantResult */
   HlExergy      *exergy;
-  HlFindings     findings;
+  HlFindings     findings, dismissed;
   gboolean       is_complete;       /* every unknown has its value */
   double         seconds;
   HlSolveEffort  effort;

@@ -27,6 +27,7 @@ hl_solution_unref (HlSolution *solution)
   g_array_unref (solution->results);
   hl_exergy_free (solution->exergy);
   hl_findings_clear (&solution->findings);
+  hl_findings_clear (&solution->dismissed);
   hl_plant_unref (solution->plant);
   g_free (solution);
 }
@@ -189,6 +190,19 @@ hl_solution_finding (const HlSolution *solution, guint n)
 {
   g_return_val_if_fail (n < solution->findings.list->len, NULL);
   return &g_array_index (solution->findings.list, HlFinding, n);
+}
+
+guint
+hl_solution_n_dismissed (const HlSolution *solution)
+{
+  return solution->dismissed.list->len;
+}
+
+const HlFinding *
+hl_solution_dismissed (const HlSolution *solution, guint n)
+{
+  g_return_val_if_fail (n < solution->dismissed.list->len, NULL);
+  return &g_array_index (solution->dismissed.list, HlFinding, n);
 }
 
 gboolean

@@ -59,6 +59,9 @@ HL_PUBLIC const HlProcess *hl_solution_process     (const HlSolution *solution, 
 
 HL_PUBLIC guint            hl_solution_n_findings  (const HlSolution *solution);
 HL_PUBLIC const HlFinding *hl_solution_finding     (const HlSolution *solution, guint n);   /* gravest first */
+/* Findings that the plant says are dismissed: not among those above. */
+HL_PUBLIC guint            hl_solution_n_dismissed (const HlSolution *solution);
+HL_PUBLIC const HlFinding *hl_solution_dismissed   (const HlSolution *solution, guint n);
 HL_PUBLIC gboolean         hl_solution_has_grade   (const HlSolution *solution, HlGrade at_least);
 
 /* One line on how things stand: "Solved · 12.00 MW net · 31.2 % · 3 values assumed", or "One value is missing: ...".  g_free(). */

@@ -244,6 +244,7 @@ finish (HlSolution *solution)
   if (!explained)
     hl_diagnose_numbers (solution->model, solution->structure, &solution->numbers, &solution->findings);
   hl_findings_sort (&solution->findings);
+  hl_findings_set_aside (&solution->findings, solution->plant, &solution->dismissed);
   fill_effort (solution);
   solution->effort.seconds_results = seconds_since (phase);
 }

@@ -41,6 +41,8 @@ HlPlant    *hl_plant_with_json_item (const HlPlant *plant, JsonObject *object, G
 gboolean    hl_reader_option        (HlReader *reader, JsonObject *object, HlComponent *component, guint n);
 gboolean    hl_reader_route         (HlReader *reader, JsonObject *object, HlStream *stream);      /* no bends where none are told */
 gboolean    hl_reader_label         (HlReader *reader, JsonObject *object, HlStream *stream);
+/* dismissals.c: the list "dismissed". */
+gboolean    hl_plant_read_dismissed (HlReader *reader, JsonObject *top);
 
 /* What is not in @known, nor an option of @kind (nullable), to be written back; NULL: nothing. */
 JsonObject *hl_reader_unknown     (JsonObject *object, const char *const *known, const HlKind *kind);

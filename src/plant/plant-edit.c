@@ -234,6 +234,7 @@ hl_plant_without (const HlPlant *plant, const char *const *ids)
     }
   hl_plant_index (edited);
   drop_loose_streams (edited);
+  hl_plant_forget_dismissed (edited);
   return edited;
 }
 

@@ -56,6 +56,6 @@ hl_plant_equal (const HlPlant *a, const HlPlant *b)
              && lists_equal (a->components, b->components, (GEqualFunc) components_equal)
              && lists_equal (a->streams, b->streams, (GEqualFunc) streams_equal)
              && lists_equal (a->shafts, b->shafts, (GEqualFunc) shafts_equal)
-             && hl_values_equal (&a->values, &b->values) && hl_json_object_equal (a->extra, b->extra)
+             && hl_values_equal (&a->values, &b->values) && hl_dismissals_equal (a, b) && hl_json_object_equal (a->extra, b->extra)
              && hl_json_object_equal (a->site_extra, b->site_extra) && hl_json_object_equal (a->plant_extra, b->plant_extra));
 }

@@ -173,5 +173,6 @@ hl_plant_with_id (const HlPlant *plant, const char *id, const char *new_id, GErr
   rename_ends (edited, &renaming);
   hl_plant_index (edited);
   map_ties (edited, NULL, rename_address, &renaming, TRUE);
+  hl_plant_map_dismissed (edited, rename_address, &renaming);
   return edited;
 }

@@ -466,7 +466,7 @@ read_header (HlReader *reader, JsonObject *top)
 static gboolean
 read_top (HlReader *reader, JsonObject *top)
 {
-  static const char *const known[] = { "heatloom", "title", "units", "formulation", "site", "components", "streams", "shafts", "plant", NULL };
+  static const char *const known[] = { "heatloom", "title", "units", "formulation", "site", "components", "streams", "shafts", "plant", "dismissed", NULL };
   g_autoptr (GHashTable) ids = g_hash_table_new (g_str_hash, g_str_equal);
   HlPlant *plant = reader->plant;
   if (!read_header (reader, top) || !read_items (reader, top, "components", ids, read_component_item))
@@ -476,7 +476,7 @@ read_top (HlReader *reader, JsonObject *top)
     return FALSE;
   hl_plant_index (plant);
   plant->extra = hl_reader_unknown (top, known, NULL);
-  return read_all_values (reader, top);
+  return read_all_values (reader, top) && hl_plant_read_dismissed (reader, top);
 }
 
 HlPlant *

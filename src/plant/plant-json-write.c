@@ -228,6 +228,24 @@ write_top_extra (GString *out, JsonObject *extra)
     }
 }
 
+static void
+write_dismissed (GString *out, const HlPlant *plant)
+{
+  guint n = hl_plant_n_dismissed (plant);
+  for (guint k = 0; k < n; k++)
+    {
+      const HlDismissal *dismissal = hl_plant_dismissed (plant, k);
+      g_autofree char *at = hl_dismissal_at_to_text (&dismissal->at);
+      g_string_append (out, k == 0 ? ",\n \"dismissed\": [\n  {\"code\": " : ",\n  {\"code\": ");
+      hl_json_append_string (out, dismissal->code);
+      string_member (out, "at", at);
+      extra_members (out, dismissal->extra);
+      g_string_append_c (out, '}');
+    }
+  if (n > 0)
+    g_string_append_c (out, ']');
+}
+
 void
 hl_json_append_plant (GString *out, const HlPlant *plant)
 {
@@ -243,6 +261,7 @@ hl_json_append_plant (GString *out, const HlPlant *plant)
   values_members (out, &plant->values);
   extra_members (out, plant->plant_extra);
   g_string_append_c (out, '}');
+  write_dismissed (out, plant);
   write_top_extra (out, plant->extra);
 }
 

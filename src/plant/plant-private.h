@@ -25,6 +25,7 @@ struct _HlPlant {
   GPtrArray     *components, *streams, *shafts;   /* never changed once the plant is shared */
   HlPlantIndex  *index;
   HlValues       values;
+  GArray        *dismissed;                    /* HlDismissal; never changed once the plant is shared; or NULL */
   JsonObject    *extra, *site_extra, *plant_extra;   /* unknown keys of the file; or NULL */
   GHashTable    *reserved;                     /* interned ids that hl_plant_free_id() must not give out, as variants use them; or NULL */
 };
@@ -52,6 +53,11 @@ gboolean        hl_addresses_same          (const HlPlant *plant, const HlAddres
 #define HL_SITE_MOST_T 373.15
 #define HL_SITE_LEAST_P 1e3
 #define HL_SITE_MOST_P 1e7
+/* dismissals.c; the first two work on a plant of one's own */
+void     hl_plant_forget_dismissed (HlPlant *plant);      /* of what is gone */
+void     hl_plant_map_dismissed    (HlPlant *plant, HlTieMap map, gpointer data);
+gboolean hl_dismissals_equal       (const HlPlant *a, const HlPlant *b);
+char    *hl_dismissal_at_to_text   (const HlAddress *at);
 
 /* plant-check.c */
 gboolean hl_quantity_may_be_put_in (const HlQuantityKind *kind, const char *where, GError **error);

@@ -128,6 +128,8 @@ hl_plant_share (const HlPlant *plant)
   g_ptr_array_ref (copy->shafts);
   g_atomic_ref_count_inc (&copy->index->ref_count);
   hl_values_copy (&copy->values, &plant->values);
+  if (copy->dismissed != NULL)
+    g_array_ref (copy->dismissed);
   share_extra (copy->extra);
   share_extra (copy->site_extra);
   share_extra (copy->plant_extra);
@@ -206,6 +208,7 @@ hl_plant_unref (HlPlant *plant)
   g_ptr_array_unref (plant->shafts);
   index_unref (plant->index);
   hl_values_clear (&plant->values);
+  g_clear_pointer (&plant->dismissed, g_array_unref);
   g_clear_pointer (&plant->extra, json_object_unref);
   g_clear_pointer (&plant->site_extra, json_object_unref);
   g_clear_pointer (&plant->plant_extra, json_object_unref);

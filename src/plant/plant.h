@@ -71,6 +71,16 @@ HL_PUBLIC HlPlant *hl_plant_with_value     (const HlPlant *plant, const HlAddres
 HL_PUBLIC HlPlant *hl_plant_with_ties_mapped (const HlPlant *plant, const char *const *ids, HlTieMap map, gpointer data);
 /* The component, stream or shaft @id under another id; lines, shafts and ties follow. */
 HL_PUBLIC HlPlant *hl_plant_with_id        (const HlPlant *plant, const char *id, const char *new_id, GError **error);
+/* Findings that were looked at and put aside: by code and place. */
+typedef struct {
+  const char *code;                /* interned */
+  HlAddress   at;                  /* key "" for the whole component or plant */
+  JsonObject *extra;               /* unknown keys of the file, written back; or NULL */
+} HlDismissal;
+HL_PUBLIC guint              hl_plant_n_dismissed    (const HlPlant *plant);
+HL_PUBLIC const HlDismissal *hl_plant_dismissed      (const HlPlant *plant, guint n);
+HL_PUBLIC gboolean           hl_plant_is_dismissed   (const HlPlant *plant, const char *code, const HlAddress *at);
+HL_PUBLIC HlPlant           *hl_plant_with_dismissed (const HlPlant *plant, const char *code, const HlAddress *at, gboolean is_dismissed);
 HL_PUBLIC char    *hl_plant_free_id        (const HlPlant *plant, const char *letter);      /* "T2"; "" gives the next stream number "7"; g_free() */
 /* Why a line from one port to another cannot be, or NULL (outlet to inlet, both free, not the same component's same side ...). */
 HL_PUBLIC gboolean hl_plant_can_connect    (const HlPlant *plant, const char *from_id, const char *from_port,

@@ -76,6 +76,51 @@ test_missing_value_is_said_and_mended (Fixture *f, gconstpointer data)
   g_assert_true (hl_session_can_undo (f->session));
 }
 
+/* The loop's exhaust is moist: the caution is put aside, shown again, and taken back; each is one step. */
+static void
+test_a_finding_is_dismissed_and_restored (Fixture *f, gconstpointer data)
+{
+  const HlSolution *solution = hl_session_solution (f->session);
+  guint n = hl_solution_n_findings (solution), wet = 0;
+  while (wet < n && !g_str_equal (hl_solution_finding (solution, wet)->code, "exhaust-moisture"))
+    wet++;
+  g_assert_cmpuint (wet, <, n);
+  g_autofree char *text = g_strdup (hl_solution_finding (solution, wet)->text);
+  GtkWidget *row = gtk_widget_get_ancestor (find_widget (f->findings, is_label_with, text), GTK_TYPE_LIST_BOX_ROW);
+  g_assert_null (find_button (f->findings, "Restore"));
+  g_signal_emit_by_name (find_button (row, "Dismiss"), "clicked");
+  settle_down ();
+  g_assert_cmpuint (hl_solution_n_findings (hl_session_solution (f->session)), ==, n - 1);
+  g_assert_false (shows_text (f->findings, text));
+  g_assert_cmpstr (hl_session_undo_name (f->session), ==, "Dismiss a finding");
+  g_assert_true (hl_session_is_dirty (f->session));
+
+  GtkWidget *toggle = find_type (f->findings, GTK_TYPE_CHECK_BUTTON);
+  g_assert_cmpstr (gtk_check_button_get_label (GTK_CHECK_BUTTON (toggle)), ==, "Show 1 dismissed");
+  g_assert_true (gtk_widget_get_visible (toggle));
+  gtk_check_button_set_active (GTK_CHECK_BUTTON (toggle), TRUE);
+  settle_down ();
+  g_assert_true (shows_text (f->findings, text));
+  g_signal_emit_by_name (find_button (f->findings, "Restore"), "clicked");
+  settle_down ();
+  g_assert_cmpuint (hl_solution_n_findings (hl_session_solution (f->session)), ==, n);
+  g_assert_false (gtk_widget_get_visible (toggle));
+  hl_session_undo (f->session);
+  g_assert_cmpuint (hl_solution_n_dismissed (hl_session_solution (f->session)), ==, 1);
+  hl_session_undo (f->session);
+  g_assert_cmpuint (hl_solution_n_dismissed (hl_session_solution (f->session)), ==, 0);
+}
+
+/* What is wrong cannot be put aside. */
+static void
+test_an_error_has_no_dismissal (Fixture *f, gconstpointer data)
+{
+  take_away (f, "T1", "isentropic_efficiency");
+  const HlFinding *finding = hl_solution_finding (hl_session_solution (f->session), 0);
+  GtkWidget *row = gtk_widget_get_ancestor (find_widget (f->findings, is_label_with, finding->text), GTK_TYPE_LIST_BOX_ROW);
+  g_assert_null (find_button (row, "Dismiss"));
+}
+
 static void
 test_strip_says_how_things_stand (Fixture *f, gconstpointer data)
 {
@@ -152,6 +197,8 @@ main (int argc, char **argv)
     return 0;
 #define ADD(name, func) g_test_add ("/app/findings/" name, Fixture, NULL, set_up, func, tear_down)
   ADD ("missing value is said and mended", test_missing_value_is_said_and_mended);
+  ADD ("a finding is dismissed and restored", test_a_finding_is_dismissed_and_restored);
+  ADD ("an error has no dismissal", test_an_error_has_no_dismissal);
   ADD ("strip says how things stand", test_strip_says_how_things_stand);
   ADD ("strip shows a message beside the state", test_strip_shows_a_message_beside_the_state);
   ADD ("strip counts assumed values", test_strip_counts_assumed_values);

@@ -55,7 +55,7 @@ def test_json_has_the_members_of_the_contract():
     for stream in found["streams"].values():
         assert list(stream) == STREAM_KEYS
     for finding in found["findings"]:
-        assert set(finding) == {"grade", "code", "text", "at", "mends"}, finding
+        assert set(finding) - {"source"} == {"grade", "code", "text", "at", "mends"}, finding
         assert finding["grade"] in ("hint", "caution", "warning") and isinstance(finding["mends"], list)
 
 
@@ -292,6 +292,22 @@ def test_an_unsolved_plant_still_gives_its_drawing():
     text = edited(replace=[('"exhaust.p": 8000.0', '"exhaust.p": 9000000.0')])
     batch("solve", "-", "--drawing", "x.svg", "--csv", "x.csv", stdin=text, status=1)
     assert ElementTree.parse("x.svg").getroot().tag.endswith("svg") and os.path.getsize("x.csv") > 0
+
+
+def test_check_leaves_out_what_was_dismissed():
+    with open(plant("loop.heatloom"), encoding="utf-8") as file:
+        whole = json.load(file)
+    before, _ = batch("check", "-", stdin=json.dumps(whole))
+    assert "caution: T1.exhaust_moisture: " in before, before
+    whole["dismissed"] = [{"code": "exhaust-moisture", "at": "T1.exhaust_moisture"}]
+    text = json.dumps(whole)
+    out, _ = batch("check", "-", stdin=text)
+    assert "T1.exhaust_moisture" not in out, out
+    out, _ = batch("check", "-", "--all", stdin=text)
+    assert "caution, dismissed: T1.exhaust_moisture: Exhaust of T1 holds" in out, out
+    found = json.loads(batch("solve", "-", "--json", "-", stdin=text)[0])
+    assert [item["code"] for item in found["dismissed"]] == ["exhaust-moisture"], found["dismissed"]
+    assert "exhaust-moisture" not in [item["code"] for item in found["findings"]]
 
 
 def test_check_is_quiet_where_all_is_well_or_says_what_it_found():
