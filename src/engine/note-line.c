@@ -198,6 +198,32 @@ show_in_kelvin (HlNoteTerm *term)
   term->shown = g_strdup_printf ("%.2f K", term->value);
 }
 
+/* A definition says of what: by the kinds of quantities that it relates, the most telling first. */
+static const char *
+source_of (const HlModel *model, const HlEquation *e)
+{
+  static const struct { HlVarKind kind; const char *source; } rows[] = {
+    { HL_VAR_CONDUCTANCE, N_("heat = UA × mean temperature difference: textbooks of heat transfer, from memory") },
+    { HL_VAR_HEAT_RATE, N_("definition of the heat rate: heat to the working fluid over generator output") },
+    { HL_VAR_STEAM_RATE, N_("definition of the steam rate: live steam over gross power") },
+    { HL_VAR_LENGTH, N_("difference of heights") },
+    { HL_VAR_ENTHALPY, N_("conservation of energy") },
+    { HL_VAR_PRESSURE, N_("definition of the pressure loss: a part of the pressure before it; of a rise: the difference") },
+    { HL_VAR_TEMPERATURE_DIFFERENCE, N_("definition of the temperature difference") },
+    { HL_VAR_RATIO, N_("definition of an efficiency or share: one flow, power or heat over another") },
+    { HL_VAR_POWER, N_("sum of powers or heats") },
+    { HL_VAR_FLOW, N_("conservation of mass") },
+  };
+  const char *source = hl_equation_source (e);
+  if (!g_str_equal (source, "definition"))
+    return source;
+  for (guint k = 0; k < G_N_ELEMENTS (rows); k++)
+    for (int i = 0; i < e->n; i++)
+      if (hl_system_var (model->system, g_array_index (model->system->raw, int, e->first + i))->kind == rows[k].kind)
+        return rows[k].source;
+  return source;
+}
+
 HlNoteLine *
 hl_note_line_of_equation (const HlSolution *solution, int equation, int root)
 {
@@ -220,7 +246,7 @@ hl_note_line_of_equation (const HlSolution *solution, int equation, int root)
   line->formula = hl_name_template (model, equation, TRUE);
   line->words = hl_note_fill_in (line, pattern, FALSE);
   line->numbers = hl_note_fill_in (line, pattern, TRUE);
-  line->source = _(hl_equation_source (e));
+  line->source = _(source_of (model, e));
   line->fluid = e->fluid;
   line->other_fluid = e->other_fluid != NULL ? e->other_fluid : e->fluid;
   line->properties = e->fluid != NULL ? hl_fluid_formulation (e->fluid) : NULL;

@@ -95,17 +95,18 @@ take_source (HlFinding *finding, const char *source)
   finding->source = _(source);
 }
 
-/* Below the limits of Cr-Mo steels: those of plain and of molybdenum steel. */
-static void
+/* Below the limits of Cr-Mo steels: those of plain and of molybdenum steel.  Whether that was said. */
+static gboolean
 check_pipe_steel (HlChecker *checker, const char *port)
 {
   const HlNodeResult *steam = hl_check_port (checker, port);
   if (steam == NULL || !steam->has_state || !(steam->st.T > 700.15 && steam->st.T <= 823.15) || !hl_check_is_water (checker, port))
-    return;
+    return FALSE;
   g_autofree char *T = hl_check_text (checker, HL_DIMENSION_TEMPERATURE, steam->st.T), *key = g_strconcat (port, ".T", NULL);
   hl_check_add (checker, HL_GRADE_HINT, "pipe-steel", key,
     steam->st.T > 727.15 ? g_strdup_printf (_("Steam of %s leaves at %s: above 454 °C neither carbon nor carbon-molybdenum steel will do for its pipe; use a Cr-Mo steel."), checker->component->id, T)
                          : g_strdup_printf (_("Steam of %s leaves at %s: above 427 °C carbon steel will not do for its pipe."), checker->component->id, T));
+  return TRUE;
 }
 
 static void
@@ -315,9 +316,9 @@ hl_check_practice (HlChecker *checker)
       const char *kind = checker->component->kind->id;
       if (is_heat_source (checker->component))
         {
-          check_pipe_steel (checker, "steam");
-          for (int k = 1; k <= hl_component_option (checker->component, "reheats"); k++)
-            check_pipe_steel (checker, hl_key ("hot_reheat", k));
+          gboolean is_said = check_pipe_steel (checker, "steam");
+          for (int k = 1; k <= hl_component_option (checker->component, "reheats") && !is_said; k++)
+            is_said = check_pipe_steel (checker, hl_key ("hot_reheat", k));
         }
       else if (g_str_equal (kind, "turbine"))
         {

@@ -82,6 +82,7 @@ def test_json_stays_the_same_in_german():
         for finding in found["findings"]:
             finding["mends"] = len(finding["mends"])
             del finding["text"]
+            finding.pop("source", None)      # words too
     assert english == german
 
 

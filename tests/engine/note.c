@@ -61,7 +61,7 @@ state_ph (const Calculator *c, const Number *a)
 static gboolean
 call (Calculator *c, Number *out)
 {
-  static const char *const names[] = { "T_sat(", "h′(", "h″(", "h(", "s(", "T(", "v(", "ln(", "max(", "min(", "sqrt(" };
+  static const char *const names[] = { "T_sat(", "h′(", "h″(", "h(", "s(", "T(", "v(", "ln(", "max(", "min(", "sqrt(", "p_sat(" };
   Number a[40];
   guint which = 0, n;
   HlState st;
@@ -102,6 +102,11 @@ call (Calculator *c, Number *out)
     out->v = log (a[0].v);
   else if (which == 10)
     out->v = sqrt (a[0].v);
+  else if (which == 11)
+    {
+      g_assert_cmpint (hl_fluid_saturation_T (c->line->fluid, state_ph (c, a).T, &sat), ==, HL_OK);
+      out->v = sat.p;
+    }
   else
     for (guint k = 0; k < n; k++)
       out->v = k == 0 ? a[k].v : which == 8 ? fmax (out->v, a[k].v) : fmin (out->v, a[k].v);
@@ -138,6 +143,11 @@ primary (Calculator *c)
       return (Number) { is_result ? c->result : term->value, term->dimension == HL_DIMENSION_ENTROPY };
     }
   skip (c);
+  if (*c->at == 'g' && !g_ascii_isalpha (c->at[1]))
+    {
+      c->at++;
+      return (Number) { 9.80665, FALSE };      /* standard acceleration of free fall */
+    }
   number.v = g_ascii_strtod (c->at, &end);
   if (end == c->at)
     g_error ("“%s”: cannot read “%s”", c->line->formula, c->at);
@@ -534,6 +544,61 @@ test_replay_of_ties (void)
     }
 }
 
+/* Kinds that none of the plants above has. */
+static void
+test_replay_of_other_kinds (void)
+{
+  static const char *const texts[] = {
+    "boundary Y1 direction:0 outlet.p=40e5 outlet.m=3 outlet.x=0\nboundary Y2 direction:1 inlet.p=4e5\nboundary Y3 direction:1\n"
+    "flash_vessel FV1\nY1.outlet > FV1.inlet\nFV1.steam > Y2.inlet\nFV1.drain > Y3.inlet\n",
+    "boundary Y1 direction:0 outlet.p=40e5 outlet.T=673.15 outlet.m=10\nboundary Y2 direction:0 outlet.p=60e5 outlet.T=400\nboundary Y3 direction:1\n"
+    "desuperheater DS1 pressure_loss=0.02 outlet_superheat=30\nY1.outlet > DS1.steam\nY2.outlet > DS1.spray\nDS1.outlet > Y3.inlet\n",
+    "heat_input Q1 steam.T=758.15 pressure_loss=0\nturbine T1 inlet.p=65e5 isentropic_efficiency=0.83 mechanical_efficiency=0.985\n"
+    "generator G1 efficiency=0.98\ncondenser C1 subcooling=0 cooling_rise=10 terminal_difference=5 cooling_pressure_loss=0 cleanliness=0.85\n"
+    "pump P1 isentropic_efficiency=0.75 motor_efficiency=0.95\npump P2 isentropic_efficiency=0.8 motor_efficiency=0.95\n"
+    "cooling_tower CT1 air:1 wet_bulb_T=291.15 approach=6 water_outlet.p=1e5 lift=1e5 evaporation_fraction=0.016 drift_fraction=0.0001 cycles=5\n"
+    "Q1.steam > T1.inlet\nT1.exhaust > C1.steam\nC1.condensate > P1.inlet\nP1.outlet > Q1.feed\n"
+    "CT1.water_outlet > P2.inlet\nP2.outlet > C1.cooling_inlet\nC1.cooling_outlet > CT1.water_inlet\nshaft T1 G1\nplant net_power=12e6 other_consumption_fraction=0\n",
+    "heat_input Q1 pressure_loss=0 steam.T=420\nturbine T1 inlet.p=10e5 isentropic_efficiency=0.82 mechanical_efficiency=0.985\ngenerator G1 efficiency=0.96\n"
+    "condenser C1 subcooling=0 cooling_inlet_T=288.15 cooling_rise=8 cooling_p=2e5 terminal_difference=5\npump P1 isentropic_efficiency=0.7 motor_efficiency=0.95\n"
+    "Q1.steam > T1.inlet\nT1.exhaust > C1.steam\nC1.condensate > P1.inlet\nP1.outlet > Q1.feed\nmedium 1 isopentane\nshaft T1 G1\nplant net_power=1e6 other_consumption_fraction=0\n",
+  };
+  for (guint k = 0; k < G_N_ELEMENTS (texts); k++)
+    {
+      g_autoptr (HlPlant) plant = test_plant (texts[k]);
+      g_test_message ("plant %u", k);
+      replay_all (plant);
+    }
+}
+
+/* The plants that come with the program, and no line in them that says nothing of its source. */
+static void
+test_replay_of_the_examples (void)
+{
+  g_autofree char *folder = g_test_build_filename (G_TEST_DIST, "..", "data", "examples", NULL);
+  g_autoptr (GDir) dir = g_dir_open (folder, 0, NULL);
+  guint n = 0;
+  g_assert_nonnull (dir);
+  for (const char *name = g_dir_read_name (dir); name != NULL; name = g_dir_read_name (dir))
+    {
+      g_autofree char *path = g_build_filename (folder, name, NULL);
+      g_autoptr (GError) error = NULL;
+      if (!g_str_has_suffix (name, ".heatloom"))
+        continue;
+      g_test_message ("%s", name);
+      g_autoptr (HlPlant) plant = hl_plant_load (path, &error);
+      g_assert_no_error (error);
+      replay_all (plant);
+      g_autoptr (HlSolution) s = hl_solve (plant, NULL);
+      g_autoptr (HlNote) note = hl_note_new (s);
+      for (guint k = 0; k < hl_note_n_lines (note); k++)
+        if (g_str_equal (hl_note_line (note, k)->source, "definition"))
+          g_error ("%s: “%s” is only a definition", name, hl_note_line (note, k)->words);
+      n++;
+    }
+  g_assert_cmpuint (n, >=, 3);
+}
+
 /* Steps run in solving order: what a line uses was put in, or found in the same step or before. */
 static void
 test_order (void)
@@ -596,6 +661,8 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/note/replay", test_replay_of_the_test_plants);
   g_test_add_func ("/engine/note/replay-special-forms", test_replay_of_special_forms);
   g_test_add_func ("/engine/note/replay-exchanger", test_replay_of_an_exchanger);
+  g_test_add_func ("/engine/note/replay-other-kinds", test_replay_of_other_kinds);
+  g_test_add_func ("/engine/note/replay-examples", test_replay_of_the_examples);
   g_test_add_func ("/engine/note/replay-ties", test_replay_of_ties);
   g_test_add_func ("/engine/note/order", test_order);
   g_test_add_func ("/engine/note/text", test_text);

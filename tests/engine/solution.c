@@ -101,7 +101,7 @@ test_explanations (void)
   g_autofree char *power = explain (s, "T1.power");
   g_autofree char *expected = g_strdup_printf (
     "shaft power of T1 = %.2f MW\nshaft power of T1 = internal power of T1 × mechanical efficiency of T1\n%.2f MW = %.2f MW × 0.985\n"
-    "  internal power of T1 = %.2f MW  (found)\n  mechanical efficiency of T1 = 0.985  (given)\nSource: definition\nSolved together with 10 other quantities of T1, G1 and P1.",
+    "  internal power of T1 = %.2f MW  (found)\n  mechanical efficiency of T1 = 0.985  (given)\nSource: definition of an efficiency or share: one flow, power or heat over another\nSolved together with 10 other quantities of T1, G1 and P1.",
     test_value (s, "T1.power") / 1e6, test_value (s, "T1.power") / 1e6, test_value (s, "T1.internal_power") / 1e6, test_value (s, "T1.internal_power") / 1e6);
   g_assert_cmpstr (power, ==, expected);
   g_autofree char *given = explain (s, "T1.inlet.p");
