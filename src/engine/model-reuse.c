@@ -136,7 +136,10 @@ hl_model_with_values (const HlModel *old, HlPlant *plant)
   g_array_ref (model->broken_ties);
   g_array_ref (model->forms);
   for (int k = 0; k < HL_N_SUMS; k++)
-    g_array_ref (model->sums[k]);
+    {
+      g_array_ref (model->sums[k]);
+      g_array_ref (model->sums_of[k]);
+    }
   g_atomic_rc_box_acquire (model->first_port);
   g_atomic_rc_box_acquire (model->first_own);
   g_atomic_rc_box_acquire (model->is_on_shaft);

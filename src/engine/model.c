@@ -23,7 +23,10 @@ hl_model_free (HlModel *model)
   g_array_unref (model->open_ports);
   g_array_unref (model->broken_ties);
   for (int k = 0; k < HL_N_SUMS; k++)
-    g_array_unref (model->sums[k]);
+    {
+      g_array_unref (model->sums[k]);
+      g_array_unref (model->sums_of[k]);
+    }
   g_array_unref (model->forms);
   g_atomic_rc_box_release (model->first_port);
   g_atomic_rc_box_release (model->first_own);
@@ -410,13 +413,33 @@ hl_model_is_unfinished (const HlModel *model, int component)
   return FALSE;
 }
 
-/* What is still being drawn does not count: else its unknown part would leave the whole plant unknown. */
 void
 hl_emit_sum (HlEmit *emit, HlSum sum, int var)
 {
-  if (emit->index >= 0 && hl_model_is_unfinished (emit->model, emit->index))
-    return;
   g_array_append_val (emit->model->sums[sum], var);
+  g_array_append_val (emit->model->sums_of[sum], emit->index);
+}
+
+/* What is still being drawn does not count, else its unknown part would leave the whole plant unknown; but where no turbine is
+ * connected yet it does, else a power that is put in would contradict what there is. */
+static void
+spare_unfinished (HlModel *model)
+{
+  gboolean has_turbine = FALSE;
+  for (int c = 0; c < N_COMPONENTS (model) && model->open_ports->len > 0; c++)
+    {
+      const HlKind *kind = hl_plant_component (model->plant, (guint) c)->kind;
+      has_turbine |= kind->shaft == HL_SHAFT_DRIVES && kind->n_ports > 0 && !hl_model_is_unfinished (model, c);
+    }
+  for (int sum = 0; has_turbine && sum < HL_N_SUMS; sum++)
+    for (guint k = model->sums[sum]->len; k > 0; k--)
+      {
+        int component = g_array_index (model->sums_of[sum], int, k - 1);
+        if (component < 0 || !hl_model_is_unfinished (model, component))
+          continue;
+        g_array_remove_index (model->sums[sum], k - 1);
+        g_array_remove_index (model->sums_of[sum], k - 1);
+      }
 }
 
 void
@@ -602,7 +625,10 @@ hl_model_new_other (HlPlant *plant, const gboolean *other, guint n_other)
   model->forms = g_array_new (FALSE, FALSE, sizeof (HlForm));
   model->broken_ties = g_array_new (FALSE, FALSE, sizeof (HlAddress));
   for (int k = 0; k < HL_N_SUMS; k++)
-    model->sums[k] = g_array_new (FALSE, FALSE, sizeof (int));
+    {
+      model->sums[k] = g_array_new (FALSE, FALSE, sizeof (int));
+      model->sums_of[k] = g_array_new (FALSE, FALSE, sizeof (int));
+    }
   add_streams (model);
   hl_shafts_look (model);
   int n = N_COMPONENTS (model);
@@ -619,6 +645,7 @@ hl_model_new_other (HlPlant *plant, const gboolean *other, guint n_other)
   model->first_own[n] = model->first_own[n + 1] = (int) model->own->len;
   hl_shafts_add (model);
   hl_heads_add (model);
+  spare_unfinished (model);
   hl_emit_plant (model);
   model->first_own[n + 1] = (int) model->own->len;
   add_values (model);

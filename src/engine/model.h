@@ -50,7 +50,7 @@ typedef struct _HlModel {
   int      *first_port;           /* [n components + 1] */
   GArray   *own;                  /* HlOwn by component, the plant's last */
   int      *first_own;            /* [n components + 2] */
-  GArray   *sums[HL_N_SUMS];      /* int */
+  GArray   *sums[HL_N_SUMS], *sums_of[HL_N_SUMS];    /* int: variables, and the component of each */
   GArray   *open_ports;           /* HlAddress: required ports that no line reaches */
   GArray   *broken_ties;          /* HlAddress: tied to something that the plant does not have */
   gboolean *is_on_shaft;          /* [n components] on a shaft that carries its power on */

@@ -229,6 +229,26 @@ test_nearest_yields (void)
   test_assert_near (test_value (s, "H3.feed_outlet.T"), 388.0, 1e-10);
 }
 
+/* A generator and a turbine put down, not connected yet: the power that a new plant assumes does not yield to that. */
+static void
+test_nothing_yields_to_what_is_being_drawn (void)
+{
+  static const char *const beginnings[] = { "new generator G1\n", "new turbine T1\nnew generator G1\n", "new turbine T1\nnew generator G1\nshaft T1 G1\nnew pump P1\n" };
+  for (guint k = 0; k < G_N_ELEMENTS (beginnings); k++)
+    {
+      GArray *yielded;
+      g_autofree char *text = g_strconcat (beginnings[k], "plant net_power=10e6\n", NULL);
+      HlPlant *plant = test_plant (text);
+      HlAddress net = hl_address_plant (g_intern_static_string ("net_power"));
+      HlValue assumed = { .origin = HL_ORIGIN_ASSUMED, .value = 10e6 };
+      g_autoptr (HlPlant) drawn = hl_plant_with_value (plant, &net, &assumed, NULL);
+      g_autoptr (HlPlant) settled = hl_settle (drawn, NULL, &yielded);
+      g_assert_cmpuint (yielded->len, ==, k == 0);      /* a generator alone gives nothing at all */
+      g_array_unref (yielded);
+      hl_plant_unref (plant);
+    }
+}
+
 int
 main (int argc, char **argv)
 {
@@ -246,5 +266,6 @@ main (int argc, char **argv)
   g_test_add_func ("/engine/settle/topology-settles", test_topology_settles);
   g_test_add_func ("/engine/settle/settles-while-drawing", test_settles_while_drawing);
   g_test_add_func ("/engine/settle/nearest-yields", test_nearest_yields);
+  g_test_add_func ("/engine/settle/being-drawn", test_nothing_yields_to_what_is_being_drawn);
   return g_test_run ();
 }
