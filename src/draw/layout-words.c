@@ -34,6 +34,8 @@ static const struct {
   { "compressor",    { { "power", NULL } } },
   { "motor",         { { "power", NULL } } },
   { "exchanger",     { { "heat", NULL } } },
+  { "expander",      { { "power", NULL }, { "isentropic_efficiency", "η" } } },
+  { "evaporator",    { { "heat", NULL } } },
   { "recuperator",   { { "heat", NULL } } },
 };
 

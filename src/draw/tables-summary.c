@@ -124,6 +124,7 @@ add_power (HlSummary *summary, const HlSolution *solution)
   double other = result (solution, "other_consumption");
   add (summary, group, "gross_power", _("Gross power"), _("at the generator terminals"), HL_DIMENSION_POWER, result (solution, "gross_power"));
   add_parts (summary, solution, group, "gross_power", is_generator, "power", FALSE);
+  add (summary, group, "power_input", _("Power input"), _("motors of compressors, pumps and fans"), HL_DIMENSION_POWER, result (solution, "power_input"));
   add (summary, group, "own_consumption", _("Own consumption"), "", HL_DIMENSION_POWER, result (solution, "own_consumption"));
   add_parts (summary, solution, group, "own_consumption", has_motor, "motor_power", TRUE);
   add_parts (summary, solution, group, "own_consumption", has_fans, "fan_power", TRUE);
@@ -194,6 +195,16 @@ read_turbine (const HlSolution *solution)
   return turbine;
 }
 
+/* A number that nobody reads in per cent. */
+static void
+add_performance (HlSummary *summary, const HlSolution *solution, const char *key, const char *name, const char *basis)
+{
+  guint before = summary->lines->len;
+  add (summary, _("Efficiency"), key, name, basis, HL_DIMENSION_RATIO, result (solution, key));
+  if (summary->lines->len > before)
+    g_array_index (summary->lines, HlSummaryLine, before).is_percent = FALSE;
+}
+
 static void
 add_efficiencies (HlSummary *summary, const HlSolution *solution, gboolean has_fuel, double fuel_hhv, const Turbine *turbine)
 {
@@ -213,6 +224,8 @@ add_efficiencies (HlSummary *summary, const HlSolution *solution, gboolean has_f
        result (solution, "exergy_efficiency"));
   add (summary, group, "carnot_efficiency", _("Carnot efficiency"), _("lowest and highest temperature of the working fluid"), HL_DIMENSION_RATIO,
        result (solution, "carnot_efficiency"));
+  add_performance (summary, solution, "cop", _("Coefficient of performance, heating"), _("heat delivered over power input"));
+  add_performance (summary, solution, "cop_cooling", _("Coefficient of performance, cooling"), _("heat taken up over power input"));
 }
 
 static void

@@ -34,7 +34,8 @@ book_doors (const HlSolution *solution, int c, Balance *mass, Balance *energy)
   const char *kind = hl_plant_component (solution->plant, (guint) c)->kind->id;
   HlShaftRole role = hl_plant_component (solution->plant, (guint) c)->kind->shaft;
   gboolean is_cooled = hl_model_port_node (model, c, "cooling_inlet") >= 0;
-  if (g_str_equal (kind, "heat_input") || g_str_equal (kind, "boiler"))
+  if (g_str_equal (kind, "heat_input") || g_str_equal (kind, "boiler")
+      || (g_str_equal (kind, "evaporator") && hl_model_port_node (model, c, "hot_inlet") < 0))
     book (energy, own (solution, c, "heat"));
   else if (role == HL_SHAFT_DRIVES)
     book (energy, -own (solution, c, "internal_power"));

@@ -188,12 +188,12 @@ found_value (const HlChecker *checker, const HlAddress *address, gboolean *said,
   return TRUE;
 }
 
-/* Usual pressures are those of water: of other media they say nothing. */
+/* Usual pressures and temperatures are those of water: of other media they say nothing. */
 static gboolean
 range_holds (const HlChecker *checker, const HlQuantity *quantity)
 {
   const char *dot = strchr (quantity->key, '.');
-  if (dot == NULL || quantity->kind->dimension != HL_DIMENSION_PRESSURE)
+  if (dot == NULL || (quantity->kind->dimension != HL_DIMENSION_PRESSURE && quantity->kind->dimension != HL_DIMENSION_TEMPERATURE))
     return TRUE;
   g_autofree char *port = g_strndup (quantity->key, (gsize) (dot - quantity->key));
   return hl_model_port_node (checker->model, checker->index, port) < 0 || hl_check_is_water (checker, port);

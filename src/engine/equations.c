@@ -456,6 +456,37 @@ hl_add_liquid (HlSystem *system, const HlFluid *fluid, int p, int subcooling, in
   return with (ADD (liquid, HL_VAR_ENTHALPY, 4, p, subcooling, h), fluid, N_("{2} = h({0}, T_sat({0}) − {1})"), -1);
 }
 
+/* Vapour, @superheat above saturation; below zero a plain slope, so that an iteration may pass there. */
+static HlStatus
+vapour (const HlEquation *e, G_GNUC_UNUSED const double *a, const double *x, double *r, double *dr)
+{
+  const double slope = 1.5e3;
+  HlSaturation sat;
+  HlState st;
+  double p = exp (x[0]);
+  HlStatus status = hl_fluid_saturation_p (e->fluid, p, &sat);
+  if (status != HL_OK)
+    return status;
+  dr[2] = 1.0;
+  if (x[1] <= 0.0 || hl_fluid_state_pT (e->fluid, p, sat.T + x[1], &st) != HL_OK || st.phase == HL_PHASE_LIQUID)
+    {
+      *r = x[2] - sat.h_vapour - slope * x[1];
+      dr[0] = -sat.h_vapour_p * p;
+      dr[1] = -slope;
+      return HL_OK;
+    }
+  *r = x[2] - st.h;
+  dr[0] = -p * (sat.T_p - st.T_p) / st.T_h;
+  dr[1] = -1.0 / st.T_h;
+  return HL_OK;
+}
+
+HlEquation *
+hl_add_vapour (HlSystem *system, const HlFluid *fluid, int p, int superheat, int h)
+{
+  return with (ADD (vapour, HL_VAR_ENTHALPY, 4, p, superheat, h), fluid, N_("{2} = h({0}, T_sat({0}) + {1})"), -1);
+}
+
 static HlStatus
 subcooled_temperature (const HlEquation *e, G_GNUC_UNUSED const double *a, const double *x, double *r, double *dr)
 {
@@ -595,7 +626,7 @@ gboolean hl_equation_is_tie (const HlEquation *e) { return e->residual == tie; }
 gboolean
 hl_equation_wants_saturation (const HlEquation *e)
 {
-  return e->residual == saturation || e->residual == liquid || e->residual == subcooled_temperature || e->residual == enthalpy_at_quality
+  return e->residual == saturation || e->residual == liquid || e->residual == vapour || e->residual == subcooled_temperature || e->residual == enthalpy_at_quality
          || e->residual == enthalpy_at_moisture || e->residual == quality;
 }
 
@@ -626,7 +657,7 @@ hl_equation_property_calls (const HlEquation *e)
 {
   if (e->fluid == NULL)
     return 0;
-  if (e->residual == expansion || e->residual == compression || e->residual == cooling_heat || e->residual == liquid)
+  if (e->residual == expansion || e->residual == compression || e->residual == cooling_heat || e->residual == liquid || e->residual == vapour)
     return 2;
   if (e->residual == straight_line)
     return 3;

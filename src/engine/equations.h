@@ -36,6 +36,7 @@ HlEquation *hl_add_moisture                (HlSystem *system, const HlFluid *flu
 HlEquation *hl_add_volume                  (HlSystem *system, const HlFluid *fluid, int p, int h, int v);
 HlEquation *hl_add_saturation              (HlSystem *system, const HlFluid *fluid, int p, int T);
 HlEquation *hl_add_liquid                  (HlSystem *system, const HlFluid *fluid, int p, int subcooling, int h);
+HlEquation *hl_add_vapour                  (HlSystem *system, const HlFluid *fluid, int p, int superheat, int h);
 HlEquation *hl_add_subcooled_temperature   (HlSystem *system, const HlFluid *fluid, int p, int subcooling, int T);
 
 /* heat = flow (h(p, T_in + rise) - h(p, T_in)) */

@@ -35,6 +35,7 @@ typedef enum {
   HL_SUM_DELIVERED,
   HL_SUM_REJECTED,
   HL_SUM_LIVE_STEAM,
+  HL_SUM_COMPRESSOR_POWER,        /* shaft power of compressors: there is a reverse cycle, or a gas cycle */
   HL_N_SUMS
 } HlSum;
 

@@ -112,6 +112,16 @@ emit_fans (HlEmit *emit, int gross)
     }
 }
 
+/* A plant without generator whose compressors lift heat: what it does for the power it takes. */
+static void
+emit_reverse_cycle (HlEmit *emit, int motors, int taken_up, int delivered)
+{
+  int input = hl_emit_own (emit, "power_input", HL_VAR_POWER);
+  hl_system_merge (emit->system, motors, input);
+  quotient (emit, "cop", HL_VAR_RATIO, delivered, input);
+  quotient (emit, "cop_cooling", HL_VAR_RATIO, taken_up, input);
+}
+
 void
 hl_emit_plant (HlModel *model)
 {
@@ -150,6 +160,8 @@ hl_emit_plant (HlModel *model)
     }
   else if (motors >= 0)
     hl_system_merge (emit->system, motors, hl_emit_own (emit, "own_consumption", HL_VAR_POWER));
+  if (gross < 0 && motors >= 0 && model->sums[HL_SUM_COMPRESSOR_POWER]->len > 0)
+    emit_reverse_cycle (emit, motors, heat, delivered);
   if (turbines >= 0)
     quotient (emit, "cycle_efficiency", HL_VAR_RATIO, pumps >= 0 ? difference (emit, "shaft_power_net", turbines, pumps) : turbines, heat);
   quotient (emit, "gross_efficiency", HL_VAR_RATIO, gross, basis);

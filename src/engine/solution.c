@@ -268,6 +268,8 @@ hl_solution_summary (const HlSolution *solution)
     }
   if (plant_value (solution, "net_efficiency_lhv", &value))
     g_string_append_printf (text, " · %.2f %%", 100.0 * value);
+  if (plant_value (solution, "cop", &value) || plant_value (solution, "cop_cooling", &value))
+    g_string_append_printf (text, _(" · COP %.2f"), value);
   guint n = hl_plant_n_assumed (solution->plant);
   if (n > 0)
     g_string_append_printf (text, ngettext_hl (" · %u value assumed", " · %u values assumed", n), n);

@@ -7,7 +7,8 @@ from tap import SOURCE, batch, main
 
 KINDS = ("heat_input", "boiler", "turbine", "generator", "condenser", "pump", "pipe", "valve", "open_heater",
          "closed_heater", "splitter", "mixer", "steam_user", "make_up", "boundary", "motor", "gearbox", "compressor", "desuperheater", "moisture_separator", "flash_vessel", "cooling_tower", "air_condenser", "district_heater", "recuperator", "exchanger",
-         "feed_pump_turbine", "ejector", "gland_seal", "control_stage", "hotwell", "header", "bypass_station", "drain_pump")
+         "feed_pump_turbine", "ejector", "gland_seal", "control_stage", "hotwell", "header", "bypass_station", "drain_pump",
+         "expander", "evaporator", "expansion_valve")
 
 
 def test_every_kind_is_there():

@@ -29,7 +29,8 @@ extern const HlSymbol hl_symbol_heat_input, hl_symbol_boiler, hl_symbol_turbine,
   hl_symbol_district_heater, hl_symbol_air_condenser, hl_symbol_cooling_tower, hl_symbol_flash_vessel,
   hl_symbol_moisture_separator, hl_symbol_desuperheater, hl_symbol_compressor, hl_symbol_gearbox, hl_symbol_motor,
   hl_symbol_feed_pump_turbine, hl_symbol_ejector, hl_symbol_gland_seal, hl_symbol_control_stage, hl_symbol_hotwell,
-  hl_symbol_header, hl_symbol_bypass_station, hl_symbol_drain_pump;
+  hl_symbol_header, hl_symbol_bypass_station, hl_symbol_drain_pump,
+  hl_symbol_expander, hl_symbol_evaporator, hl_symbol_expansion_valve;
 
 void hl_pen_body    (const HlPen *pen);                                             /* fills the path with the card, strokes it with ink */
 void hl_pen_stroke  (const HlPen *pen, const HlColour *colour, double weight);      /* strokes the path; @weight relative to outlines */

@@ -7,6 +7,7 @@ static const HlComponentModel *const models[] = {
   &hl_valve_model, &hl_open_heater_model, &hl_closed_heater_model, &hl_splitter_model, &hl_mixer_model, &hl_steam_user_model,
   &hl_make_up_model, &hl_boundary_model, &hl_motor_model, &hl_gearbox_model, &hl_compressor_model, &hl_desuperheater_model, &hl_moisture_separator_model, &hl_flash_vessel_model, &hl_cooling_tower_model, &hl_air_condenser_model, &hl_district_heater_model, &hl_recuperator_model, &hl_exchanger_model,
   &hl_feed_pump_turbine_model, &hl_ejector_model, &hl_gland_seal_model, &hl_control_stage_model, &hl_hotwell_model, &hl_header_model, &hl_bypass_station_model, &hl_drain_pump_model,
+  &hl_expander_model, &hl_evaporator_model, &hl_expansion_valve_model,
 };
 
 const HlComponentModel *

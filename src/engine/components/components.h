@@ -19,7 +19,8 @@ extern const HlComponentModel hl_heat_input_model, hl_boiler_model, hl_turbine_m
   hl_air_condenser_model, hl_cooling_tower_model, hl_flash_vessel_model, hl_moisture_separator_model, hl_desuperheater_model,
   hl_compressor_model, hl_gearbox_model, hl_motor_model,
   hl_feed_pump_turbine_model, hl_ejector_model, hl_gland_seal_model, hl_control_stage_model,
-  hl_hotwell_model, hl_header_model, hl_bypass_station_model, hl_drain_pump_model;
+  hl_hotwell_model, hl_header_model, hl_bypass_station_model, hl_drain_pump_model,
+  hl_expander_model, hl_evaporator_model, hl_expansion_valve_model;
 
 const HlComponentModel *hl_component_model (const HlKind *kind);   /* NULL when the engine does not know it */
 

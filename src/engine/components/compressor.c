@@ -20,6 +20,7 @@ emit_compressor (HlEmit *emit)
   hl_emit_done (emit, hl_add_energy (emit->system, HL_VAR_POWER, pairs, (const double[]) { 1.0, -1.0 }, 2, &power, (const double[]) { -1.0 }, 1),
                 N_("{4} = {0} × ({1} − {3})"), 4);
   hl_drive_emit (emit, power);
+  hl_emit_sum (emit, HL_SUM_COMPRESSOR_POWER, power);
 }
 
 static void

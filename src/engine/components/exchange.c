@@ -33,12 +33,23 @@ emit_end (HlEmit *emit, const char *key, int hot, int cold, gboolean hot_is_foun
                 N_("{0} = {1} − {2}"), 0);
 }
 
+/* In the order of the option's words. */
+void
+hl_exchange_count (HlEmit *emit, int heat)
+{
+  static const int sums[] = { -1, HL_SUM_HEAT_INPUT, HL_SUM_DELIVERED, HL_SUM_REJECTED };
+  int counts = hl_component_option (emit->component, "counts");
+  if (counts >= 0 && counts < (int) G_N_ELEMENTS (sums) && sums[counts] >= 0)
+    hl_emit_sum (emit, (HlSum) sums[counts], heat);
+}
+
 void
 hl_exchange_emit (HlEmit *emit)
 {
   const Ends n = { hl_emit_port (emit, "hot_inlet"), hl_emit_port (emit, "hot_outlet"), hl_emit_port (emit, "cold_inlet"), hl_emit_port (emit, "cold_outlet") };
   int heat = hl_emit_own (emit, "heat", HL_VAR_POWER), pinch = hl_emit_own (emit, "pinch", HL_VAR_TEMPERATURE_DIFFERENCE);
   int share = hl_emit_own (emit, "effectiveness", HL_VAR_RATIO), ua = hl_emit_own (emit, "UA", HL_VAR_CONDUCTANCE);
+  hl_exchange_count (emit, heat);
   emit_side (emit, n.hot_in, n.hot_out, "hot_pressure_loss", -1.0, heat);
   emit_side (emit, n.cold_in, n.cold_out, "cold_pressure_loss", 1.0, heat);
   emit_end (emit, "hot_end_difference", n.hot_in, n.cold_out, FALSE);

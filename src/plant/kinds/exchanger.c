@@ -2,6 +2,8 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "plant/kinds/exchange.h"
 
+static const HlOptionKind options[] = { COUNTS_OPTION (HL_COUNTS_INSIDE) };
+
 static const HlPortKind ports[] = { SIDE_PORTS };
 
 static const HlQuantityKind quantities[] = {
@@ -19,5 +21,5 @@ const HlKind hl_kind_exchanger = {
   .id = "exchanger", .letter = "E", .name = N_("Heat exchanger"), .shelf_name = N_("exchanger"), .shelf_group = N_("Heat"),
   .help = N_("Passes heat from a hot to a cold stream in counterflow; either may boil or condense on the way."),
   .half_width = 2, .half_height = 2,
-  .ports = ROWS (ports), .quantities = ROWS (quantities), .ratings = ROWS (ratings),
+  .ports = ROWS (ports), .options = ROWS (options), .quantities = ROWS (quantities), .ratings = ROWS (ratings),
 };

@@ -3,8 +3,8 @@
 #include "plant/kinds/kinds.h"
 
 static const HlKind *const kinds[] = {
-  &hl_kind_boiler, &hl_kind_heat_input, &hl_kind_exchanger, &hl_kind_recuperator,
-  &hl_kind_turbine, &hl_kind_control_stage, &hl_kind_gland_seal, &hl_kind_moisture_separator, &hl_kind_bypass_station, &hl_kind_compressor, &hl_kind_generator, &hl_kind_gearbox,
+  &hl_kind_boiler, &hl_kind_heat_input, &hl_kind_exchanger, &hl_kind_recuperator, &hl_kind_evaporator,
+  &hl_kind_turbine, &hl_kind_expander, &hl_kind_control_stage, &hl_kind_gland_seal, &hl_kind_moisture_separator, &hl_kind_bypass_station, &hl_kind_compressor, &hl_kind_expansion_valve, &hl_kind_generator, &hl_kind_gearbox,
   &hl_kind_condenser, &hl_kind_air_condenser, &hl_kind_cooling_tower, &hl_kind_hotwell, &hl_kind_ejector,
   &hl_kind_pump, &hl_kind_motor, &hl_kind_feed_pump_turbine, &hl_kind_drain_pump, &hl_kind_open_heater, &hl_kind_flash_vessel, &hl_kind_closed_heater, &hl_kind_make_up,
   &hl_kind_pipe, &hl_kind_valve, &hl_kind_desuperheater, &hl_kind_splitter, &hl_kind_mixer, &hl_kind_header, &hl_kind_boundary,

@@ -12,7 +12,8 @@ extern const HlKind hl_kind_heat_input, hl_kind_boiler, hl_kind_turbine, hl_kind
                     hl_kind_cooling_tower, hl_kind_flash_vessel, hl_kind_moisture_separator, hl_kind_desuperheater,
                     hl_kind_compressor, hl_kind_gearbox, hl_kind_motor,
                     hl_kind_feed_pump_turbine, hl_kind_ejector, hl_kind_gland_seal, hl_kind_control_stage,
-                    hl_kind_hotwell, hl_kind_header, hl_kind_bypass_station, hl_kind_drain_pump;
+                    hl_kind_hotwell, hl_kind_header, hl_kind_bypass_station, hl_kind_drain_pump,
+                    hl_kind_expander, hl_kind_evaporator, hl_kind_expansion_valve;
 
 /* Words used by more than one table. */
 #define COMMON_PRACTICE N_("common practice, no source")
