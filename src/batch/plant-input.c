@@ -3,6 +3,7 @@
 #include "batch/plant-input.h"
 #include <stdio.h>
 #include <string.h>
+#include "plant/circuit.h"
 #include "plant/i18n.h"
 
 #define LONGEST_INPUT (17u << 20)
@@ -103,10 +104,35 @@ set_value (HlPlant **plant, const char *text, GArray *yielded, GError **error)
   return TRUE;
 }
 
+/* One --medium: the whole circuit of a stream. */
+static gboolean
+set_medium (HlPlant **plant, const char *text, GError **error)
+{
+  const char *equals = strchr (text, '=');
+  if (!g_utf8_validate (text, -1, NULL) || equals == NULL || equals == text)
+    {
+      g_set_error (error, HL_BATCH_ERROR, HL_BATCH_ERROR_USAGE, _("--medium needs STREAM=MEDIUM, for instance '1=isopentane'; got “%s”"), text);
+      return FALSE;
+    }
+  g_autofree char *stream = g_strstrip (g_strndup (text, (gsize) (equals - text))), *medium = g_strstrip (g_strdup (equals + 1));
+  HlPlant *changed = hl_plant_with_medium (*plant, stream, medium, error);
+  if (changed == NULL)
+    return FALSE;
+  hl_plant_unref (*plant);
+  *plant = changed;
+  return TRUE;
+}
+
 gboolean
 hl_input_values (HlPlant **plant, const HlArguments *arguments, GArray *yielded, GError **error)
 {
   char *const *values;
+  for (guint n = 0; (values = hl_arguments_option (arguments, "medium", n)) != NULL; n++)
+    if (!set_medium (plant, values[0], error))
+      {
+        g_prefix_error (error, "--medium '%s': ", values[0]);
+        return FALSE;
+      }
   for (guint n = 0; (values = hl_arguments_option (arguments, "set", n)) != NULL; n++)
     if (!set_value (plant, values[0], yielded, error))
       {

@@ -122,6 +122,7 @@ static const HlBatchOption solve_options[] = {
   { "sensitivity", N_("ADDRESS"), FALSE, N_("print how this result moves with 1 % more of each value put in") },
   { "variant", N_("NAME"), FALSE, N_("take this variant of the plant instead of its base") },
   { "set", N_("ADDRESS=VALUE"), TRUE, N_("give a value, as 'T1.inlet.p=80 bar'; may be repeated") },
+  { "medium", N_("STREAM=MEDIUM"), TRUE, N_("put the circuit of a stream on another medium, as '1=isopentane'; may be repeated") },
   { "json", N_("FILE"), FALSE, N_("write results, streams and findings as JSON, in SI") },
   { "csv", N_("FILE"), FALSE, N_("write the ledger of all streams as CSV, in the plant's units") },
   { "summary", N_("FILE"), FALSE, N_("write the performance summary as CSV, each figure with its unit and basis") },

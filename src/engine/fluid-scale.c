@@ -9,7 +9,7 @@
 #define WATER_LIQUID 640e3
 #define WATER_STEP   2108e3
 /* Share of the way from the lower end of the range up to the critical temperature, where the usual one lies below the range. */
-#define LEAST_SHARE 0.15
+#define LEAST_SHARE 0.4
 
 static void
 take (double *low, double *high, double value)

@@ -290,18 +290,11 @@ merit_of (const double *f, int n)
   return sum;
 }
 
-/* What stands for the zero of water's enthalpy: cold liquid. */
-static double
-enthalpy_zero (const HlFluidScale *scale)
-{
-  return hl_fluid_scale_enthalpy (scale, 0.0);
-}
-
 /* Heat of evaporation as a part of that of water, which steps and swings are stated for. */
 static double
 enthalpy_step (const HlFluidScale *scale)
 {
-  return scale != NULL ? hl_fluid_scale_enthalpy (scale, 1e6) / 1e6 - enthalpy_zero (scale) / 1e6 : 1.0;
+  return scale != NULL ? (hl_fluid_scale_enthalpy (scale, 1e6) - hl_fluid_scale_enthalpy (scale, 0.0)) / 1e6 : 1.0;
 }
 
 /* How much of the step may be taken: pressures by a factor of two, enthalpies by a fifth of the heat of evaporation (400 kJ/kg of
@@ -437,7 +430,13 @@ other_start (HlBlockWork *w, int number)
       switch (var->kind)
         {
         case HL_VAR_PRESSURE: usual += number == 1 ? 0.0 : 1.5 * swing; break;
-        case HL_VAR_ENTHALPY: usual += number == 1 ? 0.0 : 0.25 * swing * (var->scale != NULL ? usual - enthalpy_zero (var->scale) : usual); break;
+        /* Water's enthalpies are counted from cold liquid, those of other media from anywhere. */
+        case HL_VAR_ENTHALPY:
+          if (var->scale == NULL || var->scale == hl_fluid_scale (hl_fluid_water ()))
+            usual *= number == 1 ? 1.0 : 1.0 + 0.25 * swing;
+          else
+            usual += number == 1 ? 0.0 : (0.4 + 0.6 * swing) * var->scale->h_step;
+          break;
         case HL_VAR_TEMPERATURE: usual += number == 1 ? 0.0 : 60.0 * swing; break;
         case HL_VAR_FLOW: usual *= number == 1 ? 1.0 : number == 2 ? 0.1 : 1.0 + 0.5 * swing; break;
         default: break;

@@ -3,7 +3,7 @@
 import os
 import re
 
-from tap import SOURCE, batch, main
+from tap import SOURCE, batch, main, refused
 
 KINDS = ("heat_input", "boiler", "turbine", "generator", "condenser", "pump", "pipe", "valve", "open_heater",
          "closed_heater", "splitter", "mixer", "steam_user", "make_up", "boundary", "motor", "gearbox", "compressor", "desuperheater", "moisture_separator", "flash_vessel", "cooling_tower", "air_condenser", "district_heater", "recuperator", "exchanger",
@@ -30,6 +30,19 @@ def test_tables_are_whole():
             width = bars
         else:
             width = None
+
+
+def test_media_are_compared_and_sorted():
+    out, err = batch("fluids", "--source", "120 °C", "--sink", "15 °C")
+    rows = [[cell.strip() for cell in line.split("|")[1:-1]] for line in out.splitlines()[2:]]
+    efficiencies = [float(row[7].split()[0]) for row in rows if "%" in row[7]]
+    assert err == "" and len(rows) > 35 and len(efficiencies) > 20, out
+    assert efficiencies == sorted(efficiencies, reverse=True), efficiencies
+    isopentane = next(row for row in rows if "`isopentane`" in row[0])
+    assert isopentane[2:4] == ["dry", "A3"] and isopentane[4] == "8.905 bar", isopentane
+    assert "source too hot" in next(line for line in out.splitlines() if "`carbon-dioxide`" in line)
+    refused("fluids", "--source", "120 °C", status=2, says=["--sink"])
+    refused("fluids", "--source", "120 bar", "--sink", "20 °C", status=2, says=["--source", "bar"])
 
 
 def test_every_medium_is_listed_and_answers():

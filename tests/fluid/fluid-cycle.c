@@ -19,7 +19,7 @@ test_agrees_with_a_printed_efficiency (void)
   g_assert_cmpint (hl_fluid_state_ps (fluid, hot.p, cold.s_liquid, &pumped), ==, HL_OK);
   g_assert_cmpfloat_with_epsilon (cycle.p_evaporation / hot.p, 1.0, 1e-12);
   g_assert_cmpfloat_with_epsilon (cycle.p_condensation / cold.p, 1.0, 1e-12);
-  double heat = hot.h_vapour - cold.h_liquid - (pumped.h - cold.h_liquid) / 0.65, pump = (pumped.h - cold.h_liquid) / 0.65;
+  double pump = (pumped.h - cold.h_liquid) / 0.65, heat = hot.h_vapour - cold.h_liquid - pump;
   double printed = ((cycle.efficiency * heat + pump) * 0.85 / 0.82 - pump) / heat;
   g_assert_cmpfloat_with_epsilon (printed, 0.1275, 0.0005);
 }
@@ -44,7 +44,7 @@ test_says_why_there_is_none (void)
     { "r134a", 400.0, 300.0, HL_CYCLE_ABOVE_CRITICAL },
     { "isopentane", 310.0, 300.0, HL_CYCLE_NO_DIFFERENCE },
     { "water", 400.0, 250.0, HL_CYCLE_BELOW_RANGE },
-    { "d4", 500.0, 280.0, HL_CYCLE_BELOW_RANGE },
+    { "d4", 500.0, 270.0, HL_CYCLE_BELOW_RANGE },
   };
   for (guint k = 0; k < G_N_ELEMENTS (rows); k++)
     {
