@@ -1,5 +1,6 @@
 /* What the nameplate shows of a component, a stream, the plant, or several things at once.
  * SPDX-License-Identifier: GPL-3.0-or-later */
+#include "app/hl-medium-row.h"
 #include "app/hl-nameplate-private.h"
 #include "app/hl-pane.h"
 #include "app/hl-shared-row.h"
@@ -151,11 +152,53 @@ put_connections (HlNameplateBody *body, HlSession *session, const HlComponent *c
     }
 }
 
+/* --- media --- */
+
+static void
+put_medium (HlNameplateBody *body, HlSession *session, const char *key, const char *name, const char *stream)
+{
+  GtkWidget *row = hl_nameplate_body_find (body, key);
+
+  if (row == NULL)
+    row = hl_medium_row_new (session);
+  hl_medium_row_set (row, name, stream);
+  hl_nameplate_body_put (body, _("Medium"), key, row);
+}
+
+/* One row for each side of the component that a line reaches. */
+static void
+put_media (HlNameplateBody *body, HlSession *session, const HlComponent *component)
+{
+  const HlPlant *plant = hl_session_plant (session);
+  const HlStream *of_side[8] = { NULL };
+  guint n_sides = 0;
+
+  for (guint n = 0; n < hl_component_n_ports (component); n++)
+    {
+      HlPort port = hl_component_port (component, n);
+      const HlStream *stream = hl_plant_stream_at (plant, component->id, port.key);
+      int side = port.kind->side_circuit;
+      if (stream == NULL || side < 0 || side >= (int) G_N_ELEMENTS (of_side) || of_side[side] != NULL)
+        continue;
+      of_side[side] = stream;
+      n_sides++;
+    }
+  for (guint side = 0; side < G_N_ELEMENTS (of_side); side++)
+    {
+      if (of_side[side] == NULL)
+        continue;
+      g_autofree char *key = g_strdup_printf ("medium %u", side);
+      g_autofree char *name = n_sides > 1 ? g_strdup_printf (_("Medium at stream %s"), of_side[side]->id) : g_strdup (_("Medium"));
+      put_medium (body, session, key, name, of_side[side]->id);
+    }
+}
+
 void
 hl_nameplate_fill_component (HlNameplateBody *body, HlSession *session, const HlComponent *component)
 {
   put_options (body, session, component);
   put_quantities (body, session, component);
+  put_media (body, session, component);
   put_limits (body, session, component);
   put_connections (body, session, component);
 }
@@ -179,6 +222,7 @@ hl_nameplate_fill_stream (HlNameplateBody *body, HlSession *session, const HlStr
         continue;
       hl_nameplate_put_quantity (body, session, group != NULL ? _(group) : _("State"), &address, _(quantities[n].name));
     }
+  put_medium (body, session, "medium", _("Medium"), stream->id);
   for (guint n = 0; n < G_N_ELEMENTS (ends); n++)
     {
       const HlComponent *component = hl_plant_find_component (plant, ends[n]);
@@ -229,6 +273,12 @@ hl_nameplate_fill_plant (HlNameplateBody *body, HlSession *session)
   else
     hl_units_row_update (row);
   hl_nameplate_body_put (body, _("Sheet"), "units", row);
+  row = hl_nameplate_body_find (body, "formulation");
+  if (row == NULL)
+    row = hl_formulation_row_new (session);
+  else
+    hl_formulation_row_update (row);
+  hl_nameplate_body_put (body, _("Sheet"), "formulation", row);
   for (HlSiteNumber which = 0; which < HL_N_SITE_NUMBERS; which++)
     {
       g_autofree char *key = g_strdup_printf ("site %u", which);
