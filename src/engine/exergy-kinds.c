@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "engine/exergy.h"
 #include "engine/components/components.h"
+#include "plant/circuit.h"
 #include "plant/i18n.h"
 #include <math.h>
 #include <string.h>
@@ -67,6 +68,20 @@ book_heat_input (HlExergySink *sink)
     copy_side (sink, -1, HL_ROLE_FUEL, HL_DOOR_HEAT);
   else
     hl_exergy_heat (sink, HL_ROLE_FUEL, 1.0, "heat", at_var (source, -1), at_var (source, -1))->door = HL_DOOR_HEAT;
+}
+
+/* A source that is not drawn gives its heat at the temperature of what takes it up.  Below that of the dead state it is the source that gains:
+ * what a refrigerating machine is there for. */
+static void
+book_evaporator (HlExergySink *sink)
+{
+  hl_exergy_sides (sink, HL_ROLE_SIDE);
+  if (hl_exergy_node (sink, "hot_inlet") >= 0)
+    return;
+  guint first = sink->terms->len;
+  copy_side (sink, -1, HL_ROLE_SIDE, HL_DOOR_HEAT);
+  for (guint k = first; k < sink->terms->len; k++)
+    g_array_index (sink->terms, HlExergyTerm, k).side = hl_kind_side_of_port (sink->component->kind, "hot_inlet");
 }
 
 static void
@@ -300,12 +315,16 @@ static const HlExergyKind kinds[] = {
     N_("Fuel: what the richer inlets give up on becoming the mixture, each by its flow; product: what the poorer ones gain.") },
   { "ejector", book_open_heater, N_("Fuel: what the motive steam gives up on becoming the mixture; product: what the flow drawn in gains.") },
   { "exchanger", NULL, TWO_SIDES },
+  { "evaporator", book_evaporator,
+    N_("Fuel: what the heat source gives up, or, where it is not drawn, its heat at the temperature of the medium; product: what the medium gains.") },
+  { "expander", NULL, N_("Fuel: what the vapour gives up from inlet to exhaust; product: shaft power.") },
   { "recuperator", NULL, TWO_SIDES },
   { "district_heater", book_district_heater, N_("Fuel: what steam and drains give up; product: what the district water gains.") },
   { "steam_user", book_steam_user,
     N_("Fuel and product: what the steam gives up on becoming condensate, all of it the process's; water that does not come back is a loss.") },
   { "pipe", book_pipe, N_("It makes nothing: pressure lost is destroyed here; heat lost leaves at the temperature of the stream, a loss.") },
   { "valve", NULL, FALLS },
+  { "expansion_valve", NULL, FALLS },
   { "mixer", NULL, FALLS },
   { "flash_vessel", NULL, FALLS },
   { "gland_seal", NULL, FALLS },
