@@ -38,9 +38,11 @@ static const HlQuantityKind quantities[] = {
   HEAT_ROW (N_("Heat that the medium takes up.")),
 };
 
+static const HlRating ratings[] = { { .frozen = "UA", .found = "pinch" } };
+
 const HlKind hl_kind_evaporator = {
   .id = "evaporator", .letter = "EV", .name = N_("Evaporator"), .shelf_name = N_("evaporator"), .shelf_group = N_("Heat"),
   .help = N_("Boils a medium with the heat of a source, as in a heat pump or an organic cycle; below the critical pressure only."),
   .half_width = 2, .half_height = 2,
-  .ports = ROWS (ports), .options = ROWS (options), .quantities = ROWS (quantities),
+  .ports = ROWS (ports), .options = ROWS (options), .quantities = ROWS (quantities), .ratings = ROWS (ratings),
 };
