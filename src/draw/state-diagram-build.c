@@ -61,6 +61,10 @@ ranges_of_ts (const HlStateDiagram *diagram, const HlCycle *cycle, double text_s
   T.high = (T.high - text_share * T.low) / (1.0 - text_share);
   range_take (&s, hl_dome_entropy (dome, T.low, 0.0));
   range_take (&s, hl_dome_entropy (dome, coldest, 1.0));
+  /* The dome of a dry medium leans over its lower end. */
+  for (guint i = 0; i < dome->n; i++)
+    if (dome->T[i] >= coldest)
+      range_take (&s, dome->s_vapour[i]);
   s.high += 0.045 * (s.high - s.low);
   *across = s;
   *up = T;

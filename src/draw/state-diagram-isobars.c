@@ -260,7 +260,8 @@ add_isotherms (HlStateDiagram *diagram, const HlCycle *cycle, GArray *lines)
     low += 0.15 * (high - low);
   while ((high - low) / step > MOST_ISOTHERMS)
     step *= 2.0;
-  for (double shown = step * ceil (low / step); shown <= high; shown += step)
+  /* Adding nothing makes of a negative zero a plain one. */
+  for (double shown = step * ceil (low / step) + 0.0; shown <= high; shown += step)
     {
       double T = hl_units_from_display (shown, HL_DIMENSION_TEMPERATURE, cycle->units);
       Line line = make_isotherm (diagram, cycle, T, g_strdup_printf ("%.0f %s", shown, hl_units_label (HL_DIMENSION_TEMPERATURE, cycle->units)));

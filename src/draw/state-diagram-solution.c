@@ -30,13 +30,37 @@ add_processes (HlCycle *cycle, const HlSolution *solution, gboolean *is_service,
     is_service[i] = is_service[i] && !is_cycle[i];
 }
 
+/* The medium whose cycle the diagram is about: of the expansion that gives most power, without one of the compression that takes most; water
+ * where nothing turns.  A gas has no dome to be drawn in. */
+static const HlFluid *
+main_fluid (const HlSolution *solution)
+{
+  const HlFluid *fluid = NULL;
+  double most = 0.0;
+  for (int is_compression = 0; is_compression <= 1 && fluid == NULL; is_compression++)
+    for (guint i = 0; i < hl_solution_n_processes (solution); i++)
+      {
+        const HlProcess *process = hl_solution_process (solution, i);
+        double power = process->m * fabs (process->from.h - process->to.h);
+        if (process->kind != (is_compression ? HL_PROCESS_COMPRESSION : HL_PROCESS_EXPANSION) || process->is_service || process->fluid == NULL
+            || !hl_fluid_has_dome (process->fluid))
+          continue;
+        if (fluid == NULL || power > most)
+          {
+            fluid = process->fluid;
+            most = power;
+          }
+      }
+  return fluid;
+}
+
 HlCycle *
 hl_cycle_from_solution (const HlSolution *solution, HlUnitSet units)
 {
   const HlPlant *plant = hl_solution_plant (solution);
   guint n_streams = hl_plant_n_streams (plant);
   g_autofree gboolean *is_service = g_new0 (gboolean, n_streams + 1);
-  HlCycle *cycle = hl_cycle_new (NULL, units);
+  HlCycle *cycle = hl_cycle_new (main_fluid (solution), units);
   add_processes (cycle, solution, is_service, n_streams);
   for (guint i = 0; i < n_streams; i++)
     {
