@@ -142,6 +142,7 @@ test_industrial_demo_by_the_river (void)
   const HlFinding *moisture = test_finding (s, "exhaust-moisture");
   g_assert_nonnull (moisture);
   g_assert_cmpint (moisture->grade, ==, HL_GRADE_WARNING);
+}
 
 /* The figures below were balanced beforehand with the same equations of state and rounded ("about"): they are checks of the whole. */
 
