@@ -43,6 +43,13 @@ static const char *const names[] = {
   N_("Toluene"),
   N_("Water and steam (1995 formulation)"),
   N_("Water and steam"),
+  /* xgettext:no-c-format */
+  N_("Calcium chloride brine, 20 %"),
+  N_("Diphenyl and diphenyl oxide, eutectic"),
+  N_("Engine oil, unused"),
+  N_("Ethylene glycol brine, 30 %"),
+  N_("Mineral oil"),
+  N_("Propylene glycol brine, 40 %"),
   N_("Air"),
   N_("Flue gas"),
 };
