@@ -69,7 +69,7 @@ hl_check_entropy (HlChecker *checker)
   for (int k = model->first_port[checker->index]; k < model->first_port[checker->index + 1]; k++)
     {
       const HlNodeResult *node = &checker->states[g_array_index (model->ports, HlPortNode, k).node];
-      if (!node->has_flow || !node->has_state || node->m < 0.0)
+      if (!node->has_flow || !node->has_state || node->m < -1e-9 * model->system->flow_scale)
         return;
       flow = fmax (flow, node->m);
     }
