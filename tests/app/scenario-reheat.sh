@@ -13,6 +13,8 @@ sleep 0.5
 window=$(xdotool search --onlyvisible --name '^Heatloom' | head -1)
 [ -n "$window" ] || fail "the window has a title"
 xdotool windowmove "$window" 0 0 windowsize "$window" 1600 1000 sleep 0.8
+wait_line '^canvas right-bottom 1[23]' 1 || fail "the window grows"
+sleep 0.5
 set -- $(place canvas left-top)
 left=$1 top=$2
 xdotool mousemove $((left + 60)) $((top + 400)) click 1 sleep 0.2
