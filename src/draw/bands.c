@@ -192,7 +192,7 @@ add_component (Books *books, guint n)
       add (books, HL_BAND_FUEL, fuel, needed (books, component, "fuel_heat"));
       add (books, HL_BAND_FIRING_LOSS, loss, needed (books, component, "fuel_heat") - needed (books, component, "heat"));
     }
-  else if (is_kind (component, "heat_input"))
+  else if (is_kind (component, "heat_input") || is_kind (component, "gas_source") || is_kind (component, "solar_field"))
     add (books, HL_BAND_HEAT, label, needed (books, component, "heat"));
   else if (is_kind (component, "motor"))
     {
@@ -215,11 +215,12 @@ add_component (Books *books, guint n)
         books->motors += value;
       else
         books->shaft_driven += power;
-      add (books, pumps_service (books, n) ? HL_BAND_OWN : HL_BAND_PUMPS, name, power);
+      /* What a fan gives comes back to the plant as heat of the gas. */
+      add (books, pumps_service (books, n) && !is_kind (component, "fan") ? HL_BAND_OWN : HL_BAND_PUMPS, name, power);
     }
   else if (is_kind (component, "steam_user"))
     add (books, HL_BAND_DELIVERED, label, needed (books, component, "heat"));
-  else if (is_kind (component, "condenser"))
+  else if (is_kind (component, "condenser") || is_kind (component, "stack"))
     add (books, HL_BAND_REJECTED, label, needed (books, component, "heat"));
   else if (own (books, component, "heat_loss", &value))
     {

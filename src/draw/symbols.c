@@ -12,6 +12,8 @@ static const HlSymbol *const symbols[] = {
   &hl_symbol_feed_pump_turbine, &hl_symbol_ejector, &hl_symbol_gland_seal, &hl_symbol_control_stage, &hl_symbol_hotwell,
   &hl_symbol_header, &hl_symbol_bypass_station, &hl_symbol_drain_pump,
   &hl_symbol_expander, &hl_symbol_evaporator, &hl_symbol_expansion_valve,
+  &hl_symbol_economiser, &hl_symbol_evaporator_drum, &hl_symbol_superheater, &hl_symbol_reheater, &hl_symbol_air_preheater, &hl_symbol_steam_air_heater,
+  &hl_symbol_flue_gas_condenser, &hl_symbol_gas_source, &hl_symbol_stack, &hl_symbol_fan, &hl_symbol_solar_field,
 };
 
 static const HlSymbol *

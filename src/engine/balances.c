@@ -26,6 +26,13 @@ own (const HlSolution *solution, int component, const char *key)
   return var >= 0 && solution->numbers.is_known[solution->model->system->root[var]] ? hl_system_value (solution->model->system, var) : 0.0;
 }
 
+/* Streams begin or end there. */
+static gboolean
+is_open_door (const char *kind)
+{
+  return g_str_equal (kind, "make_up") || g_str_equal (kind, "boundary") || g_str_equal (kind, "gas_source") || g_str_equal (kind, "stack");
+}
+
 /* Where a component itself is a door of the plant: flow and energy through it, in positive. */
 static void
 book_doors (const HlSolution *solution, int c, Balance *mass, Balance *energy)
@@ -39,9 +46,11 @@ book_doors (const HlSolution *solution, int c, Balance *mass, Balance *energy)
     book (energy, own (solution, c, "heat"));
   else if (role == HL_SHAFT_DRIVES)
     book (energy, -own (solution, c, "internal_power"));
+  else if (g_str_equal (kind, "solar_field"))
+    book (energy, own (solution, c, "heat"));
   else if (role == HL_SHAFT_DRIVEN)
     book (energy, own (solution, c, "power"));
-  else if (g_str_equal (kind, "pipe"))
+  else if (hl_model_own_var (model, c, "heat_loss") >= 0)
     book (energy, -own (solution, c, "heat_loss"));
   else if ((g_str_equal (kind, "condenser") && !is_cooled) || g_str_equal (kind, "air_condenser") || g_str_equal (kind, "cooling_tower")
            || (g_str_equal (kind, "district_heater") && hl_model_port_node (model, c, "water_inlet") < 0))
@@ -59,7 +68,7 @@ book_doors (const HlSolution *solution, int c, Balance *mass, Balance *energy)
       book (mass, -own (solution, c, "vent_flow"));
       book (energy, -own (solution, c, "vent_flow") * own (solution, c, "vent_h"));
     }
-  else if (g_str_equal (kind, "make_up") || g_str_equal (kind, "boundary"))
+  else if (is_open_door (kind))
     for (int k = model->first_port[c]; k < model->first_port[c + 1]; k++)
       {
         const HlPortNode *port = &g_array_index (model->ports, HlPortNode, k);
@@ -85,7 +94,7 @@ hl_solution_balances (const HlSolution *solution, double *mass, double *energy)
       double sum = 0.0;
       book_doors (solution, (int) c, &plant_mass, &plant_energy);
       const char *kind = hl_plant_component (solution->plant, c)->kind->id;
-      if (g_str_equal (kind, "make_up") || g_str_equal (kind, "boundary"))
+      if (is_open_door (kind))
         continue;
       for (int k = model->first_port[c]; k < model->first_port[c + 1]; k++)
         {

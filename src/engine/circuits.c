@@ -72,7 +72,9 @@ hl_circuits_service (const HlModel *model, const int *circuits)
         {
           const HlPortNode *port = &g_array_index (model->ports, HlPortNode, k);
           if (g_str_equal (port->key, "cooling_inlet") || g_str_equal (port->key, "cooling_outlet")
-              || g_str_equal (port->key, "water_inlet") || g_str_equal (port->key, "water_outlet"))
+              || g_str_equal (port->key, "water_inlet") || g_str_equal (port->key, "water_outlet")
+              || g_str_equal (port->key, "gas_inlet") || g_str_equal (port->key, "gas_outlet")
+              || g_str_equal (port->key, "air_inlet") || g_str_equal (port->key, "air_outlet"))
             is_cooling[circuits[port->node]] = TRUE;
           else if (is_turbine)
             is_working[circuits[port->node]] = TRUE;

@@ -285,10 +285,21 @@ book_boundary (HlExergySink *sink)
     }
 }
 
+/* Heating surfaces on a gas path: two sides, and what the casing loses at the temperature of the gas. */
+static void
+book_bank (HlExergySink *sink)
+{
+  int in = hl_exergy_node (sink, "gas_inlet"), out = hl_exergy_node (sink, "gas_outlet");
+  hl_exergy_sides (sink, HL_ROLE_SIDE);
+  if (in >= 0 && out >= 0)
+    hl_exergy_heat (sink, HL_ROLE_LOSS, -1.0, "heat_loss", at_node (in), at_node (out))->door = HL_DOOR_LOSS;
+}
+
 /* --- the table ------------------------------------------------------------------------------- */
 
 #define FALLS     N_("It makes nothing: what the streams lose is destroyed here, for the sake of the components it serves.")
 #define PASSES    NULL
+#define GAS_SIDES N_("Fuel: what the gas gives up; product: what it heats gains; the heat of the casing leaves at the temperature of the gas, a loss.")
 #define TWO_SIDES N_("Fuel: what the hot side gives up; product: what the cold side gains.")
 
 static const HlExergyKind kinds[] = {
@@ -319,6 +330,15 @@ static const HlExergyKind kinds[] = {
     N_("Fuel: what the heat source gives up, or, where it is not drawn, its heat at the temperature of the medium; product: what the medium gains.") },
   { "expander", NULL, N_("Fuel: what the vapour gives up from inlet to exhaust; product: shaft power.") },
   { "recuperator", NULL, TWO_SIDES },
+  { "economiser", book_bank, GAS_SIDES },
+  { "evaporator_drum", book_bank, GAS_SIDES },
+  { "superheater", book_bank, GAS_SIDES },
+  { "reheater", book_bank, GAS_SIDES },
+  { "air_preheater", book_bank, GAS_SIDES },
+  { "flue_gas_condenser", book_bank, GAS_SIDES },
+  { "steam_air_heater", NULL, TWO_SIDES },
+  { "solar_field", book_heat_input, N_("Fuel and product: what the medium gains, so that nothing is destroyed here; the sun is not counted.") },
+  { "fan", NULL, N_("Fuel: power of its motor, or of its shaft; product: what the fluid gains.") },
   { "district_heater", book_district_heater, N_("Fuel: what steam and drains give up; product: what the district water gains.") },
   { "steam_user", book_steam_user,
     N_("Fuel and product: what the steam gives up on becoming condensate, all of it the process's; water that does not come back is a loss.") },
@@ -336,6 +356,8 @@ static const HlExergyKind kinds[] = {
   { "splitter", NULL, PASSES },
   { "make_up", book_boundary, PASSES },
   { "boundary", book_boundary, PASSES },
+  { "gas_source", book_boundary, PASSES },
+  { "stack", book_boundary, PASSES },
 };
 
 const HlExergyKind *

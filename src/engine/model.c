@@ -261,7 +261,10 @@ fluid_beside (const HlEmit *emit, const char *key)
       if (hl_kind_side_of_port (kind, port->key) == side)
         return hl_model_node (model, port->node)->fluid;
     }
-  return model->water;
+  guint n;
+  const char *medium = hl_component_find_port (emit->component, key, &n) ? hl_component_port (emit->component, n).kind->medium : NULL;
+  const HlFluid *made_for = medium != NULL ? hl_plant_fluid (model->plant, medium) : NULL;
+  return made_for != NULL ? made_for : model->water;
 }
 
 int

@@ -103,6 +103,8 @@ hl_name_dimension (HlVarKind kind)
     case HL_VAR_STEAM_RATE: return HL_DIMENSION_STEAM_RATE;
     case HL_VAR_LENGTH: return HL_DIMENSION_LENGTH;
     case HL_VAR_AREA: return HL_DIMENSION_AREA;
+    case HL_VAR_APERTURE: return HL_DIMENSION_APERTURE;
+    case HL_VAR_IRRADIANCE: return HL_DIMENSION_IRRADIANCE;
     }
   return HL_DIMENSION_RATIO;
 }

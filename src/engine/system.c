@@ -200,6 +200,8 @@ hl_system_scale (const HlSystem *system, HlVarKind kind)
     case HL_VAR_STEAM_RATE: return 1e-6;
     case HL_VAR_LENGTH: return 10.0;
     case HL_VAR_AREA: return system->flow_scale * 1e-3;
+    case HL_VAR_APERTURE: return 1e4;
+    case HL_VAR_IRRADIANCE: return 1e3;
     default: return 1.0;
     }
 }
@@ -234,6 +236,8 @@ hl_system_start (const HlVar *var, double flow_scale)
     case HL_VAR_STEAM_RATE: return 1e-6;
     case HL_VAR_LENGTH: return 5.0;
     case HL_VAR_AREA: return flow_scale * 1e-3;
+    case HL_VAR_APERTURE: return 1e4;
+    case HL_VAR_IRRADIANCE: return 800.0;
     }
   return 1.0;
 }
@@ -291,6 +295,8 @@ hl_var_kind_of (HlDimension dimension)
     case HL_DIMENSION_POWER: return HL_VAR_POWER;
     case HL_DIMENSION_CONDUCTANCE: return HL_VAR_CONDUCTANCE;
     case HL_DIMENSION_HEAT_RATE: return HL_VAR_HEAT_RATE;
+    case HL_DIMENSION_APERTURE: return HL_VAR_APERTURE;
+    case HL_DIMENSION_IRRADIANCE: return HL_VAR_IRRADIANCE;
     case HL_DIMENSION_EMISSION:
     case HL_DIMENSION_STEAM_RATE: return HL_VAR_STEAM_RATE;
     case HL_DIMENSION_LENGTH: return HL_VAR_LENGTH;

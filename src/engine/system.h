@@ -22,6 +22,8 @@ typedef enum {
   HL_VAR_STEAM_RATE,
   HL_VAR_LENGTH,
   HL_VAR_AREA,
+  HL_VAR_APERTURE,
+  HL_VAR_IRRADIANCE,
 } HlVarKind;
 
 /* Variables which are equal by structure form a class; its root stands for all of them. */

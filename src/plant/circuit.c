@@ -96,13 +96,28 @@ hl_plant_port_medium (const HlPlant *plant, const char *component_id, const char
   return NULL;
 }
 
+/* What a port is made for, where no line says it. */
+static const char *
+medium_of_kind (const HlPlant *plant, const char *component_id, const char *port)
+{
+  const HlComponent *component = hl_plant_find_component (plant, component_id);
+  guint n;
+  if (component == NULL || !hl_component_find_port (component, port, &n))
+    return NULL;
+  return hl_component_port (component, n).kind->medium;
+}
+
 const char *
 hl_plant_line_medium (const HlPlant *plant, const char *from_id, const char *from_port, const char *to_id, const char *to_port)
 {
   const char *medium = hl_plant_port_medium (plant, from_id, from_port);
   if (medium == NULL)
     medium = hl_plant_port_medium (plant, to_id, to_port);
-  return medium != NULL ? medium : g_intern_static_string ("water");
+  if (medium == NULL)
+    medium = medium_of_kind (plant, from_id, from_port);
+  if (medium == NULL)
+    medium = medium_of_kind (plant, to_id, to_port);
+  return medium != NULL ? g_intern_string (medium) : g_intern_static_string ("water");
 }
 
 HlPlant *

@@ -10,7 +10,7 @@ HL_PUBLIC int         hl_kind_side_of_port  (const HlKind *kind, const char *por
 HL_PUBLIC int        *hl_plant_circuits     (const HlPlant *plant);
 /* Medium of the circuit that a port belongs to: that of a line on the same side of its component; NULL where there is none. */
 HL_PUBLIC const char *hl_plant_port_medium  (const HlPlant *plant, const char *component_id, const char *port);
-/* Medium that a new line between two ports carries: of the circuit it leaves, else of the one it enters, else water. */
+/* Medium that a new line between two ports carries: of the circuit it leaves, else of the one it enters, else what its ports are made for. */
 HL_PUBLIC const char *hl_plant_line_medium  (const HlPlant *plant, const char *from_id, const char *from_port, const char *to_id, const char *to_port);
 /* The whole circuit of a stream on another medium; NULL with error for an unknown stream or medium.  (transfer full) */
 HL_PUBLIC HlPlant    *hl_plant_with_medium  (const HlPlant *plant, const char *stream_id, const char *medium, GError **error);

@@ -35,6 +35,7 @@ typedef struct {
   HlAnchor         anchor;             /* edges move with the width, see widen_option */
   int              step_x;             /* of a repeated port: each number lies this much further right */
   const HlPortPlace *places;           /* of a repeated port: place of each number from 1, instead of x, y, side; or NULL */
+  const char      *medium;             /* what flows here where no line says otherwise; NULL: water */
 } HlPortKind;
 
 typedef enum {

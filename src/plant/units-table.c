@@ -96,7 +96,7 @@ static const HlUnit units[] = {
   PLAIN ("m", LENGTH, 1.0), PLAIN ("ft", LENGTH, FT), PLAIN ("mm", LENGTH, 1e-3), PLAIN ("cm", LENGTH, 1e-2), PLAIN ("km", LENGTH, 1e3),
   PLAIN ("in", LENGTH, FT / 12.0), PLAIN ("inch", LENGTH, FT / 12.0),
 
-  PLAIN ("cm2", AREA, 1e-4), PLAIN ("m2", AREA, 1.0), PLAIN ("mm2", AREA, 1e-6), PLAIN ("in2", AREA, FT / 12.0 * FT / 12.0), PLAIN ("ft2", AREA, FT * FT),
+  PLAIN ("cm2", AREA, 1e-4), PLAIN ("m2", AREA, 1.0), PLAIN ("mm2", AREA, 1e-6), PLAIN ("in2", AREA, FT / 12.0 * FT / 12.0), PLAIN ("ft2", AREA, FT * FT), PLAIN ("ha", AREA, 1e4),
 
   PLAIN ("kJ/kWh", HEAT_RATE, 1e3 / KWH), PLAIN ("Btu/kWh", HEAT_RATE, BTU / KWH), PLAIN ("kcal/kWh", HEAT_RATE, KCAL / KWH),
   PLAIN ("J/J", HEAT_RATE, 1.0), PLAIN ("MJ/kWh", HEAT_RATE, 1e6 / KWH), PLAIN ("GJ/MWh", HEAT_RATE, 1e9 / (1e3 * KWH)),
@@ -106,6 +106,8 @@ static const HlUnit units[] = {
   PLAIN ("kg/J", STEAM_RATE, 1.0), PLAIN ("kg/MWh", STEAM_RATE, 1e-3 / KWH), PLAIN ("kg/MJ", STEAM_RATE, 1e-6),
   PLAIN ("kg/GJ", STEAM_RATE, 1e-9), PLAIN ("g/kWh", STEAM_RATE, 1e-3 / KWH), PLAIN ("lb/MMBtu", STEAM_RATE, LB / (1e6 * BTU)),
   PLAIN ("lb/MWh", STEAM_RATE, LB / (1e3 * KWH)), PLAIN ("t/TJ", STEAM_RATE, 1e-9),
+
+  PLAIN ("W/m2", IRRADIANCE, 1.0), PLAIN ("kW/m2", IRRADIANCE, 1e3), PLAIN ("Btu/(h ft2)", IRRADIANCE, BTU / HOUR / (FT * FT)),
 
   PLAIN ("m3/h", VOLUME_FLOW, 1.0 / HOUR), PLAIN ("m3/s", VOLUME_FLOW, 1.0), PLAIN ("ft3/min", VOLUME_FLOW, FT * FT * FT / 60.0),
   PLAIN ("ft3/s", VOLUME_FLOW, FT * FT * FT), PLAIN ("gpm", VOLUME_FLOW, GALLON / 60.0), PLAIN ("l/s", VOLUME_FLOW, 1e-3),
@@ -260,6 +262,8 @@ hl_unit_dimension (HlDimension dimension)
       return HL_DIMENSION_PRESSURE;
     case HL_DIMENSION_TEMPERATURE_DIFFERENCE:
       return HL_DIMENSION_TEMPERATURE;
+    case HL_DIMENSION_APERTURE:
+      return HL_DIMENSION_AREA;
     case HL_DIMENSION_EMISSION:
       return HL_DIMENSION_STEAM_RATE;
     default:

@@ -33,6 +33,8 @@ static const Dimension dimensions[HL_N_DIMENSIONS] = {
   [HL_DIMENSION_VOLUME_FLOW] = { N_("volume flow"), "m3/s", "_m3_s", { "m³/h", "m³/s", "ft³/min" }, { 0, 4 } },
   [HL_DIMENSION_EMISSION] = { N_("emission"), "kg/J", "_kg_J", { "kg/MWh", "kg/MWh", "lb/MWh" }, { 1, 4 } },
   [HL_DIMENSION_AREA] = { N_("area"), "m2", "_m2", { "cm²", "m²", "in²" }, { 0, 4 } },
+  [HL_DIMENSION_APERTURE] = { N_("aperture area"), "m2", "_m2", { "m²", "m²", "ft²" }, { 0, 4 } },
+  [HL_DIMENSION_IRRADIANCE] = { N_("irradiance"), "W/m2", "_W_m2", { "W/m²", "W/m²", "W/m²" }, { 0, 3 } },
   [HL_DIMENSION_COUNT] = { N_("number"), "", "", { "", "", "" }, { 0, 6 } },
 };
 

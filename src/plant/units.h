@@ -22,6 +22,8 @@ typedef enum {
   HL_DIMENSION_VOLUME_FLOW,
   HL_DIMENSION_EMISSION,                 /* kg/J, shown as kg/MWh or lb/MWh */
   HL_DIMENSION_AREA,
+  HL_DIMENSION_APERTURE,                 /* an area of land or collectors, shown as m2 or ft2 */
+  HL_DIMENSION_IRRADIANCE,               /* W/m2 */
   HL_DIMENSION_COUNT,                    /* a plain number */
   HL_N_DIMENSIONS
 } HlDimension;

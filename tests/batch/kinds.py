@@ -8,7 +8,9 @@ from tap import SOURCE, batch, main, refused
 KINDS = ("heat_input", "boiler", "turbine", "generator", "condenser", "pump", "pipe", "valve", "open_heater",
          "closed_heater", "splitter", "mixer", "steam_user", "make_up", "boundary", "motor", "gearbox", "compressor", "desuperheater", "moisture_separator", "flash_vessel", "cooling_tower", "air_condenser", "district_heater", "recuperator", "exchanger",
          "feed_pump_turbine", "ejector", "gland_seal", "control_stage", "hotwell", "header", "bypass_station", "drain_pump",
-         "expander", "evaporator", "expansion_valve")
+         "expander", "evaporator", "expansion_valve",
+         "gas_source", "superheater", "reheater", "evaporator_drum", "economiser", "air_preheater", "steam_air_heater", "flue_gas_condenser",
+         "fan", "stack", "solar_field")
 
 
 def test_every_kind_is_there():

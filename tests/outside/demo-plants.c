@@ -227,6 +227,26 @@ test_heat_pump_demo (void)
   g_assert_cmpfloat (test_value (s, "plant.cop"), >, 0.5 * carnot);
 }
 
+/* Two pressure levels on the exhaust of a gas turbine: figures by the table of usual practice, no finding worse than a hint. */
+static void
+test_heat_recovery_demo (void)
+{
+  g_autoptr (HlSolution) s = solve_demo ("cinder-reach.heatloom");
+  double stack = test_value (s, "ST1.inlet.T") - 273.15, steam = test_value (s, "SH1.outlet.T") - 273.15, gross = test_value (s, "plant.gross_power");
+  g_assert_cmpfloat (stack, >, 90.0);
+  g_assert_cmpfloat (stack, <, 130.0);
+  g_assert_cmpfloat (fabs (steam - 510.0), <, 0.1);
+  test_assert_near (test_value (s, "ED1.pinch"), 10.0, 1e-9);
+  test_assert_near (test_value (s, "ED2.pinch"), 10.0, 1e-9);
+  test_assert_near (test_value (s, "EC1.approach"), 8.0, 1e-9);
+  g_assert_cmpfloat (test_value (s, "ED1.steam.m"), >, 3.0 * test_value (s, "ED2.steam.m"));
+  /* Of the heat in the gas a third becomes power at best. */
+  g_assert_cmpfloat (gross / test_value (s, "HG1.heat"), >, 0.24);
+  g_assert_cmpfloat (gross / test_value (s, "HG1.heat"), <, 0.33);
+  for (guint k = 0; k < hl_solution_n_findings (s); k++)
+    g_assert_cmpint (hl_solution_finding (s, k)->grade, <=, HL_GRADE_HINT);
+}
+
 int
 main (int argc, char **argv)
 {
@@ -242,5 +262,6 @@ main (int argc, char **argv)
   g_test_add_func ("/outside/demo-plants/waste-heat", test_waste_heat_demo);
   g_test_add_func ("/outside/demo-plants/carbon-dioxide", test_carbon_dioxide_demo);
   g_test_add_func ("/outside/demo-plants/heat-pump", test_heat_pump_demo);
+  g_test_add_func ("/outside/demo-plants/heat-recovery", test_heat_recovery_demo);
   return g_test_run ();
 }

@@ -6,7 +6,7 @@
 
 static const char *const dimension_ids[HL_N_DIMENSIONS] = {
   "ratio", "pressure", "pressure_difference", "temperature", "temperature_difference", "mass_flow", "enthalpy", "entropy",
-  "volume", "power", "conductance", "length", "heat_rate", "steam_rate", "volume_flow", "emission", "count",
+  "volume", "power", "conductance", "length", "heat_rate", "steam_rate", "volume_flow", "emission", "area", "aperture", "irradiance", "count",
 };
 
 static void

@@ -30,7 +30,9 @@ extern const HlSymbol hl_symbol_heat_input, hl_symbol_boiler, hl_symbol_turbine,
   hl_symbol_moisture_separator, hl_symbol_desuperheater, hl_symbol_compressor, hl_symbol_gearbox, hl_symbol_motor,
   hl_symbol_feed_pump_turbine, hl_symbol_ejector, hl_symbol_gland_seal, hl_symbol_control_stage, hl_symbol_hotwell,
   hl_symbol_header, hl_symbol_bypass_station, hl_symbol_drain_pump,
-  hl_symbol_expander, hl_symbol_evaporator, hl_symbol_expansion_valve;
+  hl_symbol_expander, hl_symbol_evaporator, hl_symbol_expansion_valve,
+  hl_symbol_economiser, hl_symbol_evaporator_drum, hl_symbol_superheater, hl_symbol_reheater, hl_symbol_air_preheater, hl_symbol_steam_air_heater,
+  hl_symbol_flue_gas_condenser, hl_symbol_gas_source, hl_symbol_stack, hl_symbol_fan, hl_symbol_solar_field;
 
 void hl_pen_body    (const HlPen *pen);                                             /* fills the path with the card, strokes it with ink */
 void hl_pen_stroke  (const HlPen *pen, const HlColour *colour, double weight);      /* strokes the path; @weight relative to outlines */

@@ -20,7 +20,9 @@ extern const HlComponentModel hl_heat_input_model, hl_boiler_model, hl_turbine_m
   hl_compressor_model, hl_gearbox_model, hl_motor_model,
   hl_feed_pump_turbine_model, hl_ejector_model, hl_gland_seal_model, hl_control_stage_model,
   hl_hotwell_model, hl_header_model, hl_bypass_station_model, hl_drain_pump_model,
-  hl_expander_model, hl_evaporator_model, hl_expansion_valve_model;
+  hl_expander_model, hl_evaporator_model, hl_expansion_valve_model,
+  hl_economiser_model, hl_evaporator_drum_model, hl_superheater_model, hl_reheater_model, hl_air_preheater_model, hl_steam_air_heater_model,
+  hl_flue_gas_condenser_model, hl_gas_source_model, hl_stack_model, hl_fan_model, hl_solar_field_model;
 
 const HlComponentModel *hl_component_model (const HlKind *kind);   /* NULL when the engine does not know it */
 

@@ -13,9 +13,11 @@ typedef struct { int hot_in, hot_out, cold_in, cold_out; } Ends;
 static void
 emit_side (HlEmit *emit, int in, int out, const char *loss_key, double sign, int heat)
 {
-  int loss = hl_emit_own (emit, loss_key, HL_VAR_RATIO);
   hl_system_merge (emit->system, NODE (emit, in)->m, NODE (emit, out)->m);
-  hl_emit_done (emit, hl_add_pressure_loss (emit->system, NODE (emit, in)->p, NODE (emit, out)->p, loss), NULL, -1);
+  if (loss_key == NULL)
+    hl_system_merge (emit->system, NODE (emit, in)->p, NODE (emit, out)->p);
+  else
+    hl_emit_done (emit, hl_add_pressure_loss (emit->system, NODE (emit, in)->p, NODE (emit, out)->p, hl_emit_own (emit, loss_key, HL_VAR_RATIO)), NULL, -1);
   const int out_first[] = { NODE (emit, out)->m, NODE (emit, out)->h, NODE (emit, in)->m, NODE (emit, in)->h };
   const int in_first[] = { NODE (emit, in)->m, NODE (emit, in)->h, NODE (emit, out)->m, NODE (emit, out)->h };
   hl_emit_done (emit, hl_add_energy (emit->system, HL_VAR_POWER, sign > 0.0 ? out_first : in_first, (const double[]) { 1.0, -1.0 }, 2,
@@ -43,22 +45,51 @@ hl_exchange_count (HlEmit *emit, int heat)
     hl_emit_sum (emit, (HlSum) sums[counts], heat);
 }
 
-void
-hl_exchange_emit (HlEmit *emit)
+/* What the casing loses, the hot side gives beside the heat that arrives. */
+static int
+emit_heat_loss (HlEmit *emit, int heat)
 {
-  const Ends n = { hl_emit_port (emit, "hot_inlet"), hl_emit_port (emit, "hot_outlet"), hl_emit_port (emit, "cold_inlet"), hl_emit_port (emit, "cold_outlet") };
+  int share = hl_emit_own (emit, "heat_loss_fraction", HL_VAR_RATIO), loss = hl_emit_own (emit, "heat_loss", HL_VAR_POWER);
+  int given = hl_emit_hidden (emit, "gas_heat", HL_VAR_POWER);
+  hl_emit_done (emit, hl_add_product (emit->system, given, share, loss), NULL, 2);
+  hl_emit_done (emit, hl_add_linear (emit->system, HL_VAR_POWER, (const int[]) { heat, given, loss }, (const double[]) { 1.0, -1.0, 1.0 }, 3, 0.0),
+                N_("{0} = {1} − {2}"), -1);
+  return given;
+}
+
+int
+hl_exchange_emit_sides (HlEmit *emit, const HlExchangeSides *sides)
+{
+  const Ends n = { hl_emit_port (emit, sides->hot_in), hl_emit_port (emit, sides->hot_out), hl_emit_port (emit, sides->cold_in), hl_emit_port (emit, sides->cold_out) };
   int heat = hl_emit_own (emit, "heat", HL_VAR_POWER), pinch = hl_emit_own (emit, "pinch", HL_VAR_TEMPERATURE_DIFFERENCE);
-  int share = hl_emit_own (emit, "effectiveness", HL_VAR_RATIO), ua = hl_emit_own (emit, "UA", HL_VAR_CONDUCTANCE);
+  int ua = hl_emit_own (emit, "UA", HL_VAR_CONDUCTANCE), given = sides->loses_heat ? emit_heat_loss (emit, heat) : heat;
   hl_exchange_count (emit, heat);
-  emit_side (emit, n.hot_in, n.hot_out, "hot_pressure_loss", -1.0, heat);
-  emit_side (emit, n.cold_in, n.cold_out, "cold_pressure_loss", 1.0, heat);
-  emit_end (emit, "hot_end_difference", n.hot_in, n.cold_out, FALSE);
-  emit_end (emit, "cold_end_difference", n.hot_out, n.cold_in, TRUE);
+  emit_side (emit, n.hot_in, n.hot_out, sides->hot_loss, -1.0, given);
+  emit_side (emit, n.cold_in, n.cold_out, sides->cold_loss, 1.0, heat);
+  if (sides->has_end_differences)
+    {
+      emit_end (emit, "hot_end_difference", n.hot_in, n.cold_out, FALSE);
+      emit_end (emit, "cold_end_difference", n.hot_out, n.cold_in, TRUE);
+    }
   const HlNode *hot_in = NODE (emit, n.hot_in), *hot_out = NODE (emit, n.hot_out), *cold_in = NODE (emit, n.cold_in), *cold_out = NODE (emit, n.cold_out);
   const int inputs[HL_N_CURVE_INPUTS] = { hot_in->p, hot_in->h, hot_out->p, hot_out->h, cold_in->p, cold_in->h, cold_out->p, cold_out->h };
   hl_emit_done (emit, hl_add_exchanger_pinch (emit->system, hot_in->fluid, cold_in->fluid, inputs, pinch), NULL, -1);
   hl_emit_done (emit, hl_add_exchanger_conductance (emit->system, hot_in->fluid, cold_in->fluid, inputs, heat, ua), NULL, -1);
-  hl_emit_done (emit, hl_add_exchanger_effectiveness (emit->system, hot_in->fluid, cold_in->fluid, inputs, hot_in->m, cold_in->m, heat, share), NULL, -1);
+  if (sides->has_effectiveness)
+    hl_emit_done (emit, hl_add_exchanger_effectiveness (emit->system, hot_in->fluid, cold_in->fluid, inputs, hot_in->m, cold_in->m, heat,
+                                                        hl_emit_own (emit, "effectiveness", HL_VAR_RATIO)), NULL, -1);
+  return heat;
+}
+
+static const HlExchangeSides usual_sides = {
+  "hot_inlet", "hot_outlet", "cold_inlet", "cold_outlet", "hot_pressure_loss", "cold_pressure_loss",
+  .has_end_differences = TRUE, .has_effectiveness = TRUE,
+};
+
+void
+hl_exchange_emit (HlEmit *emit)
+{
+  hl_exchange_emit_sides (emit, &usual_sides);
 }
 
 /* --- checks ------------------------------------------------------------------- */
@@ -67,8 +98,14 @@ static void
 offer_differences (HlChecker *checker, HlFinding *finding)
 {
   hl_check_offer (checker, finding, "pinch");
-  hl_check_offer (checker, finding, "hot_outlet.T");
-  hl_check_offer (checker, finding, "cold_outlet.T");
+  static const char *const keys[] = { "hot_outlet.T", "cold_outlet.T", "hot_end_difference", "approach", "terminal_difference", "gas_outlet.T" };
+  guint n_offered = 0;
+  for (guint k = 0; k < G_N_ELEMENTS (keys) && n_offered < 2; k++)
+    if (hl_component_quantity_kind (checker->component, keys[k]) != NULL)
+      {
+        hl_check_offer (checker, finding, keys[k]);
+        n_offered++;
+      }
 }
 
 static void
@@ -95,10 +132,10 @@ check_curve (HlChecker *checker, const HlExchangerCurve *curve)
 }
 
 void
-hl_exchange_check (HlChecker *checker)
+hl_exchange_check_sides (HlChecker *checker, const HlExchangeSides *sides)
 {
-  const HlNodeResult *hot_in = hl_check_port (checker, "hot_inlet"), *hot_out = hl_check_port (checker, "hot_outlet");
-  const HlNodeResult *cold_in = hl_check_port (checker, "cold_inlet"), *cold_out = hl_check_port (checker, "cold_outlet");
+  const HlNodeResult *hot_in = hl_check_port (checker, sides->hot_in), *hot_out = hl_check_port (checker, sides->hot_out);
+  const HlNodeResult *cold_in = hl_check_port (checker, sides->cold_in), *cold_out = hl_check_port (checker, sides->cold_out);
   if (hot_in == NULL || hot_out == NULL || cold_in == NULL || cold_out == NULL || !hot_in->has_state || !hot_out->has_state || !cold_in->has_state
       || !cold_out->has_state)
     return;
@@ -115,15 +152,31 @@ hl_exchange_check (HlChecker *checker)
                                              log (cold_in->p), cold_in->st.h, log (cold_out->p), cold_out->st.h };
   const HlModel *model = checker->model;
   HlExchangerCurve curve;
-  if (hl_exchanger_curve (hl_model_node (model, hl_model_port_node (model, checker->index, "hot_inlet"))->fluid,
-                          hl_model_node (model, hl_model_port_node (model, checker->index, "cold_inlet"))->fluid, inputs, &curve) == HL_OK)
+  if (hl_exchanger_curve (hl_model_node (model, hl_model_port_node (model, checker->index, sides->hot_in))->fluid,
+                          hl_model_node (model, hl_model_port_node (model, checker->index, sides->cold_in))->fluid, inputs, &curve) == HL_OK)
     check_curve (checker, &curve);
-  hl_check_entropy (checker);
+  /* Heat that the casing loses takes entropy with it. */
+  if (!sides->loses_heat)
+    hl_check_entropy (checker);
+}
+
+void
+hl_exchange_check (HlChecker *checker)
+{
+  hl_exchange_check_sides (checker, &usual_sides);
+}
+
+/* --- processes ------------------------------------------------------------------ */
+
+void
+hl_exchange_processes_sides (HlProcessSink *sink, const HlExchangeSides *sides)
+{
+  hl_process_add (sink, HL_PROCESS_COOLING, hl_process_node (sink, sides->hot_in), hl_process_node (sink, sides->hot_out));
+  hl_process_add (sink, HL_PROCESS_HEATING, hl_process_node (sink, sides->cold_in), hl_process_node (sink, sides->cold_out));
 }
 
 void
 hl_exchange_processes (HlProcessSink *sink)
 {
-  hl_process_add (sink, HL_PROCESS_COOLING, hl_process_node (sink, "hot_inlet"), hl_process_node (sink, "hot_outlet"));
-  hl_process_add (sink, HL_PROCESS_HEATING, hl_process_node (sink, "cold_inlet"), hl_process_node (sink, "cold_outlet"));
+  hl_exchange_processes_sides (sink, &usual_sides);
 }

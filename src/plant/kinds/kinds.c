@@ -3,7 +3,9 @@
 #include "plant/kinds/kinds.h"
 
 static const HlKind *const kinds[] = {
-  &hl_kind_boiler, &hl_kind_heat_input, &hl_kind_exchanger, &hl_kind_recuperator, &hl_kind_evaporator,
+  &hl_kind_boiler, &hl_kind_heat_input, &hl_kind_exchanger, &hl_kind_recuperator, &hl_kind_evaporator, &hl_kind_solar_field,
+  &hl_kind_gas_source, &hl_kind_superheater, &hl_kind_reheater, &hl_kind_evaporator_drum, &hl_kind_economiser, &hl_kind_air_preheater,
+  &hl_kind_steam_air_heater, &hl_kind_flue_gas_condenser, &hl_kind_fan, &hl_kind_stack,
   &hl_kind_turbine, &hl_kind_expander, &hl_kind_control_stage, &hl_kind_gland_seal, &hl_kind_moisture_separator, &hl_kind_bypass_station, &hl_kind_compressor, &hl_kind_expansion_valve, &hl_kind_generator, &hl_kind_gearbox,
   &hl_kind_condenser, &hl_kind_air_condenser, &hl_kind_cooling_tower, &hl_kind_hotwell, &hl_kind_ejector,
   &hl_kind_pump, &hl_kind_motor, &hl_kind_feed_pump_turbine, &hl_kind_drain_pump, &hl_kind_open_heater, &hl_kind_flash_vessel, &hl_kind_closed_heater, &hl_kind_make_up,

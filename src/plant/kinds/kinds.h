@@ -13,7 +13,9 @@ extern const HlKind hl_kind_heat_input, hl_kind_boiler, hl_kind_turbine, hl_kind
                     hl_kind_compressor, hl_kind_gearbox, hl_kind_motor,
                     hl_kind_feed_pump_turbine, hl_kind_ejector, hl_kind_gland_seal, hl_kind_control_stage,
                     hl_kind_hotwell, hl_kind_header, hl_kind_bypass_station, hl_kind_drain_pump,
-                    hl_kind_expander, hl_kind_evaporator, hl_kind_expansion_valve;
+                    hl_kind_expander, hl_kind_evaporator, hl_kind_expansion_valve,
+                    hl_kind_economiser, hl_kind_evaporator_drum, hl_kind_superheater, hl_kind_reheater, hl_kind_air_preheater, hl_kind_steam_air_heater,
+                    hl_kind_flue_gas_condenser, hl_kind_gas_source, hl_kind_stack, hl_kind_fan, hl_kind_solar_field;
 
 /* Words used by more than one table. */
 #define COMMON_PRACTICE N_("common practice, no source")
