@@ -2,6 +2,7 @@
  * SPDX-License-Identifier: GPL-3.0-or-later */
 #include "engine/exergy.h"
 #include "engine/solution-private.h"
+#include "fluid/gas.h"
 #include <math.h>
 #include <string.h>
 
@@ -21,7 +22,8 @@ static CircuitUse
 use_of (const HlSolution *solution, int node)
 {
   const HlModel *model = solution->model;
-  if (!solution->states[node].is_service)
+  /* Hot gas is what such a plant lives on, and what its stack lets go is a loss. */
+  if (!solution->states[node].is_service || hl_fluid_is_gas (hl_model_node (model, node)->fluid))
     return CIRCUIT_WORK;
   for (guint c = 0; c < hl_plant_n_components (solution->plant); c++)
     {
@@ -147,6 +149,12 @@ owner_of (const HlExergy *exergy, guint term)
   return c;
 }
 
+static gboolean
+is_end_of_streams (const char *kind)
+{
+  return g_str_equal (kind, "boundary") || g_str_equal (kind, "gas_source") || g_str_equal (kind, "stack");
+}
+
 gboolean
 hl_exergy_is_part (const HlSolution *solution, guint n, const HlExergyFlow *flow)
 {
@@ -168,7 +176,7 @@ hl_exergy_is_part (const HlSolution *solution, guint n, const HlExergyFlow *flow
     return FALSE;
   const HlModel *model = solution->model;
   for (int k = model->first_port[flow->component]; k < model->first_port[flow->component + 1]; k++)
-    if (g_str_equal (hl_plant_component (solution->plant, (guint) flow->component)->kind->id, "boundary")
+    if (is_end_of_streams (hl_plant_component (solution->plant, (guint) flow->component)->kind->id)
         && solution->circuits[g_array_index (model->ports, HlPortNode, k).node] == solution->circuits[term->node])
       return TRUE;
   return FALSE;

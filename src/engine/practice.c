@@ -24,6 +24,14 @@ static const struct { const char *code, *source; } sources[] = {
   { "near-critical", N_("common practice, no source") },
   { "vacuum-condenser", N_("common practice, no source") },
   { "no-line-loss", N_("extraction lines lose 2 to 7 per cent of the pressure: common practice, no source") },
+  { "small-pinch", N_("V. Ganapathy, by the temperature of the gas: finned tubes 6-33 K, bare tubes 44-83 K") },
+  { "large-pinch", N_("V. Ganapathy, by the temperature of the gas: finned tubes 6-33 K, bare tubes 44-83 K") },
+  { "superheater-difference", N_("common practice, no source") },
+  { "steaming-economiser", N_("common practice, no source") },
+  { "below-acid-dew-point", N_("dew point: Verhoff and Banchero 1974; margin of 10 K: common practice, no source") },
+  { "below-water-dew-point", N_("dew point by definition; that it matters: common practice, no source") },
+  { "cold-stack", N_("90 °C for clean gas, 150 °C for gas with sulphur: quoted from a secondary text") },
+  { "flue-gas-too-cold", N_("90 °C for clean fuel, 130 °C for fuel with sulphur: quoted from a secondary text") },
   { "unusual-value", N_("credible range of the component's table") },
 };
 

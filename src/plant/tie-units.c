@@ -22,6 +22,8 @@ static const HlBaseUnits bases[HL_N_DIMENSIONS] = {
   [HL_DIMENSION_STEAM_RATE] = BASE (0, -2, 2, 0),
   [HL_DIMENSION_VOLUME_FLOW] = BASE (0, 3, -1, 0),
   [HL_DIMENSION_AREA] = BASE (0, 2, 0, 0),
+  [HL_DIMENSION_APERTURE] = BASE (0, 2, 0, 0),
+  [HL_DIMENSION_IRRADIANCE] = BASE (1, 0, -3, 0),
   [HL_DIMENSION_EMISSION] = BASE (0, -2, 2, 0),
 };
 

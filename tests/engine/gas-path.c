@@ -212,6 +212,8 @@ test_findings (void)
   /* More gas heat in the economiser than its water can take as liquid. */
   test_expect_finding (BOILER ("", "hot_end_difference=30", "pinch=10", "gas_outlet.T=400", "inlet.p=101325") GAS, "steaming-economiser", HL_GRADE_CAUTION,
     "EC1 steams: ");
+  test_expect_finding (BOILER ("", "hot_end_difference=30", "pinch=10", "gas_outlet.T=400", "inlet.p=101325") GAS, "drum-feed-steams", HL_GRADE_HINT,
+    "The feed of ED1 reaches the drum partly as steam.");
 }
 
 /* Gas that goes straight to the stack. */

@@ -36,32 +36,34 @@ emit_gas_source (HlEmit *emit)
 
 /* T = T_sat(y p) */
 static HlStatus
-water_dew_point (const HlEquation *e, const double *a, const double *x, double *r, double *dr)
+water_dew_point (const HlEquation *e, G_GNUC_UNUSED const double *a, const double *x, double *r, double *dr)
 {
   HlSaturation sat;
-  double p = a[0] * exp (x[0]);
+  double total = exp (x[0]), p = x[2] * total;
   HlStatus status = hl_fluid_saturation_p (e->fluid, p, &sat);
   if (status != HL_OK)
     return status;
   *r = x[1] - sat.T;
   dr[0] = -sat.T_p * p;
   dr[1] = 1.0;
+  dr[2] = -sat.T_p * total;
   return HL_OK;
 }
 
 /* 1000/T = 2.276 - 0.0294 ln a - 0.0858 ln b + 0.0062 ln a ln b, a and b the partial pressures of water and SO3 in mmHg. */
 static HlStatus
-acid_dew_point (G_GNUC_UNUSED const HlEquation *e, const double *a, const double *x, double *r, double *dr)
+acid_dew_point (G_GNUC_UNUSED const HlEquation *e, G_GNUC_UNUSED const double *a, const double *x, double *r, double *dr)
 {
-  if (!(x[1] > 0.0))
+  if (!(x[1] > 0.0 && x[3] > 0.0))
     return HL_OUTSIDE_RANGE;
-  double water = x[0] + log (a[0] / MMHG), acid = x[0] + log (x[1] / MMHG);
+  double water = x[0] + log (x[3] / MMHG), acid = x[0] + log (x[1] / MMHG);
   double inverse = (2.276 - 0.0294 * water - 0.0858 * acid + 0.0062 * water * acid) / 1000.0, T = 1.0 / inverse;
   double to_water = (-0.0294 + 0.0062 * acid) / 1000.0, to_acid = (-0.0858 + 0.0062 * water) / 1000.0;
   *r = x[2] - T;
   dr[0] = T * T * (to_water + to_acid);
   dr[1] = T * T * to_acid / x[1];
   dr[2] = 1.0;
+  dr[3] = T * T * to_water / x[3];
   return HL_OK;
 }
 
@@ -89,16 +91,17 @@ emit_stack (HlEmit *emit)
   int so3 = has_acid ? hl_emit_own (emit, "so3_fraction", HL_VAR_RATIO) : -1;
   if (!(y > 0.0))
     return;
+  int share = hl_emit_constant (emit, HL_VAR_RATIO, y);
   HlEquation *e = hl_system_add_equation (system, water_dew_point, HL_VAR_TEMPERATURE, 2,
-                                          (const int[]) { p, hl_emit_own (emit, "water_dew_point", HL_VAR_TEMPERATURE) }, 2, &y, 1);
+                                          (const int[]) { p, hl_emit_own (emit, "water_dew_point", HL_VAR_TEMPERATURE), share }, 3, NULL, 0);
   e->fluid = hl_fluid_water ();
-  hl_emit_done (emit, e, N_("{1} = T_sat(y × {0}), y the water vapour in the gas"), 1);
+  hl_emit_done (emit, e, N_("{1} = T_sat({2} × {0})"), 1);
   if (!has_acid)
     return;
   e = hl_system_add_equation (system, acid_dew_point, HL_VAR_TEMPERATURE, 4,
-                              (const int[]) { p, so3, hl_emit_own (emit, "acid_dew_point", HL_VAR_TEMPERATURE) }, 3, &y, 1);
+                              (const int[]) { p, so3, hl_emit_own (emit, "acid_dew_point", HL_VAR_TEMPERATURE), share }, 4, NULL, 0);
   e->source = N_("F. H. Verhoff, J. T. Banchero: Chem. Eng. Prog. 70 (1974), quoted from a secondary text");
-  hl_emit_done (emit, e, N_("1000 ÷ {2} = 2.276 − 0.0294 ln a − 0.0858 ln b + 0.0062 ln a ln b; a = y × {0}, b = {1} × {0} in mmHg"), 2);
+  hl_emit_done (emit, e, N_("{2} = 1000 ÷ (2.276 − 0.0294 × ln({3} × {0} ÷ 133.3224) − 0.0858 × ln({1} × {0} ÷ 133.3224) + 0.0062 × ln({3} × {0} ÷ 133.3224) × ln({1} × {0} ÷ 133.3224))"), 2);
 }
 
 static gboolean
