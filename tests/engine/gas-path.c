@@ -72,6 +72,17 @@ test_evaporator_conductance (void)
     }
   test_assert_near (test_value (s, "ED1.UA"), test_value (s, "ED1.heat") * sum, 1e-4);
   test_assert_near (test_value (s, "ED1.pinch"), 10.0, 1e-9);
+  /* The heat diagram shows the surface: all its heat at the temperature of the drum, so that its pinch is that of the table. */
+  double shown = 0.0;
+  for (guint k = 0; k < hl_solution_n_processes (s); k++)
+    {
+      const HlProcess *process = hl_solution_process (s, k);
+      if (process->kind != HL_PROCESS_HEATING || !g_str_equal (hl_plant_component (plant, process->component)->id, "ED1"))
+        continue;
+      test_assert_near (process->from.T, drum.T, 1e-9);
+      shown += process->m * (process->to.h - process->from.h);
+    }
+  test_assert_near (shown, test_value (s, "ED1.heat"), 1e-9);
 }
 
 static void

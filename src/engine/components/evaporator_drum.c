@@ -138,23 +138,22 @@ check (HlChecker *checker)
       g_strdup_printf (_("The feed of %s reaches the drum partly as steam."), checker->component->id));
 }
 
+/* The feed is brought to boiling in the drum; the surface boils, at one temperature, as much as its heat is enough for. */
 static void
 processes (HlProcessSink *sink)
 {
-  int gas_in = hl_process_node (sink, "gas_inlet"), gas_out = hl_process_node (sink, "gas_outlet"), feed = hl_process_node (sink, "feed");
-  int steam = hl_process_node (sink, "steam"), water = hl_process_node (sink, "blowdown");
-  hl_process_add (sink, HL_PROCESS_COOLING, gas_in, gas_out);
-  if (feed < 0 || steam < 0)
+  int feed = hl_process_node (sink, "feed"), steam = hl_process_node (sink, "steam");
+  HlState liquid;
+  double heat;
+  hl_process_add (sink, HL_PROCESS_COOLING, hl_process_node (sink, "gas_inlet"), hl_process_node (sink, "gas_outlet"));
+  if (feed < 0 || steam < 0 || !sink->states[steam].has_state || !hl_process_own (sink, "heat", &heat)
+      || hl_fluid_state_px (hl_model_node (sink->model, steam)->fluid, sink->states[steam].p, 0.0, &liquid) != HL_OK)
     return;
-  /* The way of the steam carries the steam alone, that of the blowdown what is let off. */
-  const int ends[] = { steam, water };
-  for (guint k = 0; k < G_N_ELEMENTS (ends); k++)
-    {
-      guint n = sink->out->len;
-      hl_process_add (sink, HL_PROCESS_HEATING, feed, ends[k]);
-      if (sink->out->len > n)
-        g_array_index (sink->out, HlProcess, n).m = sink->states[ends[k]].m;
-    }
+  hl_process_add_to (sink, HL_PROCESS_MIXING, feed, &liquid);
+  guint n = sink->out->len;
+  hl_process_add_from (sink, HL_PROCESS_HEATING, &liquid, steam);
+  if (sink->out->len > n)
+    g_array_index (sink->out, HlProcess, n).m = heat / (sink->states[steam].st.h - liquid.h);
 }
 
 const HlComponentModel hl_evaporator_drum_model = { "evaporator_drum", emit_evaporator_drum, check, processes };
