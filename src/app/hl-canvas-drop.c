@@ -14,24 +14,36 @@ dropped_kind (const GValue *value)
   return hl_kind_lookup (text + strlen (HL_SHELF_DRAG_PREFIX));
 }
 
-/* The segment of a line that is nearest to a point: its direction, and the point drawn onto it. */
-int
-hl_canvas_snap_to_line (const HlStreamPlace *place, int *gx, int *gy)
+guint
+hl_canvas_segment_at (const HlStreamPlace *place, double x, double y, HlPoint *on_it)
 {
-  double x = *gx * HL_UNIT, y = *gy * HL_UNIT, nearest = G_MAXDOUBLE;
-  int turn = 0;
+  double nearest = G_MAXDOUBLE;
+  guint found = 0;
   for (guint n = 0; n + 1 < place->n_points; n++)
     {
       HlPoint a = place->points[n], b = place->points[n + 1];
-      double px = CLAMP (x, MIN (a.x, b.x), MAX (a.x, b.x)), py = CLAMP (y, MIN (a.y, b.y), MAX (a.y, b.y));
-      if (hypot (px - x, py - y) >= nearest)
+      HlPoint p = { CLAMP (x, MIN (a.x, b.x), MAX (a.x, b.x)), CLAMP (y, MIN (a.y, b.y), MAX (a.y, b.y)) };
+      if (hypot (p.x - x, p.y - y) >= nearest)
         continue;
-      nearest = hypot (px - x, py - y);
-      *gx = (int) floor (px / HL_UNIT + 0.5);
-      *gy = (int) floor (py / HL_UNIT + 0.5);
-      turn = fabs (b.x - a.x) > fabs (b.y - a.y) ? (b.x > a.x ? 0 : 2) : (b.y > a.y ? 1 : 3);
+      nearest = hypot (p.x - x, p.y - y);
+      *on_it = p;
+      found = n;
     }
-  return turn;
+  return found;
+}
+
+int
+hl_canvas_snap_to_line (const HlStreamPlace *place, int *gx, int *gy)
+{
+  HlPoint p = { *gx * HL_UNIT, *gy * HL_UNIT }, a, b;
+  guint n = hl_canvas_segment_at (place, p.x, p.y, &p);
+  if (place->n_points < 2)
+    return 0;
+  a = place->points[n];
+  b = place->points[n + 1];
+  *gx = (int) floor (p.x / HL_UNIT + 0.5);
+  *gy = (int) floor (p.y / HL_UNIT + 0.5);
+  return fabs (b.x - a.x) > fabs (b.y - a.y) ? (b.x > a.x ? 0 : 2) : (b.y > a.y ? 1 : 3);
 }
 
 /* Where a component dragged from the shelf would stand, and in which line. */

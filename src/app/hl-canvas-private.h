@@ -112,6 +112,7 @@ void     hl_canvas_add_menu     (HlCanvas *self);
 void     hl_canvas_add_quick_add (HlCanvas *self);                                            /* hl-canvas-quick-add.c */
 
 int      hl_canvas_stream_at   (HlCanvas *self, double vx, double vy);                        /* line or label; -1: none */
+guint    hl_canvas_segment_at  (const HlStreamPlace *place, double x, double y, HlPoint *on_it);   /* canvas: the nearest segment, and the point of it nearest by */
 int      hl_canvas_snap_to_line (const HlStreamPlace *place, int *gx, int *gy);               /* onto its nearest segment; which way that runs: 0 right, 1 down ... */
 
 /* hl-canvas-stream.c */

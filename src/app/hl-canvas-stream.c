@@ -7,26 +7,6 @@
 #define END_REACH 14.0     /* of a line's end, where a drag takes it off its port [view px] */
 #define STUB 2             /* a line leaves a port this far before it bends [grid units] */
 
-/* The segment of a line nearest to a point of the view; its index. */
-static guint
-segment_at (HlCanvas *self, const HlStreamPlace *place, double vx, double vy)
-{
-  double x, y, nearest = G_MAXDOUBLE;
-  guint found = 0;
-  hl_canvas_to_canvas (self, vx, vy, &x, &y);
-  for (guint n = 0; n + 1 < place->n_points; n++)
-    {
-      HlPoint a = place->points[n], b = place->points[n + 1];
-      double px = CLAMP (x, MIN (a.x, b.x), MAX (a.x, b.x)), py = CLAMP (y, MIN (a.y, b.y), MAX (a.y, b.y));
-      if (hypot (px - x, py - y) < nearest)
-        {
-          nearest = hypot (px - x, py - y);
-          found = n;
-        }
-    }
-  return found;
-}
-
 static int
 to_grid (double pixels)
 {
@@ -40,9 +20,11 @@ hl_canvas_begin_bend (HlCanvas *self)
 {
   int n = hl_plant_stream_index (hl_canvas_plant (self), self->grabbed);
   const HlStreamPlace *place = hl_layout_stream (self->layout, (guint) n);
+  HlPoint pressed;
   self->mode = MODE_BEND;
   self->base = hl_plant_ref (hl_canvas_plant (self));
-  self->bend_segment = segment_at (self, place, self->start_x, self->start_y);
+  hl_canvas_to_canvas (self, self->start_x, self->start_y, &pressed.x, &pressed.y);
+  self->bend_segment = hl_canvas_segment_at (place, pressed.x, pressed.y, &pressed);
   g_clear_pointer (&self->bend_way, g_array_unref);
   self->bend_way = g_array_sized_new (FALSE, FALSE, sizeof (HlPoint), place->n_points);
   g_array_append_vals (self->bend_way, place->points, place->n_points);
