@@ -106,6 +106,23 @@ draw_head (cairo_t *cr, const HlTheme *theme, const HlPlant *plant, const HlSolu
   rule (cr, theme, HEAD - 6.0, width);
 }
 
+/* Steam and condensate are words of water; a drawing that holds another medium with a dome says vapour and liquid. */
+static const char *
+look_name (const HlPlant *plant, HlLook look)
+{
+  static const HlPhase phases[] = { [HL_LOOK_STEAM] = HL_PHASE_VAPOUR, [HL_LOOK_WET] = HL_PHASE_TWO_PHASE, [HL_LOOK_WATER] = HL_PHASE_LIQUID };
+  if (look != HL_LOOK_STEAM && look != HL_LOOK_WET && look != HL_LOOK_WATER)
+    return hl_look_name (look);
+  for (guint i = 0; i < hl_plant_n_streams (plant); i++)
+    {
+      const char *medium = hl_plant_stream (plant, i)->medium;
+      const HlFluid *fluid = hl_fluid_lookup (medium);
+      if (fluid != NULL && hl_fluid_has_dome (fluid) && !g_str_has_prefix (medium, "water"))
+        return _(hl_phase_name (phases[look]));
+    }
+  return hl_look_name (look);
+}
+
 /* A short line of each medium that the drawing holds, with its name. */
 static void
 draw_media (cairo_t *cr, const HlTheme *theme, const HlLayout *layout, const HlPlant *plant, double x, double y)
@@ -122,7 +139,7 @@ draw_media (cairo_t *cr, const HlTheme *theme, const HlLayout *layout, const HlP
       cairo_line_to (cr, x + 26.0, y - 3.5);
       cairo_stroke (cr);
       hl_set_colour (cr, &theme->quiet);
-      x += 32.0 + hl_text_show (cr, theme, hl_look_name (look), x + 32.0, y, -1, SMALL_SIZE, FALSE) + 20.0;
+      x += 32.0 + hl_text_show (cr, theme, look_name (plant, look), x + 32.0, y, -1, SMALL_SIZE, FALSE) + 20.0;
     }
   if (hl_layout_n_shafts (layout) > 0)
     {
